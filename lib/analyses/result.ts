@@ -1,0 +1,62 @@
+import type { Diagnostic } from "@/lib/language/diagnostic";
+import type { OutcomeKind, Rung } from "@/lib/solver/outcome";
+
+/** One axis of a run: the first sweep first. `values` in coherent SI units (temperature in K). */
+export interface AxisDocument {
+  readonly knob: string;
+  readonly unit: string;
+  readonly scale: "logarithmic" | "linear" | "list";
+  readonly values: readonly number[];
+}
+
+export interface TraceDocument {
+  readonly name: string;
+  readonly unit: string;
+  /** Flat, the first axis fastest; null where unsolved. */
+  readonly values: readonly (number | null)[];
+}
+
+/** A failed point with its reason, for people. */
+export interface Failure {
+  readonly point: number;
+  readonly outcome: Exclude<OutcomeKind, "converged">;
+  readonly unsettled: readonly string[];
+}
+
+/** The run document of product.md. Before all shards are in, points not yet solved have outcome null and values null. */
+export interface RunDocument {
+  readonly format: "sweepwright-run/1";
+  readonly title: string;
+  readonly verdict: "holds" | "broken" | "no data";
+  readonly axes: readonly AxisDocument[];
+  readonly draws: number;
+  readonly traces: readonly TraceDocument[];
+  readonly points: {
+    readonly outcome: readonly (OutcomeKind | null)[];
+    readonly bound: readonly (number | null)[];
+    readonly iterations: readonly number[];
+    readonly rung: readonly (Rung | null)[];
+  };
+  readonly readings: readonly { name: string; unit: string; values: (number | null)[] }[];
+  readonly requirements: readonly never[];
+  readonly diagnostics: readonly (Diagnostic & { readonly line: number; readonly column: number })[];
+  readonly failures: readonly Failure[];
+}
+
+/**
+ * What one shard computes, for the flat points [from, to). Columns are Float64Array of length to − from, NaN where unsolved.
+ * `outcome` and `rung` hold the index into OUTCOMES and RUNGS.
+ */
+export interface ShardResult {
+  readonly from: number;
+  readonly to: number;
+  /** One column a trace, in the order of the plan. */
+  readonly traces: readonly Float64Array[];
+  /** One column an unknown of the circuit (net voltages in V, then branch currents in A), in the order of the plan. */
+  readonly unknowns: readonly Float64Array[];
+  readonly outcome: Float64Array;
+  readonly iterations: Float64Array;
+  readonly residual: Float64Array;
+  readonly rung: Float64Array;
+  readonly failures: readonly Failure[];
+}

@@ -1,0 +1,18 @@
+/** Rungs of the ladder (engine.md), tried in this order; the one that solved a point is kept with it. */
+export const RUNGS = ["warm start", "newton", "source ramp"] as const;
+export type Rung = (typeof RUNGS)[number];
+
+export const OUTCOMES = ["converged", "iteration limit", "step too small", "singular", "not finite"] as const;
+export type OutcomeKind = (typeof OUTCOMES)[number];
+
+/** What became of one point. `iterations` counts every Newton step over all rungs tried; `residual` is the largest |F_i|, A. */
+export type Outcome =
+  | { readonly kind: "converged"; readonly iterations: number; readonly residual: number; readonly rung: Rung }
+  | {
+      readonly kind: Exclude<OutcomeKind, "converged">;
+      readonly iterations: number;
+      readonly residual: number;
+      readonly rung: Rung;
+      /** Nets and elements that would not settle, the worst first, at most five. */
+      readonly unsettled: readonly string[];
+    };
