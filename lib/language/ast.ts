@@ -40,12 +40,13 @@ export interface Setting extends Span {
   readonly tolerance: ToleranceSyntax | null;
 }
 
-/** One element of a path: `NAME : kind [MODEL] [value] [tolerance]`. */
+/** One element of a path: `NAME : kind [MODEL] [value] [tolerance] [{ param = value, … }]`. */
 export interface PathPart extends Span {
   readonly name: Word;
   readonly kind: Word;
   readonly value: Expression | null;
   readonly tolerance: ToleranceSyntax | null;
+  readonly settings: readonly Setting[];
 }
 
 export type SweepRange =
@@ -85,7 +86,8 @@ export type Statement =
       readonly kind: "show";
       readonly items: readonly (Span & { readonly name: Word | null; readonly value: Expression })[];
     })
-  | (Span & { readonly kind: "broken" });
+  /** What could not be read. `declares` is the name it would have introduced, so that its uses stay quiet. */
+  | (Span & { readonly kind: "broken"; readonly declares: Word | null });
 
 export interface Netlist {
   readonly statements: readonly Statement[];
@@ -112,17 +114,7 @@ export type Typed = { readonly dimension: Dimension } & (
   | { readonly op: "call"; readonly callee: FunctionName; readonly args: readonly Typed[] }
 );
 
-export type FunctionName =
-  | "exp"
-  | "ln"
-  | "log10"
-  | "sqrt"
-  | "abs"
-  | "min"
-  | "max"
-  | "tanh"
-  | "atan"
-  | "if";
+export type FunctionName = "exp" | "ln" | "log10" | "sqrt" | "abs" | "min" | "max" | "tanh" | "atan" | "if";
 
 /** What a trace can be made of: a net's voltage to ground; an element's voltage, current, power; a pin's current. */
 export type Signal =
@@ -163,7 +155,8 @@ export interface Model extends Span {
 
 /**
  * A wired element. `pins` holds a net name for every pin of its kind (kinds.ts); `value` is the ohms, volts or amperes of a
- * resistor, voltage or current element, null for those that follow a model.
+ * resistor, voltage or current element, null for those that follow a model. `params` holds what the text gives beyond it,
+ * such as a resistor's `drift`.
  */
 export interface Element extends Span {
   readonly name: string;
@@ -171,6 +164,7 @@ export interface Element extends Span {
   readonly pins: Readonly<Record<string, string>>;
   readonly value: NamedValue | null;
   readonly model: string | null;
+  readonly params: ReadonlyMap<string, NamedValue>;
 }
 
 /** A sweep with every value worked out, in coherent SI units and in the order to be solved. */
@@ -187,7 +181,10 @@ export interface Show extends Span {
   readonly value: Typed;
 }
 
-/** The whole meaning of a netlist without errors. `ground` is not among `nets`; `temperature` is always among `knobs`. */
+/**
+ * The whole meaning of a netlist without errors. `ground` is not among `nets`; `temperature` is always among `knobs`. The value
+ * of a knob is always a constant, its default.
+ */
 export interface Design {
   readonly title: string;
   readonly knobs: readonly Knob[];
@@ -196,6 +193,8 @@ export interface Design {
   readonly models: readonly Model[];
   readonly elements: readonly Element[];
   readonly nets: readonly string[];
+  /** Where each net is first named. */
+  readonly netPlaces: ReadonlyMap<string, Span>;
   readonly sweeps: readonly Sweep[];
   readonly shows: readonly Show[];
 }

@@ -114,7 +114,12 @@ export const KINDS: Readonly<Record<ElementKind, DeviceKind>> = {
     pins: ["left", "right"],
     value: { dimension: OHM, unit: "Ω" },
     parameters: {
-      drift: { dimension: PER_KELVIN, unit: "ppm/K", absent: "0 ppm/K", about: "change with temperature from 25 °C" },
+      drift: {
+        dimension: PER_KELVIN,
+        unit: "ppm/K",
+        absent: "0 ppm/K",
+        about: "change with temperature from 25 °C",
+      },
     },
     about: "resistor; current flows from left to right",
   },
@@ -147,7 +152,14 @@ export const KINDS: Readonly<Record<ElementKind, DeviceKind>> = {
     pins: ["plus", "minus", "out"],
     value: null,
     parameters: {
-      gain: { dimension: PURE, unit: "1", absent: "ideal: no difference at the inputs", low: 0, open: true, about: "open-loop gain" },
+      gain: {
+        dimension: PURE,
+        unit: "1",
+        absent: "ideal: no difference at the inputs",
+        low: 0,
+        open: true,
+        about: "open-loop gain",
+      },
       offset: { dimension: VOLT, unit: "V", absent: "0 V", about: "input offset voltage, added to plus" },
       bias: { dimension: AMPERE, unit: "A", absent: "0 A", about: "current into each input" },
     },

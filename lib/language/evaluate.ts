@@ -1,0 +1,86 @@
+import type { Signal, Typed } from "./ast";
+
+/** Where an expression finds the values of the point being solved: coherent SI units, temperatures in K. */
+export interface Scope {
+  knob(name: string): number;
+  let(name: string): number;
+  signal(signal: Signal): number;
+  /** V_T in V at the present temperature. */
+  readonly thermalVoltage: number;
+}
+
+/**
+ * The value of a checked expression in coherent SI units. A comparison is 1 where it holds and 0 where it does not. Where the
+ * mathematics has no value (1/0, ln(−1)) the result is not finite; nothing is thrown. Depth is bounded by the parser's cap.
+ */
+export function evaluate(typed: Typed, scope: Scope): number {
+  switch (typed.op) {
+    case "constant":
+      return typed.value;
+    case "knob":
+      return scope.knob(typed.name);
+    case "let":
+      return scope.let(typed.name);
+    case "thermal voltage":
+      return scope.thermalVoltage;
+    case "signal":
+      return scope.signal(typed.signal);
+    case "negate":
+      return -evaluate(typed.operand, scope);
+    case "call":
+      return call(typed, scope);
+    default:
+      return binary(typed.op, evaluate(typed.left, scope), evaluate(typed.right, scope));
+  }
+}
+
+function binary(op: "+" | "-" | "*" | "/" | "^" | "<=" | ">=" | "<" | ">", a: number, b: number): number {
+  switch (op) {
+    case "+":
+      return a + b;
+    case "-":
+      return a - b;
+    case "*":
+      return a * b;
+    case "/":
+      return a / b;
+    case "^":
+      return a ** b;
+    case "<=":
+      return a <= b ? 1 : 0;
+    case ">=":
+      return a >= b ? 1 : 0;
+    case "<":
+      return a < b ? 1 : 0;
+    case ">":
+      return a > b ? 1 : 0;
+  }
+}
+
+/** Only the branch that `if` chooses is worked out, so that it can guard the other. */
+function call(typed: Extract<Typed, { op: "call" }>, scope: Scope): number {
+  const { callee, args } = typed;
+  if (callee === "if") return evaluate(evaluate(args[0]!, scope) !== 0 ? args[1]! : args[2]!, scope);
+  const values = args.map((arg) => evaluate(arg, scope));
+  const x = values[0]!;
+  switch (callee) {
+    case "exp":
+      return Math.exp(x);
+    case "ln":
+      return Math.log(x);
+    case "log10":
+      return Math.log10(x);
+    case "sqrt":
+      return Math.sqrt(x);
+    case "abs":
+      return Math.abs(x);
+    case "min":
+      return Math.min(...values);
+    case "max":
+      return Math.max(...values);
+    case "tanh":
+      return Math.tanh(x);
+    case "atan":
+      return Math.atan(x);
+  }
+}
