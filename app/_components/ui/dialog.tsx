@@ -1,0 +1,38 @@
+"use client";
+
+import { Dialog as Radix } from "radix-ui";
+import type { ReactNode } from "react";
+
+/**
+ * A dialog over the page: focus stays inside, Escape closes it and gives focus back. `description` says in one sentence
+ * what it is for; `actions` stand at its foot, the safe one first.
+ */
+export function Dialog({
+  open,
+  onOpenChange,
+  title,
+  description,
+  children,
+  actions,
+}: {
+  readonly open: boolean;
+  readonly onOpenChange: (open: boolean) => void;
+  readonly title: string;
+  readonly description: ReactNode;
+  readonly children?: ReactNode;
+  readonly actions: ReactNode;
+}) {
+  return (
+    <Radix.Root open={open} onOpenChange={onOpenChange}>
+      <Radix.Portal>
+        <Radix.Overlay className="fixed inset-0 z-40 bg-black/40" />
+        <Radix.Content className="fixed top-1/2 left-1/2 z-50 max-h-[calc(100dvh-32px)] w-[min(560px,calc(100vw-32px))] -translate-x-1/2 -translate-y-1/2 overflow-y-auto rounded-[2px] border border-edge bg-surface p-6 text-ink">
+          <Radix.Title className="font-semibold text-lg">{title}</Radix.Title>
+          <Radix.Description className="mt-1 text-quiet text-sm">{description}</Radix.Description>
+          {children !== undefined && <div className="mt-4">{children}</div>}
+          <div className="mt-6 flex flex-wrap justify-end gap-2">{actions}</div>
+        </Radix.Content>
+      </Radix.Portal>
+    </Radix.Root>
+  );
+}

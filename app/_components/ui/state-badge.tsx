@@ -1,0 +1,41 @@
+import { classNames } from "./class-names";
+import { type MarkShape, StateMark } from "./state-mark";
+
+/** States of a run, then verdicts, then "never run" for a netlist without a run. */
+export type State =
+  | "queued"
+  | "running"
+  | "done"
+  | "failed"
+  | "cancelled"
+  | "holds"
+  | "broken"
+  | "no data"
+  | "never run";
+
+const STATES: Record<State, { shape: MarkShape; ink: string }> = {
+  queued: { shape: "ring", ink: "text-quiet" },
+  running: { shape: "half", ink: "text-running" },
+  done: { shape: "check", ink: "text-holds" },
+  failed: { shape: "cross", ink: "text-broken" },
+  cancelled: { shape: "bar", ink: "text-quiet" },
+  holds: { shape: "check", ink: "text-holds" },
+  broken: { shape: "cross", ink: "text-broken" },
+  "no data": { shape: "diamond", ink: "text-nodata" },
+  "never run": { shape: "ring", ink: "text-quiet" },
+};
+
+/**
+ * A state as shape, word and colour. A run that is done but has points that failed says so and takes the "no data" colour:
+ * the rest of its sweep stands.
+ */
+export function StateBadge({ state, failed = 0 }: { readonly state: State; readonly failed?: number }) {
+  const partial = state === "done" && failed > 0;
+  const { shape, ink } = partial ? STATES["no data"] : STATES[state];
+  return (
+    <span className={classNames("inline-flex items-center gap-1.5 whitespace-nowrap text-sm", ink)}>
+      <StateMark shape={shape} />
+      {partial ? `done, ${failed} ${failed === 1 ? "point" : "points"} failed` : state}
+    </span>
+  );
+}
