@@ -68,8 +68,8 @@ export function ButtonLink({
 /** The keys that do the same as a button, written inside it; hidden where there is no keyboard to speak of. */
 export function Keys({ children }: { readonly children: string }) {
   return (
-    <kbd aria-hidden="true" className="hidden font-normal text-xs opacity-75 md:inline">
+    <span aria-hidden="true" className="figures hidden font-normal text-xs opacity-75 md:inline">
       {children}
-    </kbd>
+    </span>
   );
 }
