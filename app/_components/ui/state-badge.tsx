@@ -33,7 +33,7 @@ export function StateBadge({ state, failed = 0 }: { readonly state: State; reado
   const partial = state === "done" && failed > 0;
   const { shape, ink } = partial ? STATES["no data"] : STATES[state];
   return (
-    <span className={classNames("inline-flex items-center gap-1.5 whitespace-nowrap text-sm", ink)}>
+    <span className={classNames("inline-flex items-baseline gap-1.5 text-sm", ink)}>
       <StateMark shape={shape} />
       {partial ? `done, ${failed} ${failed === 1 ? "point" : "points"} failed` : state}
     </span>

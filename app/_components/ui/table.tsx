@@ -47,7 +47,7 @@ export function Cell({
     <td
       {...rest}
       className={classNames(
-        "border-b py-2 pr-4 align-baseline last:pr-0",
+        "border-b py-2 pr-4 align-top last:pr-0",
         figure && "figures whitespace-nowrap text-right",
         className,
       )}

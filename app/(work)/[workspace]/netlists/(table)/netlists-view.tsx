@@ -1,0 +1,99 @@
+"use client";
+
+import { useQueryClient } from "@tanstack/react-query";
+import { useSearchParams } from "next/navigation";
+import { Button } from "@/app/_components/ui/button";
+import { PageHeader } from "@/app/_components/ui/page-header";
+import { EmptyState, FailedState } from "@/app/_components/ui/states";
+import { CreateNetlist } from "./create-netlist";
+import { type ListState, PAGE_SIZE, readListState, writeListState } from "./list-state";
+import { NetlistTable } from "./netlist-table";
+import { Pager } from "./pager";
+import { SearchBox } from "./search-box";
+import { UploadArea } from "./upload-area";
+import { type Found, useNetlists } from "./use-netlists";
+
+interface Props {
+  readonly workspace: string;
+  readonly mayWrite: boolean;
+  readonly first: { readonly state: ListState; readonly found: Found };
+}
+
+/** The netlists of a workspace; search, order and page stand in the address. */
+export function NetlistsView({ workspace, mayWrite, first }: Props) {
+  const state = readListState(new URLSearchParams(useSearchParams()));
+  const queries = useQueryClient();
+  const { data, error, isPlaceholderData, refetch } = useNetlists(workspace, state, first);
+  const show = (change: Partial<ListState>) => {
+    const next = { ...state, page: 1, ...change };
+    window.history.replaceState(null, "", writeListState(next) || window.location.pathname);
+  };
+  const total = data?.total ?? 0;
+  const searching = state.query !== "";
+  const remark = searching ? `${total} of this workspace match` : `${total} in this workspace`;
+  return (
+    <UploadArea
+      workspace={workspace}
+      mayWrite={mayWrite}
+      onAdded={() => queries.invalidateQueries({ queryKey: ["netlists", workspace] })}
+    >
+      {(uploadButton) => (
+        <>
+          <PageHeader
+            title="Netlists"
+            remark={<span aria-live="polite">{remark}</span>}
+            actions={
+              mayWrite ? (
+                <>
+                  {uploadButton}
+                  <CreateNetlist workspace={workspace} />
+                </>
+              ) : (
+                <p className="text-quiet text-sm">You read this workspace as a viewer.</p>
+              )
+            }
+          />
+          <div className="grid gap-4 px-4 py-4 md:px-6">
+            <SearchBox value={state.query} onChange={(query) => show({ query })} />
+            {error !== null && (
+              <FailedState
+                title="The list could not be brought up to date"
+                action={<Button onClick={() => refetch()}>Try again</Button>}
+              >
+                <p>{error.message}</p>
+              </FailedState>
+            )}
+            {data !== undefined && total > 0 && (
+              <NetlistTable
+                workspace={workspace}
+                rows={data.rows}
+                sort={state.sort}
+                direction={state.direction}
+                stale={isPlaceholderData}
+                onSort={(sort, direction) => show({ sort, direction })}
+              />
+            )}
+            {total > PAGE_SIZE && <Pager page={state.page} total={total} onPage={(page) => show({ page })} />}
+            {data !== undefined && total === 0 && searching && (
+              <EmptyState
+                title={`No netlist matches “${state.query}”`}
+                action={<Button onClick={() => show({ query: "" })}>Show all netlists</Button>}
+              >
+                <p>The search looks at titles, owners and the text of the latest revision.</p>
+              </EmptyState>
+            )}
+            {data !== undefined && total === 0 && !searching && (
+              <EmptyState title="No netlists yet">
+                <p>
+                  A netlist holds a circuit, what to sweep and which traces to keep.
+                  {mayWrite &&
+                    " Make a new one, which starts with a small circuit that runs, or drop .swn files on this page."}
+                </p>
+              </EmptyState>
+            )}
+          </div>
+        </>
+      )}
+    </UploadArea>
+  );
+}
