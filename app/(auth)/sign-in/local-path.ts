@@ -3,6 +3,7 @@
  * ("//host", "/\host", control characters), and not the sign-in page itself.
  */
 export function localPath(value: string | string[] | undefined): string | null {
-  if (typeof value !== "string" || !/^\/(?![/\\])[\x21-\x7e]*$/.test(value) || value.includes("\\")) return null;
+  if (typeof value !== "string" || !/^\/(?![/\\])[\x21-\x7e]*$/.test(value) || value.includes("\\"))
+    return null;
   return value.startsWith("/sign-in") ? null : value;
 }

@@ -1,4 +1,5 @@
 import { classNames } from "./class-names";
+import { counted } from "./count";
 import { type MarkShape, StateMark } from "./state-mark";
 
 /** States of a run, then verdicts, then "never run" for a netlist without a run. */
@@ -35,7 +36,7 @@ export function StateBadge({ state, failed = 0 }: { readonly state: State; reado
   return (
     <span className={classNames("inline-flex items-baseline gap-1.5 text-sm", ink)}>
       <StateMark shape={shape} />
-      {partial ? `done, ${failed} ${failed === 1 ? "point" : "points"} failed` : state}
+      {partial ? `done, ${counted(failed, "point")} failed` : state}
     </span>
   );
 }

@@ -3,6 +3,7 @@
 import { useQueryClient } from "@tanstack/react-query";
 import { useSearchParams } from "next/navigation";
 import { Button } from "@/app/_components/ui/button";
+import { formatCount } from "@/app/_components/ui/count";
 import { PageHeader } from "@/app/_components/ui/page-header";
 import { EmptyState, FailedState } from "@/app/_components/ui/states";
 import { CreateNetlist } from "./create-netlist";
@@ -30,7 +31,7 @@ export function NetlistsView({ workspace, mayWrite, first }: Props) {
   };
   const total = data?.total ?? 0;
   const searching = state.query !== "";
-  const remark = searching ? `${total} of this workspace match` : `${total} in this workspace`;
+  const remark = searching ? `${formatCount(total)} found` : `${formatCount(total)} in this workspace`;
   return (
     <UploadArea
       workspace={workspace}

@@ -1,6 +1,7 @@
 "use client";
 
 import { Button } from "@/app/_components/ui/button";
+import { formatCount } from "@/app/_components/ui/count";
 import { PAGE_SIZE } from "./list-state";
 
 /** Which rows stand on this page, and the way to the others. `page` counts from 1. */
@@ -19,7 +20,7 @@ export function Pager({
   return (
     <nav aria-label="Pages of the table" className="flex flex-wrap items-center gap-3">
       <p className="grow text-quiet text-sm" aria-live="polite">
-        {from}–{to} of {total}
+        {formatCount(from)}–{formatCount(to)} of {formatCount(total)}
       </p>
       <Button size="small" disabled={page <= 1} onClick={() => onPage(Math.min(pages, page - 1))}>
         Previous
