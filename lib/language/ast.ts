@@ -59,7 +59,10 @@ export type SweepRange =
     }
   | { readonly kind: "list"; readonly values: readonly Expression[] };
 
-export type Statement =
+/** `whole` is false where something in the statement could not be read; what could be is kept. */
+export type Statement = { readonly whole: boolean } & StatementForm;
+
+export type StatementForm =
   | (Span & { readonly kind: "title"; readonly text: Word })
   | (Span & {
       readonly kind: "let" | "knob";

@@ -1,6 +1,6 @@
 /**
- * Constants that the SI fixes exactly (SI Brochure, 9th ed., BIPM 2019, section 2.2). The ratio k/q and kT/q follow from them
- * with at most one rounding each.
+ * Constants that the SI fixes exactly (SI Brochure, 9th ed., BIPM 2019, section 2.2). V_T = kT/q
+ * follows from them with two roundings.
  */
 
 /** Boltzmann constant k, J/K. */
@@ -8,9 +8,6 @@ export const BOLTZMANN = 1.380649e-23;
 
 /** Elementary charge q, C. */
 export const ELEMENTARY_CHARGE = 1.602176634e-19;
-
-/** k/q, V/K. */
-export const BOLTZMANN_OVER_CHARGE = 8.617333262145178e-5;
 
 /** 0 °C on the kelvin scale, K (SI Brochure, section 2.3.1). */
 export const ZERO_CELSIUS = 273.15;

@@ -2,7 +2,13 @@
  * Exponents of the SI base units metre, kilogram, second, ampere, kelvin (SI Brochure, 9th ed., 2019, section 2.3.3).
  * Exponents may be fractions, since a square root halves them.
  */
-export type Dimension = readonly [metre: number, kilogram: number, second: number, ampere: number, kelvin: number];
+export type Dimension = readonly [
+  metre: number,
+  kilogram: number,
+  second: number,
+  ampere: number,
+  kelvin: number,
+];
 
 export const PURE: Dimension = [0, 0, 0, 0, 0];
 export const VOLT: Dimension = [2, 1, -3, -1, 0];

@@ -1,0 +1,112 @@
+import type { Design, Element, Netlist, Show, Statement, Sweep } from "./ast";
+import type { Diagnostic } from "./diagnostic";
+import { ElementCheck, modelKinds } from "./elements";
+import { FUNCTION_NAMES } from "./functions";
+import { tokenize } from "./lexer";
+import { count, MOST_ELEMENTS, MOST_TEXT, MOST_VALUES } from "./limits";
+import { declareAll, Names } from "./names";
+import { Nominal } from "./nominal";
+import { parseTokens } from "./parser";
+import { Quantities } from "./quantities";
+import { Report } from "./report";
+import { checkShows } from "./shows";
+import type { Span } from "./span";
+import { SweepCheck } from "./sweeps";
+import { type Known, Typing } from "./typing";
+import { checkValues } from "./values";
+import { Wirer } from "./wired";
+
+/** `design` is null exactly where a diagnostic is an error; diagnostics are sorted by place. */
+export interface Checked {
+  readonly netlist: Netlist;
+  readonly design: Design | null;
+  readonly diagnostics: Diagnostic[];
+}
+
+/** Reads and checks a netlist text: everything but its wiring, which is checked on the design. Never throws; linear time. */
+export function check(text: string): Checked {
+  const report = new Report();
+  if (text.length > MOST_TEXT) {
+    const message = `The text has ${count(text.length)} characters, and a netlist can have ${count(MOST_TEXT)} at most; split it.`;
+    report.error("CAP1", { from: 0, to: text.length }, message);
+    return { netlist: { statements: [] }, design: null, diagnostics: report.sorted() };
+  }
+  const { netlist } = parseTokens(tokenize(text, report), text.length, report);
+  const design = checkNetlist(netlist, text, report);
+  return { netlist, design: report.hasErrors ? null : design, diagnostics: report.sorted() };
+}
+
+function checkNetlist({ statements }: Netlist, source: string, report: Report): Design {
+  const names = new Names(report, FUNCTION_NAMES);
+  const nominal = new Nominal();
+  const known = new Map<string, Known>();
+  const pins = new Map<string, Readonly<Record<string, string>>>();
+  const typing = new Typing(source, names, report, known, (element) => pins.get(element) ?? null);
+  const quantities = new Quantities(typing, nominal, report);
+
+  declareAll(statements, names);
+  const kinds = modelKinds(statements, names, report);
+  const wired = new Wirer(names, kinds, report).wire(statements);
+  for (const one of wired) pins.set(one.name.text, one.pins);
+
+  const { knobs, lets } = checkValues(statements, { names, typing, quantities, nominal, known, report });
+  const elementCheck = new ElementCheck(quantities, nominal, report);
+  const models = elementCheck.models(statements, kinds);
+  const elements = wired.map((one) => elementCheck.element(one));
+  const sweeps = new SweepCheck(names, typing, quantities, known, knobs, report).sweeps(statements);
+  const shows = checkShows(statements, source, typing, report);
+
+  const title = titleOf(statements, report);
+  const netPlaces = placesOf(names);
+  const nets = [...netPlaces.keys()];
+  checkSize(elements, nets, sweeps, shows, report);
+  if (shows.length === 0 && !report.hasErrors) {
+    const span = { from: source.length, to: source.length };
+    report.warning(
+      "PLN8",
+      span,
+      "Nothing is shown, so a run keeps no trace; add a line such as `show out.v`.",
+    );
+  }
+  return { title, knobs, lets, models, elements, nets, netPlaces, sweeps, shows };
+}
+
+function titleOf(statements: readonly Statement[], report: Report): string {
+  let title: string | null = null;
+  for (const statement of statements) {
+    if (statement.kind !== "title") continue;
+    if (title !== null)
+      report.error("FRM9", statement, "A netlist has one title; remove this one or the other.");
+    title ??= statement.text.text;
+  }
+  return title ?? "";
+}
+
+function placesOf(names: Names): Map<string, Span> {
+  const places = new Map<string, Span>();
+  for (const net of names.namesOf(["net"])) if (net !== "ground") places.set(net, names.placeOf(net));
+  return places;
+}
+
+function checkSize(
+  elements: readonly Element[],
+  nets: readonly string[],
+  sweeps: readonly Sweep[],
+  shows: readonly Show[],
+  report: Report,
+): void {
+  const first = elements[MOST_ELEMENTS];
+  if (first !== undefined) {
+    const message = `The netlist has ${count(elements.length)} elements, and a circuit can have ${count(MOST_ELEMENTS)} at most.`;
+    report.error("CAP3", first, message);
+  }
+  const points = sweeps.reduce((product, sweep) => product * sweep.values.length, 1);
+  const branches = elements.filter(
+    (element) => element.kind === "voltage" || element.kind === "opamp",
+  ).length;
+  const values = points * (shows.length + nets.length + branches);
+  if (values > MOST_VALUES) {
+    const message = `The plan would keep ${count(values)} values (points times traces and unknowns), and ${count(MOST_VALUES)} is the most; sweep fewer points.`;
+    report.error("CAP5", sweeps[sweeps.length - 1]!, message);
+  }
+}

@@ -1,0 +1,103 @@
+import { alignRuns, type Line, plainLine, statementLine } from "./alignment";
+import type { Statement } from "./ast";
+import { Cursor } from "./cursor";
+import { ExpressionParser } from "./expression-parser";
+import { tokenize } from "./lexer";
+import { MOST_TEXT } from "./limits";
+import { parseTokens } from "./parser";
+import { Report } from "./report";
+import { composeLine } from "./spacing-rules";
+import type { Token } from "./token";
+
+/**
+ * The canonical form of a netlist: canonical spelling and spacing, at most one blank line between statements, `=`, `:` and `{`
+ * aligned in runs of neighbouring lines, comments kept. Line breaks inside a statement stay where they are. A statement that
+ * could not be read keeps its lines as they are, apart from blanks at their ends. Idempotent; the meaning is unchanged.
+ */
+export function format(text: string): string {
+  const source = text.split("\n");
+  if (text.length > MOST_TEXT) return finish(source.map((line) => line.trimEnd()));
+  const report = new Report();
+  const tokens = tokenize(text, report);
+  const { netlist, tight } = parseTokens(tokens, text.length, report);
+  const owners = new Owners(netlist.statements);
+  let from = 0;
+  let depth = 0;
+  const lines = rowsOf(tokens).map((row, i): Line => {
+    const raw = source[i]!.trimEnd();
+    const to = from + source[i]!.length;
+    const { statement, begins } = owners.of(row, from, to);
+    from = to + 1;
+    if (begins) depth = 0;
+    if (row.length === 0 || (statement !== null && !statement.whole)) return plainLine(raw);
+    if (statement === null) return plainLine(composeLine(row, tight));
+    const closers = closersAhead(row);
+    const indent = closers > 0 ? depth - closers : Math.max(1, depth);
+    depth = depthAfter(row, depth);
+    if (begins && statement.to <= to) return statementLine(statement, row, tight);
+    return plainLine((begins ? "" : "  ".repeat(indent)) + composeLine(row, tight));
+  });
+  return finish(alignRuns(lines));
+}
+
+/** One expression, on one line. */
+export function formatExpression(source: string): string {
+  const report = new Report();
+  const tokens = tokenize(source, report).filter(
+    (token) => token.kind !== "comment" && token.kind !== "newline",
+  );
+  const end: Token = { kind: "end", from: source.length, to: source.length, text: "" };
+  const cursor = new Cursor([...tokens, end], report);
+  new ExpressionParser(cursor).expression();
+  return composeLine(tokens, cursor.tight);
+}
+
+/** The tokens of each line. */
+function rowsOf(tokens: readonly Token[]): Token[][] {
+  const rows: Token[][] = [[]];
+  for (const token of tokens) {
+    if (token.kind === "newline") rows.push([]);
+    else rows[rows.length - 1]!.push(token);
+  }
+  return rows;
+}
+
+/** Finds the statement that a line belongs to; lines are asked for in order. */
+class Owners {
+  private next = 0;
+
+  constructor(private readonly statements: readonly Statement[]) {}
+
+  of(row: readonly Token[], from: number, to: number): { statement: Statement | null; begins: boolean } {
+    while (this.next < this.statements.length && this.statements[this.next]!.to < from) this.next += 1;
+    const statement = this.statements[this.next];
+    if (statement === undefined || statement.from > to) return { statement: null, begins: false };
+    const begins = statement.from >= from;
+    if (begins && !row.some((token) => token.from === statement.from))
+      return { statement: null, begins: false };
+    return { statement, begins };
+  }
+}
+
+function closersAhead(row: readonly Token[]): number {
+  const inside = row.findIndex((token) => token.text !== ")" && token.text !== "}");
+  return inside === -1 ? row.length : inside;
+}
+
+function depthAfter(row: readonly Token[], before: number): number {
+  let depth = before;
+  for (const token of row) {
+    if (token.kind !== "symbol") continue;
+    if (token.text === "(" || token.text === "{") depth += 1;
+    if (token.text === ")" || token.text === "}") depth -= 1;
+  }
+  return depth;
+}
+
+/** Drops blank lines at both ends and all but one between lines; ends with one newline. */
+function finish(lines: readonly string[]): string {
+  const kept = lines.filter((line, i) => line !== "" || (i > 0 && lines[i - 1] !== ""));
+  const last = kept[kept.length - 1] === "" ? kept.slice(0, -1) : kept;
+  const first = last[0] === "" ? last.slice(1) : last;
+  return first.length === 0 ? "" : `${first.join("\n")}\n`;
+}

@@ -1,0 +1,16 @@
+/** What a netlist may ask for; beyond it the answer is one CAP diagnostic, at once. */
+
+/** UTF-16 units of text. */
+export const MOST_TEXT = 262_144;
+/** Brackets within brackets, and links in a chain such as a + b + c. */
+export const MOST_DEPTH = 256;
+export const MOST_ELEMENTS = 2_000;
+/** Product of the lengths of all sweeps. */
+export const MOST_POINTS = 1_000_000;
+/** Points × (traces + unknowns). */
+export const MOST_VALUES = 50_000_000;
+
+/** A count with narrow no-break spaces between groups of three, for messages. */
+export function count(n: number): string {
+  return String(n).replace(/\B(?=(\d{3})+$)/gu, "\u202f");
+}

@@ -1,0 +1,46 @@
+/** Names longer than this are not compared. */
+const LONGEST = 40;
+
+/**
+ * The candidate nearest to `name` by the edits that typing makes (a letter changed, left out, put in, or two exchanged: Damerau
+ * 1964), or null where none is near enough to be meant. Letters that differ only in case count half.
+ */
+export function nearest(name: string, candidates: Iterable<string>): string | null {
+  if (name.length > LONGEST) return null;
+  let best: string | null = null;
+  let bound = name.length <= 2 ? 1 : Math.min(2.5, 0.5 + name.length / 3);
+  for (const candidate of candidates) {
+    if (candidate.length > LONGEST || Math.abs(candidate.length - name.length) > bound) continue;
+    const distance = editDistance(name, candidate);
+    if (distance > 0 && distance <= bound && (best === null || distance < bound)) {
+      best = candidate;
+      bound = distance;
+    }
+  }
+  return best;
+}
+
+function editDistance(a: string, b: string): number {
+  let beforeLast: number[] = [];
+  let last = Array.from({ length: b.length + 1 }, (_, j) => j);
+  for (let i = 1; i <= a.length; i++) {
+    const row = [i];
+    for (let j = 1; j <= b.length; j++) {
+      const exchange =
+        i > 1 && j > 1 && a[i - 1] === b[j - 2] && a[i - 2] === b[j - 1]
+          ? beforeLast[j - 2]! + 1
+          : Number.POSITIVE_INFINITY;
+      row.push(
+        Math.min(last[j]! + 1, row[j - 1]! + 1, last[j - 1]! + costOf(a[i - 1]!, b[j - 1]!), exchange),
+      );
+    }
+    beforeLast = last;
+    last = row;
+  }
+  return last[b.length]!;
+}
+
+function costOf(a: string, b: string): number {
+  if (a === b) return 0;
+  return a.toLowerCase() === b.toLowerCase() ? 0.5 : 1;
+}

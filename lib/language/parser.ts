@@ -1,0 +1,173 @@
+import type { Netlist, Statement, StatementForm, SweepRange, Word } from "./ast";
+import { Cursor } from "./cursor";
+import type { Diagnostic } from "./diagnostic";
+import { ExpressionParser } from "./expression-parser";
+import { layOut } from "./layout";
+import { tokenize } from "./lexer";
+import { PartParser } from "./part-parser";
+import { Report } from "./report";
+import { LATER_STATEMENTS, quote, STATEMENT_WORDS, type Token } from "./token";
+
+/** What was read, and where no space may stand (see Cursor.tight), for the formatter. */
+export interface Parsed {
+  readonly netlist: Netlist;
+  readonly tight: ReadonlySet<number>;
+}
+
+/** Reads the whole text; never throws, never stops at a mistake. Diagnostics are those of the lexer and of the form. */
+export function parse(text: string): { netlist: Netlist; diagnostics: Diagnostic[] } {
+  const report = new Report();
+  const { netlist } = parseTokens(tokenize(text, report), text.length, report);
+  return { netlist, diagnostics: report.sorted() };
+}
+
+/** As `parse`, for tokens at hand and a report that other phases share. */
+export function parseTokens(tokens: readonly Token[], length: number, report: Report): Parsed {
+  const cursor = new Cursor(layOut(tokens, length), report);
+  const parser = new StatementParser(cursor);
+  const statements: Statement[] = [];
+  while (!cursor.done) {
+    cursor.begin();
+    const from = cursor.token.from;
+    const form = parser.statement(from);
+    const to = Math.max(cursor.behind, form.to);
+    if (!cursor.atEnd) {
+      const message = `The statement is complete before ${quote(cursor.token.text)}; begin a new line there or remove it.`;
+      cursor.fail("FRM4", cursor.token, message);
+    }
+    const end = cursor.token.from;
+    const whole = cursor.leave();
+    statements.push({ ...form, from, to: whole ? to : end, whole });
+  }
+  return { netlist: { statements }, tight: cursor.tight };
+}
+
+class StatementParser {
+  private readonly expressions: ExpressionParser;
+  private readonly parts: PartParser;
+
+  constructor(private readonly cursor: Cursor) {
+    this.expressions = new ExpressionParser(cursor);
+    this.parts = new PartParser(cursor, this.expressions);
+  }
+
+  statement(from: number): StatementForm {
+    const { cursor } = this;
+    const first = cursor.token;
+    const span = { from, to: first.to };
+    if (first.kind === "word") {
+      if (cursor.isSymbol("--", 1)) return this.parts.path(span);
+      if (cursor.isSymbol(":", 1)) return this.parts.device(span);
+      if (LATER_STATEMENTS.has(first.text)) return this.later(span);
+      if (STATEMENT_WORDS.has(first.text)) return this.known(cursor.take().text, span);
+    }
+    cursor.fail("FRM1", first, `No statement begins with ${quote(first.text)}; ${meant(cursor)}.`);
+    return { kind: "broken", declares: null, ...span };
+  }
+
+  private known(word: string, span: { from: number; to: number }): StatementForm {
+    switch (word) {
+      case "title":
+        return this.title(span);
+      case "model":
+        return this.parts.model(span);
+      case "sweep":
+        return this.sweep(span);
+      case "show":
+        return this.show(span);
+      default:
+        return this.value(word === "let" ? "let" : "knob", span);
+    }
+  }
+
+  private title(span: { from: number; to: number }): StatementForm {
+    const { cursor } = this;
+    if (cursor.token.kind !== "string") {
+      cursor.failHere("FRM2", 'A text such as `"Log converter"` is wanted after `title`');
+      return { kind: "broken", declares: null, ...span };
+    }
+    const token = cursor.take();
+    const text = token.text.slice(1, -1).replace(/\\(["\\])/gu, "$1");
+    return { kind: "title", text: { from: token.from, to: token.to, text }, ...span };
+  }
+
+  private value(kind: "let" | "knob", span: { from: number; to: number }): StatementForm {
+    const { cursor } = this;
+    const name = cursor.wantWord(`A name after ${quote(kind)}`);
+    cursor.wantSymbol("=", "the name");
+    const value = this.expressions.expression();
+    const tolerance = this.parts.tolerance();
+    let range = null;
+    if (kind === "knob" && cursor.acceptWord("in")) {
+      const low = this.expressions.sum();
+      cursor.wantSymbol("..", "the lower end of the range");
+      range = { low, high: this.expressions.sum() };
+    }
+    return { kind, name, value, tolerance, range, ...span };
+  }
+
+  private sweep(span: { from: number; to: number }): StatementForm {
+    const knob = this.cursor.wantWord("The name of a knob after `sweep`");
+    return { kind: "sweep", knob, range: this.range(), ...span };
+  }
+
+  private range(): SweepRange {
+    const { cursor, expressions } = this;
+    if (cursor.acceptWord("over")) {
+      const values = [expressions.sum()];
+      while (cursor.acceptSymbol(",")) values.push(expressions.sum());
+      return { kind: "list", values };
+    }
+    if (!cursor.acceptWord("from")) {
+      cursor.failHere("FRM2", "`from … to …` or `over …` is wanted after the knob");
+      return { kind: "list", values: [] };
+    }
+    const start = expressions.sum();
+    if (!cursor.acceptWord("to")) cursor.failHere("FRM2", "`to` and the end of the range are wanted here");
+    const stop = expressions.sum();
+    const spacings = "`, 20 per decade`, `, 51 points` or `, step 1 V`";
+    if (!cursor.acceptSymbol(",")) cursor.failHere("FRM2", `The spacing is wanted here: ${spacings}`);
+    if (cursor.acceptWord("step"))
+      return { kind: "range", start, stop, spacing: "step", amount: expressions.sum() };
+    const amount = expressions.sum();
+    if (cursor.acceptWord("points")) return { kind: "range", start, stop, spacing: "points", amount };
+    if (!cursor.acceptWord("per") || !cursor.acceptWord("decade")) {
+      cursor.failHere("FRM2", `The spacing reads ${spacings}`);
+    }
+    return { kind: "range", start, stop, spacing: "per decade", amount };
+  }
+
+  private show(span: { from: number; to: number }): StatementForm {
+    const { cursor } = this;
+    const items = [];
+    do {
+      const from = cursor.token.from;
+      const name: Word | null =
+        cursor.token.kind === "word" && cursor.isSymbol("=", 1) ? cursor.take() : null;
+      if (name !== null) cursor.take();
+      const value = this.expressions.expression();
+      items.push({ name, value, from, to: value.to });
+    } while (cursor.acceptSymbol(","));
+    return { kind: "show", items, ...span };
+  }
+
+  /** A statement of the language that this server does not speak yet: named, then passed over whole. */
+  private later(span: { from: number; to: number }): StatementForm {
+    const { cursor } = this;
+    const word = cursor.token;
+    const next = cursor.peek(1);
+    const declares = (word.text === "block" || word.text === "read") && next.kind === "word" ? next : null;
+    cursor.fail(
+      "FRM6",
+      word,
+      `${quote(word.text)} is not yet part of the language this server speaks; take it out.`,
+    );
+    return { kind: "broken", declares, ...span };
+  }
+}
+
+/** A guess at what a line was to be, from its first tokens. */
+function meant(cursor: Cursor): string {
+  if (cursor.token.kind === "word" && cursor.isSymbol("=", 1)) return "to name a value write `let` before it";
+  return "a line begins with a word such as `let`, `model`, `sweep` or `show`, with `net -- …` or with `name : kind`";
+}

@@ -1,0 +1,130 @@
+import type { PathPart, Setting, StatementForm, ToleranceSyntax, Word } from "./ast";
+import type { Cursor } from "./cursor";
+import type { ExpressionParser } from "./expression-parser";
+import type { Span } from "./span";
+import { quote } from "./token";
+
+/** Reads what is wired: paths, devices, models, and the settings and tolerances inside them. */
+export class PartParser {
+  constructor(
+    private readonly cursor: Cursor,
+    private readonly expressions: ExpressionParser,
+  ) {}
+
+  /** `net -- NAME : kind … -- net -- …`; nets and parts must take turns and a net stands at both ends. */
+  path(span: Span): StatementForm {
+    const { cursor } = this;
+    const nets: Word[] = [cursor.wantWord("The name of a net")];
+    const parts: PathPart[] = [];
+    while (cursor.acceptSymbol("--")) {
+      if (cursor.token.kind === "word" && !cursor.isSymbol(":", 1)) {
+        cursor.fail("FRM7", cursor.token, this.elementMissing(nets[nets.length - 1]!));
+        break;
+      }
+      const part = this.part();
+      parts.push(part);
+      if (!cursor.acceptSymbol("--")) {
+        cursor.failHere("FRM7", `The path wants ${quote("--")} and a net after ${quote(part.name.text)}`);
+      } else if (cursor.token.kind === "word" && cursor.isSymbol(":", 1)) {
+        const next = cursor.token;
+        const message = `Between ${quote(part.name.text)} and ${quote(next.text)} the path wants a net; name it: \`… -- net -- ${next.text} : …\`.`;
+        cursor.fail("FRM7", next, message);
+      }
+      nets.push(cursor.wantWord("The name of a net"));
+    }
+    return { kind: "path", nets, parts, ...span };
+  }
+
+  private elementMissing(left: Word): string {
+    const right = this.cursor.token.text;
+    return `Between the nets ${quote(left.text)} and ${quote(right)} an element is missing; write it as \`${left.text} -- R1 : resistor 1 kΩ -- ${right}\`.`;
+  }
+
+  private part(): PathPart {
+    const { cursor } = this;
+    const name = cursor.wantWord("An element such as `R1 : resistor 1 kΩ`");
+    cursor.wantSymbol(":", "the name of the element");
+    const kind = cursor.wantWord("A kind or model after `:`");
+    const bare = cursor.atEnd || ["--", "±", "{", ","].some((symbol) => cursor.isSymbol(symbol));
+    const value = bare ? null : this.expressions.expression();
+    const tolerance = this.tolerance();
+    const settings = cursor.isSymbol("{") ? this.settings() : [];
+    return { name, kind, value, tolerance, settings, from: name.from, to: cursor.behind };
+  }
+
+  /** `NAME : kind { … }` */
+  device(span: Span): StatementForm {
+    const { cursor } = this;
+    const name = cursor.take();
+    cursor.take();
+    const of = cursor.wantWord("A kind or model after `:`");
+    if (!cursor.isSymbol("{")) {
+      const wish = `Pins in braces are wanted after ${quote(of.text)}, or a net and \`--\` before ${quote(name.text)}`;
+      cursor.failHere("FRM7", wish);
+    }
+    return { kind: "device", name, of, settings: this.settings(), ...span };
+  }
+
+  /** `model NAME : kind { … }`, after the word `model`. */
+  model(span: Span): StatementForm {
+    const { cursor } = this;
+    const name = cursor.wantWord("A name after `model`");
+    cursor.wantSymbol(":", "the name of the model");
+    const of = cursor.wantWord("A kind such as `diode` or `npn` after `:`");
+    cursor.wantSymbol("{", "the kind; a model without parameters ends in `{ }`");
+    return { kind: "model", name, of, settings: this.settingList(), ...span };
+  }
+
+  private settings(): Setting[] {
+    this.cursor.wantSymbol("{", "the kind");
+    return this.settingList();
+  }
+
+  /** `name = value, … }`, after the opening brace; a comma may stand before the closing one. */
+  private settingList(): Setting[] {
+    const { cursor } = this;
+    const open = { from: cursor.behind - 1, to: cursor.behind };
+    const settings: Setting[] = [];
+    while (!cursor.isSymbol("}") && !cursor.atEnd) {
+      const name = cursor.wantWord("The name of a pin or parameter");
+      cursor.wantSymbol("=", "the name");
+      const value = this.expressions.expression();
+      const tolerance = this.tolerance();
+      settings.push({ name, value, tolerance, from: name.from, to: cursor.behind });
+      if (cursor.isSymbol("}") || cursor.acceptSymbol(",")) continue;
+      if (!cursor.atEnd) cursor.failHere("FRM2", "`,` or `}` is wanted here");
+    }
+    if (!cursor.acceptSymbol("}")) {
+      const to = cursor.behind;
+      const fix = { title: "Close it with }", from: to, to, text: " }" };
+      cursor.fail("FRM5", open, "This brace is not closed; put a `}` at its end.", fix);
+    }
+    return settings;
+  }
+
+  /** `± amount [uniform | normal N sigma] [track GROUP [within amount]]`, null where there is none. */
+  tolerance(): ToleranceSyntax | null {
+    const { cursor } = this;
+    const from = cursor.token.from;
+    if (!cursor.acceptSymbol("±")) return null;
+    const amount = this.expressions.sum();
+    let law: "uniform" | "normal" = "uniform";
+    let sigmas: number | null = null;
+    if (cursor.acceptWord("normal")) {
+      law = "normal";
+      const number = cursor.take();
+      sigmas = number.kind === "number" ? Number(number.text) : null;
+      if (sigmas === null || !cursor.acceptWord("sigma")) {
+        cursor.failHere("FRM2", "A normal law reads `normal 3 sigma`");
+      }
+    } else {
+      cursor.acceptWord("uniform");
+    }
+    let track = null;
+    if (cursor.acceptWord("track")) {
+      const group = cursor.wantWord("The name of a group after `track`");
+      track = { group, within: cursor.acceptWord("within") ? this.expressions.sum() : null };
+    }
+    return { amount, law, sigmas, track, from, to: cursor.behind };
+  }
+}

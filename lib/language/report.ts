@@ -1,0 +1,51 @@
+import type { Code } from "./catalogue";
+import type { Diagnostic, Fix } from "./diagnostic";
+import type { Span } from "./span";
+
+/** More problems than this are counted, not listed: nobody reads them, and mending the first ones mends most of the rest. */
+const MOST_LISTED = 200;
+
+/** Collects what the phases find. */
+export class Report {
+  private readonly listed: Diagnostic[] = [];
+  private unlisted = 0;
+  private errors = 0;
+
+  error(code: Code, span: Span, message: string, fix?: Fix): void {
+    this.errors += 1;
+    this.add(code, "error", span, message, fix);
+  }
+
+  warning(code: Code, span: Span, message: string, fix?: Fix): void {
+    this.add(code, "warning", span, message, fix);
+  }
+
+  get hasErrors(): boolean {
+    return this.errors > 0;
+  }
+
+  /** How many have been found so far. */
+  get count(): number {
+    return this.listed.length + this.unlisted;
+  }
+
+  /** Everything found, by place; at the end of it, where there is more than a page of problems, one that says so. */
+  sorted(): Diagnostic[] {
+    const all = [...this.listed].sort((a, b) => a.from - b.from || a.to - b.to);
+    if (this.unlisted > 0) {
+      const last = all[all.length - 1]!;
+      const message = `${this.unlisted} further problems are not listed; mend these first.`;
+      all.push({ code: "CAP6", severity: "error", from: last.from, to: last.to, message });
+    }
+    return all;
+  }
+
+  private add(code: Code, severity: "error" | "warning", span: Span, message: string, fix?: Fix): void {
+    if (this.listed.length >= MOST_LISTED) {
+      this.unlisted += 1;
+      return;
+    }
+    const found = { code, severity, from: span.from, to: span.to, message };
+    this.listed.push(fix === undefined ? found : { ...found, fix });
+  }
+}

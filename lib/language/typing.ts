@@ -1,0 +1,324 @@
+import { BOLTZMANN, ELEMENTARY_CHARGE } from "@/lib/units/constants";
+import {
+  AMPERE,
+  type Dimension,
+  divide,
+  KELVIN,
+  multiply,
+  PURE,
+  power,
+  sameDimension,
+  VOLT,
+} from "@/lib/units/dimension";
+import { toCoherent } from "@/lib/units/unit";
+import type { BinaryOperator, Expression, Typed, Word } from "./ast";
+import { FUNCTIONS, isFunctionName, LATER_FUNCTIONS } from "./functions";
+import { Names } from "./names";
+import { nearest } from "./nearest";
+import type { Report } from "./report";
+import { type PinsOf, resolveSignal } from "./signals";
+import type { Span } from "./span";
+import { quote } from "./token";
+import { describeDimension, spellableUnit, unitOfLiteral } from "./unit-check";
+
+const SECOND: Dimension = [0, 0, 1, 0, 0];
+const COULOMB = multiply(AMPERE, SECOND);
+
+/** A checked expression; `point` says that it is a temperature on the scale, not a difference, as `25 °C` is. */
+export interface Judged {
+  readonly typed: Typed;
+  readonly point: boolean;
+}
+
+/** Where an expression stands: may it use signals, and in which unit is it wanted (for proposals only). */
+export interface Place {
+  readonly signals: boolean;
+  readonly wanted: string | null;
+}
+
+/** What a knob or let is known to be. */
+export interface Known {
+  readonly dimension: Dimension;
+  readonly point: boolean;
+}
+
+/** Resolves names and checks units. Each mistake is reported once: what contains it is null and stays quiet. */
+export class Typing {
+  constructor(
+    private readonly source: string,
+    private readonly names: Names,
+    private readonly report: Report,
+    /** Knobs and lets understood so far; what is missing was reported, and its uses stay quiet. */
+    private readonly known: ReadonlyMap<string, Known>,
+    private readonly pinsOf: PinsOf,
+  ) {}
+
+  /** The text of a span as a message shows it. */
+  text(span: Span): string {
+    return quote(this.source.slice(span.from, Math.min(span.to, span.from + 80)).replace(/\s+/gu, " "));
+  }
+
+  judge(expression: Expression, place: Place): Judged | null {
+    switch (expression.kind) {
+      case "number":
+        return this.number(expression, place);
+      case "name":
+        return expression.path.length === 1
+          ? this.name(expression.path[0]!, place)
+          : plain(resolveSignal(expression, place.signals, this.names, this.pinsOf, this.report));
+      case "unary":
+        return this.unary(expression, place);
+      case "binary":
+        return this.binary(expression, place);
+      case "call":
+        return this.call(expression, place);
+      case "hole":
+        return null;
+    }
+  }
+
+  private number(literal: Extract<Expression, { kind: "number" }>, place: Place): Judged | null {
+    if (literal.unit === null) return constant(literal.value, PURE);
+    const unit = unitOfLiteral(literal, place.wanted, this.names, this.report);
+    if (unit === null) return null;
+    const point = unit.scale === "celsius";
+    return {
+      typed: { op: "constant", value: toCoherent(literal.value, unit), dimension: unit.dimension },
+      point,
+    };
+  }
+
+  private name(word: Word, place: Place): Judged | null {
+    switch (word.text) {
+      case "pi":
+        return constant(Math.PI, PURE);
+      case "k_B":
+        return constant(BOLTZMANN, divide(multiply(COULOMB, VOLT), KELVIN));
+      case "q_e":
+        return constant(ELEMENTARY_CHARGE, COULOMB);
+      case "V_T":
+        return plain({ op: "thermal voltage", dimension: VOLT });
+    }
+    const meaning = this.names.meaningOf(word.text);
+    if (meaning === "knob" || meaning === "let") {
+      const known = this.known.get(word.text);
+      if (known === undefined) return null;
+      return { typed: { op: meaning, name: word.text, dimension: known.dimension }, point: known.point };
+    }
+    if (meaning === null)
+      this.names.unknown(word, place.signals ? ["knob", "let", "net", "element"] : ["knob", "let"]);
+    else if (meaning !== "unread") this.misused(word, meaning, place);
+    return null;
+  }
+
+  private misused(word: Word, meaning: "net" | "element" | "model", place: Place): void {
+    const what = `${quote(word.text)} is ${Names.describe(meaning)} and has no value of its own`;
+    if (meaning === "model" || !place.signals) {
+      this.report.error("NAM4", word, `${what}; a knob, a let or a number is wanted here.`);
+      return;
+    }
+    const text = `${word.text}.${meaning === "net" ? "v" : "i"}`;
+    const proposal = meaning === "net" ? `its voltage is ${quote(text)}` : `its current is ${quote(text)}`;
+    const fix = { title: `Change to ${text}`, from: word.from, to: word.to, text };
+    this.report.error("NAM4", word, `${what}; ${proposal}.`, fix);
+  }
+
+  private unary(expression: Extract<Expression, { kind: "unary" }>, place: Place): Judged | null {
+    const { operand } = expression;
+    const minus = expression.operator === "-";
+    // A minus sign written at a Celsius literal belongs to the number: −40 °C is 233.15 K.
+    if (minus && operand.kind === "number" && operand.unit?.text === "°C") {
+      return this.number({ ...operand, value: -operand.value }, place);
+    }
+    const inner = this.judge(operand, place);
+    if (inner === null || !minus) return inner;
+    if (inner.typed.op === "constant") return constant(-inner.typed.value, inner.typed.dimension);
+    return plain({ op: "negate", operand: inner.typed, dimension: inner.typed.dimension });
+  }
+
+  private binary(expression: Extract<Expression, { kind: "binary" }>, place: Place): Judged | null {
+    const { operator } = expression;
+    if (operator === "<=" || operator === ">=" || operator === "<" || operator === ">") {
+      const message = "A comparison is no value; it can stand first in `if(…, a, b)` only.";
+      this.report.error("FRM8", expression, message);
+      return null;
+    }
+    const inner = operator === "+" || operator === "-" ? place : { ...place, wanted: null };
+    const left = this.judge(expression.left, inner);
+    const right = this.judge(expression.right, inner);
+    if (left === null || right === null) return null;
+    const a = left.typed.dimension;
+    const b = right.typed.dimension;
+    const make = (dimension: Dimension, point = false): Judged => ({
+      typed: { op: operator, left: left.typed, right: right.typed, dimension },
+      point,
+    });
+    switch (operator) {
+      case "*":
+        return make(multiply(a, b));
+      case "/":
+        return make(divide(a, b));
+      case "^":
+        return this.power(expression, left, right, make);
+      default:
+        if (!this.alike(expression.left, a, expression.right, b, operator === "+" ? "added" : "subtracted"))
+          return null;
+        if (operator === "+" && left.point && right.point) {
+          const message = `${this.text(expression.left)} and ${this.text(expression.right)} are both points on the temperature scale and cannot be added; write the difference in K.`;
+          this.report.error("UNI6", expression, message);
+          return null;
+        }
+        return make(a, operator === "+" ? left.point || right.point : left.point && !right.point);
+    }
+  }
+
+  private power(
+    expression: Extract<Expression, { kind: "binary" }>,
+    base: Judged,
+    exponent: Judged,
+    make: (dimension: Dimension) => Judged,
+  ): Judged | null {
+    if (!this.pure(expression.right, exponent.typed.dimension, "An exponent")) return null;
+    if (sameDimension(base.typed.dimension, PURE)) return make(PURE);
+    if (exponent.typed.op === "constant") return make(power(base.typed.dimension, exponent.typed.value));
+    const message = `${this.text(expression.left)} is ${describeDimension(base.typed.dimension)}, so its exponent must be a plain number.`;
+    this.report.error("UNI5", expression.right, message);
+    return null;
+  }
+
+  private call(expression: Extract<Expression, { kind: "call" }>, place: Place): Judged | null {
+    const { callee, args } = expression;
+    if (!isFunctionName(callee.text)) {
+      this.unknownFunction(callee);
+      return null;
+    }
+    const shape = FUNCTIONS[callee.text];
+    if (args.length < shape.least || args.length > shape.most) {
+      const wants = shape.least === shape.most ? String(shape.least) : `${shape.least} to ${shape.most}`;
+      const values = wants === "1" ? "1 value" : `${wants} values`;
+      this.report.error(
+        "FRM12",
+        expression,
+        `${quote(callee.text)} wants ${values} in its brackets, not ${args.length}.`,
+      );
+      return null;
+    }
+    const inner = { ...place, wanted: shape.rule === "keep" ? place.wanted : null };
+    const judged = args.map((arg, i) =>
+      shape.rule === "choose" && i === 0 ? this.condition(arg, inner) : this.judge(arg, inner),
+    );
+    if (!judged.every((one) => one !== null)) return null;
+    const dimension = this.callDimension(expression, shape.rule, judged);
+    if (dimension === null) return null;
+    return plain({ op: "call", callee: callee.text, args: judged.map((one) => one.typed), dimension });
+  }
+
+  private callDimension(
+    { callee, args }: Extract<Expression, { kind: "call" }>,
+    rule: "pure" | "root" | "keep" | "choose",
+    judged: readonly Judged[],
+  ): Dimension | null {
+    if (rule === "root") return power(judged[0]!.typed.dimension, 0.5);
+    if (rule === "pure")
+      return this.pure(args[0]!, judged[0]!.typed.dimension, quote(callee.text)) ? PURE : null;
+    const first = rule === "choose" ? 1 : 0;
+    const dimension = judged[first]!.typed.dimension;
+    const alike = args.every(
+      (arg, i) =>
+        i <= first || this.alike(args[first]!, dimension, arg, judged[i]!.typed.dimension, "chosen between"),
+    );
+    return alike ? dimension : null;
+  }
+
+  /** The first value of `if`: two values compared. */
+  private condition(expression: Expression, place: Place): Judged | null {
+    if (expression.kind !== "binary" || !["<=", ">=", "<", ">"].includes(expression.operator)) {
+      if (expression.kind !== "hole") {
+        const message = "`if` wants a comparison first, such as `if(out.v > 0 V, a, b)`.";
+        this.report.error("FRM8", expression, message);
+      }
+      return null;
+    }
+    const left = this.judge(expression.left, place);
+    const right = this.judge(expression.right, place);
+    if (left === null || right === null) return null;
+    const [a, b] = [left.typed, right.typed];
+    if (!this.alike(expression.left, a.dimension, expression.right, b.dimension, "compared")) return null;
+    return plain({
+      op: expression.operator as Exclude<BinaryOperator, never>,
+      left: a,
+      right: b,
+      dimension: PURE,
+    });
+  }
+
+  private unknownFunction(callee: Word): void {
+    if (LATER_FUNCTIONS.has(callee.text)) {
+      const message = `${quote(callee.text)} is not yet part of the language this server speaks; take it out.`;
+      this.report.error("FRM6", callee, message);
+      return;
+    }
+    const near = nearest(callee.text, Object.keys(FUNCTIONS));
+    const proposal =
+      near === null
+        ? "the functions are exp, ln, log10, sqrt, abs, min, max, tanh, atan and if"
+        : `did you mean ${quote(near)}`;
+    const message = `${quote(callee.text)} is no function; ${proposal}${near === null ? "." : "?"}`;
+    if (near === null) this.report.error("NAM10", callee, message);
+    else
+      this.report.error("NAM10", callee, message, {
+        title: `Change to ${near}`,
+        from: callee.from,
+        to: callee.to,
+        text: near,
+      });
+  }
+
+  private alike(left: Expression, a: Dimension, right: Expression, b: Dimension, verb: string): boolean {
+    if (sameDimension(a, b)) return true;
+    const message = `${this.text(left)} is ${describeDimension(a)} but ${this.text(right)} is ${describeDimension(b)}, so they cannot be ${verb}`;
+    const [bare, unit] = isBare(left)
+      ? [left, spellableUnit(b)]
+      : isBare(right)
+        ? [right, spellableUnit(a)]
+        : [null, null];
+    const span = { from: left.from, to: right.to };
+    if (bare === null || unit === null) {
+      this.report.error("UNI4", span, `${message}.`);
+      return false;
+    }
+    const text = `${this.source.slice(bare.from, bare.to)} ${unit}`;
+    const fix = { title: `Write ${text}`, from: bare.from, to: bare.to, text };
+    this.report.error("UNI4", span, `${message}; write ${quote(text)}.`, fix);
+    return false;
+  }
+
+  /** A pure number is wanted; where the value has a unit the proposal divides by it. */
+  private pure(expression: Expression, dimension: Dimension, what: string): boolean {
+    if (sameDimension(dimension, PURE)) return true;
+    const message = `${what} wants a pure number, but ${this.text(expression)} is ${describeDimension(dimension)}`;
+    const unit = spellableUnit(dimension);
+    if (unit === null || expression.to - expression.from > 200) {
+      this.report.error("UNI5", expression, `${message}; divide it by a quantity of the same unit.`);
+      return false;
+    }
+    const source = this.source.slice(expression.from, expression.to);
+    const simple = expression.kind !== "binary" && expression.kind !== "unary";
+    const text = `${simple ? source : `(${source})`} / 1 ${unit}`;
+    const fix = { title: `Divide by 1 ${unit}`, from: expression.from, to: expression.to, text };
+    this.report.error("UNI5", expression, `${message}; write ${quote(text)}.`, fix);
+    return false;
+  }
+}
+
+function constant(value: number, dimension: Dimension): Judged {
+  return { typed: { op: "constant", value, dimension }, point: false };
+}
+
+function plain(typed: Typed | null): Judged | null {
+  return typed === null ? null : { typed, point: false };
+}
+
+function isBare(expression: Expression): boolean {
+  return expression.kind === "number" && expression.unit === null;
+}

@@ -1,0 +1,109 @@
+import { AMPERE, type Dimension, OHM, sameDimension, VOLT } from "@/lib/units/dimension";
+import { PREFIXES } from "@/lib/units/prefix";
+import { unitOf } from "@/lib/units/quantity";
+import { PLAIN_UNITS, parseUnit, UNITS, type Unit } from "@/lib/units/unit";
+import type { Expression, Word } from "./ast";
+import type { Names } from "./names";
+import { nearest } from "./nearest";
+import type { Report } from "./report";
+import { quote } from "./token";
+
+/** What stands for a unit in other places: spelled-out names and habits, without prefix. */
+const SPELLED_OUT: readonly (readonly [RegExp, string])[] = [
+  [/ohms?$/iu, "Ω"],
+  [/volts?$/iu, "V"],
+  [/amp(?:ere)?s?$/iu, "A"],
+  [/watts?$/iu, "W"],
+  [/kelvins?$/iu, "K"],
+  [/^(?:deg|celsius|℃|°)$/iu, "°C"],
+  [/^percent$/iu, "%"],
+  [/siemens$/iu, "S"],
+  [/farads?$/iu, "F"],
+  [/(?:seconds?|sec)$/iu, "s"],
+];
+
+const ALL_UNITS: readonly string[] = [
+  ...UNITS.keys(),
+  ...[...PREFIXES.keys()].flatMap((prefix) => [...UNITS.keys()].map((unit) => prefix + unit)),
+  ...PLAIN_UNITS.keys(),
+  "°C",
+];
+
+/** The unit of a literal; where there is none, a diagnostic that proposes one that fits `wanted` (a unit symbol), and null. */
+export function unitOfLiteral(
+  literal: Extract<Expression, { kind: "number" }>,
+  wanted: string | null,
+  names: Names,
+  report: Report,
+): Unit | null {
+  const word = literal.unit!;
+  const unit = parseUnit(word.text);
+  if (unit !== null) return unit;
+  const differences = word.text.replace(/°C|degC/gu, "K");
+  if (differences !== word.text && parseUnit(differences) !== null) {
+    const message = `${quote(word.text)} counts differences of temperature, which are in K; write ${quote(differences)}.`;
+    report.error("UNI6", word, message, change(word, differences));
+    return null;
+  }
+  const prefix = word.text === "u" ? "µ" : word.text;
+  if (PREFIXES.has(prefix)) {
+    const proposal = `${literal.value} ${prefix}${wanted ?? likelyUnit(prefix)}`;
+    const message = `${quote(`${literal.value}${word.text}`)} has a prefix but no unit; write ${quote(proposal)}.`;
+    report.error("UNI2", literal, message, change(literal, proposal));
+    return null;
+  }
+  if (["knob", "let"].includes(names.meaningOf(word.text) ?? "")) {
+    const proposal = `${literal.value} * ${word.text}`;
+    const message = `${quote(word.text)} is no unit; to multiply write ${quote(proposal)}.`;
+    report.error("UNI1", literal, message, change(literal, proposal));
+    return null;
+  }
+  reportUnknownUnit(word, report);
+  return null;
+}
+
+function reportUnknownUnit(word: Word, report: Report): void {
+  const spelled = SPELLED_OUT.reduce((text, [pattern, symbol]) => text.replace(pattern, symbol), word.text);
+  const near = parseUnit(spelled) !== null ? spelled : nearest(spelled, ALL_UNITS);
+  if (near === null) {
+    const message = `${quote(word.text)} is no unit; use one such as V, mV, nA, kΩ, K, °C or %.`;
+    report.error("UNI1", word, message);
+  } else {
+    report.error(
+      "UNI1",
+      word,
+      `${quote(word.text)} is no unit; did you mean ${quote(near)}?`,
+      change(word, near),
+    );
+  }
+}
+
+function likelyUnit(prefix: string): string {
+  const power = PREFIXES.get(prefix)!;
+  if (power >= 3) return "Ω";
+  return power >= -3 ? "V" : "A";
+}
+
+function change(at: { from: number; to: number }, text: string) {
+  return { title: `Change to ${text}`, from: at.from, to: at.to, text };
+}
+
+/** "in V", "a pure number": how a dimension is called in a message. */
+export function describeDimension(dimension: Dimension): string {
+  const unit = unitOf(dimension);
+  return unit === "1" ? "a pure number" : `in ${unit}`;
+}
+
+/** A unit that a literal of this dimension may be given, null where none is at hand. */
+export function spellableUnit(dimension: Dimension): string | null {
+  const unit = unitOf(dimension);
+  return unit !== "1" && parseUnit(unit) !== null && !unit.startsWith("1/") ? unit : null;
+}
+
+/** The unit that was probably meant where a literal's unit is of another dimension: `10 K` for 10 kΩ, `25 C` for 25 °C. */
+export function mistakenUnit(unit: string, wanted: Dimension): string | null {
+  if (unit === "C" && unitOf(wanted) === "K") return "°C";
+  if (unit === "K" && [OHM, VOLT, AMPERE].some((dimension) => sameDimension(dimension, wanted)))
+    return `k${unitOf(wanted)}`;
+  return null;
+}

@@ -1,0 +1,229 @@
+import type { ElementKind, Expression, ModelKind, Setting, Statement, ToleranceSyntax, Word } from "./ast";
+import { KINDS, MODEL_KINDS } from "./kinds";
+import { Names } from "./names";
+import { nearest } from "./nearest";
+import type { Report } from "./report";
+import type { Span } from "./span";
+import { quote } from "./token";
+
+/** An element whose kind and nets are known and whose values are not yet checked. */
+export interface Wired extends Span {
+  readonly name: Word;
+  readonly kind: ElementKind;
+  readonly model: string | null;
+  readonly pins: Readonly<Record<string, string>>;
+  readonly value: Expression | null;
+  readonly tolerance: ToleranceSyntax | null;
+  /** Parameters beyond the value. */
+  readonly settings: readonly Setting[];
+}
+
+type Followed = { readonly kind: ElementKind; readonly model: string | null };
+
+/** Resolves the kind of every element and notes the nets it is wired to. */
+export class Wirer {
+  readonly wired: Wired[] = [];
+
+  constructor(
+    private readonly names: Names,
+    /** Kind of each model whose statement is sound. */
+    private readonly models: ReadonlyMap<string, ModelKind>,
+    private readonly report: Report,
+  ) {}
+
+  wire(statements: readonly Statement[]): Wired[] {
+    for (const statement of statements) {
+      if (statement.kind === "path") this.path(statement);
+      else if (statement.kind === "device") this.device(statement);
+    }
+    return this.wired;
+  }
+
+  private path(statement: Extract<Statement, { kind: "path" }>): void {
+    for (const net of statement.nets) this.names.mentionNet(net);
+    statement.parts.forEach((part, i) => {
+      const followed = this.follow(part.kind);
+      if (followed === null) return;
+      const { kind } = followed;
+      const pins = KINDS[kind].pins;
+      if (pins.length !== 2) {
+        const example = `${part.name.text || "Q1"} : ${part.kind.text} { ${pins.map((pin) => `${pin} = …`).join(", ")} }`;
+        const message = `${quote(part.kind.text)} has ${pins.length} pins and cannot stand on a path; write ${quote(example)}.`;
+        this.report.error("FRM11", part, message);
+        return;
+      }
+      const model = followed.model ?? this.modelAfter(kind, part.value);
+      if (KINDS[kind].value === null && model === null) {
+        if (part.value === null) this.wantModel(part.kind, kind);
+        return;
+      }
+      if (followed.model !== null && part.value !== null) {
+        const message = `${quote(part.kind.text)} is a model, and what follows a model takes no value here; remove it.`;
+        this.report.error("FRM11", part.value, message);
+      }
+      if (KINDS[kind].value === null && part.tolerance !== null) {
+        this.report.error(
+          "UNI10",
+          part.tolerance,
+          "This element has no value of its own, so it takes no tolerance; give it to the model.",
+        );
+      }
+      this.add(
+        part.name,
+        { kind, model },
+        { [pins[0]!]: statement.nets[i]!.text, [pins[1]!]: statement.nets[i + 1]!.text },
+        {
+          value: KINDS[kind].value === null ? null : part.value,
+          tolerance: part.tolerance,
+          settings: part.settings,
+          from: part.from,
+          to: part.to,
+        },
+      );
+    });
+  }
+
+  private device(statement: Extract<Statement, { kind: "device" }>): void {
+    const followed = this.follow(statement.of);
+    if (followed === null) {
+      // The nets are noted all the same, so that signals on them stay quiet.
+      for (const setting of statement.settings) {
+        const net = plainName(setting.value);
+        if (net !== null && this.names.meaningOf(net.text) === null) this.names.mentionNet(net);
+      }
+      return;
+    }
+    const { kind, model } = followed;
+    if (KINDS[kind].value === null && model === null) {
+      this.wantModel(statement.of, kind);
+      return;
+    }
+    const pins: Record<string, string> = {};
+    const settings: Setting[] = [];
+    let value: Setting | null = null;
+    const seen = new Set<string>();
+    for (const setting of statement.settings) {
+      if (!this.isNew(setting.name, seen)) continue;
+      if (KINDS[kind].pins.includes(setting.name.text)) this.pin(setting, pins);
+      else if (setting.name.text === "value" && KINDS[kind].value !== null) value = setting;
+      else settings.push(setting);
+    }
+    const open = KINDS[kind].pins.filter((pin) => !seen.has(pin));
+    if (open.length > 0 && statement.whole) {
+      const which = open.length === 1 ? `pin ${quote(open[0]!)}` : `pins ${open.map(quote).join(", ")}`;
+      const message = `The ${which} of ${quote(statement.name.text)} ${open.length === 1 ? "is" : "are"} left open; connect ${open.length === 1 ? "it" : "them"}: \`${open[0]} = net\`.`;
+      this.report.error("WIR5", statement.name, message);
+    }
+    if (open.length > 0 && !statement.whole) return;
+    const { from, to } = statement;
+    this.add(statement.name, followed, pins, {
+      value: value?.value ?? null,
+      tolerance: value?.tolerance ?? null,
+      settings,
+      from,
+      to,
+    });
+  }
+
+  private add(
+    name: Word,
+    { kind, model }: Followed,
+    pins: Readonly<Record<string, string>>,
+    rest: Span & Pick<Wired, "value" | "tolerance" | "settings">,
+  ): void {
+    if (this.names.meaningOf(name.text) !== "element" || this.names.placeOf(name.text).from !== name.from)
+      return;
+    this.names.setKind(name.text, kind);
+    this.wired.push({ name, kind, model, pins, ...rest });
+  }
+
+  private pin(setting: Setting, pins: Record<string, string>): void {
+    const net = plainName(setting.value);
+    if (net === null) {
+      if (setting.value.kind === "hole") return;
+      const message = `The pin ${quote(setting.name.text)} wants the name of a net, as in \`${setting.name.text} = out\`.`;
+      this.report.error("FRM10", setting.value, message);
+      return;
+    }
+    if (setting.tolerance !== null) {
+      this.report.error("UNI10", setting.tolerance, "A pin takes no tolerance; remove it.");
+    }
+    this.names.mentionNet(net);
+    pins[setting.name.text] = net.text;
+  }
+
+  private isNew(name: Word, seen: Set<string>): boolean {
+    if (seen.has(name.text)) {
+      this.report.error("NAM8", name, `${quote(name.text)} is given twice; remove one of the two.`);
+      return false;
+    }
+    seen.add(name.text);
+    return true;
+  }
+
+  /** The kind that the word after `:` names, or that of the model it names. */
+  private follow(word: Word): Followed | null {
+    if (word.text === "") return null;
+    if (Object.hasOwn(KINDS, word.text)) return { kind: word.text as ElementKind, model: null };
+    const kind = this.models.get(word.text);
+    if (kind !== undefined) return { kind, model: word.text };
+    this.unknownKind(word);
+    return null;
+  }
+
+  private unknownKind(word: Word): void {
+    const meaning = this.names.meaningOf(word.text);
+    if (meaning === "model" || meaning === "unread") return;
+    if (word.text === "law" || word.text === "gain") {
+      const message = `${quote(word.text)} is not yet part of the language this server speaks; take it out.`;
+      this.report.error("FRM6", word, message);
+    } else if (meaning !== null) {
+      const message = `${quote(word.text)} is ${Names.describe(meaning)}, and a kind or model is wanted after \`:\`.`;
+      this.report.error("NAM5", word, message);
+    } else {
+      const near = nearest(word.text, [...Object.keys(KINDS), ...this.models.keys()]);
+      const proposal =
+        near === null
+          ? `; the kinds are ${Object.keys(KINDS).join(", ")}.`
+          : `; did you mean ${quote(near)}?`;
+      const message = `No kind or model is called ${quote(word.text)}${proposal}`;
+      if (near === null) this.report.error("NAM5", word, message);
+      else
+        this.report.error("NAM5", word, message, {
+          title: `Change to ${near}`,
+          from: word.from,
+          to: word.to,
+          text: near,
+        });
+    }
+  }
+
+  /** `diode junction` on a path: the model named where other kinds have their value. */
+  private modelAfter(kind: ElementKind, value: Expression | null): string | null {
+    if (KINDS[kind].value !== null || value === null || value.kind === "hole") return null;
+    const word = plainName(value);
+    const of = word === null ? undefined : this.models.get(word.text);
+    if (of === kind) return word!.text;
+    if (word === null || of !== undefined || this.names.meaningOf(word.text) !== "model") {
+      if (word !== null && this.names.meaningOf(word.text) === null) this.names.unknown(word, ["model"]);
+      else if (word === null || this.names.meaningOf(word.text) !== "unread") {
+        this.report.error(
+          "FRM11",
+          value,
+          `A ${kind} follows a model of its kind; declare one with \`model M : ${kind} { … }\` and name it here.`,
+        );
+      }
+    }
+    return null;
+  }
+
+  private wantModel(word: Word, kind: ElementKind): void {
+    const sketch = MODEL_KINDS.includes(kind as ModelKind) ? `model M : ${kind} { … }` : kind;
+    const message = `A ${kind} follows a model; declare one with ${quote(sketch)} and write its name in place of ${quote(word.text)}.`;
+    this.report.error("FRM11", word, message);
+  }
+}
+
+function plainName(expression: Expression): Word | null {
+  return expression.kind === "name" && expression.path.length === 1 ? expression.path[0]! : null;
+}
