@@ -1,0 +1,101 @@
+import type { Element } from "@/lib/language/ast";
+import { nearest } from "@/lib/language/nearest";
+import type { Report } from "@/lib/language/report";
+import { UnionFind } from "./union-find";
+import { GROUND, list, type Wiring } from "./wiring-graph";
+
+/** One-connection nets for which a near name is searched. */
+const MOST_SEARCHES = 40;
+
+/**
+ * Nets with one connection, nets with no path to ground, and cuts of current elements. A path leads through resistors, voltage
+ * elements, diodes and transistors, and from an amplifier's output to ground; not through a current element, which lets
+ * no voltage settle, nor into what takes no current of its own: an amplifier's input, the base of a transistor without
+ * current gains.
+ */
+export function checkReach(wiring: Wiring, report: Report): void {
+  const reach = conducting(wiring);
+  const members = new Map<number, number[]>();
+  wiring.nets.forEach((_, net) => {
+    const root = reach.find(net);
+    const set = members.get(root);
+    if (set === undefined) members.set(root, [net]);
+    else set.push(net);
+  });
+  const grounded = reach.find(GROUND);
+  const ends = checkEnds(wiring, (net) => reach.find(net) === grounded, report);
+  for (const [root, nets] of members) {
+    if (root === grounded || (nets.length === 1 && ends.has(nets[0]!))) continue;
+    checkIsland(wiring, nets, report);
+  }
+}
+
+function conducting(wiring: Wiring): UnionFind {
+  const sets = new UnionFind(wiring.nets.length);
+  const withoutGains = wiring.design.models.filter(({ params }) => !params.has("beta_f") && !params.has("beta_r"));
+  const baseless = new Set(withoutGains.map((model) => model.name));
+  for (const element of wiring.design.elements) {
+    if (element.kind === "current") continue;
+    if (element.kind === "opamp") {
+      sets.union(wiring.net(element, "out"), GROUND);
+      continue;
+    }
+    const pins = Object.keys(element.pins).filter((pin) => pin !== "b" || !baseless.has(element.model!));
+    const nets = pins.map((pin) => wiring.net(element, pin));
+    for (const net of nets) sets.union(net, nets[0]!);
+  }
+  return sets;
+}
+
+/** Nets with one connection. Shown by a trace and settled they may be meant, as the output of a stage; else they are a slip. */
+function checkEnds(wiring: Wiring, isSettled: (net: number) => boolean, report: Report): Set<number> {
+  const ends = new Set<number>();
+  const wellConnected = wiring.nets.filter((_, net) => wiring.connections[net]!.length > 1);
+  wiring.connections.forEach((connections, net) => {
+    if (net === GROUND || connections.length !== 1) return;
+    ends.add(net);
+    const name = wiring.nets[net]!;
+    const place = wiring.design.netPlaces.get(name)!;
+    const { element, pin } = connections[0]!;
+    const message = `The net ${list([name])} has one connection, ${list([`${element.name}.${pin}`])}`;
+    if (isSettled(net) && wiring.shown.has(net)) {
+      report.warning("WIR1", place, `${message}; nothing loads it.`);
+      return;
+    }
+    const near = ends.size <= MOST_SEARCHES ? nearest(name, wellConnected) : null;
+    if (near === null) {
+      report.error("WIR1", place, `${message}; connect it to something or show its voltage.`);
+      return;
+    }
+    const fix = { title: `Change to ${near}`, from: place.from, to: place.to, text: near };
+    report.error("WIR1", place, `${message}; did you mean ${list([near])}?`, fix);
+  });
+  return ends;
+}
+
+/** Nets joined to each other but not to ground. */
+function checkIsland(wiring: Wiring, nets: readonly number[], report: Report): void {
+  const names = nets.map((net) => wiring.nets[net]!);
+  const place = wiring.design.netPlaces.get(names[0]!)!;
+  const which = names.length === 1 ? `The net ${list(names)} has` : `The nets ${list(names)} have`;
+  const inside = new Set(nets);
+  const cut = new Set<Element>();
+  for (const net of nets) {
+    for (const { element } of wiring.connections[net]!) {
+      if (element.kind === "current" && !within(wiring, element, inside)) cut.add(element);
+    }
+  }
+  if (cut.size === 0) {
+    const message = `${which} no path to \`ground\`, so no voltage is defined there; connect ${names.length === 1 ? "it" : "one of them"} to \`ground\` through an element.`;
+    report.error("WIR2", place, message);
+    return;
+  }
+  const elements = [...cut];
+  const verb = elements.length === 1 ? "current element" : "current elements";
+  const message = `${which} no way for current but through the ${verb} ${list(elements.map((element) => element.name))}, whose currents need not add up to zero; add a resistor or another path to \`ground\`.`;
+  report.error("WIR4", elements[0]!, message);
+}
+
+function within(wiring: Wiring, element: Element, nets: ReadonlySet<number>): boolean {
+  return Object.keys(element.pins).every((pin) => nets.has(wiring.net(element, pin)));
+}
