@@ -57,9 +57,9 @@ export default async function WorkspaceLayout({ children, params }: Props) {
           {children}
         </main>
         {workspace === "north-bench" && (
-          <p className="border-t px-4 py-2 text-quiet text-xs md:px-6">
+          <footer className="border-t px-4 py-2 text-quiet text-xs md:px-6">
             Demo data: Northbench Instruments and its people are invented.
-          </p>
+          </footer>
         )}
       </div>
     </Providers>

@@ -38,7 +38,7 @@ export function NetlistsView({ workspace, mayWrite, first }: Props) {
       mayWrite={mayWrite}
       onAdded={() => queries.invalidateQueries({ queryKey: ["netlists", workspace] })}
     >
-      {(uploadButton) => (
+      {(uploadButton, uploadReport) => (
         <>
           <PageHeader
             title="Netlists"
@@ -55,6 +55,7 @@ export function NetlistsView({ workspace, mayWrite, first }: Props) {
             }
           />
           <div className="grid gap-4 px-4 py-4 md:px-6">
+            {uploadReport}
             <SearchBox value={state.query} onChange={(query) => show({ query })} />
             {error !== null && (
               <FailedState

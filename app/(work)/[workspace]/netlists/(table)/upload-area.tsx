@@ -10,8 +10,8 @@ interface Props {
   readonly mayWrite: boolean;
   /** After the last file, when at least one became a netlist. */
   readonly onAdded: () => void;
-  /** Gets the button that opens the file chooser. */
-  readonly children: (button: ReactNode) => ReactNode;
+  /** Gets the button that opens the file chooser, and what became of the files. */
+  readonly children: (button: ReactNode, report: ReactNode) => ReactNode;
 }
 
 /** Takes `.swn` files by choice or by drop on any part of the page, one after another, and says what became of each. */
@@ -33,7 +33,7 @@ export function UploadArea({ workspace, mayWrite, onAdded, children }: Props) {
     if (added) onAdded();
   };
 
-  if (!mayWrite) return children(null);
+  if (!mayWrite) return children(null, null);
   return (
     // biome-ignore lint/a11y/noStaticElementInteractions: dropping is the mouse's twin of the button, which the keyboard has
     <div
@@ -70,9 +70,9 @@ export function UploadArea({ workspace, mayWrite, onAdded, children }: Props) {
             {sending ? "Uploading…" : "Upload .swn files"}
           </Button>
         </>,
-      )}
-      {results.length > 0 && (
-        <UploadResults workspace={workspace} results={results} onClose={() => setResults([])} />
+        results.length > 0 && (
+          <UploadResults workspace={workspace} results={results} onClose={() => setResults([])} />
+        ),
       )}
       {over && (
         <div className="pointer-events-none absolute inset-2 z-30 flex items-center justify-center rounded-[2px] border-2 border-accent border-dashed bg-paper/90">

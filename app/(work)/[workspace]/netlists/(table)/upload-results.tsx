@@ -18,7 +18,7 @@ export function UploadResults({
   const added = results.filter((result) => result.state === "added").length;
   const refused = results.filter((result) => result.state === "refused").length;
   return (
-    <section aria-label="Upload" className="mx-4 mt-2 mb-6 border bg-surface px-4 py-3 md:mx-6">
+    <section aria-label="Upload" className="border bg-surface px-4 py-3">
       <div className="flex flex-wrap items-baseline gap-x-4 gap-y-1">
         <h2 className="grow text-sm">
           Upload{" "}
