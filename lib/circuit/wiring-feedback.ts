@@ -38,6 +38,8 @@ export function checkFeedback(wiring: Wiring, ideal: ReadonlySet<Element>, repor
   }
   const component = components(wiring.nets.length, (n) => edges.get(n) ?? []);
   for (const amplifier of amplifiers) {
+    // An output on a net that does not move has been reported as a second driver.
+    if (!moves(net(amplifier, "out"))) continue;
     const out = component[joined.find(net(amplifier, "out"))];
     const fedBack = inputsOf(amplifier, wiring).some((n) => moves(n) && component[joined.find(n)] === out);
     if (!fedBack) reportOpenLoop(amplifier, ideal.has(amplifier), report);

@@ -25,12 +25,16 @@ export function checkLoops(wiring: Wiring, ideal: ReadonlySet<Element>, report: 
     .map((element): Tie => ({ element, from: wiring.net(element, "left"), to: wiring.net(element, "right") }))
     .filter((tie) => tie.from !== tie.to);
   const outputs = soleDrivers(wiring, voltages, report);
-  findLoops(wiring, [...voltages, ...outputs], () => true, report);
+  const race =
+    "close a loop of fixed voltages in which nothing limits the current; put a resistor into it or take one out";
+  findLoops(wiring, [...voltages, ...outputs], () => true, race, report);
   const inputs = [...ideal]
     .map((element): Tie => ({ element, from: wiring.net(element, "plus"), to: wiring.net(element, "minus") }))
     .filter((tie) => tie.from !== tie.to);
+  const twice =
+    "fix the same voltage twice, since the inputs of an ideal amplifier have no difference; wire one of them apart";
   // Loops of voltage elements alone have been reported.
-  findLoops(wiring, [...voltages, ...inputs], (tie) => tie.element.kind === "opamp", report);
+  findLoops(wiring, [...voltages, ...inputs], (tie) => tie.element.kind === "opamp", twice, report);
 }
 
 /** Reports nets with two drivers; the outputs that are the only driver of their net. */
@@ -63,6 +67,7 @@ function findLoops(
   wiring: Wiring,
   ties: readonly Tie[],
   isReported: (tie: Tie) => boolean,
+  trouble: string,
   report: Report,
 ): void {
   const sets = new UnionFind(wiring.nets.length);
@@ -74,10 +79,9 @@ function findLoops(
       push(forest, tie.to, tie);
     } else if (isReported(tie)) {
       const others = walks++ < MOST_WALKS ? between(forest, tie) : [];
-      const names = [...new Set([...others, tie.element].map((element) => element.name))];
-      const amplifiers = [...others, tie.element].some((element) => element.kind === "opamp");
-      const what = amplifiers ? "voltage elements and amplifiers" : "voltage elements";
-      const message = `${list(names)} close a loop of ${what} in which nothing limits the current; put a resistor into it or take one out.`;
+      const members = [...new Set([...others, tie.element])].sort((a, b) => a.from - b.from);
+      const names = members.map((element) => element.name);
+      const message = `${list(names)} ${trouble}.`;
       report.error("WIR3", tie.element, message);
     }
   }

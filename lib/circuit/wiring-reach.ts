@@ -32,7 +32,9 @@ export function checkReach(wiring: Wiring, report: Report): void {
 
 function conducting(wiring: Wiring): UnionFind {
   const sets = new UnionFind(wiring.nets.length);
-  const withoutGains = wiring.design.models.filter(({ params }) => !params.has("beta_f") && !params.has("beta_r"));
+  const withoutGains = wiring.design.models.filter(
+    ({ params }) => !params.has("beta_f") && !params.has("beta_r"),
+  );
   const baseless = new Set(withoutGains.map((model) => model.name));
   for (const element of wiring.design.elements) {
     if (element.kind === "current") continue;
@@ -64,7 +66,10 @@ function checkEnds(wiring: Wiring, isSettled: (net: number) => boolean, report: 
     }
     const near = ends.size <= MOST_SEARCHES ? nearest(name, wellConnected) : null;
     if (near === null) {
-      report.error("WIR1", place, `${message}; connect it to something or show its voltage.`);
+      const mend = isSettled(net)
+        ? "connect it to something or show its voltage"
+        : "connect it to something else too";
+      report.error("WIR1", place, `${message}; ${mend}.`);
       return;
     }
     const fix = { title: `Change to ${near}`, from: place.from, to: place.to, text: near };
@@ -91,8 +96,11 @@ function checkIsland(wiring: Wiring, nets: readonly number[], report: Report): v
     return;
   }
   const elements = [...cut];
-  const verb = elements.length === 1 ? "current element" : "current elements";
-  const message = `${which} no way for current but through the ${verb} ${list(elements.map((element) => element.name))}, whose currents need not add up to zero; add a resistor or another path to \`ground\`.`;
+  const through = elements.length === 1 ? "the current element" : "the current elements";
+  const trouble =
+    elements.length === 1 ? "whose current has no way back" : "whose currents need not add up to zero";
+  const cutList = list(elements.map((element) => element.name));
+  const message = `${which} no way for current but through ${through} ${cutList}, ${trouble}; add a resistor or another path to \`ground\`.`;
   report.error("WIR4", elements[0]!, message);
 }
 

@@ -1,3 +1,4 @@
+import { Agreement } from "./agreement";
 import type { Design, Element, Netlist, Show, Statement, Sweep } from "./ast";
 import type { Diagnostic } from "./diagnostic";
 import { ElementCheck, modelKinds } from "./elements";
@@ -41,19 +42,30 @@ function checkNetlist({ statements }: Netlist, source: string, report: Report): 
   const nominal = new Nominal();
   const known = new Map<string, Known>();
   const pins = new Map<string, Readonly<Record<string, string>>>();
-  const typing = new Typing(source, names, report, known, (element) => pins.get(element) ?? null);
-  const quantities = new Quantities(typing, nominal, report);
+  const agreement = new Agreement(source, report);
+  const typing = new Typing(agreement, names, report, known, (element) => pins.get(element) ?? null);
+  const quantities = new Quantities(typing, agreement, nominal, report);
 
   declareAll(statements, names);
   const kinds = modelKinds(statements, names, report);
   const wired = new Wirer(names, kinds, report).wire(statements);
   for (const one of wired) pins.set(one.name.text, one.pins);
 
-  const { knobs, lets } = checkValues(statements, { names, typing, quantities, nominal, known, report });
+  const { knobs, lets } = checkValues(statements, {
+    names,
+    agreement,
+    typing,
+    quantities,
+    nominal,
+    known,
+    report,
+  });
   const elementCheck = new ElementCheck(quantities, nominal, report);
   const models = elementCheck.models(statements, kinds);
   const elements = wired.map((one) => elementCheck.element(one));
-  const sweeps = new SweepCheck(names, typing, quantities, known, knobs, report).sweeps(statements);
+  const sweeps = new SweepCheck(names, typing, agreement, quantities, known, knobs, report).sweeps(
+    statements,
+  );
   const shows = checkShows(statements, source, typing, report);
 
   const title = titleOf(statements, report);

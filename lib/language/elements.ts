@@ -26,15 +26,7 @@ export function modelKinds(
       const start = Object.hasOwn(KINDS, of.text)
         ? `A ${of.text} takes no model`
         : `No model kind is called ${quote(of.text)}`;
-      const message = `${start}; ${near === null ? "a model is a diode, npn, pnp or opamp." : `did you mean ${quote(near)}?`}`;
-      if (near === null) report.error("NAM5", of, message);
-      else
-        report.error("NAM5", of, message, {
-          title: `Change to ${near}`,
-          from: of.from,
-          to: of.to,
-          text: near,
-        });
+      report.propose("NAM5", of, start, near, "a model is a diode, npn, pnp or opamp");
     } else if (names.meaningOf(name.text) === "model" && names.placeOf(name.text).from === name.from) {
       kinds.set(name.text, of.text);
     }
@@ -172,15 +164,9 @@ export class ElementCheck {
   ): void {
     const near = nearest(name.text, known);
     const start = `${owner[0]!.toUpperCase()}${owner.slice(1)} has no pin or parameter ${quote(name.text)}`;
-    if (near !== null) {
-      const fix = { title: `Change to ${near}`, from: name.from, to: name.to, text: near };
-      this.report.error("NAM6", name, `${start}; did you mean ${quote(near)}?`, fix);
-    } else if (model !== null) {
-      this.report.error("NAM6", name, `${start}; parameters are given in the model ${quote(model)}.`);
-    } else {
-      const list = known.length === 0 ? "it takes no parameters" : `its parameters are ${known.join(", ")}`;
-      this.report.error("NAM6", name, `${start}; ${list}.`);
-    }
+    const list = known.length === 0 ? "it takes no parameters" : `its parameters are ${known.join(", ")}`;
+    const otherwise = model === null ? list : `parameters are given in the model ${quote(model)}`;
+    this.report.propose("NAM6", name, start, near, otherwise);
   }
 }
 

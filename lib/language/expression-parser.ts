@@ -1,6 +1,7 @@
 import type { BinaryOperator, Expression, UnaryOperator, Word } from "./ast";
 import type { Cursor } from "./cursor";
 import { MOST_DEPTH } from "./limits";
+import type { Span } from "./span";
 import { PRECEDENCE, quote } from "./token";
 
 const COMPARISON = 1;
@@ -42,7 +43,7 @@ export class ExpressionParser {
       this.cursor.take();
       const right = this.binary(precedence + 1);
       height = Math.max(height, this.height) + 1;
-      if (this.tooDeep(height)) break;
+      if (this.tooDeep(height, operator)) break;
       left = this.join(operator.text as BinaryOperator, left, right);
     }
     this.height = height;
@@ -96,7 +97,7 @@ export class ExpressionParser {
     if (cursor.acceptSymbol("(")) {
       const inner = this.nested(() => this.expression());
       if (cursor.isSymbol(")")) cursor.take();
-      else this.unclosed(token.from, "bracket");
+      else this.unclosed(token.from);
       return { ...inner, from: token.from, to: cursor.behind };
     }
     cursor.failHere("FRM3", "A value is wanted here");
@@ -123,17 +124,20 @@ export class ExpressionParser {
       if (!cursor.acceptSymbol(",")) break;
     }
     this.height = height + 1;
-    if (cursor.isSymbol(")")) cursor.take();
-    else this.unclosed(callee.from, "bracket");
+    if (!cursor.isSymbol(")")) {
+      this.unclosed(callee.from);
+      return { kind: "hole", from: callee.from, to: cursor.behind };
+    }
+    cursor.take();
     return { kind: "call", callee, args, from: callee.from, to: cursor.behind };
   }
 
-  private unclosed(from: number, what: string): void {
+  private unclosed(from: number): void {
     const { cursor } = this;
     const to = cursor.behind;
     if (cursor.atEnd) {
       const fix = { title: "Close it with )", from: to, to, text: ")" };
-      cursor.fail("FRM5", { from, to: from + 1 }, `This ${what} is not closed; put a \`)\` at its end.`, fix);
+      cursor.fail("FRM5", { from, to: from + 1 }, "This bracket is not closed; put a `)` at its end.", fix);
     } else {
       cursor.failHere("FRM2", "An operator, `,` or `)` is wanted here");
     }
@@ -147,16 +151,18 @@ export class ExpressionParser {
   private nested(parse: () => Expression): Expression {
     this.depth += 1;
     const here = this.cursor.token.from;
-    const result: Expression = this.tooDeep(this.depth) ? { kind: "hole", from: here, to: here } : parse();
+    const result: Expression = this.tooDeep(this.depth, this.cursor.token)
+      ? { kind: "hole", from: here, to: here }
+      : parse();
     this.depth -= 1;
     this.height += 1;
     return result;
   }
 
-  private tooDeep(depth: number): boolean {
+  private tooDeep(depth: number, at: Span): boolean {
     if (depth <= MOST_DEPTH) return false;
     const message = `This expression is nested or chained more than ${MOST_DEPTH} deep; name parts of it with ${quote("let")}.`;
-    this.cursor.fail("CAP2", this.cursor.token, message);
+    this.cursor.fail("CAP2", at, message);
     return true;
   }
 }

@@ -116,7 +116,7 @@ function unitAt(text: string, at: number): string | null {
   let end = at + first.length;
   while (text[end] === "/" || text[end] === "·") {
     const next = factor(end + 1);
-    if (next === null || parseUnit(next) === null || parseUnit(next)?.scale === "celsius") break;
+    if (next === null || parseUnit(next) === null) break;
     end += 1 + next.length;
   }
   return text.slice(at, end);

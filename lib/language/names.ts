@@ -30,6 +30,7 @@ interface Entry {
 /** The one namespace of a file. */
 export class Names {
   private readonly entries = new Map<string, Entry>();
+  private readonly mentioned = new Set<string>();
   private searches = 0;
 
   constructor(
@@ -79,23 +80,16 @@ export class Names {
 
   /** Notes that a net is named here. */
   mentionNet(word: Word): void {
-    if (word.text !== "" && this.meaningOf(word.text) !== "net") this.declare(word, "net");
+    if (word.text === "" || this.mentioned.has(word.text)) return;
+    this.mentioned.add(word.text);
+    if (this.meaningOf(word.text) !== "net") this.declare(word, "net");
   }
 
   /** Reports a name that means nothing, with the nearest of the wanted meanings that does. */
   unknown(word: Word, wanted: readonly Meaning[]): void {
     const near = this.searches++ < MOST_SEARCHES ? nearest(word.text, this.namesOf(wanted)) : null;
     const start = `Nothing here is called ${quote(word.text)}`;
-    if (near === null) {
-      this.report.error("NAM3", word, `${start}; declare it, or use a name of this file.`);
-      return;
-    }
-    this.report.error("NAM3", word, `${start}; did you mean ${quote(near)}?`, {
-      title: `Change to ${near}`,
-      from: word.from,
-      to: word.to,
-      text: near,
-    });
+    this.report.propose("NAM3", word, start, near, "declare it, or use a name of this file");
   }
 
   *namesOf(wanted: readonly Meaning[]): Iterable<string> {

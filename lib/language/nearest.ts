@@ -8,7 +8,7 @@ const LONGEST = 40;
 export function nearest(name: string, candidates: Iterable<string>): string | null {
   if (name.length > LONGEST) return null;
   let best: string | null = null;
-  let bound = name.length <= 2 ? 1 : Math.min(2.5, 0.5 + name.length / 3);
+  let bound = [0, 0.5, 1][name.length] ?? Math.min(2.5, 0.5 + name.length / 3);
   for (const candidate of candidates) {
     if (candidate.length > LONGEST || Math.abs(candidate.length - name.length) > bound) continue;
     const distance = editDistance(name, candidate);

@@ -1,4 +1,5 @@
 import { type Dimension, PURE, sameDimension } from "@/lib/units/dimension";
+import type { Agreement } from "./agreement";
 import type { Expression, Tolerance, ToleranceSyntax, Typed } from "./ast";
 import type { Nominal } from "./nominal";
 import type { Report } from "./report";
@@ -17,6 +18,7 @@ export interface Want {
 export class Quantities {
   constructor(
     private readonly typing: Typing,
+    private readonly agreement: Agreement,
     private readonly nominal: Nominal,
     private readonly report: Report,
   ) {}
@@ -43,7 +45,7 @@ export class Quantities {
   fixedNumber(typed: Typed, expression: Expression, what: string): number | null {
     const mover = this.nominal.mover(typed);
     if (mover !== null) {
-      const message = `${what} must be fixed, but ${this.typing.text(expression)} moves with ${quote(mover)}; use numbers and lets that no knob moves.`;
+      const message = `${what} must be fixed, but ${this.agreement.text(expression)} moves with ${quote(mover)}; use numbers and lets that no knob moves.`;
       this.report.error("NAM11", expression, message);
       return null;
     }
@@ -53,7 +55,11 @@ export class Quantities {
 
   finite(value: number, expression: Expression): boolean {
     if (Number.isFinite(value)) return true;
-    this.report.error("UNI9", expression, `${this.typing.text(expression)} works out to no finite number.`);
+    this.report.error(
+      "UNI9",
+      expression,
+      `${this.agreement.text(expression)} works out to no finite number.`,
+    );
     return false;
   }
 
@@ -61,7 +67,7 @@ export class Quantities {
   isDifference(expression: Expression, judged: Judged): boolean {
     if (!judged.point) return true;
     const text = expression.kind === "number" ? `${expression.value} K` : null;
-    const message = `${this.typing.text(expression)} is a point on the temperature scale where a difference is wanted; write ${text === null ? "it in K" : quote(text)}.`;
+    const message = `${this.agreement.text(expression)} is a point on the temperature scale where a difference is wanted; write ${text === null ? "it in K" : quote(text)}.`;
     const fix =
       text === null
         ? undefined
@@ -125,7 +131,7 @@ export class Quantities {
 
   private reportMisfit(expression: Expression, typed: Typed, want: Want): void {
     const wanted = sameDimension(want.dimension, PURE) ? "a pure number" : `in ${want.unit}`;
-    const message = `${want.what} is ${wanted}, but ${this.typing.text(expression)} is ${describeDimension(typed.dimension)}`;
+    const message = `${want.what} is ${wanted}, but ${this.agreement.text(expression)} is ${describeDimension(typed.dimension)}`;
     const unit =
       expression.kind !== "number" || sameDimension(want.dimension, PURE)
         ? null

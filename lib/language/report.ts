@@ -20,6 +20,15 @@ export class Report {
     this.add(code, "warning", span, message, fix);
   }
 
+  /** An error at a word, with the word that was probably meant, or else with what could stand there. */
+  propose(code: Code, word: Span, start: string, near: string | null, otherwise: string): void {
+    if (near === null) this.error(code, word, `${start}; ${otherwise}.`);
+    else {
+      const fix = { title: `Change to ${near}`, from: word.from, to: word.to, text: near };
+      this.error(code, word, `${start}; did you mean \`${near}\`?`, fix);
+    }
+  }
+
   get hasErrors(): boolean {
     return this.errors > 0;
   }

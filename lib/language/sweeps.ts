@@ -1,5 +1,6 @@
 import { KELVIN, PURE, sameDimension } from "@/lib/units/dimension";
 import { unitOf } from "@/lib/units/quantity";
+import type { Agreement } from "./agreement";
 import type { Expression, Knob, Statement, Sweep, SweepRange } from "./ast";
 import { count, MOST_POINTS } from "./limits";
 import { Names } from "./names";
@@ -18,6 +19,7 @@ export class SweepCheck {
   constructor(
     private readonly names: Names,
     private readonly typing: Typing,
+    private readonly agreement: Agreement,
     private readonly quantities: Quantities,
     private readonly known: ReadonlyMap<string, Known>,
     knobs: readonly Knob[],
@@ -159,7 +161,7 @@ export class SweepCheck {
     this.report.error(
       "PLN4",
       expression,
-      `${what} must be a whole number above 0, not ${this.typing.text(expression)}.`,
+      `${what} must be a whole number above 0, not ${this.agreement.text(expression)}.`,
     );
     return null;
   }

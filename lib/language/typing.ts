@@ -11,15 +11,15 @@ import {
   VOLT,
 } from "@/lib/units/dimension";
 import { toCoherent } from "@/lib/units/unit";
-import type { BinaryOperator, Expression, Typed, Word } from "./ast";
+import type { Agreement } from "./agreement";
+import type { Expression, Typed, Word } from "./ast";
 import { FUNCTIONS, isFunctionName, LATER_FUNCTIONS } from "./functions";
 import { Names } from "./names";
 import { nearest } from "./nearest";
 import type { Report } from "./report";
 import { type PinsOf, resolveSignal } from "./signals";
-import type { Span } from "./span";
 import { quote } from "./token";
-import { describeDimension, spellableUnit, unitOfLiteral } from "./unit-check";
+import { describeDimension, unitOfLiteral } from "./unit-check";
 
 const SECOND: Dimension = [0, 0, 1, 0, 0];
 const COULOMB = multiply(AMPERE, SECOND);
@@ -45,18 +45,13 @@ export interface Known {
 /** Resolves names and checks units. Each mistake is reported once: what contains it is null and stays quiet. */
 export class Typing {
   constructor(
-    private readonly source: string,
+    private readonly agreement: Agreement,
     private readonly names: Names,
     private readonly report: Report,
     /** Knobs and lets understood so far; what is missing was reported, and its uses stay quiet. */
     private readonly known: ReadonlyMap<string, Known>,
     private readonly pinsOf: PinsOf,
   ) {}
-
-  /** The text of a span as a message shows it. */
-  text(span: Span): string {
-    return quote(this.source.slice(span.from, Math.min(span.to, span.from + 80)).replace(/\s+/gu, " "));
-  }
 
   judge(expression: Expression, place: Place): Judged | null {
     switch (expression.kind) {
@@ -78,6 +73,7 @@ export class Typing {
   }
 
   private number(literal: Extract<Expression, { kind: "number" }>, place: Place): Judged | null {
+    if (!Number.isFinite(literal.value)) return null;
     if (literal.unit === null) return constant(literal.value, PURE);
     const unit = unitOfLiteral(literal, place.wanted, this.names, this.report);
     if (unit === null) return null;
@@ -161,10 +157,18 @@ export class Typing {
       case "^":
         return this.power(expression, left, right, make);
       default:
-        if (!this.alike(expression.left, a, expression.right, b, operator === "+" ? "added" : "subtracted"))
+        if (
+          !this.agreement.alike(
+            expression.left,
+            a,
+            expression.right,
+            b,
+            operator === "+" ? "added" : "subtracted",
+          )
+        )
           return null;
         if (operator === "+" && left.point && right.point) {
-          const message = `${this.text(expression.left)} and ${this.text(expression.right)} are both points on the temperature scale and cannot be added; write the difference in K.`;
+          const message = `${this.agreement.text(expression.left)} and ${this.agreement.text(expression.right)} are both points on the temperature scale and cannot be added; write the difference in K.`;
           this.report.error("UNI6", expression, message);
           return null;
         }
@@ -178,10 +182,10 @@ export class Typing {
     exponent: Judged,
     make: (dimension: Dimension) => Judged,
   ): Judged | null {
-    if (!this.pure(expression.right, exponent.typed.dimension, "An exponent")) return null;
+    if (!this.agreement.pure(expression.right, exponent.typed.dimension, "An exponent", true)) return null;
     if (sameDimension(base.typed.dimension, PURE)) return make(PURE);
     if (exponent.typed.op === "constant") return make(power(base.typed.dimension, exponent.typed.value));
-    const message = `${this.text(expression.left)} is ${describeDimension(base.typed.dimension)}, so its exponent must be a plain number.`;
+    const message = `${this.agreement.text(expression.left)} is ${describeDimension(base.typed.dimension)}, so its exponent must be a plain number.`;
     this.report.error("UNI5", expression.right, message);
     return null;
   }
@@ -220,12 +224,13 @@ export class Typing {
   ): Dimension | null {
     if (rule === "root") return power(judged[0]!.typed.dimension, 0.5);
     if (rule === "pure")
-      return this.pure(args[0]!, judged[0]!.typed.dimension, quote(callee.text)) ? PURE : null;
+      return this.agreement.pure(args[0]!, judged[0]!.typed.dimension, quote(callee.text)) ? PURE : null;
     const first = rule === "choose" ? 1 : 0;
     const dimension = judged[first]!.typed.dimension;
     const alike = args.every(
       (arg, i) =>
-        i <= first || this.alike(args[first]!, dimension, arg, judged[i]!.typed.dimension, "chosen between"),
+        i <= first ||
+        this.agreement.alike(args[first]!, dimension, arg, judged[i]!.typed.dimension, "chosen between"),
     );
     return alike ? dimension : null;
   }
@@ -243,9 +248,10 @@ export class Typing {
     const right = this.judge(expression.right, place);
     if (left === null || right === null) return null;
     const [a, b] = [left.typed, right.typed];
-    if (!this.alike(expression.left, a.dimension, expression.right, b.dimension, "compared")) return null;
+    if (!this.agreement.alike(expression.left, a.dimension, expression.right, b.dimension, "compared"))
+      return null;
     return plain({
-      op: expression.operator as Exclude<BinaryOperator, never>,
+      op: expression.operator as "<=" | ">=" | "<" | ">",
       left: a,
       right: b,
       dimension: PURE,
@@ -259,55 +265,8 @@ export class Typing {
       return;
     }
     const near = nearest(callee.text, Object.keys(FUNCTIONS));
-    const proposal =
-      near === null
-        ? "the functions are exp, ln, log10, sqrt, abs, min, max, tanh, atan and if"
-        : `did you mean ${quote(near)}`;
-    const message = `${quote(callee.text)} is no function; ${proposal}${near === null ? "." : "?"}`;
-    if (near === null) this.report.error("NAM10", callee, message);
-    else
-      this.report.error("NAM10", callee, message, {
-        title: `Change to ${near}`,
-        from: callee.from,
-        to: callee.to,
-        text: near,
-      });
-  }
-
-  private alike(left: Expression, a: Dimension, right: Expression, b: Dimension, verb: string): boolean {
-    if (sameDimension(a, b)) return true;
-    const message = `${this.text(left)} is ${describeDimension(a)} but ${this.text(right)} is ${describeDimension(b)}, so they cannot be ${verb}`;
-    const [bare, unit] = isBare(left)
-      ? [left, spellableUnit(b)]
-      : isBare(right)
-        ? [right, spellableUnit(a)]
-        : [null, null];
-    const span = { from: left.from, to: right.to };
-    if (bare === null || unit === null) {
-      this.report.error("UNI4", span, `${message}.`);
-      return false;
-    }
-    const text = `${this.source.slice(bare.from, bare.to)} ${unit}`;
-    const fix = { title: `Write ${text}`, from: bare.from, to: bare.to, text };
-    this.report.error("UNI4", span, `${message}; write ${quote(text)}.`, fix);
-    return false;
-  }
-
-  /** A pure number is wanted; where the value has a unit the proposal divides by it. */
-  private pure(expression: Expression, dimension: Dimension, what: string): boolean {
-    if (sameDimension(dimension, PURE)) return true;
-    const message = `${what} wants a pure number, but ${this.text(expression)} is ${describeDimension(dimension)}`;
-    const unit = spellableUnit(dimension);
-    if (unit === null || expression.to - expression.from > 200) {
-      this.report.error("UNI5", expression, `${message}; divide it by a quantity of the same unit.`);
-      return false;
-    }
-    const source = this.source.slice(expression.from, expression.to);
-    const simple = expression.kind !== "binary" && expression.kind !== "unary";
-    const text = `${simple ? source : `(${source})`} / 1 ${unit}`;
-    const fix = { title: `Divide by 1 ${unit}`, from: expression.from, to: expression.to, text };
-    this.report.error("UNI5", expression, `${message}; write ${quote(text)}.`, fix);
-    return false;
+    const all = "the functions are exp, ln, log10, sqrt, abs, min, max, tanh, atan and if";
+    this.report.propose("NAM10", callee, `${quote(callee.text)} is no function`, near, all);
   }
 }
 
@@ -317,8 +276,4 @@ function constant(value: number, dimension: Dimension): Judged {
 
 function plain(typed: Typed | null): Judged | null {
   return typed === null ? null : { typed, point: false };
-}
-
-function isBare(expression: Expression): boolean {
-  return expression.kind === "number" && expression.unit === null;
 }

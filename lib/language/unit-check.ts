@@ -65,17 +65,8 @@ export function unitOfLiteral(
 function reportUnknownUnit(word: Word, report: Report): void {
   const spelled = SPELLED_OUT.reduce((text, [pattern, symbol]) => text.replace(pattern, symbol), word.text);
   const near = parseUnit(spelled) !== null ? spelled : nearest(spelled, ALL_UNITS);
-  if (near === null) {
-    const message = `${quote(word.text)} is no unit; use one such as V, mV, nA, kΩ, K, °C or %.`;
-    report.error("UNI1", word, message);
-  } else {
-    report.error(
-      "UNI1",
-      word,
-      `${quote(word.text)} is no unit; did you mean ${quote(near)}?`,
-      change(word, near),
-    );
-  }
+  const examples = "use one such as V, mV, nA, kΩ, K, °C or %";
+  report.propose("UNI1", word, `${quote(word.text)} is no unit`, near, examples);
 }
 
 function likelyUnit(prefix: string): string {

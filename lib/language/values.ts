@@ -1,4 +1,5 @@
 import { KELVIN, sameDimension } from "@/lib/units/dimension";
+import type { Agreement } from "./agreement";
 import type { Expression, Knob, NamedValue, Statement, Typed } from "./ast";
 import type { Names } from "./names";
 import type { Nominal } from "./nominal";
@@ -13,6 +14,7 @@ type ValueStatement = Extract<Statement, { kind: "let" | "knob" }>;
 /** What the values of a file are worked out with. */
 interface Bench {
   readonly names: Names;
+  readonly agreement: Agreement;
   readonly typing: Typing;
   readonly quantities: Quantities;
   readonly nominal: Nominal;
@@ -85,7 +87,11 @@ function knobOf(statement: ValueStatement, { typed, point }: Judged, bench: Benc
   const isTemperature = name.text === "temperature";
   if (isTemperature && !sameDimension(typed.dimension, KELVIN)) {
     const what = describeDimension(typed.dimension);
-    report.error("UNI3", value, `The temperature is in °C or K, but ${bench.typing.text(value)} is ${what}.`);
+    report.error(
+      "UNI3",
+      value,
+      `The temperature is in °C or K, but ${bench.agreement.text(value)} is ${what}.`,
+    );
     known.set(name.text, { dimension: KELVIN, point: true });
     return null;
   }
@@ -105,7 +111,7 @@ function knobOf(statement: ValueStatement, { typed, point }: Judged, bench: Benc
 
 function rangeOf(statement: ValueStatement, folded: Typed, number: number, bench: Bench): Knob["range"] {
   if (statement.range === null) return null;
-  const { quantities, report, typing } = bench;
+  const { quantities, report, agreement } = bench;
   const unit = spellableUnit(folded.dimension) ?? "1";
   const want = {
     dimension: folded.dimension,
@@ -125,7 +131,7 @@ function rangeOf(statement: ValueStatement, folded: Typed, number: number, bench
     return null;
   }
   if (number < low || number > high) {
-    const message = `The default ${typing.text(statement.value)} of the knob ${quote(statement.name.text)} is outside its range ${typing.text(span)}.`;
+    const message = `The default ${agreement.text(statement.value)} of the knob ${quote(statement.name.text)} is outside its range ${agreement.text(span)}.`;
     report.error("PLN6", statement.value, message);
   }
   return { low, high };

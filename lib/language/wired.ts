@@ -182,19 +182,8 @@ export class Wirer {
       this.report.error("NAM5", word, message);
     } else {
       const near = nearest(word.text, [...Object.keys(KINDS), ...this.models.keys()]);
-      const proposal =
-        near === null
-          ? `; the kinds are ${Object.keys(KINDS).join(", ")}.`
-          : `; did you mean ${quote(near)}?`;
-      const message = `No kind or model is called ${quote(word.text)}${proposal}`;
-      if (near === null) this.report.error("NAM5", word, message);
-      else
-        this.report.error("NAM5", word, message, {
-          title: `Change to ${near}`,
-          from: word.from,
-          to: word.to,
-          text: near,
-        });
+      const all = `the kinds are ${Object.keys(KINDS).join(", ")}`;
+      this.report.propose("NAM5", word, `No kind or model is called ${quote(word.text)}`, near, all);
     }
   }
 
@@ -210,7 +199,7 @@ export class Wirer {
         this.report.error(
           "FRM11",
           value,
-          `A ${kind} follows a model of its kind; declare one with \`model M : ${kind} { … }\` and name it here.`,
+          `${article(kind)} ${kind} follows a model of its kind; declare one with \`model M : ${kind} { … }\` and name it here.`,
         );
       }
     }
@@ -219,11 +208,15 @@ export class Wirer {
 
   private wantModel(word: Word, kind: ElementKind): void {
     const sketch = MODEL_KINDS.includes(kind as ModelKind) ? `model M : ${kind} { … }` : kind;
-    const message = `A ${kind} follows a model; declare one with ${quote(sketch)} and write its name in place of ${quote(word.text)}.`;
+    const message = `${article(kind)} ${kind} follows a model; declare one with ${quote(sketch)} and write its name in place of ${quote(word.text)}.`;
     this.report.error("FRM11", word, message);
   }
 }
 
 function plainName(expression: Expression): Word | null {
   return expression.kind === "name" && expression.path.length === 1 ? expression.path[0]! : null;
+}
+
+function article(kind: ElementKind): string {
+  return kind === "npn" || kind === "opamp" ? "An" : "A";
 }

@@ -1,0 +1,80 @@
+import { describe, expect, test } from "vitest";
+import { checkWiring } from "@/lib/circuit/wiring";
+import { CATALOGUE } from "@/lib/language/catalogue";
+import { check } from "@/lib/language/checker";
+import type { Diagnostic } from "@/lib/language/diagnostic";
+import { MOST_ELEMENTS, MOST_TEXT } from "@/lib/language/limits";
+import { WIRING_PROBLEMS } from "@/tests/circuit/problems";
+import { LANGUAGE_PROBLEMS, type Problem } from "./problems";
+
+function unmark(marked: string): { text: string; from: number; to: number } {
+  const from = marked.indexOf("«");
+  const to = marked.indexOf("»") - 1;
+  return { text: marked.replace("«", "").replace("»", ""), from, to };
+}
+
+function expectProblem(problem: Problem, diagnose: (text: string) => Diagnostic[]): void {
+  const { text, from, to } = unmark(problem.text);
+  const found = diagnose(text);
+  expect(found).toHaveLength(1);
+  const { fix, message, ...place } = found[0]!;
+  expect(place).toEqual({ code: problem.code, severity: problem.severity ?? "error", from, to });
+  expect(message).toMatch(/^[^\n]*[.?]$/u);
+  expect(message).not.toMatch(/[.?] [A-Z]/u);
+  if (problem.says !== undefined) expect(message).toContain(problem.says);
+  if (problem.mended === undefined) return;
+  const mended = text.slice(0, fix!.from) + fix!.text + text.slice(fix!.to);
+  expect(mended).toBe(problem.mended);
+  expect(diagnose(mended).map((one) => one.code)).not.toContain(problem.code);
+}
+
+describe("each problem of a text is found once, at its place, in one sentence", () => {
+  test.each(LANGUAGE_PROBLEMS)("$code: $text", (problem) => {
+    expectProblem(problem, (text) => check(text).diagnostics);
+  });
+  test.each(WIRING_PROBLEMS)("$code: $text", (problem) => {
+    expectProblem(problem, (text) => {
+      const { design, diagnostics } = check(text);
+      expect(diagnostics.filter((one) => one.code !== "PLN8")).toEqual([]);
+      return checkWiring(design!);
+    });
+  });
+});
+
+describe("limits", () => {
+  const code = (text: string): string[] => check(text).diagnostics.map((one) => one.code);
+
+  test("CAP1: a text as long as allowed is read, one character more is not", () => {
+    const text = `${"#".repeat(MOST_TEXT - 1)}\n`;
+    expect(code(text)).toEqual(["PLN8"]);
+    expect(code(`${text}\n`)).toEqual(["CAP1"]);
+  });
+
+  test("CAP3: too many elements", () => {
+    const line = (i: number): string => `ground -- R${i} : resistor 1 kΩ -- a\n`;
+    const most = Array.from({ length: MOST_ELEMENTS }, (_, i) => line(i)).join("");
+    expect(code(`${most}show a.v`)).toEqual([]);
+    expect(code(`${most}${line(MOST_ELEMENTS)}show a.v`)).toEqual(["CAP3"]);
+  });
+
+  test("CAP5: too many values to keep", () => {
+    const nets = Array.from({ length: 60 }, (_, i) => `ground -- R${i} : resistor 1 kΩ -- n${i}\n`).join("");
+    expect(code(`${nets}knob k = 1 V\nsweep k from 1 V to 2 V, 819672 points\nshow n1.v`)).toEqual([]);
+    expect(code(`${nets}knob k = 1 V\nsweep k from 1 V to 2 V, 819673 points\nshow n1.v`)).toEqual(["CAP5"]);
+  });
+
+  test("CAP6: after two hundred problems the rest is counted", () => {
+    const { diagnostics } = check("let = 1\n".repeat(300));
+    expect(diagnostics).toHaveLength(201);
+    expect(diagnostics.at(-1)).toMatchObject({
+      code: "CAP6",
+      message: "100 further problems are not listed; mend these first.",
+    });
+  });
+});
+
+test("every code of the catalogue is produced by a test, and no test knows another", () => {
+  const tested = new Set([...LANGUAGE_PROBLEMS, ...WIRING_PROBLEMS].map((problem) => problem.code));
+  for (const code of ["CAP1", "CAP3", "CAP5", "CAP6"]) tested.add(code);
+  expect([...tested].sort()).toEqual(Object.keys(CATALOGUE).sort());
+});
