@@ -1,0 +1,62 @@
+import {
+  foreignKey,
+  index,
+  integer,
+  jsonb,
+  pgEnum,
+  pgTable,
+  text,
+  timestamp,
+  unique,
+  uuid,
+} from "drizzle-orm/pg-core";
+import type { Plan } from "@/lib/analyses/plan";
+import { netlist } from "./netlist";
+import { revision } from "./revision";
+import { user } from "./user";
+import { workspace } from "./workspace";
+
+export const runStatus = pgEnum("run_status", ["queued", "running", "done", "failed", "cancelled"]);
+
+/** One solving of one revision. This row is the truth about it; queue jobs only carry its id. */
+export const run = pgTable(
+  "run",
+  {
+    id: uuid().primaryKey().defaultRandom(),
+    workspaceId: uuid("workspace_id")
+      .notNull()
+      .references(() => workspace.id),
+    number: integer().notNull(),
+    netlistId: uuid("netlist_id")
+      .notNull()
+      .references(() => netlist.id),
+    revisionNumber: integer("revision_number").notNull(),
+    status: runStatus().notNull().default("queued"),
+    plan: jsonb().$type<Plan>().notNull(),
+    points: integer().notNull(),
+    pointsDone: integer("points_done").notNull().default(0),
+    pointsFailed: integer("points_failed").notNull().default(0),
+    shardsLeft: integer("shards_left").notNull(),
+    /** Sequence of the newest event; raised with each one added. */
+    lastEvent: integer("last_event").notNull().default(0),
+    queuedAt: timestamp("queued_at", { withTimezone: true }).notNull().defaultNow(),
+    startedAt: timestamp("started_at", { withTimezone: true }),
+    finishedAt: timestamp("finished_at", { withTimezone: true }),
+    /** One sentence why the whole run could not be computed; null otherwise. */
+    error: text(),
+    requestedBy: uuid("requested_by")
+      .notNull()
+      .references(() => user.id),
+    engineVersion: text("engine_version").notNull(),
+  },
+  (table) => [
+    unique("run_number").on(table.workspaceId, table.number),
+    index("run_netlist").on(table.netlistId, table.number),
+    index("run_status").on(table.status),
+    foreignKey({
+      name: "run_revision",
+      columns: [table.netlistId, table.revisionNumber],
+      foreignColumns: [revision.netlistId, revision.number],
+    }),
+  ],
+);

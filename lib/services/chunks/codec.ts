@@ -1,0 +1,67 @@
+/** Values in one chunk, at most. */
+export const CHUNK_POINTS = 4096;
+
+const BYTES = 8;
+const littleEndian = new Uint8Array(new Uint16Array([1]).buffer)[0] === 1;
+
+/** A column cut for storing: `data` is `encode` of at most 4096 values, the extremes are over its numbers. */
+export interface Chunk {
+  readonly index: number;
+  readonly count: number;
+  readonly minimum: number | null;
+  readonly maximum: number | null;
+  readonly data: Buffer;
+}
+
+/**
+ * Byte-shuffled little-endian Float64: first the lowest byte of every value, then the next, and so on. Neighbouring values of a
+ * smooth trace share their high bytes, which then lie together and compress well. Every bit is kept, NaN included.
+ */
+export function encode(values: Float64Array): Buffer {
+  const plain = littleEndianBytes(values);
+  const shuffled = Buffer.allocUnsafe(plain.length);
+  for (let byte = 0, to = 0; byte < BYTES; byte++) {
+    for (let from = byte; from < plain.length; from += BYTES) shuffled[to++] = plain[from]!;
+  }
+  return shuffled;
+}
+
+/** The inverse of `encode`. Throws a RangeError when `data` is not a whole number of values. */
+export function decode(data: Uint8Array): Float64Array {
+  if (data.length % BYTES !== 0) throw new RangeError(`A chunk of ${data.length} bytes is not whole.`);
+  const count = data.length / BYTES;
+  const plain = new Uint8Array(data.length);
+  for (let byte = 0, from = 0; byte < BYTES; byte++) {
+    for (let to = byte; to < plain.length; to += BYTES) plain[to] = data[from++]!;
+  }
+  if (littleEndian) return new Float64Array(plain.buffer);
+  const view = new DataView(plain.buffer);
+  return Float64Array.from({ length: count }, (_, i) => view.getFloat64(i * BYTES, true));
+}
+
+function littleEndianBytes(values: Float64Array): Uint8Array {
+  if (littleEndian) return new Uint8Array(values.buffer, values.byteOffset, values.byteLength);
+  const view = new DataView(new ArrayBuffer(values.length * BYTES));
+  for (const [i, value] of values.entries()) view.setFloat64(i * BYTES, value, true);
+  return new Uint8Array(view.buffer);
+}
+
+/** Cuts a column of any length into chunks of 4096 values; the last may be shorter. */
+export function cut(column: Float64Array): Chunk[] {
+  const chunks: Chunk[] = [];
+  for (let from = 0, index = 0; from < column.length; from += CHUNK_POINTS, index++) {
+    const values = column.subarray(from, from + CHUNK_POINTS);
+    chunks.push({ index, count: values.length, ...extremes(values), data: encode(values) });
+  }
+  return chunks;
+}
+
+function extremes(values: Float64Array): { minimum: number | null; maximum: number | null } {
+  let minimum = Number.POSITIVE_INFINITY;
+  let maximum = Number.NEGATIVE_INFINITY;
+  for (const value of values) {
+    if (value < minimum) minimum = value;
+    if (value > maximum) maximum = value;
+  }
+  return minimum <= maximum ? { minimum, maximum } : { minimum: null, maximum: null };
+}
