@@ -7,7 +7,12 @@ export type OutcomeKind = (typeof OUTCOMES)[number];
 
 /** What became of one point. `iterations` counts every Newton step over all rungs tried; `residual` is the largest |F_i|, A. */
 export type Outcome =
-  | { readonly kind: "converged"; readonly iterations: number; readonly residual: number; readonly rung: Rung }
+  | {
+      readonly kind: "converged";
+      readonly iterations: number;
+      readonly residual: number;
+      readonly rung: Rung;
+    }
   | {
       readonly kind: Exclude<OutcomeKind, "converged">;
       readonly iterations: number;
