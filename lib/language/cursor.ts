@@ -60,6 +60,12 @@ export class Cursor {
     return token;
   }
 
+  /** The text and place of the next token, whatever it is. */
+  takeWord(): Word {
+    const { text, from, to } = this.take();
+    return { text, from, to };
+  }
+
   isSymbol(text: string, ahead = 0): boolean {
     const token = this.peek(ahead);
     return token.kind === "symbol" && token.text === text;
@@ -90,7 +96,7 @@ export class Cursor {
 
   /** A name that must stand here, empty where there is none. */
   wantWord(what: string): Word {
-    if (this.token.kind === "word") return this.take();
+    if (this.token.kind === "word") return this.takeWord();
     this.failHere("FRM2", `${what} is wanted here`);
     return { text: "", from: this.behind, to: this.behind };
   }

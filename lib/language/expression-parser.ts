@@ -90,7 +90,7 @@ export class ExpressionParser {
     this.height = 1;
     if (token.kind === "number") {
       cursor.take();
-      const unit = cursor.token.kind === "unit" ? cursor.take() : null;
+      const unit = cursor.token.kind === "unit" ? cursor.takeWord() : null;
       return { kind: "number", value: Number(token.text), unit, from: token.from, to: cursor.behind };
     }
     if (token.kind === "word") return cursor.isSymbol("(", 1) ? this.call() : this.name();
@@ -106,14 +106,14 @@ export class ExpressionParser {
 
   private name(): Expression {
     const { cursor } = this;
-    const path: Word[] = [cursor.take()];
+    const path: Word[] = [cursor.takeWord()];
     while (cursor.acceptSymbol(".")) path.push(cursor.wantWord("The name of a pin or of v, i or p"));
     return { kind: "name", path, from: path[0]!.from, to: cursor.behind };
   }
 
   private call(): Expression {
     const { cursor } = this;
-    const callee = cursor.take();
+    const callee = cursor.takeWord();
     cursor.tight.add(callee.from);
     cursor.take();
     const args: Expression[] = [];

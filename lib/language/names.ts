@@ -18,7 +18,7 @@ const ARTICLE: Readonly<Record<Meaning, string>> = {
 };
 
 /** Unknown names for which the whole file is searched for a near one; beyond them the search would cost too much. */
-const MOST_SEARCHES = 40;
+const MOST_SEARCHES = 20;
 
 interface Entry {
   readonly meaning: Meaning;

@@ -11,7 +11,7 @@ export function nearest(name: string, candidates: Iterable<string>): string | nu
   let bound = [0, 0.5, 1][name.length] ?? Math.min(2.5, 0.5 + name.length / 3);
   for (const candidate of candidates) {
     if (candidate.length > LONGEST || Math.abs(candidate.length - name.length) > bound) continue;
-    const distance = editDistance(name, candidate);
+    const distance = editDistance(name, candidate, bound);
     if (distance > 0 && distance <= bound && (best === null || distance < bound)) {
       best = candidate;
       bound = distance;
@@ -20,7 +20,8 @@ export function nearest(name: string, candidates: Iterable<string>): string | nu
   return best;
 }
 
-function editDistance(a: string, b: string): number {
+/** The distance, or infinity once it must be above `bound`. */
+function editDistance(a: string, b: string, bound: number): number {
   let beforeLast: number[] = [];
   let last = Array.from({ length: b.length + 1 }, (_, j) => j);
   for (let i = 1; i <= a.length; i++) {
@@ -34,6 +35,7 @@ function editDistance(a: string, b: string): number {
         Math.min(last[j]! + 1, row[j - 1]! + 1, last[j - 1]! + costOf(a[i - 1]!, b[j - 1]!), exchange),
       );
     }
+    if (Math.min(...row) > bound + 1) return Number.POSITIVE_INFINITY;
     beforeLast = last;
     last = row;
   }

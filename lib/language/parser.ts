@@ -143,7 +143,7 @@ class StatementParser {
     do {
       const from = cursor.token.from;
       const name: Word | null =
-        cursor.token.kind === "word" && cursor.isSymbol("=", 1) ? cursor.take() : null;
+        cursor.token.kind === "word" && cursor.isSymbol("=", 1) ? cursor.takeWord() : null;
       if (name !== null) cursor.take();
       const value = this.expressions.expression();
       items.push({ name, value, from, to: value.to });
@@ -156,7 +156,10 @@ class StatementParser {
     const { cursor } = this;
     const word = cursor.token;
     const next = cursor.peek(1);
-    const declares = (word.text === "block" || word.text === "read") && next.kind === "word" ? next : null;
+    const declares =
+      (word.text === "block" || word.text === "read") && next.kind === "word"
+        ? { text: next.text, from: next.from, to: next.to }
+        : null;
     cursor.fail(
       "FRM6",
       word,

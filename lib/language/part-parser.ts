@@ -55,7 +55,7 @@ export class PartParser {
   /** `NAME : kind { … }` */
   device(span: Span): StatementForm {
     const { cursor } = this;
-    const name = cursor.take();
+    const name = cursor.takeWord();
     cursor.take();
     const of = cursor.wantWord("A kind or model after `:`");
     if (!cursor.isSymbol("{")) {
