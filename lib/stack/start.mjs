@@ -1,0 +1,3 @@
+import { handOver } from "./bootstrap.mjs";
+
+await handOver("./start.ts");
