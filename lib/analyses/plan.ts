@@ -1,0 +1,38 @@
+import type { Circuit } from "@/lib/circuit/circuit";
+import type { Design } from "@/lib/language/ast";
+import { unitOf } from "@/lib/units/quantity";
+import type { AxisDocument } from "./result";
+
+/** What a run will compute: plain JSON, stored with the run. A netlist without a sweep has no axis and one point. */
+export interface Plan {
+  readonly title: string;
+  /** The first sweep first; points are numbered with the first axis fastest. */
+  readonly axes: readonly AxisDocument[];
+  readonly points: number;
+  readonly traces: readonly { readonly name: string; readonly unit: string }[];
+  /** Net voltages (`out.v`), then branch currents (`V1.i`, `A1.out.i`), in the order of the circuit. */
+  readonly unknowns: readonly { readonly name: string; readonly unit: "V" | "A" }[];
+}
+
+export function planOf(design: Design, circuit: Circuit): Plan {
+  const axes = design.sweeps.map(({ knob, dimension, scale, values }) => {
+    return { knob, unit: unitOf(dimension), scale, values };
+  });
+  return {
+    title: design.title,
+    axes,
+    points: axes.reduce((product, axis) => product * axis.values.length, 1),
+    traces: design.shows.map(({ name, value }) => ({ name, unit: unitOf(value.dimension) })),
+    unknowns: circuit.unknowns,
+  };
+}
+
+/** The place of a flat point on every axis, the first axis first. */
+export function placeOnAxes(plan: Plan, point: number): number[] {
+  let rest = point;
+  return plan.axes.map(({ values }) => {
+    const place = rest % values.length;
+    rest = (rest - place) / values.length;
+    return place;
+  });
+}
