@@ -31,6 +31,8 @@ export const run = pgTable(
       .notNull()
       .references(() => netlist.id),
     revisionNumber: integer("revision_number").notNull(),
+    /** The title in the revision's text, or the netlist's where it has none. */
+    title: text().notNull(),
     status: runStatus().notNull().default("queued"),
     plan: jsonb().$type<Plan>().notNull(),
     points: integer().notNull(),

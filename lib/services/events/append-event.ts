@@ -3,9 +3,7 @@ import type { Queryable } from "@/db/client";
 import { type EventData, event, type eventKind } from "@/db/schema/event";
 import { run } from "@/db/schema/run";
 import { shard } from "@/db/schema/shard";
-
-/** NOTIFY channel that wakes readers of events; its payload is the run's id. */
-export const RUN_EVENT = "run_event";
+import { RUN_CHANNEL } from "./channel";
 
 /** Points of running shards that are solved but not stored yet. */
 const underWay = sql<number>`coalesce((
@@ -41,6 +39,6 @@ export async function appendEvent(
     ? { ...state, pointsDone: Math.min(state.points, state.pointsDone + more) }
     : state;
   await tx.insert(event).values({ runId, sequence, kind, data });
-  await tx.execute(sql`select pg_notify(${RUN_EVENT}, ${runId})`);
+  await tx.execute(sql`select pg_notify(${RUN_CHANNEL}, ${`${runId} ${state.status}`})`);
   return { ...data, sequence };
 }

@@ -1,0 +1,25 @@
+import { createHash } from "node:crypto";
+import { format } from "@/lib/language/format";
+import { tokenize } from "@/lib/language/lexer";
+import { parseTokens } from "@/lib/language/parser";
+import { Report } from "@/lib/language/report";
+
+/** The identity of a design: SHA-256 of its canonical text, as 64 hexadecimal digits. Layout does not change it. */
+export function hashOf(text: string): string {
+  return createHash("sha256").update(format(text), "utf8").digest("hex");
+}
+
+/** Characters of a title. */
+const MOST_TITLE = 120;
+
+/** What a text calls itself, at most 120 characters; null when it has no title. */
+export function titleIn(text: string): string | null {
+  const report = new Report();
+  const { netlist } = parseTokens(tokenize(text, report), text.length, report);
+  for (const statement of netlist.statements) {
+    if (statement.kind !== "title") continue;
+    const title = statement.text.text.replaceAll(/\s+/g, " ").trim();
+    if (title !== "") return Array.from(title).slice(0, MOST_TITLE).join("");
+  }
+  return null;
+}
