@@ -1,0 +1,93 @@
+import { linkSync, readFileSync, renameSync, rmSync, writeFileSync } from "node:fs";
+import { Complaint } from "./complaint";
+import { endProcess, identityOf } from "./identity";
+
+interface Known {
+  readonly pid: number;
+  readonly identity: string;
+}
+
+/** What running.json says of the process that uses a data folder. */
+interface Record extends Known {
+  readonly address: string | null;
+  readonly children: readonly Known[];
+}
+
+/** A data folder held by this process. */
+export interface Hold {
+  /** Writes down where the service is found. */
+  setAddress(address: string): void;
+  /** Writes down a child, so that the next start can end it if this process is killed; null when it has ended. */
+  setChild(name: string, pid: number | null): void;
+  release(): void;
+}
+
+/**
+ * Takes a data folder for this process alone. Complains when a live process holds it; what a killed one left behind is ended
+ * first. `file` is running.json.
+ */
+export async function hold(file: string): Promise<Hold> {
+  const me: Known = { pid: process.pid, identity: identityOf(process.pid) ?? "" };
+  const children = new Map<string, Known>();
+  let address: string | null = null;
+  const text = () => `${JSON.stringify({ ...me, address, children: [...children.values()] })}\n`;
+  const own = `${file}.${process.pid}`;
+  const write = () => {
+    writeFileSync(own, text(), { mode: 0o644 });
+    renameSync(own, file);
+  };
+  await take(file, own, text());
+  return {
+    setAddress(found) {
+      address = found;
+      write();
+    },
+    setChild(name, pid) {
+      const identity = pid === null ? null : identityOf(pid);
+      if (pid === null || identity === null) children.delete(name);
+      else children.set(name, { pid, identity });
+      write();
+    },
+    release: () => rmSync(file, { force: true }),
+  };
+}
+
+/** Two starts at once: a link is made by one of them only. */
+async function take(file: string, own: string, text: string): Promise<void> {
+  for (;;) {
+    writeFileSync(own, text, { mode: 0o644 });
+    try {
+      linkSync(own, file);
+      return;
+    } catch (error) {
+      if ((error as NodeJS.ErrnoException).code !== "EEXIST") throw error;
+    } finally {
+      rmSync(own, { force: true });
+    }
+    const other = read(file);
+    if (other !== null && identityOf(other.pid) === other.identity) throw new Complaint(inUse(other));
+    for (const child of other?.children ?? []) {
+      if (identityOf(child.pid) !== child.identity) continue;
+      console.log(`Ending process ${child.pid}, which an earlier start left behind.`);
+      await endProcess(child.pid, [
+        ["SIGTERM", 5_000],
+        ["SIGKILL", 2_000],
+      ]);
+    }
+    rmSync(file, { force: true });
+  }
+}
+
+function inUse({ pid, address }: Record): string {
+  const where =
+    address === null ? "is starting from this folder" : `already runs from this folder, at ${address}`;
+  return `Sweepwright ${where} (process ${pid}). Use that one, or stop it first: kill ${pid}`;
+}
+
+function read(file: string): Record | null {
+  try {
+    return JSON.parse(readFileSync(file, "utf8")) as Record;
+  } catch {
+    return null;
+  }
+}
