@@ -19,7 +19,7 @@ export async function createNetlist(
   input: z.input<typeof createInput>,
 ): Promise<{ id: string }> {
   authorize(actor, "netlist.write", { workspaceId: actor.workspaceId });
-  const { title, text } = readInput(createInput, input);
+  const { title, text, message } = readInput(createInput, input);
   fitText(text);
   const hash = hashOf(text);
   return database().transaction(async (tx) => {
@@ -34,7 +34,9 @@ export async function createNetlist(
       })
       .returning({ id: netlist.id });
     const { id } = made!;
-    await tx.insert(revision).values({ netlistId: id, number: 1, hash, text, authorId: actor.userId });
+    await tx
+      .insert(revision)
+      .values({ netlistId: id, number: 1, hash, text, message: message || null, authorId: actor.userId });
     return { id };
   });
 }

@@ -36,13 +36,23 @@ export const netlistText = z.string().refine(storable, {
   message: "The text contains characters that are no text (NUL, or half a surrogate pair). Save it as UTF-8.",
 });
 
-export const createInput = z.object({ title: title.optional(), text: netlistText });
+const message = z
+  .string()
+  .trim()
+  .max(500, "A message has at most 500 characters.")
+  .refine(storable, "A message cannot contain characters that are no text.");
+
+export const createInput = z.object({
+  title: title.optional(),
+  text: netlistText,
+  message: message.optional(),
+});
 
 export const saveInput = z.object({
   netlistId: z.string(),
   base: whole(1, 2_147_483_647),
   text: netlistText,
-  message: z.string().trim().max(500, "A message has at most 500 characters.").refine(storable).optional(),
+  message: message.optional(),
 });
 
 export const netlistFile = z.object({ name: z.string().min(1).max(255), text: z.string() });

@@ -1,23 +1,18 @@
-import { and, eq, sql } from "drizzle-orm";
+import { and, eq } from "drizzle-orm";
 import type { z } from "zod";
-import { database, type Queryable } from "@/db/client";
+import { database } from "@/db/client";
 import { revision } from "@/db/schema/revision";
-import { run } from "@/db/schema/run";
-import { shard } from "@/db/schema/shard";
-import { workspace } from "@/db/schema/workspace";
 import { compile } from "@/lib/analyses/compile";
 import type { Plan } from "@/lib/analyses/plan";
-import { shardsOf } from "@/lib/analyses/strands";
-import { ENGINE_VERSION } from "@/lib/analyses/version";
 import { AppError } from "@/lib/errors";
 import type { Actor } from "@/lib/permissions/actor";
 import { authorize } from "@/lib/permissions/authorize";
 import { enqueueShards } from "@/lib/queue/producer";
-import { appendEvent } from "../events/append-event";
 import { addRevision } from "../netlists/add-revision";
-import { findNetlist, type NetlistRecord } from "../netlists/find-netlist";
+import { findNetlist } from "../netlists/find-netlist";
 import { fitText } from "../netlists/schemas";
 import { readInput } from "../read-input";
+import { type AddedRun, addRun } from "./add-run";
 import { startInput } from "./schemas";
 
 /**
@@ -34,24 +29,15 @@ export async function startRun(
   authorize(actor, "run.start", asked);
   if (text !== undefined) authorize(actor, "netlist.write", asked);
   const plan = planOf(text ?? (await textOf(asked.id, base)));
-  const shards = shardsOf(plan);
-  const made = await database().transaction(async (tx) => {
+  const added = await database().transaction(async (tx) => {
+    if (text === undefined) return addRun(tx, actor, asked, base, plan);
     const locked = await findNetlist(tx, actor, netlistId, true);
     authorize(actor, "run.start", locked);
-    const saved = text === undefined ? base : (await addRevision(tx, actor, locked, { base, text })).revision;
-    const added = await insertRun(tx, actor, locked, saved, plan, shards.length);
-    const rows = shards.map(({ from, to }, index) => ({ runId: added.id, index, from, to }));
-    await tx.insert(shard).values(rows);
-    await appendEvent(tx, added.id, "status");
-    return added;
+    const saved = await addRevision(tx, actor, locked, { base, text });
+    return addRun(tx, actor, locked, saved.revision, plan);
   });
-  try {
-    await enqueueShards(shards.map((_, index) => ({ runId: made.id, index })));
-  } catch (error) {
-    // The run stands in the table; the worker's sweep for lost shards puts it on the queue.
-    console.warn(`Run ${made.id} waits for the sweep of the table, since the queue did not answer.`, error);
-  }
-  return made;
+  await enqueue(added);
+  return { id: added.id, number: added.number };
 }
 
 async function textOf(netlistId: string, number: number): Promise<string> {
@@ -74,33 +60,11 @@ function planOf(text: string): Plan {
   });
 }
 
-async function insertRun(
-  tx: Queryable,
-  actor: Actor,
-  of: NetlistRecord,
-  revisionNumber: number,
-  plan: Plan,
-  shards: number,
-): Promise<{ id: string; number: number }> {
-  const [taken] = await tx
-    .update(workspace)
-    .set({ lastRunNumber: sql`${workspace.lastRunNumber} + 1` })
-    .where(eq(workspace.id, actor.workspaceId))
-    .returning({ number: workspace.lastRunNumber });
-  const [made] = await tx
-    .insert(run)
-    .values({
-      workspaceId: actor.workspaceId,
-      number: taken!.number,
-      netlistId: of.id,
-      revisionNumber,
-      title: plan.title || of.title,
-      plan,
-      points: plan.points,
-      shardsLeft: shards,
-      requestedBy: actor.userId,
-      engineVersion: ENGINE_VERSION,
-    })
-    .returning({ id: run.id, number: run.number });
-  return made!;
+/** The run stands in the table by now: should the queue not answer, the worker's sweep for lost shards puts it there later. */
+async function enqueue({ id, shards }: AddedRun): Promise<void> {
+  try {
+    await enqueueShards(Array.from({ length: shards }, (_, index) => ({ runId: id, index })));
+  } catch (error) {
+    console.warn(`Run ${id} waits for the sweep of the table, since the queue did not answer.`, error);
+  }
 }

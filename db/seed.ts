@@ -1,0 +1,109 @@
+import { readdir, readFile } from "node:fs/promises";
+import { join, resolve } from "node:path";
+import { and, eq } from "drizzle-orm";
+import { Client } from "pg";
+import { hashPassword } from "@/lib/auth/password";
+import { demoEnv } from "@/lib/env";
+import type { Actor, Role } from "@/lib/permissions/actor";
+import { closeQueue } from "@/lib/queue/producer";
+import { createNetlist } from "@/lib/services/netlists/create-netlist";
+import { startRun } from "@/lib/services/runs/start-run";
+import { closeDatabase, database } from "./client";
+import { membership } from "./schema/membership";
+import { netlist } from "./schema/netlist";
+import { revision } from "./schema/revision";
+import { run } from "./schema/run";
+import { user } from "./schema/user";
+import { workspace } from "./schema/workspace";
+
+/** Any number of our own, another than that of migrate: processes that seed wait for one another on it. */
+const LOCK = 7_396_105;
+
+/** An invented maker of colour-measuring and flow instruments. */
+const BENCH = { slug: "north-bench", name: "Northbench Instruments (invented)" } as const;
+
+/** Its invented people, one of each role. */
+export const DEMO_PEOPLE = [
+  { email: "vera.viewer@northbench.example", name: "Vera Viewer", role: "viewer" },
+  { email: "erik.engineer@northbench.example", name: "Erik Engineer", role: "engineer" },
+  { email: "rosa.reviewer@northbench.example", name: "Rosa Reviewer", role: "reviewer" },
+  { email: "adam.admin@northbench.example", name: "Adam Admin", role: "admin" },
+] as const satisfies readonly { email: string; name: string; role: Role }[];
+
+/**
+ * Makes the demo in the database at `url`: a workspace, four people and every netlist of `examples`, each with a queued run. Safe to
+ * call again and from several processes at once: what is there already stays as it is, also when somebody has changed it.
+ * Sets DATABASE_URL of this process, and closes what it opened.
+ */
+export async function seed(url: string, examples = resolve("examples")): Promise<void> {
+  process.env.DATABASE_URL = url;
+  const holder = new Client({ connectionString: url });
+  await holder.connect();
+  try {
+    await holder.query("SELECT pg_advisory_lock($1)", [LOCK]);
+    const actor = await people();
+    await netlists(actor, examples);
+  } finally {
+    await holder.end();
+    await Promise.all([closeQueue(), closeDatabase()]);
+  }
+}
+
+/** The workspace and its members; gives the engineer, who makes everything else. */
+async function people(): Promise<Actor> {
+  const db = database();
+  await db.insert(workspace).values(BENCH).onConflictDoNothing();
+  const [room] = await db.select({ id: workspace.id }).from(workspace).where(eq(workspace.slug, BENCH.slug));
+  const { SWEEPWRIGHT_DEMO_PASSWORD } = demoEnv();
+  for (const { email, name, role } of DEMO_PEOPLE) {
+    const known = await userId(email);
+    if (known !== undefined) continue;
+    const passwordHash = await hashPassword(SWEEPWRIGHT_DEMO_PASSWORD);
+    await db.transaction(async (tx) => {
+      const [made] = await tx.insert(user).values({ email, name, passwordHash }).returning({ id: user.id });
+      await tx.insert(membership).values({ workspaceId: room!.id, userId: made!.id, role });
+    });
+  }
+  const { email, name, role } = DEMO_PEOPLE[1];
+  const engineer = await userId(email);
+  // The seed signs nobody in, so its session id is nobody's.
+  return {
+    userId: engineer!,
+    name,
+    email,
+    role,
+    sessionId: "",
+    workspaceId: room!.id,
+    workspaceSlug: BENCH.slug,
+  };
+}
+
+async function userId(email: string): Promise<string | undefined> {
+  const [row] = await database().select({ id: user.id }).from(user).where(eq(user.email, email));
+  return row?.id;
+}
+
+/** Makes and queues each example that the workspace does not hold yet; the message of its first revision names the file. */
+async function netlists(actor: Actor, folder: string): Promise<void> {
+  const files = (await readdir(folder)).filter((name) => name.endsWith(".swn")).sort();
+  if (files.length === 0) throw new Error(`The folder ${folder} holds no example (*.swn).`);
+  for (const file of files) {
+    const message = `Example ${file}: invented, for the demo`;
+    const known = await netlistWith(actor, message);
+    const id =
+      known?.id ??
+      (await createNetlist(actor, { text: await readFile(join(folder, file), "utf8"), message })).id;
+    if (known === undefined || !known.ran) await startRun(actor, { netlistId: id, base: 1 });
+  }
+}
+
+async function netlistWith(actor: Actor, message: string): Promise<{ id: string; ran: boolean } | undefined> {
+  const [row] = await database()
+    .select({ id: netlist.id, run: run.id })
+    .from(netlist)
+    .innerJoin(revision, and(eq(revision.netlistId, netlist.id), eq(revision.number, 1)))
+    .leftJoin(run, eq(run.netlistId, netlist.id))
+    .where(and(eq(netlist.workspaceId, actor.workspaceId), eq(revision.message, message)))
+    .limit(1);
+  return row && { id: row.id, ran: row.run !== null };
+}

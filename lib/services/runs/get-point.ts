@@ -1,0 +1,77 @@
+import { and, eq, gt, lte } from "drizzle-orm";
+import { database } from "@/db/client";
+import { run } from "@/db/schema/run";
+import { shard } from "@/db/schema/shard";
+import { placeOnAxes } from "@/lib/analyses/plan";
+import { AppError } from "@/lib/errors";
+import type { Actor } from "@/lib/permissions/actor";
+import { authorize } from "@/lib/permissions/authorize";
+import { OUTCOMES, type OutcomeKind, RUNGS, type Rung } from "@/lib/solver/outcome";
+import { traceColumn, unknownColumn } from "../chunks/columns";
+import { readPoint } from "../chunks/read-columns";
+import { findRun } from "./find-run";
+import { reasonOf } from "./reason";
+
+interface Figure {
+  readonly name: string;
+  readonly unit: string;
+  /** Null where unsolved. */
+  readonly value: number | null;
+}
+
+/** Everything kept about one point. All values in coherent SI units. */
+export interface PointDetail {
+  readonly point: number;
+  readonly at: readonly { readonly knob: string; readonly unit: string; readonly value: number }[];
+  /** Null, as are all figures, while the point's shard is not in yet. */
+  readonly outcome: OutcomeKind | null;
+  readonly iterations: number | null;
+  /** Largest |F_i|, A. */
+  readonly residual: number | null;
+  readonly rung: Rung | null;
+  readonly unknowns: readonly Figure[];
+  readonly traces: readonly Figure[];
+  /** Nets and elements that would not settle, the worst first. */
+  readonly unsolved: readonly string[];
+  /** One sentence why there is no value; null where there is one. */
+  readonly failure: string | null;
+}
+
+/** One flat point of a run. Throws "not found" for a point that the run does not have. */
+export async function getPoint(actor: Actor, id: string, point: number): Promise<PointDetail> {
+  const db = database();
+  const asked = await findRun(db, actor, id);
+  authorize(actor, "run.read", asked);
+  if (!Number.isInteger(point) || point < 0 || point >= asked.points) {
+    throw new AppError(
+      "not found",
+      `Run ${asked.number} has no such point; they go from 0 to ${asked.points - 1}.`,
+    );
+  }
+  const [planned] = await db.select({ plan: run.plan }).from(run).where(eq(run.id, asked.id));
+  const { plan } = planned!;
+  const values = await readPoint(asked.id, point);
+  const [holder] = await db
+    .select({ failures: shard.failures })
+    .from(shard)
+    .where(and(eq(shard.runId, asked.id), lte(shard.from, point), gt(shard.to, point)));
+  const figure = (column: string): number | null => {
+    const value = values?.get(column);
+    return value === undefined || Number.isNaN(value) ? null : value;
+  };
+  const place = placeOnAxes(plan, point);
+  const outcome = OUTCOMES[figure("outcome") ?? -1] ?? null;
+  const unsettled = holder?.failures.find((one) => one.point === point)?.unsettled ?? [];
+  return {
+    point,
+    at: plan.axes.map(({ knob, unit, values: along }, axis) => ({ knob, unit, value: along[place[axis]!]! })),
+    outcome,
+    iterations: figure("iterations"),
+    residual: figure("residual"),
+    rung: RUNGS[figure("rung") ?? -1] ?? null,
+    unknowns: plan.unknowns.map((one, i) => ({ ...one, value: figure(unknownColumn(i)) })),
+    traces: plan.traces.map((one, i) => ({ ...one, value: figure(traceColumn(i)) })),
+    unsolved: unsettled,
+    failure: outcome === null ? "This point is not solved yet." : reasonOf(outcome, unsettled),
+  };
+}
