@@ -10,16 +10,17 @@ export interface Chunk {
   readonly count: number;
   readonly minimum: number | null;
   readonly maximum: number | null;
-  readonly data: Buffer;
+  /** Memory of its own, so that it can be handed from thread to thread. */
+  readonly data: Uint8Array<ArrayBuffer>;
 }
 
 /**
  * Byte-shuffled little-endian Float64: first the lowest byte of every value, then the next, and so on. Neighbouring values of a
  * smooth trace share their high bytes, which then lie together and compress well. Every bit is kept, NaN included.
  */
-export function encode(values: Float64Array): Buffer {
+export function encode(values: Float64Array): Uint8Array<ArrayBuffer> {
   const plain = littleEndianBytes(values);
-  const shuffled = Buffer.allocUnsafe(plain.length);
+  const shuffled = new Uint8Array(plain.length);
   for (let byte = 0, to = 0; byte < BYTES; byte++) {
     for (let from = byte; from < plain.length; from += BYTES) shuffled[to++] = plain[from]!;
   }

@@ -52,7 +52,13 @@ async function write(db: Database, claim: Claim, result: StoredShard): Promise<b
 
 async function addChunks(transaction: Queryable, claim: Claim, { columns }: StoredShard): Promise<void> {
   const rows = columns.flatMap(({ column, chunks }) =>
-    chunks.map((one) => ({ runId: claim.runId, shardIndex: claim.index, column, ...one })),
+    chunks.map(({ data, ...one }) => ({
+      runId: claim.runId,
+      shardIndex: claim.index,
+      column,
+      ...one,
+      data: Buffer.from(data.buffer, data.byteOffset, data.byteLength),
+    })),
   );
   for (let from = 0; from < rows.length; from += ROWS) {
     await transaction.insert(chunk).values(rows.slice(from, from + ROWS));

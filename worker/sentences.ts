@@ -1,0 +1,26 @@
+import type { Claim } from "@/lib/services/shards/claim-shard";
+
+type Points = Pick<Claim, "from" | "to">;
+
+const count = (n: number) => n.toLocaleString("en-GB");
+
+/** "point 1" or "points 257 to 4,096", as people count them. */
+function range({ from, to }: Points): string {
+  return to - from === 1 ? `point ${count(to)}` : `points ${count(from + 1)} to ${count(to)}`;
+}
+
+export function outOfTime(points: Points, seconds: number): string {
+  return `Solving ${range(points)} took longer than the limit of ${count(seconds)} s. Make the circuit smaller and queue it again.`;
+}
+
+export function outOfMemory(points: Points, memory: number): string {
+  return `Solving ${range(points)} took more memory than the limit of ${count(memory)} MiB. Make the circuit smaller and queue it again.`;
+}
+
+export function brokenOff(points: Points, attempts: number): string {
+  return `The solver broke off ${attempts} times at ${range(points)}. This is a fault of the service, not of the netlist: report it to whoever runs it.`;
+}
+
+export function engineChanged(): string {
+  return "The service was updated with another engine while this run was under way, and a run is never mixed. Queue it again.";
+}

@@ -1,0 +1,106 @@
+import { createRequire } from "node:module";
+import { pathToFileURL } from "node:url";
+import { Worker, type WorkerOptions } from "node:worker_threads";
+import type { StoredShard } from "@/lib/services/chunks/columns";
+import type { Reply, Task } from "./messages";
+
+/** How a task ended. */
+export type Ended =
+  | { readonly kind: "solved"; readonly result: StoredShard }
+  | { readonly kind: "aborted" }
+  | { readonly kind: "out of time" }
+  | { readonly kind: "out of memory" }
+  | { readonly kind: "broken"; readonly reason: string };
+
+export interface Limits {
+  /** Longest time for one task, seconds. */
+  readonly seconds: number;
+  /** Heap of the thread, MiB. Typed arrays do not count; a shard bounds them. */
+  readonly memory: number;
+}
+
+/** The thread's file lies beside this one: bundled in production, TypeScript in the tests. */
+function entry(): { file: URL; options: WorkerOptions } {
+  if (import.meta.url.endsWith(".mjs")) {
+    return { file: new URL("./solve-thread.mjs", import.meta.url), options: { execArgv: [] } };
+  }
+  const loader = pathToFileURL(createRequire(import.meta.url).resolve("tsx")).href;
+  return {
+    file: new URL("./solve-thread.ts", import.meta.url),
+    options: { execArgv: ["--import", loader] },
+  };
+}
+
+/** One computing thread. It takes one task at a time; after anything but "solved" or "broken" it is gone. */
+export class Thread {
+  readonly #worker: Worker;
+  /** Settles once the thread has warmed up; rejects when it cannot start. */
+  readonly ready: Promise<void>;
+  #onReply: (reply: Reply) => void = () => undefined;
+  #onGone: (ended: Ended) => void = () => undefined;
+  #gone = false;
+
+  constructor(private readonly limits: Limits) {
+    const { file, options } = entry();
+    this.#worker = new Worker(file, {
+      ...options,
+      resourceLimits: { maxOldGenerationSizeMb: limits.memory },
+    });
+    this.ready = new Promise((resolve, reject) => {
+      this.#onReply = () => resolve();
+      this.#onGone = (ended) =>
+        reject(new Error(ended.kind === "broken" ? ended.reason : `The thread is ${ended.kind}.`));
+    });
+    this.#worker.on("message", (reply: Reply) => this.#onReply(reply));
+    this.#worker.on("error", (error: Error & { code?: string }) =>
+      this.#leave(
+        error.code === "ERR_WORKER_OUT_OF_MEMORY"
+          ? { kind: "out of memory" }
+          : { kind: "broken", reason: error.stack ?? error.message },
+      ),
+    );
+    this.#worker.on("exit", (code) =>
+      this.#leave({ kind: "broken", reason: `The thread ended by itself (${code}).` }),
+    );
+  }
+
+  get gone(): boolean {
+    return this.#gone;
+  }
+
+  /** Solves `task`; `signal` and the time limit end the thread with it. */
+  run(task: Task, signal: AbortSignal, onProgress: (pointsDone: number) => void): Promise<Ended> {
+    return new Promise<Ended>((resolve) => {
+      const abort = () => this.#leave({ kind: "aborted" });
+      const timer = setTimeout(() => this.#leave({ kind: "out of time" }), 1_000 * this.limits.seconds);
+      const end = (ended: Ended) => {
+        clearTimeout(timer);
+        signal.removeEventListener("abort", abort);
+        this.#onReply = () => undefined;
+        this.#onGone = () => undefined;
+        resolve(ended);
+      };
+      this.#onGone = end;
+      this.#onReply = (reply) => {
+        if (reply.kind === "progress") onProgress(reply.pointsDone);
+        else if (reply.kind === "solved" || reply.kind === "broken") end(reply);
+      };
+      signal.addEventListener("abort", abort);
+      if (signal.aborted) abort();
+      else this.#worker.postMessage(task);
+    });
+  }
+
+  /** Ends the thread, and the task it is at as "aborted". */
+  async close(): Promise<void> {
+    this.#leave({ kind: "aborted" });
+    await this.#worker.terminate();
+  }
+
+  #leave(ended: Ended): void {
+    if (this.#gone) return;
+    this.#gone = true;
+    void this.#worker.terminate();
+    this.#onGone(ended);
+  }
+}
