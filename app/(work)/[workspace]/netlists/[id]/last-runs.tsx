@@ -1,0 +1,86 @@
+"use client";
+
+import { useQuery } from "@tanstack/react-query";
+import Link from "next/link";
+import { ButtonLink } from "@/app/_components/ui/button";
+import { formatCount } from "@/app/_components/ui/count";
+import { StateBadge } from "@/app/_components/ui/state-badge";
+import { ProgressLine } from "@/app/_components/ui/states";
+import { When } from "@/app/_components/ui/when";
+import { ask } from "./ask";
+import { RUNS_SHOWN, type RunLine, type RunLines } from "./run-line";
+
+interface Props {
+  readonly workspace: string;
+  readonly netlistId: string;
+  readonly first: RunLines;
+}
+
+/** The latest runs of this netlist with their state; looked up every two seconds while one of them moves. */
+export function LastRuns({ workspace, netlistId, first }: Props) {
+  const { data, error } = useQuery({
+    queryKey: ["runs", workspace, netlistId],
+    initialData: first,
+    queryFn: async () => {
+      const search = new URLSearchParams({ workspace, netlistId, page: "1", size: String(RUNS_SHOWN) });
+      const answer = await ask<RunLines>(`/api/v1/runs?${search}`);
+      if (!answer.ok) throw new Error(answer.detail);
+      return answer.body;
+    },
+    refetchInterval: (query) => (query.state.data?.rows.some(isMoving) ? 2000 : false),
+  });
+  return (
+    <section aria-labelledby="last-runs">
+      <div className="flex min-h-7 items-center justify-between gap-4">
+        <h2 id="last-runs" className="caption">
+          Last runs
+        </h2>
+        {data.total > RUNS_SHOWN && (
+          <ButtonLink size="small" tone="quiet" href={`/${workspace}/runs?netlist=${netlistId}`}>
+            All {formatCount(data.total)}
+          </ButtonLink>
+        )}
+      </div>
+      {error !== null && (
+        <p className="mt-2 text-broken text-sm">This list may be out of date. {error.message}</p>
+      )}
+      {data.rows.length === 0 ? (
+        <p className="mt-2 border-y py-3 text-quiet text-sm">
+          Not run yet. The curves of the first run will be listed here.
+        </p>
+      ) : (
+        <ul className="mt-2 border-t">
+          {data.rows.map((run) => (
+            <RunItem key={run.id} workspace={workspace} run={run} />
+          ))}
+        </ul>
+      )}
+    </section>
+  );
+}
+
+function RunItem({ workspace, run }: { readonly workspace: string; readonly run: RunLine }) {
+  return (
+    <li className="grid gap-1 border-b py-2">
+      <div className="flex flex-wrap items-baseline justify-between gap-x-4">
+        <Link
+          href={`/${workspace}/runs/${run.id}`}
+          className="inline-block min-h-6 font-semibold text-sm underline-offset-3 hover:underline"
+        >
+          Run {run.number}
+        </Link>
+        <StateBadge state={run.status} failed={run.pointsFailed} />
+      </div>
+      <p className="text-quiet text-xs">
+        revision {run.revision}, {formatCount(run.points)} points, {run.requestedBy},{" "}
+        <When iso={run.queuedAt} />
+      </p>
+      {run.error !== null && <p className="text-quiet text-xs">{run.error}</p>}
+      {isMoving(run) && <ProgressLine done={run.pointsDone} total={run.points} label={`Run ${run.number}`} />}
+    </li>
+  );
+}
+
+function isMoving({ status }: RunLine): boolean {
+  return status === "queued" || status === "running";
+}

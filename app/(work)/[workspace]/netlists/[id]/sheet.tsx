@@ -1,0 +1,89 @@
+"use client";
+
+import { useEffect, useState } from "react";
+import { NetlistEditor } from "@/app/_components/editor/netlist-editor";
+import { ProblemList } from "@/app/_components/editor/problem-list";
+import type { Role } from "@/lib/permissions/actor";
+import { ConflictDialog } from "./conflict-dialog";
+import { LastRuns } from "./last-runs";
+import { PlanView } from "./plan-view";
+import type { RunLines } from "./run-line";
+import type { Saved } from "./saved";
+import { SheetHeader } from "./sheet-header";
+import { SheetRemarks } from "./sheet-remarks";
+import { StatusLine } from "./status-line";
+import { useSheet } from "./use-sheet";
+
+interface Props {
+  readonly workspace: string;
+  readonly netlist: { readonly id: string; readonly number: number; readonly owner: string };
+  readonly latest: Saved;
+  readonly runs: RunLines;
+  readonly role: Role;
+  readonly mayQueue: boolean;
+}
+
+/** The sheet of a netlist: its text to write in, what is wrong with it, what a run would compute, and the runs so far. */
+export function Sheet({ workspace, netlist, latest, runs, role, mayQueue }: Props) {
+  const sheet = useSheet({ workspace, netlistId: netlist.id, latest, mayQueue });
+  const { editor, examined, text, saved } = sheet;
+  const [tabMoves, setTabMoves] = useState(false);
+  const problems = examined?.diagnostics ?? [];
+
+  useEffect(() => {
+    // The editor answers these keys itself; here they work from anywhere else on the sheet.
+    const press = (event: KeyboardEvent) => {
+      if (event.defaultPrevented || !(event.ctrlKey || event.metaKey) || event.altKey) return;
+      if (event.target instanceof Element && event.target.closest("[role=dialog]") !== null) return;
+      if (event.key === "Enter") void sheet.queue();
+      else if (event.key === "s" && mayQueue) sheet.openSave(true);
+      else return;
+      event.preventDefault();
+    };
+    window.addEventListener("keydown", press);
+    return () => window.removeEventListener("keydown", press);
+  });
+
+  return (
+    <div className="flex grow flex-col">
+      <SheetHeader sheet={sheet} title={latest.title} netlist={netlist} role={role} mayQueue={mayQueue} />
+      <SheetRemarks sheet={sheet} workspace={workspace} />
+      <div className="grid grow lg:grid-cols-[minmax(0,1fr)_minmax(320px,25%)] lg:grid-rows-[minmax(480px,1fr)]">
+        <div className="flex h-[min(75dvh,720px)] min-w-0 flex-col border-b lg:h-0 lg:min-h-full lg:border-r lg:border-b-0">
+          <div className="min-h-0 grow">
+            <NetlistEditor
+              ref={editor}
+              initial={latest.text}
+              readOnly={!mayQueue}
+              problems={examined}
+              onEdit={sheet.edited}
+              onQueue={() => void sheet.queue()}
+              onSave={() => mayQueue && sheet.openSave(true)}
+              onTabMoves={setTabMoves}
+            />
+          </div>
+          {examined !== null && problems.length > 0 && (
+            <ProblemList
+              text={examined.text}
+              diagnostics={problems}
+              mayMend={mayQueue}
+              onGoTo={sheet.goTo}
+              onMend={(one) => one.fix !== undefined && editor.current?.mend(one.fix, examined.text)}
+            />
+          )}
+          <StatusLine
+            examined={examined}
+            stale={examined?.text !== text}
+            tabMoves={tabMoves}
+            readOnly={!mayQueue}
+          />
+        </div>
+        <div className="grid min-w-0 content-start gap-8 px-4 py-4 md:px-6 lg:h-0 lg:min-h-full lg:overflow-y-auto">
+          <PlanView examined={examined} stale={examined?.text !== text} />
+          <LastRuns workspace={workspace} netlistId={netlist.id} first={runs} />
+        </div>
+      </div>
+      <ConflictDialog sheet={sheet} base={saved.revision} />
+    </div>
+  );
+}

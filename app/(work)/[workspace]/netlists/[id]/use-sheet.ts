@@ -1,0 +1,170 @@
+"use client";
+
+import { useRouter } from "next/navigation";
+import { useRef, useState } from "react";
+import type { EditorHandle } from "@/app/_components/editor/editor-handle";
+import { useExamination } from "@/app/_components/editor/use-examination";
+import type { Diagnostic } from "@/lib/language/diagnostic";
+import { ask } from "./ask";
+import type { Saved } from "./saved";
+import { useDrafts } from "./use-drafts";
+import { useSettledText } from "./use-settled-text";
+
+/** What stands over the sheet as the answer to what the reader last did. */
+export interface Remark {
+  readonly tone: "broken" | "plain";
+  readonly title: string;
+  readonly detail: string;
+  /** A netlist to look at. */
+  readonly made?: string;
+}
+
+interface Asked {
+  readonly workspace: string;
+  readonly netlistId: string;
+  readonly latest: Saved;
+  readonly mayQueue: boolean;
+}
+
+/** The state of a sheet: the text, what it was written upon, what the checker says, and what saving and queueing came to. */
+export function useSheet({ workspace, netlistId, latest, mayQueue }: Asked) {
+  const router = useRouter();
+  const editor = useRef<EditorHandle>(null);
+  const [saved, setSaved] = useState(latest);
+  const { text, edited, settle } = useSettledText(editor, latest.text);
+  const { examined, broken } = useExamination(text);
+  const drafts = useDrafts(netlistId, text, saved, mayQueue);
+  const [busy, setBusy] = useState<"saving" | "queueing" | null>(null);
+  const [remark, setRemark] = useState<Remark | null>(null);
+  const [saving, openSave] = useState(false);
+  const [theirs, setTheirs] = useState<Saved | null>(null);
+  const changed = text !== saved.text;
+  const errors = (examined?.diagnostics ?? []).filter(({ severity }) => severity === "error");
+
+  const goTo = (problem: Diagnostic) => editor.current?.goTo(problem);
+  const refuse = (title: string, detail: string) => setRemark({ tone: "broken", title, detail });
+
+  const fetchLatest = async (): Promise<Saved | null> => {
+    const answer = await ask<Saved>(`/api/v1/netlists/${netlistId}`);
+    if (!answer.ok) return null;
+    const { title, text: theirText, revision, hash } = answer.body;
+    return { title, text: theirText.replaceAll("\r\n", "\n"), revision, hash };
+  };
+
+  const failed = async (title: string, answer: { status: number; detail: string }) => {
+    setBusy(null);
+    const newest = answer.status === 409 ? await fetchLatest() : null;
+    if (newest === null) refuse(title, answer.detail);
+    else setTheirs(newest);
+  };
+
+  const queue = async () => {
+    if (!mayQueue || busy !== null) return;
+    setRemark(null);
+    const now = settle();
+    const first = errors[0];
+    if (first !== undefined && examined?.text === now) return goTo(first);
+    setBusy("queueing");
+    const body = { netlistId, base: saved.revision, ...(now === saved.text ? {} : { text: now }) };
+    const answer = await ask<{ id: string }>("/api/v1/runs", body);
+    if (!answer.ok) return failed("The run was not queued", answer);
+    drafts.forget();
+    router.push(`/${workspace}/runs/${answer.body.id}`);
+  };
+
+  const save = async (message: string): Promise<boolean> => {
+    if (!mayQueue || busy !== null) return false;
+    setRemark(null);
+    setBusy("saving");
+    const now = settle();
+    const body = { base: saved.revision, text: now, ...(message === "" ? {} : { message }) };
+    const answer = await ask<{ revision: number; hash: string; changed: boolean }>(
+      `/api/v1/netlists/${netlistId}/revisions`,
+      body,
+    );
+    if (!answer.ok) {
+      await failed("The revision was not saved", answer);
+      return answer.status === 409;
+    }
+    setBusy(null);
+    const { revision, hash, changed: made } = answer.body;
+    setSaved({ ...saved, text: now, revision, hash });
+    if (!made) {
+      const detail = "Only its layout differs, so no new revision was needed.";
+      setRemark({ tone: "plain", title: `The text means the same as revision ${revision}`, detail });
+    }
+    router.refresh();
+    return true;
+  };
+
+  /** Puts another text on the sheet; the one that stands there can be had back by undo. */
+  const put = (next: string) => {
+    editor.current?.replace(next);
+    settle();
+  };
+
+  const loadTheirs = () => {
+    if (theirs === null) return;
+    drafts.setAside(settle(), saved.revision);
+    setSaved(theirs);
+    put(theirs.text);
+    setTheirs(null);
+    router.refresh();
+  };
+
+  const keepAsCopy = async () => {
+    if (theirs === null) return;
+    const answer = await ask<{ id: string }>("/api/v1/netlists", { workspace, text: settle() });
+    if (!answer.ok) {
+      setTheirs(null);
+      return refuse("The copy was not made", answer.detail);
+    }
+    setSaved(theirs);
+    put(theirs.text);
+    setTheirs(null);
+    router.refresh();
+    setRemark({
+      tone: "plain",
+      title: "Your text is a netlist of its own now",
+      detail: `This sheet shows revision ${theirs.revision}.`,
+      made: answer.body.id,
+    });
+  };
+
+  const takeBack = () => {
+    if (drafts.aside === null) return;
+    const before = settle();
+    put(drafts.aside.text);
+    drafts.dropAside();
+    if (before !== saved.text) drafts.setAside(before, saved.revision);
+  };
+
+  return {
+    editor,
+    saved,
+    text,
+    edited,
+    examined,
+    broken,
+    errors,
+    changed,
+    busy,
+    remark,
+    setRemark,
+    theirs,
+    closeConflict: () => setTheirs(null),
+    loadTheirs,
+    keepAsCopy,
+    aside: drafts.aside,
+    unsafe: drafts.unsafe,
+    takeBack,
+    dropAside: drafts.dropAside,
+    goTo,
+    saving,
+    openSave,
+    queue,
+    save,
+  };
+}
+
+export type SheetState = ReturnType<typeof useSheet>;

@@ -1,0 +1,26 @@
+import type { Fix } from "@/lib/language/diagnostic";
+import type { Span } from "@/lib/language/span";
+
+/** What the page may ask of the editor. Spans are UTF-16 offsets in a text whose lines end with "\n". */
+export interface EditorHandle {
+  /** The text as it stands. */
+  text(): string;
+  /** Puts another text in place of the whole; the reader can undo it. */
+  replace(text: string): void;
+  /** Selects the span and brings it into view. */
+  goTo(span: Span): void;
+  /** Puts a fix in, if the text is still the one it was worked out for. */
+  mend(fix: Fix, of: string): void;
+  /** Brings the text into canonical form. */
+  format(): void;
+}
+
+/** What the editor tells the page. */
+export interface EditorEvents {
+  /** After each change; ask the handle for the text when it is needed. */
+  readonly onEdit: () => void;
+  readonly onQueue: () => void;
+  readonly onSave: () => void;
+  /** Whether the Tab key now moves the focus on instead of indenting. */
+  readonly onTabMoves: (moves: boolean) => void;
+}

@@ -1,0 +1,45 @@
+import { monaco } from "./monaco";
+import { THEME } from "./monaco-theme";
+import { FONT_FAMILY, FONT_SIZE, LINE_HEIGHT } from "./palette";
+
+/** How every netlist editor stands: one column of text on ruled lines, and nothing beside it. */
+export const EDITOR_OPTIONS: monaco.editor.IStandaloneEditorConstructionOptions = {
+  theme: THEME,
+  fontFamily: FONT_FAMILY,
+  fontSize: FONT_SIZE,
+  lineHeight: LINE_HEIGHT,
+  padding: { top: 8, bottom: 8 },
+  automaticLayout: true,
+  // What the language does not use, or what would draw over the ruled lines.
+  minimap: { enabled: false },
+  glyphMargin: false,
+  folding: false,
+  renderLineHighlight: "none",
+  guides: { indentation: false, bracketPairs: false, highlightActiveIndentation: false },
+  bracketPairColorization: { enabled: false },
+  occurrencesHighlight: "off",
+  selectionHighlight: false,
+  wordBasedSuggestions: "off",
+  quickSuggestions: false,
+  links: false,
+  contextmenu: false,
+  lightbulb: { enabled: monaco.editor.ShowLightbulbIconMode.Off },
+  unicodeHighlight: { ambiguousCharacters: false, invisibleCharacters: false },
+  overviewRulerLanes: 0,
+  hideCursorInOverviewRuler: true,
+  roundedSelection: false,
+  lineNumbersMinChars: 3,
+  lineDecorationsWidth: 20,
+  scrollBeyondLastLine: false,
+  wordWrap: "on",
+  wrappingIndent: "indent",
+  fixedOverflowWidgets: true,
+  tabSize: 2,
+  insertSpaces: true,
+  scrollbar: {
+    useShadows: false,
+    verticalScrollbarSize: 10,
+    horizontalScrollbarSize: 10,
+    alwaysConsumeMouseWheel: false,
+  },
+};

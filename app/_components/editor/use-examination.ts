@@ -1,0 +1,41 @@
+"use client";
+
+import { useEffect, useRef, useState } from "react";
+import { Checking, type CheckThread } from "./checking";
+import type { Examination } from "./examine";
+
+export interface Examined extends Examination {
+  /** The text that was examined: the spans of the diagnostics are of this one. */
+  readonly text: string;
+}
+
+/**
+ * What the checker says of `text`, worked out in a thread of the browser. Until the first answer, and for a moment after each
+ * change, the answer is of an earlier text: compare `text`. `broken` when the browser could not start the thread.
+ */
+export function useExamination(text: string): {
+  readonly examined: Examined | null;
+  readonly broken: boolean;
+} {
+  const [examined, setExamined] = useState<Examined | null>(null);
+  const [broken, setBroken] = useState(false);
+  const checking = useRef<Checking | null>(null);
+
+  useEffect(() => {
+    const thread = new Worker(new URL("./check.worker.ts", import.meta.url), { type: "module" });
+    thread.onerror = () => setBroken(true);
+    checking.current = new Checking(thread as CheckThread, (examination, of) => {
+      setBroken(false);
+      setExamined({ ...examination, text: of });
+    });
+    return () => {
+      checking.current = null;
+      thread.terminate();
+    };
+  }, []);
+
+  // Declared after the effect that starts the thread, so the first text is asked about too.
+  useEffect(() => checking.current?.ask(text), [text]);
+
+  return { examined, broken };
+}
