@@ -1,0 +1,89 @@
+import { classNames } from "@/app/_components/ui/class-names";
+import type { Cursor } from "./cursor-layer";
+import type { CurveSet } from "./curve-set";
+import { pointAt } from "./curve-set";
+import type { Axis, StoreyView } from "./curve-view";
+import { formatKnob, formatValue } from "./figures-in-words";
+import { downIn, STOREY_GAP } from "./nearest-line";
+
+interface Props {
+  readonly set: CurveSet;
+  readonly storeys: readonly StoreyView[];
+  readonly horizontal: Axis;
+  readonly x: readonly number[];
+  readonly width: number;
+  readonly cursor: Cursor;
+}
+
+/** The line of the cursor through all storeys, a ring on each line it crosses, and the values of the setting it follows. */
+export function CursorMarks({ set, storeys, horizontal, x, width, cursor }: Props) {
+  const { from, to } = horizontal.range;
+  const left = (width * (x[cursor.place]! - from)) / (to - from);
+  const tops = storeys.map((_, i) =>
+    storeys.slice(0, i).reduce((sum, { height }) => sum + height + STOREY_GAP, 0),
+  );
+  const followed = storeys.flatMap(({ lines }) => lines.filter(({ family }) => family === cursor.family));
+  const label = set.families[cursor.family]?.label ?? "";
+  const right = left < width / 2;
+  return (
+    <div aria-hidden="true" className="pointer-events-none">
+      <div className="absolute top-0 h-full border-accent border-l" style={{ left }} />
+      {storeys.map((storey, i) =>
+        storey.lines.map((line) => {
+          const value = line.values[cursor.place] ?? null;
+          const down = value === null ? null : downIn(storey, value);
+          if (down === null) return null;
+          return (
+            <span
+              key={line.key}
+              className={classNames(
+                "absolute -translate-x-1/2 -translate-y-1/2 rounded-full border-accent bg-paper",
+                line.family === cursor.family ? "size-2.25 border-2" : "size-1.75 border",
+              )}
+              style={{ left, top: tops[i]! + down }}
+            />
+          );
+        }),
+      )}
+      <div
+        className={classNames(
+          "absolute border bg-surface px-2.5 py-1.5 text-xs",
+          right ? "ml-2.5" : "-translate-x-full -ml-2.5",
+        )}
+        style={{ left, top: Math.max(0, boxTop(storeys, cursor) - 8) }}
+      >
+        <p className="figures whitespace-nowrap text-xs">
+          {formatKnob(set.axis, set.x[cursor.place]!)}
+          {label !== "" && <span className="text-quiet">, {label}</span>}
+        </p>
+        {followed.map((line) => (
+          <p key={line.key} className="flex justify-between gap-4 whitespace-nowrap">
+            <span className="text-quiet">{line.trace}</span>
+            <span className="figures text-xs">
+              {line.values[cursor.place] === null
+                ? missing(set, cursor)
+                : formatValue(line.values[cursor.place] ?? null, line.unit)}
+            </span>
+          </p>
+        ))}
+      </div>
+    </div>
+  );
+}
+
+/** Why there is no value at the cursor. */
+export function missing(set: CurveSet, { family, place }: Cursor): string {
+  const outcome = set.source.points.outcome[pointAt(set, family, place)] ?? null;
+  if (outcome === null) return "not solved";
+  return outcome === "converged" ? "no value" : `failed: ${outcome}`;
+}
+
+/** Below the followed line in the first storey, or above it where there is no room below. */
+function boxTop(storeys: readonly StoreyView[], cursor: Cursor): number {
+  const [first] = storeys;
+  const line = first?.lines.find(({ family }) => family === cursor.family);
+  const value = line?.values[cursor.place] ?? null;
+  const down = first === undefined || value === null ? null : downIn(first, value);
+  if (first === undefined || down === null) return 48;
+  return down > first.height / 2 ? Math.max(32, down - 88) : down + 24;
+}

@@ -1,0 +1,78 @@
+import { counted, formatCount } from "@/app/_components/ui/count";
+import { formatQuantity } from "@/lib/units/quantity";
+import type { CurveSet } from "./curve-set";
+import { type Account, spansInWords } from "./failed-spans";
+import { formatKnob } from "./figures-in-words";
+import type { Line, Storey } from "./storeys";
+
+/** What a plot shows, in sentences: what is drawn over what, where each trace goes, how many points failed and where. */
+export function summarise(set: CurveSet, storeys: readonly Storey[], account: Account): string {
+  const first = set.x[0];
+  const last = set.x.at(-1);
+  if (first === undefined || last === undefined) return "The sweep has no points.";
+  const over = `${set.axis.knob} from ${formatKnob(set.axis, first)} to ${formatKnob(set.axis, last)}`;
+  const settings = set.families.length > 1 ? `, at ${settingsDrawn(set, storeys)}` : "";
+  const traces = storeys.flatMap(({ traces, lines }) =>
+    traces.map((name) => course(lines.filter((line) => line.trace === name))),
+  );
+  const drawn = traces.length === 0 ? ["No trace is chosen."] : traces;
+  return [
+    `Over ${over}${settings}:`,
+    `${drawn.join("; ")}.`.replace("..", "."),
+    pointsInWords(set, account),
+  ].join(" ");
+}
+
+function settingsDrawn(set: CurveSet, storeys: readonly Storey[]): string {
+  const drawn = new Set(storeys.flatMap(({ lines }) => lines.map(({ family }) => family))).size;
+  const knobs = set.outer.map(({ knob }) => knob).join(" and ");
+  const all = counted(set.families.length, "setting");
+  return `${drawn === set.families.length ? all : `${formatCount(drawn)} of ${all}`} of ${knobs}`;
+}
+
+/** "out rises from −0.66 V to −0.60 V", or its lowest and highest value where the lines do not all go one way. */
+function course(lines: readonly Line[]): string {
+  const [line] = lines;
+  if (line === undefined) return "no line is drawn";
+  const values = lines.flatMap((one) => one.values.filter((value) => value !== null));
+  if (values.length === 0) return `${line.trace} has no solved point yet`;
+  const low = values.reduce((a, b) => Math.min(a, b));
+  const high = values.reduce((a, b) => Math.max(a, b));
+  const show = (value: number) => formatQuantity(value, line.unit);
+  if (low === high) return `${line.trace} is ${show(low)} throughout`;
+  const ways = new Set(lines.map(({ values: column }) => way(column)));
+  if (ways.size > 1 || ways.has("turns")) return `${line.trace} lies between ${show(low)} and ${show(high)}`;
+  const [verb, from, to] = ways.has("rises") ? ["rises", low, high] : ["falls", high, low];
+  return lines.length === 1
+    ? `${line.trace} ${verb} from ${show(from)} to ${show(to)}`
+    : `${line.trace} ${verb} in each, between ${show(low)} and ${show(high)}`;
+}
+
+function way(column: readonly (number | null)[]): "rises" | "falls" | "turns" {
+  let rises = true;
+  let falls = true;
+  let before: number | null = null;
+  for (const value of column) {
+    if (value === null) continue;
+    if (before !== null && value < before) rises = false;
+    if (before !== null && value > before) falls = false;
+    before = value;
+  }
+  return rises ? "rises" : falls ? "falls" : "turns";
+}
+
+/** "All 51 points are solved." or what failed, where and how, and what is still to come. */
+export function pointsInWords(set: CurveSet, account: Account): string {
+  const { points, solved, failed, waiting } = account;
+  if (solved === points)
+    return points === 1 ? "Its one point is solved." : `All ${formatCount(points)} points are solved.`;
+  const parts = [`${formatCount(solved)} of ${counted(points, "point")} are solved`];
+  if (failed > 0) {
+    const where = spansInWords(set, account.spans);
+    parts.push(
+      `${formatCount(failed)} failed (${account.outcomes.join(", ")}) at ${where}, and nothing is drawn there`,
+    );
+  }
+  if (waiting > 0) parts.push(`${formatCount(waiting)} are not solved`);
+  return `${parts.join("; ")}.`;
+}
