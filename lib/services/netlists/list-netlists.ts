@@ -25,7 +25,7 @@ export interface NetlistRow {
 
 /**
  * One page of the netlists of the actor's workspace, without archived ones. A search looks at titles, owners and the text of
- * the newest revision. Netlists that never ran come last when sorted by status, ascending.
+ * the newest revision. Sorted by status, those that never ran come last either way.
  */
 export async function listNetlists(
   actor: Actor,
@@ -69,7 +69,7 @@ export async function listNetlists(
     .innerJoin(revision, isNewest)
     .leftJoinLateral(lastRun, sql`true`)
     .where(matches)
-    .orderBy(order(keys[sort]), order(netlist.number))
+    .orderBy(sql`${order(keys[sort])} nulls last`, order(netlist.number))
     .limit(size)
     .offset((page - 1) * size);
   const counted = db
