@@ -3,6 +3,7 @@ import { Complaint } from "./complaint";
 import { endProcess, identityOf } from "./identity";
 
 interface Known {
+  readonly name: string;
   readonly pid: number;
   readonly identity: string;
 }
@@ -27,7 +28,7 @@ export interface Hold {
  * first. `file` is running.json.
  */
 export async function hold(file: string): Promise<Hold> {
-  const me: Known = { pid: process.pid, identity: identityOf(process.pid) ?? "" };
+  const me: Known = { name: "npm start", pid: process.pid, identity: identityOf(process.pid) ?? "" };
   const children = new Map<string, Known>();
   let address: string | null = null;
   const text = () => `${JSON.stringify({ ...me, address, children: [...children.values()] })}\n`;
@@ -45,7 +46,7 @@ export async function hold(file: string): Promise<Hold> {
     setChild(name, pid) {
       const identity = pid === null ? null : identityOf(pid);
       if (pid === null || identity === null) children.delete(name);
-      else children.set(name, { pid, identity });
+      else children.set(name, { name, pid, identity });
       write();
     },
     release: () => rmSync(file, { force: true }),
@@ -66,16 +67,20 @@ async function take(file: string, own: string, text: string): Promise<void> {
     }
     const other = read(file);
     if (other !== null && identityOf(other.pid) === other.identity) throw new Complaint(inUse(other));
-    for (const child of other?.children ?? []) {
-      if (identityOf(child.pid) !== child.identity) continue;
-      console.log(`Ending process ${child.pid}, which an earlier start left behind.`);
-      await endProcess(child.pid, [
-        ["SIGTERM", 5_000],
-        ["SIGKILL", 2_000],
-      ]);
-    }
+    for (const child of [...(other?.children ?? [])].reverse()) await endLeftover(child);
     rmSync(file, { force: true });
   }
+}
+
+/** Ends a program of a start that was killed. To PostgreSQL, SIGTERM would mean to wait for its clients. */
+async function endLeftover({ name, pid, identity }: Known): Promise<void> {
+  if (identityOf(pid) !== identity) return;
+  console.log(`Ending the ${name} (process ${pid}), which an earlier start left behind.`);
+  const first = name === "PostgreSQL" ? "SIGINT" : "SIGTERM";
+  await endProcess(pid, [
+    [first, 8_000],
+    ["SIGKILL", 2_000],
+  ]);
 }
 
 function inUse({ pid, address }: Record): string {

@@ -1,6 +1,7 @@
 import { spawn } from "node:child_process";
 import { closeSync, existsSync, openSync, readFileSync, renameSync, statSync } from "node:fs";
 import { environment, type Surroundings } from "./command";
+import { Complaint } from "./complaint";
 import type { Account } from "./machine";
 
 /** A log larger than this is put aside at the next start, bytes. */
@@ -37,11 +38,34 @@ export interface Service {
   stop(): Promise<void>;
 }
 
+/** Launched and not yet ended, in the order of launching. */
+const live = new Set<Service>();
+
+let closing = false;
+let told: (service: Pick<Service, "name" | "pid">, running: boolean) => void = () => undefined;
+
+/** Has `listener` told of every program that is launched and of its end. */
+export function watchServices(listener: typeof told): void {
+  told = listener;
+}
+
+/** From now on nothing is launched any more: everything is about to be stopped. */
+export function closeServices(): void {
+  closing = true;
+}
+
+/** Stops everything that still runs, the latest first. */
+export async function stopServices(): Promise<void> {
+  closeServices();
+  for (const service of [...live].reverse()) await service.stop();
+}
+
 /**
  * Launches a program in a process group of its own, so that an interrupt at the terminal reaches this process alone and the
  * programs are ended in order.
  */
 export function launch(order: Order): Service {
+  if (closing) throw new Complaint(`The ${order.name} is not started: everything is being stopped.`);
   if (existsSync(order.log) && statSync(order.log).size > LOG_LIMIT)
     renameSync(order.log, `${order.log}.old`);
   const log = openSync(order.log, "a", 0o640);
@@ -58,12 +82,14 @@ export function launch(order: Order): Service {
   const ended = new Promise<string>((resolve) => {
     const end = (how: string) => {
       alive = false;
+      live.delete(service);
+      told(service, false);
       resolve(how);
     };
     child.once("error", (error) => end(error.message));
     child.once("exit", (code, signal) => end(signal ?? `exit code ${code}`));
   });
-  return {
+  const service: Service = {
     name: order.name,
     pid: child.pid ?? null,
     log: order.log,
@@ -78,6 +104,11 @@ export function launch(order: Order): Service {
       }
     },
   };
+  if (alive) {
+    live.add(service);
+    told(service, true);
+  }
+  return service;
 }
 
 function lastLines(log: string, from: number): string {

@@ -1,0 +1,65 @@
+import { existsSync, mkdirSync, rmSync, writeFileSync } from "node:fs";
+import { dirname, join } from "node:path";
+import { build as bundle } from "esbuild";
+import { runPackage } from "./command";
+import { Complaint, fullDisk } from "./complaint";
+import { isStamped, sourceStamp, writeStamp } from "./stamp";
+
+/** Where the built pages and the built worker are put, both within the checkout. */
+export interface Outputs {
+  /** Next.js's folder. */
+  readonly pages: string;
+  /** Folder of main.mjs and solve-thread.mjs. */
+  readonly worker: string;
+}
+
+export const DEMO_OUTPUTS: Outputs = { pages: ".next", worker: ".build/worker" };
+
+/** Builds what the sources have changed since. Resolves with whether anything had to be built. */
+export async function buildAll(outputs: Outputs): Promise<boolean> {
+  const stamp = sourceStamp(process.cwd());
+  const pages = await unlessStamped(join(outputs.pages, "sources.stamp"), stamp, () =>
+    buildPages(outputs.pages),
+  );
+  const worker = await unlessStamped(join(outputs.worker, "sources.stamp"), stamp, () =>
+    buildWorker(outputs.worker),
+  );
+  return pages || worker;
+}
+
+async function unlessStamped(file: string, stamp: string, build: () => Promise<void>): Promise<boolean> {
+  if (isStamped(file, stamp)) return false;
+  rmSync(file, { force: true });
+  await build();
+  writeStamp(file, stamp);
+  return true;
+}
+
+async function buildPages(folder: string): Promise<void> {
+  const env = { NODE_ENV: "production", NEXT_TELEMETRY_DISABLED: "1", SWEEPWRIGHT_DIST: folder };
+  const made = await runPackage("next/dist/bin/next", ["build"], { env, output: "keep" });
+  if (made.code === 0 && existsSync(join(folder, "BUILD_ID"))) return;
+  const log = join(dirname(folder), ".build", "pages.log");
+  mkdirSync(dirname(log), { recursive: true });
+  writeFileSync(log, made.text);
+  const last = made.text.trim().split("\n").slice(-20).join("\n");
+  throw new Complaint(
+    fullDisk(made.text, process.cwd()) ?? `The pages could not be built (${log}):\n${last}`,
+  );
+}
+
+/** One file for the worker and one for the thread that computes; packages stay in node_modules. */
+export async function buildWorker(folder: string): Promise<void> {
+  await bundle({
+    entryPoints: ["worker/main.ts", "worker/solve-thread.ts"],
+    outdir: folder,
+    outExtension: { ".js": ".mjs" },
+    bundle: true,
+    packages: "external",
+    platform: "node",
+    format: "esm",
+    target: "node20",
+    sourcemap: "linked",
+    logLevel: "warning",
+  });
+}
