@@ -18,17 +18,23 @@ export interface Circuit {
   readonly nets: ReadonlyMap<string, number>;
   /** Number of the current of each voltage element and amplifier. */
   readonly branches: ReadonlyMap<string, number>;
+  /** Numbers of the two nets between which each branch current flows, the first branch first. */
+  readonly branchNets: readonly (readonly [number, number])[];
 }
 
 export function numberUnknowns(design: Design): Circuit {
   const unknowns: Unknown[] = design.nets.map((net) => ({ name: `${net}.v`, unit: "V" }));
   const nets = new Map(design.nets.map((net, i) => [net, i]));
+  const drivers = design.elements.filter(({ kind }) => kind === "voltage" || kind === "opamp");
+  const size = unknowns.length + drivers.length;
+  nets.set("ground", size);
   const branches = new Map<string, number>();
-  for (const { name, kind } of design.elements) {
-    if (kind !== "voltage" && kind !== "opamp") continue;
+  const branchNets: [number, number][] = [];
+  for (const { name, kind, pins } of drivers) {
     branches.set(name, unknowns.length);
     unknowns.push({ name: kind === "voltage" ? `${name}.i` : `${name}.out.i`, unit: "A" });
+    const [from, to] = kind === "voltage" ? [pins.left!, pins.right!] : [pins.out!, "ground"];
+    branchNets.push([nets.get(from)!, nets.get(to)!]);
   }
-  nets.set("ground", unknowns.length);
-  return { unknowns, size: unknowns.length, nets, branches };
+  return { unknowns, size, nets, branches, branchNets };
 }

@@ -1,0 +1,51 @@
+import type { Diagnostic } from "@/lib/language/diagnostic";
+import { lineStarts, placeOf } from "@/lib/language/span";
+import { OUTCOMES, RUNGS } from "@/lib/solver/outcome";
+import type { Plan } from "./plan";
+import type { Failure, RunDocument } from "./result";
+
+/** What a run has so far. Columns have one value a point of the plan, NaN where nothing is known yet. */
+export interface RunMatter {
+  readonly plan: Plan;
+  /** The netlist, for the lines and columns of its diagnostics. */
+  readonly text: string;
+  /** One column a trace, in the order of the plan. */
+  readonly traces: readonly Float64Array[];
+  readonly outcome: Float64Array;
+  readonly iterations: Float64Array;
+  readonly rung: Float64Array;
+  readonly failures: readonly Failure[];
+  readonly diagnostics: readonly Diagnostic[];
+}
+
+/**
+ * The run document of what is known: JSON without NaN, null where a point is not solved. A netlist without requirements breaks
+ * none, so its verdict is "holds" as soon as one point is solved and "no data" before; draws are not made yet, so there is one.
+ */
+export function toDocument(matter: RunMatter): RunDocument {
+  const { plan, text, outcome } = matter;
+  const solved = OUTCOMES.indexOf("converged");
+  const starts = lineStarts(text);
+  return {
+    format: "sweepwright-run/1",
+    title: plan.title,
+    verdict: outcome.includes(solved) ? "holds" : "no data",
+    axes: plan.axes,
+    draws: 1,
+    traces: plan.traces.map(({ name, unit }, k) => ({
+      name,
+      unit,
+      values: Array.from(matter.traces[k]!, (value) => (Number.isFinite(value) ? value : null)),
+    })),
+    points: {
+      outcome: Array.from(outcome, (index) => OUTCOMES[index] ?? null),
+      bound: Array.from(outcome, () => null),
+      iterations: Array.from(matter.iterations, (count) => (Number.isNaN(count) ? 0 : count)),
+      rung: Array.from(matter.rung, (index) => RUNGS[index] ?? null),
+    },
+    readings: [],
+    requirements: [],
+    diagnostics: matter.diagnostics.map((one) => ({ ...one, ...placeOf(starts, one.from) })),
+    failures: [...matter.failures].sort((a, b) => a.point - b.point),
+  };
+}

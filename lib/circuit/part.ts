@@ -1,0 +1,67 @@
+import type { Element, Model, NamedValue } from "@/lib/language/ast";
+import type { Circuit } from "./circuit";
+import type { Pattern } from "./pattern";
+import type { State } from "./state";
+import type { PointValues } from "./values";
+
+/** An element as the solver sees it: it reads its figures at a point, and adds its currents and slopes to the system. */
+export interface Part {
+  readonly element: Element;
+  /** Knobs that its figures follow; `temperature` where its law does. */
+  readonly movers: ReadonlySet<string>;
+  /** Reads its figures at a point. */
+  read(values: PointValues): void;
+  /** Adds the slopes that do not depend on the unknowns. */
+  addConstantSlopes(jacobian: Float64Array): void;
+  /** Adds its currents or mismatch to the residual and, where they depend on the unknowns, its slopes. */
+  addTo(state: State): void;
+  /** The current into a pin, A, at the present unknowns. */
+  current(pin: string, state: State): number;
+}
+
+/** A part with junctions, which are linearised at voltages of their own while a step is limited. */
+export interface JunctionPart extends Part {
+  /** Linearises where a solution from nothing starts: a forward junction at 1 µA. */
+  start(): void;
+  /** Linearises at the actual voltages. */
+  settle(state: State): void;
+  /** Linearises where the junction step leads from the last voltages towards the actual ones; true where these are the same. */
+  follow(state: State): boolean;
+  /** How far linearisation and actual voltages stand apart, in units of n·V_T. */
+  apart(state: State): number;
+}
+
+/** Where a cold start linearises a forward junction, A: within three decades of most currents of log-domain work. */
+export const START_CURRENT = 1e-6;
+
+/** A junction step that is shorter, in units of n·V_T, needs no limit: Newton's own error is then below 1 %. */
+export const FREE = 0.1;
+
+/** A limited step that is this close to the whole one, in units of n·V_T, is taken whole. */
+export const NEARLY_WHOLE = 0.01;
+
+/** What a part is made from. */
+export interface Bench {
+  readonly element: Element;
+  readonly model: Model | null;
+  readonly circuit: Circuit;
+  readonly pattern: Pattern;
+  readonly values: PointValues;
+}
+
+export function netAt({ circuit, element }: Bench, pin: string): number {
+  return circuit.nets.get(element.pins[pin]!)!;
+}
+
+/** A parameter's value, null where it is left out. */
+export function optional(params: ReadonlyMap<string, NamedValue>, name: string, values: PointValues) {
+  const value = params.get(name);
+  return value === undefined ? null : values.of(value);
+}
+
+/** The knobs that any of the parameters follow. */
+export function moversOf(params: Iterable<NamedValue>, values: PointValues, ...more: string[]): Set<string> {
+  const movers = new Set(more);
+  for (const { value } of params) for (const mover of values.moversOf(value)) movers.add(mover);
+  return movers;
+}

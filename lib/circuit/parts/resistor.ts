@@ -1,0 +1,54 @@
+import { conductance } from "@/lib/devices/resistor";
+import type { Element } from "@/lib/language/ast";
+import { type Bench, moversOf, netAt, optional, type Part } from "../part";
+import { across, flow, type State } from "../state";
+import { type PointValues, TEMPERATURE } from "../values";
+
+export class ResistorPart implements Part {
+  readonly element: Element;
+  readonly movers: ReadonlySet<string>;
+  private readonly left: number;
+  private readonly right: number;
+  private readonly places: readonly [number, number, number, number];
+  /** Conductance, S. */
+  private g = 0;
+
+  constructor(bench: Bench) {
+    const { element, pattern, values } = bench;
+    this.element = element;
+    const all = [element.value!, ...element.params.values()];
+    this.movers = moversOf(all, values, ...(element.params.has("drift") ? [TEMPERATURE] : []));
+    const left = netAt(bench, "left");
+    const right = netAt(bench, "right");
+    this.left = left;
+    this.right = right;
+    this.places = [
+      pattern.place(left, left),
+      pattern.place(left, right),
+      pattern.place(right, left),
+      pattern.place(right, right),
+    ];
+  }
+
+  read(values: PointValues): void {
+    const { value, params } = this.element;
+    this.g = conductance(values.of(value!), optional(params, "drift", values), values.kelvin);
+  }
+
+  addConstantSlopes(jacobian: Float64Array): void {
+    const [ll, lr, rl, rr] = this.places;
+    jacobian[ll]! += this.g;
+    jacobian[lr]! -= this.g;
+    jacobian[rl]! -= this.g;
+    jacobian[rr]! += this.g;
+  }
+
+  addTo(state: State): void {
+    flow(state, this.left, this.right, this.g * across(state, this.left, this.right));
+  }
+
+  current(pin: string, state: State): number {
+    const i = this.g * across(state, this.left, this.right);
+    return pin === "left" ? i : -i;
+  }
+}

@@ -1,0 +1,151 @@
+import { type BipolarAt, bipolarAt, bipolarLaw } from "@/lib/devices/bipolar";
+import { diodeVoltage } from "@/lib/devices/diode";
+import { junctionStep } from "@/lib/devices/junction-step";
+import type { Element, Model } from "@/lib/language/ast";
+import { ROOM_TEMPERATURE } from "@/lib/units/constants";
+import {
+  type Bench,
+  FREE,
+  type JunctionPart,
+  moversOf,
+  NEARLY_WHOLE,
+  netAt,
+  optional,
+  START_CURRENT,
+} from "../part";
+import { across, flow, type State } from "../state";
+import { type PointValues, TEMPERATURE } from "../values";
+
+/** An npn, or a pnp, which is the same with every voltage and current reversed. */
+export class TransistorPart implements JunctionPart {
+  readonly element: Element;
+  readonly movers: ReadonlySet<string>;
+  private readonly model: Model;
+  /** +1 for an npn, −1 for a pnp. */
+  private readonly sign: 1 | -1;
+  private readonly c: number;
+  private readonly b: number;
+  private readonly e: number;
+  private readonly ground: number;
+  /** Rows c, b, e by columns c, b, e. */
+  private readonly places: readonly number[];
+  private at: BipolarAt = {
+    Is: 0,
+    eta: 1,
+    Rs: 0,
+    forwardBase: 0,
+    reverseBase: 0,
+    forwardEarly: 0,
+    reverseEarly: 0,
+  };
+  /** Voltages at which it is linearised, V, and its law there. */
+  private vbe = 0;
+  private vbc = 0;
+  private vce = 0;
+  private readonly law = { ic: 0, ib: 0, icF: 0, icR: 0, ibF: 0, ibR: 0 };
+
+  constructor(bench: Bench) {
+    const { element, circuit, pattern, values } = bench;
+    this.element = element;
+    this.model = bench.model!;
+    this.sign = element.kind === "npn" ? 1 : -1;
+    this.movers = moversOf(this.model.params.values(), values, TEMPERATURE);
+    this.c = netAt(bench, "c");
+    this.b = netAt(bench, "b");
+    this.e = netAt(bench, "e");
+    this.ground = circuit.size;
+    const nets = [this.c, this.b, this.e];
+    this.places = nets.flatMap((row) => nets.map((column) => pattern.place(row, column)));
+  }
+
+  read(values: PointValues): void {
+    const figure = (name: string) => optional(this.model.params, name, values);
+    const terms = {
+      Is: figure("Is")!,
+      n: figure("n") ?? 1,
+      Eg: figure("Eg"),
+      x: figure("x"),
+      T0: figure("T0") ?? ROOM_TEMPERATURE,
+      beta_f: figure("beta_f"),
+      beta_r: figure("beta_r"),
+      Va_f: figure("Va_f"),
+      Va_r: figure("Va_r"),
+      beta_power: figure("beta_power"),
+    };
+    this.at = bipolarAt(terms, values.kelvin);
+  }
+
+  start(): void {
+    this.vbe = diodeVoltage(this.at, START_CURRENT);
+    this.vbc = 0;
+    this.vce = this.vbe;
+  }
+
+  settle(state: State): void {
+    this.vbe = this.sign * across(state, this.b, this.e);
+    this.vbc = this.sign * across(state, this.b, this.c);
+    this.vce = this.sign * across(state, this.c, this.e);
+  }
+
+  follow(state: State): boolean {
+    const { at, vbe, vbc } = this;
+    this.settle(state);
+    const free = FREE * at.eta;
+    if (Math.abs(this.vbe - vbe) <= free && Math.abs(this.vbc - vbc) <= free) return true;
+    const nextBe = this.stepped(vbe, this.vbe);
+    const nextBc = this.stepped(vbc, this.vbc);
+    const near = NEARLY_WHOLE * at.eta;
+    if (Math.abs(nextBe - this.vbe) <= near && Math.abs(nextBc - this.vbc) <= near) return true;
+    this.vbe = nextBe;
+    this.vbc = nextBc;
+    this.vce = nextBe - nextBc;
+    return false;
+  }
+
+  /** The junction step of a pure exponential of the transistor's Is and n·V_T. */
+  private stepped(v: number, target: number): number {
+    const { Is, eta } = this.at;
+    const rise = Math.exp(v / eta);
+    return junctionStep(this.at, v, Is * (rise - 1), (Is / eta) * rise, target);
+  }
+
+  apart(state: State): number {
+    const be = Math.abs(this.sign * across(state, this.b, this.e) - this.vbe);
+    const bc = Math.abs(this.sign * across(state, this.b, this.c) - this.vbc);
+    return Math.max(be, bc) / this.at.eta;
+  }
+
+  addConstantSlopes(): void {}
+
+  addTo(state: State): void {
+    const { c, b, e, ground, sign, law, places } = this;
+    bipolarLaw(this.at, this.vbe, this.vbc, this.vce, law);
+    const { icF, icR, ibF, ibR } = law;
+    const be = sign * across(state, b, e) - this.vbe;
+    const bc = sign * across(state, b, c) - this.vbc;
+    const ic = sign * (law.ic + icF * be + icR * bc);
+    const ib = sign * (law.ib + ibF * be + ibR * bc);
+    flow(state, c, ground, ic);
+    flow(state, b, ground, ib);
+    flow(state, e, ground, -ic - ib);
+    const { jacobian } = state;
+    jacobian[places[0]!]! -= icR;
+    jacobian[places[1]!]! += icF + icR;
+    jacobian[places[2]!]! -= icF;
+    jacobian[places[3]!]! -= ibR;
+    jacobian[places[4]!]! += ibF + ibR;
+    jacobian[places[5]!]! -= ibF;
+    jacobian[places[6]!]! += icR + ibR;
+    jacobian[places[7]!]! -= icF + icR + ibF + ibR;
+    jacobian[places[8]!]! += icF + ibF;
+  }
+
+  current(pin: string, state: State): number {
+    const law = { ic: 0, ib: 0, icF: 0, icR: 0, ibF: 0, ibR: 0 };
+    const { sign, b, c, e } = this;
+    const vbe = sign * across(state, b, e);
+    const vbc = sign * across(state, b, c);
+    bipolarLaw(this.at, vbe, vbc, sign * across(state, c, e), law);
+    return sign * (pin === "c" ? law.ic : pin === "b" ? law.ib : -law.ic - law.ib);
+  }
+}

@@ -1,0 +1,125 @@
+import type { Design, Element, Signal } from "@/lib/language/ast";
+import { KINDS } from "@/lib/language/kinds";
+import type { Circuit } from "./circuit";
+import type { Bench, JunctionPart, Part } from "./part";
+import { CurrentPart } from "./parts/current";
+import { DiodePart } from "./parts/diode";
+import { OpampPart } from "./parts/opamp";
+import { ResistorPart } from "./parts/resistor";
+import { TransistorPart } from "./parts/transistor";
+import { VoltagePart } from "./parts/voltage";
+import { Pattern } from "./pattern";
+import { across, newState, type State } from "./state";
+import { PointValues } from "./values";
+
+/**
+ * The modified nodal system of a design (Ho, Ruehli and Brennan, IEEE Trans. CAS 22, 1975): F(x) = G·x + s + Σ a_k·φ_k(b_kᵀx) = 0,
+ * one row a net (currents leaving it, A) and one a branch law (V). It holds the figures of one point and the present unknowns.
+ */
+export class System {
+  readonly values: PointValues;
+  readonly pattern: Pattern;
+  readonly state: State;
+  readonly parts: readonly Part[];
+  readonly junctions: readonly JunctionPart[];
+  private readonly byName: ReadonlyMap<string, Part>;
+  private readonly constantSlopes: Float64Array;
+
+  constructor(
+    design: Design,
+    readonly circuit: Circuit,
+  ) {
+    this.values = new PointValues(design);
+    this.pattern = new Pattern(circuit.size);
+    const models = new Map(design.models.map((model) => [model.name, model]));
+    this.parts = design.elements.map((element) => {
+      const model = element.model === null ? null : models.get(element.model)!;
+      return partOf(element, { element, model, circuit, pattern: this.pattern, values: this.values });
+    });
+    this.junctions = this.parts.filter(isJunction);
+    this.byName = new Map(this.parts.map((part) => [part.element.name, part]));
+    const places = this.pattern.rows.length;
+    this.state = newState(circuit.size, places);
+    this.constantSlopes = new Float64Array(places);
+    for (const part of this.parts) part.read(this.values);
+    this.gatherConstantSlopes();
+  }
+
+  /** Sets knobs to a point; only the parts that follow a changed one read their figures again. */
+  turn(knobs: readonly (readonly [name: string, value: number])[]): void {
+    const changed = knobs.filter(([name, value]) => this.values.knob(name) !== value);
+    if (changed.length === 0) return;
+    for (const [name, value] of changed) this.values.turn(name, value);
+    for (const part of this.parts) {
+      if (changed.some(([name]) => part.movers.has(name))) part.read(this.values);
+    }
+    this.gatherConstantSlopes();
+  }
+
+  private gatherConstantSlopes(): void {
+    this.constantSlopes.fill(0);
+    for (const part of this.parts) part.addConstantSlopes(this.constantSlopes);
+  }
+
+  /** Residual, scale and Jacobian at the present unknowns and linearisation. */
+  assemble(): void {
+    const { state, parts } = this;
+    state.residual.fill(0);
+    state.scale.fill(0);
+    state.jacobian.set(this.constantSlopes);
+    for (let k = 0; k < parts.length; k++) parts[k]!.addTo(state);
+  }
+
+  /** All unknowns at 0, junctions where a cold start wants them. */
+  startCold(): void {
+    this.state.x.fill(0);
+    this.state.low.fill(0);
+    for (const junction of this.junctions) junction.start();
+  }
+
+  /** Linearises every junction at its actual voltage. */
+  settle(): void {
+    for (const junction of this.junctions) junction.settle(this.state);
+  }
+
+  /** Takes junction steps towards the actual voltages; true where all linearisation voltages equal the actual ones. */
+  follow(): boolean {
+    let exact = true;
+    for (const junction of this.junctions) if (!junction.follow(this.state)) exact = false;
+    return exact;
+  }
+
+  /** The value of a signal at the present unknowns: V, A or W. An element's voltage is v_left − v_right. */
+  signal(signal: Signal): number {
+    if (signal.of === "net") return this.state.x[this.circuit.nets.get(signal.net)!]!;
+    const part = this.byName.get(signal.element)!;
+    if (signal.of === "pin") return part.current(signal.pin, this.state);
+    const [left, right] = KINDS[part.element.kind].pins as [string, string];
+    const net = (pin: string) => this.circuit.nets.get(part.element.pins[pin]!)!;
+    if (signal.quantity === "i") return part.current(left, this.state);
+    const drop = across(this.state, net(left), net(right));
+    return signal.quantity === "v" ? drop : drop * part.current(left, this.state);
+  }
+}
+
+function isJunction(part: Part): part is JunctionPart {
+  return "settle" in part;
+}
+
+function partOf({ kind }: Element, bench: Bench): Part {
+  switch (kind) {
+    case "resistor":
+      return new ResistorPart(bench);
+    case "voltage":
+      return new VoltagePart(bench);
+    case "current":
+      return new CurrentPart(bench);
+    case "diode":
+      return new DiodePart(bench);
+    case "npn":
+    case "pnp":
+      return new TransistorPart(bench);
+    case "opamp":
+      return new OpampPart(bench);
+  }
+}

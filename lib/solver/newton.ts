@@ -1,0 +1,57 @@
+import { advance } from "@/lib/circuit/state";
+import type { System } from "@/lib/circuit/system";
+import { isAccepted } from "./acceptance";
+import type { LinearSolver } from "./linear";
+import type { OutcomeKind } from "./outcome";
+
+/** Steps that follow acceptance, with the Jacobian at hand, so that closed forms agree to the last digits. */
+const POLISHING = 2;
+
+/** What one run of Newton's method came to; `iterations` counts every step taken or weighed. */
+export interface Attempt {
+  readonly kind: OutcomeKind;
+  readonly iterations: number;
+}
+
+/** A system with its linear solver and the array its steps are written to. */
+export interface Bench {
+  readonly system: System;
+  readonly linear: LinearSolver;
+  readonly step: Float64Array;
+}
+
+/**
+ * Newton's method from the present unknowns with the junction step, J·d = −F(x), x ← x + d, at the present share of the sources.
+ * `exact` tells whether every junction is linearised at its actual voltage now. Ends with the unknowns accepted and polished, or
+ * as they were when it failed. At most `most` iterations.
+ */
+export function newton(bench: Bench, exact: boolean, most: number): Attempt {
+  const { system, linear, step } = bench;
+  const { state, circuit } = system;
+  let isExact = exact;
+  for (let iterations = 1; iterations <= most; iterations++) {
+    system.assemble();
+    if (!linear.solve(state.jacobian, state.residual, step)) {
+      const areNumbers = state.residual.every(Number.isFinite) && state.jacobian.every(Number.isFinite);
+      return { kind: areNumbers ? "singular" : "not finite", iterations };
+    }
+    if (isExact && isAccepted(circuit, state, step)) {
+      const polished = polish(bench);
+      if (polished > 0) return { kind: "converged", iterations: iterations + polished };
+    } else advance(state, step);
+    isExact = system.follow();
+  }
+  return { kind: "iteration limit", iterations: most };
+}
+
+/** Takes the accepted step and one more; the count of steps, or 0 where the unknowns then fail the test that they passed. */
+function polish({ system, linear, step }: Bench): number {
+  const { state, circuit } = system;
+  for (let n = 0; n < POLISHING; n++) {
+    advance(state, step);
+    system.settle();
+    system.assemble();
+    linear.solveAgain(state.residual, step);
+  }
+  return isAccepted(circuit, state, step) ? POLISHING : 0;
+}
