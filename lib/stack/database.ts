@@ -19,7 +19,7 @@ export interface Database {
 }
 
 /** Password of the demo accounts, unless SWEEPWRIGHT_DEMO_PASSWORD says another at the first start. */
-const DEMO_PASSWORD = "log-ratio-bench-7";
+export const DEMO_PASSWORD = "log-ratio-bench-7";
 /** What a first start puts into the data folder, with room to work, MiB. */
 const SPACE = 300;
 

@@ -25,9 +25,9 @@ export interface Hold {
 
 /**
  * Takes a data folder for this process alone. Complains when a live process holds it; what a killed one left behind is ended
- * first. `file` is running.json.
+ * first. `file` is running.json, `what` is told to whoever comes second.
  */
-export async function hold(file: string): Promise<Hold> {
+export async function hold(file: string, what = "Sweepwright"): Promise<Hold> {
   const me: Known = { name: "npm start", pid: process.pid, identity: identityOf(process.pid) ?? "" };
   const children = new Map<string, Known>();
   let address: string | null = null;
@@ -37,7 +37,7 @@ export async function hold(file: string): Promise<Hold> {
     writeFileSync(own, text(), { mode: 0o644 });
     renameSync(own, file);
   };
-  await take(file, own, text());
+  await take(file, own, text(), what);
   return {
     setAddress(found) {
       address = found;
@@ -54,7 +54,7 @@ export async function hold(file: string): Promise<Hold> {
 }
 
 /** Two starts at once: a link is made by one of them only. */
-async function take(file: string, own: string, text: string): Promise<void> {
+async function take(file: string, own: string, text: string, what: string): Promise<void> {
   for (;;) {
     writeFileSync(own, text, { mode: 0o644 });
     try {
@@ -66,7 +66,7 @@ async function take(file: string, own: string, text: string): Promise<void> {
       rmSync(own, { force: true });
     }
     const other = read(file);
-    if (other !== null && identityOf(other.pid) === other.identity) throw new Complaint(inUse(other));
+    if (other !== null && identityOf(other.pid) === other.identity) throw new Complaint(inUse(other, what));
     for (const child of [...(other?.children ?? [])].reverse()) await endLeftover(child);
     rmSync(file, { force: true });
   }
@@ -83,10 +83,9 @@ async function endLeftover({ name, pid, identity }: Known): Promise<void> {
   ]);
 }
 
-function inUse({ pid, address }: Record): string {
-  const where =
-    address === null ? "is starting from this folder" : `already runs from this folder, at ${address}`;
-  return `Sweepwright ${where} (process ${pid}). Use that one, or stop it first: kill ${pid}`;
+function inUse({ pid, address }: Record, what: string): string {
+  const where = address === null ? "" : `, at ${address}`;
+  return `${what} already runs from this folder${where} (process ${pid}). Use that one, or stop it first: kill ${pid}`;
 }
 
 function read(file: string): Record | null {

@@ -4,7 +4,7 @@ import { countReport, single, type Tally } from "./tally";
 
 /** Where a test run keeps what it builds and reports; git does not see it. */
 export const TEST_FOLDER = ".test";
-export const TEST_DIST = `${TEST_FOLDER}/next`;
+const TEST_DIST = `${TEST_FOLDER}/next`;
 const TEST_TSCONFIG = `${TEST_FOLDER}/tsconfig.json`;
 
 type Environment = Readonly<Record<string, string>>;

@@ -1,0 +1,103 @@
+import { mkdirSync } from "node:fs";
+import { AxeBuilder } from "@axe-core/playwright";
+import { type Browser, type BrowserContextOptions, chromium, type Page } from "playwright-core";
+import { expect } from "vitest";
+import { DEMO_PEOPLE } from "@/db/seed";
+
+/** Debian's browser; CHROME_PATH names another one. */
+const BROWSER = process.env.CHROME_PATH || "/usr/bin/chromium";
+const FLAGS = [
+  "--no-sandbox",
+  "--disable-gpu",
+  "--disable-quic",
+  "--no-first-run",
+  "--disable-background-networking",
+  "--disable-component-update",
+  "--disable-sync",
+];
+
+/** Where pictures of failed or shown pages go; git does not see it. */
+const PICTURES = ".test/pictures";
+
+export const WORKSPACE = "north-bench";
+
+/** A person of the demo by their first name. */
+export type Who = "vera" | "erik" | "rosa" | "adam";
+
+/** The service under test. `npm test` starts one; a demo that runs serves as well: BASE_URL=http://localhost:4300 */
+export function baseUrl(): string {
+  const url = process.env.BASE_URL;
+  if (!url)
+    throw new Error("BASE_URL is missing. Run `npm test -- --only e2e`, or name a running demo in BASE_URL.");
+  return url;
+}
+
+export function launchBrowser(): Promise<Browser> {
+  return chromium.launch({ executablePath: BROWSER, args: FLAGS });
+}
+
+/** A page and what went wrong in it. */
+export interface Opened {
+  readonly page: Page;
+  /** Errors thrown in the page and errors on its console, such as a breach of the content policy. */
+  readonly faults: string[];
+}
+
+/** A page with cookies of its own. `options.colorScheme` and `options.viewport` choose how it looks. */
+export async function openPage(browser: Browser, options: BrowserContextOptions = {}): Promise<Opened> {
+  const context = await browser.newContext({
+    baseURL: baseUrl(),
+    viewport: { width: 1280, height: 800 },
+    ...options,
+  });
+  const page = await context.newPage();
+  page.setDefaultTimeout(20_000);
+  const faults: string[] = [];
+  page.on("pageerror", (error) => faults.push(error.message));
+  page.on("console", (message) => {
+    if (message.type() === "error") faults.push(message.text());
+  });
+  return { page, faults };
+}
+
+/** Signs in by the form and waits for the workspace's home. */
+export async function signIn(page: Page, who: Who): Promise<void> {
+  await page.goto("/sign-in");
+  await page.getByLabel("E-mail").fill(emailOf(who));
+  await page.getByLabel("Password").fill(process.env.SWEEPWRIGHT_DEMO_PASSWORD || "log-ratio-bench-7");
+  await page.getByRole("button", { name: "Sign in" }).click();
+  await page.waitForURL(`**/${WORKSPACE}`);
+}
+
+function emailOf(who: Who): string {
+  const person = DEMO_PEOPLE.find(({ email }) => email.startsWith(`${who}.`));
+  if (person === undefined) throw new Error(`Nobody in the demo is called ${who}.`);
+  return person.email;
+}
+
+/** Keeps a picture of the whole page in .test/pictures/NAME.png; its path. */
+export async function picture(page: Page, name: string): Promise<string> {
+  mkdirSync(PICTURES, { recursive: true });
+  const path = `${PICTURES}/${name}.png`;
+  await page.screenshot({ path, fullPage: true });
+  return path;
+}
+
+/** Fails with every breach of WCAG 2.1 A and AA that axe finds, each with its places. `leaveOut` names parts made by others. */
+export async function expectAccessible(page: Page, leaveOut: readonly string[] = []): Promise<void> {
+  let axe = new AxeBuilder({ page }).withTags(["wcag2a", "wcag2aa", "wcag21a", "wcag21aa"]);
+  for (const selector of leaveOut) axe = axe.exclude(selector);
+  const { violations } = await axe.analyze();
+  const breaches = violations.map(({ id, help, nodes }) => ({
+    id,
+    help,
+    at: nodes.map((node) => node.html),
+  }));
+  expect(breaches).toEqual([]);
+}
+
+/** Fails when the page is wider than its window, as it must not be on a phone. */
+export async function expectNoSidewaysScroll(page: Page): Promise<void> {
+  const overflow = await page.evaluate(() => document.documentElement.scrollWidth - window.innerWidth);
+  expect(overflow).toBeLessThanOrEqual(0);
+}
