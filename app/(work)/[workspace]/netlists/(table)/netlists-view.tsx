@@ -5,12 +5,12 @@ import { useSearchParams } from "next/navigation";
 import { Button } from "@/app/_components/ui/button";
 import { formatCount } from "@/app/_components/ui/count";
 import { PageHeader } from "@/app/_components/ui/page-header";
+import { Pager } from "@/app/_components/ui/pager";
+import { SearchBox } from "@/app/_components/ui/search-box";
 import { EmptyState, FailedState } from "@/app/_components/ui/states";
 import { CreateNetlist } from "./create-netlist";
 import { type ListState, PAGE_SIZE, readListState, writeListState } from "./list-state";
 import { NetlistTable } from "./netlist-table";
-import { Pager } from "./pager";
-import { SearchBox } from "./search-box";
 import { UploadArea } from "./upload-area";
 import { type Found, useNetlists } from "./use-netlists";
 
@@ -56,7 +56,7 @@ export function NetlistsView({ workspace, mayWrite, first }: Props) {
           />
           <div className="grid gap-4 px-4 py-4 md:px-6">
             {uploadReport}
-            <SearchBox value={state.query} onChange={(query) => show({ query })} />
+            <SearchBox label="Search netlists" value={state.query} onChange={(query) => show({ query })} />
             {error !== null && (
               <FailedState
                 title="The list could not be brought up to date"
@@ -75,7 +75,9 @@ export function NetlistsView({ workspace, mayWrite, first }: Props) {
                 onSort={(sort, direction) => show({ sort, direction })}
               />
             )}
-            {total > PAGE_SIZE && <Pager page={state.page} total={total} onPage={(page) => show({ page })} />}
+            {total > PAGE_SIZE && (
+              <Pager page={state.page} size={PAGE_SIZE} total={total} onPage={(page) => show({ page })} />
+            )}
             {data !== undefined && total === 0 && searching && (
               <EmptyState
                 title={`No netlist matches “${state.query}”`}

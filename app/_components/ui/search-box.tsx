@@ -1,13 +1,15 @@
 "use client";
 
 import { useEffect, useRef, useState } from "react";
-import { INPUT_CLASS } from "@/app/_components/ui/field";
+import { INPUT_CLASS } from "./field";
 
 /** Hands on what is typed once the typing rests for a fifth of a second; Escape empties the box. */
 export function SearchBox({
+  label,
   value,
   onChange,
 }: {
+  readonly label: string;
   readonly value: string;
   readonly onChange: (query: string) => void;
 }) {
@@ -37,8 +39,8 @@ export function SearchBox({
     <search className="max-w-md">
       <input
         type="search"
-        aria-label="Search netlists"
-        placeholder="Search netlists"
+        aria-label={label}
+        placeholder={label}
         value={text}
         maxLength={200}
         onChange={(event) => type(event.target.value)}

@@ -1,24 +1,27 @@
 "use client";
 
-import { Button } from "@/app/_components/ui/button";
-import { formatCount } from "@/app/_components/ui/count";
-import { PAGE_SIZE } from "./list-state";
+import { Button } from "./button";
+import { formatCount } from "./count";
 
-/** Which rows stand on this page, and the way to the others. `page` counts from 1. */
+/** Which rows stand on this page of `size`, and the way to the others. `page` counts from 1; `label` names the row of buttons. */
 export function Pager({
+  label = "Pages of the table",
   page,
+  size,
   total,
   onPage,
 }: {
+  readonly label?: string;
   readonly page: number;
+  readonly size: number;
   readonly total: number;
   readonly onPage: (page: number) => void;
 }) {
-  const pages = Math.max(1, Math.ceil(total / PAGE_SIZE));
-  const from = Math.min(total, (page - 1) * PAGE_SIZE + 1);
-  const to = Math.min(total, page * PAGE_SIZE);
+  const pages = Math.max(1, Math.ceil(total / size));
+  const from = Math.min(total, (page - 1) * size + 1);
+  const to = Math.min(total, page * size);
   return (
-    <nav aria-label="Pages of the table" className="flex flex-wrap items-center gap-3">
+    <nav aria-label={label} className="flex flex-wrap items-center gap-3">
       <p className="grow text-quiet text-sm" aria-live="polite">
         {formatCount(from)}–{formatCount(to)} of {formatCount(total)}
       </p>
