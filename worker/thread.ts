@@ -1,6 +1,4 @@
-import { createRequire } from "node:module";
-import { pathToFileURL } from "node:url";
-import { Worker, type WorkerOptions } from "node:worker_threads";
+import { type ResourceLimits, Worker } from "node:worker_threads";
 import type { StoredShard } from "@/lib/services/chunks/columns";
 import type { Reply, Task } from "./messages";
 
@@ -19,16 +17,15 @@ export interface Limits {
   readonly memory: number;
 }
 
-/** The thread's file lies beside this one: bundled in production, TypeScript in the tests. */
-function entry(): { file: URL; options: WorkerOptions } {
+/** The thread's program lies beside this file: bundled in production, TypeScript in development and in tests. */
+function spawn(resourceLimits: ResourceLimits): Worker {
   if (import.meta.url.endsWith(".mjs")) {
-    return { file: new URL("./solve-thread.mjs", import.meta.url), options: { execArgv: [] } };
+    return new Worker(new URL("./solve-thread.mjs", import.meta.url), { execArgv: [], resourceLimits });
   }
-  const loader = pathToFileURL(createRequire(import.meta.url).resolve("tsx")).href;
-  return {
-    file: new URL("./solve-thread.ts", import.meta.url),
-    options: { execArgv: ["--import", loader] },
-  };
+  const file = new URL("./solve-thread.ts", import.meta.url).href;
+  // A thread does not inherit the loader of TypeScript, so it registers its own first; found from the current folder.
+  const program = `import("tsx/esm/api").then(({ register }) => { register(); return import("${file}"); })`;
+  return new Worker(program, { eval: true, execArgv: [], resourceLimits });
 }
 
 /** One computing thread. It takes one task at a time; after anything but "solved" or "broken" it is gone. */
@@ -41,11 +38,7 @@ export class Thread {
   #gone = false;
 
   constructor(private readonly limits: Limits) {
-    const { file, options } = entry();
-    this.#worker = new Worker(file, {
-      ...options,
-      resourceLimits: { maxOldGenerationSizeMb: limits.memory },
-    });
+    this.#worker = spawn({ maxOldGenerationSizeMb: limits.memory });
     this.ready = new Promise((resolve, reject) => {
       this.#onReply = () => resolve();
       this.#onGone = (ended) =>

@@ -4,6 +4,7 @@ import { database } from "@/db/client";
 import { chunk } from "@/db/schema/chunk";
 import { run } from "@/db/schema/run";
 import { shard } from "@/db/schema/shard";
+import { enqueueShards } from "@/lib/queue/producer";
 
 export type RunRecord = typeof run.$inferSelect;
 
@@ -15,6 +16,11 @@ export async function runRow(runId: string): Promise<RunRecord> {
 
 export async function shardRows(runId: string): Promise<(typeof shard.$inferSelect)[]> {
   return database().select().from(shard).where(eq(shard.runId, runId)).orderBy(asc(shard.index));
+}
+
+/** Puts all shards of a run on the queue. */
+export async function enqueue(runId: string): Promise<void> {
+  await enqueueShards((await shardRows(runId)).map(({ index }) => ({ runId, index })));
 }
 
 /** Reads the run until `enough` holds; throws when it does not within `seconds`. The database may be away meanwhile. */

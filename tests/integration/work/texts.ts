@@ -1,4 +1,7 @@
-/** A transistor log converter (invented), swept over current and temperature: `decadePoints` sets how long it takes. */
+/**
+ * A transistor log converter (invented), swept over six decades of current and ten temperatures: 60 points for each of
+ * `decadePoints`, and 10 more.
+ */
 export function longText(decadePoints: number): string {
   return `title "Log converter"
 knob I_in = 1 µA
@@ -13,3 +16,6 @@ sweep temperature over -20 °C, -10 °C, 0 °C, 10 °C, 20 °C, 25 °C, 30 °C, 
 show v = out.v
 `;
 }
+
+/** Some hundred thousand points in more than twenty shards: long enough to be disturbed in the middle. */
+export const LONG_TEXT = longText(2_000);
