@@ -1,0 +1,67 @@
+import { and, asc, eq } from "drizzle-orm";
+import { database } from "@/db/client";
+import { revision } from "@/db/schema/revision";
+import { run } from "@/db/schema/run";
+import { shard } from "@/db/schema/shard";
+import { compile } from "@/lib/analyses/compile";
+import { toDocument } from "@/lib/analyses/document";
+import type { RunDocument } from "@/lib/analyses/result";
+import type { Actor } from "@/lib/permissions/actor";
+import { authorize } from "@/lib/permissions/authorize";
+import { traceColumn } from "../chunks/columns";
+import { readColumns } from "../chunks/read-columns";
+import { findRun, type RunRecord } from "./find-run";
+
+/** Names the form of the document; raised with every change of it, so that readers drop what they kept. */
+const FORM = "1";
+
+/** The version of a run's document, as an entity tag: it changes with every event of the run. */
+export async function getRunVersion(actor: Actor, id: string): Promise<string> {
+  const asked = await findRun(database(), actor, id);
+  authorize(actor, "run.read", asked);
+  return versionOf(asked);
+}
+
+/**
+ * The run document, with what is solved so far. `etag` is weak and never newer than the document: it is read first, and results
+ * are stored together with the event that tells of them.
+ */
+export async function getRunDocument(
+  actor: Actor,
+  id: string,
+): Promise<{ document: RunDocument; etag: string }> {
+  const db = database();
+  const asked = await findRun(db, actor, id);
+  authorize(actor, "run.read", asked);
+  const [of] = await db
+    .select({ plan: run.plan, text: revision.text })
+    .from(run)
+    .innerJoin(revision, and(eq(revision.netlistId, run.netlistId), eq(revision.number, run.revisionNumber)))
+    .where(eq(run.id, asked.id));
+  const { plan, text } = of!;
+  const traces = plan.traces.map((_, i) => traceColumn(i));
+  const [columns, shards] = await Promise.all([
+    readColumns(asked.id, asked.points, [...traces, "outcome", "iterations", "rung"]),
+    db
+      .select({ failures: shard.failures })
+      .from(shard)
+      .where(eq(shard.runId, asked.id))
+      .orderBy(asc(shard.index)),
+  ]);
+  const column = (name: string) => columns.get(name) ?? new Float64Array(asked.points).fill(Number.NaN);
+  const document = toDocument({
+    plan: { ...plan, title: asked.title },
+    text,
+    traces: traces.map(column),
+    outcome: column("outcome"),
+    iterations: column("iterations"),
+    rung: column("rung"),
+    failures: shards.flatMap(({ failures }) => failures),
+    diagnostics: compile(text).diagnostics,
+  });
+  return { document, etag: versionOf(asked) };
+}
+
+function versionOf({ id, lastEvent }: RunRecord): string {
+  return `W/"${FORM}-${id}-${lastEvent}"`;
+}
