@@ -43,5 +43,5 @@ function spoken(set: CurveSet, storeys: readonly StoreyView[], { family, place }
       }),
   );
   const where = `${set.axis.knob} ${formatKnob(set.axis, set.x[place]!)}${label === "" ? "" : `, ${label}`}`;
-  return `${where}: ${values.join(", ")}. Point ${pointAt(set, family, place) + 1}.`;
+  return `${where}: ${values.join(", ")}. Point ${pointAt(set, family, place)}.`;
 }

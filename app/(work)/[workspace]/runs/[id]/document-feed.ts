@@ -1,0 +1,67 @@
+import type { RunDocument } from "@/lib/analyses/result";
+import { fetchDocument } from "./fetch-run";
+
+interface Listener {
+  readonly onDocument: (document: RunDocument) => void;
+  readonly onProblem: (problem: string | null) => void;
+}
+
+/** Ms between two fetches at least, and how many times as long as a fetch took the next one waits: large documents come seldom. */
+const REST = 120;
+const PATIENCE = 3;
+
+/** Keeps the run document current while results come in: one fetch at a time, none that nobody asked for, and never a queue of them. */
+export class DocumentFeed {
+  #busy = false;
+  #wanted = false;
+  #rest = REST;
+  #timer: ReturnType<typeof setTimeout> | undefined;
+  #closed = false;
+  #started = false;
+
+  /** `etag` is the version at hand already; null for none. */
+  constructor(
+    private readonly id: string,
+    private etag: string | null,
+    private readonly listener: Listener,
+  ) {}
+
+  /** Fetches now, or as soon as the present fetch and the rest after it are over. */
+  want(): void {
+    if (this.#closed) return;
+    if (this.#busy) this.#wanted = true;
+    else void this.#fetch();
+  }
+
+  close(): void {
+    this.#closed = true;
+    clearTimeout(this.#timer);
+  }
+
+  async #fetch(): Promise<void> {
+    this.#busy = true;
+    this.#wanted = false;
+    const began = performance.now();
+    try {
+      const answer = await fetchDocument(this.id, this.etag);
+      if (this.#closed) return;
+      if (answer !== null) {
+        this.etag = answer.etag;
+        this.#started ||= answer.document.points.outcome.some((outcome) => outcome !== null);
+        this.listener.onDocument(answer.document);
+      }
+      this.listener.onProblem(null);
+      // Nothing may hold back the first points; what follows them can wait its turn.
+      this.#rest = this.#started ? Math.max(REST, PATIENCE * (performance.now() - began)) : 0;
+    } catch (error) {
+      if (this.#closed) return;
+      this.listener.onProblem(error instanceof Error ? error.message : String(error));
+      this.#wanted = true;
+      this.#rest = 3000;
+    }
+    this.#timer = setTimeout(() => {
+      this.#busy = false;
+      if (this.#wanted) this.want();
+    }, this.#rest);
+  }
+}

@@ -1,0 +1,60 @@
+import type { Metadata } from "next";
+import { cache } from "react";
+import { actorFor } from "@/lib/auth/actor";
+import { can } from "@/lib/permissions/can";
+import { findVoltageSpan } from "@/lib/services/runs/find-voltage-span";
+import { getPoint } from "@/lib/services/runs/get-point";
+import { getRun } from "@/lib/services/runs/get-run";
+import { getRunDocument } from "@/lib/services/runs/get-run-document";
+import { answered } from "../../../answered";
+import { readPageState } from "./page-state";
+import { RunView } from "./run-view";
+
+/** Numbers in a document that is sent with the page; a larger one is fetched by the page once it stands. */
+const SENT_ALONG = 20_000;
+
+interface Props {
+  readonly params: Promise<{ readonly workspace: string; readonly id: string }>;
+  readonly searchParams: Promise<Record<string, string | string[] | undefined>>;
+}
+
+const runFor = cache(async (workspace: string, id: string) => {
+  const path = `/${workspace}/runs/${id}`;
+  const actor = await answered(actorFor(workspace), path);
+  return { actor, run: await answered(getRun(actor, id), path) };
+});
+
+export async function generateMetadata({ params }: Props): Promise<Metadata> {
+  const { workspace, id } = await params;
+  const { run } = await runFor(workspace, id);
+  return { title: `${run.title}, run ${run.number}` };
+}
+
+export default async function RunPage({ params, searchParams }: Props) {
+  const { workspace, id } = await params;
+  const { actor, run } = await runFor(workspace, id);
+  const search = new URLSearchParams();
+  for (const [name, value] of Object.entries(await searchParams)) {
+    for (const one of [value ?? []].flat()) search.append(name, one);
+  }
+  const state = readPageState(search);
+  const small = run.points * (run.plan.traces.length + 3) <= SENT_ALONG;
+  const [found, point, span] = await Promise.all([
+    small ? getRunDocument(actor, id) : null,
+    state.point === null || state.point >= run.points ? null : getPoint(actor, id, state.point),
+    findVoltageSpan(actor, id),
+  ]);
+  return (
+    <RunView
+      key={run.id}
+      workspace={workspace}
+      first={run}
+      found={found}
+      point={point}
+      span={span}
+      search={search.toString()}
+      mayStart={can(actor, "run.start", { workspaceId: actor.workspaceId })}
+      mayCancel={can(actor, "run.cancel", { workspaceId: actor.workspaceId })}
+    />
+  );
+}

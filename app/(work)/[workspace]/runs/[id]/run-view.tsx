@@ -1,0 +1,139 @@
+"use client";
+
+import { useRouter } from "next/navigation";
+import { useCallback, useEffect, useMemo, useRef, useState } from "react";
+import { CurveFigure } from "@/app/_components/curves/curve-figure";
+import { curveSet } from "@/app/_components/curves/curve-set";
+import { NumberTable } from "@/app/_components/curves/number-table";
+import { Notice } from "@/app/_components/ui/notice";
+import { Tabs } from "@/app/_components/ui/tabs";
+import { Cautions, type VoltageSpan } from "./cautions";
+import { OperatingPoint } from "./operating-point";
+import { type PageState, readPageState, writePageState } from "./page-state";
+import { PointPanel } from "./point-panel";
+import { RunFacts } from "./run-facts";
+import { RunHeader } from "./run-header";
+import { isLive, type PointAccount, type RunState } from "./run-shapes";
+import { RunStatusLine } from "./run-status-line";
+import { type Found, useLiveRun } from "./use-live-run";
+
+interface Props {
+  readonly workspace: string;
+  readonly first: RunState;
+  readonly found: Found | null;
+  /** The account of the point that the address names. */
+  readonly point: PointAccount | null;
+  readonly span: VoltageSpan | null;
+  /** The search part of the address the page was asked for with. */
+  readonly search: string;
+  readonly mayStart: boolean;
+  readonly mayCancel: boolean;
+}
+
+/** A run: how far it is, its curves and numbers, one point in full, and what is known about the run itself. */
+export function RunView(props: Props) {
+  const { workspace, first, found, point, span, mayStart, mayCancel } = props;
+  const router = useRouter();
+  const { run, document, problem, setRun } = useLiveRun(first, found);
+  const [state, setState] = useState(() => readPageState(new URLSearchParams(props.search)));
+  const show = useCallback(
+    (change: Partial<PageState>) => setState((before) => ({ ...before, ...change })),
+    [],
+  );
+  const live = isLive(run.status);
+
+  useEffect(() => {
+    const search = writePageState(state);
+    if (search !== window.location.search) {
+      window.history.replaceState(null, "", search || window.location.pathname);
+    }
+  }, [state]);
+
+  // What only the server knows of a finished run (its extremes) is asked for once when it ends.
+  const wasLive = useRef(live);
+  useEffect(() => {
+    if (wasLive.current && !live) router.refresh();
+    wasLive.current = live;
+  }, [live, router]);
+
+  const source = useMemo(
+    () =>
+      document ?? {
+        axes: run.plan.axes,
+        traces: run.plan.traces.map((trace) => ({ ...trace, values: [] })),
+        points: { outcome: [] },
+      },
+    [document, run.plan],
+  );
+  const set = useMemo(() => curveSet(source), [source]);
+  const chosen = state.point !== null && state.point < run.points ? state.point : set === null ? 0 : null;
+
+  return (
+    <>
+      <RunHeader workspace={workspace} run={run} mayStart={mayStart} mayCancel={mayCancel} onRun={setRun} />
+      <RunStatusLine run={run} />
+      {problem !== null && (
+        <div className="px-4 pt-4 md:px-6">
+          <Notice tone="caution" title="The curves could not be brought up to date" announce>
+            <p>{problem} Trying again.</p>
+          </Notice>
+        </div>
+      )}
+      <div className="grid grow grid-cols-[minmax(0,1fr)] lg:grid-cols-[minmax(0,8fr)_minmax(300px,5fr)] 2xl:grid-cols-[minmax(0,11fr)_minmax(300px,5fr)]">
+        <div className="min-w-0 px-4 pt-2 pb-8 md:px-6">
+          {set === null ? (
+            <OperatingPoint source={source} />
+          ) : (
+            <Tabs
+              label="Results"
+              value={state.tab}
+              onChange={(tab) => show({ tab: tab === "numbers" ? "numbers" : "curves" })}
+              tabs={[
+                {
+                  value: "curves",
+                  label: "Curves",
+                  content: (
+                    <CurveFigure
+                      set={set}
+                      name={`Curves of ${run.title}, run ${run.number}`}
+                      view={state}
+                      onView={show}
+                      point={chosen}
+                      onPoint={(next) => show({ point: next })}
+                    />
+                  ),
+                },
+                {
+                  value: "numbers",
+                  label: "Table of numbers",
+                  content: (
+                    <NumberTable
+                      source={source}
+                      page={state.page}
+                      failedOnly={state.failed}
+                      point={chosen}
+                      onPage={(page) => show({ page })}
+                      onFailedOnly={(failed) => show({ failed, page: 1 })}
+                      onPoint={(next) => show({ point: next })}
+                    />
+                  ),
+                },
+              ]}
+            />
+          )}
+        </div>
+        <div className="grid min-w-0 content-start gap-8 border-t px-4 py-6 md:px-6 lg:border-t-0 lg:border-l">
+          <PointPanel
+            run={run}
+            point={chosen}
+            first={point}
+            choosable={set !== null}
+            onPoint={(next) => show({ point: next })}
+          />
+          <RunFacts workspace={workspace} run={run} />
+          <Cautions span={span} />
+        </div>
+      </div>
+    </>
+  );
+}

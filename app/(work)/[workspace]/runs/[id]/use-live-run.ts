@@ -1,0 +1,82 @@
+"use client";
+
+import { useEffect, useRef, useState } from "react";
+import type { RunDocument } from "@/lib/analyses/result";
+import { DocumentFeed } from "./document-feed";
+import { fetchSummary } from "./fetch-run";
+import { isLive, type Progress, type RunState } from "./run-shapes";
+
+/** Ms between two looks at the summary while the stream of events does not answer. */
+const POLL = 1000;
+
+/** The document that came with the page, and its version. */
+export interface Found {
+  readonly document: RunDocument;
+  readonly etag: string;
+}
+
+interface LiveRun {
+  readonly run: RunState;
+  readonly document: RunDocument | null;
+  /** Why the curves could not be brought up to date; null while they are. */
+  readonly problem: string | null;
+  readonly setRun: (run: RunState) => void;
+}
+
+/**
+ * A run and its results, kept current: events come by one stream, which the browser takes up again where it broke; while it
+ * cannot be had, the summary is asked for every second. Each event asks for the document, which arrives as fast as it can be read.
+ */
+export function useLiveRun(first: RunState, found: Found | null): LiveRun {
+  const [run, setRun] = useState(first);
+  const [document, setDocument] = useState(found?.document ?? null);
+  const [problem, setProblem] = useState<string | null>(null);
+  // Only what the page began with: later properties of the server are not newer than what the stream brought.
+  const start = useRef({
+    id: first.id,
+    status: first.status,
+    lastEvent: first.lastEvent,
+    etag: found?.etag ?? null,
+  });
+
+  useEffect(() => {
+    const { id, status, lastEvent, etag } = start.current;
+    const feed = new DocumentFeed(id, etag, { onDocument: setDocument, onProblem: setProblem });
+    if (etag === null || isLive(status)) feed.want();
+    if (!isLive(status)) return () => feed.close();
+
+    let timer: ReturnType<typeof setInterval> | undefined;
+    const end = () => {
+      events.close();
+      clearInterval(timer);
+    };
+    const refresh = async () => {
+      const next = await fetchSummary(id).catch(() => null);
+      if (next === null) return;
+      setRun(next);
+      feed.want();
+      if (!isLive(next.status)) end();
+    };
+    const take = (event: MessageEvent<string>) => {
+      clearInterval(timer);
+      timer = undefined;
+      const progress: Progress = JSON.parse(event.data);
+      setRun((before) => ({ ...before, ...progress }));
+      feed.want();
+      if (isLive(progress.status)) return;
+      end();
+      void refresh();
+    };
+    const events = new EventSource(`/api/v1/runs/${id}/events?after=${lastEvent}`);
+    for (const kind of ["message", "progress", "status"]) events.addEventListener(kind, take);
+    events.addEventListener("error", () => {
+      timer ??= setInterval(refresh, POLL);
+    });
+    return () => {
+      end();
+      feed.close();
+    };
+  }, []);
+
+  return { run, document, problem, setRun };
+}
