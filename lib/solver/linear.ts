@@ -7,7 +7,7 @@ const WORST_BACKWARD_ERROR = 1e-3;
 /**
  * Solves J·d = −F for one structure many times. The only file that knows how: pivots are chosen once on a sample, and from
  * then on a factorisation is a list of multiplications over reused arrays. Pivots stay while the backward error of each
- * solution (Oettli and Prager, Numer. Math. 6, 1964) is small, and are chosen anew on the values at hand when it is not.
+ * solution (Rigal and Gaches, J. ACM 14, 1967, row by row) is small, and are chosen anew on the values at hand when it is not.
  */
 export class LinearSolver {
   private readonly first: Elimination | null;
@@ -104,25 +104,28 @@ export class LinearSolver {
     }
   }
 
-  /** max |J·d + F|_i / (|J|·|d| + |F|)_i over the rows; infinite where anything is not finite. */
+  /** max |J·d + F|_i / (Σ_j |J_ij|·max|d| + |F_i|) over the rows; infinite where anything is not finite. */
   private backwardError(jacobian: Float64Array, residual: Float64Array, step: Float64Array): number {
     const { rows, columns, size } = this.shape;
     const { work, sums } = this;
+    let longest = 0;
     for (let i = 0; i < size; i++) {
       work[i] = residual[i]!;
-      sums[i] = Math.abs(residual[i]!);
+      sums[i] = 0;
+      const length = Math.abs(step[i]!);
+      if (!(length <= longest)) longest = length;
     }
     for (let k = 1; k < jacobian.length; k++) {
-      const term = jacobian[k]! * step[columns[k]!]!;
-      work[rows[k]!]! += term;
-      sums[rows[k]!]! += Math.abs(term);
+      const row = rows[k]!;
+      work[row]! += jacobian[k]! * step[columns[k]!]!;
+      sums[row]! += Math.abs(jacobian[k]!);
     }
     let worst = 0;
     for (let i = 0; i < size; i++) {
-      const ratio = Math.abs(work[i]!) / sums[i]!;
-      if (sums[i] === 0 || ratio <= worst) continue;
+      const whole = sums[i]! * longest + Math.abs(residual[i]!);
+      const ratio = whole === 0 ? 0 : Math.abs(work[i]!) / whole;
       if (!(ratio < Number.POSITIVE_INFINITY)) return Number.POSITIVE_INFINITY;
-      worst = ratio;
+      if (ratio > worst) worst = ratio;
     }
     return worst;
   }

@@ -17,9 +17,11 @@ export function unsettled({ system, step }: Bench): string[] {
       const left = misses(state.residual[i]!, 1e-10 * state.scale[i]! + 1e-18);
       return { name, by: Math.max(left, misses(step[i]!, 1e-9 + 1e-9 * Math.abs(state.x[i]!))) };
     })
-    .filter(({ by }) => by > 1)
     .sort((a, b) => b.by - a.by);
-  const worst = new Set(nets.slice(0, MOST_NETS).map(({ name }) => name));
+  const missing = nets.filter(({ by }) => by > 1);
+  const worst = new Set(
+    (missing.length > 0 ? missing : nets.slice(0, 1)).slice(0, MOST_NETS).map(({ name }) => name),
+  );
   const elements = junctions
     .map((part) => ({ part, by: finite(part.apart(state)) }))
     .filter(({ part, by }) => by > 0 || Object.values(part.element.pins).some((net) => worst.has(net)))
