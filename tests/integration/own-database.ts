@@ -1,4 +1,5 @@
 import { randomBytes } from "node:crypto";
+import { setTimeout } from "node:timers/promises";
 import { Client } from "pg";
 import { afterAll, beforeAll } from "vitest";
 import { closeDatabase } from "@/db/client";
@@ -22,8 +23,20 @@ export function ownDatabase({ migrated = true } = {}): void {
   afterAll(async () => {
     await Promise.all([closeQueue(), closeDatabase()]);
     process.env.DATABASE_URL = given;
-    await onServer(given, `DROP DATABASE ${name} WITH (FORCE)`);
+    await drop(given, name);
   });
+}
+
+/** Dropped once the server has noticed that its connections are closed, or by force after a second. */
+async function drop(url: string, name: string): Promise<void> {
+  for (let tries = 0; tries < 20; tries++) {
+    try {
+      return await onServer(url, `DROP DATABASE ${name}`);
+    } catch {
+      await setTimeout(50);
+    }
+  }
+  await onServer(url, `DROP DATABASE ${name} WITH (FORCE)`);
 }
 
 async function onServer(url: string, statement: string): Promise<void> {

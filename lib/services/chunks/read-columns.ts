@@ -3,6 +3,7 @@ import { database } from "@/db/client";
 import { chunk } from "@/db/schema/chunk";
 import { shard } from "@/db/schema/shard";
 import { CHUNK_POINTS, decode } from "./codec";
+import { valueAt } from "./value-at";
 
 /**
  * The stored columns of a run, each of `points` values, NaN where a point is unsolved or its shard is not in yet. `names` picks
@@ -35,7 +36,7 @@ export async function readPoint(runId: string, point: number): Promise<Map<strin
   const values = new Map<string, number>();
   for (const { name, at, data } of here) {
     if (point < at || point >= at + CHUNK_POINTS) continue;
-    values.set(name, decode(data)[point - at]!);
+    values.set(name, valueAt(data, point - at));
   }
   return values.size === 0 ? null : values;
 }

@@ -1,0 +1,90 @@
+import { mkdtemp, readdir, rm, writeFile } from "node:fs/promises";
+import { tmpdir } from "node:os";
+import { join } from "node:path";
+import { eq } from "drizzle-orm";
+import { afterAll, afterEach, beforeAll, beforeEach, describe, expect, it, vi } from "vitest";
+import { database } from "@/db/client";
+import { DIODE_TEXT } from "@/db/factories";
+import { netlist } from "@/db/schema/netlist";
+import { run } from "@/db/schema/run";
+import { user } from "@/db/schema/user";
+import { workspace } from "@/db/schema/workspace";
+import { DEMO_PEOPLE, seed } from "@/db/seed";
+import { passwordMatches } from "@/lib/auth/password";
+import { ownDatabase } from "./own-database";
+
+ownDatabase();
+
+/** The seed sets and keeps DATABASE_URL, and closes the connections that the test then opens anew. */
+const url = () => process.env.DATABASE_URL!;
+
+async function state() {
+  const db = database();
+  const netlists = await db.select().from(netlist).orderBy(netlist.number);
+  const runs = await db.select().from(run).orderBy(run.number);
+  return { netlists, runs };
+}
+
+describe("the demo", () => {
+  beforeAll(async () => {
+    vi.stubEnv("SWEEPWRIGHT_DEMO_PASSWORD", "a password of the test");
+    await Promise.all([seed(url()), seed(url()), seed(url())]);
+  });
+  afterAll(() => void vi.unstubAllEnvs());
+
+  it("made by three processes at once is made once: each example with one queued run", async () => {
+    const files = (await readdir("examples")).filter((name) => name.endsWith(".swn"));
+    const { netlists, runs } = await state();
+    expect(files.length).toBeGreaterThanOrEqual(5);
+    expect(netlists.map(({ number }) => number)).toEqual(files.map((_, i) => i + 1));
+    expect(runs.map(({ netlistId }) => netlistId).sort()).toEqual(netlists.map(({ id }) => id).sort());
+    expect(new Set(runs.map(({ status }) => status))).toEqual(new Set(["queued"]));
+  });
+
+  it("says that it is invented, and each of its four people has a hash of the demo password", async () => {
+    const [room] = await database().select().from(workspace);
+    expect([room?.slug, room?.name]).toEqual(["north-bench", expect.stringContaining("invented")]);
+    const people = await database().select().from(user).orderBy(user.email);
+    expect(people.map(({ email }) => email)).toEqual(DEMO_PEOPLE.map(({ email }) => email).sort());
+    const hashes = people.map(({ passwordHash }) => passwordHash);
+    expect(new Set(hashes).size).toBe(4);
+    for (const hash of hashes) expect(await passwordMatches(hash, "a password of the test")).toBe(true);
+  });
+
+  it("made again changes nothing, also after somebody has renamed, changed or archived things", async () => {
+    await database()
+      .update(netlist)
+      .set({ title: "Renamed", archivedAt: new Date() })
+      .where(eq(netlist.number, 1));
+    const before = await state();
+    await seed(url());
+    expect(await state()).toEqual(before);
+  });
+});
+
+describe("the demo of a folder", () => {
+  let folder: string;
+  beforeEach(async () => {
+    folder = await mkdtemp(join(tmpdir(), "examples-"));
+  });
+  afterEach(() => rm(folder, { recursive: true }));
+
+  it("goes on where it was cut off: a netlist without a run gets one, a new file its netlist", async () => {
+    const before = await state();
+    await writeFile(join(folder, "one.swn"), DIODE_TEXT);
+    await seed(url(), folder);
+    const [first] = (await state()).runs.slice(before.runs.length);
+    await database().$client.query("DELETE FROM event WHERE run_id = $1", [first!.id]);
+    await database().$client.query("DELETE FROM shard WHERE run_id = $1", [first!.id]);
+    await database().$client.query("DELETE FROM run WHERE id = $1", [first!.id]);
+    await writeFile(join(folder, "two.swn"), DIODE_TEXT);
+    await seed(url(), folder);
+    const after = await state();
+    expect(after.netlists.length - before.netlists.length).toBe(2);
+    expect(after.runs.length - before.runs.length).toBe(2);
+  });
+
+  it("that holds no example is an error that names it", async () => {
+    await expect(seed(url(), folder)).rejects.toThrow(`The folder ${folder} holds no example`);
+  });
+});
