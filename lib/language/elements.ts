@@ -1,6 +1,6 @@
 import { formatQuantity } from "@/lib/units/quantity";
 import type { Element, Model, ModelKind, NamedValue, Setting, Statement } from "./ast";
-import { KINDS, type ParameterKind } from "./kinds";
+import { KINDS, MODEL_KINDS, type ParameterKind } from "./kinds";
 import type { Names } from "./names";
 import { nearest } from "./nearest";
 import type { Nominal } from "./nominal";
@@ -22,11 +22,11 @@ export function modelKinds(
     if (statement.kind !== "model" || statement.of.text === "") continue;
     const { name, of } = statement;
     if (!isModelKind(of.text)) {
-      const near = nearest(of.text, ["diode", "npn", "pnp", "opamp"]);
       const start = Object.hasOwn(KINDS, of.text)
         ? `A ${of.text} takes no model`
         : `No model kind is called ${quote(of.text)}`;
-      report.propose("NAM5", of, start, near, "a model is a diode, npn, pnp or opamp");
+      const search = () => nearest(of.text, MODEL_KINDS);
+      report.propose("NAM5", of, start, search, "a model is a diode, npn, pnp or opamp");
     } else if (names.meaningOf(name.text) === "model" && names.placeOf(name.text).from === name.from) {
       kinds.set(name.text, of.text);
     }
@@ -162,11 +162,10 @@ export class ElementCheck {
     owner: string,
     model: string | null,
   ): void {
-    const near = nearest(name.text, known);
     const start = `${owner[0]!.toUpperCase()}${owner.slice(1)} has no pin or parameter ${quote(name.text)}`;
     const list = known.length === 0 ? "it takes no parameters" : `its parameters are ${known.join(", ")}`;
     const otherwise = model === null ? list : `parameters are given in the model ${quote(model)}`;
-    this.report.propose("NAM6", name, start, near, otherwise);
+    this.report.propose("NAM6", name, start, () => nearest(name.text, known), otherwise);
   }
 }
 

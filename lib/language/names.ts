@@ -87,9 +87,14 @@ export class Names {
 
   /** Reports a name that means nothing, with the nearest of the wanted meanings that does. */
   unknown(word: Word, wanted: readonly Meaning[]): void {
-    const near = this.searches++ < MOST_SEARCHES ? nearest(word.text, this.namesOf(wanted)) : null;
     const start = `Nothing here is called ${quote(word.text)}`;
-    this.report.propose("NAM3", word, start, near, "declare it, or use a name of this file");
+    const search = () => this.near(word.text, this.namesOf(wanted));
+    this.report.propose("NAM3", word, start, search, "declare it, or use a name of this file");
+  }
+
+  /** The name of the file that was probably meant, for the first few that are asked for. */
+  near(name: string, candidates: Iterable<string>): string | null {
+    return this.searches++ < MOST_SEARCHES ? nearest(name, candidates) : null;
   }
 
   *namesOf(wanted: readonly Meaning[]): Iterable<string> {

@@ -1,5 +1,7 @@
 /** Names longer than this are not compared. */
 const LONGEST = 40;
+/** Candidates of a fitting length that are compared; a file with more names than this is not searched further. */
+const MOST_COMPARED = 4000;
 
 /**
  * The candidate nearest to `name` by the edits that typing makes (a letter changed, left out, put in, or two exchanged: Damerau
@@ -9,8 +11,10 @@ export function nearest(name: string, candidates: Iterable<string>): string | nu
   if (name.length > LONGEST) return null;
   let best: string | null = null;
   let bound = [0, 0.5, 1][name.length] ?? Math.min(2.5, 0.5 + name.length / 3);
+  let compared = 0;
   for (const candidate of candidates) {
     if (candidate.length > LONGEST || Math.abs(candidate.length - name.length) > bound) continue;
+    if (compared++ >= MOST_COMPARED) break;
     const distance = editDistance(name, candidate, bound);
     if (distance > 0 && distance <= bound && (best === null || distance < bound)) {
       best = candidate;

@@ -20,8 +20,12 @@ export class Report {
     this.add(code, "warning", span, message, fix);
   }
 
-  /** An error at a word, with the word that was probably meant, or else with what could stand there. */
-  propose(code: Code, word: Span, start: string, near: string | null, otherwise: string): void {
+  /**
+   * An error at a word, with the word that was probably meant, or else with what could stand there. The search for that word is
+   * left out where the error will not be listed.
+   */
+  propose(code: Code, word: Span, start: string, search: () => string | null, otherwise: string): void {
+    const near = this.listed.length < MOST_LISTED ? search() : null;
     if (near === null) this.error(code, word, `${start}; ${otherwise}.`);
     else {
       const fix = { title: `Change to ${near}`, from: word.from, to: word.to, text: near };

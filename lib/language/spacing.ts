@@ -3,12 +3,18 @@
  * is a round number is the same double as its literal (10 nA is 1e-8, not 1.0000000000000002e-8).
  */
 
+/** The number of values that a range of `total` spacings has; what rounding leaves over is no spacing of its own. */
+export function countOf(total: number): number {
+  return Math.max(0, Math.ceil(total - 1e-9 * Math.max(1, total))) + 1;
+}
+
 /** a, then N values a decade from a on, then b; a and b of one sign and different, N whole and above 0. */
 export function decades(a: number, b: number, perDecade: number): number[] {
   const total = Math.abs(Math.log10(b / a)) * perDecade;
   const sign = Math.abs(b) > Math.abs(a) ? 1 : -1;
   const values: number[] = [];
-  for (let k = 0; k < total - 1e-9 * Math.max(1, total); k++) {
+  const last = countOf(total) - 1;
+  for (let k = 0; k < last; k++) {
     const whole = Math.floor(k / perDecade);
     values.push(round(a * 10 ** (sign * whole) * 10 ** ((sign * (k - whole * perDecade)) / perDecade)));
   }
@@ -26,9 +32,9 @@ export function evenly(a: number, b: number, n: number): number[] {
 
 /** a, a + step, … and b; the step leads towards b. */
 export function stepwise(a: number, b: number, step: number): number[] {
-  const total = (b - a) / step;
+  const last = countOf((b - a) / step) - 1;
   const values: number[] = [];
-  for (let k = 0; k < total - 1e-9 * Math.max(1, total); k++) values.push(snap(a + k * step, a, b));
+  for (let k = 0; k < last; k++) values.push(snap(a + k * step, a, b));
   values.push(b);
   return values;
 }

@@ -6,7 +6,7 @@ import { count, MOST_POINTS } from "./limits";
 import { Names } from "./names";
 import type { Quantities, Want } from "./quantities";
 import type { Report } from "./report";
-import { decades, evenly, stepwise } from "./spacing";
+import { countOf, decades, evenly, stepwise } from "./spacing";
 import { quote } from "./token";
 import type { Known, Typing } from "./typing";
 
@@ -15,6 +15,8 @@ type SweepStatement = Extract<Statement, { kind: "sweep" }>;
 /** Checks sweeps and works their values out. */
 export class SweepCheck {
   private readonly ranges: ReadonlyMap<string, Knob["range"]>;
+  /** Product of the lengths of the sweeps so far. */
+  private points = 1;
 
   constructor(
     private readonly names: Names,
@@ -34,7 +36,6 @@ export class SweepCheck {
     const lets = new Map(
       statements.flatMap((one) => (one.kind === "let" ? [[one.name.text, one.from] as const] : [])),
     );
-    let points = 1;
     for (const statement of statements) {
       if (statement.kind !== "sweep" || !this.isKnob(statement, lets)) continue;
       const { knob } = statement;
@@ -49,11 +50,7 @@ export class SweepCheck {
       swept.add(knob.text);
       const sweep = this.sweep(statement);
       if (sweep === null) continue;
-      points *= sweep.values.length;
-      if (points > MOST_POINTS) {
-        this.tooMany(statement, points, "With this sweep the plan has");
-        break;
-      }
+      this.points *= sweep.values.length;
       sweeps.push(sweep);
     }
     return sweeps;
@@ -88,15 +85,17 @@ export class SweepCheck {
         : "K"
       : unitOf(dimension);
     const want = { dimension, unit, what: `The knob ${quote(knob.text)}` };
-    const values = range.kind === "list" ? this.list(range.values, want) : this.range(statement, range, want);
-    if (values === null || !this.allowed(statement, values)) return null;
+    const values =
+      range.kind === "list" ? this.list(statement, range.values, want) : this.range(statement, range, want);
+    if (values === null) return null;
     const scale = range.kind === "list" ? "list" : range.spacing === "per decade" ? "logarithmic" : "linear";
     return { knob: knob.text, dimension, scale, values, from, to };
   }
 
-  private list(expressions: readonly Expression[], want: Want): number[] | null {
+  private list(statement: SweepStatement, expressions: readonly Expression[], want: Want): number[] | null {
     const values = expressions.map((expression) => this.quantities.fixed(expression, want));
-    return values.every((value) => value !== null) && values.length > 0 ? values : null;
+    if (!values.every((value) => value !== null) || values.length === 0) return null;
+    return this.allowed(statement, values) && this.bounded(statement, values.length) ? values : null;
   }
 
   private range(
@@ -109,6 +108,7 @@ export class SweepCheck {
     const amount =
       range.spacing === "step" ? this.step(range.amount, want) : this.whole(range.amount, range.spacing);
     if (start === null || stop === null || amount === null) return null;
+    if (!this.allowed(statement, [start, stop])) return null;
     const span = { from: range.start.from, to: range.stop.to };
     if (start === stop) {
       this.report.error(
@@ -125,7 +125,7 @@ export class SweepCheck {
         this.report.error("PLN3", span, message);
         return null;
       }
-      const points = Math.ceil(Math.abs(Math.log10(stop / start)) * amount) + 1;
+      const points = countOf(Math.abs(Math.log10(stop / start)) * amount);
       return this.bounded(statement, points) ? decades(start, stop, amount) : null;
     }
     if (range.spacing === "points") {
@@ -141,9 +141,7 @@ export class SweepCheck {
       this.report.error("PLN5", range.amount, `${what}; give a step towards the end.`);
       return null;
     }
-    return this.bounded(statement, Math.ceil((stop - start) / amount) + 1)
-      ? stepwise(start, stop, amount)
-      : null;
+    return this.bounded(statement, countOf((stop - start) / amount)) ? stepwise(start, stop, amount) : null;
   }
 
   private step(expression: Expression, want: Want): number | null {
@@ -166,9 +164,12 @@ export class SweepCheck {
     return null;
   }
 
-  private bounded(statement: SweepStatement, points: number): boolean {
+  /** Asked before the values are worked out, so that a refused sweep costs nothing. */
+  private bounded(statement: SweepStatement, own: number): boolean {
+    const points = own * this.points;
     if (points <= MOST_POINTS) return true;
-    this.tooMany(statement, points, "This sweep has");
+    const what = own > MOST_POINTS ? "This sweep has" : "With this sweep the plan has";
+    this.tooMany(statement, own > MOST_POINTS ? own : points, what);
     return false;
   }
 

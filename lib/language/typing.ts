@@ -264,9 +264,9 @@ export class Typing {
       this.report.error("FRM6", callee, message);
       return;
     }
-    const near = nearest(callee.text, Object.keys(FUNCTIONS));
+    const search = () => nearest(callee.text, Object.keys(FUNCTIONS));
     const all = "the functions are exp, ln, log10, sqrt, abs, min, max, tanh, atan and if";
-    this.report.propose("NAM10", callee, `${quote(callee.text)} is no function`, near, all);
+    this.report.propose("NAM10", callee, `${quote(callee.text)} is no function`, search, all);
   }
 }
 

@@ -64,9 +64,9 @@ export function unitOfLiteral(
 
 function reportUnknownUnit(word: Word, report: Report): void {
   const spelled = SPELLED_OUT.reduce((text, [pattern, symbol]) => text.replace(pattern, symbol), word.text);
-  const near = parseUnit(spelled) !== null ? spelled : nearest(spelled, ALL_UNITS);
+  const search = () => (parseUnit(spelled) !== null ? spelled : nearest(spelled, ALL_UNITS));
   const examples = "use one such as V, mV, nA, kΩ, K, °C or %";
-  report.propose("UNI1", word, `${quote(word.text)} is no unit`, near, examples);
+  report.propose("UNI1", word, `${quote(word.text)} is no unit`, search, examples);
 }
 
 function likelyUnit(prefix: string): string {

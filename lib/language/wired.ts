@@ -1,7 +1,6 @@
 import type { ElementKind, Expression, ModelKind, Setting, Statement, ToleranceSyntax, Word } from "./ast";
 import { KINDS, MODEL_KINDS } from "./kinds";
 import { Names } from "./names";
-import { nearest } from "./nearest";
 import type { Report } from "./report";
 import type { Span } from "./span";
 import { quote } from "./token";
@@ -181,9 +180,9 @@ export class Wirer {
       const message = `${quote(word.text)} is ${Names.describe(meaning)}, and a kind or model is wanted after \`:\`.`;
       this.report.error("NAM5", word, message);
     } else {
-      const near = nearest(word.text, [...Object.keys(KINDS), ...this.models.keys()]);
+      const search = () => this.names.near(word.text, [...Object.keys(KINDS), ...this.models.keys()]);
       const all = `the kinds are ${Object.keys(KINDS).join(", ")}`;
-      this.report.propose("NAM5", word, `No kind or model is called ${quote(word.text)}`, near, all);
+      this.report.propose("NAM5", word, `No kind or model is called ${quote(word.text)}`, search, all);
     }
   }
 

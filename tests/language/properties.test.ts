@@ -41,7 +41,7 @@ function outsideStrings(text: string, change: (part: string) => string): string 
     .join("");
 }
 
-describe("any text", () => {
+describe("any text", { timeout: 60_000 }, () => {
   test("is answered with sound diagnostics, sorted, and a design exactly where there is no error", () => {
     fc.assert(
       fc.property(anyText, (text) => {
@@ -96,7 +96,7 @@ describe("any text", () => {
   });
 });
 
-describe("the formatter", () => {
+describe("the formatter", { timeout: 60_000 }, () => {
   test.each([
     ["any text", anyText],
     ["statements of good form", wellFormed],
