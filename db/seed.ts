@@ -44,8 +44,9 @@ export async function seed(url: string, examples = resolve("examples")): Promise
     const actor = await people();
     await netlists(actor, examples);
   } finally {
-    await holder.end();
     await Promise.all([closeQueue(), closeDatabase()]);
+    // The lock goes with its connection, after everything else, so that two seeds of one process do not share what is closed.
+    await holder.end();
   }
 }
 
