@@ -29,7 +29,7 @@ export const EDITOR_OPTIONS: monaco.editor.IStandaloneEditorConstructionOptions 
   hideCursorInOverviewRuler: true,
   roundedSelection: false,
   lineNumbersMinChars: 3,
-  lineDecorationsWidth: 20,
+  lineDecorationsWidth: 32,
   scrollBeyondLastLine: false,
   wordWrap: "on",
   wrappingIndent: "indent",

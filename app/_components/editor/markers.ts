@@ -38,7 +38,7 @@ export function markersOf(text: string, diagnostics: readonly Diagnostic[]): edi
     return {
       ...range,
       severity: SEVERITIES[diagnostic.severity],
-      message: diagnostic.message,
+      message: diagnostic.message.replaceAll("`", ""),
       code: spellCode(diagnostic.code),
     };
   });

@@ -3,18 +3,37 @@ import { TOKEN_INKS } from "./palette";
 
 export const THEME = "sweepwright";
 
-/** A colour token as `#rrggbb`, as the page has it now. */
-function ink(name: string): string {
-  return getComputedStyle(document.documentElement).getPropertyValue(name).trim();
+/** `rgb(251, 250, 246)`, as browsers give a computed colour, as `#fbfaf6`. */
+export function hexOf(computed: string): string {
+  const parts = computed.match(/\d+/g) ?? [];
+  return `#${parts
+    .slice(0, 3)
+    .map((part) => Number(part).toString(16).padStart(2, "0"))
+    .join("")}`;
+}
+
+/** Colour tokens as `#rrggbb`, as the page has them now; a stylesheet may spell them in any other way. */
+function inks(names: readonly string[]): string[] {
+  const probe = document.body.appendChild(document.createElement("span"));
+  const found = names.map((name) => {
+    probe.style.color = `var(${name})`;
+    return hexOf(getComputedStyle(probe).color);
+  });
+  probe.remove();
+  return found;
 }
 
 /** The editor's theme from the colour tokens of the page, light or dark as they stand at this moment. */
 export function currentTheme(): editor.IStandaloneThemeData {
   const dark = getComputedStyle(document.documentElement).colorScheme === "dark";
-  const [paper, surface, wash, rule, edge] = ["--paper", "--surface", "--wash", "--rule", "--edge"].map(ink);
-  const [text, quiet, accent, broken, caution] = ["--ink", "--quiet", "--accent", "--broken", "--nodata"].map(
-    ink,
-  );
+  const [paper, surface, wash, rule, edge] = inks(["--paper", "--surface", "--wash", "--rule", "--edge"]);
+  const [text, quiet, accent, broken, caution] = inks([
+    "--ink",
+    "--quiet",
+    "--accent",
+    "--broken",
+    "--nodata",
+  ]);
   const clear = "#00000000";
   const colors: Record<string, string | undefined> = {
     foreground: text,
@@ -33,6 +52,8 @@ export function currentTheme(): editor.IStandaloneThemeData {
     "editor.findMatchHighlightBackground": `${accent}2e`,
     "editorBracketMatch.background": wash,
     "editorBracketMatch.border": edge,
+    ...Object.fromEntries([1, 2, 3, 4, 5, 6].map((n) => [`editorBracketHighlight.foreground${n}`, text])),
+    "editorBracketHighlight.unexpectedBracket.foreground": broken,
     "editorError.foreground": broken,
     "editorWarning.foreground": caution,
     "editorWidget.background": surface,
@@ -67,9 +88,10 @@ export function currentTheme(): editor.IStandaloneThemeData {
     "editorGutter.background": surface,
     "editorStickyScroll.background": paper,
   };
-  const rules = Object.entries(TOKEN_INKS).map(([token, name]) => ({
+  const colours = inks(Object.values(TOKEN_INKS));
+  const rules = Object.keys(TOKEN_INKS).map((token, index) => ({
     token,
-    foreground: ink(name).replace("#", ""),
+    foreground: colours[index]!.replace("#", ""),
   }));
   return {
     base: dark ? "vs-dark" : "vs",

@@ -31,7 +31,10 @@ export async function mountEditor(
   const model = monaco.editor.createModel(text.replaceAll("\r\n", "\n"), LANGUAGE);
   model.setEOL(monaco.editor.EndOfLineSequence.LF);
   const access = { model, readOnly, domReadOnly: readOnly, ariaLabel: label };
-  const editor = monaco.editor.create(place, { ...EDITOR_OPTIONS, ...access });
+  // An element of its own: React may ask for a second editor in `place` before the first is gone.
+  const host = place.appendChild(document.createElement("div"));
+  host.className = "absolute inset-0";
+  const editor = monaco.editor.create(host, { ...EDITOR_OPTIONS, ...access });
 
   let marked: Marked = { text: "", diagnostics: [] };
   const read = () => model.getValue(monaco.editor.EndOfLinePreference.LF);
@@ -64,6 +67,7 @@ export async function mountEditor(
   const card = new ProblemCard(editor, current, readOnly ? null : handle.mend);
   const fixes = readOnly ? null : offerFixes(model, current);
   addKeys(editor, events);
+  keepCursorInView(editor);
   model.onDidChangeContent(() => events.onEdit());
   return {
     ...handle,
@@ -77,6 +81,7 @@ export async function mountEditor(
       card.dispose();
       editor.dispose();
       model.dispose();
+      host.remove();
     },
   };
 }
@@ -96,5 +101,17 @@ function addKeys(editor: monaco.editor.IStandaloneCodeEditor, events: EditorEven
   const { tabFocusMode } = monaco.editor.EditorOption;
   editor.onDidChangeConfiguration((change) => {
     if (change.hasChanged(tabFocusMode)) events.onTabMoves(editor.getOption(tabFocusMode));
+  });
+}
+
+/** The list of problems that comes below takes room from the editor; the line one writes in must not go under it. */
+function keepCursorInView(editor: monaco.editor.IStandaloneCodeEditor): void {
+  let height = editor.getLayoutInfo().height;
+  editor.onDidLayoutChange((layout) => {
+    const position = editor.getPosition();
+    if (layout.height < height && position !== null && editor.hasTextFocus()) {
+      editor.revealPosition(position, monaco.editor.ScrollType.Immediate);
+    }
+    height = layout.height;
   });
 }

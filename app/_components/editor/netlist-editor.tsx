@@ -1,5 +1,6 @@
 "use client";
 
+import "./editor.css";
 import { type Ref, useEffect, useImperativeHandle, useRef, useState } from "react";
 import { format } from "@/lib/language/format";
 import type { EditorEvents, EditorHandle } from "./editor-handle";
@@ -50,7 +51,8 @@ export function NetlistEditor({ ref, initial, readOnly, problems, ...events }: P
         mounted.current = editor;
         setState("here");
       })
-      .catch(() => {
+      .catch((error: unknown) => {
+        console.error("The editor could not be loaded; a plain box takes its place.", error);
         if (!gone) setState("missing");
       });
     return () => {

@@ -1,6 +1,7 @@
 import type { editor, IDisposable, IPosition } from "monaco-editor/editor";
 import type { Diagnostic, Fix } from "@/lib/language/diagnostic";
 import { rangeOf, spellCode } from "./markers";
+import { messagePieces } from "./message-text";
 import type { Marked } from "./mount-editor";
 
 /** Milliseconds that the pointer rests on a problem before its card comes, and may be away before it goes. */
@@ -84,7 +85,12 @@ export class ProblemCard implements editor.IContentWidget {
     this.at = { lineNumber: range.startLineNumber, column: range.startColumn };
     const code = document.createElement("b");
     code.textContent = `${spellCode(problem.code)} `;
-    this.node.replaceChildren(code, problem.message);
+    const pieces = messagePieces(problem.message).map(({ quoted, text }) => {
+      const piece = document.createElement(quoted ? "code" : "span");
+      piece.textContent = text;
+      return piece;
+    });
+    this.node.replaceChildren(code, ...pieces);
     this.node.style.borderColor = problem.severity === "error" ? "var(--broken)" : "var(--nodata)";
     const { fix } = problem;
     const { mend } = this;

@@ -6,6 +6,7 @@ import { StateMark } from "@/app/_components/ui/state-mark";
 import type { Diagnostic } from "@/lib/language/diagnostic";
 import { lineStarts, placeOf } from "@/lib/language/span";
 import { spellCode } from "./markers";
+import { MessageText } from "./message-text";
 
 /** Rows that are drawn; a text with more problems than these has one cause, and mending the first shows it. */
 const MOST_ROWS = 100;
@@ -47,7 +48,7 @@ export function ProblemList({ text, diagnostics, mayMend, onGoTo, onMend }: Prop
               </span>
               <span className="whitespace-nowrap text-quiet">line {placeOf(starts, one.from).line}</span>
               <span className="min-w-0 break-words group-hover:underline group-hover:underline-offset-3">
-                <b className="font-semibold">{spellCode(one.code)}</b> {one.message}
+                <b className="font-semibold">{spellCode(one.code)}</b> <MessageText message={one.message} />
               </span>
             </button>
             {one.fix !== undefined && mayMend && (

@@ -2,11 +2,13 @@
 
 import { useEffect, useRef, useState } from "react";
 import { Checking, type CheckThread } from "./checking";
-import type { Examination } from "./examine";
+import type { Examination, PlanSummary } from "./examine";
 
 export interface Examined extends Examination {
   /** The text that was examined: the spans of the diagnostics are of this one. */
   readonly text: string;
+  /** The plan of the latest text that had one: what stands on the page while a line is half written. */
+  readonly latestPlan: PlanSummary | null;
 }
 
 /**
@@ -26,7 +28,11 @@ export function useExamination(text: string): {
     thread.onerror = () => setBroken(true);
     checking.current = new Checking(thread as CheckThread, (examination, of) => {
       setBroken(false);
-      setExamined({ ...examination, text: of });
+      setExamined((before) => ({
+        ...examination,
+        text: of,
+        latestPlan: examination.plan ?? before?.latestPlan ?? null,
+      }));
     });
     return () => {
       checking.current = null;

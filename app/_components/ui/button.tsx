@@ -41,13 +41,14 @@ export function Button({
   className,
   type = "button",
   onClick,
+  "aria-disabled": held,
   ...rest
 }: ComponentProps<"button"> & Style & { readonly busy?: boolean }) {
   return (
     <button
       {...rest}
       type={busy && type === "submit" ? "button" : type}
-      aria-disabled={busy || undefined}
+      aria-disabled={busy || held}
       aria-busy={busy || undefined}
       onClick={busy ? undefined : onClick}
       className={classNames(buttonClass(tone, size), className)}

@@ -3,7 +3,7 @@ import { counted, formatCount } from "@/app/_components/ui/count";
 import { formatQuantity } from "@/lib/units/quantity";
 import { SweepRuler } from "./sweep-ruler";
 
-/** What a run of the text would compute: sweeps on their rulers, traces, knobs. Stays at the last plan while the text has errors. */
+/** What a run of the text would compute: sweeps on their rulers, traces, knobs. While the text has errors, the plan before them stays. */
 export function PlanView({
   examined,
   stale,
@@ -11,7 +11,8 @@ export function PlanView({
   readonly examined: Examined | null;
   readonly stale: boolean;
 }) {
-  const plan = examined?.plan ?? null;
+  const plan = examined?.latestPlan ?? null;
+  const past = plan !== null && examined?.plan === null;
   return (
     <section aria-labelledby="plan">
       <h2 id="plan" className="caption">
@@ -19,6 +20,7 @@ export function PlanView({
         {plan !== null && (
           <span className="ml-2 font-normal">
             {counted(plan.points, "point")}, {counted(plan.traces.length, "trace")}
+            {past && ", as before the errors"}
           </span>
         )}
       </h2>
@@ -29,7 +31,7 @@ export function PlanView({
             : "The plan stands here again when the errors of the text are mended."}
         </p>
       ) : (
-        <div className={stale ? "opacity-60" : undefined}>
+        <div className={stale || past ? "opacity-60" : undefined}>
           <ol className="mt-2 border-t">
             {plan.sweeps.map((sweep, index) => (
               <li key={sweep.knob} className="border-b py-3">
