@@ -15,24 +15,22 @@ export interface Outputs {
 
 export const DEMO_OUTPUTS: Outputs = { pages: ".next", worker: ".build/worker" };
 
-/** Builds what the sources have changed since. Resolves with whether anything had to be built. */
-export async function buildAll(outputs: Outputs): Promise<boolean> {
+/** Builds what the sources have changed since. */
+export async function buildAll(outputs: Outputs): Promise<void> {
   const stamp = sourceStamp(process.cwd());
-  const pages = await unlessStamped(join(outputs.pages, "sources.stamp"), stamp, () =>
-    buildPages(outputs.pages),
-  );
-  const worker = await unlessStamped(join(outputs.worker, "sources.stamp"), stamp, () =>
-    buildWorker(outputs.worker),
-  );
-  return pages || worker;
+  await unlessStamped(outputs.worker, stamp, () => buildWorker(outputs.worker));
+  await unlessStamped(outputs.pages, stamp, async () => {
+    console.log("Building the pages (about a minute the first time).");
+    await buildPages(outputs.pages);
+  });
 }
 
-async function unlessStamped(file: string, stamp: string, build: () => Promise<void>): Promise<boolean> {
-  if (isStamped(file, stamp)) return false;
+async function unlessStamped(folder: string, stamp: string, build: () => Promise<void>): Promise<void> {
+  const file = join(folder, "sources.stamp");
+  if (isStamped(file, stamp)) return;
   rmSync(file, { force: true });
   await build();
   writeStamp(file, stamp);
-  return true;
 }
 
 async function buildPages(folder: string): Promise<void> {
@@ -51,7 +49,7 @@ async function buildPages(folder: string): Promise<void> {
 /** One file for the worker and one for the thread that computes; packages stay in node_modules. */
 export async function buildWorker(folder: string): Promise<void> {
   await bundle({
-    entryPoints: ["worker/main.ts", "worker/solve-thread.ts"],
+    entryPoints: ["./worker/main.ts", "./worker/solve-thread.ts"],
     outdir: folder,
     outExtension: { ".js": ".mjs" },
     bundle: true,

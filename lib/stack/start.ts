@@ -67,7 +67,6 @@ async function start(): Promise<void> {
   const password = await prepare(database, folders);
 
   requireSpace(process.cwd(), BUILD_SPACE);
-  console.log("Building what has changed (about a minute the first time).");
   if (development) await buildWorker(DEMO_OUTPUTS.worker);
   else await buildAll(DEMO_OUTPUTS);
 
