@@ -1,6 +1,6 @@
 import { existsSync, mkdirSync, rmSync, writeFileSync } from "node:fs";
 import { dirname, join } from "node:path";
-import { build as bundle } from "esbuild";
+import { build as bundle, stop as stopBundler } from "esbuild";
 import { runPackage } from "./command";
 import { Complaint, fullDisk } from "./complaint";
 import { isStamped, sourceStamp, writeStamp } from "./stamp";
@@ -60,4 +60,5 @@ export async function buildWorker(folder: string): Promise<void> {
     sourcemap: "linked",
     logLevel: "warning",
   });
+  await stopBundler();
 }
