@@ -1,7 +1,7 @@
 import { System } from "@/lib/circuit/system";
-import { evaluate } from "@/lib/language/evaluate";
+import { evaluate, type Scope } from "@/lib/language/evaluate";
 import { Ladder } from "@/lib/solver/ladder";
-import { OUTCOMES, RUNGS } from "@/lib/solver/outcome";
+import { OUTCOMES, type Outcome, RUNGS } from "@/lib/solver/outcome";
 import type { Job } from "./compile";
 import { placeOnAxes } from "./plan";
 import { Predictor } from "./predictor";
@@ -24,50 +24,89 @@ export function solveRange(
 ): ShardResult {
   const { design, circuit, plan } = job;
   const system = new System(design, circuit);
-  const knobsAt = (point: number) =>
-    placeOnAxes(plan, point).map((place, axis) => {
-      const { knob, values } = plan.axes[axis]!;
-      return [knob, values[place]!] as const;
-    });
-  system.turn(knobsAt(0));
+  turnTo(system, job, 0);
   const ladder = new Ladder(system);
   const predictor = new Predictor(system.state);
-  const column = () => new Float64Array(to - from).fill(Number.NaN);
-  const traces = plan.traces.map(column);
-  const unknowns = plan.unknowns.map(column);
-  const [outcome, iterations, residual, rung] = [column(), column(), column(), column()];
-  const failures: Failure[] = [];
+  const result = emptyShard(job, from, to);
+  const scope = scopeOf(system);
+  for (let strand = strandAt(plan, Math.min(from, plan.points - 1)); strand.from < to; ) {
+    ladder.reset();
+    predictor.reset();
+    turnTo(system, job, strand.from);
+    for (let point = strand.from; point < Math.min(strand.to, to); point++) {
+      turnFirst(system, job, point);
+      const outcome = ladder.solve(predictor.predict());
+      predictor.learn(outcome.kind === "converged");
+      if (point < from) continue;
+      keep(result, point, outcome, job, system, scope);
+      if ((point + 1 - from) % WATCHED === 0) watch?.(point + 1 - from);
+    }
+    if (strand.to >= plan.points) break;
+    strand = strandAt(plan, strand.to);
+  }
+  watch?.(to - from);
+  return result;
+}
+
+function turnTo(system: System, { plan }: Job, point: number): void {
+  placeOnAxes(plan, point).forEach((place, axis) => {
+    const { knob, values } = plan.axes[axis]!;
+    system.turn(knob, values[place]!);
+  });
+}
+
+function turnFirst(system: System, { plan }: Job, point: number): void {
+  const first = plan.axes[0];
+  if (first !== undefined) system.turn(first.knob, first.values[point % first.values.length]!);
+}
+
+function scopeOf(system: System): Scope {
   const { values } = system;
-  const scope = {
-    knob: (name: string) => values.knob(name),
-    let: (name: string) => values.let(name),
-    signal: system.signal.bind(system),
+  return {
+    knob: (name) => values.knob(name),
+    let: (name) => values.let(name),
+    signal: (signal) => system.signal(signal),
     get thermalVoltage() {
       return values.thermalVoltage;
     },
   };
+}
 
-  for (let strand = strandAt(plan, from); strand.from < to; strand = strandAt(plan, strand.to)) {
-    ladder.reset();
-    predictor.reset();
-    for (let point = strand.from; point < Math.min(strand.to, to); point++) {
-      system.turn(knobsAt(point));
-      const result = ladder.solve(predictor.predict());
-      predictor.learn(result.kind === "converged");
-      if (point < from) continue;
-      const k = point - from;
-      outcome[k] = OUTCOMES.indexOf(result.kind);
-      iterations[k] = result.iterations;
-      residual[k] = result.residual;
-      rung[k] = RUNGS.indexOf(result.rung);
-      if (result.kind === "converged") {
-        for (let j = 0; j < unknowns.length; j++) unknowns[j]![k] = system.state.x[j]!;
-        for (let j = 0; j < traces.length; j++) traces[j]![k] = evaluate(design.shows[j]!.value, scope);
-      } else failures.push({ point, outcome: result.kind, unsettled: result.unsettled });
-      if ((k + 1) % WATCHED === 0) watch?.(k + 1);
-    }
-    if (strand.to >= plan.points) break;
+/** A shard as it fills. */
+type Filling = ShardResult & { readonly failures: Failure[] };
+
+function emptyShard({ plan }: Job, from: number, to: number): Filling {
+  const column = () => new Float64Array(to - from).fill(Number.NaN);
+  return {
+    from,
+    to,
+    traces: plan.traces.map(column),
+    unknowns: plan.unknowns.map(column),
+    outcome: column(),
+    iterations: column(),
+    residual: column(),
+    rung: column(),
+    failures: [],
+  };
+}
+
+function keep(
+  into: Filling,
+  point: number,
+  outcome: Outcome,
+  { design }: Job,
+  { state }: System,
+  scope: Scope,
+): void {
+  const k = point - into.from;
+  into.outcome[k] = OUTCOMES.indexOf(outcome.kind);
+  into.iterations[k] = outcome.iterations;
+  into.residual[k] = outcome.residual;
+  into.rung[k] = RUNGS.indexOf(outcome.rung);
+  if (outcome.kind !== "converged") {
+    into.failures.push({ point, outcome: outcome.kind, unsettled: outcome.unsettled });
+    return;
   }
-  watch?.(to - from);
-  return { from, to, traces, unknowns, outcome, iterations, residual, rung, failures };
+  for (let j = 0; j < into.unknowns.length; j++) into.unknowns[j]![k] = state.x[j]!;
+  for (let j = 0; j < into.traces.length; j++) into.traces[j]![k] = evaluate(design.shows[j]!.value, scope);
 }

@@ -23,6 +23,8 @@ export class System {
   readonly parts: readonly Part[];
   readonly junctions: readonly JunctionPart[];
   private readonly byName: ReadonlyMap<string, Part>;
+  /** The parts that follow each knob. */
+  private readonly followers = new Map<string, Part[]>();
   private readonly constantSlopes: Float64Array;
 
   constructor(
@@ -41,18 +43,24 @@ export class System {
     const places = this.pattern.rows.length;
     this.state = newState(circuit.size, places);
     this.constantSlopes = new Float64Array(places);
-    for (const part of this.parts) part.read(this.values);
+    for (const part of this.parts) {
+      part.read(this.values);
+      for (const knob of part.movers) {
+        const following = this.followers.get(knob);
+        if (following === undefined) this.followers.set(knob, [part]);
+        else following.push(part);
+      }
+    }
     this.gatherConstantSlopes();
   }
 
-  /** Sets knobs to a point; only the parts that follow a changed one read their figures again. */
-  turn(knobs: readonly (readonly [name: string, value: number])[]): void {
-    const changed = knobs.filter(([name, value]) => this.values.knob(name) !== value);
-    if (changed.length === 0) return;
-    for (const [name, value] of changed) this.values.turn(name, value);
-    for (const part of this.parts) {
-      if (changed.some(([name]) => part.movers.has(name))) part.read(this.values);
-    }
+  /** Turns a knob; only the parts that follow it read their figures again. */
+  turn(knob: string, value: number): void {
+    if (this.values.knob(knob) === value) return;
+    this.values.turn(knob, value);
+    const following = this.followers.get(knob);
+    if (following === undefined) return;
+    for (const part of following) part.read(this.values);
     this.gatherConstantSlopes();
   }
 

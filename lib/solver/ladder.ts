@@ -2,7 +2,7 @@ import type { System } from "@/lib/circuit/system";
 import { largestResidual } from "./acceptance";
 import { LinearSolver } from "./linear";
 import { type Attempt, type Bench, newton } from "./newton";
-import type { Outcome, Rung } from "./outcome";
+import { type Outcome, RUNGS, type Rung } from "./outcome";
 import { ramp } from "./ramp";
 import { unsettled } from "./unsettled";
 
@@ -35,34 +35,33 @@ export class Ladder {
   /** Solves the point to which the system is turned; with `isWarm` from the present unknowns first. */
   solve(isWarm: boolean): Outcome {
     const { bench, system } = this;
+    const { circuit, state } = system;
     let iterations = 0;
-    let rung: Rung = "warm start";
-    let attempt: Attempt | null = null;
-    const rungs: [Rung, () => Attempt][] = [
-      ["newton", () => this.fromCold()],
-      ["source ramp", () => ramp(bench)],
-    ];
-    if (isWarm) rungs.unshift(["warm start", () => this.fromPresent()]);
-    for (const [name, run] of rungs) {
-      system.state.share = 1;
-      attempt = run();
+    let last: { kind: Attempt["kind"]; rung: Rung } = { kind: "iteration limit", rung: "newton" };
+    for (const rung of RUNGS) {
+      if (rung === "warm start" && !isWarm) continue;
+      state.share = 1;
+      const attempt = this.attempt(rung);
       iterations += attempt.iterations;
-      rung = name;
+      last = { kind: attempt.kind, rung };
       if (attempt.kind === "converged") break;
     }
-    const residual = largestResidual(system.circuit, system.state);
-    const { kind } = attempt!;
+    const { kind, rung } = last;
+    const residual = largestResidual(circuit, state);
     if (kind === "converged") return { kind, iterations, residual, rung };
     return { kind, iterations, residual, rung, unsettled: unsettled(bench) };
   }
 
-  private fromPresent(): Attempt {
-    this.system.settle();
-    return newton(this.bench, true, WARM_STEPS);
-  }
-
-  private fromCold(): Attempt {
-    this.system.startCold();
-    return newton(this.bench, false, COLD_STEPS);
+  private attempt(rung: Rung): Attempt {
+    switch (rung) {
+      case "warm start":
+        this.system.settle();
+        return newton(this.bench, true, WARM_STEPS);
+      case "newton":
+        this.system.startCold();
+        return newton(this.bench, false, COLD_STEPS);
+      case "source ramp":
+        return ramp(this.bench);
+    }
   }
 }
