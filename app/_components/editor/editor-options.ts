@@ -15,6 +15,7 @@ export const EDITOR_OPTIONS: monaco.editor.IStandaloneEditorConstructionOptions 
   glyphMargin: false,
   folding: false,
   renderLineHighlight: "none",
+  renderFinalNewline: "on",
   guides: { indentation: false, bracketPairs: false, highlightActiveIndentation: false },
   bracketPairColorization: { enabled: false },
   occurrencesHighlight: "off",

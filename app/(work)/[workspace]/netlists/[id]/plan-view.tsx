@@ -4,13 +4,7 @@ import { formatQuantity } from "@/lib/units/quantity";
 import { SweepRuler } from "./sweep-ruler";
 
 /** What a run of the text would compute: sweeps on their rulers, traces, knobs. While the text has errors, the plan before them stays. */
-export function PlanView({
-  examined,
-  stale,
-}: {
-  readonly examined: Examined | null;
-  readonly stale: boolean;
-}) {
+export function PlanView({ examined }: { readonly examined: Examined | null }) {
   const plan = examined?.latestPlan ?? null;
   const past = plan !== null && examined?.plan === null;
   return (
@@ -20,7 +14,7 @@ export function PlanView({
         {plan !== null && (
           <span className="ml-2 font-normal">
             {counted(plan.points, "point")}, {counted(plan.traces.length, "trace")}
-            {past && ", as before the errors"}
+            {past && <b className="text-nodata">, as before the errors</b>}
           </span>
         )}
       </h2>
@@ -31,7 +25,7 @@ export function PlanView({
             : "The plan stands here again when the errors of the text are mended."}
         </p>
       ) : (
-        <div className={stale || past ? "opacity-60" : undefined}>
+        <div>
           <ol className="mt-2 border-t">
             {plan.sweeps.map((sweep, index) => (
               <li key={sweep.knob} className="border-b py-3">

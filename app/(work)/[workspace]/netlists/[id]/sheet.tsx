@@ -79,7 +79,7 @@ export function Sheet({ workspace, netlist, latest, runs, role, mayQueue }: Prop
           />
         </div>
         <div className="grid min-w-0 content-start gap-8 px-4 py-4 md:px-6 lg:h-0 lg:min-h-full lg:overflow-y-auto">
-          <PlanView examined={examined} stale={examined?.text !== text} />
+          <PlanView examined={examined} />
           <LastRuns workspace={workspace} netlistId={netlist.id} first={runs} />
         </div>
       </div>
