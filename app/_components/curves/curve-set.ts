@@ -1,6 +1,6 @@
 import type { AxisDocument, TraceDocument } from "@/lib/analyses/result";
 import type { OutcomeKind } from "@/lib/solver/outcome";
-import { formatKnob } from "./figures-in-words";
+import { formatKnob, isAmbient } from "./figures-in-words";
 
 /** What curves are drawn from: a run document, or a plan with empty columns while nothing is solved. */
 export interface CurveSource {
@@ -12,7 +12,7 @@ export interface CurveSource {
 /** One setting of the outer sweeps: a curve of each trace. */
 export interface Family {
   readonly index: number;
-  /** "25 °C", or "V_y 10 mV, 25 °C" where several knobs are turned. Empty when there is no outer sweep. */
+  /** "25 °C", "V_y 10 mV", "V_y 10 mV, 25 °C". Empty when there is no outer sweep. */
   readonly label: string;
 }
 
@@ -53,7 +53,7 @@ function familyLabel(outer: readonly AxisDocument[], family: number): string {
   return outer
     .map((axis, i) => {
       const text = formatKnob(axis, axis.values[indices[i]!]!);
-      return outer.length === 1 || axis.knob === "temperature" ? text : `${axis.knob} ${text}`;
+      return isAmbient(axis) ? text : `${axis.knob} ${text}`;
     })
     .join(", ");
 }

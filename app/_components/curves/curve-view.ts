@@ -34,8 +34,11 @@ export interface StoreyView extends Storey {
   readonly height: number;
 }
 
-/** Values that reach over more decades than this stand on a logarithmic axis unless the reader says otherwise. */
-const MANY_DECADES = 3;
+/**
+ * Over a ruler, values that reach over this many decades stand on a logarithmic axis unless the reader says otherwise. More than
+ * the upper bound are no measure of anything: a value near zero is then a rest of rounding.
+ */
+const MANY_DECADES = { from: 3, to: 15 };
 
 /** The choice a view makes among what the run has. Names and numbers that it does not have fall out. */
 export function choiceOf(set: CurveSet, view: CurveView): Choice {
@@ -72,8 +75,7 @@ export function storeyViews(set: CurveSet, view: CurveView, horizontal: Axis, na
   return storeys.map((storey, index) => {
     const columns = storey.lines.map(({ values }) => values);
     const fit = logarithmicFit(columns.flat());
-    const usual = fit.fits && fit.decades > MANY_DECADES ? "logarithmic" : "linear";
-    const scale = view.y[storey.unit] ?? usual;
+    const scale = view.y[storey.unit] ?? usualScale(set, fit);
     const mapping: Mapping = scale === "logarithmic" && fit.fits ? { scale, sign: fit.sign } : LINEAR;
     const visible = columns.map((column) => column.filter((_, i) => inView[i]));
     const range = verticalRange(extent(visible, mapping), mapping);
@@ -82,6 +84,11 @@ export function storeyViews(set: CurveSet, view: CurveView, horizontal: Axis, na
     const axis = { mapping, range, ticks, labels: labelsOf(ticks, mapping, storey.unit, false), fit };
     return { ...storey, axis, height };
   });
+}
+
+function usualScale({ axis }: CurveSet, fit: LogarithmicFit): Scale {
+  const many = fit.fits && fit.decades > MANY_DECADES.from && fit.decades < MANY_DECADES.to;
+  return many && axis.scale === "logarithmic" ? "logarithmic" : "linear";
 }
 
 /** Places of the swept values along the horizontal axis, ascending. */

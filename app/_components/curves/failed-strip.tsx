@@ -15,12 +15,14 @@ const APART = 9;
 export function FailedStrip({ spans, x, horizontal, width }: Props) {
   const { from, to } = horizontal.range;
   const across = (place: number) => (width * (place - from)) / (to - from);
+  const inside = (place: number) => across(Math.min(to, Math.max(from, place)));
   const crosses: string[] = [];
   let joined = "";
   let before = Number.NEGATIVE_INFINITY;
   for (const { first, last } of spans) {
-    joined += `M${across(x[first]!).toFixed(1)} 8H${across(x[last]!).toFixed(1)}`;
+    joined += `M${inside(x[first]!).toFixed(1)} 8H${inside(x[last]!).toFixed(1)}`;
     for (let place = first; place <= last; place++) {
+      if (x[place]! < from || x[place]! > to) continue;
       const at = across(x[place]!);
       if (at - before < APART && place !== last) continue;
       crosses.push(`M${(at - 3).toFixed(1)} 5l6 6m0 -6l-6 6`);
@@ -36,7 +38,7 @@ export function FailedStrip({ spans, x, horizontal, width }: Props) {
         height="16"
         stroke="var(--broken)"
         fill="none"
-        style={{ clipPath: "inset(0 -4px)" }}
+        className="overflow-visible"
       >
         <path d={joined} strokeOpacity="0.55" />
         <path d={crosses.join("")} strokeWidth="1.5" />

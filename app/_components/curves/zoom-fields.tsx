@@ -56,7 +56,7 @@ export function ZoomFields({
         aria-invalid={problem === null ? undefined : true}
         autoComplete="off"
         spellCheck={false}
-        className={`${INPUT_CLASS} figures min-h-7 w-24! text-right`}
+        className={`${INPUT_CLASS} figures min-h-7! w-24! text-right`}
       />
     </label>
   );
