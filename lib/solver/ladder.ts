@@ -1,5 +1,7 @@
 import type { System } from "@/lib/circuit/system";
 import { largestResidual } from "./acceptance";
+import { freeUnknowns } from "./dense";
+import type { SparseShape } from "./elimination";
 import { LinearSolver } from "./linear";
 import { type Attempt, type Bench, newton } from "./newton";
 import { type Outcome, RUNGS, type Rung } from "./outcome";
@@ -8,28 +10,34 @@ import { unsettled } from "./unsettled";
 
 const WARM_STEPS = 12;
 const COLD_STEPS = 60;
+/** Singular points of a strand whose matrix is decomposed; each may cost as much as a hundred points. */
+const MOST_DIAGNOSES = 16;
 
 /** Solves a system point by point, each by the first rung of the ladder that leads to an accepted solution. */
 export class Ladder {
   private readonly bench: Bench;
+  private readonly shape: SparseShape;
+  /** Diagnoses that the present strand may still have. */
+  private diagnoses = MOST_DIAGNOSES;
 
   /** The pivots are chosen on a cold start at the point to which `system` is turned. */
   constructor(private readonly system: System) {
     const { pattern, state, circuit } = system;
     system.startCold();
     system.assemble();
-    const shape = {
+    this.shape = {
       size: circuit.size,
       rows: Int32Array.from(pattern.rows),
       columns: Int32Array.from(pattern.columns),
     };
-    const linear = new LinearSolver(shape, state.jacobian);
+    const linear = new LinearSolver(this.shape, state.jacobian);
     this.bench = { system, linear, step: new Float64Array(circuit.size) };
   }
 
   /** Forgets what was solved before, so that the next point does not depend on it. */
   reset(): void {
     this.bench.linear.reset();
+    this.diagnoses = MOST_DIAGNOSES;
   }
 
   /** Solves the point to which the system is turned; with `isWarm` from the present unknowns first. */
@@ -37,19 +45,20 @@ export class Ladder {
     const { bench, system } = this;
     const { circuit, state } = system;
     let iterations = 0;
-    let last: { kind: Attempt["kind"]; rung: Rung } = { kind: "iteration limit", rung: "newton" };
-    for (const rung of RUNGS) {
+    let last: Attempt = { kind: "iteration limit", iterations: 0, wasSingular: false };
+    let rung: Rung = "newton";
+    for (rung of RUNGS) {
       if (rung === "warm start" && !isWarm) continue;
       state.share = 1;
-      const attempt = this.attempt(rung);
-      iterations += attempt.iterations;
-      last = { kind: attempt.kind, rung };
-      if (attempt.kind === "converged") break;
+      last = this.attempt(rung);
+      iterations += last.iterations;
+      if (last.kind === "converged") break;
     }
-    const { kind, rung } = last;
+    const { kind, wasSingular } = last;
     const residual = largestResidual(circuit, state);
     if (kind === "converged") return { kind, iterations, residual, rung };
-    return { kind, iterations, residual, rung, unsettled: unsettled(bench) };
+    const free = wasSingular && this.diagnoses-- > 0 ? freeUnknowns(this.shape, state.jacobian) : [];
+    return { kind, iterations, residual, rung, unsettled: unsettled(bench, free) };
   }
 
   private attempt(rung: Rung): Attempt {

@@ -11,6 +11,8 @@ const POLISHING = 2;
 export interface Attempt {
   readonly kind: OutcomeKind;
   readonly iterations: number;
+  /** Its last matrix was singular, whatever the outcome is called. */
+  readonly wasSingular: boolean;
 }
 
 /** A system with its linear solver and the array its steps are written to. */
@@ -33,15 +35,17 @@ export function newton(bench: Bench, exact: boolean, most: number): Attempt {
     system.assemble();
     if (!linear.solve(state.jacobian, state.residual, step)) {
       const areNumbers = state.residual.every(Number.isFinite) && state.jacobian.every(Number.isFinite);
-      return { kind: areNumbers ? "singular" : "not finite", iterations };
+      return { kind: areNumbers ? "singular" : "not finite", iterations, wasSingular: areNumbers };
     }
     if (isExact && isAccepted(circuit, state, step)) {
       const polished = polish(bench);
-      if (polished > 0) return { kind: "converged", iterations: iterations + polished };
+      if (polished > 0) {
+        return { kind: "converged", iterations: iterations + polished, wasSingular: false };
+      }
     } else advance(state, step);
     isExact = system.follow();
   }
-  return { kind: "iteration limit", iterations: most };
+  return { kind: "iteration limit", iterations: most, wasSingular: false };
 }
 
 /** Takes the accepted step and one more; the count of steps, or 0 where the unknowns then fail the test that they passed. */

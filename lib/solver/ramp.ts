@@ -38,10 +38,10 @@ export function ramp(bench: Bench): Attempt {
     rise /= RETREAT;
     if (rise < LEAST_RISE || iterations > MOST_STEPS) {
       const kind = rise < LEAST_RISE ? "step too small" : "iteration limit";
-      return { kind, iterations };
+      return { kind, iterations, wasSingular: attempt.wasSingular };
     }
     state.x.set(x);
     state.low.set(low);
   }
-  return { kind: "converged", iterations };
+  return { kind: "converged", iterations, wasSingular: false };
 }
