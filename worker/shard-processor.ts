@@ -6,9 +6,9 @@ import { type Claim, claimShard } from "@/lib/services/shards/claim-shard";
 import { completeShard } from "@/lib/services/shards/complete-shard";
 import { failShard } from "@/lib/services/shards/fail-shard";
 import { releaseShard } from "@/lib/services/shards/release-shard";
+import * as sentences from "@/lib/services/shards/sentences";
 import { LeaseKeeper } from "./lease-keeper";
 import { isPassing, persist } from "./retry";
-import * as sentences from "./sentences";
 import type { Ended, Limits } from "./thread";
 import type { ThreadPool } from "./thread-pool";
 

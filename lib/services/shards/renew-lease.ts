@@ -32,21 +32,26 @@ export async function renewLease(
   return "held";
 }
 
-/** Adds a progress event unless the run's last event is quite new. */
+/** Adds a progress event, unless the run's last event is quite new or another is being added. */
 async function tellProgress(runId: string): Promise<void> {
   await database().transaction(async (transaction) => {
-    const [due] = await transaction
-      .select({ id: run.id })
+    const [held] = await transaction
+      .select({ lastEvent: run.lastEvent })
       .from(run)
-      .leftJoin(event, and(eq(event.runId, run.id), eq(event.sequence, run.lastEvent)))
+      .where(and(eq(run.id, runId), eq(run.status, "running")))
+      .for("no key update", { skipLocked: true });
+    if (held === undefined) return;
+    // A look of its own: beside the lock it might see the event that was the last before the lock was got.
+    const [recent] = await transaction
+      .select({ sequence: event.sequence })
+      .from(event)
       .where(
         and(
-          eq(run.id, runId),
-          eq(run.status, "running"),
-          sql`${event.at} IS NULL OR ${event.at} < now() - make_interval(secs => ${1 / EVENTS_PER_SECOND}::float8)`,
+          eq(event.runId, runId),
+          eq(event.sequence, held.lastEvent),
+          sql`${event.at} > now() - make_interval(secs => ${1 / EVENTS_PER_SECOND}::float8)`,
         ),
-      )
-      .for("no key update", { of: run });
-    if (due !== undefined) await appendEvent(transaction, runId, "progress");
+      );
+    if (recent === undefined) await appendEvent(transaction, runId, "progress");
   });
 }

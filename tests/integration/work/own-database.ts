@@ -7,6 +7,8 @@ import { closeListener } from "@/lib/services/events/listen";
 
 export interface OwnDatabase {
   readonly url: string;
+  /** Turns everybody out and lets nobody in, or lets them in again. */
+  shut(closed: boolean): Promise<void>;
   /** Ends this process's connections and drops the database. */
   drop(): Promise<void>;
 }
@@ -27,6 +29,14 @@ export async function ownDatabase(beside = process.env.TEST_DATABASE_URL): Promi
   process.env.DATABASE_URL = url;
   return {
     url,
+    async shut(closed) {
+      await command(beside, `ALTER DATABASE ${name} ALLOW_CONNECTIONS ${!closed}`);
+      if (closed)
+        await command(
+          beside,
+          `SELECT pg_terminate_backend(pid) FROM pg_stat_activity WHERE datname = '${name}'`,
+        );
+    },
     async drop() {
       await disconnect();
       await command(beside, `DROP DATABASE ${name} WITH (FORCE)`);

@@ -19,3 +19,32 @@ show v = out.v
 
 /** Some hundred thousand points in more than twenty shards: long enough to be disturbed in the middle. */
 export const LONG_TEXT = longText(2_000);
+
+/** A ladder of so many resistors and diodes (invented), 4001 points in two shards. Its second shard takes seconds. */
+export function ladderText(sections: number): string {
+  const rungs = Array.from(
+    { length: sections },
+    (_, i) => `n${i} -- R${i} : resistor 1 kΩ -- n${i + 1}\nn${i + 1} -- D${i} : d -- ground`,
+  );
+  return `title "Ladder"
+knob V_in = 1 V
+model d : diode { Is = 1 nA, n = 1.8 }
+ground -- V0 : voltage V_in -- n0
+${rungs.join("\n")}
+sweep V_in from 1 mV to 10 V, 1000 per decade
+show v = n${sections}.v
+`;
+}
+
+/** The longest second shard that a netlist of a permitted size gives. */
+export const SLOW_TEXT = ladderText(990);
+
+/** A text within all limits whose sums of a quarter of a million characters want more than 40 MiB to be read. */
+export function largeText(): string {
+  const sums: string[] = [];
+  for (let i = 0, length = 0; length < 240_000; i++) {
+    sums.push(`let a${i} = ${i === 0 ? "1" : `a${i - 1}`}${"+1".repeat(250)}`);
+    length += sums[i]!.length;
+  }
+  return `${ladderText(2)}${sums.join("\n")}\n`;
+}

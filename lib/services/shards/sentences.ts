@@ -1,10 +1,11 @@
-import type { Claim } from "@/lib/services/shards/claim-shard";
+import { count } from "@/lib/language/limits";
+import type { Claim } from "./claim-shard";
+
+/** Why a run failed as a whole, for people. */
 
 type Points = Pick<Claim, "from" | "to">;
 
-const count = (n: number) => n.toLocaleString("en-GB");
-
-/** "point 1" or "points 257 to 4,096", as people count them. */
+/** "point 1" or "points 257 to 512", as people count them. */
 function range({ from, to }: Points): string {
   return to - from === 1 ? `point ${count(to)}` : `points ${count(from + 1)} to ${count(to)}`;
 }
