@@ -16,6 +16,8 @@ const SOURCES = [
   "tailwind.config.ts",
   "tsconfig.json",
 ];
+/** The stack starts what was built and is itself no part of it. */
+const NO_SOURCE = "lib/stack";
 
 /** Hash of the contents of the sources, so that a change of time alone builds nothing again. */
 export function sourceStamp(checkout: string, sources: readonly string[] = SOURCES): string {
@@ -30,7 +32,7 @@ export function sourceStamp(checkout: string, sources: readonly string[] = SOURC
 /** Paths below `start`, which may itself be a file, relative to `top` and in a fixed order. */
 function filesBelow(top: string, start: string): string[] {
   const full = join(top, start);
-  if (!existsSync(full)) return [];
+  if (start === NO_SOURCE || !existsSync(full)) return [];
   if (statSync(full).isFile()) return [start];
   return readdirSync(full)
     .sort()
