@@ -44,6 +44,7 @@ export function LineTable({ set, storeys, choice, cursor, onTraces, onFamilies }
                 {at === null || at === undefined
                   ? "Lines"
                   : `At ${set.axis.knob} ${formatKnob(set.axis, at)}`}
+                {set.outer.length > 0 && `, by ${set.outer.map(({ knob }) => knob).join(" and ")}`}
               </span>
             </HeadCell>
             {traces.map(({ name, unit }) => (

@@ -38,7 +38,9 @@ function course(lines: readonly Line[]): string {
   if (values.length === 0) return `${line.trace} has no solved point yet`;
   const low = values.reduce((a, b) => Math.min(a, b));
   const high = values.reduce((a, b) => Math.max(a, b));
-  const show = (value: number) => formatQuantity(value, line.unit);
+  // What is smaller than rounding leaves of the largest value is zero to a reader.
+  const rest = 1e-15 * Math.max(Math.abs(low), Math.abs(high));
+  const show = (value: number) => formatQuantity(Math.abs(value) < rest ? 0 : value, line.unit);
   if (low === high) return `${line.trace} is ${show(low)} throughout`;
   const ways = new Set(lines.map(({ values: column }) => way(column)));
   if (ways.size > 1 || ways.has("turns")) return `${line.trace} lies between ${show(low)} and ${show(high)}`;

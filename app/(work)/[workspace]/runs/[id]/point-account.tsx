@@ -39,7 +39,12 @@ export function PointAccountView({ account }: { readonly account: PointAccount }
         {iterations !== null && (
           <Row name="iterations">{rung === null ? iterations : `${iterations}, ${rung}`}</Row>
         )}
-        {residual !== null && <Row name="largest residual">{formatPower(residual)}&#8239;A</Row>}
+        {residual !== null && (
+          <Row name="largest residual">
+            <Power value={residual} />
+            &#8239;A
+          </Row>
+        )}
         {solved &&
           traces.map(({ name, unit, value }) => (
             <Row key={name} name={name}>
@@ -67,7 +72,7 @@ function Figures({ title, figures }: { readonly title: string; readonly figures:
   return (
     <div>
       <h3 className="caption">{title}</h3>
-      <dl className="mt-1 max-h-80 overflow-y-auto border-t">
+      <dl className="mt-1 border-t">
         {figures.map(({ name, unit, value }) => (
           <Row key={name} name={name}>
             {formatValue(value, unit)}
@@ -80,19 +85,20 @@ function Figures({ title, figures }: { readonly title: string; readonly figures:
 
 function Row({ name, children }: { readonly name: string; readonly children: ReactNode }) {
   return (
-    <div className="flex items-baseline justify-between gap-4 border-b py-1.5">
+    <div className="flex items-baseline justify-between gap-4 border-b py-1">
       <dt className="figures min-w-0 break-words">{name}</dt>
       <dd className="figures whitespace-nowrap text-right">{children}</dd>
     </div>
   );
 }
 
-/** Two digits and a power of ten, for a size that is near nothing: "4.1·10⁻²⁰". */
-function formatPower(value: number): string {
+/** Two digits and a power of ten, for a size that is near nothing. */
+function Power({ value }: { readonly value: number }) {
   if (value === 0) return "0";
   const [digits, exponent] = value.toExponential(1).split("e");
-  const raised = [...String(Number(exponent))]
-    .map((c) => (c === "-" ? "⁻" : "⁰¹²³⁴⁵⁶⁷⁸⁹"[Number(c)]))
-    .join("");
-  return `${digits}·10${raised}`.replace(/^-/, "\u2212");
+  return (
+    <>
+      {digits}&#8239;·&#8239;10<sup>{String(Number(exponent)).replace("-", "\u2212")}</sup>
+    </>
+  );
 }
