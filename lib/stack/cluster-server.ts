@@ -11,6 +11,9 @@ const READY_WITHIN = 120_000;
 /** Tries while the processes of a killed server still hold its memory. */
 const TRIES = 20;
 
+/** Name of the server among the programs that run. */
+export const DATABASE = "database";
+
 const CARELESS = ["fsync=off", "synchronous_commit=off", "full_page_writes=off"];
 
 /**
@@ -44,7 +47,7 @@ function order(cluster: Cluster) {
   ];
   const options = settings.flatMap((setting) => ["-c", setting]);
   return {
-    name: "PostgreSQL",
+    name: DATABASE,
     program: join(cluster.programs, "postgres"),
     args: ["-D", cluster.folder, "-p", String(cluster.port), ...options],
     folder: cluster.folder,

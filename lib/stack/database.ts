@@ -1,6 +1,6 @@
 import { join } from "node:path";
 import { type Cluster, ensureDatabase, initialise, ROLE, urlOf } from "./cluster";
-import { startServer } from "./cluster-server";
+import { DATABASE, startServer } from "./cluster-server";
 import { run } from "./command";
 import { Complaint, fullDisk } from "./complaint";
 import { ensureTools, postgresql } from "./debian";
@@ -40,7 +40,7 @@ export async function openDatabase(folders: Folders, told: Told): Promise<Databa
     careless: false,
   };
   await initialise(cluster);
-  const keeper = await keep("PostgreSQL", () => startServer(cluster), told);
+  const keeper = await keep(DATABASE, () => startServer(cluster), told);
   await ensureDatabase(cluster, ROLE);
   return { url: urlOf(cluster, ROLE), settings, keeper };
 }

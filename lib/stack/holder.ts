@@ -1,4 +1,5 @@
 import { linkSync, readFileSync, renameSync, rmSync, writeFileSync } from "node:fs";
+import { DATABASE } from "./cluster-server";
 import { Complaint } from "./complaint";
 import { endProcess, identityOf } from "./identity";
 
@@ -67,16 +68,21 @@ async function take(file: string, own: string, text: string, what: string): Prom
     }
     const other = read(file);
     if (other !== null && identityOf(other.pid) === other.identity) throw new Complaint(inUse(other, what));
-    for (const child of [...(other?.children ?? [])].reverse()) await endLeftover(child);
+    for (const child of inStoppingOrder(other?.children ?? [])) await endLeftover(child);
     rmSync(file, { force: true });
   }
+}
+
+/** The database last, since the others use it. */
+function inStoppingOrder(children: readonly Known[]): readonly Known[] {
+  return [...children].sort((a, b) => Number(a.name === DATABASE) - Number(b.name === DATABASE));
 }
 
 /** Ends a program of a start that was killed. To PostgreSQL, SIGTERM would mean to wait for its clients. */
 async function endLeftover({ name, pid, identity }: Known): Promise<void> {
   if (identityOf(pid) !== identity) return;
   console.log(`Ending the ${name} (process ${pid}), which an earlier start left behind.`);
-  const first = name === "PostgreSQL" ? "SIGINT" : "SIGTERM";
+  const first = name === DATABASE ? "SIGINT" : "SIGTERM";
   await endProcess(pid, [
     [first, 8_000],
     ["SIGKILL", 2_000],
