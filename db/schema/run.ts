@@ -18,6 +18,14 @@ import { workspace } from "./workspace";
 
 export const runStatus = pgEnum("run_status", ["queued", "running", "done", "failed", "cancelled"]);
 
+/** Which points of a run its small curve shows: at most 64 along the first axis, in ascending order of `x` from 0 to 1. */
+export interface Preview {
+  readonly points: readonly number[];
+  readonly x: readonly number[];
+  /** Decades that a logarithmic axis spans; 0 for another. */
+  readonly decades: number;
+}
+
 /** One solving of one revision. This row is the truth about it; queue jobs only carry its id. */
 export const run = pgTable(
   "run",
@@ -35,6 +43,8 @@ export const run = pgTable(
     title: text().notNull(),
     status: runStatus().notNull().default("queued"),
     plan: jsonb().$type<Plan>().notNull(),
+    /** Null where there is no curve to draw. Kept apart from the plan, which may hold a million values. */
+    preview: jsonb().$type<Preview>(),
     points: integer().notNull(),
     pointsDone: integer("points_done").notNull().default(0),
     pointsFailed: integer("points_failed").notNull().default(0),

@@ -9,6 +9,7 @@ import { ENGINE_VERSION } from "@/lib/analyses/version";
 import type { Actor } from "@/lib/permissions/actor";
 import { appendEvent } from "../events/append-event";
 import type { NetlistRecord } from "../netlists/find-netlist";
+import { previewOf } from "./preview";
 
 export interface AddedRun {
   readonly id: string;
@@ -43,6 +44,7 @@ export async function addRun(
       revisionNumber,
       title: plan.title || of.title,
       plan,
+      preview: previewOf(plan),
       points: plan.points,
       shardsLeft: shards.length,
       requestedBy: actor.userId,
