@@ -1,0 +1,28 @@
+import { expect, test } from "vitest";
+import { drivenCurrent } from "@/lib/devices/current";
+import { opampMismatch } from "@/lib/devices/opamp";
+import { conductance } from "@/lib/devices/resistor";
+import { voltageMismatch } from "@/lib/devices/voltage";
+
+test("a resistor drifts from 25 °C, and without drift not at all", () => {
+  expect(conductance(1000, null, 400)).toBe(1 / 1000);
+  expect(conductance(1000, 100e-6, 298.15)).toBe(1 / 1000);
+  // 1 kΩ · (1 + 100 ppm/K · 50 K) = 1005 Ω, by hand.
+  expect(conductance(1000, 100e-6, 348.15)).toBeCloseTo(1 / 1005, 15);
+});
+
+test("a voltage element raises the potential from left to right", () => {
+  // Left at 1 V, right at 4 V, 3 V element: nothing amiss.
+  expect(voltageMismatch(1 - 4, 3)).toBe(0);
+  expect(voltageMismatch(1 - 4, 2)).toBe(1);
+});
+
+test("a current element drives the share of its value that acts", () => {
+  expect(drivenCurrent(2e-6, 1)).toBe(2e-6);
+  expect(drivenCurrent(2e-6, 0.25)).toBe(5e-7);
+});
+
+test("an amplifier of gain A holds vout = A·(difference + offset); an ideal one no difference but the offset", () => {
+  expect(opampMismatch(2e-5, 1e-5, 3, 1 / 1e5)).toBeCloseTo(0, 18);
+  expect(opampMismatch(-1e-4, 1e-4, 7, 0)).toBe(0);
+});
