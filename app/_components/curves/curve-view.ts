@@ -40,6 +40,9 @@ export interface StoreyView extends Storey {
  */
 const MANY_DECADES = { from: 3, to: 15 };
 
+/** Px along the ruler that a label takes with the room around it. */
+const LABEL_ROOM = 60;
+
 /** The choice a view makes among what the run has. Names and numbers that it does not have fall out. */
 export function choiceOf(set: CurveSet, view: CurveView): Choice {
   const usual = usualChoice(set);
@@ -57,7 +60,7 @@ export function horizontalAxis(set: CurveSet, view: CurveView, width: number): A
   const found = extent([shown], mapping) ?? { from: 0, to: 1 };
   const whole = found.from === found.to ? verticalRange(found, mapping) : found;
   const range = zoomed(whole, view.zoom === null ? null : placesOfZoom(set, mapping, view.zoom));
-  const ticks = ticksOf(range.from, range.to, mapping, Math.max(2, Math.floor(width / 76)));
+  const ticks = ticksOf(range.from, range.to, mapping, Math.max(2, Math.floor(width / LABEL_ROOM)));
   return { mapping, range, ticks, labels: labelsOf(ticks, mapping, shownUnit(set.axis), true), fit };
 }
 

@@ -4,6 +4,8 @@ import { placeOf } from "./scale";
 
 /** Px between the middles of two labels. */
 const GAP = 15;
+/** Px from the edge of a storey to the middle of its outermost label, so that storeys keep their labels apart. */
+const EDGE = 5;
 
 /** Labels at the ends of the lines, moved apart where they would touch; each with a piece of its line. */
 export function DirectLabels({
@@ -19,9 +21,9 @@ export function DirectLabels({
   const down = (place: number) => (height * (axis.range.to - place)) / (axis.range.to - axis.range.from);
   const wishes = lines.flatMap((line) => {
     const at = lastPlace(line.values, x, horizontal, axis);
-    return line.label === "" || at === null ? [] : [{ key: line.key, at: down(at) }];
+    return line.label === "" || at === null ? [] : [{ key: line.key, at: down(at) - EDGE }];
   });
-  const places = placeLabels(wishes, height, GAP);
+  const places = placeLabels(wishes, height - 2 * EDGE, GAP);
   return (
     <div aria-hidden="true">
       {lines.map((line) => {
@@ -31,7 +33,7 @@ export function DirectLabels({
           <span
             key={line.key}
             className="figures absolute left-full ml-1.5 flex -translate-y-1/2 items-center gap-1.5 whitespace-nowrap text-xs leading-none"
-            style={{ top }}
+            style={{ top: top + EDGE }}
           >
             <svg aria-hidden="true" width="14" height="4" viewBox="0 0 14 4" fill="none">
               <path

@@ -66,7 +66,7 @@ export function LineTable({ set, storeys, choice, cursor, onTraces, onFamilies }
         <tbody>
           {set.families.map((family) => (
             <tr key={family.index}>
-              <Cell className="py-1">
+              <Cell className="py-1!">
                 {set.families.length > 1 ? (
                   <Switch
                     checked={choice.families.includes(family.index)}
@@ -81,7 +81,7 @@ export function LineTable({ set, storeys, choice, cursor, onTraces, onFamilies }
               {traces.map((trace) => {
                 const line = drawn.get(`${trace.name} ${family.index}`);
                 return (
-                  <Cell key={trace.name} figure className="py-1">
+                  <Cell key={trace.name} figure className="py-1!">
                     <span className="flex min-h-6 items-center justify-end gap-2.5 text-xs">
                       {value(trace, family.index)}
                       {line !== undefined && <LineSample style={line.style} />}

@@ -1,13 +1,12 @@
 "use client";
 
 import { useMemo } from "react";
-import { Button } from "@/app/_components/ui/button";
 import { classNames } from "@/app/_components/ui/class-names";
 import { formatCount } from "@/app/_components/ui/count";
 import { Pager } from "@/app/_components/ui/pager";
 import { Cell, HeadCell, Table, TableFrame } from "@/app/_components/ui/table";
 import { type CurveSource, settingOf } from "./curve-set";
-import { formatKnob, formatValue, shownUnit } from "./figures-in-words";
+import { formatKnob, formatValue } from "./figures-in-words";
 
 interface Props {
   readonly source: CurveSource;
@@ -64,10 +63,14 @@ export function NumberTable({ source, page, failedOnly, point, onPage, onFailedO
               <tr>
                 <HeadCell figure>Point</HeadCell>
                 {axes.map((axis) => (
-                  <Head key={axis.knob} name={axis.knob} unit={shownUnit(axis)} />
+                  <HeadCell key={axis.knob} figure>
+                    <span className="whitespace-nowrap text-ink">{axis.knob}</span>
+                  </HeadCell>
                 ))}
-                {traces.map(({ name, unit }) => (
-                  <Head key={name} name={name} unit={unit} />
+                {traces.map(({ name }) => (
+                  <HeadCell key={name} figure>
+                    <span className="whitespace-nowrap text-ink">{name}</span>
+                  </HeadCell>
                 ))}
                 <HeadCell>Outcome</HeadCell>
               </tr>
@@ -79,18 +82,18 @@ export function NumberTable({ source, page, failedOnly, point, onPage, onFailedO
                   className={classNames(k === point && "bg-wash")}
                   aria-current={k === point || undefined}
                 >
-                  <Cell figure className="py-1">
-                    <Button
-                      size="small"
-                      tone="quiet"
+                  <Cell figure className="py-0.5! align-middle!">
+                    <button
+                      type="button"
                       aria-label={`Show point ${k} in full`}
                       onClick={() => onPoint(k)}
+                      className="min-h-6 min-w-6 text-right underline decoration-edge underline-offset-3 hover:decoration-ink"
                     >
-                      <span className="figures text-xs underline underline-offset-3">{formatCount(k)}</span>
-                    </Button>
+                      {formatCount(k)}
+                    </button>
                   </Cell>
                   {settingOf(axes, k).map(({ axis, value }) => (
-                    <Cell key={axis.knob} figure className="py-2">
+                    <Cell key={axis.knob} figure className="py-1! align-middle!">
                       {formatKnob(axis, value)}
                     </Cell>
                   ))}
@@ -98,7 +101,10 @@ export function NumberTable({ source, page, failedOnly, point, onPage, onFailedO
                     <Cell
                       key={name}
                       figure
-                      className={classNames("py-2", (values[k] ?? null) === null && "text-quiet")}
+                      className={classNames(
+                        "py-1! align-middle!",
+                        (values[k] ?? null) === null && "text-quiet",
+                      )}
                     >
                       {formatValue(values[k] ?? null, unit)}
                     </Cell>
@@ -115,19 +121,12 @@ export function NumberTable({ source, page, failedOnly, point, onPage, onFailedO
   );
 }
 
-function Head({ name, unit }: { readonly name: string; readonly unit: string }) {
-  return (
-    <HeadCell figure>
-      <span className="whitespace-nowrap text-ink">{name}</span>{" "}
-      {unit !== "1" && <span className="figures whitespace-nowrap text-xs">{unit}</span>}
-    </HeadCell>
-  );
-}
-
 function Outcome({ outcome }: { readonly outcome: string | null }) {
   const failed = outcome !== null && outcome !== "converged";
   return (
-    <Cell className={classNames("whitespace-nowrap py-2", failed ? "text-broken" : "text-quiet")}>
+    <Cell
+      className={classNames("whitespace-nowrap py-1! align-middle!", failed ? "text-broken" : "text-quiet")}
+    >
       {outcome === null ? "not solved" : failed ? `failed: ${outcome}` : "converged"}
     </Cell>
   );

@@ -46,7 +46,7 @@ export function RunFacts({ workspace, run }: { readonly workspace: string; reado
             {waited} waiting{took !== "" && `, ${took} from first to last point`}
           </Fact>
         )}
-        <Fact name="Engine">{run.engineVersion}</Fact>
+        <Fact name="Engine">version {run.engineVersion}</Fact>
         <Fact name="Take along">
           <a
             className="link mr-4"
