@@ -12,7 +12,7 @@ export async function readJson(request: Request): Promise<Record<string, unknown
   const type = request.headers.get("content-type")?.split(";")[0]?.trim().toLowerCase();
   if (type !== "application/json")
     throw new AppError("invalid", "Send JSON, with the content type application/json.");
-  const bytes = await readBytes(request);
+  const bytes = await readBytes(request, MOST_BYTES);
   let value: unknown;
   try {
     value = JSON.parse(new TextDecoder("utf-8", { fatal: true }).decode(bytes));
@@ -25,21 +25,20 @@ export async function readJson(request: Request): Promise<Record<string, unknown
   return value as Record<string, unknown>;
 }
 
-async function readBytes(request: Request): Promise<Uint8Array> {
-  if (Number(request.headers.get("content-length") ?? 0) > MOST_BYTES) throw tooLarge();
+/** The bytes of a request's body. Throws "too large" as soon as more than `most` have come. */
+export async function readBytes(request: Request, most: number): Promise<Buffer<ArrayBuffer>> {
+  const tooLarge = () =>
+    new AppError(
+      "too large",
+      `The request is larger than ${count(most)} bytes. Split it and send the parts.`,
+    );
+  if (Number(request.headers.get("content-length") ?? 0) > most) throw tooLarge();
   const pieces: Uint8Array[] = [];
   let size = 0;
   for await (const piece of request.body ?? []) {
     size += piece.length;
-    if (size > MOST_BYTES) throw tooLarge();
+    if (size > most) throw tooLarge();
     pieces.push(piece);
   }
   return Buffer.concat(pieces);
-}
-
-function tooLarge(): AppError {
-  return new AppError(
-    "too large",
-    `The request is larger than ${count(MOST_BYTES)} bytes. Split it and send the parts.`,
-  );
 }

@@ -3,6 +3,7 @@ import RedisMock from "ioredis-mock";
 import type { NextAuthOptions } from "next-auth";
 import { encode } from "next-auth/jwt";
 import { afterAll, beforeAll, beforeEach, describe, expect, it, vi } from "vitest";
+import { POST as signInRoute } from "@/app/api/auth/[...nextauth]/route";
 import { database } from "@/db/client";
 import { makeActor, makeUser, PASSWORD } from "@/db/factories";
 import { membership } from "@/db/schema/membership";
@@ -67,6 +68,24 @@ describe("sign-in", () => {
     const { email } = await makeUser();
     for (let i = 0; i < 10; i++) expect(await authorize({ email, password: "wrong" })).toBeNull();
     await expect(authorize({ email, password: PASSWORD })).rejects.toThrow(/^too many:\d+$/);
+  });
+});
+
+describe("the endpoints of sign-in", () => {
+  it("refuse a form of more than 16 KiB, which next-auth would read to its end, and one from another site", async () => {
+    const send = (headers: Record<string, string>, password: string) =>
+      signInRoute(
+        new Request("http://127.0.0.1:3000/api/auth/callback/credentials", {
+          method: "POST",
+          headers: { "content-type": "application/x-www-form-urlencoded", ...headers },
+          body: new URLSearchParams({ password }),
+        }),
+        { params: Promise.resolve({ nextauth: ["callback", "credentials"] }) },
+      );
+    const large = await send({}, "x".repeat(16 * 1024));
+    expect([large.status, (await large.json()).code]).toEqual([413, "too large"]);
+    const foreign = await send({ cookie: "a=b", origin: "https://evil.example" }, "x");
+    expect([foreign.status, (await foreign.json()).code]).toEqual([403, "not allowed"]);
   });
 });
 
