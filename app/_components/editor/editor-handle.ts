@@ -15,12 +15,14 @@ export interface EditorHandle {
   format(): void;
 }
 
+/** What the Tab key does in the text: indents, or moves the focus on, for now or always. */
+export type TabDoes = "indents" | "moves on" | "always moves on";
+
 /** What the editor tells the page. */
 export interface EditorEvents {
   /** After each change; ask the handle for the text when it is needed. */
   readonly onEdit: () => void;
   readonly onQueue: () => void;
   readonly onSave: () => void;
-  /** Whether the Tab key now moves the focus on instead of indenting. */
-  readonly onTabMoves: (moves: boolean) => void;
+  readonly onTab: (does: TabDoes) => void;
 }

@@ -34,6 +34,9 @@ export const EDITOR_OPTIONS: monaco.editor.IStandaloneEditorConstructionOptions 
   scrollBeyondLastLine: false,
   wordWrap: "on",
   wrappingIndent: "indent",
+  // A quantity such as 25 °C stays whole.
+  wordWrapBreakAfterCharacters: " \t,",
+  wordWrapBreakBeforeCharacters: "{(",
   fixedOverflowWidgets: true,
   tabSize: 2,
   insertSpaces: true,

@@ -100,7 +100,8 @@ function addKeys(editor: monaco.editor.IStandaloneCodeEditor, events: EditorEven
   editor.addAction(save);
   const { tabFocusMode } = monaco.editor.EditorOption;
   editor.onDidChangeConfiguration((change) => {
-    if (change.hasChanged(tabFocusMode)) events.onTabMoves(editor.getOption(tabFocusMode));
+    if (change.hasChanged(tabFocusMode))
+      events.onTab(editor.getOption(tabFocusMode) ? "moves on" : "indents");
   });
 }
 

@@ -42,7 +42,7 @@ export function NetlistEditor({ ref, initial, readOnly, problems, ...events }: P
       onEdit: () => live.current.onEdit(),
       onQueue: () => live.current.onQueue(),
       onSave: () => live.current.onSave(),
-      onTabMoves: (moves) => live.current.onTabMoves(moves),
+      onTab: (does) => live.current.onTab(does),
     };
     import("./mount-editor")
       .then(({ mountEditor }) => mountEditor(place.current!, { text: initial, readOnly, label: LABEL }, told))
@@ -53,7 +53,9 @@ export function NetlistEditor({ ref, initial, readOnly, problems, ...events }: P
       })
       .catch((error: unknown) => {
         console.error("The editor could not be loaded; a plain box takes its place.", error);
-        if (!gone) setState("missing");
+        if (gone) return;
+        setState("missing");
+        told.onTab("always moves on");
       });
     return () => {
       gone = true;

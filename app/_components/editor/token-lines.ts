@@ -10,7 +10,7 @@ export interface LineToken {
 }
 
 /** Longest statement, in UTF-16 units, whose beginning is remembered; beyond it a line is read on its own. */
-const MOST_OPEN = 8192;
+const MOST_OPEN = 1024;
 
 /**
  * The tokens of one line, read as the continuation of `open`: the statement that the lines before it ended with, which may go on.

@@ -13,11 +13,12 @@ import { RUNS_SHOWN, type RunLine, type RunLines } from "./run-line";
 interface Props {
   readonly workspace: string;
   readonly netlistId: string;
+  readonly title: string;
   readonly first: RunLines;
 }
 
 /** The latest runs of this netlist with their state; looked up every two seconds while one of them moves. */
-export function LastRuns({ workspace, netlistId, first }: Props) {
+export function LastRuns({ workspace, netlistId, title, first }: Props) {
   const { data, error } = useQuery({
     queryKey: ["runs", workspace, netlistId],
     initialData: first,
@@ -36,7 +37,11 @@ export function LastRuns({ workspace, netlistId, first }: Props) {
           Last runs
         </h2>
         {data.total > RUNS_SHOWN && (
-          <ButtonLink size="small" tone="quiet" href={`/${workspace}/runs?netlist=${netlistId}`}>
+          <ButtonLink
+            size="small"
+            tone="quiet"
+            href={`/${workspace}/runs?query=${encodeURIComponent(title)}`}
+          >
             All {formatCount(data.total)}
           </ButtonLink>
         )}
@@ -50,8 +55,8 @@ export function LastRuns({ workspace, netlistId, first }: Props) {
         </p>
       ) : (
         <ul className="mt-2 border-t">
-          {data.rows.map((run) => (
-            <RunItem key={run.id} workspace={workspace} run={run} />
+          {data.rows.map((run, index) => (
+            <RunItem key={run.id} workspace={workspace} run={run} newest={index === 0} />
           ))}
         </ul>
       )}
@@ -59,12 +64,20 @@ export function LastRuns({ workspace, netlistId, first }: Props) {
   );
 }
 
-function RunItem({ workspace, run }: { readonly workspace: string; readonly run: RunLine }) {
+interface ItemProps {
+  readonly workspace: string;
+  readonly run: RunLine;
+  readonly newest: boolean;
+}
+
+// The newest run is fetched ahead with the code of its page, so that the page of the next one stands at once.
+function RunItem({ workspace, run, newest }: ItemProps) {
   return (
     <li className="grid gap-1 border-b py-2">
       <div className="flex flex-wrap items-baseline justify-between gap-x-4">
         <Link
           href={`/${workspace}/runs/${run.id}`}
+          prefetch={newest ? true : null}
           className="inline-block min-h-6 font-semibold text-sm underline-offset-3 hover:underline"
         >
           Run {run.number}

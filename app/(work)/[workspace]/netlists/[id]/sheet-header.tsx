@@ -6,6 +6,7 @@ import { PageHeader } from "@/app/_components/ui/page-header";
 import type { Role } from "@/lib/permissions/actor";
 import { SaveDialog } from "./save-dialog";
 import { shortHash } from "./saved";
+import { useKeyNames } from "./use-key-names";
 import type { SheetState } from "./use-sheet";
 
 interface Props {
@@ -19,6 +20,7 @@ interface Props {
 /** The netlist's name, the revision the text stands upon, and what can be done with it. */
 export function SheetHeader({ sheet, title, netlist, role, mayQueue }: Props) {
   const { saved, changed, errors, busy, editor } = sheet;
+  const keys = useKeyNames();
   const remark = (
     <>
       <span aria-live="polite">
@@ -44,7 +46,7 @@ export function SheetHeader({ sheet, title, netlist, role, mayQueue }: Props) {
       actions={
         <>
           {reason !== null && (
-            <p id="queue-reason" className="text-quiet text-sm">
+            <p id="queue-reason" className={mayQueue ? "sr-only" : "text-quiet text-sm"}>
               {reason}
             </p>
           )}
@@ -62,7 +64,7 @@ export function SheetHeader({ sheet, title, netlist, role, mayQueue }: Props) {
             busy={busy === "queueing"}
             onClick={() => void sheet.queue()}
           >
-            {busy === "queueing" ? "Queueing…" : "Queue run"} <Keys>Ctrl ↵</Keys>
+            {busy === "queueing" ? "Queueing…" : "Queue run"} <Keys>{keys.queue}</Keys>
           </Button>
         </>
       }

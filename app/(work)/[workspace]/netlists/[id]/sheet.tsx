@@ -1,6 +1,7 @@
 "use client";
 
 import { useEffect, useState } from "react";
+import type { TabDoes } from "@/app/_components/editor/editor-handle";
 import { NetlistEditor } from "@/app/_components/editor/netlist-editor";
 import { ProblemList } from "@/app/_components/editor/problem-list";
 import type { Role } from "@/lib/permissions/actor";
@@ -27,7 +28,7 @@ interface Props {
 export function Sheet({ workspace, netlist, latest, runs, role, mayQueue }: Props) {
   const sheet = useSheet({ workspace, netlistId: netlist.id, latest, mayQueue });
   const { editor, examined, text, saved } = sheet;
-  const [tabMoves, setTabMoves] = useState(false);
+  const [tab, setTab] = useState<TabDoes>("indents");
   const problems = examined?.diagnostics ?? [];
 
   useEffect(() => {
@@ -59,7 +60,7 @@ export function Sheet({ workspace, netlist, latest, runs, role, mayQueue }: Prop
               onEdit={sheet.edited}
               onQueue={() => void sheet.queue()}
               onSave={() => mayQueue && sheet.openSave(true)}
-              onTabMoves={setTabMoves}
+              onTab={setTab}
             />
           </div>
           {examined !== null && problems.length > 0 && (
@@ -71,16 +72,11 @@ export function Sheet({ workspace, netlist, latest, runs, role, mayQueue }: Prop
               onMend={(one) => one.fix !== undefined && editor.current?.mend(one.fix, examined.text)}
             />
           )}
-          <StatusLine
-            examined={examined}
-            stale={examined?.text !== text}
-            tabMoves={tabMoves}
-            readOnly={!mayQueue}
-          />
+          <StatusLine examined={examined} stale={examined?.text !== text} tab={tab} readOnly={!mayQueue} />
         </div>
         <div className="grid min-w-0 content-start gap-8 px-4 py-4 md:px-6 lg:h-0 lg:min-h-full lg:overflow-y-auto">
           <PlanView examined={examined} />
-          <LastRuns workspace={workspace} netlistId={netlist.id} first={runs} />
+          <LastRuns workspace={workspace} netlistId={netlist.id} title={latest.title} first={runs} />
         </div>
       </div>
       <ConflictDialog sheet={sheet} base={saved.revision} />
