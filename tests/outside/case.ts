@@ -9,12 +9,17 @@ export interface Expected {
   readonly absolute?: number;
 }
 
+/** Traces by name, one value a point. */
+export type Traces = ReadonlyMap<string, Float64Array>;
+
 /** A record of a reference table, written as a netlist. A record may take several. */
 export interface OutsideCase {
   /** The id of the record. */
   readonly id: string;
   readonly source: string;
   readonly text: string;
+  /** What the test makes of the traces, where a record asks for something that no trace of one point can be. */
+  readonly derive?: (traces: Traces) => Traces;
   readonly expected: readonly Expected[];
 }
 

@@ -1,9 +1,9 @@
 import { compile } from "@/lib/analyses/compile";
 import { solveRange } from "@/lib/analyses/sweep";
-import type { Expected } from "./case";
+import type { Expected, Traces } from "./case";
 
-/** Solves a netlist text through the whole engine; traces by name, one value a point. A diagnostic that is an error, or a point that fails, throws. */
-export function solveText(text: string): ReadonlyMap<string, Float64Array> {
+/** Solves a netlist text through the whole engine. A diagnostic that is an error, or a point that fails, throws. */
+export function solveText(text: string): Traces {
   const { job, diagnostics } = compile(text);
   if (job === null) {
     const errors = diagnostics.filter(({ severity }) => severity === "error");
@@ -15,10 +15,7 @@ export function solveText(text: string): ReadonlyMap<string, Float64Array> {
 }
 
 /** What is wrong with the traces, one line a value that misses; empty where all hold. */
-export function misses(
-  traces: ReadonlyMap<string, Float64Array>,
-  expected: readonly Expected[],
-): readonly string[] {
+export function misses(traces: Traces, expected: readonly Expected[]): readonly string[] {
   return expected.flatMap(({ trace, point = 0, value, relative = 0, absolute = 0 }) => {
     const found = traces.get(trace)?.[point] ?? Number.NaN;
     const wanted = Number(value);
