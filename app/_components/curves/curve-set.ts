@@ -34,7 +34,11 @@ export function curveSet(source: CurveSource): CurveSet | null {
   if (axis === undefined) return null;
   const order = axis.values.map((_, index) => index).sort((a, b) => axis.values[a]! - axis.values[b]!);
   const count = outer.reduce((product, { values }) => product * values.length, 1);
-  const families = Array.from({ length: count }, (_, index) => ({ index, label: familyLabel(outer, index) }));
+  const texts = outer.map(settingTexts);
+  const families = Array.from({ length: count }, (_, index) => ({
+    index,
+    label: familyLabel(outer, texts, index),
+  }));
   return { axis, x: order.map((index) => axis.values[index]!), order, families, outer, source };
 }
 
@@ -48,11 +52,22 @@ export function outerIndices(outer: readonly AxisDocument[], family: number): nu
   });
 }
 
-function familyLabel(outer: readonly AxisDocument[], family: number): string {
+/** The settings of an axis in as few digits, four at least, as tell them apart. */
+function settingTexts(axis: AxisDocument): string[] {
+  const written = (digits: number) => axis.values.map((value) => formatKnob(axis, value, digits));
+  const short = written(4);
+  return new Set(short).size === short.length ? short : written(6);
+}
+
+function familyLabel(
+  outer: readonly AxisDocument[],
+  texts: readonly (readonly string[])[],
+  family: number,
+): string {
   const indices = outerIndices(outer, family);
   return outer
     .map((axis, i) => {
-      const text = formatKnob(axis, axis.values[indices[i]!]!);
+      const text = texts[i]![indices[i]!]!;
       return isAmbient(axis) ? text : `${axis.knob} ${text}`;
     })
     .join(", ");

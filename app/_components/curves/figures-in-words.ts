@@ -28,9 +28,9 @@ export function coherentValue(axis: KnobUnit, shown: number): number {
   return isAmbient(axis) ? Number((shown + ZERO_CELSIUS).toPrecision(12)) : shown;
 }
 
-/** A knob's value in short, as on a label: "25 °C", "10 nA". */
-export function formatKnob(axis: KnobUnit, value: number): string {
-  return formatAxis(Number(shownValue(axis, value).toPrecision(6)), shownUnit(axis));
+/** A knob's value in short, as on a label, with `digits` significant digits at most: "25 °C", "10 nA". */
+export function formatKnob(axis: KnobUnit, value: number, digits = 6): string {
+  return formatAxis(Number(shownValue(axis, value).toPrecision(digits)), shownUnit(axis));
 }
 
 /** A value of a trace, six significant digits; "no value" where unsolved. */

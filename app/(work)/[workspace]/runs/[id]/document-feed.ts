@@ -18,6 +18,8 @@ export class DocumentFeed {
   #timer: ReturnType<typeof setTimeout> | undefined;
   #closed = false;
   #started = false;
+  #resting = false;
+  #finishing = false;
 
   /** `etag` is the version at hand already; null for none. */
   constructor(
@@ -31,6 +33,17 @@ export class DocumentFeed {
     if (this.#closed) return;
     if (this.#busy) this.#wanted = true;
     else void this.#fetch();
+  }
+
+  /** Fetches what a finished run has, at once: nothing follows that it could be gathered with. */
+  finish(): void {
+    this.#finishing = true;
+    if (this.#resting) {
+      clearTimeout(this.#timer);
+      this.#busy = false;
+      this.#resting = false;
+    }
+    this.want();
   }
 
   close(): void {
@@ -52,14 +65,17 @@ export class DocumentFeed {
       }
       this.listener.onProblem(null);
       // Nothing may hold back the first points; what follows them can wait its turn.
-      this.#rest = this.#started ? Math.max(REST, PATIENCE * (performance.now() - began)) : 0;
+      const unhurried = this.#started && !this.#finishing;
+      this.#rest = unhurried ? Math.max(REST, PATIENCE * (performance.now() - began)) : 0;
     } catch (error) {
       if (this.#closed) return;
       this.listener.onProblem(error instanceof Error ? error.message : String(error));
       this.#wanted = true;
       this.#rest = 3000;
     }
+    this.#resting = true;
     this.#timer = setTimeout(() => {
+      this.#resting = false;
       this.#busy = false;
       if (this.#wanted) this.want();
     }, this.#rest);

@@ -82,7 +82,7 @@ function PointNumber({
         value={text}
         placeholder={`0 to ${formatCount(points - 1)}`}
         onChange={(event) => setText(event.target.value)}
-        className={`${INPUT_CLASS} figures min-h-7! w-28! text-right`}
+        className={`${INPUT_CLASS} figures min-h-7! w-32! text-right`}
       />
       <Button type="submit" size="small">
         Show

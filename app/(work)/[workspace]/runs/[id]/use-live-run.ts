@@ -54,17 +54,18 @@ export function useLiveRun(first: RunState, found: Found | null): LiveRun {
       const next = await fetchSummary(id).catch(() => null);
       if (next === null) return;
       setRun(next);
-      feed.want();
-      if (!isLive(next.status)) end();
+      if (isLive(next.status)) return feed.want();
+      end();
+      feed.finish();
     };
     const take = (event: MessageEvent<string>) => {
       clearInterval(timer);
       timer = undefined;
       const progress: Progress = JSON.parse(event.data);
       setRun((before) => ({ ...before, ...progress }));
-      feed.want();
-      if (isLive(progress.status)) return;
+      if (isLive(progress.status)) return feed.want();
       end();
+      feed.finish();
       void refresh();
     };
     const events = new EventSource(`/api/v1/runs/${id}/events?after=${lastEvent}`);
