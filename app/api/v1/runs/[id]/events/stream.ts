@@ -3,9 +3,8 @@ import type { Actor } from "@/lib/permissions/actor";
 import { listEvents, type RunEvent } from "@/lib/services/events/list-events";
 import { listenToRun } from "@/lib/services/events/listen";
 
-/** Longest silence, ms: a comment then keeps what lies between from closing the connection. */
 const HEARTBEAT_MS = 15_000;
-/** How old the last look at the reader's session and membership may be when something is sent, ms. */
+/** How old the last look at the reader's session and membership may be when events are sent, ms. */
 const RECHECK_MS = 5_000;
 /** Wait after the database did not answer, ms. */
 const AWAY_MS = 1_000;
@@ -22,13 +21,17 @@ interface Input {
   /** Who reads, looked up anew; throws an AppError when they may not any longer. */
   readonly reader: () => Promise<Actor>;
   readonly signal: AbortSignal;
+  /** Longest silence, ms: a comment then keeps what lies between from closing the connection. */
+  readonly heartbeat?: number;
 }
 
 /**
  * The events of a run after a known one, as the bytes of an event stream. It ends after the run's last event, when the reader's
  * session or membership ends, and with `signal`; the reader's browser comes again by itself where that was not wanted.
  */
-export function eventStream({ runId, after, reader, signal }: Input): ReadableStream<Uint8Array> {
+export function eventStream(input: Input): ReadableStream<Uint8Array> {
+  const { runId, reader, signal, heartbeat = HEARTBEAT_MS } = input;
+  let { after } = input;
   const encoder = new TextEncoder();
   let ended = false;
   let cancelled = false;
@@ -72,9 +75,10 @@ export function eventStream({ runId, after, reader, signal }: Input): ReadableSt
     let checked = Date.now();
     write("retry: 1000\n\n");
     while (!ended) {
-      if (!(await announced(HEARTBEAT_MS))) write(": still here\n\n");
+      const silent = !(await announced(heartbeat));
+      if (silent) write(": still here\n\n");
       try {
-        if (Date.now() - checked > RECHECK_MS) {
+        if (silent || Date.now() - checked > RECHECK_MS) {
           actor = await reader();
           checked = Date.now();
         }
