@@ -56,9 +56,13 @@ describe("a revision", () => {
 });
 
 describe("the tables", () => {
-  it("compress stored figures with lz4", async () => {
+  it.each([
+    ["figures", "chunk", "data"],
+    ["plans", "run", "plan"],
+  ])("compress stored %s with lz4", async (_, table, column) => {
     const { rows } = await database().$client.query(
-      "SELECT attcompression FROM pg_attribute WHERE attrelid = 'chunk'::regclass AND attname = 'data'",
+      "SELECT attcompression FROM pg_attribute WHERE attrelid = $1::regclass AND attname = $2",
+      [table, column],
     );
     // "l" is lz4: the manual's chapter on pg_attribute.
     expect(rows).toEqual([{ attcompression: "l" }]);
