@@ -1,4 +1,4 @@
-import { advance } from "@/lib/circuit/state";
+import { advance, type State } from "@/lib/circuit/state";
 import type { System } from "@/lib/circuit/system";
 import { isAccepted } from "./acceptance";
 import type { LinearSolver } from "./linear";
@@ -6,6 +6,9 @@ import type { OutcomeKind } from "./outcome";
 
 /** Steps that follow acceptance, with the Jacobian at hand, so that closed forms agree to the last digits. */
 const POLISHING = 2;
+
+/** V, A. While steps are limited, unknowns beyond this are dropped: their rounding would hide what the junctions have reached. */
+const WILD = 1e4;
 
 /** What one run of Newton's method came to; `iterations` counts every step taken or weighed. */
 export interface Attempt {
@@ -42,10 +45,21 @@ export function newton(bench: Bench, exact: boolean, most: number): Attempt {
       if (polished > 0) {
         return { kind: "converged", iterations: iterations + polished, wasSingular: false };
       }
-    } else advance(state, step);
+    } else { if (iterations > 20 && !isExact) for (let j = 0; j < step.length; j++) step[j]! *= 0.5; advance(state, step); }
     isExact = system.follow();
+    if (!isExact) tame(state);
   }
   return { kind: "iteration limit", iterations: most, wasSingular: false };
+}
+
+/**
+ * The linear model of a blocked junction asks for voltages of 1e13 V and more, and a step back from there has no digits left.
+ * The solution of the next linear model depends on its junctions only, so it may as well be sought from 0.
+ */
+function tame({ x, low }: State): void {
+  if (x.every((value) => Math.abs(value) <= WILD)) return;
+  x.fill(0);
+  low.fill(0);
 }
 
 /** Takes the accepted step and one more; the count of steps, or 0 where the unknowns then fail the test that they passed. */

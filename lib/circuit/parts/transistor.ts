@@ -128,7 +128,14 @@ export class TransistorPart implements JunctionPart {
     flow(state, c, ground, ic);
     flow(state, b, ground, ib);
     flow(state, e, ground, -ic - ib);
-    const { jacobian } = state;
+    const { jacobian, scale } = state;
+    // In saturation a pin's current is what two much larger ones leave over; the slopes tell how large these are.
+    const { eta } = this.at;
+    const intoC = eta * (Math.abs(icF) + Math.abs(icR));
+    const intoB = eta * (Math.abs(ibF) + Math.abs(ibR));
+    scale[c]! += intoC;
+    scale[b]! += intoB;
+    scale[e]! += intoC + intoB;
     jacobian[places[0]!]! -= icR;
     jacobian[places[1]!]! += icF + icR;
     jacobian[places[2]!]! -= icF;
