@@ -29,8 +29,8 @@ export class LostSweep {
       await requeueLost({ queuedSeconds: QUEUED_SECONDS });
       this.#lastDone = Date.now();
     } catch (error) {
-      const reason = isPassing(error) ? "the database is away" : error;
-      console.warn("Lost shards could not be looked for:", reason);
+      if (isPassing(error)) console.warn("Lost shards could not be looked for, since the database is away.");
+      else console.warn("Lost shards could not be looked for.", error);
     }
     if (!this.#stopped) this.#timer = setTimeout(() => void this.#look(), 1_000 * this.seconds);
   }

@@ -3,8 +3,8 @@ const WAIT = { first: 100, longest: 1_000 } as const;
 
 /** Codes of the operating system for a connection that is refused, broken or too slow. */
 const BROKEN = new Set(["ECONNREFUSED", "ECONNRESET", "EPIPE", "ETIMEDOUT", "ENOENT", "EHOSTUNREACH"]);
-/** Classes of SQLSTATE that pass by themselves: connection, rollback, resources, operator's intervention. */
-const PASSING = ["08", "40", "53", "57P"];
+/** SQLSTATE by its start: connection, rollback, resources, operator's intervention, a database closed for a while. */
+const PASSING = ["08", "40", "53", "57P", "55000"];
 
 /** Whether `error`, or what caused it, is the database being away or overfull for a while, so that a later try may succeed. */
 export function isPassing(error: unknown): boolean {
