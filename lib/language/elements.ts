@@ -1,6 +1,6 @@
 import { formatQuantity } from "@/lib/units/quantity";
 import type { Element, Model, ModelKind, NamedValue, Setting, Statement } from "./ast";
-import { KINDS, MODEL_KINDS, type ParameterKind } from "./kinds";
+import { KINDS, LATER_PARAMETERS, MODEL_KINDS, type ParameterKind } from "./kinds";
 import type { Names } from "./names";
 import { nearest } from "./nearest";
 import type { Nominal } from "./nominal";
@@ -57,7 +57,9 @@ export class ElementCheck {
   private model(statement: ModelStatement, kind: ModelKind): Model {
     const { parameters } = KINDS[kind];
     const owner = `the ${kind} ${quote(statement.name.text)}`;
-    const params = this.parameters(statement.settings, parameters, owner);
+    const later = LATER_PARAMETERS[kind] ?? [];
+    const settings = statement.settings.filter(({ name }) => !this.isLater(name, later));
+    const params = this.parameters(settings, parameters, owner);
     const missing = Object.keys(parameters).find(
       (key) => parameters[key]!.absent === null && !isNamed(statement.settings, key),
     );
@@ -140,6 +142,13 @@ export class ElementCheck {
       });
     }
     return params;
+  }
+
+  private isLater(name: Setting["name"], later: readonly string[]): boolean {
+    if (!later.includes(name.text)) return false;
+    const message = `${quote(name.text)} is not yet part of the language this server speaks; take it out.`;
+    this.report.error("FRM6", name, message);
+    return true;
   }
 
   private outOfBounds(name: string, value: Setting["value"], shape: ParameterKind): void {

@@ -167,4 +167,11 @@ export const KINDS: Readonly<Record<ElementKind, DeviceKind>> = {
   },
 };
 
+/** Parameters that the language has but this server does not speak yet. */
+export const LATER_PARAMETERS: Readonly<Partial<Record<ElementKind, readonly string[]>>> = {
+  npn: ["R_emitter"],
+  pnp: ["R_emitter"],
+  opamp: ["out_low", "out_high"],
+};
+
 export const MODEL_KINDS: readonly ModelKind[] = ["diode", "npn", "pnp", "opamp"];

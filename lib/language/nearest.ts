@@ -1,7 +1,7 @@
 /** Names longer than this are not compared. */
 const LONGEST = 40;
 /** Candidates of a fitting length that are compared; a file with more names than this is not searched further. */
-const MOST_COMPARED = 4000;
+const MOST_COMPARED = 2000;
 
 /**
  * The candidate nearest to `name` by the edits that typing makes (a letter changed, left out, put in, or two exchanged: Damerau

@@ -78,7 +78,7 @@ function full(): OutsideCase {
   };
 }
 
-/** The record leaves the −1 of the first junction out; with Is = 1e-15 A that moves the currents by less than 1e-13 of them. */
+/** The record leaves the −1 of the first junction out; with Is = 1e-15 A that moves the currents by less than 3e-13 of them. */
 function ideal(): OutsideCase {
   const one = record("TB02f");
   const model = `model array : npn { Is = ${one.params.Is} A }`;
