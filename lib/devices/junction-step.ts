@@ -1,7 +1,7 @@
 import { type DiodeAt, diodeVoltage } from "./diode";
 
 /** A backward step lowers a junction's current to this part of it at most, unless the linear model asks for less voltage. */
-const LEAST_CURRENT = 1e-4;
+const LEAST_CURRENT = 0.1;
 
 /**
  * Where to linearise a junction next, in V. Newton's linear model, taken at `v` with current `i` and slope `g`, asks for `target`;

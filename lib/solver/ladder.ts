@@ -9,7 +9,7 @@ import { ramp } from "./ramp";
 import { unsettled } from "./unsettled";
 
 const WARM_STEPS = 12;
-const COLD_STEPS = 60;
+const COLD_STEPS = 100;
 /** Singular points of a strand whose matrix is decomposed; each may cost as much as a hundred points. */
 const MOST_DIAGNOSES = 16;
 

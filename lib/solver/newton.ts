@@ -45,7 +45,7 @@ export function newton(bench: Bench, exact: boolean, most: number): Attempt {
       if (polished > 0) {
         return { kind: "converged", iterations: iterations + polished, wasSingular: false };
       }
-    } else { if (iterations > 20 && !isExact) for (let j = 0; j < step.length; j++) step[j]! *= 0.5; advance(state, step); }
+    } else advance(state, step);
     isExact = system.follow();
     if (!isExact) tame(state);
   }
