@@ -24,8 +24,15 @@ export function nearest(name: string, candidates: Iterable<string>): string | nu
   return best;
 }
 
-/** The distance, or infinity once it must be above `bound`. */
-function editDistance(a: string, b: string, bound: number): number {
+/** The distance, or infinity once it must be above `bound`. What both begin and end with is left out. */
+function editDistance(first: string, second: string, bound: number): number {
+  const shorter = Math.min(first.length, second.length);
+  let from = 0;
+  while (from < shorter && first[from] === second[from]) from += 1;
+  let end = 0;
+  while (end < shorter - from && first.at(-1 - end) === second.at(-1 - end)) end += 1;
+  const a = first.slice(from, first.length - end);
+  const b = second.slice(from, second.length - end);
   let beforeLast: number[] = [];
   let last = Array.from({ length: b.length + 1 }, (_, j) => j);
   for (let i = 1; i <= a.length; i++) {
