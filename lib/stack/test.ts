@@ -55,7 +55,7 @@ async function runBrowser(): Promise<void> {
     (await preparation("production build", buildForTests)) &&
     (await preparation("service with the demo", async () => {
       env.DATABASE_URL = await own.database("sweepwright_browser");
-      env.BASE_URL = await serve(env.DATABASE_URL, DEMO_PASSWORD);
+      env.E2E_URL = await serve(env.DATABASE_URL, DEMO_PASSWORD);
     }));
   if (ready) await phase("browser tests", () => runTests("e2e", env));
 }

@@ -24,11 +24,11 @@ export const WORKSPACE = "north-bench";
 /** A person of the demo by their first name. */
 export type Who = "vera" | "erik" | "rosa" | "adam";
 
-/** The service under test. `npm test` starts one; a demo that runs serves as well: BASE_URL=http://localhost:4300 */
+/** The service under test. (Not BASE_URL: vitest sets that one itself.) `npm test` starts one; a demo that runs serves as well: E2E_URL=http://localhost:4300 */
 export function baseUrl(): string {
-  const url = process.env.BASE_URL;
+  const url = process.env.E2E_URL;
   if (!url)
-    throw new Error("BASE_URL is missing. Run `npm test -- --only e2e`, or name a running demo in BASE_URL.");
+    throw new Error("E2E_URL is missing. Run `npm test -- --only e2e`, or name a running demo in E2E_URL.");
   return url;
 }
 
