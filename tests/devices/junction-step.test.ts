@@ -39,13 +39,18 @@ describe("the current-matching step", () => {
 
   test("finds a forced current in one step from anywhere forward", () => {
     const wanted = diodeVoltage(at, 2e-4);
-    for (const v of [0.2, 0.5, 0.75]) {
+    for (const v of [0.2, 0.5, 0.69]) {
       const law = { i: 0, g: 0 };
       diodeLaw(at, v, law);
       const next = junctionStep(at, v, law.i, law.g, v + (2e-4 - law.i) / law.g);
-      // Downward the current falls to a ten-thousandth at most, which these reach.
       expect(next).toBeCloseTo(wanted, 9);
     }
+  });
+
+  test("lets the current fall tenfold at most where the model asks for less, or as far as the model itself does", () => {
+    const slow = stepFrom(at, 0.7, 0.7 - 1.5 * at.eta).next;
+    expect(slow).toBeCloseTo(0.7 - Math.LN10 * at.eta, 9);
+    expect(stepFrom(at, 0.7, 0.7 - 4 * at.eta).next).toBe(0.7 - 4 * at.eta);
   });
 
   test("does not overflow however far the target", () => {
