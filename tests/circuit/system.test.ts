@@ -1,0 +1,171 @@
+import { describe, expect, test } from "vitest";
+import { compile, type Job } from "@/lib/analyses/compile";
+import { across, advance, newState } from "@/lib/circuit/state";
+import { System } from "@/lib/circuit/system";
+
+/** One element of every kind, invented. */
+const EVERY_KIND = `knob V = 3 V
+knob I = 2 µA
+let R = 10 kΩ * (V / 3 V)
+model d : diode { Is = 1 fA, n = 1.2, Rs = 5 Ω, Eg = 1.11 V, x = 3 }
+model qn : npn { Is = 2 fA, beta_f = 100, beta_r = 2, Va_f = 50 V, Va_r = 9 V, beta_power = 1.5 }
+model qp : pnp { Is = 1 fA, beta_f = 60, Va_f = 30 V }
+model amp : opamp { gain = 1e5, offset = 1 mV, bias = 10 nA }
+model ideal : opamp { }
+ground -- V1 : voltage V -- a -- R1 : resistor R { drift = 100 ppm/K } -- b
+b -- D1 : d -- c
+ground -- I1 : current I -- c
+Q1 : qn { c = a, b = c, e = f }
+Q2 : qp { c = ground, b = f, e = b }
+f -- R2 : resistor 1 kΩ -- ground
+A1 : amp { plus = c, minus = g, out = g }
+A2 : ideal { plus = g, minus = h, out = h }
+h -- R3 : resistor 2 kΩ -- ground
+show R1.i`;
+
+function jobOf(text: string): Job {
+  const { job, diagnostics } = compile(text);
+  if (job === null) throw new Error(diagnostics.map(({ message }) => message).join(" "));
+  return job;
+}
+
+function systemOf(text: string): System {
+  const { design, circuit } = jobOf(text);
+  return new System(design, circuit);
+}
+
+/** Some voltages at which no exponential rules the others. */
+function disturb({ state, circuit }: System): void {
+  for (let j = 0; j < circuit.size; j++) state.x[j] = 0.3 + 0.17 * Math.sin(7 * j + 1);
+}
+
+function residualAt(system: System): Float64Array {
+  system.settle();
+  system.assemble();
+  return system.state.residual.slice();
+}
+
+describe("the unknowns", () => {
+  test("are every net but ground, then every branch current, by the names of the language", () => {
+    const { circuit } = jobOf(EVERY_KIND);
+    expect(circuit.unknowns.map(({ name, unit }) => `${name} ${unit}`)).toEqual([
+      ...["a.v V", "b.v V", "c.v V", "f.v V", "g.v V", "h.v V"],
+      ...["V1.i A", "A1.out.i A", "A2.out.i A"],
+    ]);
+    expect(circuit.nets.get("ground")).toBe(circuit.size);
+  });
+});
+
+describe("the modified nodal system", () => {
+  test("lets no current appear or vanish: the currents leaving all nets and ground add up to nothing", () => {
+    const system = systemOf(EVERY_KIND);
+    disturb(system);
+    const residual = residualAt(system);
+    const nets = [...system.circuit.nets.values()];
+    const sum = nets.reduce((total, i) => total + residual[i]!, 0);
+    const most = Math.max(...nets.map((i) => system.state.scale[i]!));
+    expect(Math.abs(sum)).toBeLessThanOrEqual(1e-15 * most * nets.length);
+  });
+
+  test("has the slopes of its own residual, by differences", () => {
+    const system = systemOf(EVERY_KIND);
+    const { state, circuit, pattern } = system;
+    disturb(system);
+    residualAt(system);
+    const slopes = state.jacobian.slice();
+    const dense = Array.from({ length: circuit.size }, () => new Float64Array(circuit.size));
+    slopes.forEach((value, k) => {
+      if (k > 0) dense[pattern.rows[k]!]![pattern.columns[k]!] = value;
+    });
+    const h = 1e-6;
+    for (let j = 0; j < circuit.size; j++) {
+      const at = state.x[j]!;
+      state.x[j] = at + h;
+      const above = residualAt(system);
+      state.x[j] = at - h;
+      const below = residualAt(system);
+      state.x[j] = at;
+      for (let i = 0; i < circuit.size; i++) {
+        const difference = (above[i]! - below[i]!) / (2 * h);
+        const slope = dense[i]![j]!;
+        // Central differences are off by h²/6 of the third derivative, (1/V_T)² of the slope, and by rounding over h.
+        expect(Math.abs(difference - slope), `row ${i}, column ${j}`).toBeLessThanOrEqual(
+          1e-8 * Math.abs(slope) + (1e-14 * (state.scale[i]! + 1e-6)) / h,
+        );
+      }
+    }
+  });
+
+  test("is the same after a knob has been turned away and back, and follows it through a let", () => {
+    const system = systemOf(EVERY_KIND);
+    disturb(system);
+    const before = residualAt(system);
+    system.turn("V", 6);
+    system.turn("temperature", 320);
+    const turned = residualAt(system);
+    expect([...turned]).not.toEqual([...before]);
+    const fresh = systemOf(
+      EVERY_KIND.replace("knob V = 3 V", "knob V = 6 V\nknob temperature = 320 K").replace(
+        "knob I",
+        "knob I",
+      ),
+    );
+    disturb(fresh);
+    expect([...residualAt(fresh)]).toEqual([...turned]);
+    system.turn("V", 3);
+    system.turn("temperature", 298.15);
+    expect([...residualAt(system)]).toEqual([...before]);
+  });
+
+  test("measures currents into pins, so that those of a part add up to nothing", () => {
+    const system = systemOf(EVERY_KIND);
+    disturb(system);
+    const pin = (element: string, name: string) => system.signal({ of: "pin", element, pin: name });
+    for (const element of ["Q1", "Q2"]) {
+      const [c, b, e] = ["c", "b", "e"].map((name) => pin(element, name)) as [number, number, number];
+      expect(Math.abs(c + b + e)).toBeLessThanOrEqual(1e-15 * Math.abs(e));
+      expect(c).not.toBe(0);
+    }
+    for (const [element, from, to] of [
+      ["R1", "left", "right"],
+      ["V1", "left", "right"],
+      ["I1", "left", "right"],
+      ["D1", "anode", "cathode"],
+    ] as const) {
+      expect(pin(element, from)).toBe(-pin(element, to));
+      expect(system.signal({ of: "element", element, quantity: "i" })).toBe(pin(element, from));
+    }
+    expect(pin("A1", "plus")).toBe(1e-8);
+    expect(pin("A1", "out")).toBe(system.state.x[system.circuit.branches.get("A1")!]);
+  });
+
+  test("measures an element's voltage from left to right, and the power that it takes up", () => {
+    const system = systemOf("ground -- V1 : voltage 3 V -- a -- R1 : resistor 1 kΩ -- ground");
+    const [a, i] = [system.circuit.nets.get("a")!, system.circuit.branches.get("V1")!];
+    system.state.x[a] = 3;
+    system.state.x[i] = 0.003;
+    const read = (element: string) =>
+      (["v", "i", "p"] as const).map((quantity) => system.signal({ of: "element", element, quantity }));
+    expect(read("R1")).toEqual([3, 0.003, 0.009]);
+    // The source gives 9 mW, so it takes up −9 mW.
+    expect(read("V1")).toEqual([-3, 0.003, -0.009]);
+  });
+});
+
+describe("the unknowns as sums of two numbers", () => {
+  test("keep what one number would lose", () => {
+    const state = newState(2, 1);
+    advance(state, Float64Array.of(10, 10));
+    advance(state, Float64Array.of(3e-22, 1e-22));
+    expect(state.x[0]).toBe(10);
+    expect(across(state, 0, 1)).toBeCloseTo(2e-22, 36);
+  });
+
+  test("stay apart from ground, which is 0", () => {
+    const state = newState(1, 1);
+    advance(state, Float64Array.of(0.1));
+    advance(state, Float64Array.of(0.2));
+    // 0.1 + 0.2 rounds up by 2.8e-17 (binary64, exact in 60 bits), which the sum keeps.
+    expect([state.x[0], state.low[0], state.x[1]]).toEqual([0.30000000000000004, -2.7755575615628914e-17, 0]);
+  });
+});
