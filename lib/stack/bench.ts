@@ -1,0 +1,81 @@
+import { mkdirSync, readdirSync, readFileSync } from "node:fs";
+import { basename } from "node:path";
+import { endCommands, run } from "./command";
+import { Complaint, explain } from "./complaint";
+import { DEMO_PASSWORD } from "./database";
+import { CHROMIUM, ensureTools } from "./debian";
+import { type Hold, hold } from "./holder";
+import { onInterrupt } from "./interrupt";
+import { TEST_FOLDER } from "./phases";
+import { buildForTests, serve } from "./served";
+import { closeServices, stopServices } from "./service";
+import { type Throwaway, throwaway } from "./throwaway";
+
+const FOLDER = "tests/bench";
+
+let held: Hold | null = null;
+let cluster: Throwaway | null = null;
+
+/** Measures named by the words (all without any); a measure is a file of tests/bench that measures when it is run. */
+function chosen(words: readonly string[]): string[] {
+  const all = readdirSync(FOLDER).filter((name) => name.endsWith(".ts"));
+  const measures = all
+    .filter((name) => /^(await )?\w+\(.*\);$/m.test(readFileSync(`${FOLDER}/${name}`, "utf8")))
+    .sort();
+  const names = measures.map((name) => basename(name, ".ts"));
+  const unknown = words.filter((word) => !names.includes(word));
+  if (unknown.length > 0) {
+    throw new Complaint(`There is no measure called ${unknown.join(", ")}. There are: ${names.join(", ")}.`);
+  }
+  return words.length === 0 ? names : names.filter((name) => words.includes(name));
+}
+
+/** Whether a measure drives the browser, and so needs a running service. */
+function drivesBrowser(name: string): boolean {
+  return readFileSync(`${FOLDER}/${name}.ts`, "utf8").includes("/e2e/harness");
+}
+
+/** Address of a service to measure: the one named in E2E_URL, or one made for this and removed afterwards. */
+async function service(): Promise<string> {
+  const given = process.env.E2E_URL;
+  if (given) return given;
+  await ensureTools([CHROMIUM]);
+  mkdirSync(TEST_FOLDER, { recursive: true });
+  held = await hold(`${TEST_FOLDER}/running.json`, "npm test or npm run bench");
+  await buildForTests();
+  cluster = await throwaway();
+  return serve(await cluster.database("sweepwright_bench"), DEMO_PASSWORD);
+}
+
+async function tidyUp(): Promise<void> {
+  closeServices();
+  endCommands();
+  await stopServices();
+  await cluster?.remove();
+  held?.release();
+}
+
+onInterrupt(async () => {
+  await tidyUp();
+  return 130;
+});
+
+try {
+  const words = process.argv.slice(2);
+  const options = words.filter((word) => word.startsWith("-"));
+  const names = chosen(words.filter((word) => !word.startsWith("-")));
+  const env = names.some(drivesBrowser) ? { E2E_URL: await service() } : {};
+  for (const name of names) {
+    // Standard output belongs to the measures alone, so that --json can be piped on.
+    console.error(`── ${name}`);
+    const { code } = await run(process.execPath, ["--import", "tsx", `${FOLDER}/${name}.ts`, ...options], {
+      env,
+    });
+    if (code !== 0) process.exitCode = 1;
+  }
+} catch (error) {
+  console.error(explain(error));
+  process.exitCode = 1;
+} finally {
+  await tidyUp();
+}
