@@ -140,15 +140,15 @@ describe("the modified nodal system", () => {
   });
 
   test("measures an element's voltage from left to right, and the power that it takes up", () => {
-    const system = systemOf("ground -- V1 : voltage 3 V -- a -- R1 : resistor 1 kΩ -- ground");
+    const system = systemOf("ground -- V1 : voltage 2 V -- a -- R1 : resistor 4 Ω -- ground");
     const [a, i] = [system.circuit.nets.get("a")!, system.circuit.branches.get("V1")!];
-    system.state.x[a] = 3;
-    system.state.x[i] = 0.003;
+    system.state.x[a] = 2;
+    system.state.x[i] = 0.5;
     const read = (element: string) =>
       (["v", "i", "p"] as const).map((quantity) => system.signal({ of: "element", element, quantity }));
-    expect(read("R1")).toEqual([3, 0.003, 0.009]);
-    // The source gives 9 mW, so it takes up −9 mW.
-    expect(read("V1")).toEqual([-3, 0.003, -0.009]);
+    expect(read("R1")).toEqual([2, 0.5, 1]);
+    // The source gives 1 W, so it takes up −1 W.
+    expect(read("V1")).toEqual([-2, 0.5, -1]);
   });
 });
 
