@@ -20,6 +20,7 @@ export class DocumentFeed {
   #started = false;
   #resting = false;
   #finishing = false;
+  #after: (() => void) | null = null;
 
   /** `etag` is the version at hand already; null for none. */
   constructor(
@@ -35,8 +36,9 @@ export class DocumentFeed {
     else void this.#fetch();
   }
 
-  /** Fetches what a finished run has, at once: nothing follows that it could be gathered with. */
-  finish(): void {
+  /** Fetches what a finished run has, at once: nothing follows that it could be gathered with. Then calls `after`, once. */
+  finish(after: () => void): void {
+    this.#after = after;
     this.#finishing = true;
     if (this.#resting) {
       clearTimeout(this.#timer);
@@ -72,6 +74,10 @@ export class DocumentFeed {
       this.listener.onProblem(error instanceof Error ? error.message : String(error));
       this.#wanted = true;
       this.#rest = 3000;
+    }
+    if (this.#finishing && !this.#wanted) {
+      this.#after?.();
+      this.#after = null;
     }
     this.#resting = true;
     this.#timer = setTimeout(() => {

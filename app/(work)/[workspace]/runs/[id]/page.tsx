@@ -6,12 +6,17 @@ import { findVoltageSpan } from "@/lib/services/runs/find-voltage-span";
 import { getPoint } from "@/lib/services/runs/get-point";
 import { getRun } from "@/lib/services/runs/get-run";
 import { getRunDocument } from "@/lib/services/runs/get-run-document";
+import { waitForPoints } from "@/lib/services/runs/wait-for-points";
 import { answered } from "../../../answered";
 import { readPageState } from "./page-state";
+import { isLive, type RunState } from "./run-shapes";
 import { RunView } from "./run-view";
 
 /** Numbers in a document that is sent with the page; a larger one is fetched by the page once it stands. */
 const SENT_ALONG = 20_000;
+/** A run queued less than this long ago, ms, may have its first points in a moment: the page waits so long for them, ms. */
+const JUST_QUEUED = 2000;
+const MOMENT = 150;
 
 interface Props {
   readonly params: Promise<{ readonly workspace: string; readonly id: string }>;
@@ -21,8 +26,17 @@ interface Props {
 const runFor = cache(async (workspace: string, id: string) => {
   const path = `/${workspace}/runs/${id}`;
   const actor = await answered(actorFor(workspace), path);
+  const run = await answered(getRun(actor, id), path);
+  const fresh =
+    run.pointsDone === 0 && isLive(run.status) && Date.now() - Date.parse(run.queuedAt) < JUST_QUEUED;
+  if (!fresh || !isSmall(run)) return { actor, run };
+  await waitForPoints(actor, id, MOMENT);
   return { actor, run: await answered(getRun(actor, id), path) };
 });
+
+function isSmall({ points, plan }: RunState): boolean {
+  return points * (plan.traces.length + 3) <= SENT_ALONG;
+}
 
 export async function generateMetadata({ params }: Props): Promise<Metadata> {
   const { workspace, id } = await params;
@@ -38,9 +52,8 @@ export default async function RunPage({ params, searchParams }: Props) {
     for (const one of [value ?? []].flat()) search.append(name, one);
   }
   const state = readPageState(search);
-  const small = run.points * (run.plan.traces.length + 3) <= SENT_ALONG;
   const [found, point, span] = await Promise.all([
-    small ? getRunDocument(actor, id) : null,
+    isSmall(run) ? getRunDocument(actor, id) : null,
     state.point === null || state.point >= run.points ? null : getPoint(actor, id, state.point),
     findVoltageSpan(actor, id),
   ]);

@@ -18,7 +18,7 @@ export function RunFacts({ workspace, run }: { readonly workspace: string; reado
       </h2>
       <dl className="mt-2 border-t">
         <Fact name="Netlist">
-          <Link className="link" href={`/${workspace}/netlists/${run.netlistId}`}>
+          <Link className="link" href={`/${workspace}/netlists/${run.netlistId}`} prefetch={false}>
             {run.title}
           </Link>
           , number {run.netlistNumber}

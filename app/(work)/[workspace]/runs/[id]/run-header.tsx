@@ -67,7 +67,9 @@ export function RunHeader({ workspace, run, mayStart, mayCancel, onRun }: Props)
                 {starting ? "Queueing…" : "Run again"}
               </Button>
             )}
-            <ButtonLink href={`/${workspace}/netlists/${run.netlistId}`}>Open netlist</ButtonLink>
+            <ButtonLink href={`/${workspace}/netlists/${run.netlistId}`} prefetch={false}>
+              Open netlist
+            </ButtonLink>
           </>
         }
       />

@@ -1,7 +1,7 @@
 "use client";
 
 import { useRouter } from "next/navigation";
-import { useCallback, useEffect, useMemo, useRef, useState } from "react";
+import { useCallback, useEffect, useMemo, useState } from "react";
 import { CurveFigure } from "@/app/_components/curves/curve-figure";
 import { curveSet } from "@/app/_components/curves/curve-set";
 import { NumberTable } from "@/app/_components/curves/number-table";
@@ -13,7 +13,7 @@ import { type PageState, readPageState, writePageState } from "./page-state";
 import { PointPanel } from "./point-panel";
 import { RunFacts } from "./run-facts";
 import { RunHeader } from "./run-header";
-import { isLive, type PointAccount, type RunState } from "./run-shapes";
+import type { PointAccount, RunState } from "./run-shapes";
 import { RunStatusLine } from "./run-status-line";
 import { type Found, useLiveRun } from "./use-live-run";
 
@@ -34,13 +34,12 @@ interface Props {
 export function RunView(props: Props) {
   const { workspace, first, found, point, span, mayStart, mayCancel } = props;
   const router = useRouter();
-  const { run, document, problem, setRun } = useLiveRun(first, found);
+  const { run, document, problem, finished, setRun } = useLiveRun(first, found);
   const [state, setState] = useState(() => readPageState(new URLSearchParams(props.search)));
   const show = useCallback(
     (change: Partial<PageState>) => setState((before) => ({ ...before, ...change })),
     [],
   );
-  const live = isLive(run.status);
 
   useEffect(() => {
     const search = writePageState(state);
@@ -49,12 +48,10 @@ export function RunView(props: Props) {
     }
   }, [state]);
 
-  // What only the server knows of a finished run (its extremes) is asked for once when it ends.
-  const wasLive = useRef(live);
+  // What only the server knows of a finished run (its extremes) is asked for once.
   useEffect(() => {
-    if (wasLive.current && !live) router.refresh();
-    wasLive.current = live;
-  }, [live, router]);
+    if (finished) router.refresh();
+  }, [finished, router]);
 
   const source = useMemo(
     () =>

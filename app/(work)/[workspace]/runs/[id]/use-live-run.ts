@@ -20,6 +20,8 @@ interface LiveRun {
   readonly document: RunDocument | null;
   /** Why the curves could not be brought up to date; null while they are. */
   readonly problem: string | null;
+  /** Whether it ended while the page was open and everything of it has arrived. */
+  readonly finished: boolean;
   readonly setRun: (run: RunState) => void;
 }
 
@@ -31,6 +33,7 @@ export function useLiveRun(first: RunState, found: Found | null): LiveRun {
   const [run, setRun] = useState(first);
   const [document, setDocument] = useState(found?.document ?? null);
   const [problem, setProblem] = useState<string | null>(null);
+  const [finished, setFinished] = useState(false);
   // Only what the page began with: later properties of the server are not newer than what the stream brought.
   const start = useRef({
     id: first.id,
@@ -50,28 +53,33 @@ export function useLiveRun(first: RunState, found: Found | null): LiveRun {
       events.close();
       clearInterval(timer);
     };
-    const refresh = async () => {
+    // The curve comes first: what else there is to know of a finished run is asked for when it stands.
+    const finish = () => {
+      end();
+      feed.finish(() => {
+        void fetchSummary(id).then(setRun, () => undefined);
+        setFinished(true);
+      });
+    };
+    const look = async () => {
       const next = await fetchSummary(id).catch(() => null);
       if (next === null) return;
       setRun(next);
-      if (isLive(next.status)) return feed.want();
-      end();
-      feed.finish();
+      if (isLive(next.status)) feed.want();
+      else finish();
     };
     const take = (event: MessageEvent<string>) => {
       clearInterval(timer);
       timer = undefined;
       const progress: Progress = JSON.parse(event.data);
       setRun((before) => ({ ...before, ...progress }));
-      if (isLive(progress.status)) return feed.want();
-      end();
-      feed.finish();
-      void refresh();
+      if (isLive(progress.status)) feed.want();
+      else finish();
     };
     const events = new EventSource(`/api/v1/runs/${id}/events?after=${lastEvent}`);
     for (const kind of ["message", "progress", "status"]) events.addEventListener(kind, take);
     events.addEventListener("error", () => {
-      timer ??= setInterval(refresh, POLL);
+      timer ??= setInterval(look, POLL);
     });
     return () => {
       end();
@@ -79,5 +87,5 @@ export function useLiveRun(first: RunState, found: Found | null): LiveRun {
     };
   }, []);
 
-  return { run, document, problem, setRun };
+  return { run, document, problem, finished, setRun };
 }
