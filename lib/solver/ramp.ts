@@ -35,6 +35,8 @@ export function ramp(bench: Bench): Attempt {
       low.set(state.low);
       continue;
     }
+    // What fails at rest, where no source acts yet, fails at any rise.
+    if (reached === 0 && attempt.iterations === 1) return { ...attempt, iterations };
     rise /= RETREAT;
     if (rise < LEAST_RISE || iterations > MOST_STEPS) {
       const kind = rise < LEAST_RISE ? "step too small" : "iteration limit";
