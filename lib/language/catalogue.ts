@@ -61,6 +61,7 @@ export const CATALOGUE = {
   PLN6: "A value outside its knob's range",
   PLN7: "A range upside down",
   PLN8: "Nothing is shown",
+  PLN9: "A sweep that leads a value out of its bounds",
 
   CAP1: "The text is too long",
   CAP2: "An expression nested too deeply",

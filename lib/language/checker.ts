@@ -1,5 +1,6 @@
 import { Agreement } from "./agreement";
 import type { Design, Element, Netlist, Show, Statement, Sweep } from "./ast";
+import { checkBounds } from "./bounds";
 import type { Diagnostic } from "./diagnostic";
 import { ElementCheck, modelKinds } from "./elements";
 import { FUNCTION_NAMES } from "./functions";
@@ -68,6 +69,7 @@ function checkNetlist({ statements }: Netlist, source: string, report: Report): 
   );
   const shows = checkShows(statements, source, typing, report);
 
+  if (!report.hasErrors) checkBounds({ lets, models, elements, sweeps }, nominal, report);
   const title = titleOf(statements, report);
   const netPlaces = placesOf(names);
   const nets = [...netPlaces.keys()];

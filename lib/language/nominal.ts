@@ -1,5 +1,5 @@
 import { ROOM_TEMPERATURE, thermalVoltage } from "@/lib/units/constants";
-import type { Typed } from "./ast";
+import type { NamedValue, Typed } from "./ast";
 import { evaluate } from "./evaluate";
 
 /** Values of knobs and lets at the knobs' defaults, without tolerances, and what keeps a let from being fixed. */
@@ -14,6 +14,18 @@ export class Nominal {
   /** Notes what moves a let: the name of a knob or V_T, null where nothing does. */
   setMover(name: string, mover: string | null): void {
     this.movers.set(name, mover);
+  }
+
+  /** Gives a knob another value and works the lets that move out again; what it returns puts all of them back. */
+  turn(knob: string, value: number, moving: readonly NamedValue[]): () => void {
+    const before = new Map(
+      [knob, ...moving.map(({ name }) => name)].map((name) => [name, this.values.get(name)!]),
+    );
+    this.values.set(knob, value);
+    for (const one of moving) this.values.set(one.name, this.of(one.value));
+    return () => {
+      for (const [name, old] of before) this.values.set(name, old);
+    };
   }
 
   /** Coherent SI value; NaN for an expression with signals. */

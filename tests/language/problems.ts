@@ -246,6 +246,25 @@ export const LANGUAGE_PROBLEMS: readonly Problem[] = [
   { code: "PLN6", text: within("knob k = 1 V in 0 V .. 2 V\nsweep k «from 1 V to 3 V, 5 points»") },
   { code: "PLN6", text: within("sweep temperature «over 0 K, 300 K»") },
   { code: "PLN7", text: within("knob k = 1 V in «2 V .. 0 V»") },
+  {
+    code: "PLN9",
+    text: within("knob R = 1 kΩ\nground -- R2 : resistor R -- in\n«sweep R from 0 Ω to 2 kΩ, 3 points»"),
+    says: "must be above 0",
+  },
+  {
+    code: "PLN9",
+    text: within(
+      "knob k = 1\nlet Is_k = k * 1 fA\nmodel m : diode { Is = Is_k }\nground -- D1 : m -- in\n«sweep k over 1, -1»",
+    ),
+    says: "`Is` of the model `m`",
+  },
+  {
+    code: "PLN9",
+    text: within(
+      "knob k = 1\nground -- V2 : voltage 1 V * ln(k) -- x -- R2 : resistor 1 Ω -- in\n«sweep k over -1, 1»",
+    ),
+    says: "no value",
+  },
   { code: "PLN8", text: `${circuit}\n«»`, severity: "warning" },
 
   { code: "CAP2", text: within(`let a = ${"(".repeat(257)}«1»${")".repeat(257)}`) },
