@@ -1,0 +1,78 @@
+import { readFileSync } from "node:fs";
+import { describe, expect, test } from "vitest";
+import { compile } from "@/lib/analyses/compile";
+import { type RunMatter, toDocument } from "@/lib/analyses/document";
+import { solveRange } from "@/lib/analyses/sweep";
+
+const text = readFileSync("examples/reversed-input.swn", "utf8").replace(
+  "show out = out.v",
+  "show out = out.v, sum.v",
+);
+
+function matterOf(source: string): RunMatter {
+  const { job, diagnostics } = compile(source);
+  const { plan } = job!;
+  const { traces, outcome, iterations, rung, failures } = solveRange(job!, 0, plan.points);
+  return { plan, text: source, traces, outcome, iterations, rung, failures, diagnostics };
+}
+
+describe("the run document", () => {
+  const matter = matterOf(text);
+  const document = toDocument(matter);
+
+  test("is what JSON can carry, with the fields of its format", () => {
+    expect(JSON.parse(JSON.stringify(document))).toEqual(document);
+    expect(Object.keys(document).sort()).toEqual([
+      ...["axes", "diagnostics", "draws", "failures", "format", "points", "readings", "requirements"],
+      ...["title", "traces", "verdict"],
+    ]);
+    expect(document).toMatchObject({ format: "sweepwright-run/1", title: "Reversed input (a warning)" });
+  });
+
+  test("has one value a point in every column", () => {
+    const { points } = matter.plan;
+    for (const { values } of document.traces) expect(values).toHaveLength(points);
+    for (const column of Object.values(document.points)) expect(column).toHaveLength(points);
+    expect(document.traces.map(({ name, unit }) => [name, unit])).toEqual([
+      ["out", "V"],
+      ["sum.v", "V"],
+    ]);
+  });
+
+  test("says null where a point failed, and why", () => {
+    expect(document.traces[0]!.values[0]).toBeNull();
+    expect(document.points.outcome[0]).toBe("step too small");
+    expect(document.points.rung[0]).toBe("source ramp");
+    expect(document.failures[0]).toEqual({
+      point: 0,
+      outcome: "step too small",
+      unsettled: ["out", "sum", "Q1"],
+    });
+    expect(document.traces[0]!.values.at(-1)).toBe(matter.traces[0]!.at(-1));
+    expect(document.points.outcome.at(-1)).toBe("converged");
+    expect(document.verdict).toBe("holds");
+  });
+
+  test("says null and no data where nothing is known yet", () => {
+    const unknown = new Float64Array(matter.plan.points).fill(Number.NaN);
+    const empty = toDocument({
+      ...matter,
+      traces: matter.traces.map(() => unknown),
+      outcome: unknown,
+      iterations: unknown,
+      rung: unknown,
+      failures: [],
+    });
+    expect(empty.verdict).toBe("no data");
+    expect(new Set(empty.points.outcome)).toEqual(new Set([null]));
+    expect(new Set(empty.points.rung)).toEqual(new Set([null]));
+    expect(new Set(empty.points.iterations)).toEqual(new Set([0]));
+    expect(new Set(empty.traces[0]!.values)).toEqual(new Set([null]));
+  });
+
+  test("places diagnostics by line and column", () => {
+    const source = "ground -- V1 : voltage 1 V -- a\na -- R1 : resistor 1 kΩ -- ground\n";
+    const { diagnostics } = toDocument(matterOf(source));
+    expect(diagnostics.map(({ code, line, column }) => [code, line, column])).toEqual([["PLN8", 3, 1]]);
+  });
+});
