@@ -38,7 +38,7 @@ export function AxisSwitch({
         {CHOICES.map(({ value, label }) => (
           <label
             key={value}
-            className="flex min-h-6 cursor-pointer items-center px-2 text-xs has-checked:bg-ink has-checked:text-paper has-focus-visible:outline-2 has-focus-visible:outline-accent has-focus-visible:outline-offset-2"
+            className="relative flex min-h-6 cursor-pointer items-center px-2 text-xs has-checked:bg-ink has-checked:text-paper has-focus-visible:outline-2 has-focus-visible:outline-accent has-focus-visible:outline-offset-2"
           >
             <input
               type="radio"
@@ -46,7 +46,7 @@ export function AxisSwitch({
               value={value}
               checked={scale === value}
               onChange={() => onChange(value)}
-              className="sr-only"
+              className="absolute inset-0 cursor-pointer opacity-0"
             />
             {label}
             {value === "logarithmic" && <span className="sr-only">arithmic</span>}
