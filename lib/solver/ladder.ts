@@ -16,6 +16,7 @@ const MOST_DIAGNOSES = 16;
 /** Solves a system point by point, each by the first rung of the ladder that leads to an accepted solution. */
 export class Ladder {
   private readonly bench: Bench;
+  private readonly linear: LinearSolver;
   private readonly shape: SparseShape;
   /** Diagnoses that the present strand may still have. */
   private diagnoses = MOST_DIAGNOSES;
@@ -30,13 +31,13 @@ export class Ladder {
       rows: Int32Array.from(pattern.rows),
       columns: Int32Array.from(pattern.columns),
     };
-    const linear = new LinearSolver(this.shape, state.jacobian);
-    this.bench = { system, linear, step: new Float64Array(circuit.size) };
+    this.linear = new LinearSolver(this.shape, state.jacobian);
+    this.bench = { system, linear: this.linear, step: new Float64Array(circuit.size) };
   }
 
   /** Forgets what was solved before, so that the next point does not depend on it. */
   reset(): void {
-    this.bench.linear.reset();
+    this.linear.reset();
     this.diagnoses = MOST_DIAGNOSES;
   }
 

@@ -4,12 +4,19 @@ import { type Elimination, eliminate, type SparseShape } from "./elimination";
 const GOOD_BACKWARD_ERROR = 1e-9;
 const WORST_BACKWARD_ERROR = 1e-3;
 
+/** What Newton's method asks of linear algebra: solve J·d = −F into `step`, then again with the same J. */
+export interface Linear {
+  /** False where the matrix is singular or not finite. */
+  solve(jacobian: Float64Array, residual: Float64Array, step: Float64Array): boolean;
+  solveAgain(residual: Float64Array, step: Float64Array): void;
+}
+
 /**
  * Solves J·d = −F for one structure many times. The only file that knows how: pivots are chosen once on a sample, and from
  * then on a factorisation is a list of multiplications over reused arrays. Pivots stay while the backward error of each
  * solution (Rigal and Gaches, J. ACM 14, 1967, row by row) is small, and are chosen anew on the values at hand when it is not.
  */
-export class LinearSolver {
+export class LinearSolver implements Linear {
   private readonly first: Elimination | null;
   private plan: Elimination | null;
   private factors: Float64Array;

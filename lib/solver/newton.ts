@@ -1,7 +1,7 @@
 import { advance, type State } from "@/lib/circuit/state";
 import type { System } from "@/lib/circuit/system";
 import { isAccepted } from "./acceptance";
-import type { LinearSolver } from "./linear";
+import type { Linear } from "./linear";
 import type { OutcomeKind } from "./outcome";
 
 /** Steps that follow acceptance, with the Jacobian at hand, so that closed forms agree to the last digits. */
@@ -21,7 +21,7 @@ export interface Attempt {
 /** A system with its linear solver and the array its steps are written to. */
 export interface Bench {
   readonly system: System;
-  readonly linear: LinearSolver;
+  readonly linear: Linear;
   readonly step: Float64Array;
 }
 
