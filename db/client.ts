@@ -21,6 +21,9 @@ export function database(): Database {
 function open(connectionString: string): Database {
   const pool = new Pool({ connectionString, max: 10, connectionTimeoutMillis: 5_000, keepAlive: true });
   pool.on("error", (error) => console.warn(`A database connection was lost: ${error.message}`));
+  // One that breaks within a transaction has nobody else to hear it, and an error unheard would end the process; whatever was
+  // asked on it fails by itself.
+  pool.on("connect", (client) => client.on("error", () => undefined));
   return drizzle(pool);
 }
 

@@ -185,6 +185,12 @@ test("a hundred readers share one listening connection", async () => {
   for (const { ids } of readers) expect(ids).toEqual(upTo(5));
 });
 
+/** Waits until this process's pool has noticed which of its connections are dead. */
+async function poolFit(): Promise<void> {
+  const all = () => Promise.all(Array.from({ length: 20 }, () => database().execute(sql`SELECT 1`)));
+  await vi.waitFor(all, { timeout: 20_000 });
+}
+
 test("a stream goes on over a break of the database", async () => {
   const actor = await makeActor();
   const { id } = await makeRun(actor);
@@ -193,6 +199,7 @@ test("a stream goes on over a break of the database", async () => {
   await reader.until(2);
   await own.shut(true);
   await own.shut(false);
+  await poolFit();
   await advance(id, 2);
   await reader.until(4);
   await finish(id);

@@ -31,11 +31,9 @@ export async function ownDatabase(beside = process.env.TEST_DATABASE_URL): Promi
     url,
     async shut(closed) {
       await command(beside, `ALTER DATABASE ${name} ALLOW_CONNECTIONS ${!closed}`);
-      if (closed)
-        await command(
-          beside,
-          `SELECT pg_terminate_backend(pid) FROM pg_stat_activity WHERE datname = '${name}'`,
-        );
+      if (!closed) return;
+      const here = `FROM pg_stat_activity WHERE datname = '${name}'`;
+      await command(beside, `SELECT pg_terminate_backend(pid, 10000) ${here}`);
     },
     async drop() {
       await disconnect();

@@ -17,8 +17,8 @@ show v = out.v
 `;
 }
 
-/** Some hundred thousand points in more than twenty shards: long enough to be disturbed in the middle. */
-export const LONG_TEXT = longText(2_000);
+/** 60 010 points in 16 shards: long enough to be disturbed in the middle. */
+export const LONG_TEXT = longText(1_000);
 
 /** A ladder of so many resistors and diodes (invented), 4001 points in two shards. Its second shard takes seconds. */
 export function ladderText(sections: number): string {

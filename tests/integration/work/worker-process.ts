@@ -1,11 +1,12 @@
 import { type ChildProcess, spawn } from "node:child_process";
 import { once } from "node:events";
-import { fileURLToPath } from "node:url";
+import { rmSync } from "node:fs";
+import { join } from "node:path";
+import { buildWorker } from "@/lib/stack/build";
 
-const ROOT = fileURLToPath(new URL("../../..", import.meta.url));
 const STARTED = /takes shards on \d+ threads; health on port (\d+)/;
 
-/** A worker process as in production, but run from its sources. */
+/** A worker process, built as for production. */
 export interface WorkerProcess {
   readonly process: ChildProcess;
   readonly health: string;
@@ -18,11 +19,20 @@ export interface WorkerProcess {
 }
 
 const alive = new Set<ChildProcess>();
+let built: Promise<string> | undefined;
+
+/** Builds the worker once for this test file; gone with its process. */
+async function build(): Promise<string> {
+  const folder = join(".test", `worker-${process.pid}`);
+  process.once("exit", () => rmSync(folder, { recursive: true, force: true }));
+  await buildWorker(folder);
+  return join(folder, "main.mjs");
+}
 
 /** Starts a worker and waits until it takes shards. Leases of 2 s, so that a test need not wait long for a dead worker's. */
 export async function startWorker(environment: Record<string, string> = {}): Promise<WorkerProcess> {
-  const child = spawn(process.execPath, ["--import", "tsx", "worker/main.ts"], {
-    cwd: ROOT,
+  built ??= build();
+  const child = spawn(process.execPath, [await built], {
     env: { ...process.env, LEASE_SECONDS: "2", WORKER_THREADS: "1", WORKER_HEALTH_PORT: "0", ...environment },
     stdio: ["ignore", "pipe", "pipe"],
   });
