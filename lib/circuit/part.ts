@@ -1,4 +1,5 @@
 import type { Element, Model, NamedValue } from "@/lib/language/ast";
+import { KINDS } from "@/lib/language/kinds";
 import type { Circuit } from "./circuit";
 import type { Pattern } from "./pattern";
 import type { State } from "./state";
@@ -53,10 +54,22 @@ export function netAt({ circuit, element }: Bench, pin: string): number {
   return circuit.nets.get(element.pins[pin]!)!;
 }
 
-/** A parameter's value, null where it is left out. */
-export function optional(params: ReadonlyMap<string, NamedValue>, name: string, values: PointValues) {
-  const value = params.get(name);
-  return value === undefined ? null : values.of(value);
+/**
+ * The value of a parameter of a model or an element at a point, null where it is left out. NaN where a knob has led it out of
+ * its bounds, so that the point fails: the checker bounds it at the knobs' defaults only.
+ */
+export function figureOf(
+  { kind, params }: Pick<Model | Element, "kind" | "params">,
+  name: string,
+  values: PointValues,
+): number | null {
+  const given = params.get(name);
+  if (given === undefined) return null;
+  const value = values.of(given);
+  const { low, high, open } = KINDS[kind].parameters[name]!;
+  if (low !== undefined && (open ? value <= low : value < low)) return Number.NaN;
+  if (high !== undefined && (open ? value >= high : value > high)) return Number.NaN;
+  return value;
 }
 
 /** The knobs that any of the parameters follow. */

@@ -28,7 +28,7 @@ export function diodeAt(terms: SaturationTerms, Rs: number | null, kelvin: numbe
  * Banwell and Jayakumar, Electron. Lett. 36, 2000). Relative error of I below 1e-13 from reverse to V/(n·V_T) = 40,000.
  */
 export function diodeLaw(at: DiodeAt, v: number, out: CurrentAndSlope): void {
-  if (at.Rs > 0) {
+  if (at.Rs !== 0) {
     withResistance(at, v, out);
     return;
   }

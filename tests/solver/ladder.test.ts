@@ -133,6 +133,19 @@ show b.v`);
     if (outcome.kind !== "converged") expect(outcome.unsettled).toContain("a");
   });
 
+  test("fails where a knob leads a parameter out of its bounds", () => {
+    const system = systemOf(`knob n = 1
+model d : diode { Is = 1 fA, n = n }
+ground -- V1 : voltage 1 V -- a -- R1 : resistor 1 kΩ -- b -- D1 : d -- ground
+show b.v`);
+    const ladder = new Ladder(system);
+    expect(ladder.solve(false).kind).toBe("converged");
+    system.turn("n", -1);
+    const outcome = ladder.solve(false);
+    expect(outcome.kind).toBe("not finite");
+    if (outcome.kind !== "converged") expect(outcome.unsettled).toContain("D1");
+  });
+
   test("is singular where two conductances cancel, and names the net that floats", () => {
     const system = systemOf(`knob k = 1
 ground -- V1 : voltage 1 V -- a -- R1 : resistor 1 kΩ -- b -- R2 : resistor 2 kΩ -- ground

@@ -1,6 +1,6 @@
 import { opampMismatch } from "@/lib/devices/opamp";
 import type { Element, Model } from "@/lib/language/ast";
-import { type Bench, moversOf, netAt, optional, type Part } from "../part";
+import { type Bench, figureOf, moversOf, netAt, type Part } from "../part";
 import { across, flow, type State } from "../state";
 import type { PointValues } from "../values";
 
@@ -39,10 +39,10 @@ export class OpampPart implements Part {
   }
 
   read(values: PointValues): void {
-    const gain = optional(this.model.params, "gain", values);
+    const gain = figureOf(this.model, "gain", values);
     this.inverseGain = gain === null ? 0 : 1 / gain;
-    this.offset = optional(this.model.params, "offset", values) ?? 0;
-    this.bias = optional(this.model.params, "bias", values) ?? 0;
+    this.offset = figureOf(this.model, "offset", values) ?? 0;
+    this.bias = figureOf(this.model, "bias", values) ?? 0;
   }
 
   addConstantSlopes(jacobian: Float64Array): void {

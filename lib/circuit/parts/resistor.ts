@@ -1,6 +1,6 @@
 import { conductance } from "@/lib/devices/resistor";
 import type { Element } from "@/lib/language/ast";
-import { type Bench, moversOf, netAt, optional, type Part } from "../part";
+import { type Bench, figureOf, moversOf, netAt, type Part } from "../part";
 import { across, flow, type State } from "../state";
 import { type PointValues, TEMPERATURE } from "../values";
 
@@ -31,8 +31,11 @@ export class ResistorPart implements Part {
   }
 
   read(values: PointValues): void {
-    const { value, params } = this.element;
-    this.g = conductance(values.of(value!), optional(params, "drift", values), values.kelvin);
+    this.g = conductance(
+      values.of(this.element.value!),
+      figureOf(this.element, "drift", values),
+      values.kelvin,
+    );
   }
 
   addConstantSlopes(jacobian: Float64Array): void {

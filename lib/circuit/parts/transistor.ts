@@ -6,11 +6,11 @@ import { ROOM_TEMPERATURE } from "@/lib/units/constants";
 import {
   type Bench,
   FREE,
+  figureOf,
   type JunctionPart,
   moversOf,
   NEARLY_WHOLE,
   netAt,
-  optional,
   START_CURRENT,
 } from "../part";
 import { across, flow, type State } from "../state";
@@ -59,7 +59,7 @@ export class TransistorPart implements JunctionPart {
   }
 
   read(values: PointValues): void {
-    const figure = (name: string) => optional(this.model.params, name, values);
+    const figure = (name: string) => figureOf(this.model, name, values);
     const terms = {
       Is: figure("Is")!,
       n: figure("n") ?? 1,
