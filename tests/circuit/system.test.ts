@@ -117,6 +117,23 @@ describe("the modified nodal system", () => {
     expect([...residualAt(system)]).toEqual([...before]);
   });
 
+  test("lets values follow the temperature through V_T, through a let too", () => {
+    const system = systemOf(`knob k = 2
+let twice = k * V_T
+ground -- V1 : voltage twice -- a -- R1 : resistor 1 kΩ -- ground
+ground -- V2 : voltage V_T -- b -- R2 : resistor 1 kΩ -- ground
+show a.v, b.v`);
+    const [one, two] = ["V1", "V2"].map((name) => system.circuit.branches.get(name)!) as [number, number];
+    // With every unknown at 0 the mismatch of a voltage element is −V; V_T = kT/q by the exact SI values.
+    const perKelvin = 1.380649e-23 / 1.602176634e-19;
+    for (const kelvin of [298.15, 350, 77]) {
+      system.turn("temperature", kelvin);
+      const residual = residualAt(system);
+      expect(residual[one]).toBeCloseTo(-2 * perKelvin * kelvin, 16);
+      expect(residual[two]).toBeCloseTo(-perKelvin * kelvin, 16);
+    }
+  });
+
   test("measures currents into pins, so that those of a part add up to nothing", () => {
     const system = systemOf(EVERY_KIND);
     disturb(system);

@@ -82,6 +82,17 @@ describe("the ladder", () => {
     expect(outcome.iterations).toBeLessThan(250);
   });
 
+  test("knows a net at 10 V well enough for a picoampere through an ohm", () => {
+    // One number knows 10 V to 1.8e-15 V, which through 1 Ω is a thousandth of the current.
+    const system = systemOf(`model d : diode { Is = 1 pA }
+ground -- V1 : voltage 10 V -- a -- R1 : resistor 1 Ω -- b
+ground -- D1 : d -- b
+show R1.i`);
+    expect(new Ladder(system).solve(false).kind).toBe("converged");
+    const current = system.signal({ of: "element", element: "R1", quantity: "i" });
+    expect(Math.abs(current / 1e-12 - 1)).toBeLessThanOrEqual(1e-12);
+  });
+
   test("leaves no more current over at any net than a ten-billionth of what flows there", () => {
     for (const text of [LOG_CONVERTER, TANGLE]) {
       const system = systemOf(text);
