@@ -13,7 +13,6 @@ import "monaco-editor/features/lineSelection/register.js";
 import "monaco-editor/features/linesOperations/register.js";
 import "monaco-editor/features/longLinesHelper/register.js";
 import "monaco-editor/features/multicursor/register.js";
-import "monaco-editor/features/toggleTabFocusMode/register.js";
 import "monaco-editor/features/tokenization/register.js";
 import "monaco-editor/features/unusualLineTerminators/register.js";
 import "monaco-editor/features/wordOperations/register.js";
