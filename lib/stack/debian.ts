@@ -1,4 +1,5 @@
-import { rmSync, writeFileSync } from "node:fs";
+import { mkdirSync, rmSync, writeFileSync } from "node:fs";
+import { join } from "node:path";
 import { run } from "./command";
 import { Complaint, fullDisk } from "./complaint";
 import { isRoot, onPath, postgresPrograms, versionOf } from "./machine";
@@ -50,21 +51,28 @@ export async function ensureTools(
       `${names} ${are} missing. Install ${them} with:\n  sudo ${command}\nand start again.`,
     );
   console.log(`Installing ${names} from Debian's packages.`);
-  await withoutExtraCluster(() => install(packages));
+  await update();
+  if (packages.some((name) => name.startsWith("postgresql")))
+    await withoutExtraCluster(() => install(packages));
+  else await install(packages);
   const still = tools.filter((tool) => !tool.present()).map((tool) => tool.name);
   if (still.length > 0)
     throw new Complaint(`apt ended well, but ${still.join(" and ")} cannot be found. Try: ${command}`);
 }
 
+const APT = ["-o", "DPkg::Lock::Timeout=300"];
+const QUIETLY = { output: "keep", env: { DEBIAN_FRONTEND: "noninteractive" } } as const;
+
+/** An old list is no reason to stop when it cannot be brought up to date: the package may be in it all the same. */
+async function update(): Promise<void> {
+  await run("apt-get", [...APT, "update"], QUIETLY);
+}
+
 async function install(packages: readonly string[]): Promise<void> {
-  const around = { output: "keep", env: { DEBIAN_FRONTEND: "noninteractive" } } as const;
-  const wait = ["-o", "DPkg::Lock::Timeout=300"];
-  // An old list is no reason to stop: the package may be in it all the same.
-  await run("apt-get", [...wait, "update"], around);
   const made = await run(
     "apt-get",
-    [...wait, "install", "-y", "--no-install-recommends", ...packages],
-    around,
+    [...APT, "install", "-y", "--no-install-recommends", ...packages],
+    QUIETLY,
   );
   if (made.code === 0) return;
   const last = made.text.trim().split("\n").slice(-4).join("\n");
@@ -73,19 +81,18 @@ async function install(packages: readonly string[]): Promise<void> {
   );
 }
 
-/** Debian's package starts a server of its own when it is installed; ours is kept apart, so it is asked not to. */
+/** Where Debian's package reads whether to make a server of its own. */
+const CREATION = "/etc/postgresql-common/createcluster.d";
+
+/** Debian's package makes and starts a server when it is installed; ours is kept apart, so it is asked not to. */
 async function withoutExtraCluster(work: () => Promise<void>): Promise<void> {
-  const packages = (await run("dpkg", ["-s", "postgresql-common"], { output: "keep" })).code === 0;
-  if (!packages) await install(["postgresql-common"]).catch(() => undefined);
-  const setting = "/etc/postgresql-common/createcluster.d/sweepwright.conf";
-  try {
-    writeFileSync(setting, "create_main_cluster = false\n");
-  } catch {
-    // Without that folder the package makes its own server, which does no harm.
-  }
+  await install(["postgresql-common"]);
+  const made = mkdirSync(CREATION, { recursive: true });
+  const setting = join(CREATION, "sweepwright.conf");
+  writeFileSync(setting, "create_main_cluster = false\n");
   try {
     await work();
   } finally {
-    rmSync(setting, { force: true });
+    rmSync(made ?? setting, { recursive: true, force: true });
   }
 }
