@@ -82,7 +82,9 @@ test("the main job: break a netlist, see where, mend it, queue it, watch it, see
     .getByRole("status")
     .filter({ hasText: /All 72.003 points are solved\./ })
     .waitFor();
-  const summary = await figure.locator("figcaption").textContent();
+  const caption = figure.locator("figcaption");
+  await expect.poll(() => caption.textContent()).toMatch(/All 72.003 points are solved\./);
+  const summary = await caption.textContent();
   expect(summary).toContain("ratio rises");
 
   // The deep link shows the same numbers again.
@@ -97,7 +99,7 @@ test("the main job: break a netlist, see where, mend it, queue it, watch it, see
   expect(await table.textContent()).toBe(numbers);
   await page.getByRole("tab", { name: "Curves" }).click();
   await figure.waitFor();
-  await expect.poll(() => figure.locator("figcaption").textContent()).toBe(summary);
+  await expect.poll(() => caption.textContent()).toBe(summary);
 
   // What was drawn is the law: 16.9 times V_T ln 10 a decade of the current, at each temperature. The bound leaves room for
   // what the netlist adds on purpose (current gain of 240, Early voltage of 80 V, bias currents of 20 pA).

@@ -56,12 +56,15 @@ export async function typeAtEnd(page: Page, text: string): Promise<void> {
   await page.keyboard.insertText(text);
 }
 
-/** Writes another text over the whole. */
+/** Pastes another text over the whole. */
 export async function writeText(page: Page, text: string): Promise<void> {
+  await page.context().grantPermissions(["clipboard-read", "clipboard-write"]);
+  await page.bringToFront();
   const box = await editorOf(page);
   await box.focus();
+  await page.evaluate((wanted) => navigator.clipboard.writeText(wanted), text);
   await page.keyboard.press("Control+a");
-  await page.keyboard.insertText(text);
+  await page.keyboard.press("Control+v");
 }
 
 /** Waits until the line below the text says so. */

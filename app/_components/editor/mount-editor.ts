@@ -2,6 +2,7 @@ import type { Diagnostic } from "@/lib/language/diagnostic";
 import { format } from "@/lib/language/format";
 import type { EditorEvents, EditorHandle } from "./editor-handle";
 import { EDITOR_OPTIONS } from "./editor-options";
+import { isApple } from "./keyboard";
 import { markersOf, rangeOf } from "./markers";
 import { LANGUAGE, monaco } from "./monaco";
 import { FONT_FAMILY, FONT_SIZE } from "./palette";
@@ -87,8 +88,8 @@ export async function mountEditor(
 }
 
 function addKeys(editor: monaco.editor.IStandaloneCodeEditor, events: EditorEvents): void {
-  const { CtrlCmd } = monaco.KeyMod;
-  const { Enter, KeyS } = monaco.KeyCode;
+  const { CtrlCmd, WinCtrl, Shift } = monaco.KeyMod;
+  const { Enter, KeyM, KeyS } = monaco.KeyCode;
   const queue = { id: "queue-run", label: "Queue run", keybindings: [CtrlCmd | Enter], run: events.onQueue };
   const save = {
     id: "save-revision",
@@ -98,10 +99,19 @@ function addKeys(editor: monaco.editor.IStandaloneCodeEditor, events: EditorEven
   };
   editor.addAction(queue);
   editor.addAction(save);
-  const { tabFocusMode } = monaco.editor.EditorOption;
-  editor.onDidChangeConfiguration((change) => {
-    if (change.hasChanged(tabFocusMode))
-      events.onTab(editor.getOption(tabFocusMode) ? "moves on" : "indents");
+  let moves = false;
+  const turnTab = () => {
+    moves = !moves;
+    editor.updateOptions({ tabFocusMode: moves });
+    events.onTab(moves ? "moves on" : "indents");
+  };
+  // On Apple's keyboards ⌘ M puts the window away and Ctrl M ends a line.
+  const tabKey = isApple() ? WinCtrl | Shift | KeyM : CtrlCmd | KeyM;
+  editor.addAction({
+    id: "turn-tab",
+    label: "Let Tab move on or indent",
+    keybindings: [tabKey],
+    run: turnTab,
   });
 }
 

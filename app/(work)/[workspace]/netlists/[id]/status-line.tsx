@@ -28,7 +28,7 @@ export function StatusLine({ examined, stale, tab, readOnly }: Props) {
         )}
       </p>
       {!readOnly && (
-        <p>
+        <p aria-live="polite">
           Tab {tab}
           {tab !== "always moves on" && `; ${keys.tab} lets it ${tab === "indents" ? "move on" : "indent"}`}
         </p>

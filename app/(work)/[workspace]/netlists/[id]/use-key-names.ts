@@ -1,6 +1,7 @@
 "use client";
 
 import { useSyncExternalStore } from "react";
+import { isApple } from "@/app/_components/editor/keyboard";
 
 const never = () => () => {};
 
@@ -16,7 +17,7 @@ const APPLE: KeyNames = { queue: "⌘ ↵", tab: "Ctrl Shift M" };
 export function useKeyNames(): KeyNames {
   return useSyncExternalStore(
     never,
-    () => (/Mac|iPhone|iPad/.test(navigator.platform) ? APPLE : USUAL),
+    () => (isApple() ? APPLE : USUAL),
     () => USUAL,
   );
 }
