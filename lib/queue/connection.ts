@@ -13,7 +13,7 @@ import { SHARD_QUEUE, type ShardJob, shardJob } from "./payloads";
 const postgres = withBackend(createPostgresBackend);
 
 /** What the producer needs of a queue, whichever store is behind it. */
-export type ShardQueue = Pick<Queue<ShardJob>, "addBulk" | "close" | "on">;
+export type ShardQueue = Pick<Queue<ShardJob>, "add" | "addBulk" | "close" | "on">;
 /** What the worker process needs of BullMQ's worker, whichever store is behind it. */
 export type ShardWorker = Pick<Worker<ShardJob>, "close" | "on" | "pause" | "waitUntilReady">;
 

@@ -19,25 +19,26 @@ function queue(): ShardQueue {
  */
 export async function enqueueShards(jobs: readonly ShardJob[]): Promise<void> {
   const opened = queue();
+  // A first shard is put on alone and ahead, which reaches a worker several milliseconds sooner than a batch does.
+  const first = jobs.filter(({ index }) => index === 0);
+  const rest = jobs.filter(({ index }) => index > 0);
   try {
-    await opened.addBulk(
-      jobs.map((job) => ({
-        name: SHARD_QUEUE,
-        data: shardJob.parse(job),
-        opts: {
-          jobId: jobId(job),
-          // In BullMQ no priority comes before any priority.
-          ...(job.index === 0 ? {} : { priority: 10 }),
-          removeOnComplete: true,
-          removeOnFail: true,
-        },
-      })),
-    );
+    for (const job of first) {
+      const { name, data, opts } = entry(job);
+      await opened.add(name, data, opts);
+    }
+    // In BullMQ no priority comes before any priority.
+    if (rest.length > 0) await opened.addBulk(rest.map((job) => entry(job, { priority: 10 })));
   } catch (error) {
     delete held[KEY];
     void opened.close().catch(() => undefined);
     throw error;
   }
+}
+
+function entry(job: ShardJob, more: { priority?: number } = {}) {
+  const opts = { jobId: jobId(job), removeOnComplete: true, removeOnFail: true, ...more };
+  return { name: SHARD_QUEUE, data: shardJob.parse(job), opts };
 }
 
 /** Closes the connection, when the process ends. */
