@@ -2,6 +2,7 @@ import { type ChildProcess, spawn } from "node:child_process";
 import { once } from "node:events";
 import { rmSync } from "node:fs";
 import { join } from "node:path";
+import { afterAll } from "vitest";
 import { buildWorker } from "@/lib/stack/build";
 
 const STARTED = /takes shards on \d+ threads; health on port (\d+)/;
@@ -21,13 +22,18 @@ export interface WorkerProcess {
 const alive = new Set<ChildProcess>();
 let built: Promise<string> | undefined;
 
-/** Builds the worker once for this test file; gone with its process. */
+const FOLDER = join(".test", `worker-${process.pid}`);
+
+/** Builds the worker, once for a test file. */
 async function build(): Promise<string> {
-  const folder = join(".test", `worker-${process.pid}`);
-  process.once("exit", () => rmSync(folder, { recursive: true, force: true }));
-  await buildWorker(folder);
-  return join(folder, "main.mjs");
+  await buildWorker(FOLDER);
+  return join(FOLDER, "main.mjs");
 }
+
+afterAll(async () => {
+  await endWorkers();
+  rmSync(FOLDER, { recursive: true, force: true });
+});
 
 /** Starts a worker and waits until it takes shards. Leases of 2 s, so that a test need not wait long for a dead worker's. */
 export async function startWorker(environment: Record<string, string> = {}): Promise<WorkerProcess> {
