@@ -1,4 +1,4 @@
-import { afterAll, afterEach, beforeAll, expect, test } from "vitest";
+import { afterAll, afterEach, beforeAll, expect, test, vi } from "vitest";
 import { makeActor, makeRun } from "@/db/factories";
 import type { Actor } from "@/lib/permissions/actor";
 import { listEvents } from "@/lib/services/events/list-events";
@@ -7,6 +7,9 @@ import { type OwnDatabase, ownDatabase } from "./own-database";
 import { ended, enqueue, runRow, runUntil, type StoredPoints, shardRows, storedPoints } from "./runs";
 import { LONG_TEXT } from "./texts";
 import { endWorkers, startWorker, type WorkerProcess } from "./worker-process";
+
+// A machine that is busy with other tests may take long.
+vi.setConfig({ testTimeout: 180_000, hookTimeout: 180_000 });
 
 let cluster: Throwaway;
 let own: OwnDatabase;
@@ -22,7 +25,7 @@ beforeAll(async () => {
   await runUntil(run, ended);
   undisturbed = await storedPoints(run);
   await worker.stop();
-}, 120_000);
+});
 afterEach(endWorkers);
 afterAll(async () => {
   await own?.drop();

@@ -1,5 +1,5 @@
 import { sql } from "drizzle-orm";
-import { afterAll, afterEach, beforeAll, expect, test } from "vitest";
+import { afterAll, afterEach, beforeAll, expect, test, vi } from "vitest";
 import { database } from "@/db/client";
 import { makeActor, makeRun } from "@/db/factories";
 import type { Actor } from "@/lib/permissions/actor";
@@ -9,6 +9,9 @@ import { type OwnDatabase, ownDatabase } from "./own-database";
 import { ended, enqueue, runRow, runUntil, shardRows, storedPoints } from "./runs";
 import { longText } from "./texts";
 import { endWorkers, startWorker } from "./worker-process";
+
+// A machine that is busy with other tests may take long.
+vi.setConfig({ testTimeout: 180_000, hookTimeout: 180_000 });
 
 let own: OwnDatabase;
 let actor: Actor;

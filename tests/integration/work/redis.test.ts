@@ -5,7 +5,7 @@ import { tmpdir } from "node:os";
 import { join } from "node:path";
 import { sql } from "drizzle-orm";
 import { Redis } from "ioredis";
-import { afterAll, afterEach, beforeAll, expect, test } from "vitest";
+import { afterAll, afterEach, beforeAll, expect, test, vi } from "vitest";
 import { database } from "@/db/client";
 import { makeActor, makeNetlist, makeRun } from "@/db/factories";
 import { startRun } from "@/lib/services/runs/start-run";
@@ -15,6 +15,9 @@ import { disconnect, type OwnDatabase, ownDatabase } from "./own-database";
 import { ended, enqueue, runUntil, storedPoints } from "./runs";
 import { LONG_TEXT, longText } from "./texts";
 import { endWorkers, startWorker } from "./worker-process";
+
+// A machine that is busy with other tests may take long.
+vi.setConfig({ testTimeout: 180_000, hookTimeout: 180_000 });
 
 let own: OwnDatabase;
 let folder: string;

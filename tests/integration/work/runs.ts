@@ -27,7 +27,7 @@ export async function enqueue(runId: string): Promise<void> {
 export async function runUntil(
   runId: string,
   enough: (row: RunRecord) => boolean,
-  seconds = 45,
+  seconds = 150,
 ): Promise<RunRecord> {
   const until = Date.now() + 1_000 * seconds;
   for (;;) {
