@@ -38,7 +38,7 @@ describe("mapping", () => {
     expect(reason([-1, -2])).toBe(-1);
     expect(reason([-1, 2])).toBe("the values have both signs");
     expect(reason([0, 2])).toBe("the values reach zero");
-    expect(reason([null])).toBe("there are no values yet");
+    expect(reason([null])).toBe("there are no values");
     expect(reason([3, 3])).toBe("all values are one");
   });
 });

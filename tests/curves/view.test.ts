@@ -10,7 +10,9 @@ import { madeUpSet } from "./multiplier";
 
 describe("axes of a view", () => {
   it("stands on the ruler when the plan sweeps by decades, and on a linear axis when asked or when it must", () => {
-    const set = madeUpSet([1e-3, 1e-2, 1e-1]);
+    const set = madeUpSet(
+      Array.from({ length: 41 }, (_, i) => Number((1e-3 * 10 ** (i / 20)).toPrecision(12))),
+    );
     expect(horizontalAxis(set, USUAL_VIEW, 600)).toMatchObject({
       mapping: { scale: "logarithmic" },
       range: { from: -3, to: -1 },
@@ -18,6 +20,14 @@ describe("axes of a view", () => {
     expect(horizontalAxis(set, { ...USUAL_VIEW, x: "linear" }, 600).mapping.scale).toBe("linear");
     const through = madeUpSet([-1, 0, 1]);
     expect(horizontalAxis(through, { ...USUAL_VIEW, x: "logarithmic" }, 600).mapping.scale).toBe("linear");
+  });
+
+  it("leaves room around few points, and numbers no axis without a value", () => {
+    const few = madeUpSet([-1, -0.5, 0]);
+    const horizontal = horizontalAxis(few, USUAL_VIEW, 600);
+    expect(horizontal.range.from).toBeLessThan(-1);
+    expect(horizontal.range.to).toBeGreaterThan(0);
+    expect(storeyViews(few, USUAL_VIEW, horizontal, false).map(({ axis }) => axis.ticks)).toEqual([[], []]);
   });
 
   it("fits a storey to what is in view", () => {

@@ -1,6 +1,7 @@
 import { formatAxis } from "@/lib/units/quantity";
 import type { CurveSet } from "./curve-set";
 import { shownUnit, shownValue } from "./figures-in-words";
+import { FEW_POINTS } from "./line-style";
 import { extent, type Range, verticalRange, zoomed } from "./range";
 import { LINEAR, type LogarithmicFit, logarithmicFit, type Mapping, placeOf, type Scale } from "./scale";
 import { type Choice, type Storey, storeysOf, usualChoice } from "./storeys";
@@ -58,10 +59,16 @@ export function horizontalAxis(set: CurveSet, view: CurveView, width: number): A
   const scale = view.x ?? (set.axis.scale === "logarithmic" ? "logarithmic" : "linear");
   const mapping: Mapping = scale === "logarithmic" && fit.fits ? { scale, sign: fit.sign } : LINEAR;
   const found = extent([shown], mapping) ?? { from: 0, to: 1 };
-  const whole = found.from === found.to ? verticalRange(found, mapping) : found;
+  const whole = found.from === found.to ? verticalRange(found, mapping) : withRoom(found, set.x.length);
   const range = zoomed(whole, view.zoom === null ? null : placesOfZoom(set, mapping, view.zoom));
   const ticks = ticksOf(range.from, range.to, mapping, Math.max(2, Math.floor(width / LABEL_ROOM)));
   return { mapping, range, ticks, labels: labelsOf(ticks, mapping, shownUnit(set.axis), true), fit };
+}
+
+/** A sweep of few points, which are marked one by one, gets room so that the marks at its ends are whole. */
+function withRoom({ from, to }: Range, points: number): Range {
+  const room = points <= FEW_POINTS ? 0.02 * (to - from) : 0;
+  return { from: from - room, to: to + room };
 }
 
 function placesOfZoom(set: CurveSet, mapping: Mapping, zoom: Range): Range | null {
@@ -81,9 +88,11 @@ export function storeyViews(set: CurveSet, view: CurveView, horizontal: Axis, na
     const scale = view.y[storey.unit] ?? usualScale(set, fit);
     const mapping: Mapping = scale === "logarithmic" && fit.fits ? { scale, sign: fit.sign } : LINEAR;
     const visible = columns.map((column) => column.filter((_, i) => inView[i]));
-    const range = verticalRange(extent(visible, mapping), mapping);
+    const found = extent(visible, mapping);
+    const range = verticalRange(found, mapping);
     const height = heightOf(storeys.length, index, narrow);
-    const ticks = ticksOf(range.from, range.to, mapping, Math.floor(height / 40));
+    // Without a value there is nothing to number an axis by.
+    const ticks = found === null ? [] : ticksOf(range.from, range.to, mapping, Math.floor(height / 40));
     const axis = { mapping, range, ticks, labels: labelsOf(ticks, mapping, storey.unit, false), fit };
     return { ...storey, axis, height };
   });

@@ -9,6 +9,9 @@ export interface LineStyle {
 const COLOURS = ["--trace-1", "--trace-2", "--trace-3", "--trace-4", "--trace-5", "--trace-6"] as const;
 const DASHES = [[], [2, 3], [7, 4], [11, 3, 2, 3], [4, 2], [14, 5]] as const;
 
+/** Points are marked one by one where a line has at most this many. */
+export const FEW_POINTS = 24;
+
 /** The style of the line that is `colour`-th by colour and `dash`-th by dashes. */
 export function styleOf(colour: number, dash: number): LineStyle {
   return { colour: COLOURS[colour % COLOURS.length]!, dash: DASHES[dash % DASHES.length]! };

@@ -48,7 +48,7 @@ export function logarithmicFit(values: Iterable<number | null | undefined>): Log
 }
 
 const REASONS = {
-  "no values": "there are no values yet",
+  "no values": "there are no values",
   zero: "the values reach zero",
   "both signs": "the values have both signs",
   "one value": "all values are one",

@@ -1,6 +1,6 @@
 import UPlot from "uplot";
 import "uplot/dist/uPlot.min.css";
-import type { LineStyle } from "./line-style";
+import { FEW_POINTS, type LineStyle } from "./line-style";
 import type { Range } from "./range";
 import { DRAWN_WHOLE, reduceColumns } from "./reduce-columns";
 import type { Colours } from "./theme-colours";
@@ -19,9 +19,6 @@ export interface StoreyDrawing {
   readonly height: number;
   readonly colours: Colours;
 }
-
-/** Points are marked one by one where a line has at most this many. */
-const MARKED = 24;
 
 /**
  * Draws a storey into `host` and returns what takes it away again. Places are drawn on linear scales of fixed ranges, so no
@@ -79,7 +76,7 @@ export function drawStorey(host: HTMLElement, drawing: StoreyDrawing): () => voi
 function markedPoints(ys: readonly (number | null)[], reduced: boolean): number[] {
   const marked: number[] = [];
   if (reduced) return marked;
-  const few = ys.length <= MARKED;
+  const few = ys.length <= FEW_POINTS;
   for (let i = 0; i < ys.length; i++) {
     if ((ys[i] ?? null) === null) continue;
     if (few || ((ys[i - 1] ?? null) === null && (ys[i + 1] ?? null) === null)) marked.push(i);

@@ -56,6 +56,14 @@ export const StoreyPlot = memo(function StoreyPlot({ storey, horizontal, x, widt
           {axis.labels.unit === "1" ? "" : axis.labels.unit}
         </span>
       </p>
+      {axis.ticks.length === 0 && (
+        <p
+          className="absolute inset-0 flex items-center justify-center text-quiet text-sm"
+          aria-hidden="true"
+        >
+          No point is solved here
+        </p>
+      )}
       {labelled && <DirectLabels storey={storey} horizontal={horizontal} x={x} />}
     </div>
   );

@@ -35,7 +35,7 @@ function course(lines: readonly Line[]): string {
   const [line] = lines;
   if (line === undefined) return "no line is drawn";
   const values = lines.flatMap((one) => one.values.filter((value) => value !== null));
-  if (values.length === 0) return `${line.trace} has no solved point yet`;
+  if (values.length === 0) return `${line.trace} has no value`;
   const low = values.reduce((a, b) => Math.min(a, b));
   const high = values.reduce((a, b) => Math.max(a, b));
   // What is smaller than rounding leaves of the largest value is zero to a reader.
@@ -68,6 +68,7 @@ export function pointsInWords(set: CurveSet, account: Account): string {
   const { points, solved, failed, waiting } = account;
   if (solved === points)
     return points === 1 ? "Its one point is solved." : `All ${formatCount(points)} points are solved.`;
+  if (waiting === points) return `None of ${counted(points, "point")} is solved.`;
   const parts = [`${formatCount(solved)} of ${counted(points, "point")} are solved`];
   if (failed > 0) {
     const where = spansInWords(set, account.spans);

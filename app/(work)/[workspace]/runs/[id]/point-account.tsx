@@ -30,7 +30,7 @@ export function PointAccountView({ account }: { readonly account: PointAccount }
         ))}
         {solved && (
           <Row name="outcome">
-            <span className="inline-flex items-center gap-1.5 text-holds">
+            <span className="inline-flex items-baseline gap-1.5 text-holds">
               <StateMark shape="check" />
               converged
             </span>

@@ -43,7 +43,7 @@ export function RunFacts({ workspace, run }: { readonly workspace: string; reado
         </Fact>
         {waited !== "" && (
           <Fact name="Time">
-            {waited} waiting{took !== "" && `, ${took} from first to last point`}
+            {waited} waiting{took !== "" && `, ${took} in work`}
           </Fact>
         )}
         <Fact name="Engine">version {run.engineVersion}</Fact>
