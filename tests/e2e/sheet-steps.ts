@@ -2,6 +2,9 @@ import type { APIResponse, Locator, Page } from "playwright-core";
 import { expect } from "vitest";
 import { baseUrl, WORKSPACE } from "./harness";
 
+/** For `expect.poll`, whose own patience of a second is short on a busy machine. */
+export const PATIENT = { timeout: 20_000 };
+
 /** A small netlist that runs: an ideal amplifier holds the current of a sweep through a junction. */
 export function converterText(title: string, perDecade = 10): string {
   return `title "${title}"

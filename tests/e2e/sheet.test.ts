@@ -16,6 +16,7 @@ import {
   expectChecked,
   makeNetlist,
   openSheet,
+  PATIENT,
   problems,
   typeAtEnd,
   writeText,
@@ -93,10 +94,10 @@ test("Format brings the text into its canonical form, and undo takes it back", a
   const { page } = await onSheet("Format");
   await typeAtEnd(page, "let   late=3 kohm\n");
   await page.getByRole("button", { name: "Format" }).click();
-  await expect.poll(() => shownText(page)).toContain("let late = 3 kΩ");
+  await expect.poll(() => shownText(page), PATIENT).toContain("let late = 3 kΩ");
   await (await editorOf(page)).focus();
   await page.keyboard.press("Control+z");
-  await expect.poll(() => shownText(page)).toContain("let   late=3 kohm");
+  await expect.poll(() => shownText(page), PATIENT).toContain("let   late=3 kohm");
 });
 
 test("saving makes a revision with a message; a text that only looks different makes none", async () => {
@@ -171,7 +172,7 @@ test("a tab that dies loses nothing: the next visit offers the text", async () =
   await notice.waitFor();
   expect(await shownText(next)).not.toContain("precious");
   await notice.getByRole("button", { name: "Take it back" }).click();
-  await expect.poll(() => shownText(next)).toContain("let precious = 1 V");
+  await expect.poll(() => shownText(next), PATIENT).toContain("let precious = 1 V");
   expect(await notice.count()).toBe(0);
 });
 
