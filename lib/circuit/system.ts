@@ -129,5 +129,8 @@ function partOf({ kind }: Element, bench: Bench): Part {
       return new TransistorPart(bench);
     case "opamp":
       return new OpampPart(bench);
+    case "law":
+    case "gain":
+      throw new Error("The checker lets no law or gain through.");
   }
 }

@@ -69,6 +69,10 @@ export class PointValues implements Scope {
     switch (typed.op) {
       case "constant":
       case "signal":
+      case "reading":
+        return;
+      case "reduce":
+        for (const arg of typed.args) this.collect(arg, into);
         return;
       case "knob":
       case "let":

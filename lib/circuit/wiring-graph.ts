@@ -50,11 +50,13 @@ function netsRead(typed: Typed): string[] {
     case "negate":
       return netsRead(typed.operand);
     case "call":
+    case "reduce":
       return typed.args.flatMap(netsRead);
     case "constant":
     case "knob":
     case "let":
     case "thermal voltage":
+    case "reading":
       return [];
     default:
       return [...netsRead(typed.left), ...netsRead(typed.right)];

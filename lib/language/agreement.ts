@@ -1,7 +1,7 @@
 import { type Dimension, PURE, sameDimension } from "@/lib/units/dimension";
-import type { Expression } from "./ast";
 import type { Report } from "./report";
 import type { Span } from "./span";
+import type { Expression } from "./syntax";
 import { quote } from "./token";
 import { describeDimension, spellableUnit } from "./unit-check";
 

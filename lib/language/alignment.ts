@@ -1,5 +1,5 @@
-import type { Statement } from "./ast";
 import { composeLine } from "./spacing-rules";
+import type { Statement } from "./syntax";
 import type { Token } from "./token";
 
 /** A line of the result. Neighbouring lines with columns of the same `run` are set in columns. */

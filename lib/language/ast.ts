@@ -1,101 +1,6 @@
 import type { Dimension } from "@/lib/units/dimension";
 import type { Span } from "./span";
 
-/* ---------- what the parser makes: the text as written ---------- */
-
-/** A word of the text with its place. */
-export interface Word extends Span {
-  readonly text: string;
-}
-
-export type UnaryOperator = "-" | "+";
-export type BinaryOperator = "+" | "-" | "*" | "/" | "^" | "<=" | ">=" | "<" | ">";
-
-/** An expression as written. `hole` stands where the parser found none, so that later phases stay quiet. */
-export type Expression =
-  | (Span & { readonly kind: "number"; readonly value: number; readonly unit: Word | null })
-  | (Span & { readonly kind: "name"; readonly path: readonly Word[] })
-  | (Span & { readonly kind: "unary"; readonly operator: UnaryOperator; readonly operand: Expression })
-  | (Span & {
-      readonly kind: "binary";
-      readonly operator: BinaryOperator;
-      readonly left: Expression;
-      readonly right: Expression;
-    })
-  | (Span & { readonly kind: "call"; readonly callee: Word; readonly args: readonly Expression[] })
-  | (Span & { readonly kind: "hole" });
-
-/** `± 1 %` or `± 50 Ω`, then `uniform` or `normal 3 sigma`, then `track GROUP within 0.05 %`. */
-export interface ToleranceSyntax extends Span {
-  readonly amount: Expression;
-  readonly law: "uniform" | "normal";
-  readonly sigmas: number | null;
-  readonly track: { readonly group: Word; readonly within: Expression | null } | null;
-}
-
-/** `name = value [tolerance]` inside braces: a pin, a parameter. */
-export interface Setting extends Span {
-  readonly name: Word;
-  readonly value: Expression;
-  readonly tolerance: ToleranceSyntax | null;
-}
-
-/** One element of a path: `NAME : kind [MODEL] [value] [tolerance] [{ param = value, … }]`. */
-export interface PathPart extends Span {
-  readonly name: Word;
-  readonly kind: Word;
-  readonly value: Expression | null;
-  readonly tolerance: ToleranceSyntax | null;
-  readonly settings: readonly Setting[];
-}
-
-export type SweepRange =
-  | {
-      readonly kind: "range";
-      readonly start: Expression;
-      readonly stop: Expression;
-      readonly spacing: "per decade" | "points" | "step";
-      readonly amount: Expression;
-    }
-  | { readonly kind: "list"; readonly values: readonly Expression[] };
-
-/** `whole` is false where something in the statement could not be read; what could be is kept. */
-export type Statement = { readonly whole: boolean } & StatementForm;
-
-export type StatementForm =
-  | (Span & { readonly kind: "title"; readonly text: Word })
-  | (Span & {
-      readonly kind: "let" | "knob";
-      readonly name: Word;
-      readonly value: Expression;
-      readonly tolerance: ToleranceSyntax | null;
-      readonly range: { readonly low: Expression; readonly high: Expression } | null;
-    })
-  | (Span & {
-      readonly kind: "model";
-      readonly name: Word;
-      readonly of: Word;
-      readonly settings: readonly Setting[];
-    })
-  | (Span & { readonly kind: "path"; readonly nets: readonly Word[]; readonly parts: readonly PathPart[] })
-  | (Span & {
-      readonly kind: "device";
-      readonly name: Word;
-      readonly of: Word;
-      readonly settings: readonly Setting[];
-    })
-  | (Span & { readonly kind: "sweep"; readonly knob: Word; readonly range: SweepRange })
-  | (Span & {
-      readonly kind: "show";
-      readonly items: readonly (Span & { readonly name: Word | null; readonly value: Expression })[];
-    })
-  /** What could not be read. `declares` is the name it would have introduced, so that its uses stay quiet. */
-  | (Span & { readonly kind: "broken"; readonly declares: Word | null });
-
-export interface Netlist {
-  readonly statements: readonly Statement[];
-}
-
 /* ---------- what the checker makes: names resolved, units checked, numbers in coherent SI ---------- */
 
 /**
@@ -115,7 +20,36 @@ export type Typed = { readonly dimension: Dimension } & (
       readonly right: Typed;
     }
   | { readonly op: "call"; readonly callee: FunctionName; readonly args: readonly Typed[] }
+  | Reduced
 );
+
+/**
+ * What is worked out from the traces of a sweep and not at a point: a reduction of traces, or a reading by its name. `at` is the
+ * binding of `at(trace, KNOB = value)`. Only in readings and requirements.
+ */
+export type Reduced =
+  | {
+      readonly op: "reduce";
+      readonly reduction: ReductionName;
+      readonly args: readonly Typed[];
+      readonly at: { readonly knob: string; readonly value: number } | null;
+    }
+  | { readonly op: "reading"; readonly name: string };
+
+/** `deviation` and `error_from` give one value a point, the others one a sweep. */
+export type ReductionName =
+  | "highest"
+  | "lowest"
+  | "mean"
+  | "span"
+  | "per_decade"
+  | "per_unit"
+  | "intercept"
+  | "deviation"
+  | "error_from"
+  | "reach"
+  | "decades_where"
+  | "at";
 
 export type FunctionName = "exp" | "ln" | "log10" | "sqrt" | "abs" | "min" | "max" | "tanh" | "atan" | "if";
 
@@ -145,9 +79,9 @@ export interface Knob extends NamedValue {
   readonly range: { readonly low: number; readonly high: number } | null;
 }
 
-export type TwoTerminalKind = "resistor" | "voltage" | "current" | "diode";
+export type TwoTerminalKind = "resistor" | "voltage" | "current" | "diode" | "law";
 export type ModelKind = "diode" | "npn" | "pnp" | "opamp";
-export type ElementKind = TwoTerminalKind | ModelKind;
+export type ElementKind = TwoTerminalKind | ModelKind | "gain";
 
 export interface Model extends Span {
   readonly name: string;
@@ -168,6 +102,11 @@ export interface Element extends Span {
   readonly value: NamedValue | null;
   readonly model: string | null;
   readonly params: ReadonlyMap<string, NamedValue>;
+  /**
+   * Of a law alone: v(plus) − v(minus) in V, or the current from plus to minus through the element in A, as an expression
+   * that may use signals.
+   */
+  readonly law: { readonly quantity: "volts" | "amps"; readonly value: Typed } | null;
 }
 
 /** A sweep with every value worked out, in coherent SI units and in the order to be solved. */
@@ -184,8 +123,40 @@ export interface Show extends Span {
   readonly value: Typed;
 }
 
+/** Points at which a knob lies between `low` and `high` (coherent SI, `low` ≤ `high`); `at KNOB = A` has both the same. */
+export interface Window extends Span {
+  readonly knob: string;
+  readonly low: number;
+  readonly high: number;
+}
+
+/** A number per sweep of the first knob. */
+export interface Reading extends Span {
+  readonly name: string;
+  readonly value: Typed;
+  readonly windows: readonly Window[];
+}
+
+export type Relation =
+  | { readonly kind: "compare"; readonly operator: "<=" | ">=" | "<" | ">"; readonly bound: Typed }
+  /** `half` in the unit of the target, or, where `relative`, a pure number that multiplies it. */
+  | { readonly kind: "within"; readonly target: Typed; readonly half: Typed; readonly relative: boolean }
+  | { readonly kind: "between"; readonly low: Typed; readonly high: Typed }
+  | { readonly kind: "rising" | "falling" };
+
+export interface Requirement extends Span {
+  /** The text given after `as`, or the requirement as the formatter writes it. */
+  readonly label: string;
+  readonly value: Typed;
+  readonly relation: Relation;
+  readonly windows: readonly Window[];
+  /** The share of the draws in which it must hold, 0 to 1; null: in every one. */
+  readonly share: number | null;
+}
+
 /**
- * The whole meaning of a netlist without errors. `ground` is not among `nets`; `temperature` is always among `knobs`. The value
+ * The whole meaning of a netlist without errors. Blocks are taken apart: what stands inside an instance `S` has a dotted name
+ * (`S.Q`, `S.x`). `ground` is not among `nets`; `temperature` is always among `knobs`. The value
  * of a knob is always a constant, its default.
  */
 export interface Design {
@@ -200,4 +171,10 @@ export interface Design {
   readonly netPlaces: ReadonlyMap<string, Span>;
   readonly sweeps: readonly Sweep[];
   readonly shows: readonly Show[];
+  /** Random draws of the tolerances beside the nominal one; null where none are asked for. */
+  readonly draws: { readonly count: number; readonly seed: number } | null;
+  /** Operating points to look for at each setting; null where one is enough. */
+  readonly seek: number | null;
+  readonly reads: readonly Reading[];
+  readonly requirements: readonly Requirement[];
 }

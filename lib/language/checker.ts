@@ -1,5 +1,5 @@
 import { Agreement } from "./agreement";
-import type { Design, Element, Netlist, Show, Statement, Sweep } from "./ast";
+import type { Design, Element, Show, Sweep } from "./ast";
 import { checkBounds } from "./bounds";
 import type { Diagnostic } from "./diagnostic";
 import { ElementCheck, modelKinds } from "./elements";
@@ -14,6 +14,7 @@ import { Report } from "./report";
 import { checkShows } from "./shows";
 import type { Span } from "./span";
 import { SweepCheck } from "./sweeps";
+import type { Netlist, Statement } from "./syntax";
 import { type Known, Typing } from "./typing";
 import { checkValues } from "./values";
 import { Wirer } from "./wired";
@@ -82,7 +83,8 @@ function checkNetlist({ statements }: Netlist, source: string, report: Report): 
       "Nothing is shown, so a run keeps no trace; add a line such as `show out.v`.",
     );
   }
-  return { title, knobs, lets, models, elements, nets, netPlaces, sweeps, shows };
+  const plan = { sweeps, shows, draws: null, seek: null, reads: [], requirements: [] };
+  return { title, knobs, lets, models, elements, nets, netPlaces, ...plan };
 }
 
 function titleOf(statements: readonly Statement[], report: Report): string {

@@ -1,8 +1,8 @@
-import type { Word } from "./ast";
 import type { Code } from "./catalogue";
 import type { Fix } from "./diagnostic";
 import type { Report } from "./report";
 import type { Span } from "./span";
+import type { Word } from "./syntax";
 import { quote, type Token } from "./token";
 
 /**

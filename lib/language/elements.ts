@@ -1,11 +1,12 @@
 import { formatQuantity } from "@/lib/units/quantity";
-import type { Element, Model, ModelKind, NamedValue, Setting, Statement } from "./ast";
+import type { Element, Model, ModelKind, NamedValue } from "./ast";
 import { KINDS, LATER_PARAMETERS, MODEL_KINDS, type ParameterKind } from "./kinds";
 import type { Names } from "./names";
 import { nearest } from "./nearest";
 import type { Nominal } from "./nominal";
 import type { Quantities } from "./quantities";
 import type { Report } from "./report";
+import type { Setting, Statement } from "./syntax";
 import { quote } from "./token";
 import type { Wired } from "./wired";
 
@@ -35,7 +36,7 @@ export function modelKinds(
 }
 
 function isModelKind(text: string): text is ModelKind {
-  return Object.hasOwn(KINDS, text) && KINDS[text as ModelKind].value === null;
+  return Object.hasOwn(KINDS, text) && KINDS[text as ModelKind].follows === "model";
 }
 
 /** Checks parameters and values of models and elements against kinds.ts. */
@@ -76,7 +77,7 @@ export class ElementCheck {
     const name = wired.name.text;
     const parameters = model === null ? KINDS[kind].parameters : {};
     const params = this.parameters(wired.settings, parameters, `the ${kind} ${quote(name)}`, model);
-    return { name, kind, pins, value: this.value(wired), model, params, from, to };
+    return { name, kind, pins, value: this.value(wired), model, params, law: null, from, to };
   }
 
   /** The ohms, volts or amperes of an element that has them. */

@@ -1,4 +1,4 @@
-import type { Signal, Typed } from "./ast";
+import type { Reduced, Signal, Typed } from "./ast";
 
 /** Where an expression finds the values of the point being solved: coherent SI units, temperatures in K. */
 export interface Scope {
@@ -7,6 +7,8 @@ export interface Scope {
   signal(signal: Signal): number;
   /** V_T in V at the present temperature. */
   readonly thermalVoltage: number;
+  /** The value of a reduction or a reading, where there are any; without it they are NaN. */
+  reduced?(reduced: Reduced): number;
 }
 
 /**
@@ -25,6 +27,9 @@ export function evaluate(typed: Typed, scope: Scope): number {
       return scope.thermalVoltage;
     case "signal":
       return scope.signal(typed.signal);
+    case "reduce":
+    case "reading":
+      return scope.reduced?.(typed) ?? Number.NaN;
     case "negate":
       return -evaluate(typed.operand, scope);
     case "call":

@@ -1,7 +1,7 @@
-import type { BinaryOperator, Expression, UnaryOperator, Word } from "./ast";
 import type { Cursor } from "./cursor";
 import { MOST_DEPTH } from "./limits";
 import type { Span } from "./span";
+import type { BinaryOperator, Expression, UnaryOperator, Word } from "./syntax";
 import { PRECEDENCE, quote } from "./token";
 
 const COMPARISON = 1;
@@ -129,7 +129,7 @@ export class ExpressionParser {
       return { kind: "hole", from: callee.from, to: cursor.behind };
     }
     cursor.take();
-    return { kind: "call", callee, args, from: callee.from, to: cursor.behind };
+    return { kind: "call", callee, args, bindings: [], from: callee.from, to: cursor.behind };
   }
 
   private unclosed(from: number): void {

@@ -1,5 +1,4 @@
 import { alignRuns, type Line, plainLine, statementLine } from "./alignment";
-import type { Statement } from "./ast";
 import { Cursor } from "./cursor";
 import { ExpressionParser } from "./expression-parser";
 import { tokenize } from "./lexer";
@@ -7,6 +6,7 @@ import { MOST_TEXT } from "./limits";
 import { parseTokens } from "./parser";
 import { Report } from "./report";
 import { composeLine } from "./spacing-rules";
+import type { Statement } from "./syntax";
 import type { Token } from "./token";
 
 /**

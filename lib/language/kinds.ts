@@ -1,4 +1,4 @@
-import { AMPERE, type Dimension, KELVIN, OHM, PER_KELVIN, PURE, VOLT } from "@/lib/units/dimension";
+import { AMPERE, type Dimension, divide, KELVIN, OHM, PER_KELVIN, PURE, VOLT } from "@/lib/units/dimension";
 import type { ElementKind, ModelKind } from "./ast";
 
 /** A parameter of a model: its unit, what leaving it out means, and one line for the reference and the hover. */
@@ -16,6 +16,8 @@ export interface ParameterKind {
 
 export interface DeviceKind {
   readonly pins: readonly string[];
+  /** What sets its behaviour: one value, a model, the expression of a law, or its own parameters. */
+  readonly follows: "value" | "model" | "law" | "parameters";
   /** The unit of the value on a path, for kinds that take one. */
   readonly value: { readonly dimension: Dimension; readonly unit: string } | null;
   readonly parameters: Readonly<Record<string, ParameterKind>>;
@@ -64,6 +66,14 @@ const saturation: ParameterKind = {
   about: "saturation current Is at T0",
 };
 
+function resistance(about: string): ParameterKind {
+  return { dimension: OHM, unit: "Ω", absent: `no ${about}`, low: 0, about };
+}
+
+function positiveCurrent(absent: string, about: string): ParameterKind {
+  return { dimension: AMPERE, unit: "A", absent, low: 0, open: true, about };
+}
+
 const transistor: Readonly<Record<string, ParameterKind>> = {
   Is: saturation,
   beta_f: {
@@ -105,13 +115,42 @@ const transistor: Readonly<Record<string, ParameterKind>> = {
     absent: "gains do not change with temperature",
     about: "exponent of T/T0 in beta_f and beta_r",
   },
+  I_leak_e: positiveCurrent(
+    "no leakage of the emitter junction",
+    "saturation current of the base's leakage to the emitter, at T0",
+  ),
+  n_leak_e: { ...ideality, absent: "2", about: "ideality factor of the leakage to the emitter" },
+  I_leak_c: positiveCurrent(
+    "no leakage of the collector junction",
+    "saturation current of the base's leakage to the collector, at T0",
+  ),
+  n_leak_c: { ...ideality, absent: "2", about: "ideality factor of the leakage to the collector" },
+  I_knee_f: positiveCurrent(
+    "no forward high injection",
+    "collector current at which forward high injection sets in",
+  ),
+  I_knee_r: positiveCurrent(
+    "no reverse high injection",
+    "emitter current at which reverse high injection sets in",
+  ),
+  R_base: resistance("resistance in the base"),
+  R_emitter: resistance("resistance in the emitter"),
+  R_collector: resistance("resistance in the collector"),
   ...junctionTemperature,
 };
+
+const transistorKind = {
+  pins: ["c", "b", "e"],
+  follows: "model",
+  value: null,
+  parameters: transistor,
+} as const;
 
 /** Every kind the language knows: its pins in the order of its path, its value, its parameters. */
 export const KINDS: Readonly<Record<ElementKind, DeviceKind>> = {
   resistor: {
     pins: ["left", "right"],
+    follows: "value",
     value: { dimension: OHM, unit: "Ω" },
     parameters: {
       drift: {
@@ -125,31 +164,52 @@ export const KINDS: Readonly<Record<ElementKind, DeviceKind>> = {
   },
   voltage: {
     pins: ["left", "right"],
+    follows: "value",
     value: { dimension: VOLT, unit: "V" },
     parameters: {},
     about: "raises the potential from left to right by its value",
   },
   current: {
     pins: ["left", "right"],
+    follows: "value",
     value: { dimension: AMPERE, unit: "A" },
     parameters: {},
     about: "drives its value from left to right",
   },
   diode: {
     pins: ["anode", "cathode"],
+    follows: "model",
     value: null,
     parameters: {
       Is: saturation,
       n: ideality,
-      Rs: { dimension: OHM, unit: "Ω", absent: "no series resistance", low: 0, about: "series resistance" },
+      Rs: resistance("series resistance"),
+      V_breakdown: {
+        dimension: VOLT,
+        unit: "V",
+        absent: "no breakdown",
+        low: 0,
+        open: true,
+        about: "reverse voltage at which I_breakdown flows",
+      },
+      I_breakdown: positiveCurrent("Is", "reverse current at V_breakdown"),
+      n_breakdown: { ...ideality, about: "ideality factor of the breakdown" },
+      photocurrent: {
+        dimension: AMPERE,
+        unit: "A",
+        absent: "dark",
+        low: 0,
+        about: "current that light drives from cathode to anode inside the diode",
+      },
       ...junctionTemperature,
     },
     about: "junction diode (Shockley)",
   },
-  npn: { pins: ["c", "b", "e"], value: null, parameters: transistor, about: "NPN transistor (Ebers–Moll)" },
-  pnp: { pins: ["c", "b", "e"], value: null, parameters: transistor, about: "PNP transistor (Ebers–Moll)" },
+  npn: { ...transistorKind, about: "NPN transistor (Ebers–Moll, Gummel–Poon)" },
+  pnp: { ...transistorKind, about: "PNP transistor (Ebers–Moll, Gummel–Poon)" },
   opamp: {
     pins: ["plus", "minus", "out"],
+    follows: "model",
     value: null,
     parameters: {
       gain: {
@@ -160,18 +220,66 @@ export const KINDS: Readonly<Record<ElementKind, DeviceKind>> = {
         open: true,
         about: "open-loop gain",
       },
-      offset: { dimension: VOLT, unit: "V", absent: "0 V", about: "input offset voltage, added to plus" },
-      bias: { dimension: AMPERE, unit: "A", absent: "0 A", about: "current into each input" },
+      offset: {
+        dimension: VOLT,
+        unit: "V",
+        absent: "0 V",
+        about: "input offset voltage at 25 °C, added to plus",
+      },
+      offset_drift: {
+        dimension: divide(VOLT, KELVIN),
+        unit: "V/K",
+        absent: "0 V/K",
+        about: "change of the offset with temperature from 25 °C",
+      },
+      bias: { dimension: AMPERE, unit: "A", absent: "0 A", about: "mean current into the two inputs" },
+      bias_offset: {
+        dimension: AMPERE,
+        unit: "A",
+        absent: "0 A",
+        about: "current into plus less current into minus",
+      },
+      R_out: resistance("output resistance"),
+      out_low: { dimension: VOLT, unit: "V", absent: "no lower limit", about: "lowest output voltage" },
+      out_high: { dimension: VOLT, unit: "V", absent: "no upper limit", about: "highest output voltage" },
     },
     about: "operational amplifier; without a gain it is ideal",
   },
+  gain: {
+    pins: ["plus", "minus", "out"],
+    follows: "parameters",
+    value: null,
+    parameters: {
+      ratio: { dimension: PURE, unit: "1", absent: null, about: "v(out) over v(plus) − v(minus)" },
+    },
+    about: "linear block: drives out to ratio times the difference of its inputs, which take no current",
+  },
+  law: {
+    pins: ["plus", "minus"],
+    follows: "law",
+    value: null,
+    parameters: {},
+    about: "element whose voltage (volts) or current from plus to minus (amps) is an expression of signals",
+  },
 };
 
-/** Parameters that the language has but this server does not speak yet. */
+/**
+ * What the language has but no part works out yet: refused by the checker, so that nothing given is silently left out. An entry
+ * goes when its part lands.
+ */
 export const LATER_PARAMETERS: Readonly<Partial<Record<ElementKind, readonly string[]>>> = {
-  npn: ["R_emitter"],
-  pnp: ["R_emitter"],
-  opamp: ["out_low", "out_high"],
+  diode: ["V_breakdown", "I_breakdown", "n_breakdown", "photocurrent"],
+  npn: laterOfTransistors(),
+  pnp: laterOfTransistors(),
+  opamp: ["offset_drift", "bias_offset", "R_out", "out_low", "out_high"],
 };
+
+function laterOfTransistors(): readonly string[] {
+  const leakage = ["I_leak_e", "n_leak_e", "I_leak_c", "n_leak_c"];
+  return [...leakage, "I_knee_f", "I_knee_r", "R_base", "R_emitter", "R_collector"];
+}
+
+/** Kinds of which the same holds. */
+export const LATER_KINDS: ReadonlySet<string> = new Set(["law", "gain"]);
 
 export const MODEL_KINDS: readonly ModelKind[] = ["diode", "npn", "pnp", "opamp"];

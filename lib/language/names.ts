@@ -1,8 +1,9 @@
-import type { ElementKind, Statement, Word } from "./ast";
+import type { ElementKind } from "./ast";
 import { KINDS } from "./kinds";
 import { nearest } from "./nearest";
 import type { Report } from "./report";
 import type { Span } from "./span";
+import type { Statement, Word } from "./syntax";
 import { CONSTANTS, quote, STATEMENT_WORDS } from "./token";
 
 /** What a name of the file means. "unread" is a name whose statement could not be read; its uses stay quiet. */

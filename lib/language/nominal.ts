@@ -43,6 +43,8 @@ export class Nominal {
     switch (typed.op) {
       case "constant":
       case "signal":
+      case "reduce":
+      case "reading":
         return null;
       case "knob":
         return typed.name;

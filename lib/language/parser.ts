@@ -1,4 +1,3 @@
-import type { Netlist, Statement, StatementForm, SweepRange, Word } from "./ast";
 import { Cursor } from "./cursor";
 import type { Diagnostic } from "./diagnostic";
 import { ExpressionParser } from "./expression-parser";
@@ -6,6 +5,7 @@ import { layOut } from "./layout";
 import { tokenize } from "./lexer";
 import { PartParser } from "./part-parser";
 import { Report } from "./report";
+import type { Netlist, Statement, StatementForm, SweepRange, Word } from "./syntax";
 import { LATER_STATEMENTS, quote, STATEMENT_WORDS, type Token } from "./token";
 
 /** What was read, and where no space may stand (see Cursor.tight), for the formatter. */

@@ -1,7 +1,7 @@
-import type { PathPart, Setting, StatementForm, ToleranceSyntax, Word } from "./ast";
 import type { Cursor } from "./cursor";
 import type { ExpressionParser } from "./expression-parser";
 import type { Span } from "./span";
+import type { PathPart, Setting, StatementForm, ToleranceSyntax, Word } from "./syntax";
 import { quote } from "./token";
 
 /** Reads what is wired: paths, devices, models, and the settings and tolerances inside them. */

@@ -1,8 +1,9 @@
 import { type Dimension, PURE, sameDimension } from "@/lib/units/dimension";
 import type { Agreement } from "./agreement";
-import type { Expression, Tolerance, ToleranceSyntax, Typed } from "./ast";
+import type { Tolerance, Typed } from "./ast";
 import type { Nominal } from "./nominal";
 import type { Report } from "./report";
+import type { Expression, ToleranceSyntax } from "./syntax";
 import { quote } from "./token";
 import type { Judged, Typing } from "./typing";
 import { describeDimension, mistakenUnit, spellableUnit } from "./unit-check";

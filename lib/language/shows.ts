@@ -1,6 +1,7 @@
-import type { Show, Statement, Word } from "./ast";
+import type { Show } from "./ast";
 import { formatExpression } from "./format";
 import type { Report } from "./report";
+import type { Statement, Word } from "./syntax";
 import { quote } from "./token";
 import type { Typing } from "./typing";
 

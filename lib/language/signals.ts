@@ -1,8 +1,9 @@
 import { AMPERE, VOLT, WATT } from "@/lib/units/dimension";
-import type { Expression, Typed, Word } from "./ast";
+import type { Typed } from "./ast";
 import { KINDS } from "./kinds";
 import { Names } from "./names";
 import type { Report } from "./report";
+import type { Expression, Word } from "./syntax";
 import { quote } from "./token";
 
 /** The nets at the pins of an element. */

@@ -1,12 +1,13 @@
 import { KELVIN, PURE, sameDimension } from "@/lib/units/dimension";
 import { unitOf } from "@/lib/units/quantity";
 import type { Agreement } from "./agreement";
-import type { Expression, Knob, Statement, Sweep, SweepRange } from "./ast";
+import type { Knob, Sweep } from "./ast";
 import { count, MOST_POINTS } from "./limits";
 import { Names } from "./names";
 import type { Quantities, Want } from "./quantities";
 import type { Report } from "./report";
 import { countOf, decades, evenly, stepwise } from "./spacing";
+import type { Expression, Statement, SweepRange } from "./syntax";
 import { quote } from "./token";
 import type { Known, Typing } from "./typing";
 

@@ -12,12 +12,13 @@ import {
 } from "@/lib/units/dimension";
 import { toCoherent } from "@/lib/units/unit";
 import type { Agreement } from "./agreement";
-import type { Expression, Typed, Word } from "./ast";
+import type { Typed } from "./ast";
 import { FUNCTIONS, isFunctionName, LATER_FUNCTIONS } from "./functions";
 import { Names } from "./names";
 import { nearest } from "./nearest";
 import type { Report } from "./report";
 import { type PinsOf, resolveSignal } from "./signals";
+import type { Expression, Word } from "./syntax";
 import { quote } from "./token";
 import { describeDimension, unitOfLiteral } from "./unit-check";
 

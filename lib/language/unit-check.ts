@@ -2,10 +2,10 @@ import { AMPERE, type Dimension, OHM, sameDimension, VOLT } from "@/lib/units/di
 import { PREFIXES } from "@/lib/units/prefix";
 import { unitOf } from "@/lib/units/quantity";
 import { PLAIN_UNITS, parseUnit, UNITS, type Unit } from "@/lib/units/unit";
-import type { Expression, Word } from "./ast";
 import type { Names } from "./names";
 import { nearest } from "./nearest";
 import type { Report } from "./report";
+import type { Expression, Word } from "./syntax";
 import { quote } from "./token";
 
 /** What stands for a unit in other places: spelled-out names and habits, without prefix. */

@@ -1,10 +1,11 @@
 import { KELVIN, sameDimension } from "@/lib/units/dimension";
 import type { Agreement } from "./agreement";
-import type { Expression, Knob, NamedValue, Statement, Typed } from "./ast";
+import type { Knob, NamedValue, Typed } from "./ast";
 import type { Names } from "./names";
 import type { Nominal } from "./nominal";
 import type { Quantities } from "./quantities";
 import type { Report } from "./report";
+import type { Expression, Statement } from "./syntax";
 import { quote } from "./token";
 import type { Judged, Known, Typing } from "./typing";
 import { describeDimension, spellableUnit } from "./unit-check";

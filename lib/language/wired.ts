@@ -1,8 +1,9 @@
-import type { ElementKind, Expression, ModelKind, Setting, Statement, ToleranceSyntax, Word } from "./ast";
-import { KINDS, MODEL_KINDS } from "./kinds";
+import type { ElementKind, ModelKind } from "./ast";
+import { KINDS, LATER_KINDS, MODEL_KINDS } from "./kinds";
 import { Names } from "./names";
 import type { Report } from "./report";
 import type { Span } from "./span";
+import type { Expression, Setting, Statement, ToleranceSyntax, Word } from "./syntax";
 import { quote } from "./token";
 
 /** An element whose kind and nets are known and whose values are not yet checked. */
@@ -16,6 +17,8 @@ export interface Wired extends Span {
   /** Parameters beyond the value. */
   readonly settings: readonly Setting[];
 }
+
+const SPOKEN = Object.keys(KINDS).filter((kind) => !LATER_KINDS.has(kind));
 
 type Followed = { readonly kind: ElementKind; readonly model: string | null };
 
@@ -163,7 +166,8 @@ export class Wirer {
   /** The kind that the word after `:` names, or that of the model it names. */
   private follow(word: Word): Followed | null {
     if (word.text === "") return null;
-    if (Object.hasOwn(KINDS, word.text)) return { kind: word.text as ElementKind, model: null };
+    if (Object.hasOwn(KINDS, word.text) && !LATER_KINDS.has(word.text))
+      return { kind: word.text as ElementKind, model: null };
     const kind = this.models.get(word.text);
     if (kind !== undefined) return { kind, model: word.text };
     this.unknownKind(word);
@@ -173,15 +177,15 @@ export class Wirer {
   private unknownKind(word: Word): void {
     const meaning = this.names.meaningOf(word.text);
     if (meaning === "model" || meaning === "unread") return;
-    if (word.text === "law" || word.text === "gain") {
+    if (LATER_KINDS.has(word.text)) {
       const message = `${quote(word.text)} is not yet part of the language this server speaks; take it out.`;
       this.report.error("FRM6", word, message);
     } else if (meaning !== null) {
       const message = `${quote(word.text)} is ${Names.describe(meaning)}, and a kind or model is wanted after \`:\`.`;
       this.report.error("NAM5", word, message);
     } else {
-      const search = () => this.names.near(word.text, [...Object.keys(KINDS), ...this.models.keys()]);
-      const all = `the kinds are ${Object.keys(KINDS).join(", ")}`;
+      const search = () => this.names.near(word.text, [...SPOKEN, ...this.models.keys()]);
+      const all = `the kinds are ${SPOKEN.join(", ")}`;
       this.report.propose("NAM5", word, `No kind or model is called ${quote(word.text)}`, search, all);
     }
   }
