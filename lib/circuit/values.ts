@@ -69,6 +69,7 @@ export class PointValues implements Scope {
     switch (typed.op) {
       case "constant":
       case "signal":
+      case "trace":
       case "reading":
         return;
       case "reduce":

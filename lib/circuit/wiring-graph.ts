@@ -56,6 +56,7 @@ function netsRead(typed: Typed): string[] {
     case "knob":
     case "let":
     case "thermal voltage":
+    case "trace":
     case "reading":
       return [];
     default:

@@ -24,8 +24,9 @@ export type Typed = { readonly dimension: Dimension } & (
 );
 
 /**
- * What is worked out from the traces of a sweep and not at a point: a reduction of traces, or a reading by its name. `at` is the
- * binding of `at(trace, KNOB = value)`. Only in readings and requirements.
+ * What is worked out from the traces of a run and not at a point being solved: a trace by the name of its show, a reading by its
+ * name, a reduction of traces. `at` is the binding of `at(trace, KNOB = value)`. Only in readings and requirements, which have
+ * no signals of their own: what they name is kept as a trace.
  */
 export type Reduced =
   | {
@@ -34,7 +35,7 @@ export type Reduced =
       readonly args: readonly Typed[];
       readonly at: { readonly knob: string; readonly value: number } | null;
     }
-  | { readonly op: "reading"; readonly name: string };
+  | { readonly op: "trace" | "reading"; readonly name: string };
 
 /** `deviation` and `error_from` give one value a point, the others one a sweep. */
 export type ReductionName =

@@ -28,6 +28,7 @@ export function evaluate(typed: Typed, scope: Scope): number {
     case "signal":
       return scope.signal(typed.signal);
     case "reduce":
+    case "trace":
     case "reading":
       return scope.reduced?.(typed) ?? Number.NaN;
     case "negate":

@@ -44,6 +44,7 @@ export class Nominal {
       case "constant":
       case "signal":
       case "reduce":
+      case "trace":
       case "reading":
         return null;
       case "knob":
