@@ -18,6 +18,25 @@ export interface Part {
   addTo(state: State): void;
   /** The current into a pin, A, at the present unknowns. */
   current(pin: string, state: State): number;
+  /**
+   * What the certificate needs. "linear": constant slopes, and every figure within 8 roundings of what it adds to the scale.
+   * A part that leaves it out is sound but leaves its points unproved.
+   */
+  readonly proof?: "linear" | Proof;
+}
+
+/**
+ * What the certificate asks of a law that is not linear, right after `settle` and `addTo`. Vectors have the entries of a State's.
+ */
+export interface Proof {
+  /** Adds, row by row, the most by which the law as computed may be off by rounding: A of a net, V of a branch law. */
+  addDoubt(state: State, doubt: Float64Array): void;
+  /**
+   * Adds, row by row, the most by which Σ_j |slope_ij|·weights_j can change while |x_j − x̄_j| ≤ weights_j·radius for every unknown,
+   * counted from the slopes as computed: Σ_j sup|slope_ij(x) − slope_ij|·weights_j. `weights` are V per V of a net (1) and A per V of a
+   * branch current; ground has 0.
+   */
+  addSpread(state: State, radius: number, weights: Float64Array, spread: Float64Array): void;
 }
 
 /** A part with junctions, which are linearised at voltages of their own while a step is limited. */

@@ -1,6 +1,7 @@
 import { thermalVoltage } from "@/lib/units/constants";
 import type { DiodeAt } from "./diode";
-import { type SaturationTerms, saturationCurrent } from "./saturation";
+import { UNIT } from "./rounding";
+import { type SaturationTerms, saturationCurrent, saturationDoubt } from "./saturation";
 
 /** A transistor as its model gives it; a term whose figure is null is dropped exactly. */
 export interface BipolarTerms extends SaturationTerms {
@@ -36,11 +37,14 @@ export interface BipolarCurrents {
 export function bipolarAt(terms: BipolarTerms, kelvin: number): BipolarAt {
   const Is = saturationCurrent(terms, kelvin);
   const { beta_f, beta_r, Va_f, Va_r, beta_power, T0, n } = terms;
-  const rise = beta_power === null || kelvin === T0 ? 1 : (kelvin / T0) ** beta_power;
+  const hasRise = beta_power !== null && kelvin !== T0;
+  const rise = hasRise ? (kelvin / T0) ** beta_power : 1;
+  const riseDoubt = hasRise ? Math.abs(beta_power) * (1 + Math.abs(Math.log(kelvin / T0))) : 0;
   return {
     Is,
     eta: n * thermalVoltage(kelvin),
     Rs: 0,
+    doubt: saturationDoubt(terms, kelvin) + UNIT * (4 * riseDoubt + 8),
     forwardBase: beta_f === null ? 0 : Is / (beta_f * rise),
     reverseBase: beta_r === null ? 0 : Is / (beta_r * rise),
     forwardEarly: Va_f === null ? 0 : 1 / Va_f,

@@ -1,5 +1,5 @@
 import { thermalVoltage } from "@/lib/units/constants";
-import { type SaturationTerms, saturationCurrent } from "./saturation";
+import { type SaturationTerms, saturationCurrent, saturationDoubt } from "./saturation";
 import { wrightOmega } from "./wright-omega";
 
 /** A diode at one temperature. */
@@ -10,6 +10,8 @@ export interface DiodeAt {
   readonly eta: number;
   /** Series resistance, Ω; 0 for none. */
   readonly Rs: number;
+  /** Relative error of Is by rounding. */
+  readonly doubt: number;
 }
 
 /** Where a law writes its current (A) and slope (S), so that the inner loop does not allocate. */
@@ -19,7 +21,12 @@ export interface CurrentAndSlope {
 }
 
 export function diodeAt(terms: SaturationTerms, Rs: number | null, kelvin: number): DiodeAt {
-  return { Is: saturationCurrent(terms, kelvin), eta: terms.n * thermalVoltage(kelvin), Rs: Rs ?? 0 };
+  return {
+    Is: saturationCurrent(terms, kelvin),
+    eta: terms.n * thermalVoltage(kelvin),
+    Rs: Rs ?? 0,
+    doubt: saturationDoubt(terms, kelvin),
+  };
 }
 
 /**

@@ -6,6 +6,7 @@ import type { PointValues } from "../values";
 
 export class CurrentPart implements Part {
   readonly element: Element;
+  readonly proof = "linear";
   readonly movers: ReadonlySet<string>;
   private readonly left: number;
   private readonly right: number;

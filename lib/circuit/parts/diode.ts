@@ -1,4 +1,5 @@
 import { type CurrentAndSlope, type DiodeAt, diodeAt, diodeLaw, diodeVoltage } from "@/lib/devices/diode";
+import { diodeDoubt, diodeSpread } from "@/lib/devices/diode-proof";
 import { junctionStep } from "@/lib/devices/junction-step";
 import type { Element, Model } from "@/lib/language/ast";
 import { ROOM_TEMPERATURE } from "@/lib/units/constants";
@@ -10,19 +11,21 @@ import {
   moversOf,
   NEARLY_WHOLE,
   netAt,
+  type Proof,
   START_CURRENT,
 } from "../part";
 import { across, flow, type State } from "../state";
 import { type PointValues, TEMPERATURE } from "../values";
 
-export class DiodePart implements JunctionPart {
+export class DiodePart implements JunctionPart, Proof {
+  readonly proof: Proof = this;
   readonly element: Element;
   readonly movers: ReadonlySet<string>;
   private readonly model: Model;
   private readonly anode: number;
   private readonly cathode: number;
   private readonly places: readonly [number, number, number, number];
-  private at: DiodeAt = { Is: 0, eta: 1, Rs: 0 };
+  private at: DiodeAt = { Is: 0, eta: 1, Rs: 0, doubt: 0 };
   /** Voltage at which it is linearised, V, and its law there. */
   private v = 0;
   private readonly law: CurrentAndSlope = { i: 0, g: 0 };
@@ -85,6 +88,20 @@ export class DiodePart implements JunctionPart {
     jacobian[places[1]]! -= law.g;
     jacobian[places[2]]! -= law.g;
     jacobian[places[3]]! += law.g;
+  }
+
+  addDoubt(_: State, doubt: Float64Array): void {
+    const most = diodeDoubt(this.at, this.v, this.law);
+    doubt[this.anode]! += most;
+    doubt[this.cathode]! += most;
+  }
+
+  addSpread(_: State, radius: number, weights: Float64Array, spread: Float64Array): void {
+    const { anode, cathode, at, v, law } = this;
+    const both = weights[anode]! + weights[cathode]!;
+    const most = diodeSpread(at, v, law.g, radius * both) * both;
+    spread[anode]! += most;
+    spread[cathode]! += most;
   }
 
   current(pin: string, state: State): number {

@@ -6,6 +6,7 @@ import type { PointValues } from "../values";
 
 export class OpampPart implements Part {
   readonly element: Element;
+  readonly proof = "linear";
   readonly movers: ReadonlySet<string>;
   private readonly model: Model;
   private readonly plus: number;

@@ -1,10 +1,11 @@
 import { conductance } from "@/lib/devices/resistor";
+import { UNIT } from "@/lib/devices/rounding";
 import type { Element } from "@/lib/language/ast";
-import { type Bench, figureOf, moversOf, netAt, type Part } from "../part";
+import { type Bench, figureOf, moversOf, netAt, type Part, type Proof } from "../part";
 import { across, flow, type State } from "../state";
 import { type PointValues, TEMPERATURE } from "../values";
 
-export class ResistorPart implements Part {
+export class ResistorPart implements Part, Proof {
   readonly element: Element;
   readonly movers: ReadonlySet<string>;
   private readonly left: number;
@@ -48,6 +49,20 @@ export class ResistorPart implements Part {
 
   addTo(state: State): void {
     flow(state, this.left, this.right, this.g * across(state, this.left, this.right));
+  }
+
+  /** A conductance that is or may become negative can cancel others, whose rounding then stays. */
+  get proof(): "linear" | Proof {
+    return this.g >= 0 && this.movers.size === 0 ? "linear" : this;
+  }
+
+  addDoubt(): void {}
+
+  addSpread(_: State, __: number, weights: Float64Array, spread: Float64Array): void {
+    if (this.g >= 0) return;
+    const most = -8 * UNIT * this.g * (weights[this.left]! + weights[this.right]!);
+    spread[this.left]! += most;
+    spread[this.right]! += most;
   }
 
   current(pin: string, state: State): number {

@@ -1,4 +1,5 @@
 import { type BipolarAt, bipolarAt, bipolarLaw } from "@/lib/devices/bipolar";
+import { bipolarDoubt, bipolarSpread } from "@/lib/devices/bipolar-proof";
 import { diodeVoltage } from "@/lib/devices/diode";
 import { junctionStep } from "@/lib/devices/junction-step";
 import type { Element, Model } from "@/lib/language/ast";
@@ -11,13 +12,15 @@ import {
   moversOf,
   NEARLY_WHOLE,
   netAt,
+  type Proof,
   START_CURRENT,
 } from "../part";
 import { across, flow, type State } from "../state";
 import { type PointValues, TEMPERATURE } from "../values";
 
 /** An npn, or a pnp, which is the same with every voltage and current reversed. */
-export class TransistorPart implements JunctionPart {
+export class TransistorPart implements JunctionPart, Proof {
+  readonly proof: Proof = this;
   readonly element: Element;
   readonly movers: ReadonlySet<string>;
   private readonly model: Model;
@@ -33,6 +36,7 @@ export class TransistorPart implements JunctionPart {
     Is: 0,
     eta: 1,
     Rs: 0,
+    doubt: 0,
     forwardBase: 0,
     reverseBase: 0,
     forwardEarly: 0,
@@ -43,6 +47,7 @@ export class TransistorPart implements JunctionPart {
   private vbc = 0;
   private vce = 0;
   private readonly law = { ic: 0, ib: 0, icF: 0, icR: 0, ibF: 0, ibR: 0 };
+  private readonly bounds = { ic: 0, ib: 0, icF: 0, icR: 0, ibF: 0, ibR: 0 };
 
   constructor(bench: Bench) {
     const { element, circuit, pattern, values } = bench;
@@ -145,6 +150,26 @@ export class TransistorPart implements JunctionPart {
     jacobian[places[6]!]! += icR + ibR;
     jacobian[places[7]!]! -= icF + icR + ibF + ibR;
     jacobian[places[8]!]! += icF + ibF;
+  }
+
+  addDoubt(_: State, doubt: Float64Array): void {
+    const { bounds } = this;
+    bipolarDoubt(this.at, this.vbe, this.vbc, bounds);
+    doubt[this.c]! += bounds.ic;
+    doubt[this.b]! += bounds.ib;
+    doubt[this.e]! += bounds.ic + bounds.ib;
+  }
+
+  addSpread(_: State, radius: number, weights: Float64Array, spread: Float64Array): void {
+    const { c, b, e, bounds } = this;
+    const be = weights[b]! + weights[e]!;
+    const bc = weights[b]! + weights[c]!;
+    bipolarSpread(this.at, this.vbe, this.vbc, radius * Math.max(be, bc), bounds);
+    const intoC = bounds.icF * be + bounds.icR * bc;
+    const intoB = bounds.ibF * be + bounds.ibR * bc;
+    spread[c]! += intoC;
+    spread[b]! += intoB;
+    spread[e]! += intoC + intoB;
   }
 
   current(pin: string, state: State): number {
