@@ -21,6 +21,7 @@ export function AxisSwitch({
   readonly onChange: (scale: Scale) => void;
 }) {
   const group = useId();
+  if (!fit.fits && fit.reason === "no values") return null;
   if (!fit.fits) {
     return (
       <p className="text-quiet text-xs">

@@ -26,10 +26,12 @@ interface Props {
   /** Flat number of the chosen point. */
   readonly point: number | null;
   readonly onPoint: (point: number) => void;
+  /** Why there are no values at all yet; null once there may be some. */
+  readonly waiting: string | null;
 }
 
 /** A plot with all that belongs to it: axis switches, storeys on their ruler, the view as fields, a summary, the lines. */
-export function CurveFigure({ set, name, view, onView, point, onPoint }: Props) {
+export function CurveFigure({ set, name, view, onView, point, onPoint, waiting }: Props) {
   const id = useId();
   const frame = useRef<HTMLDivElement>(null);
   const frameWidth = useWidth(frame);
@@ -82,6 +84,7 @@ export function CurveFigure({ set, name, view, onView, point, onPoint }: Props) 
             cursor={cursor}
             chosen={point === null ? null : placeOfPoint(set, point)}
             describedBy={`${id}-keys`}
+            empty={waiting ?? "No point is solved here"}
             onCursor={setCursor}
             onChoose={({ family, place }) => onPoint(pointAt(set, family, place))}
             onZoom={zoom}
@@ -95,7 +98,7 @@ export function CurveFigure({ set, name, view, onView, point, onPoint }: Props) 
       </div>
       <ZoomFields set={set} zoom={view.zoom} onZoom={(next) => onView({ zoom: next })} />
       <figcaption id={`${id}-summary`} className="max-w-prose text-sm">
-        {summary}
+        {waiting ?? summary}
       </figcaption>
       <p id={`${id}-keys`} className="max-w-prose text-quiet text-xs" data-print="never">
         Point at the plot, or focus it and use the arrow keys: left and right along the sweep, up and down

@@ -23,6 +23,8 @@ interface Props {
   readonly cursor: Cursor | null;
   readonly chosen: Cursor | null;
   readonly describedBy: string;
+  /** What stands in a storey while no value does. */
+  readonly empty: string;
   readonly onCursor: (cursor: Cursor | null) => void;
   readonly onChoose: (cursor: Cursor) => void;
   readonly onZoom: (range: Range) => void;
@@ -43,6 +45,7 @@ export function PlotFrame(props: Props) {
               x={x}
               width={width}
               labelled={gutters.labelled}
+              empty={props.empty}
             />
           ))}
         </div>

@@ -16,10 +16,12 @@ interface Props {
   /** Width of the plotting area, px. */
   readonly width: number;
   readonly labelled: boolean;
+  /** What stands there while no value does. */
+  readonly empty: string;
 }
 
 /** One storey: its lines on a canvas, every word over it as text. The table beside the plot says the same in numbers. */
-export const StoreyPlot = memo(function StoreyPlot({ storey, horizontal, x, width, labelled }: Props) {
+export const StoreyPlot = memo(function StoreyPlot({ storey, horizontal, x, width, labelled, empty }: Props) {
   const host = useRef<HTMLDivElement>(null);
   const colours = useColours();
   const { axis, height, lines } = storey;
@@ -61,7 +63,7 @@ export const StoreyPlot = memo(function StoreyPlot({ storey, horizontal, x, widt
           className="absolute inset-0 flex items-center justify-center text-quiet text-sm"
           aria-hidden="true"
         >
-          No point is solved here
+          {empty}
         </p>
       )}
       {labelled && <DirectLabels storey={storey} horizontal={horizontal} x={x} />}

@@ -7,6 +7,7 @@ import type { Line, Storey } from "./storeys";
 
 /** What a plot shows, in sentences: what is drawn over what, where each trace goes, how many points failed and where. */
 export function summarise(set: CurveSet, storeys: readonly Storey[], account: Account): string {
+  if (account.waiting === account.points) return pointsInWords(set, account);
   const first = set.x[0];
   const last = set.x.at(-1);
   if (first === undefined || last === undefined) return "The sweep has no points.";

@@ -13,7 +13,7 @@ import { type PageState, readPageState, writePageState } from "./page-state";
 import { PointPanel } from "./point-panel";
 import { RunFacts } from "./run-facts";
 import { RunHeader } from "./run-header";
-import type { PointAccount, RunState } from "./run-shapes";
+import { isLive, type PointAccount, type RunState } from "./run-shapes";
 import { RunStatusLine } from "./run-status-line";
 import { type Found, useLiveRun } from "./use-live-run";
 
@@ -97,6 +97,7 @@ export function RunView(props: Props) {
                       onView={show}
                       point={chosen}
                       onPoint={(next) => show({ point: next })}
+                      waiting={waitingFor(run, document !== null)}
                     />
                   ),
                 },
@@ -133,4 +134,10 @@ export function RunView(props: Props) {
       </div>
     </>
   );
+}
+
+/** Why no curve can be there yet; null when what is there is all there is. */
+function waitingFor({ status, pointsDone }: RunState, fetched: boolean): string | null {
+  if (pointsDone === 0) return isLive(status) ? "Waiting for the first points" : null;
+  return fetched ? null : "Fetching the curves…";
 }
