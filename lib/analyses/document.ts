@@ -14,6 +14,8 @@ export interface RunMatter {
   readonly outcome: Float64Array;
   readonly iterations: Float64Array;
   readonly rung: Float64Array;
+  /** V; NaN where not proved. */
+  readonly bound: Float64Array;
   readonly failures: readonly Failure[];
   readonly diagnostics: readonly Diagnostic[];
 }
@@ -39,7 +41,7 @@ export function toDocument(matter: RunMatter): RunDocument {
     })),
     points: {
       outcome: Array.from(outcome, (index) => OUTCOMES[index] ?? null),
-      bound: Array.from(outcome, () => null),
+      bound: Array.from(matter.bound, (bound) => (Number.isFinite(bound) ? bound : null)),
       iterations: Array.from(matter.iterations, (count) => (Number.isNaN(count) ? 0 : count)),
       rung: Array.from(matter.rung, (index) => RUNGS[index] ?? null),
     },

@@ -33,6 +33,7 @@ export interface RunDocument {
   readonly traces: readonly TraceDocument[];
   readonly points: {
     readonly outcome: readonly (OutcomeKind | null)[];
+    /** V; null where the point is not solved or not proved. */
     readonly bound: readonly (number | null)[];
     readonly iterations: readonly number[];
     readonly rung: readonly (Rung | null)[];
@@ -57,6 +58,8 @@ export interface ShardResult {
   readonly outcome: Float64Array;
   readonly iterations: Float64Array;
   readonly residual: Float64Array;
+  /** V within which a true solution is proved to lie of each net voltage; NaN where not solved or not proved. */
+  readonly bound: Float64Array;
   readonly rung: Float64Array;
   readonly failures: readonly Failure[];
 }

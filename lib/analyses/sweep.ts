@@ -85,6 +85,7 @@ function emptyShard({ plan }: Job, from: number, to: number): Filling {
     outcome: column(),
     iterations: column(),
     residual: column(),
+    bound: column(),
     rung: column(),
     failures: [],
   };
@@ -107,6 +108,7 @@ function keep(
     into.failures.push({ point, outcome: outcome.kind, unsettled: outcome.unsettled });
     return;
   }
+  into.bound[k] = outcome.bound;
   for (let j = 0; j < into.unknowns.length; j++) into.unknowns[j]![k] = state.x[j]!;
   for (let j = 0; j < into.traces.length; j++) into.traces[j]![k] = evaluate(design.shows[j]!.value, scope);
 }

@@ -1,5 +1,6 @@
 import type { System } from "@/lib/circuit/system";
 import { largestResidual } from "./acceptance";
+import { Certificate } from "./certificate";
 import { freeUnknowns } from "./dense";
 import type { SparseShape } from "./elimination";
 import { LinearSolver } from "./linear";
@@ -18,11 +19,15 @@ export class Ladder {
   private readonly bench: Bench;
   private readonly linear: LinearSolver;
   private readonly shape: SparseShape;
+  private readonly certificate: Certificate;
   /** Diagnoses that the present strand may still have. */
   private diagnoses = MOST_DIAGNOSES;
 
-  /** The pivots are chosen on a cold start at the point to which `system` is turned. */
-  constructor(private readonly system: System) {
+  /** The pivots are chosen on a cold start at the point to which `system` is turned. Without `isProving` no bound is sought. */
+  constructor(
+    private readonly system: System,
+    private readonly isProving = true,
+  ) {
     const { pattern, state, circuit } = system;
     system.startCold();
     system.assemble();
@@ -33,11 +38,13 @@ export class Ladder {
     };
     this.linear = new LinearSolver(this.shape, state.jacobian);
     this.bench = { system, linear: this.linear, step: new Float64Array(circuit.size) };
+    this.certificate = new Certificate(system, this.linear);
   }
 
   /** Forgets what was solved before, so that the next point does not depend on it. */
   reset(): void {
     this.linear.reset();
+    this.certificate.reset();
     this.diagnoses = MOST_DIAGNOSES;
   }
 
@@ -57,7 +64,10 @@ export class Ladder {
     }
     const { kind, wasSingular } = last;
     const residual = largestResidual(circuit, state);
-    if (kind === "converged") return { kind, iterations, residual, rung };
+    if (kind === "converged") {
+      const bound = this.isProving ? this.certificate.prove() : Number.NaN;
+      return { kind, iterations, residual, bound, rung };
+    }
     const free = wasSingular && this.diagnoses-- > 0 ? freeUnknowns(this.shape, state.jacobian) : [];
     return { kind, iterations, residual, rung, unsettled: unsettled(bench, free) };
   }

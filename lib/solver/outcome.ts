@@ -11,6 +11,8 @@ export type Outcome =
       readonly kind: "converged";
       readonly iterations: number;
       readonly residual: number;
+      /** V within which a true solution is proved to lie of every reported voltage; NaN: not proved. */
+      readonly bound: number;
       readonly rung: Rung;
     }
   | {

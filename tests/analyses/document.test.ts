@@ -12,8 +12,8 @@ const text = readFileSync("examples/reversed-input.swn", "utf8").replace(
 function matterOf(source: string): RunMatter {
   const { job, diagnostics } = compile(source);
   const { plan } = job!;
-  const { traces, outcome, iterations, rung, failures } = solveRange(job!, 0, plan.points);
-  return { plan, text: source, traces, outcome, iterations, rung, failures, diagnostics };
+  const { traces, outcome, iterations, rung, bound, failures } = solveRange(job!, 0, plan.points);
+  return { plan, text: source, traces, outcome, iterations, rung, bound, failures, diagnostics };
 }
 
 describe("the run document", () => {
@@ -50,6 +50,8 @@ describe("the run document", () => {
     });
     expect(document.traces[0]!.values.at(-1)).toBe(matter.traces[0]!.at(-1));
     expect(document.points.outcome.at(-1)).toBe("converged");
+    expect(document.points.bound[0]).toBeNull();
+    expect(document.points.bound.at(-1)).toBe(matter.bound.at(-1));
     expect(document.verdict).toBe("holds");
   });
 
@@ -61,11 +63,13 @@ describe("the run document", () => {
       outcome: unknown,
       iterations: unknown,
       rung: unknown,
+      bound: unknown,
       failures: [],
     });
     expect(empty.verdict).toBe("no data");
     expect(new Set(empty.points.outcome)).toEqual(new Set([null]));
     expect(new Set(empty.points.rung)).toEqual(new Set([null]));
+    expect(new Set(empty.points.bound)).toEqual(new Set([null]));
     expect(new Set(empty.points.iterations)).toEqual(new Set([0]));
     expect(new Set(empty.traces[0]!.values)).toEqual(new Set([null]));
   });

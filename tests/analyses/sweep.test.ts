@@ -22,6 +22,7 @@ function columns(result: ShardResult): [string, Float64Array][] {
     ["outcome", result.outcome],
     ["iterations", result.iterations],
     ["residual", result.residual],
+    ["bound", result.bound],
     ["rung", result.rung],
   ];
 }

@@ -11,6 +11,7 @@ export const made = {
   unknown: (i: number, point: number) => -1000 * (i + 1) - point / 3,
   iterations: (point: number) => 1 + (point % 5),
   residual: (point: number) => 1e-15 * (point + 1),
+  bound: (point: number) => 1e-12 * (point + 1),
 };
 
 /** Claims a shard and stores made-up figures for it; the points in `failed` are unsolved with "iteration limit". */
@@ -33,6 +34,7 @@ export async function storeShard(runId: string, index: number, plan: Plan, faile
     outcome: each((point) => OUTCOMES.indexOf(failed.includes(point) ? "iteration limit" : "converged")),
     iterations: each(made.iterations),
     residual: each(made.residual),
+    bound: solved(made.bound),
     rung: each(() => RUNGS.indexOf("newton")),
     failures,
   };

@@ -3,7 +3,7 @@ import { OUTCOMES } from "@/lib/solver/outcome";
 import { type Chunk, cut } from "./codec";
 
 /** The columns beside the traces and unknowns, one value a point. */
-export const ACCOUNT_COLUMNS = ["outcome", "iterations", "residual", "rung"] as const;
+export const ACCOUNT_COLUMNS = ["outcome", "iterations", "residual", "bound", "rung"] as const;
 
 /** The name under which trace `i` of the plan is stored, and unknown `i`. */
 export const traceColumn = (i: number) => `trace/${i}`;

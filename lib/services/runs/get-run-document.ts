@@ -41,7 +41,7 @@ export async function getRunDocument(
   const { plan, text } = of!;
   const traces = plan.traces.map((_, i) => traceColumn(i));
   const [columns, shards] = await Promise.all([
-    readColumns(asked.id, asked.points, [...traces, "outcome", "iterations", "rung"]),
+    readColumns(asked.id, asked.points, [...traces, "outcome", "iterations", "rung", "bound"]),
     db
       .select({ failures: shard.failures })
       .from(shard)
@@ -56,6 +56,7 @@ export async function getRunDocument(
     outcome: column("outcome"),
     iterations: column("iterations"),
     rung: column("rung"),
+    bound: column("bound"),
     failures: shards.flatMap(({ failures }) => failures),
     diagnostics: compile(text).diagnostics,
   });

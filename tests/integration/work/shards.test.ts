@@ -43,6 +43,7 @@ function result({ from, to }: Claim, add = 0): StoredShard {
     outcome: Float64Array.from({ length: to - from }, (_, i) => (i % 7 === 0 ? 1 : 0)),
     iterations: column(),
     residual: column(),
+    bound: column(),
     rung: column(),
     failures: [{ point: from, outcome: "iteration limit", unsettled: ["s"] }],
   };

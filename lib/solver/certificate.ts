@@ -1,0 +1,174 @@
+import type { Proof } from "@/lib/circuit/part";
+import type { System } from "@/lib/circuit/system";
+import { UNIT } from "@/lib/devices/rounding";
+import { Inverse } from "./inverse";
+import type { Linear } from "./linear";
+
+/** V. The ball in which slopes are bounded first; what proves a point is usually a thousand times smaller. */
+const BALL = 1e-9;
+const SMALLEST_BALL = 1e-15;
+const LARGEST_BALL = 1e-2;
+const MOST_TRIES = 6;
+/** A neighbour's inverse serves while it leaves less than this of the unit matrix; the bound is then at most twice as wide. */
+const WORN = 0.5;
+/** Unknowns of a point that is proved at most: the inverse is dense. */
+const MOST_UNKNOWNS = 1500;
+/** Widens sums of up to a million positive terms by their own rounding. */
+const WIDENED = 1 + 2 ** -32;
+/** A branch current may move this many times as far as its row asks for, so that a neighbour's weights serve. */
+const SPARE = 4;
+
+/**
+ * Proves that a true solution lies within r volts of the one at hand (radii polynomial, from the Newton–Kantorovich theorem; Rump,
+ * Acta Numerica 19, 2010, from memory). With R ≈ J⁻¹ the map x − R·F(x) sends the ball |x_j − x̄_j| ≤ w_j·r into itself and contracts, if
+ *   Y_i + (Z_i + P_i)·r < w_i·r for every i,   Y = |R|·(|F| + δF),   Z = |I − R·J|·w,   P = |R|·(sup|J(x) − J|·w).
+ * δF and P come from the parts, the rounding of R·J and of every sum is added. w is 1 for a voltage; that of a branch current
+ * is chosen (A per V) so that its own row never decides.
+ */
+export class Certificate {
+  private readonly parts: readonly Proof[];
+  private readonly canProve: boolean;
+  private readonly inverse: Inverse;
+  private readonly isVoltage: readonly boolean[];
+  /** Roundings in the sum of each row. */
+  private readonly roundings: Float64Array;
+  private readonly weights: Float64Array;
+  private readonly doubt: Float64Array;
+  private readonly spread: Float64Array;
+
+  constructor(
+    private readonly system: System,
+    linear: Linear,
+  ) {
+    const { circuit, parts, pattern } = system;
+    const { size } = circuit;
+    this.parts = parts.flatMap(({ proof }) => (proof === undefined || proof === "linear" ? [] : [proof]));
+    this.canProve = size <= MOST_UNKNOWNS && parts.every(({ proof }) => proof !== undefined);
+    this.inverse = new Inverse(pattern, linear);
+    this.isVoltage = circuit.unknowns.map(({ unit }) => unit === "V");
+    this.roundings = new Float64Array(size + 1).fill(16);
+    for (const { element } of parts) {
+      for (const net of Object.values(element.pins)) this.roundings[circuit.nets.get(net)!]! += 2;
+    }
+    this.weights = new Float64Array(size + 1);
+    this.doubt = new Float64Array(size + 1);
+    this.spread = new Float64Array(size + 1);
+    this.reset();
+  }
+
+  /** Forgets the neighbour, at the beginning of a strand. */
+  reset(): void {
+    this.inverse.forget();
+    for (let j = 0; j < this.isVoltage.length; j++) this.weights[j] = this.isVoltage[j] ? 1 : 0;
+  }
+
+  /**
+   * The radius in V for the voltages of the system's state, which must have been assembled with every junction settled right
+   * after the last solution of the linear solver; NaN where no radius can be proved.
+   */
+  prove(): number {
+    if (!this.canProve) return Number.NaN;
+    this.gatherDoubt();
+    const isReused = this.inverse.isKnown;
+    if (!isReused) this.renew();
+    let radius = this.search(isReused ? WORN : 1);
+    if (Number.isNaN(radius) && isReused) {
+      this.renew();
+      radius = this.search(1);
+    }
+    if (Number.isNaN(radius)) this.inverse.forget();
+    return radius;
+  }
+
+  private renew(): void {
+    this.inverse.renew();
+    this.startWeights();
+  }
+
+  /** |F| + δF: what is left over, the roundings of the sums, and those within the laws. */
+  private gatherDoubt(): void {
+    const { doubt, roundings, parts } = this;
+    const { state } = this.system;
+    const { residual, scale } = state;
+    for (let i = 0; i < doubt.length; i++) {
+      doubt[i] = Math.abs(residual[i]!) + roundings[i]! * UNIT * scale[i]!;
+    }
+    for (let k = 0; k < parts.length; k++) parts[k]!.addDoubt(state, doubt);
+  }
+
+  /** A first guess for branch currents: what the slopes at the rows they enter make of one volt. */
+  private startWeights(): void {
+    const { weights, isVoltage } = this;
+    const { pattern, state } = this.system;
+    const { rows, columns } = pattern;
+    const sums = new Float64Array(weights.length);
+    for (let k = 1; k < rows.length; k++) {
+      if (isVoltage[columns[k]!]) sums[rows[k]!]! += Math.abs(state.jacobian[k]!);
+    }
+    for (let k = 1; k < rows.length; k++) {
+      const j = columns[k]!;
+      if (!isVoltage[j]) weights[j] = Math.max(weights[j]!, SPARE * sums[rows[k]!]!);
+    }
+  }
+
+  /** Tries balls and weights until one proves the point; `most` is the part of a unit matrix that the inverse may leave. */
+  private search(most: number): number {
+    let ball = BALL;
+    for (let tries = 0; tries < MOST_TRIES; tries++) {
+      const found = this.attempt(ball, most);
+      if (found.kind === "proved") return this.widened(found.radius);
+      if (found.kind === "ball too small") ball = 4 * found.radius;
+      else if (found.kind === "ball too large") ball /= 1000;
+      else if (found.kind !== "weights too small") return Number.NaN;
+      if (!(ball >= SMALLEST_BALL && ball <= LARGEST_BALL)) return Number.NaN;
+    }
+    return Number.NaN;
+  }
+
+  /** Seen from the rounded voltages, which are what is kept. */
+  private widened(radius: number): number {
+    const { low } = this.system.state;
+    let most = 0;
+    for (let j = 0; j < this.isVoltage.length; j++) {
+      if (this.isVoltage[j] && Math.abs(low[j]!) > most) most = Math.abs(low[j]!);
+    }
+    return (radius + most) * WIDENED;
+  }
+
+  private attempt(ball: number, most: number): Found {
+    const { inverse, weights, spread, isVoltage, parts } = this;
+    const { state } = this.system;
+    spread.fill(0);
+    for (let k = 0; k < parts.length; k++) parts[k]!.addSpread(state, ball, weights, spread);
+    inverse.bound(state.jacobian, weights, this.roundings, this.doubt, spread);
+    const { left, error, change } = inverse;
+    let radius = Number.MIN_VALUE;
+    for (let i = 0; i < isVoltage.length; i++) {
+      if (!isVoltage[i]) continue;
+      if (!(left[i]! < most)) return FAR;
+      const share = 1 - (left[i]! + change[i]!) * WIDENED;
+      if (!(share > 0)) return change[i]! > left[i]! ? LARGE : FAR;
+      const needed = (error[i]! / share) * WIDENED;
+      if (needed > radius) radius = needed;
+    }
+    if (!(radius < Number.POSITIVE_INFINITY)) return FAR;
+    if (radius > ball) return { kind: "ball too small", radius };
+    let fits = true;
+    for (let i = 0; i < isVoltage.length; i++) {
+      if (isVoltage[i]) continue;
+      const needed = (error[i]! / radius + left[i]! + change[i]!) * WIDENED;
+      if (needed < weights[i]!) continue;
+      if (!(needed < Number.POSITIVE_INFINITY)) return FAR;
+      weights[i] = SPARE * needed;
+      fits = false;
+    }
+    return fits ? { kind: "proved", radius } : { kind: "weights too small" };
+  }
+}
+
+type Found =
+  | { readonly kind: "proved" | "ball too small"; readonly radius: number }
+  | { readonly kind: "weights too small" | "ball too large" | "inverse too far" };
+
+const FAR: Found = { kind: "inverse too far" };
+const LARGE: Found = { kind: "ball too large" };

@@ -1,0 +1,109 @@
+import { UNIT } from "@/lib/devices/rounding";
+import type { SparseShape } from "./elimination";
+import type { Linear } from "./linear";
+
+/**
+ * A dense R ≈ J⁻¹, column by column, with the bounds that the certificate needs of it. It may be the inverse of a neighbour's J: what it
+ * leaves of the unit matrix is then larger, and counted.
+ */
+export class Inverse {
+  isKnown = false;
+  /** Σ_j |I − R·J|_ij·w_j, the rounding of the product included. One a row, as the two below. */
+  readonly left: Float64Array;
+  /** (|R|·doubt)_i. */
+  readonly error: Float64Array;
+  /** (|R|·spread)_i. */
+  readonly change: Float64Array;
+  private readonly size: number;
+  private readonly unit: Float64Array;
+  private readonly column: Float64Array;
+  private readonly rowsOf: Int32Array;
+  private readonly places: Int32Array;
+  private readonly starts: Int32Array;
+  /** |J|·w, a row each. */
+  private readonly sums: Float64Array;
+  private values = new Float64Array(0);
+
+  constructor(
+    shape: SparseShape,
+    private readonly linear: Linear,
+  ) {
+    const { size, rows, columns } = shape;
+    this.size = size;
+    const vector = () => new Float64Array(size);
+    this.left = vector();
+    this.error = vector();
+    this.change = vector();
+    this.column = vector();
+    this.sums = vector();
+    this.unit = new Float64Array(size + 1);
+    const entries = Array.from({ length: rows.length - 1 }, (_, k) => k + 1);
+    entries.sort((a, b) => columns[a]! - columns[b]! || rows[a]! - rows[b]!);
+    this.places = Int32Array.from(entries);
+    this.rowsOf = Int32Array.from(entries, (place) => rows[place]!);
+    this.starts = new Int32Array(size + 1);
+    for (const place of entries) this.starts[columns[place]! + 1]! += 1;
+    for (let j = 0; j < size; j++) this.starts[j + 1]! += this.starts[j]!;
+  }
+
+  forget(): void {
+    this.isKnown = false;
+  }
+
+  /** Inverts with the factors of the linear solver's last solution. */
+  renew(): void {
+    const { size, unit, linear, column } = this;
+    if (this.values.length === 0) this.values = new Float64Array(size * size);
+    const { values } = this;
+    for (let k = 0; k < size; k++) {
+      unit[k] = -1;
+      linear.solveAgain(unit, column);
+      unit[k] = 0;
+      values.set(column, k * size);
+    }
+    this.isKnown = true;
+  }
+
+  /** Fills `left`, `error` and `change` for the values of J at hand; each row of J may be off by `roundings` of its magnitude. */
+  bound(
+    jacobian: Float64Array,
+    weights: Float64Array,
+    roundings: Float64Array,
+    doubt: Float64Array,
+    spread: Float64Array,
+  ): void {
+    this.multiply(jacobian, weights);
+    const { size, values, error, change, sums } = this;
+    error.fill(0);
+    change.fill(0);
+    for (let k = 0, at = 0; k < size; k++) {
+      const byDoubt = doubt[k]!;
+      const bySpread = spread[k]! + (roundings[k]! + size) * UNIT * sums[k]!;
+      for (let i = 0; i < size; i++, at++) {
+        const entry = Math.abs(values[at]!);
+        error[i]! += entry * byDoubt;
+        change[i]! += entry * bySpread;
+      }
+    }
+  }
+
+  /** R·J a column at a time: the entries of J's column are few, those of R's columns lie side by side. */
+  private multiply(jacobian: Float64Array, weights: Float64Array): void {
+    const { size, values, left, column, sums, starts, places, rowsOf } = this;
+    left.fill(0);
+    sums.fill(0);
+    for (let j = 0; j < size; j++) {
+      column.fill(0);
+      const weight = weights[j]!;
+      for (let s = starts[j]!; s < starts[j + 1]!; s++) {
+        const entry = jacobian[places[s]!]!;
+        if (entry === 0) continue;
+        const row = rowsOf[s]!;
+        sums[row]! += Math.abs(entry) * weight;
+        for (let i = 0, at = row * size; i < size; i++, at++) column[i]! += values[at]! * entry;
+      }
+      column[j]! -= 1;
+      for (let i = 0; i < size; i++) left[i]! += Math.abs(column[i]!) * weight;
+    }
+  }
+}
