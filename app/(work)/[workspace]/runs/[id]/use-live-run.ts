@@ -38,14 +38,16 @@ export function useLiveRun(first: RunState, found: Found | null): LiveRun {
   const start = useRef({
     id: first.id,
     status: first.status,
+    pointsDone: first.pointsDone,
     lastEvent: first.lastEvent,
     etag: found?.etag ?? null,
   });
 
   useEffect(() => {
-    const { id, status, lastEvent, etag } = start.current;
+    const { id, status, pointsDone, lastEvent, etag } = start.current;
     const feed = new DocumentFeed(id, etag, { onDocument: setDocument, onProblem: setProblem });
-    if (etag === null || isLive(status)) feed.want();
+    // A document without a point is worth asking for only when the page came with one to compare it to.
+    if (etag === null ? pointsDone > 0 || !isLive(status) : isLive(status)) feed.want();
     if (!isLive(status)) return () => feed.close();
 
     let timer: ReturnType<typeof setInterval> | undefined;
@@ -73,8 +75,8 @@ export function useLiveRun(first: RunState, found: Found | null): LiveRun {
       timer = undefined;
       const progress: Progress = JSON.parse(event.data);
       setRun((before) => ({ ...before, ...progress }));
-      if (isLive(progress.status)) feed.want();
-      else finish();
+      if (!isLive(progress.status)) finish();
+      else if (progress.pointsDone > 0) feed.want();
     };
     const events = new EventSource(`/api/v1/runs/${id}/events?after=${lastEvent}`);
     for (const kind of ["message", "progress", "status"]) events.addEventListener(kind, take);
