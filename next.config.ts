@@ -12,6 +12,11 @@ const HEADERS = [
   { key: "Cross-Origin-Opener-Policy", value: "same-origin" },
 ];
 
+/** The API answers data, never a page: whatever a browser makes of it can load and run nothing. */
+const API_HEADERS = [
+  { key: "Content-Security-Policy", value: "default-src 'none'; base-uri 'none'; frame-ancestors 'none'" },
+];
+
 const config: NextConfig = {
   distDir,
   poweredByHeader: false,
@@ -30,7 +35,10 @@ const config: NextConfig = {
     ignoreBuildErrors: true,
     ...(distDir === ".next" ? {} : { tsconfigPath: ".test/tsconfig.json" }),
   },
-  headers: async () => [{ source: "/:path*", headers: HEADERS }],
+  headers: async () => [
+    { source: "/:path*", headers: HEADERS },
+    { source: "/api/:path*", headers: API_HEADERS },
+  ],
 };
 
 export default config;

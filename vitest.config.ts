@@ -16,6 +16,7 @@ export default defineConfig({
           name: "unit",
           include: ["tests/**/*.test.ts", "tests/**/*.test.tsx"],
           exclude: [...WITH_DATABASE, ...WITH_BROWSER],
+          maxWorkers: 2,
         },
       },
       {
@@ -24,8 +25,10 @@ export default defineConfig({
           name: "integration",
           include: WITH_DATABASE,
           globalSetup: "tests/integration/cluster-setup.ts",
-          testTimeout: 60_000,
-          hookTimeout: 60_000,
+          // Each file has a database or a workspace of its own.
+          maxWorkers: 2,
+          testTimeout: 120_000,
+          hookTimeout: 120_000,
         },
       },
       {

@@ -4,11 +4,11 @@ import { endCommands, run } from "./command";
 import { Complaint, explain } from "./complaint";
 import { DEMO_PASSWORD } from "./database";
 import { CHROMIUM, ensureTools } from "./debian";
-import { type Hold, hold } from "./holder";
+import type { Hold } from "./holder";
 import { onInterrupt } from "./interrupt";
 import { TEST_FOLDER } from "./phases";
 import { buildForTests, serve } from "./served";
-import { closeServices, stopServices } from "./service";
+import { closeServices, holdForPrograms, stopServices } from "./service";
 import { type Throwaway, throwaway } from "./throwaway";
 
 const FOLDER = "tests/bench";
@@ -41,7 +41,7 @@ async function service(): Promise<string> {
   if (given) return given;
   await ensureTools([CHROMIUM]);
   mkdirSync(TEST_FOLDER, { recursive: true });
-  held = await hold(`${TEST_FOLDER}/running.json`, "npm test or npm run bench");
+  held = await holdForPrograms(`${TEST_FOLDER}/running.json`, "npm test or npm run bench");
   await buildForTests();
   cluster = await throwaway();
   return serve(await cluster.database("sweepwright_bench"), DEMO_PASSWORD);

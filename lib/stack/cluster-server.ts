@@ -3,6 +3,7 @@ import { join } from "node:path";
 import { Client } from "pg";
 import { type Cluster, urlOf } from "./cluster";
 import { Complaint, fullDisk } from "./complaint";
+import { DATABASE } from "./holder";
 import { endProcess, folderOf, isAlive } from "./identity";
 import { launch, type Service } from "./service";
 
@@ -10,9 +11,6 @@ import { launch, type Service } from "./service";
 const READY_WITHIN = 120_000;
 /** Tries while the processes of a killed server still hold its memory. */
 const TRIES = 20;
-
-/** Name of the server among the programs that run. */
-export const DATABASE = "database";
 
 const CARELESS = ["fsync=off", "synchronous_commit=off", "full_page_writes=off"];
 

@@ -1,10 +1,11 @@
 import { join } from "node:path";
 import { type Cluster, ensureDatabase, initialise, ROLE, urlOf } from "./cluster";
-import { DATABASE, startServer } from "./cluster-server";
+import { startServer } from "./cluster-server";
 import { run } from "./command";
 import { Complaint, fullDisk } from "./complaint";
 import { ensureTools, postgresql } from "./debian";
 import { type Folders, makeFolders } from "./folders";
+import { DATABASE } from "./holder";
 import { type Keeper, keep, type Told } from "./keeper";
 import { databaseAccount, postgresPrograms } from "./machine";
 import { freePort, isFree } from "./ports";

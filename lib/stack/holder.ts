@@ -1,7 +1,9 @@
 import { linkSync, readFileSync, renameSync, rmSync, writeFileSync } from "node:fs";
-import { DATABASE } from "./cluster-server";
 import { Complaint } from "./complaint";
 import { endProcess, identityOf } from "./identity";
+
+/** Name of PostgreSQL among the programs that run. */
+export const DATABASE = "database";
 
 interface Known {
   readonly name: string;

@@ -2,6 +2,7 @@ import { spawn } from "node:child_process";
 import { closeSync, existsSync, openSync, readFileSync, renameSync, statSync } from "node:fs";
 import { environment, type Surroundings } from "./command";
 import { Complaint } from "./complaint";
+import { type Hold, hold } from "./holder";
 import type { Account } from "./machine";
 
 /** A log larger than this is put aside at the next start, bytes. */
@@ -44,9 +45,11 @@ const live = new Set<Service>();
 let closing = false;
 let told: (service: Pick<Service, "name" | "pid">, running: boolean) => void = () => undefined;
 
-/** Has `listener` told of every program that is launched and of its end. */
-export function watchServices(listener: typeof told): void {
-  told = listener;
+/** Takes a folder as `hold` does and writes down there every program that is launched from now on, until it ends. */
+export async function holdForPrograms(file: string, what?: string): Promise<Hold> {
+  const held = await hold(file, what);
+  told = ({ name, pid }, running) => held.setChild(name, running ? pid : null);
+  return held;
 }
 
 /** From now on nothing is launched any more: everything is about to be stopped. */

@@ -4,13 +4,13 @@ import { endCommands } from "./command";
 import { explain } from "./complaint";
 import { openDatabase, prepare } from "./database";
 import { dataFolder, foldersIn } from "./folders";
-import { type Hold, hold } from "./holder";
+import type { Hold } from "./holder";
 import { onInterrupt } from "./interrupt";
 import { type Keeper, keep, type Told } from "./keeper";
 import { isRoot } from "./machine";
 import { choosePort, freePort } from "./ports";
 import { type Running, startWeb, startWorker } from "./programs";
-import { closeServices, stopServices, watchServices } from "./service";
+import { closeServices, holdForPrograms, stopServices } from "./service";
 import { requireSpace } from "./space";
 import { welcome } from "./welcome";
 
@@ -54,9 +54,7 @@ async function start(): Promise<void> {
   const began = Date.now();
   const folders = foldersIn(dataFolder(process.cwd(), isRoot()));
   mkdirSync(folders.data, { recursive: true });
-  const mine = await hold(folders.holder);
-  held = mine;
-  watchServices(({ name, pid }, runs) => mine.setChild(name, runs ? pid : null));
+  held = await holdForPrograms(folders.holder);
   const host = process.env.HOST || "127.0.0.1";
   const port = await choosePort(process.env.PORT, host);
   const address = process.env.NEXTAUTH_URL || `http://localhost:${port}`;
@@ -84,7 +82,7 @@ async function start(): Promise<void> {
   console.log("Starting the worker and the web service.");
   keepers.push(await keep("worker", () => startWorker(running), told));
   keepers.push(await keep("web service", () => startWeb(running), told));
-  mine.setAddress(address);
+  held.setAddress(address);
   console.log(welcome({ address, password, folders, seconds: (Date.now() - began) / 1000 }));
 }
 

@@ -3,12 +3,12 @@ import { endCommands } from "./command";
 import { explain } from "./complaint";
 import { bringUpToDate, DEMO_PASSWORD } from "./database";
 import { CHROMIUM, ensureTools, postgresql, REDIS } from "./debian";
-import { type Hold, hold } from "./holder";
+import type { Hold } from "./holder";
 import { onInterrupt } from "./interrupt";
 import { chosenParts, type Part } from "./options";
 import { checkFormat, checkTypes, runTests, TEST_FOLDER } from "./phases";
 import { buildForTests, serve } from "./served";
-import { closeServices, stopServices } from "./service";
+import { closeServices, holdForPrograms, stopServices } from "./service";
 import { closingLine, NOTHING, single, sum, type Tally } from "./tally";
 import { type Throwaway, throwaway } from "./throwaway";
 
@@ -90,7 +90,7 @@ onInterrupt(async () => {
 try {
   const parts = chosenParts(process.argv.slice(2));
   mkdirSync(TEST_FOLDER, { recursive: true });
-  held = await hold(`${TEST_FOLDER}/running.json`, "npm test");
+  held = await holdForPrograms(`${TEST_FOLDER}/running.json`, "npm test");
   const began = Date.now();
   await runParts(parts);
   await tidyUp();

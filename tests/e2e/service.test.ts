@@ -49,6 +49,14 @@ describe("every page", () => {
   });
 });
 
+describe("the API", () => {
+  it("answers nothing that a browser would run", async () => {
+    const rules = policyOf(await fetch(`${baseUrl()}/api/health`));
+    expect(rules.get("default-src")).toEqual(["'none'"]);
+    expect(rules.get("script-src")).toBeUndefined();
+  });
+});
+
 describe.each(["/", "/sign-in"])("the page %s", (path) => {
   it.each(["light", "dark"] as const)(
     "opens in the browser without a fault and can be read by all, %s",
