@@ -70,6 +70,13 @@ export async function writeText(page: Page, text: string): Promise<void> {
   await page.keyboard.press("Control+v");
 }
 
+/** Saves what is written, by the button; waits until the dialog that asks is gone. */
+export async function save(page: Page): Promise<void> {
+  await page.getByRole("button", { name: "Save revision" }).click();
+  await page.getByRole("button", { name: "Save", exact: true }).click();
+  await page.getByRole("dialog", { name: /^Save revision/ }).waitFor({ state: "hidden" });
+}
+
 /** Waits until the line below the text says so. */
 export async function expectChecked(page: Page, says: string | RegExp): Promise<void> {
   await page.getByRole("status").filter({ hasText: says }).first().waitFor();

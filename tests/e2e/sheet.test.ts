@@ -18,6 +18,7 @@ import {
   openSheet,
   PATIENT,
   problems,
+  save,
   typeAtEnd,
   writeText,
 } from "./sheet-steps";
@@ -108,11 +109,11 @@ test("saving makes a revision with a message; a text that only looks different m
   await page.keyboard.press("Control+s");
   await page.getByLabel("What changed (optional)").fill("A value for later");
   await page.keyboard.press("Enter");
+  await page.getByRole("dialog").waitFor({ state: "hidden" });
   await page.getByText(/^revision 2$/).waitFor();
   await typeAtEnd(page, "\n\n\n");
   await page.getByText("draft on revision 2").waitFor();
-  await page.getByRole("button", { name: "Save revision" }).click();
-  await page.getByRole("button", { name: "Save", exact: true }).click();
+  await save(page);
   await page.getByText("The text means the same as revision 2").waitFor();
   const kept = await (await page.request.get(`/api/v1/netlists/${id}`)).json();
   expect(kept.revision).toBe(2);
@@ -127,8 +128,7 @@ test("two people on one netlist: the later save is refused, and neither text is 
   await typeAtEnd(mine, "let mine = 1 V\n");
   await typeAtEnd(theirs, "let theirs = 2 V\n");
   for (const page of [theirs, mine]) {
-    await page.getByRole("button", { name: "Save revision" }).click();
-    await page.getByRole("button", { name: "Save", exact: true }).click();
+    await save(page);
     if (page === theirs) await page.getByText(/^revision 2$/).waitFor();
   }
   await mine.getByRole("dialog", { name: "Revision 2 was saved meanwhile" }).waitFor();
@@ -148,8 +148,7 @@ test("the later of two may keep their text as a netlist of its own", async () =>
   await writeText(other, converterText("A copy, changed meanwhile"));
   await typeAtEnd(page, "let mine = 1 V\n");
   for (const one of [other, page]) {
-    await one.getByRole("button", { name: "Save revision" }).click();
-    await one.getByRole("button", { name: "Save", exact: true }).click();
+    await save(one);
     if (one === other) await one.getByText(/^revision 2$/).waitFor();
   }
   await page.getByRole("button", { name: "Keep mine as a new netlist" }).click();

@@ -37,6 +37,7 @@ export const EDITOR_OPTIONS: monaco.editor.IStandaloneEditorConstructionOptions 
   // A quantity such as 25 °C stays whole.
   wordWrapBreakAfterCharacters: " \t,",
   wordWrapBreakBeforeCharacters: "{(",
+  find: { addExtraSpaceOnTop: false },
   fixedOverflowWidgets: true,
   tabSize: 2,
   insertSpaces: true,

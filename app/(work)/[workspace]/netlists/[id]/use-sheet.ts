@@ -1,7 +1,7 @@
 "use client";
 
 import { useRouter } from "next/navigation";
-import { useRef, useState } from "react";
+import { useRef, useState, useTransition } from "react";
 import type { EditorHandle } from "@/app/_components/editor/editor-handle";
 import { useExamination } from "@/app/_components/editor/use-examination";
 import type { Diagnostic } from "@/lib/language/diagnostic";
@@ -34,7 +34,9 @@ export function useSheet({ workspace, netlistId, latest, mayQueue }: Asked) {
   const { text, edited, settle } = useSettledText(editor, latest.text);
   const { examined, broken } = useExamination(text);
   const drafts = useDrafts(netlistId, text, saved, mayQueue);
-  const [busy, setBusy] = useState<"saving" | "queueing" | null>(null);
+  const [working, setWorking] = useState<"saving" | "queueing" | null>(null);
+  const [leaving, leave] = useTransition();
+  const busy = leaving ? "queueing" : working;
   const [remark, setRemark] = useState<Remark | null>(null);
   const [saving, openSave] = useState(false);
   const [theirs, setTheirs] = useState<Saved | null>(null);
@@ -52,7 +54,7 @@ export function useSheet({ workspace, netlistId, latest, mayQueue }: Asked) {
   };
 
   const failed = async (title: string, answer: { status: number; detail: string }) => {
-    setBusy(null);
+    setWorking(null);
     const newest = answer.status === 409 ? await fetchLatest() : null;
     if (newest === null) refuse(title, answer.detail);
     else setTheirs(newest);
@@ -64,18 +66,19 @@ export function useSheet({ workspace, netlistId, latest, mayQueue }: Asked) {
     const now = settle();
     const first = errors[0];
     if (first !== undefined && examined?.text === now) return goTo(first);
-    setBusy("queueing");
+    setWorking("queueing");
     const body = { netlistId, base: saved.revision, ...(now === saved.text ? {} : { text: now }) };
     const answer = await ask<{ id: string }>("/api/v1/runs", body);
     if (!answer.ok) return failed("The run was not queued", answer);
     drafts.forget();
-    router.push(`/${workspace}/runs/${answer.body.id}`);
+    leave(() => router.push(`/${workspace}/runs/${answer.body.id}`));
+    setWorking(null);
   };
 
   const save = async (message: string): Promise<boolean> => {
     if (!mayQueue || busy !== null) return false;
     setRemark(null);
-    setBusy("saving");
+    setWorking("saving");
     const now = settle();
     const body = { base: saved.revision, text: now, ...(message === "" ? {} : { message }) };
     const answer = await ask<{ revision: number; hash: string; changed: boolean }>(
@@ -86,7 +89,7 @@ export function useSheet({ workspace, netlistId, latest, mayQueue }: Asked) {
       await failed("The revision was not saved", answer);
       return answer.status === 409;
     }
-    setBusy(null);
+    setWorking(null);
     const { revision, hash, changed: made } = answer.body;
     setSaved({ ...saved, text: now, revision, hash });
     if (!made) {
