@@ -1,4 +1,5 @@
 import { classNames } from "@/app/_components/ui/class-names";
+import { formatQuantity } from "@/lib/units/quantity";
 import type { Cursor } from "./cursor-layer";
 import type { CurveSet } from "./curve-set";
 import { pointAt } from "./curve-set";
@@ -24,6 +25,7 @@ export function CursorMarks({ set, storeys, horizontal, x, width, cursor }: Prop
   );
   const followed = storeys.flatMap(({ lines }) => lines.filter(({ family }) => family === cursor.family));
   const label = set.families[cursor.family]?.label ?? "";
+  const bound = set.source.points.bound?.[pointAt(set, cursor.family, cursor.place)] ?? null;
   const right = left < width / 2;
   return (
     <div aria-hidden="true" className="pointer-events-none">
@@ -66,6 +68,11 @@ export function CursorMarks({ set, storeys, horizontal, x, width, cursor }: Prop
             </span>
           </p>
         ))}
+        {bound !== null && (
+          <p className="figures whitespace-nowrap text-quiet text-xs">
+            proved within {formatQuantity(bound, "V", 2)}
+          </p>
+        )}
       </div>
     </div>
   );

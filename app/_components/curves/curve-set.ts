@@ -6,7 +6,11 @@ import { formatKnob, isAmbient } from "./figures-in-words";
 export interface CurveSource {
   readonly axes: readonly AxisDocument[];
   readonly traces: readonly TraceDocument[];
-  readonly points: { readonly outcome: readonly (OutcomeKind | null)[] };
+  readonly points: {
+    readonly outcome: readonly (OutcomeKind | null)[];
+    /** A true solution lies within so many volts; null without a proof. Absent while nothing is solved. */
+    readonly bound?: readonly (number | null)[];
+  };
 }
 
 /** One setting of the outer sweeps: a curve of each trace. */

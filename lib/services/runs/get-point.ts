@@ -28,6 +28,8 @@ export interface PointDetail {
   readonly iterations: number | null;
   /** Largest |F_i|, A. */
   readonly residual: number | null;
+  /** A true solution lies within so many volts of this one; null without a proof. */
+  readonly bound: number | null;
   readonly rung: Rung | null;
   readonly unknowns: readonly Figure[];
   readonly traces: readonly Figure[];
@@ -68,6 +70,7 @@ export async function getPoint(actor: Actor, id: string, point: number): Promise
     outcome,
     iterations: figure("iterations"),
     residual: figure("residual"),
+    bound: figure("bound"),
     rung: RUNGS[figure("rung") ?? -1] ?? null,
     unknowns: plan.unknowns.map((one, i) => ({ ...one, value: figure(unknownColumn(i)) })),
     traces: plan.traces.map((one, i) => ({ ...one, value: figure(traceColumn(i)) })),

@@ -1,11 +1,12 @@
 import type { ReactNode } from "react";
 import { formatKnob, formatValue } from "@/app/_components/curves/figures-in-words";
 import { StateMark } from "@/app/_components/ui/state-mark";
+import { formatQuantity } from "@/lib/units/quantity";
 import type { PointAccount } from "./run-shapes";
 
 /** How a point was solved or why it was not, its setting, and everything that was kept of it. */
 export function PointAccountView({ account }: { readonly account: PointAccount }) {
-  const { at, outcome, iterations, rung, residual, failure, traces, unknowns } = account;
+  const { at, outcome, iterations, rung, residual, bound, failure, traces, unknowns } = account;
   const solved = outcome === "converged";
   return (
     <div className="mt-2 grid gap-4" data-point={account.point} data-outcome={outcome ?? "not solved"}>
@@ -35,6 +36,9 @@ export function PointAccountView({ account }: { readonly account: PointAccount }
               converged
             </span>
           </Row>
+        )}
+        {solved && (
+          <Row name="proved within">{bound === null ? "not proved" : formatQuantity(bound, "V", 2)}</Row>
         )}
         {iterations !== null && (
           <Row name="iterations">{rung === null ? iterations : `${iterations}, ${rung}`}</Row>

@@ -44,6 +44,8 @@ export interface PointAccount {
   readonly iterations: number | null;
   /** A. */
   readonly residual: number | null;
+  /** V; null without a proof. */
+  readonly bound: number | null;
   readonly rung: string | null;
   readonly unknowns: readonly Figure[];
   readonly traces: readonly Figure[];

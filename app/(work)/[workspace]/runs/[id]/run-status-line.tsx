@@ -3,8 +3,8 @@ import { StateBadge } from "@/app/_components/ui/state-badge";
 import { ProgressLine } from "@/app/_components/ui/states";
 import { isLive, type RunState } from "./run-shapes";
 
-/** How far the run is, in words: announced politely when it changes state, not at every point. */
-export function RunStatusLine({ run }: { readonly run: RunState }) {
+/** How far the run is, in words, and whether its curves are `behind` that: announced politely when it changes state, not at every point. */
+export function RunStatusLine({ run, behind }: { readonly run: RunState; readonly behind: boolean }) {
   const { status, points, pointsDone } = run;
   return (
     <section aria-label="State of the run" className="grid border-b">
@@ -13,7 +13,10 @@ export function RunStatusLine({ run }: { readonly run: RunState }) {
           <StateBadge state={status} failed={run.pointsFailed} />
         </span>
         <p className="min-w-0 text-quiet">
-          <span role="status">{sentence(run)}</span>
+          <span role="status">
+            {sentence(run)}
+            {behind && " Fetching the rest of the curves…"}
+          </span>
           {status === "running" && (
             <span className="figures" data-points-done={pointsDone}>
               {" "}

@@ -34,7 +34,7 @@ interface Props {
 export function RunView(props: Props) {
   const { workspace, first, found, point, span, mayStart, mayCancel } = props;
   const router = useRouter();
-  const { run, document, problem, finished, setRun } = useLiveRun(first, found);
+  const { run, document, problem, finished, behind, setRun } = useLiveRun(first, found);
   const [state, setState] = useState(() => readPageState(new URLSearchParams(props.search)));
   const show = useCallback(
     (change: Partial<PageState>) => setState((before) => ({ ...before, ...change })),
@@ -68,7 +68,7 @@ export function RunView(props: Props) {
   return (
     <>
       <RunHeader workspace={workspace} run={run} mayStart={mayStart} mayCancel={mayCancel} onRun={setRun} />
-      <RunStatusLine run={run} />
+      <RunStatusLine run={run} behind={behind} />
       {problem !== null && (
         <div className="px-4 pt-4 md:px-6">
           <Notice tone="caution" title="The curves could not be brought up to date" announce>

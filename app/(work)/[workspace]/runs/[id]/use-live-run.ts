@@ -22,6 +22,8 @@ interface LiveRun {
   readonly problem: string | null;
   /** Whether it ended while the page was open and everything of it has arrived. */
   readonly finished: boolean;
+  /** Whether it has ended and the last of its results are still on their way. */
+  readonly behind: boolean;
   readonly setRun: (run: RunState) => void;
 }
 
@@ -89,5 +91,6 @@ export function useLiveRun(first: RunState, found: Found | null): LiveRun {
     };
   }, []);
 
-  return { run, document, problem, finished, setRun };
+  const behind = !isLive(run.status) && !finished && (isLive(first.status) || document === null);
+  return { run, document, problem, finished, behind, setRun };
 }
