@@ -192,7 +192,9 @@ describe("a run with failed points", () => {
     await page.getByLabel(/Number of a point/).press("Enter");
     const solved = page.locator('[data-point="40"][data-outcome="converged"]');
     await solved.waitFor();
-    expect(await solved.textContent()).toMatch(/proved within[\d. ]+\u202f[a-zµ]?V.*largest residual.*Net voltages.*sum\.v.*Branch currents/);
+    expect(await solved.textContent()).toMatch(
+      /proved within[\d. ]+\u202f[a-zµ]?V.*largest residual.*Net voltages.*sum\.v.*Branch currents/,
+    );
   });
 });
 
