@@ -13,17 +13,24 @@ const MOST_TRIES = 6;
 const WORN = 0.5;
 /** Unknowns of a point that is proved at most: the inverse is dense. */
 const MOST_UNKNOWNS = 1500;
+/** V. A wider radius must come from rounding: an answer that one more step would mend is refused. */
+const SUSPECT = 1e-10;
+/** How many times the part that rounding makes. */
+const EXPLAINED = 8;
 /** Widens sums of up to a million positive terms by their own rounding. */
 const WIDENED = 1 + 2 ** -32;
 /** A branch current may move this many times as far as its row asks for, so that a neighbour's weights serve. */
 const SPARE = 4;
+/** The smallest weight, as a part of what the unit of the unknown suggests. */
+const LEAST_WEIGHT = 1e-6;
 
 /**
  * Proves that a true solution lies within r volts of the one at hand (radii polynomial, from the Newton–Kantorovich theorem; Rump,
  * Acta Numerica 19, 2010, from memory). With R ≈ J⁻¹ the map x − R·F(x) sends the ball |x_j − x̄_j| ≤ w_j·r into itself and contracts, if
  *   Y_i + (Z_i + P_i)·r < w_i·r for every i,   Y = |R|·(|F| + δF),   Z = |I − R·J|·w,   P = |R|·(sup|J(x) − J|·w).
- * δF and P come from the parts, the rounding of R·J and of every sum is added. w is 1 for a voltage; that of a branch current
- * is chosen (A per V) so that its own row never decides.
+ * δF and P come from the parts, the rounding of R·J and of every sum is added. The weights w follow Y of a fresh inverse, so that an
+ * output that is an exponential of the nets inside does not decide for all; 1 is the largest of a voltage, those of branch
+ * currents are in A per V.
  */
 export class Certificate {
   private readonly parts: readonly Proof[];
@@ -59,7 +66,6 @@ export class Certificate {
   /** Forgets the neighbour, at the beginning of a strand. */
   reset(): void {
     this.inverse.forget();
-    for (let j = 0; j < this.isVoltage.length; j++) this.weights[j] = this.isVoltage[j] ? 1 : 0;
   }
 
   /**
@@ -68,46 +74,57 @@ export class Certificate {
    */
   prove(): number {
     if (!this.canProve) return Number.NaN;
-    this.gatherDoubt();
+    this.gatherDoubt(1);
     const isReused = this.inverse.isKnown;
-    if (!isReused) this.renew();
-    let radius = this.search(isReused ? WORN : 1);
-    if (Number.isNaN(radius) && isReused) {
-      this.renew();
+    let radius = isReused ? this.search(WORN) : Number.NaN;
+    if (Number.isNaN(radius)) {
+      this.inverse.renew(this.system.state.jacobian);
+      this.weigh();
       radius = this.search(1);
     }
     if (Number.isNaN(radius)) this.inverse.forget();
-    return radius;
+    return radius > SUSPECT && !this.isExplained(radius) ? Number.NaN : radius;
   }
 
-  private renew(): void {
-    this.inverse.renew();
-    this.startWeights();
+  /** Whether rounding alone makes about as wide a radius. */
+  private isExplained(radius: number): boolean {
+    const { inverse, isVoltage } = this;
+    this.gatherDoubt(0);
+    inverse.carry(this.doubt);
+    return inverse.error.some((error, i) => isVoltage[i] && EXPLAINED * error >= radius);
   }
 
-  /** |F| + δF: what is left over, the roundings of the sums, and those within the laws. */
-  private gatherDoubt(): void {
+  /** |F|·`residualShare` + δF: what is left over, the roundings of the sums, and those within the laws. */
+  private gatherDoubt(residualShare: 0 | 1): void {
     const { doubt, roundings, parts } = this;
     const { state } = this.system;
     const { residual, scale } = state;
     for (let i = 0; i < doubt.length; i++) {
-      doubt[i] = Math.abs(residual[i]!) + roundings[i]! * UNIT * scale[i]!;
+      doubt[i] = Math.abs(residual[i]!) * residualShare + roundings[i]! * UNIT * scale[i]!;
     }
     for (let k = 0; k < parts.length; k++) parts[k]!.addDoubt(state, doubt);
   }
 
-  /** A first guess for branch currents: what the slopes at the rows they enter make of one volt. */
-  private startWeights(): void {
-    const { weights, isVoltage } = this;
+  /** Weights in proportion to Y; at least a part of 1 V, or of the current that 1 V makes in the rows that a current enters. */
+  private weigh(): void {
+    const { weights, isVoltage, inverse } = this;
     const { pattern, state } = this.system;
+    inverse.carry(this.doubt);
+    const { error } = inverse;
+    const largest = error.reduce((most, one, i) => (isVoltage[i] && one > most ? one : most), 0);
+    const scale = largest > 0 && largest < Number.POSITIVE_INFINITY ? 1 / largest : 1;
     const { rows, columns } = pattern;
     const sums = new Float64Array(weights.length);
     for (let k = 1; k < rows.length; k++) {
       if (isVoltage[columns[k]!]) sums[rows[k]!]! += Math.abs(state.jacobian[k]!);
     }
+    weights.fill(0);
+    inverse.reweigh();
     for (let k = 1; k < rows.length; k++) {
       const j = columns[k]!;
-      if (!isVoltage[j]) weights[j] = Math.max(weights[j]!, SPARE * sums[rows[k]!]!);
+      const natural = isVoltage[j] ? 1 : sums[rows[k]!]!;
+      const wanted = (isVoltage[j] ? 1 : SPARE) * error[j]! * scale;
+      weights[j] = Math.max(weights[j]!, LEAST_WEIGHT * natural, wanted);
     }
   }
 
@@ -145,8 +162,9 @@ export class Certificate {
     let radius = Number.MIN_VALUE;
     for (let i = 0; i < isVoltage.length; i++) {
       if (!isVoltage[i]) continue;
-      if (!(left[i]! < most)) return FAR;
-      const share = 1 - (left[i]! + change[i]!) * WIDENED;
+      const weight = weights[i]!;
+      if (!(left[i]! < most * weight)) return FAR;
+      const share = weight - (left[i]! + change[i]!) * WIDENED;
       if (!(share > 0)) return change[i]! > left[i]! ? LARGE : FAR;
       const needed = (error[i]! / share) * WIDENED;
       if (needed > radius) radius = needed;
@@ -162,6 +180,7 @@ export class Certificate {
       weights[i] = SPARE * needed;
       fits = false;
     }
+    if (!fits) inverse.reweigh();
     return fits ? { kind: "proved", radius } : { kind: "weights too small" };
   }
 }

@@ -20,8 +20,11 @@ export class Inverse {
   private readonly rowsOf: Int32Array;
   private readonly places: Int32Array;
   private readonly starts: Int32Array;
-  /** |J|·w, a row each. */
   private readonly sums: Float64Array;
+  /** J as it was inverted, and what R leaves of the unit matrix there. */
+  private readonly first: Float64Array;
+  private readonly atFirst: Float64Array;
+  private isWeighed = false;
   private values = new Float64Array(0);
 
   constructor(
@@ -36,6 +39,8 @@ export class Inverse {
     this.change = vector();
     this.column = vector();
     this.sums = vector();
+    this.atFirst = vector();
+    this.first = new Float64Array(rows.length);
     this.unit = new Float64Array(size + 1);
     const entries = Array.from({ length: rows.length - 1 }, (_, k) => k + 1);
     entries.sort((a, b) => columns[a]! - columns[b]! || rows[a]! - rows[b]!);
@@ -50,8 +55,8 @@ export class Inverse {
     this.isKnown = false;
   }
 
-  /** Inverts with the factors of the linear solver's last solution. */
-  renew(): void {
+  /** Inverts with the factors of the linear solver's last solution, which belong to `jacobian` or a close neighbour of it. */
+  renew(jacobian: Float64Array): void {
     const { size, unit, linear, column } = this;
     if (this.values.length === 0) this.values = new Float64Array(size * size);
     const { values } = this;
@@ -61,7 +66,23 @@ export class Inverse {
       unit[k] = 0;
       values.set(column, k * size);
     }
+    this.first.set(jacobian);
     this.isKnown = true;
+    this.isWeighed = false;
+  }
+
+  /** Fills `error` alone. */
+  carry(doubt: Float64Array): void {
+    const { size, values, error } = this;
+    error.fill(0);
+    for (let k = 0, at = 0; k < size; k++) {
+      for (let i = 0; i < size; i++, at++) error[i]! += Math.abs(values[at]!) * doubt[k]!;
+    }
+  }
+
+  /** To be called where weights have changed since `bound`. */
+  reweigh(): void {
+    this.isWeighed = false;
   }
 
   /** Fills `left`, `error` and `change` for the values of J at hand; each row of J may be off by `roundings` of its magnitude. */
@@ -72,13 +93,15 @@ export class Inverse {
     doubt: Float64Array,
     spread: Float64Array,
   ): void {
-    this.multiply(jacobian, weights);
-    const { size, values, error, change, sums } = this;
+    const { size, values, left, atFirst, error, change, sums } = this;
+    if (!this.isWeighed) this.weighFirst(weights);
+    left.set(atFirst);
+    this.addChanged(jacobian, weights);
     error.fill(0);
     change.fill(0);
     for (let k = 0, at = 0; k < size; k++) {
       const byDoubt = doubt[k]!;
-      const bySpread = spread[k]! + (roundings[k]! + size) * UNIT * sums[k]!;
+      const bySpread = spread[k]! + (roundings[k]! + 4 * size) * UNIT * sums[k]!;
       for (let i = 0; i < size; i++, at++) {
         const entry = Math.abs(values[at]!);
         error[i]! += entry * byDoubt;
@@ -87,22 +110,47 @@ export class Inverse {
     }
   }
 
-  /** R·J a column at a time: the entries of J's column are few, those of R's columns lie side by side. */
-  private multiply(jacobian: Float64Array, weights: Float64Array): void {
-    const { size, values, left, column, sums, starts, places, rowsOf } = this;
-    left.fill(0);
-    sums.fill(0);
+  /** `atFirst`: Σ_j |I − R·J₀|_ij·w_j for the J₀ that R was made from, a column of R·J₀ at a time. */
+  private weighFirst(weights: Float64Array): void {
+    const { size, values, first, atFirst, column, starts, places, rowsOf } = this;
+    atFirst.fill(0);
     for (let j = 0; j < size; j++) {
       column.fill(0);
-      const weight = weights[j]!;
       for (let s = starts[j]!; s < starts[j + 1]!; s++) {
-        const entry = jacobian[places[s]!]!;
+        const entry = first[places[s]!]!;
         if (entry === 0) continue;
-        const row = rowsOf[s]!;
-        sums[row]! += Math.abs(entry) * weight;
-        for (let i = 0, at = row * size; i < size; i++, at++) column[i]! += values[at]! * entry;
+        for (let i = 0, at = rowsOf[s]! * size; i < size; i++, at++) column[i]! += values[at]! * entry;
       }
       column[j]! -= 1;
+      const weight = weights[j]!;
+      for (let i = 0; i < size; i++) atFirst[i]! += Math.abs(column[i]!) * weight;
+    }
+    this.isWeighed = true;
+  }
+
+  /**
+   * I − R·J = (I − R·J₀) − R·(J − J₀): most entries of J are constant, and only those of the junctions have changed. Leaves in `sums`
+   * Σ_j max(|J|, |J₀|)·w_j of each row, from which the rounding of the products is bounded.
+   */
+  private addChanged(jacobian: Float64Array, weights: Float64Array): void {
+    const { size, values, first, left, column, sums, starts, places, rowsOf } = this;
+    sums.fill(0);
+    for (let j = 0; j < size; j++) {
+      const weight = weights[j]!;
+      let isChanged = false;
+      for (let s = starts[j]!; s < starts[j + 1]!; s++) {
+        const place = places[s]!;
+        const row = rowsOf[s]!;
+        const now = jacobian[place]!;
+        const before = first[place]!;
+        sums[row]! += (Math.abs(now) + Math.abs(before)) * weight;
+        if (now === before) continue;
+        const entry = now - before;
+        if (!isChanged) column.fill(0);
+        isChanged = true;
+        for (let i = 0, at = row * size; i < size; i++, at++) column[i]! += values[at]! * entry;
+      }
+      if (!isChanged) continue;
       for (let i = 0; i < size; i++) left[i]! += Math.abs(column[i]!) * weight;
     }
   }
