@@ -1,14 +1,16 @@
 import { type NextRequest, NextResponse } from "next/server";
+import { PATH_HEADER } from "@/lib/auth/requested-path";
 
 /**
- * Sets the content policy of a page with a nonce of its own, which Next.js puts on its scripts. Who may see what is decided by the
- * services, never here. /api is left out: it answers no pages, and a proxy before it would cut large bodies.
+ * Sets the content policy of a page with a nonce of its own, which Next.js puts on its scripts, and tells layouts which page was
+ * asked for, so that signing in leads there. Who may see what is decided by the services, never here. /api is left out: it answers no pages, and a proxy before it would cut large bodies.
  */
 export function proxy(request: NextRequest): NextResponse {
   const nonce = Buffer.from(crypto.getRandomValues(new Uint8Array(18))).toString("base64");
   const policy = policyWith(nonce);
   const headers = new Headers(request.headers);
   headers.set("Content-Security-Policy", policy);
+  headers.set(PATH_HEADER, request.nextUrl.pathname + request.nextUrl.search);
   const response = NextResponse.next({ request: { headers } });
   response.headers.set("Content-Security-Policy", policy);
   return response;

@@ -5,6 +5,7 @@ import { Logo } from "@/app/_components/ui/logo";
 import { Providers } from "@/app/_components/ui/providers";
 import { THEME_COOKIE, themeOf } from "@/app/_components/ui/theme";
 import { actorFor } from "@/lib/auth/actor";
+import { requestedPath } from "@/lib/auth/requested-path";
 import { listWorkspaces } from "@/lib/services/workspaces/list-workspaces";
 import { answered } from "../answered";
 import { AccountMenu } from "./account-menu";
@@ -17,7 +18,7 @@ interface Props {
 
 export default async function WorkspaceLayout({ children, params }: Props) {
   const { workspace } = await params;
-  const actor = await answered(actorFor(workspace), `/${workspace}`);
+  const actor = await answered(actorFor(workspace), await requestedPath(`/${workspace}`));
   const workspaces = await listWorkspaces(actor);
   const theme = themeOf((await cookies()).get(THEME_COOKIE)?.value);
   return (
