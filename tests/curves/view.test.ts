@@ -1,5 +1,5 @@
 import { describe, expect, it } from "vitest";
-import { horizontalAxis, storeyViews, USUAL_VIEW } from "@/app/_components/curves/curve-view";
+import { choiceOf, horizontalAxis, storeyViews, USUAL_VIEW } from "@/app/_components/curves/curve-view";
 import { placeLabels } from "@/app/_components/curves/label-places";
 import { moved } from "@/app/_components/curves/move-cursor";
 import { verticalRange, zoomed } from "@/app/_components/curves/range";
@@ -28,6 +28,16 @@ describe("axes of a view", () => {
     expect(horizontal.range.from).toBeLessThan(-1);
     expect(horizontal.range.to).toBeGreaterThan(0);
     expect(storeyViews(few, USUAL_VIEW, horizontal, false).map(({ axis }) => axis.ticks)).toEqual([[], []]);
+  });
+
+  it("draws what is usual where an address names nothing that the run has, and nothing where it asks for nothing", () => {
+    const set = madeUpSet([1, 2]);
+    const strange = { ...USUAL_VIEW, traces: ["gone"], families: [99] };
+    expect(choiceOf(set, strange)).toEqual({ traces: ["product", "ratio"], families: [0, 1] });
+    expect(choiceOf(set, { ...USUAL_VIEW, traces: [], families: [1, 99] })).toEqual({
+      traces: [],
+      families: [1],
+    });
   });
 
   it("fits a storey to what is in view", () => {

@@ -75,7 +75,11 @@ export function CurveFigure({ set, name, view, onView, point, onPoint, waiting }
           />
         ))}
       </div>
-      <div ref={frame} className="min-w-0 overflow-hidden" style={{ minHeight: narrow ? 340 : 430 }}>
+      <div
+        ref={frame}
+        className="min-w-0 overflow-hidden"
+        style={{ minHeight: plot.storeys.length === 0 ? 0 : narrow ? 340 : 430 }}
+      >
         {frameWidth > 0 && plot.storeys.length > 0 && (
           <PlotFrame
             {...plot}

@@ -44,12 +44,20 @@ const MANY_DECADES = { from: 3, to: 15 };
 /** Px along the ruler that a label takes with the room around it. */
 const LABEL_ROOM = 60;
 
-/** The choice a view makes among what the run has. Names and numbers that it does not have fall out. */
+/**
+ * The choice a view makes among what the run has. Names and numbers that it does not have fall out; where none of those asked for
+ * is left, an old address perhaps, the usual ones stand.
+ */
 export function choiceOf(set: CurveSet, view: CurveView): Choice {
   const usual = usualChoice(set);
-  const traces = view.traces?.filter((name) => usual.traces.includes(name)) ?? usual.traces;
-  const families = view.families?.filter((index) => index < set.families.length) ?? usual.families;
-  return { traces, families };
+  const known = <T>(asked: readonly T[] | null, has: (one: T) => boolean, otherwise: readonly T[]) => {
+    const left = asked?.filter(has) ?? otherwise;
+    return left.length === 0 && asked?.length !== 0 ? otherwise : left;
+  };
+  return {
+    traces: known(view.traces, (name) => usual.traces.includes(name), usual.traces),
+    families: known(view.families, (index) => index < set.families.length, usual.families),
+  };
 }
 
 /** The horizontal axis for `width` px of room. */

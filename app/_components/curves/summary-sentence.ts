@@ -16,12 +16,8 @@ export function summarise(set: CurveSet, storeys: readonly Storey[], account: Ac
   const traces = storeys.flatMap(({ traces, lines }) =>
     traces.map((name) => course(lines.filter((line) => line.trace === name))),
   );
-  const drawn = traces.length === 0 ? ["No trace is chosen."] : traces;
-  return [
-    `Over ${over}${settings}:`,
-    `${drawn.join("; ")}.`.replace("..", "."),
-    pointsInWords(set, account),
-  ].join(" ");
+  if (traces.length === 0) return `No trace is chosen. ${pointsInWords(set, account)}`;
+  return `Over ${over}${settings}: ${traces.join("; ")}. ${pointsInWords(set, account)}`;
 }
 
 function settingsDrawn(set: CurveSet, storeys: readonly Storey[]): string {
@@ -34,7 +30,7 @@ function settingsDrawn(set: CurveSet, storeys: readonly Storey[]): string {
 /** "out rises from −0.66 V to −0.60 V", or its lowest and highest value where the lines do not all go one way. */
 function course(lines: readonly Line[]): string {
   const [line] = lines;
-  if (line === undefined) return "no line is drawn";
+  if (line === undefined) return "no setting is chosen";
   const values = lines.flatMap((one) => one.values.filter((value) => value !== null));
   if (values.length === 0) return `${line.trace} has no value`;
   const low = values.reduce((a, b) => Math.min(a, b));
