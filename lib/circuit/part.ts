@@ -69,8 +69,9 @@ export interface Bench {
   readonly values: PointValues;
 }
 
+/** The number of the voltage at a pin: that of its net, or of the inner end of what lies between. */
 export function netAt({ circuit, element }: Bench, pin: string): number {
-  return circuit.nets.get(element.pins[pin]!)!;
+  return circuit.terminals.get(`${element.name}.${pin}`)?.inner ?? circuit.nets.get(element.pins[pin]!)!;
 }
 
 /**

@@ -4,13 +4,15 @@ import type { Circuit } from "./circuit";
 import type { Bench, JunctionPart, Part } from "./part";
 import { CurrentPart } from "./parts/current";
 import { DiodePart } from "./parts/diode";
+import { LimitedOpampPart } from "./parts/limited-opamp";
 import { OpampPart } from "./parts/opamp";
 import { ResistorPart } from "./parts/resistor";
+import { TerminalPart } from "./parts/terminal";
 import { TransistorPart } from "./parts/transistor";
 import { VoltagePart } from "./parts/voltage";
 import { Pattern } from "./pattern";
 import { across, newState, type State } from "./state";
-import { PointValues } from "./values";
+import { type Draw, PointValues } from "./values";
 
 /**
  * The modified nodal system of a design (Ho, Ruehli and Brennan, IEEE Trans. CAS 22, 1975): F(x) = G·x + s + Σ a_k·φ_k(b_kᵀx) = 0,
@@ -34,17 +36,23 @@ export class System {
     this.values = new PointValues(design);
     this.pattern = new Pattern(circuit.size);
     const models = new Map(design.models.map((model) => [model.name, model]));
-    this.parts = design.elements.map((element) => {
-      const model = element.model === null ? null : models.get(element.model)!;
-      return partOf(element, { element, model, circuit, pattern: this.pattern, values: this.values });
-    });
+    const { pattern, values } = this;
+    const modelOf = ({ model }: Element) => (model === null ? null : models.get(model)!);
+    const elements = design.elements.map((element) =>
+      partOf(element, { element, model: modelOf(element), circuit, pattern, values }),
+    );
+    const terminals = [...circuit.terminals.values()].map(
+      (terminal) =>
+        new TerminalPart({ model: modelOf(terminal.element), circuit, pattern, values }, terminal),
+    );
+    this.parts = [...elements, ...terminals];
     this.junctions = this.parts.filter(isJunction);
-    this.byName = new Map(this.parts.map((part) => [part.element.name, part]));
+    this.byName = new Map(elements.map((part) => [part.element.name, part]));
     const places = this.pattern.rows.length;
     this.state = newState(circuit.size, places);
     this.constantSlopes = new Float64Array(places);
     for (const part of this.parts) {
-      part.read(this.values);
+      this.read(part);
       for (const knob of part.movers) {
         const following = this.followers.get(knob);
         if (following === undefined) this.followers.set(knob, [part]);
@@ -60,8 +68,19 @@ export class System {
     this.values.turn(knob, value);
     const following = this.followers.get(knob);
     if (following === undefined) return;
-    for (const part of following) part.read(this.values);
+    for (const part of following) this.read(part);
     this.gatherConstantSlopes();
+  }
+
+  /** Draws the tolerances of every part, nominal for null. */
+  draw(draw: Draw | null): void {
+    this.values.use(draw);
+    for (const part of this.parts) this.read(part);
+    this.gatherConstantSlopes();
+  }
+
+  private read(part: Part): void {
+    this.values.within(part.element.name, () => part.read(this.values));
   }
 
   private gatherConstantSlopes(): void {
@@ -127,8 +146,12 @@ function partOf({ kind }: Element, bench: Bench): Part {
     case "npn":
     case "pnp":
       return new TransistorPart(bench);
-    case "opamp":
-      return new OpampPart(bench);
+    case "opamp": {
+      const { params } = bench.model!;
+      return params.has("out_low") || params.has("out_high")
+        ? new LimitedOpampPart(bench)
+        : new OpampPart(bench);
+    }
     case "law":
     case "gain":
       throw new Error("The checker lets no law or gain through.");

@@ -1,3 +1,4 @@
+import type { BreakdownAt } from "./breakdown";
 import type { CurrentAndSlope, DiodeAt } from "./diode";
 import { exponentialDoubt, UNIT } from "./rounding";
 
@@ -20,4 +21,34 @@ export function diodeDoubt(at: DiodeAt, v: number, { i, g }: CurrentAndSlope): n
  */
 export function diodeSpread({ eta, doubt }: DiodeAt, v: number, g: number, delta: number): number {
   return g * (Math.expm1(delta / eta) + doubt + 4 * exponentialDoubt(v / eta));
+}
+
+/** The most by which `breakdownLaw` may be off at `v` by rounding, A. */
+export function breakdownDoubt(
+  at: DiodeAt,
+  reverse: BreakdownAt,
+  v: number,
+  { i, g }: CurrentAndSlope,
+): number {
+  const { Is, eta, Rs, doubt } = at;
+  const size = Math.abs(i) + Is + reverse.amperes * Math.exp(-reverse.volts / reverse.eta);
+  const argument = (Math.abs(v) + reverse.volts) / Math.min(eta, reverse.eta);
+  if (Rs === 0) {
+    const past = Math.abs(v + reverse.volts) / reverse.eta;
+    return size * (doubt + exponentialDoubt(v > 0 ? v / eta : past + reverse.volts * UNIT));
+  }
+  return 16 * UNIT * g * (Math.abs(v) + eta + reverse.eta * (1 + argument)) + size * (doubt + 64 * UNIT);
+}
+
+/** As `diodeSpread`, with the steeper of the two exponentials. */
+export function breakdownSpread(
+  at: DiodeAt,
+  reverse: BreakdownAt,
+  v: number,
+  g: number,
+  delta: number,
+): number {
+  const eta = Math.min(at.eta, reverse.eta);
+  const argument = (Math.abs(v) + reverse.volts) / eta;
+  return g * (Math.expm1(delta / eta) + at.doubt + 4 * exponentialDoubt(argument));
 }

@@ -69,6 +69,12 @@ function withResistance({ Is, eta, Rs }: DiodeAt, v: number, out: CurrentAndSlop
   out.g = slope / (1 + Rs * slope);
 }
 
+/** The junction voltage in V, V less the drop over Rs, good to a few roundings of V. */
+export function junctionOf({ Is, eta, Rs }: DiodeAt, v: number): number {
+  const a = (Is * Rs) / eta;
+  return v + eta * (a - wrightOmega(v / eta + a + Math.log(a)));
+}
+
 /** The voltage in V at which the diode carries `i` A: V = n·V_T·ln(1 + I/Is) + Rs·I. NaN below −Is. */
 export function diodeVoltage({ Is, eta, Rs }: DiodeAt, i: number): number {
   return eta * Math.log1p(i / Is) + Rs * i;

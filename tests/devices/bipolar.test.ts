@@ -24,7 +24,7 @@ describe("the transistor", () => {
   });
 
   test("keeps the digits of its current 10 pV from saturation's end", () => {
-    const model = reference.bipolar.find((row) => row.model.beta_f === null)!.model;
+    const model = reference.bipolar.find(({ model }) => model.beta_f === null)!.model;
     const rows = reference.bipolar.filter((row) => row.model.beta_f === null && Math.abs(row.vce) === 1e-11);
     expect(rows.length).toBe(6);
     for (const row of rows) {
@@ -33,23 +33,29 @@ describe("the transistor", () => {
   });
 
   test("drops what its model leaves out exactly", () => {
-    const bare = {
-      Is: 1e-15,
-      n: 1,
-      Eg: null,
-      x: null,
-      T0: 298.15,
-      beta_f: null,
-      beta_r: null,
-      Va_f: null,
-      Va_r: null,
-      beta_power: null,
-    };
+    const bare = reference.bipolar.find((row) => row.model.beta_f === null)!.model;
     const law = lawOf({ model: bare, T: 310, vbe: 0.6, vce: 2 });
     expect([law.ib, law.ibF, law.ibR]).toEqual([0, 0, 0]);
     const far = lawOf({ model: bare, T: 310, vbe: 0.6, vce: 20 });
     expect(far.ic).toBe(law.ic);
     const cold = lawOf({ model: { ...bare, beta_f: 100 }, T: 250, vbe: 0.6, vce: 2 });
     expect(relativeError(cold.ib, cold.ic / 100)).toBeLessThanOrEqual(1e-9);
+  });
+
+  test("is the same, bit by bit, without high injection and with a knee beyond every current", () => {
+    for (const { model, T, vbe, vce } of reference.bipolar) {
+      if (model.I_knee_f !== null) continue;
+      const bias = { T, vbe, vce };
+      const far = { ...model, I_knee_f: Number.POSITIVE_INFINITY, I_knee_r: Number.POSITIVE_INFINITY };
+      expect(lawOf({ ...bias, model: far })).toEqual(lawOf({ ...bias, model }));
+    }
+  });
+
+  test("carries the square root of the current far above the knee", () => {
+    // Webster, Proc. IRE 42 (1954), from memory: e^(v/2V_T) above the knee, so tenfold current takes twice the voltage.
+    const { model } = reference.bipolar.find((row) => row.model.I_knee_f === 2e-3)!;
+    const high = (vbe: number) => lawOf({ model, T: 298.15, vbe, vce: vbe }).ic;
+    const eta = (1.380649e-23 * 298.15) / 1.602176634e-19;
+    expect(high(1 + 2 * eta * Math.LN10) / high(1)).toBeCloseTo(10, 1);
   });
 });

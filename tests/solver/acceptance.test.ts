@@ -17,6 +17,7 @@ const circuit: Circuit = {
     ["ground", 3],
   ]),
   branches: new Map([["V1", 2]]),
+  terminals: new Map(),
   branchNets: [[0, 3]],
 };
 

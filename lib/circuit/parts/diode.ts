@@ -1,8 +1,9 @@
+import { type BreakdownAt, breakdownAt, breakdownLaw, breakdownStep } from "@/lib/devices/breakdown";
 import { type CurrentAndSlope, type DiodeAt, diodeAt, diodeLaw, diodeVoltage } from "@/lib/devices/diode";
-import { diodeDoubt, diodeSpread } from "@/lib/devices/diode-proof";
+import { breakdownDoubt, breakdownSpread, diodeDoubt, diodeSpread } from "@/lib/devices/diode-proof";
 import { junctionStep } from "@/lib/devices/junction-step";
 import type { Element, Model } from "@/lib/language/ast";
-import { ROOM_TEMPERATURE } from "@/lib/units/constants";
+import { ROOM_TEMPERATURE, thermalVoltage } from "@/lib/units/constants";
 import {
   type Bench,
   FREE,
@@ -17,6 +18,10 @@ import {
 import { across, flow, type State } from "../state";
 import { type PointValues, TEMPERATURE } from "../values";
 
+/**
+ * A diode. Light drives its photocurrent past the junction and through Rs: the junction with Rs stands at V + Rs·I_photo and carries
+ * I + I_photo.
+ */
 export class DiodePart implements JunctionPart, Proof {
   readonly proof: Proof = this;
   readonly element: Element;
@@ -26,9 +31,12 @@ export class DiodePart implements JunctionPart, Proof {
   private readonly cathode: number;
   private readonly places: readonly [number, number, number, number];
   private at: DiodeAt = { Is: 0, eta: 1, Rs: 0, doubt: 0 };
-  /** Voltage at which it is linearised, V, and its law there. */
+  private reverse: BreakdownAt | null = null;
+  private photocurrent = 0;
+  /** Voltage at which the junction with Rs is linearised, V, and its law there. */
   private v = 0;
   private readonly law: CurrentAndSlope = { i: 0, g: 0 };
+  private readonly actual: CurrentAndSlope = { i: 0, g: 0 };
 
   constructor(bench: Bench) {
     const { element, pattern, values } = bench;
@@ -52,6 +60,11 @@ export class DiodePart implements JunctionPart, Proof {
       T0: figure("T0") ?? ROOM_TEMPERATURE,
     };
     this.at = diodeAt(terms, figure("Rs"), values.kelvin);
+    const volts = figure("V_breakdown");
+    const eta = (figure("n_breakdown") ?? 1) * thermalVoltage(values.kelvin);
+    this.reverse =
+      volts === null ? null : breakdownAt(this.at, figure("I_breakdown") ?? terms.Is, volts, eta);
+    this.photocurrent = figure("photocurrent") ?? 0;
   }
 
   start(): void {
@@ -59,30 +72,34 @@ export class DiodePart implements JunctionPart, Proof {
   }
 
   settle(state: State): void {
-    this.v = across(state, this.anode, this.cathode);
+    this.v = this.junction(state);
   }
 
   follow(state: State): boolean {
-    const target = across(state, this.anode, this.cathode);
-    const { at, v, law } = this;
+    const target = this.junction(state);
+    const { at, v, law, reverse } = this;
     this.v = target;
     if (Math.abs(target - v) <= FREE * at.eta) return true;
-    const next = junctionStep(at, v, law.i, law.g, target);
+    const next =
+      reverse === null
+        ? junctionStep(at, v, law.i, law.g, target)
+        : breakdownStep(at, reverse, v, law.i, law.g, target);
     if (Math.abs(next - target) <= NEARLY_WHOLE * at.eta) return true;
     this.v = next;
     return false;
   }
 
   apart(state: State): number {
-    return Math.abs(across(state, this.anode, this.cathode) - this.v) / this.at.eta;
+    return Math.abs(this.junction(state) - this.v) / this.at.eta;
   }
 
   addConstantSlopes(): void {}
 
   addTo(state: State): void {
     const { anode, cathode, law, places } = this;
-    diodeLaw(this.at, this.v, law);
-    flow(state, anode, cathode, law.i + law.g * (across(state, anode, cathode) - this.v));
+    this.lawAt(this.v, law);
+    flow(state, anode, cathode, law.i + law.g * (this.junction(state) - this.v));
+    if (this.photocurrent !== 0) flow(state, cathode, anode, this.photocurrent * state.share);
     const { jacobian } = state;
     jacobian[places[0]]! += law.g;
     jacobian[places[1]]! -= law.g;
@@ -90,23 +107,37 @@ export class DiodePart implements JunctionPart, Proof {
     jacobian[places[3]]! += law.g;
   }
 
+  /** The voltage over junction and Rs, V. */
+  private junction(state: State): number {
+    const v = across(state, this.anode, this.cathode);
+    return this.photocurrent === 0 ? v : v + this.photocurrent * state.share * this.at.Rs;
+  }
+
+  private lawAt(v: number, out: CurrentAndSlope): void {
+    if (this.reverse === null) diodeLaw(this.at, v, out);
+    else breakdownLaw(this.at, this.reverse, v, out);
+  }
+
   addDoubt(_: State, doubt: Float64Array): void {
-    const most = diodeDoubt(this.at, this.v, this.law);
+    const { at, reverse, v, law } = this;
+    const most = reverse === null ? diodeDoubt(at, v, law) : breakdownDoubt(at, reverse, v, law);
     doubt[this.anode]! += most;
     doubt[this.cathode]! += most;
   }
 
   addSpread(_: State, radius: number, weights: Float64Array, spread: Float64Array): void {
-    const { anode, cathode, at, v, law } = this;
+    const { anode, cathode, at, reverse, v, law } = this;
     const both = weights[anode]! + weights[cathode]!;
-    const most = diodeSpread(at, v, law.g, radius * both) * both;
-    spread[anode]! += most;
-    spread[cathode]! += most;
+    const delta = radius * both;
+    const change =
+      reverse === null ? diodeSpread(at, v, law.g, delta) : breakdownSpread(at, reverse, v, law.g, delta);
+    spread[anode]! += change * both;
+    spread[cathode]! += change * both;
   }
 
   current(pin: string, state: State): number {
-    const law = { i: 0, g: 0 };
-    diodeLaw(this.at, across(state, this.anode, this.cathode), law);
-    return pin === "anode" ? law.i : -law.i;
+    this.lawAt(this.junction(state), this.actual);
+    const i = this.actual.i - this.photocurrent * state.share;
+    return pin === "anode" ? i : -i;
   }
 }

@@ -1,75 +1,105 @@
-import { opampMismatch } from "@/lib/devices/opamp";
+import { biasInto, offsetAt, opampMismatch } from "@/lib/devices/opamp";
 import type { Element, Model } from "@/lib/language/ast";
-import { type Bench, figureOf, moversOf, netAt, type Part } from "../part";
+import { type Bench, figureOf, moversOf, netAt, type Part, type Proof } from "../part";
 import { across, flow, type State } from "../state";
-import type { PointValues } from "../values";
+import { type PointValues, TEMPERATURE } from "../values";
 
+/** An amplifier without output limits. */
 export class OpampPart implements Part {
   readonly element: Element;
-  readonly proof = "linear";
+  readonly proof: "linear" | Proof = "linear";
   readonly movers: ReadonlySet<string>;
-  private readonly model: Model;
-  private readonly plus: number;
-  private readonly minus: number;
-  private readonly out: number;
-  private readonly ground: number;
+  protected readonly model: Model;
+  protected readonly plus: number;
+  protected readonly minus: number;
+  protected readonly out: number;
+  protected readonly ground: number;
   /** Number of the current into its output, and of its law. */
-  private readonly branch: number;
-  private readonly places: readonly [number, number, number, number];
+  protected readonly branch: number;
+  /** Row of the output by current; its law by plus, minus, output voltage and output current. */
+  protected readonly places: readonly [number, number, number, number, number];
+  protected offset = 0;
+  /** Output resistance, Ω. */
+  protected ohms = 0;
   private inverseGain = 0;
-  private offset = 0;
-  private bias = 0;
+  private intoPlus = 0;
+  private intoMinus = 0;
 
   constructor(bench: Bench) {
     const { element, circuit, pattern, values } = bench;
+    const { params } = bench.model!;
     this.element = element;
     this.model = bench.model!;
-    this.movers = moversOf(this.model.params.values(), values);
+    this.movers = moversOf(params.values(), values, ...(params.has("offset_drift") ? [TEMPERATURE] : []));
     const branch = circuit.branches.get(element.name)!;
     this.plus = netAt(bench, "plus");
     this.minus = netAt(bench, "minus");
     this.out = netAt(bench, "out");
     this.ground = circuit.size;
     this.branch = branch;
+    const hasGain = params.has("gain");
     this.places = [
       pattern.place(this.out, branch),
       pattern.place(branch, this.plus),
       pattern.place(branch, this.minus),
-      this.model.params.has("gain") ? pattern.place(branch, this.out) : 0,
+      hasGain ? pattern.place(branch, this.out) : 0,
+      hasGain && params.has("R_out") ? pattern.place(branch, branch) : 0,
     ];
   }
 
   read(values: PointValues): void {
-    const gain = figureOf(this.model, "gain", values);
+    const figure = (name: string) => figureOf(this.model, name, values);
+    const gain = figure("gain");
+    const bias = figure("bias") ?? 0;
+    const difference = figure("bias_offset") ?? 0;
     this.inverseGain = gain === null ? 0 : 1 / gain;
-    this.offset = figureOf(this.model, "offset", values) ?? 0;
-    this.bias = figureOf(this.model, "bias", values) ?? 0;
+    this.offset = offsetAt(figure("offset") ?? 0, figure("offset_drift"), values.kelvin);
+    this.ohms = figure("R_out") ?? 0;
+    this.intoPlus = biasInto(1, bias, difference);
+    this.intoMinus = biasInto(-1, bias, difference);
   }
 
   addConstantSlopes(jacobian: Float64Array): void {
-    const [intoOut, byPlus, byMinus, byOut] = this.places;
+    const [intoOut, byPlus, byMinus, byOut, byCurrent] = this.places;
     jacobian[intoOut]! += 1;
     jacobian[byPlus]! += 1;
     jacobian[byMinus]! -= 1;
     jacobian[byOut]! -= this.inverseGain;
+    jacobian[byCurrent]! += this.ohms * this.inverseGain;
   }
 
   addTo(state: State): void {
-    const { plus, minus, out, ground, branch, inverseGain } = this;
-    flow(state, out, ground, state.x[branch]! + state.low[branch]!);
-    const bias = this.bias * state.share;
-    if (bias !== 0) {
-      flow(state, plus, ground, bias);
-      flow(state, minus, ground, bias);
-    }
+    this.addCurrents(state);
+    const { plus, minus, branch, inverseGain } = this;
     const difference = across(state, plus, minus);
     const offset = this.offset * state.share;
-    const vout = across(state, out, ground);
-    state.residual[branch] = opampMismatch(difference, offset, vout, inverseGain);
-    state.scale[branch] = Math.abs(difference) + Math.abs(offset) + Math.abs(vout * inverseGain);
+    const behind = this.behind(state);
+    state.residual[branch] = opampMismatch(difference, offset, behind, inverseGain);
+    state.scale[branch] = Math.abs(difference) + Math.abs(offset) + this.around(state) * inverseGain;
+  }
+
+  /** Output and bias currents. */
+  protected addCurrents(state: State): void {
+    const { plus, minus, out, ground, branch } = this;
+    flow(state, out, ground, state.x[branch]! + state.low[branch]!);
+    const { share } = state;
+    if (this.intoPlus !== 0) flow(state, plus, ground, this.intoPlus * share);
+    if (this.intoMinus !== 0) flow(state, minus, ground, this.intoMinus * share);
+  }
+
+  /** The voltage behind the output resistance, V. */
+  protected behind(state: State): number {
+    const vout = across(state, this.out, this.ground);
+    return this.ohms === 0 ? vout : vout - this.ohms * state.x[this.branch]!;
+  }
+
+  /** The magnitudes of which `behind` is the sum, V. */
+  protected around(state: State): number {
+    return Math.abs(state.x[this.out]!) + this.ohms * Math.abs(state.x[this.branch]!);
   }
 
   current(pin: string, state: State): number {
-    return pin === "out" ? state.x[this.branch]! : this.bias * state.share;
+    if (pin === "out") return state.x[this.branch]!;
+    return (pin === "plus" ? this.intoPlus : this.intoMinus) * state.share;
   }
 }

@@ -1,4 +1,4 @@
-import { type BipolarAt, bipolarAt, bipolarLaw } from "@/lib/devices/bipolar";
+import { type BipolarAt, bipolarAt, bipolarLaw, NO_BIPOLAR } from "@/lib/devices/bipolar";
 import { bipolarDoubt, bipolarSpread } from "@/lib/devices/bipolar-proof";
 import { diodeVoltage } from "@/lib/devices/diode";
 import { junctionStep } from "@/lib/devices/junction-step";
@@ -32,21 +32,13 @@ export class TransistorPart implements JunctionPart, Proof {
   private readonly ground: number;
   /** Rows c, b, e by columns c, b, e. */
   private readonly places: readonly number[];
-  private at: BipolarAt = {
-    Is: 0,
-    eta: 1,
-    Rs: 0,
-    doubt: 0,
-    forwardBase: 0,
-    reverseBase: 0,
-    forwardEarly: 0,
-    reverseEarly: 0,
-  };
+  private at: BipolarAt = NO_BIPOLAR;
   /** Voltages at which it is linearised, V, and its law there. */
   private vbe = 0;
   private vbc = 0;
   private vce = 0;
   private readonly law = { ic: 0, ib: 0, icF: 0, icR: 0, ibF: 0, ibR: 0 };
+  private readonly actual = { ic: 0, ib: 0, icF: 0, icR: 0, ibF: 0, ibR: 0 };
   private readonly bounds = { ic: 0, ib: 0, icF: 0, icR: 0, ibF: 0, ibR: 0 };
 
   constructor(bench: Bench) {
@@ -76,6 +68,12 @@ export class TransistorPart implements JunctionPart, Proof {
       Va_f: figure("Va_f"),
       Va_r: figure("Va_r"),
       beta_power: figure("beta_power"),
+      I_leak_e: figure("I_leak_e"),
+      n_leak_e: figure("n_leak_e") ?? 2,
+      I_leak_c: figure("I_leak_c"),
+      n_leak_c: figure("n_leak_c") ?? 2,
+      I_knee_f: figure("I_knee_f"),
+      I_knee_r: figure("I_knee_r"),
     };
     this.at = bipolarAt(terms, values.kelvin);
   }
@@ -173,8 +171,7 @@ export class TransistorPart implements JunctionPart, Proof {
   }
 
   current(pin: string, state: State): number {
-    const law = { ic: 0, ib: 0, icF: 0, icR: 0, ibF: 0, ibR: 0 };
-    const { sign, b, c, e } = this;
+    const { sign, b, c, e, actual: law } = this;
     const vbe = sign * across(state, b, e);
     const vbc = sign * across(state, b, c);
     bipolarLaw(this.at, vbe, vbc, sign * across(state, c, e), law);

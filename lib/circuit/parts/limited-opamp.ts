@@ -1,0 +1,93 @@
+import { KNEE, limited, limitStep } from "@/lib/devices/limits";
+import { UNIT } from "@/lib/devices/rounding";
+import { FREE, figureOf, type JunctionPart, type Proof } from "../part";
+import { across, type State } from "../state";
+import type { PointValues } from "../values";
+import { OpampPart } from "./opamp";
+
+/**
+ * An amplifier whose output has limits: behind the output resistance it stands at L(s), s = A·(v_plus − v_minus + offset). The law
+ * w·(L(s) − v_behind) = 0 has the weight w = 1/(1 + A·L'(s)), which keeps its slopes near 1 on both sides of a knee.
+ */
+export class LimitedOpampPart extends OpampPart implements JunctionPart, Proof {
+  override readonly proof: Proof = this;
+  private gain = 1;
+  private limits = { low: null as number | null, high: null as number | null };
+  /** Where the limits are taken as a straight line, V, and the law there. */
+  private s = 0;
+  private readonly law = { v: 0, slope: 1 };
+  private weight = 1;
+
+  override read(values: PointValues): void {
+    super.read(values);
+    const figure = (name: string) => figureOf(this.model, name, values);
+    const [low, high] = [figure("out_low"), figure("out_high")];
+    const isUpsideDown = low !== null && high !== null && !(low < high);
+    this.gain = isUpsideDown ? Number.NaN : (figure("gain") ?? Number.NaN);
+    this.limits = { low, high };
+  }
+
+  start(): void {
+    const { low, high } = this.limits;
+    const inside = (low ?? -1) < 0 && (high ?? 1) > 0;
+    this.s = inside ? 0 : low !== null && high !== null ? (low + high) / 2 : (low ?? high!);
+  }
+
+  settle(state: State): void {
+    this.s = this.asked(state);
+  }
+
+  follow(state: State): boolean {
+    const { s } = this;
+    const target = this.asked(state);
+    this.s = target;
+    if (Math.abs(target - s) <= FREE * KNEE) return true;
+    this.s = limitStep(this.limits, s, target);
+    return this.s === target;
+  }
+
+  apart(state: State): number {
+    return Math.abs(this.asked(state) - this.s) / KNEE;
+  }
+
+  override addConstantSlopes(jacobian: Float64Array): void {
+    jacobian[this.places[0]]! += 1;
+  }
+
+  override addTo(state: State): void {
+    this.addCurrents(state);
+    const { branch, law, gain, s, places } = this;
+    limited(this.limits, s, law);
+    const weight = 1 / (1 + gain * law.slope);
+    this.weight = weight;
+    state.residual[branch] = weight * (law.v + law.slope * (this.asked(state) - s) - this.behind(state));
+    state.scale[branch] = weight * (Math.abs(law.v) + this.around(state));
+    const { jacobian } = state;
+    const [, byPlus, byMinus, byOut, byCurrent] = places;
+    jacobian[byPlus]! += weight * gain * law.slope;
+    jacobian[byMinus]! -= weight * gain * law.slope;
+    jacobian[byOut]! -= weight;
+    jacobian[byCurrent]! += weight * this.ohms;
+  }
+
+  /** What the output would be without limits, V. */
+  private asked(state: State): number {
+    return this.gain * (across(state, this.plus, this.minus) + this.offset * state.share);
+  }
+
+  addDoubt(state: State, doubt: Float64Array): void {
+    const { branch, law, gain, weight, limits } = this;
+    const inputs = Math.abs(state.x[this.plus]!) + Math.abs(state.x[this.minus]!) + Math.abs(this.offset);
+    const knees = Math.abs(limits.low ?? 0) + Math.abs(limits.high ?? 0) + KNEE;
+    const outputs = Math.abs(law.v) + this.around(state) + knees;
+    doubt[branch]! += UNIT * weight * (8 * gain * law.slope * inputs + 16 * outputs);
+  }
+
+  /** |d ln L'/ds| ≤ 1/κ, since L' is a product of two logistic functions of opposite directions. */
+  addSpread(_: State, radius: number, weights: Float64Array, spread: Float64Array): void {
+    const { branch, law, gain, weight } = this;
+    const both = weights[this.plus]! + weights[this.minus]!;
+    const rise = Math.expm1((gain * radius * both) / KNEE) + 64 * UNIT * (1 + Math.abs(this.s) / KNEE);
+    spread[branch]! += weight * gain * law.slope * rise * both;
+  }
+}
