@@ -1,3 +1,6 @@
+import { ActiveMatrix, type Entry } from "./kernel/active";
+import { PivotSearch } from "./kernel/pivot";
+
 /** Where a square sparse matrix has entries: entry k ≥ 1 stands at (rows[k], columns[k]); entry 0 is outside it. */
 export interface SparseShape {
   readonly size: number;
@@ -12,7 +15,8 @@ export interface SparseShape {
  * `factor`: for each step, the place of the pivot, the count of rows below and of columns right of it, the places of the pivot
  * row; then, for each row below, the place of its multiplier and the places it changes. `rowOf` and `columnOf` give the row and
  * column of each step's pivot; `rowPlaces`, `rowColumns` with `rowStarts` give the pivot rows, `belowPlaces`, `belowRows`
- * with `belowStarts` the multipliers, for the two substitutions.
+ * with `belowStarts` the multipliers, for the two substitutions. `anchors`: of each row, the place of its largest entry on the
+ * sample. `operations` counts the multiplications of a factorisation and a solution.
  */
 export interface Elimination {
   readonly places: number;
@@ -26,131 +30,68 @@ export interface Elimination {
   readonly belowStarts: Int32Array;
   readonly belowPlaces: Int32Array;
   readonly belowRows: Int32Array;
+  readonly anchors: Int32Array;
+  readonly operations: number;
 }
 
-interface Entry {
-  readonly place: number;
-  value: number;
-  /** Sum of the magnitudes that made `value`: below 1e-15 of it, a value is rounding and counts as 0. */
-  size: number;
+interface Step {
+  readonly row: number;
+  readonly column: number;
+  readonly pivot: Entry;
+  readonly right: readonly [number, Entry][];
+  readonly below: readonly [number, Entry][];
 }
-
-/** A pivot must reach this part of its column, rows being scaled to a largest entry of 1. */
-const THRESHOLD = 0.1;
-const ROUNDING = 1e-15;
 
 /**
- * Chooses pivots on sample values by Markowitz's count (Management Science 3, 1957) among those that pass a threshold test in
- * their column (Duff, Erisman and Reid, Direct Methods for Sparse Matrices, 1986, from memory). Null where the sample is
- * singular or not finite. Cost grows with the entries times the size; meant to run once a structure.
+ * Chooses pivots on sample values by Markowitz's count (Management Science 3, 1957). Null where the sample is singular or not
+ * finite. Cost grows with the entries and the fill-in; meant to run once a structure.
  */
 export function eliminate(shape: SparseShape, sample: Float64Array): Elimination | null {
-  const { size } = shape;
-  const rows = Array.from({ length: size }, () => new Map<number, Entry>());
-  const columns = Array.from({ length: size }, () => new Set<number>());
-  for (let k = 1; k < shape.rows.length; k++) {
-    const value = sample[k]!;
-    if (!Number.isFinite(value)) return null;
-    rows[shape.rows[k]!]!.set(shape.columns[k]!, { place: k, value, size: Math.abs(value) });
-    columns[shape.columns[k]!]!.add(shape.rows[k]!);
-  }
-  const largest = rows.map((row) => Math.max(0, ...[...row.values()].map((entry) => entry.size)));
-  let places = shape.rows.length;
+  for (let k = 1; k < shape.rows.length; k++) if (!Number.isFinite(sample[k]!)) return null;
+  const matrix = new ActiveMatrix(shape, sample);
+  const search = new PivotSearch(matrix);
   const factor: number[] = [];
-  const steps: { row: number; column: number; pivot: number; right: [number, Entry][]; below: number[] }[] =
-    [];
-  const belowPlaces: number[][] = [];
-  const active = new Set(rows.keys());
-
-  while (active.size > 0) {
-    const best = choosePivot(rows, columns, active, largest);
-    if (best === null) return null;
-    const { row, column } = best;
-    const pivotRow = rows[row]!;
-    const pivot = pivotRow.get(column)!;
-    active.delete(row);
-    for (const other of pivotRow.keys()) columns[other]!.delete(row);
-    const right = [...pivotRow].filter(([other]) => other !== column);
-    const below = [...columns[column]!];
-    factor.push(pivot.place, below.length, right.length, ...right.map(([, entry]) => entry.place));
-    const multipliers: number[] = [];
-    for (const target of below) {
-      const targetRow = rows[target]!;
-      const head = targetRow.get(column)!;
-      targetRow.delete(column);
-      multipliers.push(head.place);
-      factor.push(head.place);
+  const steps: Step[] = [];
+  let operations = 0;
+  while (steps.length < shape.size) {
+    const at = search.find();
+    if (at === null) return null;
+    const { pivot, right, below } = matrix.remove(at.row, at.column);
+    factor.push(pivot.place, below.length, right.length);
+    for (const [, entry] of right) factor.push(entry.place);
+    for (const [target, head] of below) {
       const multiplier = head.value / pivot.value;
-      for (const [other, entry] of right) {
-        let changed = targetRow.get(other);
-        if (changed === undefined) {
-          changed = { place: places++, value: 0, size: 0 };
-          targetRow.set(other, changed);
-          columns[other]!.add(target);
-        }
-        changed.value -= multiplier * entry.value;
-        changed.size += Math.abs(multiplier) * entry.size;
-        factor.push(changed.place);
-      }
+      factor.push(head.place);
+      for (const [column, entry] of right) factor.push(matrix.change(target, column, multiplier, entry));
     }
-    columns[column]!.clear();
-    steps.push({ row, column, pivot: pivot.place, right, below });
-    belowPlaces.push(multipliers);
+    matrix.recount(below, right);
+    operations += below.length * (right.length + 2) + right.length + 1;
+    steps.push({ ...at, pivot, right, below });
   }
   return {
-    places,
+    places: matrix.places,
     factor: Int32Array.from(factor),
-    rowOf: Int32Array.from(steps, (step) => step.row),
-    columnOf: Int32Array.from(steps, (step) => step.column),
-    pivots: Int32Array.from(steps, (step) => step.pivot),
-    rowStarts: starts(steps.map((step) => step.right.length)),
-    rowPlaces: Int32Array.from(steps.flatMap((step) => step.right.map(([, entry]) => entry.place))),
-    rowColumns: Int32Array.from(steps.flatMap((step) => step.right.map(([column]) => column))),
-    belowStarts: starts(belowPlaces.map((list) => list.length)),
-    belowPlaces: Int32Array.from(belowPlaces.flat()),
-    belowRows: Int32Array.from(steps.flatMap((step) => step.below)),
+    rowOf: Int32Array.from(steps, ({ row }) => row),
+    columnOf: Int32Array.from(steps, ({ column }) => column),
+    pivots: Int32Array.from(steps, ({ pivot }) => pivot.place),
+    rowStarts: starts(steps.map(({ right }) => right.length)),
+    rowPlaces: Int32Array.from(steps.flatMap(({ right }) => right.map(([, entry]) => entry.place))),
+    rowColumns: Int32Array.from(steps.flatMap(({ right }) => right.map(([column]) => column))),
+    belowStarts: starts(steps.map(({ below }) => below.length)),
+    belowPlaces: Int32Array.from(steps.flatMap(({ below }) => below.map(([, entry]) => entry.place))),
+    belowRows: Int32Array.from(steps.flatMap(({ below }) => below.map(([row]) => row))),
+    anchors: anchorsOf(shape, sample),
+    operations,
   };
 }
 
-function choosePivot(
-  rows: readonly ReadonlyMap<number, Entry>[],
-  columns: readonly ReadonlySet<number>[],
-  active: ReadonlySet<number>,
-  largest: readonly number[],
-): { row: number; column: number } | null {
-  let best: { row: number; column: number } | null = null;
-  let leastCost = Number.POSITIVE_INFINITY;
-  let bestSize = 0;
-  for (const row of active) {
-    const entries = rows[row]!;
-    for (const [column, entry] of entries) {
-      const cost = (entries.size - 1) * (columns[column]!.size - 1);
-      const size = scaled(entry) / largest[row]!;
-      if (cost > leastCost || (cost === leastCost && size <= bestSize)) continue;
-      if (!(size > 0) || size < THRESHOLD * largestIn(column, rows, columns, largest)) continue;
-      best = { row, column };
-      leastCost = cost;
-      bestSize = size;
-    }
-    if (leastCost === 0) break;
+function anchorsOf({ size, rows }: SparseShape, sample: Float64Array): Int32Array {
+  const anchors = new Int32Array(size);
+  for (let k = 1; k < rows.length; k++) {
+    const best = anchors[rows[k]!]!;
+    if (best === 0 || Math.abs(sample[k]!) > Math.abs(sample[best]!)) anchors[rows[k]!] = k;
   }
-  return best;
-}
-
-function largestIn(
-  column: number,
-  rows: readonly ReadonlyMap<number, Entry>[],
-  columns: readonly ReadonlySet<number>[],
-  largest: readonly number[],
-): number {
-  let size = 0;
-  for (const row of columns[column]!) size = Math.max(size, scaled(rows[row]!.get(column)!) / largest[row]!);
-  return size;
-}
-
-function scaled({ value, size }: Entry): number {
-  const magnitude = Math.abs(value);
-  return magnitude > ROUNDING * size ? magnitude : 0;
+  return anchors;
 }
 
 function starts(lengths: readonly number[]): Int32Array {

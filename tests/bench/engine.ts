@@ -29,6 +29,9 @@ class Afresh implements Linear {
     return true;
   }
 
+  /** Newton's method asks for none. */
+  solveTransposed(): void {}
+
   solveAgain(residual: Float64Array, step: Float64Array): void {
     const size = step.length;
     const right = Matrix.zeros(size, 1);

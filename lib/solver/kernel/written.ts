@@ -1,0 +1,150 @@
+import type { Elimination, SparseShape } from "../elimination";
+import { type Compiled, compiled } from "./compiled";
+import { GOOD_BACKWARD_ERROR, type Kernel } from "./kernel";
+
+/** Multiplications of generated code at most: the compiler behind it gives up on functions of some 2,500. */
+const MOST_OPERATIONS = 1500;
+
+/**
+ * An elimination as generated code: every value in a variable of its own, every place a number, no loop and no test of a place. The
+ * text holds integers and numbers only, never a name or a value of the user.
+ */
+export class WrittenKernel implements Kernel {
+  private again: Compiled | null = null;
+  private transposed: Compiled | null = null;
+
+  private constructor(
+    private readonly plan: Elimination,
+    private readonly whole: Compiled,
+  ) {}
+
+  /** Null where the elimination is too long for straight code, or none may be generated here. */
+  static of(shape: SparseShape, plan: Elimination): WrittenKernel | null {
+    if (plan.operations + shape.rows.length > MOST_OPERATIONS) return null;
+    const whole = compiled("a,b,d,f", solveText(shape, plan));
+    return whole === null ? null : new WrittenKernel(plan, whole);
+  }
+
+  solve(a: Float64Array, b: Float64Array, d: Float64Array, f: Float64Array): boolean {
+    return this.whole(a, b, d, f) === 1;
+  }
+
+  solveAgain(b: Float64Array, d: Float64Array, f: Float64Array): void {
+    this.again ??= compiled("b,d,f", againText(this.plan))!;
+    this.again(b, d, f);
+  }
+
+  solveTransposed(b: Float64Array, d: Float64Array, f: Float64Array): void {
+    this.transposed ??= compiled("b,d,f", transposedText(this.plan))!;
+    this.transposed(b, d, f);
+  }
+}
+
+/** Variables: v of a place, p the inverse of a pivot, w of a row, x of a column, r what a row leaves over, m the longest. */
+function solveText(shape: SparseShape, plan: Elimination): string {
+  return [
+    factorText(shape, plan),
+    substitutionText(
+      plan,
+      (place) => `v${place}`,
+      (k) => `p${k}`,
+    ),
+    monitorText(shape, plan),
+  ].join("\n");
+}
+
+function factorText({ rows }: SparseShape, { factor, pivots, places }: Elimination): string {
+  const lines: string[] = [];
+  for (let k = 1; k < places; k++) lines.push(`let v${k}=${k < rows.length ? `a[${k}]` : 0};`);
+  const kept: string[] = [];
+  let at = 0;
+  for (let k = 0; k < pivots.length; k++) {
+    lines.push(`const p${k}=1/v${factor[at]};`);
+    kept.push(`f[${places + k}]=p${k};`);
+    const below = factor[at + 1]!;
+    const right = factor[at + 2]!;
+    const row = at + 3;
+    at = row + right;
+    for (let j = 0; j < right; j++) kept.push(keep(factor[row + j]!));
+    for (let i = 0; i < below; i++) {
+      const multiplier = factor[at++]!;
+      lines.push(`v${multiplier}*=p${k};`);
+      kept.push(keep(multiplier));
+      for (let j = 0; j < right; j++) lines.push(`v${factor[at + j]}-=v${multiplier}*v${factor[row + j]};`);
+      at += right;
+    }
+  }
+  return [...lines, ...kept].join("\n");
+}
+
+function keep(place: number): string {
+  return `f[${place}]=v${place};`;
+}
+
+function againText(plan: Elimination): string {
+  return substitutionText(
+    plan,
+    (place) => `f[${place}]`,
+    (k) => `f[${plan.places + k}]`,
+  );
+}
+
+function substitutionText(
+  plan: Elimination,
+  value: (place: number) => string,
+  inverse: (k: number) => string,
+): string {
+  const { rowOf, columnOf, rowStarts, rowPlaces, rowColumns, belowStarts, belowPlaces, belowRows } = plan;
+  const size = rowOf.length;
+  const lines: string[] = [];
+  for (let i = 0; i < size; i++) lines.push(`let w${i}=-b[${i}];`);
+  for (let k = 0; k < size; k++) {
+    for (let s = belowStarts[k]!; s < belowStarts[k + 1]!; s++) {
+      lines.push(`w${belowRows[s]}-=${value(belowPlaces[s]!)}*w${rowOf[k]};`);
+    }
+  }
+  for (let k = size - 1; k >= 0; k--) {
+    let sum = `w${rowOf[k]}`;
+    for (let s = rowStarts[k]!; s < rowStarts[k + 1]!; s++) {
+      sum += `-${value(rowPlaces[s]!)}*x${rowColumns[s]}`;
+    }
+    lines.push(`const x${columnOf[k]}=(${sum})*${inverse(k)};`, `d[${columnOf[k]}]=x${columnOf[k]};`);
+  }
+  return lines.join("\n");
+}
+
+function monitorText({ rows, columns, size }: SparseShape, { anchors }: Elimination): string {
+  const lines = ["let m=0;"];
+  const left = Array.from({ length: size }, (_, i) => `b[${i}]`);
+  for (let k = 1; k < rows.length; k++) left[rows[k]!] += `+a[${k}]*x${columns[k]}`;
+  for (let i = 0; i < size; i++) lines.push(`m=Math.max(m,Math.abs(x${i}));`);
+  lines.push("if(!(m<Infinity))return 0;");
+  for (let i = 0; i < size; i++) {
+    const whole = `Math.abs(a[${anchors[i]}])*m+Math.abs(b[${i}])`;
+    lines.push(`if(!(Math.abs(${left[i]})<=${GOOD_BACKWARD_ERROR}*(${whole})))return 0;`);
+  }
+  lines.push("return 1;");
+  return lines.join("\n");
+}
+
+function transposedText(plan: Elimination): string {
+  const { rowOf, columnOf, rowStarts, rowPlaces, rowColumns, places } = plan;
+  const { belowStarts, belowPlaces, belowRows } = plan;
+  const size = rowOf.length;
+  const lines: string[] = [];
+  for (let j = 0; j < size; j++) lines.push(`let w${j}=b[${j}];`);
+  for (let k = 0; k < size; k++) {
+    lines.push(`w${columnOf[k]}*=f[${places + k}];`);
+    for (let s = rowStarts[k]!; s < rowStarts[k + 1]!; s++) {
+      lines.push(`w${rowColumns[s]}-=f[${rowPlaces[s]}]*w${columnOf[k]};`);
+    }
+  }
+  for (let k = size - 1; k >= 0; k--) {
+    let sum = `w${columnOf[k]}`;
+    for (let s = belowStarts[k]!; s < belowStarts[k + 1]!; s++) {
+      sum += `-f[${belowPlaces[s]}]*x${belowRows[s]}`;
+    }
+    lines.push(`const x${rowOf[k]}=${sum};`, `d[${rowOf[k]}]=x${rowOf[k]};`);
+  }
+  return lines.join("\n");
+}
