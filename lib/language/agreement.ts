@@ -8,13 +8,18 @@ import { describeDimension, spellableUnit } from "./unit-check";
 /** Judges whether values go together, and says so with the text at hand. */
 export class Agreement {
   constructor(
-    private readonly source: string,
+    private readonly whole: string,
     private readonly report: Report,
   ) {}
 
+  /** The text of a span as it is written. */
+  source(span: Span): string {
+    return this.whole.slice(span.from, span.to);
+  }
+
   /** The text of a span as a message shows it. */
   text(span: Span): string {
-    return quote(this.source.slice(span.from, Math.min(span.to, span.from + 80)).replace(/\s+/gu, " "));
+    return quote(this.whole.slice(span.from, Math.min(span.to, span.from + 80)).replace(/\s+/gu, " "));
   }
 
   /** Two values that must have the same dimension; where one lacks its unit, the proposal gives it the other's. */
@@ -31,7 +36,7 @@ export class Agreement {
       this.report.error("UNI4", span, `${message}.`);
       return false;
     }
-    const text = `${this.source.slice(bare.from, bare.to)} ${unit}`;
+    const text = `${this.source(bare)} ${unit}`;
     const fix = { title: `Write ${text}`, from: bare.from, to: bare.to, text };
     this.report.error("UNI4", span, `${message}; write ${quote(text)}.`, fix);
     return false;
@@ -46,7 +51,7 @@ export class Agreement {
       this.report.error("UNI5", expression, `${message}; divide it by a quantity of the same unit.`);
       return false;
     }
-    const source = this.source.slice(expression.from, expression.to);
+    const source = this.source(expression);
     const simple = expression.kind !== "binary" && expression.kind !== "unary";
     const quotient = `${simple ? source : `(${source})`} / 1 ${unit}`;
     const text = inBrackets ? `(${quotient})` : quotient;

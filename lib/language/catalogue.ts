@@ -19,6 +19,7 @@ export const CATALOGUE = {
   FRM10: "A pin wants the name of a net",
   FRM11: "An element in the wrong form",
   FRM12: "A function with the wrong number of values",
+  FRM13: "A statement of the file inside a block",
 
   NAM1: "A name that is already taken",
   NAM2: "A word of the language used as a name",
@@ -31,6 +32,7 @@ export const CATALOGUE = {
   NAM9: "A value defined by itself",
   NAM10: "An unknown function",
   NAM11: "A value that must not move",
+  NAM12: "A block that contains itself",
 
   UNI1: "An unknown unit",
   UNI2: "A prefix without its unit",
@@ -62,6 +64,21 @@ export const CATALOGUE = {
   PLN7: "A range upside down",
   PLN8: "Nothing is shown",
   PLN9: "A sweep that leads a value out of its bounds",
+
+  CON1: "A window without a point of the plan",
+  CON2: "A window or range upside down",
+  CON3: "A reduction of something that is no trace",
+  CON4: "A condition where none is",
+  CON5: "A sweep on which no line can be drawn",
+  CON6: "A trace where one number is wanted",
+  CON7: "A requirement that says nothing of the circuit",
+  CON8: "A share of the draws that cannot be",
+  CON9: "A tolerance below zero",
+  CON10: "A reduction outside a reading or requirement",
+  CON11: "A rise of what is no trace",
+  CON12: "A reading used before it is known",
+  CON13: "A window on a knob that a reading has gone over",
+  CON14: "A requirement given twice",
 
   CAP1: "The text is too long",
   CAP2: "An expression nested too deeply",

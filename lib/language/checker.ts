@@ -1,8 +1,11 @@
 import { Agreement } from "./agreement";
 import type { Design, Element, Show, Sweep } from "./ast";
 import { checkBounds } from "./bounds";
+import { checkContract } from "./contract";
 import type { Diagnostic } from "./diagnostic";
+import { DrawsCheck } from "./draws-check";
 import { ElementCheck, modelKinds } from "./elements";
+import { Expander, type Flat } from "./expand";
 import { FUNCTION_NAMES } from "./functions";
 import { tokenize } from "./lexer";
 import { count, MOST_ELEMENTS, MOST_TEXT, MOST_VALUES } from "./limits";
@@ -14,7 +17,7 @@ import { Report } from "./report";
 import { checkShows } from "./shows";
 import type { Span } from "./span";
 import { SweepCheck } from "./sweeps";
-import type { Netlist, Statement } from "./syntax";
+import type { Netlist } from "./syntax";
 import { type Known, Typing } from "./typing";
 import { checkValues } from "./values";
 import { Wirer } from "./wired";
@@ -39,7 +42,8 @@ export function check(text: string): Checked {
   return { netlist, design: report.hasErrors ? null : design, diagnostics: report.sorted() };
 }
 
-function checkNetlist({ statements }: Netlist, source: string, report: Report): Design {
+function checkNetlist(netlist: Netlist, source: string, report: Report): Design {
+  const { statements, trials, isWhole } = new Expander(report).file(netlist.statements, []);
   const names = new Names(report, FUNCTION_NAMES);
   const nominal = new Nominal();
   const known = new Map<string, Known>();
@@ -48,12 +52,13 @@ function checkNetlist({ statements }: Netlist, source: string, report: Report): 
   const typing = new Typing(agreement, names, report, known, (element) => pins.get(element) ?? null);
   const quantities = new Quantities(typing, agreement, nominal, report);
 
+  names.isIncomplete = statements.some((one) => one.kind === "block" && !one.isClosed);
   declareAll(statements, names);
   const kinds = modelKinds(statements, names, report);
   const wired = new Wirer(names, kinds, report).wire(statements);
   for (const one of wired) pins.set(one.name.text, one.pins);
 
-  const { knobs, lets } = checkValues(statements, {
+  const { knobs, lets: allLets } = checkValues(statements, {
     names,
     agreement,
     typing,
@@ -63,18 +68,27 @@ function checkNetlist({ statements }: Netlist, source: string, report: Report): 
     report,
   });
   const elementCheck = new ElementCheck(quantities, nominal, report);
-  const models = elementCheck.models(statements, kinds);
-  const elements = wired.map((one) => elementCheck.element(one));
+  const own = ownOf(trials);
+  const lets = allLets.filter(own);
+  const models = elementCheck.models(statements, kinds).filter(own);
+  const elements = wired.map((one) => elementCheck.element(one)).filter(own);
   const sweeps = new SweepCheck(names, typing, agreement, quantities, known, knobs, report).sweeps(
     statements,
   );
-  const shows = checkShows(statements, source, typing, report);
+  const drawsCheck = new DrawsCheck(quantities, report);
+  const draws = drawsCheck.draws(statements);
+  const seek = drawsCheck.seek(statements);
+  const shown = checkShows(statements, source, typing, report);
+  const understood = { names, nominal, agreement, typing, quantities, known, report };
+  const asked = { source, knobs, lets: allLets, sweeps, shows: shown, draws };
+  const contract = checkContract(statements, { ...understood, ...asked });
+  const { shows } = contract;
 
   if (!report.hasErrors) checkBounds({ lets, models, elements, sweeps }, nominal, report);
   const title = titleOf(statements, report);
-  const netPlaces = placesOf(names);
+  const netPlaces = placesOf(names, own);
   const nets = [...netPlaces.keys()];
-  checkSize(elements, nets, sweeps, shows, report);
+  checkSize(isWhole ? elements : [], nets, sweeps, shows, report);
   if (shows.length === 0 && !report.hasErrors) {
     const span = { from: source.length, to: source.length };
     report.warning(
@@ -83,11 +97,23 @@ function checkNetlist({ statements }: Netlist, source: string, report: Report): 
       "Nothing is shown, so a run keeps no trace; add a line such as `show out.v`.",
     );
   }
-  const plan = { sweeps, shows, draws: null, seek: null, reads: [], requirements: [] };
+  const plan = { sweeps, draws, seek, ...contract };
   return { title, knobs, lets, models, elements, nets, netPlaces, ...plan };
 }
 
-function titleOf(statements: readonly Statement[], report: Report): string {
+/** Tells what belongs to the circuit from what was made to check a block without an instance. */
+function ownOf(trials: readonly string[]): (named: { readonly name: string }) => boolean {
+  const tried = new Set(trials);
+  return ({ name }) => {
+    if (tried.size === 0) return true;
+    for (let dot = name.indexOf("."); dot !== -1; dot = name.indexOf(".", dot + 1)) {
+      if (tried.has(name.slice(0, dot + 1))) return false;
+    }
+    return true;
+  };
+}
+
+function titleOf(statements: readonly Flat[], report: Report): string {
   let title: string | null = null;
   for (const statement of statements) {
     if (statement.kind !== "title") continue;
@@ -98,9 +124,11 @@ function titleOf(statements: readonly Statement[], report: Report): string {
   return title ?? "";
 }
 
-function placesOf(names: Names): Map<string, Span> {
+function placesOf(names: Names, own: (named: { readonly name: string }) => boolean): Map<string, Span> {
   const places = new Map<string, Span>();
-  for (const net of names.namesOf(["net"])) if (net !== "ground") places.set(net, names.placeOf(net));
+  for (const net of names.namesOf(["net"])) {
+    if (net !== "ground" && own({ name: net })) places.set(net, names.placeOf(net));
+  }
   return places;
 }
 

@@ -12,6 +12,7 @@ import { quote, type Token } from "./token";
 export class Cursor {
   private at = 0;
   private failed = false;
+  private opened = false;
   /** Offsets of tokens that nothing may be put after: unary operators and the names of called functions. */
   readonly tight = new Set<number>();
 
@@ -47,9 +48,15 @@ export class Cursor {
     this.failed = false;
   }
 
+  /** Whether the statement left last ended in the opening brace of a block. */
+  get justOpened(): boolean {
+    return this.opened;
+  }
+
   /** Leaves a statement: jumps over its end. Says whether all of it could be read. */
   leave(): boolean {
     this.toEnd();
+    this.opened = this.token.text === "{";
     if (!this.done) this.at += 1;
     return !this.failed;
   }

@@ -1,5 +1,6 @@
 import { formatQuantity } from "@/lib/units/quantity";
 import type { Element, Model, ModelKind, NamedValue } from "./ast";
+import type { Flat } from "./expand";
 import { KINDS, LATER_PARAMETERS, MODEL_KINDS, type ParameterKind } from "./kinds";
 import type { Names } from "./names";
 import { nearest } from "./nearest";
@@ -14,7 +15,7 @@ type ModelStatement = Extract<Statement, { kind: "model" }>;
 
 /** The kind of every model whose kind is known; an unknown one is reported. */
 export function modelKinds(
-  statements: readonly Statement[],
+  statements: readonly Flat[],
   names: Names,
   report: Report,
 ): Map<string, ModelKind> {
@@ -47,7 +48,7 @@ export class ElementCheck {
     private readonly report: Report,
   ) {}
 
-  models(statements: readonly Statement[], kinds: ReadonlyMap<string, ModelKind>): Model[] {
+  models(statements: readonly Flat[], kinds: ReadonlyMap<string, ModelKind>): Model[] {
     return statements.flatMap((statement) => {
       if (statement.kind !== "model") return [];
       const kind = kinds.get(statement.name.text);

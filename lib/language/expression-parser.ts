@@ -1,7 +1,7 @@
 import type { Cursor } from "./cursor";
 import { MOST_DEPTH } from "./limits";
 import type { Span } from "./span";
-import type { BinaryOperator, Expression, UnaryOperator, Word } from "./syntax";
+import type { BinaryOperator, Binding, Expression, UnaryOperator, Word } from "./syntax";
 import { PRECEDENCE, quote } from "./token";
 
 const COMPARISON = 1;
@@ -117,9 +117,14 @@ export class ExpressionParser {
     cursor.tight.add(callee.from);
     cursor.take();
     const args: Expression[] = [];
+    const bindings: Binding[] = [];
     let height = 0;
     while (!cursor.isSymbol(")") && !cursor.atEnd) {
-      args.push(this.nested(() => this.expression()));
+      const name = cursor.token.kind === "word" && cursor.isSymbol("=", 1) ? cursor.takeWord() : null;
+      if (name !== null) cursor.take();
+      const value = this.nested(() => this.expression());
+      if (name === null) args.push(value);
+      else bindings.push({ name, value, from: name.from, to: value.to });
       height = Math.max(height, this.height);
       if (!cursor.acceptSymbol(",")) break;
     }
@@ -129,7 +134,7 @@ export class ExpressionParser {
       return { kind: "hole", from: callee.from, to: cursor.behind };
     }
     cursor.take();
-    return { kind: "call", callee, args, bindings: [], from: callee.from, to: cursor.behind };
+    return { kind: "call", callee, args, bindings, from: callee.from, to: cursor.behind };
   }
 
   private unclosed(from: number): void {

@@ -28,19 +28,3 @@ export const FUNCTION_NAMES: ReadonlySet<string> = new Set(Object.keys(FUNCTIONS
 export function isFunctionName(name: string): name is FunctionName {
   return FUNCTION_NAMES.has(name);
 }
-
-/** Reductions of the language that this server does not speak yet. */
-export const LATER_FUNCTIONS: ReadonlySet<string> = new Set([
-  "highest",
-  "lowest",
-  "mean",
-  "span",
-  "per_decade",
-  "per_unit",
-  "intercept",
-  "deviation",
-  "error_from",
-  "reach",
-  "decades_where",
-  "at",
-]);

@@ -1,6 +1,7 @@
 import { FUNCTION_NAMES } from "./functions";
 import { layOut } from "./layout";
 import { tokenize } from "./lexer";
+import { isReductionName } from "./reductions";
 import { Report } from "./report";
 import type { Span } from "./span";
 import { CLAUSE_WORDS, STATEMENT_WORDS, type Token } from "./token";
@@ -82,7 +83,7 @@ function classOfWord(token: Token, { statement, index, braces, previous, next }:
   if (before === ":") return "kind";
   if (before === ".") return "pin";
   if (braces > 0 && follows === "=") return "pin";
-  if (FUNCTION_NAMES.has(token.text) && follows === "(") return "operator";
+  if (follows === "(" && (FUNCTION_NAMES.has(token.text) || isReductionName(token.text))) return "operator";
   return isClause(token.text, statement, index, before) ? "keyword" : "name";
 }
 

@@ -4,9 +4,15 @@
 export const MOST_TEXT = 262_144;
 /** Brackets within brackets, and links in a chain such as a + b + c. */
 export const MOST_DEPTH = 256;
+/** Blocks within blocks. */
+export const MOST_BLOCK_DEPTH = 16;
+/** Words and values that the instances of blocks may unfold to. */
+export const MOST_UNFOLDED = 60_000;
 export const MOST_ELEMENTS = 2_000;
 /** Product of the lengths of all sweeps. */
 export const MOST_POINTS = 1_000_000;
+/** Operating points looked for at each setting. */
+export const MOST_BRANCHES = 32;
 /** Points × (traces + unknowns). */
 export const MOST_VALUES = 50_000_000;
 

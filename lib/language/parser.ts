@@ -1,12 +1,16 @@
+import { BlockParser } from "./block-parser";
+import { ContractParser } from "./contract-parser";
 import { Cursor } from "./cursor";
 import type { Diagnostic } from "./diagnostic";
 import { ExpressionParser } from "./expression-parser";
 import { layOut } from "./layout";
 import { tokenize } from "./lexer";
+import { Nesting } from "./nesting";
 import { PartParser } from "./part-parser";
+import { PlanParser } from "./plan-parser";
 import { Report } from "./report";
-import type { Netlist, Statement, StatementForm, SweepRange, Word } from "./syntax";
-import { LATER_STATEMENTS, quote, STATEMENT_WORDS, type Token } from "./token";
+import type { Netlist, StatementForm, Word } from "./syntax";
+import { quote, STATEMENT_WORDS, type Token } from "./token";
 
 /** What was read, and where no space may stand (see Cursor.tight), for the formatter. */
 export interface Parsed {
@@ -25,30 +29,38 @@ export function parse(text: string): { netlist: Netlist; diagnostics: Diagnostic
 export function parseTokens(tokens: readonly Token[], length: number, report: Report): Parsed {
   const cursor = new Cursor(layOut(tokens, length), report);
   const parser = new StatementParser(cursor);
-  const statements: Statement[] = [];
+  const nesting = new Nesting(report);
   while (!cursor.done) {
     cursor.begin();
-    const from = cursor.token.from;
-    const form = parser.statement(from);
-    const to = Math.max(cursor.behind, form.to);
+    const { from } = cursor.token;
+    const closes = nesting.isInside && cursor.acceptSymbol("}");
+    const form = closes ? null : parser.statement(from);
+    const to = Math.max(cursor.behind, form?.to ?? 0);
     if (!cursor.atEnd) {
       const message = `The statement is complete before ${quote(cursor.token.text)}; begin a new line there or remove it.`;
       cursor.fail("FRM4", cursor.token, message);
     }
     const end = cursor.token.from;
     const whole = cursor.leave();
-    statements.push({ ...form, from, to: whole ? to : end, whole });
+    if (form === null) nesting.close(to);
+    else nesting.add({ ...form, from, to: whole ? to : end, whole }, cursor.justOpened);
   }
-  return { netlist: { statements }, tight: cursor.tight };
+  return { netlist: { statements: nesting.finish() }, tight: cursor.tight };
 }
 
 class StatementParser {
   private readonly expressions: ExpressionParser;
   private readonly parts: PartParser;
+  private readonly plan: PlanParser;
+  private readonly blocks: BlockParser;
+  private readonly contract: ContractParser;
 
   constructor(private readonly cursor: Cursor) {
     this.expressions = new ExpressionParser(cursor);
     this.parts = new PartParser(cursor, this.expressions);
+    this.plan = new PlanParser(cursor, this.expressions);
+    this.blocks = new BlockParser(cursor, this.expressions);
+    this.contract = new ContractParser(cursor, this.expressions);
   }
 
   statement(from: number): StatementForm {
@@ -58,7 +70,6 @@ class StatementParser {
     if (first.kind === "word") {
       if (cursor.isSymbol("--", 1)) return this.parts.path(span);
       if (cursor.isSymbol(":", 1)) return this.parts.device(span);
-      if (LATER_STATEMENTS.has(first.text)) return this.later(span);
       if (STATEMENT_WORDS.has(first.text)) return this.known(cursor.take().text, span);
     }
     cursor.fail("FRM1", first, `No statement begins with ${quote(first.text)}; ${meant(cursor)}.`);
@@ -71,10 +82,22 @@ class StatementParser {
         return this.title(span);
       case "model":
         return this.parts.model(span);
+      case "use":
+        return this.blocks.use(span);
+      case "block":
+        return this.blocks.head(span);
       case "sweep":
-        return this.sweep(span);
+        return this.plan.sweep(span);
+      case "draws":
+        return this.plan.draws(span);
+      case "seek":
+        return this.plan.seek(span);
       case "show":
         return this.show(span);
+      case "read":
+        return this.contract.read(span);
+      case "require":
+        return this.contract.require(span);
       default:
         return this.value(word === "let" ? "let" : "knob", span);
     }
@@ -106,37 +129,6 @@ class StatementParser {
     return { kind, name, value, tolerance, range, ...span };
   }
 
-  private sweep(span: { from: number; to: number }): StatementForm {
-    const knob = this.cursor.wantWord("The name of a knob after `sweep`");
-    return { kind: "sweep", knob, range: this.range(), ...span };
-  }
-
-  private range(): SweepRange {
-    const { cursor, expressions } = this;
-    if (cursor.acceptWord("over")) {
-      const values = [expressions.sum()];
-      while (cursor.acceptSymbol(",")) values.push(expressions.sum());
-      return { kind: "list", values };
-    }
-    if (!cursor.acceptWord("from")) {
-      cursor.failHere("FRM2", "`from … to …` or `over …` is wanted after the knob");
-      return { kind: "list", values: [] };
-    }
-    const start = expressions.sum();
-    if (!cursor.acceptWord("to")) cursor.failHere("FRM2", "`to` and the end of the range are wanted here");
-    const stop = expressions.sum();
-    const spacings = "`, 20 per decade`, `, 51 points` or `, step 1 V`";
-    if (!cursor.acceptSymbol(",")) cursor.failHere("FRM2", `The spacing is wanted here: ${spacings}`);
-    if (cursor.acceptWord("step"))
-      return { kind: "range", start, stop, spacing: "step", amount: expressions.sum() };
-    const amount = expressions.sum();
-    if (cursor.acceptWord("points")) return { kind: "range", start, stop, spacing: "points", amount };
-    if (!cursor.acceptWord("per") || !cursor.acceptWord("decade")) {
-      cursor.failHere("FRM2", `The spacing reads ${spacings}`);
-    }
-    return { kind: "range", start, stop, spacing: "per decade", amount };
-  }
-
   private show(span: { from: number; to: number }): StatementForm {
     const { cursor } = this;
     const items = [];
@@ -149,23 +141,6 @@ class StatementParser {
       items.push({ name, value, from, to: value.to });
     } while (cursor.acceptSymbol(","));
     return { kind: "show", items, ...span };
-  }
-
-  /** A statement of the language that this server does not speak yet: named, then passed over whole. */
-  private later(span: { from: number; to: number }): StatementForm {
-    const { cursor } = this;
-    const word = cursor.token;
-    const next = cursor.peek(1);
-    const declares =
-      (word.text === "block" || word.text === "read") && next.kind === "word"
-        ? { text: next.text, from: next.from, to: next.to }
-        : null;
-    cursor.fail(
-      "FRM6",
-      word,
-      `${quote(word.text)} is not yet part of the language this server speaks; take it out.`,
-    );
-    return { kind: "broken", declares, ...span };
   }
 }
 

@@ -1,13 +1,14 @@
 import type { Show } from "./ast";
+import type { Flat } from "./expand";
 import { formatExpression } from "./format";
 import type { Report } from "./report";
-import type { Statement, Word } from "./syntax";
+import type { Word } from "./syntax";
 import { quote } from "./token";
 import type { Typing } from "./typing";
 
 /** Checks the traces to keep; each has a name of its own, given or spelled by its expression. */
 export function checkShows(
-  statements: readonly Statement[],
+  statements: readonly Flat[],
   source: string,
   typing: Typing,
   report: Report,

@@ -1,7 +1,7 @@
 import { AMPERE, VOLT, WATT } from "@/lib/units/dimension";
 import type { Typed } from "./ast";
 import { KINDS } from "./kinds";
-import { Names } from "./names";
+import { Names, ownName } from "./names";
 import type { Report } from "./report";
 import type { Expression, Word } from "./syntax";
 import { quote } from "./token";
@@ -33,6 +33,13 @@ export function resolveSignal(
     report.error("NAM7", expression, message, fix);
     return null;
   };
+  if (meaning === "instance") {
+    const start = `The instance ${quote(ownName(head))} has nothing called ${quote(second.text)}`;
+    const prefix = `${head.text}.`;
+    const search = () => names.near(second.text, names.namesInside(prefix));
+    report.propose("NAM7", second, start, search, "name a net, element or value of its block");
+    return null;
+  }
   if (meaning !== "net" && meaning !== "element") {
     return wrong(
       `${quote(head.text)} is ${Names.describe(meaning)} and has no signals; write ${quote(head.text)} alone.`,

@@ -2,6 +2,7 @@ import { KELVIN, PURE, sameDimension } from "@/lib/units/dimension";
 import { unitOf } from "@/lib/units/quantity";
 import type { Agreement } from "./agreement";
 import type { Knob, Sweep } from "./ast";
+import type { Flat } from "./expand";
 import { count, MOST_POINTS } from "./limits";
 import { Names } from "./names";
 import type { Quantities, Want } from "./quantities";
@@ -31,7 +32,7 @@ export class SweepCheck {
     this.ranges = new Map(knobs.map((knob) => [knob.name, knob.range]));
   }
 
-  sweeps(statements: readonly Statement[]): Sweep[] {
+  sweeps(statements: readonly Flat[]): Sweep[] {
     const sweeps: Sweep[] = [];
     const swept = new Set<string>();
     const lets = new Map(

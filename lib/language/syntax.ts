@@ -5,6 +5,8 @@ import type { Span } from "./span";
 /** A word of the text with its place. */
 export interface Word extends Span {
   readonly text: string;
+  /** Where blocks were taken apart: what stands before its own name in `text`, such as `S.`. */
+  readonly prefix?: string;
 }
 
 export type UnaryOperator = "-" | "+";

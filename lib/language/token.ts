@@ -25,12 +25,14 @@ export const STATEMENT_WORDS: ReadonlySet<string> = new Set([
   "require",
 ]);
 
-/** Statements that the language has but this server does not speak yet. */
-export const LATER_STATEMENTS: ReadonlySet<string> = new Set([
+/** Statements that stand in a file and not in a block. */
+export const FILE_STATEMENTS: ReadonlySet<string> = new Set([
+  "title",
   "use",
-  "block",
+  "sweep",
   "draws",
   "seek",
+  "show",
   "read",
   "require",
 ]);

@@ -1,29 +1,19 @@
-import { BOLTZMANN, ELEMENTARY_CHARGE } from "@/lib/units/constants";
-import {
-  AMPERE,
-  type Dimension,
-  divide,
-  KELVIN,
-  multiply,
-  PURE,
-  power,
-  sameDimension,
-  VOLT,
-} from "@/lib/units/dimension";
+import { type Dimension, divide, multiply, PURE, power, sameDimension } from "@/lib/units/dimension";
 import { toCoherent } from "@/lib/units/unit";
 import type { Agreement } from "./agreement";
-import type { Typed } from "./ast";
-import { FUNCTIONS, isFunctionName, LATER_FUNCTIONS } from "./functions";
-import { Names } from "./names";
+import type { ReductionName, Typed } from "./ast";
+import type { Code } from "./catalogue";
+import { constantNamed } from "./constant-names";
+import { FUNCTIONS, isFunctionName } from "./functions";
+import { type Meaning, Names, ownName } from "./names";
 import { nearest } from "./nearest";
+import { isReductionName, REDUCTIONS } from "./reductions";
 import type { Report } from "./report";
 import { type PinsOf, resolveSignal } from "./signals";
+import type { Span } from "./span";
 import type { Expression, Word } from "./syntax";
 import { quote } from "./token";
 import { describeDimension, unitOfLiteral } from "./unit-check";
-
-const SECOND: Dimension = [0, 0, 1, 0, 0];
-const COULOMB = multiply(AMPERE, SECOND);
 
 /** A checked expression; `point` says that it is a temperature on the scale, not a difference, as `25 °C` is. */
 export interface Judged {
@@ -35,6 +25,16 @@ export interface Judged {
 export interface Place {
   readonly signals: boolean;
   readonly wanted: string | null;
+  /** Within a reading or requirement: what traces, readings and reductions mean. */
+  readonly contract?: ContractPlace;
+}
+
+export interface ContractPlace {
+  /** A trace or reading; null where it cannot be used, undefined where the name is neither. */
+  named(word: Word): Judged | null | undefined;
+  /** What a signal becomes. */
+  kept(signal: Typed, span: Span): Typed;
+  reduce(call: Extract<Expression, { kind: "call" }>, reduction: ReductionName): Judged | null;
 }
 
 /** What a knob or let is known to be. */
@@ -59,9 +59,7 @@ export class Typing {
       case "number":
         return this.number(expression, place);
       case "name":
-        return expression.path.length === 1
-          ? this.name(expression.path[0]!, place)
-          : plain(resolveSignal(expression, place.signals, this.names, this.pinsOf, this.report));
+        return this.path(expression, place);
       case "unary":
         return this.unary(expression, place);
       case "binary":
@@ -85,22 +83,24 @@ export class Typing {
     };
   }
 
+  private path(expression: Extract<Expression, { kind: "name" }>, place: Place): Judged | null {
+    const path = this.names.settle(expression.path);
+    if (path.length === 1) return this.name(path[0]!, place);
+    const settled = { ...expression, path };
+    const signal = resolveSignal(settled, place.signals, this.names, this.pinsOf, this.report);
+    return plain(signal === null ? null : (place.contract?.kept(signal, expression) ?? signal));
+  }
+
   private name(word: Word, place: Place): Judged | null {
-    switch (word.text) {
-      case "pi":
-        return constant(Math.PI, PURE);
-      case "k_B":
-        return constant(BOLTZMANN, divide(multiply(COULOMB, VOLT), KELVIN));
-      case "q_e":
-        return constant(ELEMENTARY_CHARGE, COULOMB);
-      case "V_T":
-        return plain({ op: "thermal voltage", dimension: VOLT });
-    }
+    const known = constantNamed(word.text);
+    if (known !== null) return plain(known);
+    const named = place.contract?.named(word);
+    if (named !== undefined) return named;
     const meaning = this.names.meaningOf(word.text);
     if (meaning === "knob" || meaning === "let") {
-      const known = this.known.get(word.text);
-      if (known === undefined) return null;
-      return { typed: { op: meaning, name: word.text, dimension: known.dimension }, point: known.point };
+      const value = this.known.get(word.text);
+      if (value === undefined) return null;
+      return { typed: { op: meaning, name: word.text, dimension: value.dimension }, point: value.point };
     }
     if (meaning === null)
       this.names.unknown(word, place.signals ? ["knob", "let", "net", "element"] : ["knob", "let"]);
@@ -108,13 +108,14 @@ export class Typing {
     return null;
   }
 
-  private misused(word: Word, meaning: "net" | "element" | "model", place: Place): void {
-    const what = `${quote(word.text)} is ${Names.describe(meaning)} and has no value of its own`;
-    if (meaning === "model" || !place.signals) {
+  private misused(word: Word, meaning: Exclude<Meaning, "knob" | "let" | "unread">, place: Place): void {
+    const own = ownName(word);
+    const what = `${quote(own)} is ${Names.describe(meaning)} and has no value of its own`;
+    if ((meaning !== "net" && meaning !== "element") || !place.signals) {
       this.report.error("NAM4", word, `${what}; a knob, a let or a number is wanted here.`);
       return;
     }
-    const text = `${word.text}.${meaning === "net" ? "v" : "i"}`;
+    const text = `${own}.${meaning === "net" ? "v" : "i"}`;
     const proposal = meaning === "net" ? `its voltage is ${quote(text)}` : `its current is ${quote(text)}`;
     const fix = { title: `Change to ${text}`, from: word.from, to: word.to, text };
     this.report.error("NAM4", word, `${what}; ${proposal}.`, fix);
@@ -193,6 +194,12 @@ export class Typing {
 
   private call(expression: Extract<Expression, { kind: "call" }>, place: Place): Judged | null {
     const { callee, args } = expression;
+    if (isReductionName(callee.text)) {
+      if (place.contract !== undefined) return place.contract.reduce(expression, callee.text);
+      const message = `${quote(callee.text)} goes along a whole sweep; it can stand in ${quote("read")} and ${quote("require")} only.`;
+      this.report.error("CON10", callee, message);
+      return null;
+    }
     if (!isFunctionName(callee.text)) {
       this.unknownFunction(callee);
       return null;
@@ -236,13 +243,16 @@ export class Typing {
     return alike ? dimension : null;
   }
 
-  /** The first value of `if`: two values compared. */
+  /** The first value of `if`. */
   private condition(expression: Expression, place: Place): Judged | null {
+    const message = "`if` wants a comparison first, such as `if(out.v > 0 V, a, b)`.";
+    return this.comparison(expression, place, "FRM8", message);
+  }
+
+  /** Two values compared; `code` and `message` answer anything else. */
+  comparison(expression: Expression, place: Place, code: Code, message: string): Judged | null {
     if (expression.kind !== "binary" || !["<=", ">=", "<", ">"].includes(expression.operator)) {
-      if (expression.kind !== "hole") {
-        const message = "`if` wants a comparison first, such as `if(out.v > 0 V, a, b)`.";
-        this.report.error("FRM8", expression, message);
-      }
+      if (expression.kind !== "hole") this.report.error(code, expression, message);
       return null;
     }
     const left = this.judge(expression.left, place);
@@ -260,12 +270,7 @@ export class Typing {
   }
 
   private unknownFunction(callee: Word): void {
-    if (LATER_FUNCTIONS.has(callee.text)) {
-      const message = `${quote(callee.text)} is not yet part of the language this server speaks; take it out.`;
-      this.report.error("FRM6", callee, message);
-      return;
-    }
-    const search = () => nearest(callee.text, Object.keys(FUNCTIONS));
+    const search = () => nearest(callee.text, [...Object.keys(FUNCTIONS), ...Object.keys(REDUCTIONS)]);
     const all = "the functions are exp, ln, log10, sqrt, abs, min, max, tanh, atan and if";
     this.report.propose("NAM10", callee, `${quote(callee.text)} is no function`, search, all);
   }

@@ -1,6 +1,7 @@
 import type { ElementKind, ModelKind } from "./ast";
+import type { Flat } from "./expand";
 import { KINDS, LATER_KINDS, MODEL_KINDS } from "./kinds";
-import { Names } from "./names";
+import { Names, ownName } from "./names";
 import type { Report } from "./report";
 import type { Span } from "./span";
 import type { Expression, Setting, Statement, ToleranceSyntax, Word } from "./syntax";
@@ -33,10 +34,12 @@ export class Wirer {
     private readonly report: Report,
   ) {}
 
-  wire(statements: readonly Statement[]): Wired[] {
+  wire(statements: readonly Flat[]): Wired[] {
     for (const statement of statements) {
       if (statement.kind === "path") this.path(statement);
       else if (statement.kind === "device") this.device(statement);
+      else if (statement.kind === "instance")
+        for (const { net } of statement.ports) this.names.mentionNet(net);
     }
     return this.wired;
   }
@@ -180,14 +183,23 @@ export class Wirer {
     if (LATER_KINDS.has(word.text)) {
       const message = `${quote(word.text)} is not yet part of the language this server speaks; take it out.`;
       this.report.error("FRM6", word, message);
+    } else if (meaning === "block") {
+      const message = `${quote(ownName(word))} is a block, and its nets go by name; write it as \`X : ${ownName(word)} { net = …, … }\`.`;
+      this.report.error("FRM11", word, message);
     } else if (meaning !== null) {
-      const message = `${quote(word.text)} is ${Names.describe(meaning)}, and a kind or model is wanted after \`:\`.`;
+      const message = `${quote(ownName(word))} is ${Names.describe(meaning)}, and a kind or model is wanted after \`:\`.`;
       this.report.error("NAM5", word, message);
     } else {
-      const search = () => this.names.near(word.text, [...SPOKEN, ...this.models.keys()]);
+      const search = () => this.near(word);
       const all = `the kinds are ${SPOKEN.join(", ")}`;
-      this.report.propose("NAM5", word, `No kind or model is called ${quote(word.text)}`, search, all);
+      this.report.propose("NAM5", word, `No kind or model is called ${quote(ownName(word))}`, search, all);
     }
+  }
+
+  /** The kind, model or block that was probably meant. */
+  private near(word: Word): string | null {
+    const seen = this.names.namesSeen(["model", "block"], word.prefix ?? "");
+    return this.names.near(ownName(word), [...SPOKEN, ...seen]);
   }
 
   /** `diode junction` on a path: the model named where other kinds have their value. */

@@ -5,6 +5,8 @@ import { check } from "@/lib/language/checker";
 import type { Diagnostic } from "@/lib/language/diagnostic";
 import { MOST_ELEMENTS, MOST_TEXT } from "@/lib/language/limits";
 import { WIRING_PROBLEMS } from "@/tests/circuit/problems";
+import { BLOCK_PROBLEMS } from "./block-problems";
+import { CONTRACT_PROBLEMS } from "./contract-problems";
 import { LANGUAGE_PROBLEMS, type Problem } from "./problems";
 
 function unmark(marked: string): { text: string; from: number; to: number } {
@@ -29,7 +31,7 @@ function expectProblem(problem: Problem, diagnose: (text: string) => Diagnostic[
 }
 
 describe("each problem of a text is found once, at its place, in one sentence", () => {
-  test.each(LANGUAGE_PROBLEMS)("$code: $text", (problem) => {
+  test.each([...LANGUAGE_PROBLEMS, ...BLOCK_PROBLEMS, ...CONTRACT_PROBLEMS])("$code: $text", (problem) => {
     expectProblem(problem, (text) => check(text).diagnostics);
   });
   test.each(WIRING_PROBLEMS)("$code: $text", (problem) => {
@@ -74,7 +76,11 @@ describe("limits", () => {
 });
 
 test("every code of the catalogue is produced by a test, and no test knows another", () => {
-  const tested = new Set([...LANGUAGE_PROBLEMS, ...WIRING_PROBLEMS].map((problem) => problem.code));
+  const tested = new Set(
+    [...LANGUAGE_PROBLEMS, ...BLOCK_PROBLEMS, ...CONTRACT_PROBLEMS, ...WIRING_PROBLEMS].map(
+      (problem) => problem.code,
+    ),
+  );
   for (const code of ["CAP1", "CAP3", "CAP5", "CAP6"]) tested.add(code);
   expect([...tested].sort()).toEqual(Object.keys(CATALOGUE).sort());
 });
