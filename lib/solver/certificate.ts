@@ -23,6 +23,8 @@ const WIDENED = 1 + 2 ** -32;
 const SPARE = 4;
 /** The smallest weight, as a part of what the unit of the unknown suggests. */
 const LEAST_WEIGHT = 1e-6;
+/** A per V, for a branch that carries nothing. */
+const LEAST_CURRENT_WEIGHT = 1e-30;
 
 /**
  * Proves that a true solution lies within r volts of the one at hand (radii polynomial, from the Newton–Kantorovich theorem; Rump,
@@ -177,7 +179,7 @@ export class Certificate {
       const needed = (error[i]! / radius + left[i]! + change[i]!) * WIDENED;
       if (needed < weights[i]!) continue;
       if (!(needed < Number.POSITIVE_INFINITY)) return FAR;
-      weights[i] = SPARE * needed;
+      weights[i] = Math.max(SPARE * needed, LEAST_CURRENT_WEIGHT);
       fits = false;
     }
     if (!fits) inverse.reweigh();

@@ -1,0 +1,38 @@
+import { describe, expect, test } from "vitest";
+import { HOW_MANY, readAnswers } from "./answers";
+import { quantile, scoreOf } from "./measure";
+
+/** The part of the set that every test run solves; `npx tsx tests/random/whole.ts` solves the whole. */
+const PART = 150;
+
+describe("random circuits from a cold start", () => {
+  // Reference: the same equations at 50 digits, written anew in tests/reference/random-circuits.py.
+  const answers = readAnswers();
+  const scores = answers.slice(0, PART).map((one, k) => scoreOf(k + 1, one));
+
+  test("the set is whole", () => {
+    expect(answers).toHaveLength(HOW_MANY);
+  });
+
+  test("are all solved and all proved", () => {
+    const left = scores.filter(({ outcome, bound }) => outcome.kind !== "converged" || !(bound > 0));
+    expect(left.map(({ seed }) => seed)).toEqual([]);
+  });
+
+  test("stand within their proved bounds of the 50-digit answers", () => {
+    const violations = scores.filter(({ error, bound }) => !(error <= bound));
+    expect(violations.map(({ seed, error, bound }) => ({ seed, error, bound }))).toEqual([]);
+    expect(
+      quantile(
+        scores.map(({ bound }) => bound),
+        0.5,
+      ),
+    ).toBeLessThanOrEqual(10e-12);
+  });
+
+  test("take 15 steps at the median and 30 at the 95th percentile, at most", () => {
+    const iterations = scores.map(({ outcome }) => outcome.iterations);
+    expect(quantile(iterations, 0.5)).toBeLessThanOrEqual(15);
+    expect(quantile(iterations, 0.95)).toBeLessThanOrEqual(30);
+  });
+});
