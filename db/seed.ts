@@ -4,11 +4,12 @@ import { and, eq } from "drizzle-orm";
 import { Client } from "pg";
 import { hashPassword } from "@/lib/auth/password";
 import { demoEnv } from "@/lib/env";
-import type { Actor, Role } from "@/lib/permissions/actor";
+import type { Actor } from "@/lib/permissions/actor";
 import { closeQueue } from "@/lib/queue/producer";
 import { createNetlist } from "@/lib/services/netlists/create-netlist";
 import { startRun } from "@/lib/services/runs/start-run";
 import { closeDatabase, database } from "./client";
+import { DEMO_PEOPLE } from "./demo-people";
 import { membership } from "./schema/membership";
 import { netlist } from "./schema/netlist";
 import { revision } from "./schema/revision";
@@ -21,14 +22,6 @@ const LOCK = 7_396_105;
 
 /** An invented maker of colour-measuring and flow instruments. */
 const BENCH = { slug: "north-bench", name: "Northbench Instruments (invented)" } as const;
-
-/** Its invented people, one of each role. */
-export const DEMO_PEOPLE = [
-  { email: "vera.viewer@northbench.example", name: "Vera Viewer", role: "viewer" },
-  { email: "erik.engineer@northbench.example", name: "Erik Engineer", role: "engineer" },
-  { email: "rosa.reviewer@northbench.example", name: "Rosa Reviewer", role: "reviewer" },
-  { email: "adam.admin@northbench.example", name: "Adam Admin", role: "admin" },
-] as const satisfies readonly { email: string; name: string; role: Role }[];
 
 /**
  * Makes the demo in the database at `url`: a workspace, four people and every netlist of `examples`, each with a queued run. Safe to

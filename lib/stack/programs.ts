@@ -20,12 +20,15 @@ export interface Running {
 /** Starts the web service; ready when it answers and reaches the database. */
 export async function startWeb(running: Running): Promise<Service> {
   const { host, port } = running;
-  const mode = running.development ? "dev" : "start";
   const service = launch({
     name: "web service",
     program: process.execPath,
-    args: ["node_modules/next/dist/bin/next", mode, "-H", host, "-p", String(port)],
+    args: running.development
+      ? ["node_modules/next/dist/bin/next", "dev", "-H", host, "-p", String(port)]
+      : ["lib/stack/web.mjs"],
     env: {
+      HOST: host,
+      PORT: String(port),
       NODE_ENV: running.development ? "development" : "production",
       NEXT_TELEMETRY_DISABLED: "1",
       SWEEPWRIGHT_DIST: running.outputs.pages,

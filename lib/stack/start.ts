@@ -62,11 +62,12 @@ async function start(): Promise<void> {
   console.log(`Starting the database in ${folders.data}.`);
   const database = await openDatabase(folders, told);
   keepers.push(database.keeper);
-  const password = await prepare(database, folders);
 
   requireSpace(process.cwd(), BUILD_SPACE);
   if (development) await buildWorker(DEMO_OUTPUTS.worker);
   else await buildAll(DEMO_OUTPUTS);
+  // After the build, so that the demo's runs do not wait a minute for their worker.
+  const password = await prepare(database, folders);
 
   const running: Running = {
     databaseUrl: database.url,

@@ -1,4 +1,4 @@
-import { DEMO_PEOPLE } from "@/db/seed";
+import { DEMO_PEOPLE } from "@/db/demo-people";
 import type { Folders } from "./folders";
 
 /** What is printed once everything runs. */

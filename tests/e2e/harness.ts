@@ -2,7 +2,7 @@ import { mkdirSync } from "node:fs";
 import { AxeBuilder } from "@axe-core/playwright";
 import { type Browser, type BrowserContextOptions, chromium, type Page } from "playwright-core";
 import { expect } from "vitest";
-import { DEMO_PEOPLE } from "@/db/seed";
+import { DEMO_PEOPLE } from "@/db/demo-people";
 
 /** Debian's browser; CHROME_PATH names another one. */
 const BROWSER = process.env.CHROME_PATH || "/usr/bin/chromium";

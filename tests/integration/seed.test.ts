@@ -4,12 +4,13 @@ import { join } from "node:path";
 import { eq } from "drizzle-orm";
 import { afterAll, afterEach, beforeAll, beforeEach, describe, expect, it, vi } from "vitest";
 import { database } from "@/db/client";
+import { DEMO_PEOPLE } from "@/db/demo-people";
 import { DIODE_TEXT } from "@/db/factories";
 import { netlist } from "@/db/schema/netlist";
 import { run } from "@/db/schema/run";
 import { user } from "@/db/schema/user";
 import { workspace } from "@/db/schema/workspace";
-import { DEMO_PEOPLE, seed } from "@/db/seed";
+import { seed } from "@/db/seed";
 import { passwordMatches } from "@/lib/auth/password";
 import { ownDatabase } from "./own-database";
 
