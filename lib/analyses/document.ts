@@ -1,12 +1,16 @@
+import type { Design } from "@/lib/language/ast";
 import type { Diagnostic } from "@/lib/language/diagnostic";
 import { lineStarts, placeOf } from "@/lib/language/span";
 import { OUTCOMES, RUNGS } from "@/lib/solver/outcome";
+import { judge } from "./judge";
 import type { Plan } from "./plan";
 import type { Failure, RunDocument } from "./result";
 
 /** What a run has so far. Columns have one value a point of the plan, NaN where nothing is known yet. */
 export interface RunMatter {
   readonly plan: Plan;
+  /** What the text means, for its contract; null where it can no longer be read. */
+  readonly design: Design | null;
   /** The netlist, for the lines and columns of its diagnostics. */
   readonly text: string;
   /** One column a trace, in the order of the plan. */
@@ -22,18 +26,19 @@ export interface RunMatter {
 
 /**
  * The run document of what is known: JSON without NaN, null where a point is not solved. A netlist without requirements breaks
- * none, so its verdict is "holds" as soon as one point is solved and "no data" before; draws are not made yet, so there is one.
+ * none, so its verdict is "holds" as soon as one point is solved and "no data" before.
  */
 export function toDocument(matter: RunMatter): RunDocument {
   const { plan, text, outcome } = matter;
   const solved = OUTCOMES.indexOf("converged");
   const starts = lineStarts(text);
+  const judgement = matter.design === null ? null : judge({ design: matter.design, plan }, matter);
   return {
     format: "sweepwright-run/1",
     title: plan.title,
-    verdict: outcome.includes(solved) ? "holds" : "no data",
+    verdict: judgement?.verdict ?? (outcome.includes(solved) ? "holds" : "no data"),
     axes: plan.axes,
-    draws: 1,
+    draws: plan.draws,
     traces: plan.traces.map(({ name, unit }, k) => ({
       name,
       unit,
@@ -45,8 +50,8 @@ export function toDocument(matter: RunMatter): RunDocument {
       iterations: Array.from(matter.iterations, (count) => (Number.isNaN(count) ? 0 : count)),
       rung: Array.from(matter.rung, (index) => RUNGS[index] ?? null),
     },
-    readings: [],
-    requirements: [],
+    readings: judgement?.readings ?? [],
+    requirements: judgement?.requirements ?? [],
     diagnostics: matter.diagnostics.map((one) => ({ ...one, ...placeOf(starts, one.from) })),
     failures: [...matter.failures].sort((a, b) => a.point - b.point),
   };

@@ -6,8 +6,10 @@ import type { AxisDocument } from "./result";
 /** What a run will compute: plain JSON, stored with the run. A netlist without a sweep has no axis and one point. */
 export interface Plan {
   readonly title: string;
-  /** The first sweep first; points are numbered with the first axis fastest. */
+  /** The first sweep first; points are numbered with the first axis fastest, then the outer axes, then draws. */
   readonly axes: readonly AxisDocument[];
+  /** Random draws of the tolerances; with the nominal one, draw 0, there is one more. */
+  readonly draws: number;
   readonly points: number;
   readonly traces: readonly { readonly name: string; readonly unit: string }[];
   /** Net voltages (`out.v`), then branch currents (`V1.i`, `A1.out.i`), in the order of the circuit. */
@@ -18,10 +20,12 @@ export function planOf(design: Design, circuit: Circuit): Plan {
   const axes = design.sweeps.map(({ knob, dimension, scale, values }) => {
     return { knob, unit: unitOf(dimension), scale, values };
   });
+  const draws = design.draws?.count ?? 0;
   return {
     title: design.title,
     axes,
-    points: axes.reduce((product, axis) => product * axis.values.length, 1),
+    draws,
+    points: axes.reduce((product, axis) => product * axis.values.length, draws + 1),
     traces: design.shows.map(({ name, value }) => ({ name, unit: unitOf(value.dimension) })),
     unknowns: circuit.unknowns,
   };
@@ -35,4 +39,9 @@ export function placeOnAxes(plan: Plan, point: number): number[] {
     rest = (rest - place) / values.length;
     return place;
   });
+}
+
+/** The draw of a flat point; 0 is nominal. */
+export function drawOf({ points, draws }: Plan, point: number): number {
+  return Math.floor(point / (points / (draws + 1)));
 }

@@ -1,5 +1,6 @@
 import type { Diagnostic } from "@/lib/language/diagnostic";
 import type { OutcomeKind, Rung } from "@/lib/solver/outcome";
+import type { Yield } from "./yield";
 
 /** One axis of a run: the first sweep first. `values` in coherent SI units (temperature in K). */
 export interface AxisDocument {
@@ -12,8 +13,33 @@ export interface AxisDocument {
 export interface TraceDocument {
   readonly name: string;
   readonly unit: string;
-  /** Flat, the first axis fastest; null where unsolved. */
+  /** Flat, the first axis fastest, then the outer axes, then draws; null where unsolved. */
   readonly values: readonly (number | null)[];
+}
+
+export type Verdict = "holds" | "broken" | "no data";
+
+/** A reading: one value a sweep of the first knob (then the outer axes, then draws), or one a point where it is a trace itself. */
+export interface ReadingDocument {
+  readonly name: string;
+  readonly unit: string;
+  readonly per: "sweep" | "point";
+  readonly values: readonly (number | null)[];
+}
+
+export interface RequirementDocument {
+  readonly label: string;
+  readonly verdict: Verdict;
+  /** Distance to what would break it, in `unit`, below 0 where it is broken; null where nothing is known. */
+  readonly margin: number | null;
+  readonly unit: string;
+  /** Where the margin was found. With a share of the draws, the draw that decides the share. */
+  readonly worst: {
+    readonly draw: number;
+    readonly at: readonly { readonly knob: string; readonly unit: string; readonly value: number }[];
+  } | null;
+  /** The random draws in which it holds, where there are any. */
+  readonly yield?: Yield;
 }
 
 /** A failed point with its reason, for people. */
@@ -27,8 +53,9 @@ export interface Failure {
 export interface RunDocument {
   readonly format: "sweepwright-run/1";
   readonly title: string;
-  readonly verdict: "holds" | "broken" | "no data";
+  readonly verdict: Verdict;
   readonly axes: readonly AxisDocument[];
+  /** Random draws of the tolerances; draw 0, nominal, comes before them. */
   readonly draws: number;
   readonly traces: readonly TraceDocument[];
   readonly points: {
@@ -38,8 +65,8 @@ export interface RunDocument {
     readonly iterations: readonly number[];
     readonly rung: readonly (Rung | null)[];
   };
-  readonly readings: readonly { name: string; unit: string; values: (number | null)[] }[];
-  readonly requirements: readonly never[];
+  readonly readings: readonly ReadingDocument[];
+  readonly requirements: readonly RequirementDocument[];
   readonly diagnostics: readonly (Diagnostic & { readonly line: number; readonly column: number })[];
   readonly failures: readonly Failure[];
 }

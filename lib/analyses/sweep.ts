@@ -3,7 +3,8 @@ import { evaluate, type Scope } from "@/lib/language/evaluate";
 import { Ladder } from "@/lib/solver/ladder";
 import { OUTCOMES, type Outcome, RUNGS } from "@/lib/solver/outcome";
 import type { Job } from "./compile";
-import { placeOnAxes } from "./plan";
+import { Draws } from "./draws";
+import { drawOf, placeOnAxes } from "./plan";
 import { Predictor } from "./predictor";
 import type { Failure, ShardResult } from "./result";
 import { strandAt } from "./strands";
@@ -24,6 +25,8 @@ export function solveRange(
 ): ShardResult {
   const { design, circuit, plan } = job;
   const system = new System(design, circuit);
+  const draws = new Draws(design);
+  let draw = 0;
   turnTo(system, job, 0);
   const ladder = new Ladder(system);
   const predictor = new Predictor(system.state);
@@ -33,6 +36,10 @@ export function solveRange(
     ladder.reset();
     predictor.reset();
     turnTo(system, job, strand.from);
+    if (drawOf(plan, strand.from) !== draw) {
+      draw = drawOf(plan, strand.from);
+      system.draw(draws.at(draw));
+    }
     for (let point = strand.from; point < Math.min(strand.to, to); point++) {
       turnFirst(system, job, point);
       const outcome = ladder.solve(predictor.predict());

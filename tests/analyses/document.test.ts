@@ -11,9 +11,9 @@ const text = readFileSync("examples/reversed-input.swn", "utf8").replace(
 
 function matterOf(source: string): RunMatter {
   const { job, diagnostics } = compile(source);
-  const { plan } = job!;
+  const { design, plan } = job!;
   const { traces, outcome, iterations, rung, bound, failures } = solveRange(job!, 0, plan.points);
-  return { plan, text: source, traces, outcome, iterations, rung, bound, failures, diagnostics };
+  return { design, plan, text: source, traces, outcome, iterations, rung, bound, failures, diagnostics };
 }
 
 describe("the run document", () => {

@@ -13,6 +13,7 @@ function planWith(lengths: readonly number[]): Plan {
   return {
     title: "",
     axes,
+    draws: 0,
     points: lengths.reduce((product, length) => product * length, 1),
     traces: [],
     unknowns: [],

@@ -11,7 +11,7 @@ const DOCUMENT: RunDocument = {
     { knob: "V_in", unit: "V", scale: "list", values: [-0.5, 0.1] },
     { knob: "temperature", unit: "K", scale: "list", values: [283.15, 298.15] },
   ],
-  draws: 1,
+  draws: 0,
   traces: [
     { name: 'a "quoted", one', unit: "V", values: [null, 0.1 + 0.2, 1e-20, null] },
     { name: "=ratio", unit: "1", values: [null, 1, 2, null] },

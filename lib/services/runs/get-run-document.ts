@@ -49,7 +49,9 @@ export async function getRunDocument(
       .orderBy(asc(shard.index)),
   ]);
   const column = (name: string) => columns.get(name) ?? new Float64Array(asked.points).fill(Number.NaN);
+  const { job, diagnostics } = compile(text);
   const document = toDocument({
+    design: job?.design ?? null,
     plan: { ...plan, title: asked.title },
     text,
     traces: traces.map(column),
@@ -58,7 +60,7 @@ export async function getRunDocument(
     rung: column("rung"),
     bound: column("bound"),
     failures: shards.flatMap(({ failures }) => failures),
-    diagnostics: compile(text).diagnostics,
+    diagnostics,
   });
   return { document, etag: versionOf(asked) };
 }
