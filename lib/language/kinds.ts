@@ -267,17 +267,7 @@ export const KINDS: Readonly<Record<ElementKind, DeviceKind>> = {
  * What the language has but no part works out yet: refused by the checker, so that nothing given is silently left out. An entry
  * goes when its part lands.
  */
-export const LATER_PARAMETERS: Readonly<Partial<Record<ElementKind, readonly string[]>>> = {
-  diode: ["V_breakdown", "I_breakdown", "n_breakdown", "photocurrent"],
-  npn: laterOfTransistors(),
-  pnp: laterOfTransistors(),
-  opamp: ["offset_drift", "bias_offset", "R_out", "out_low", "out_high"],
-};
-
-function laterOfTransistors(): readonly string[] {
-  const leakage = ["I_leak_e", "n_leak_e", "I_leak_c", "n_leak_c"];
-  return [...leakage, "I_knee_f", "I_knee_r", "R_base", "R_emitter", "R_collector"];
-}
+export const LATER_PARAMETERS: Readonly<Partial<Record<ElementKind, readonly string[]>>> = {};
 
 /** Kinds of which the same holds. */
 export const LATER_KINDS: ReadonlySet<string> = new Set(["law", "gain"]);

@@ -51,8 +51,6 @@ export const LANGUAGE_PROBLEMS: readonly Problem[] = [
     mended: within("model m : diode { Is = 1 fA }"),
   },
   { code: "FRM6", text: within("T1 : «law» { plus = in, minus = ground, volts = 1 V }") },
-  { code: "FRM6", text: within("model m : npn { Is = 1 fA, «R_emitter» = 1 Ω }") },
-  { code: "FRM6", text: within("model m : opamp { gain = 1e6, «out_low» = -12 V }") },
   { code: "FRM7", text: within("ground -- «in»") },
   { code: "FRM7", text: within("ground -- R2 : resistor 1 kΩ -- «R3» : resistor 1 kΩ -- in") },
   { code: "FRM7", text: within("ground -- R2 : resistor 1 k«Ω»") },
