@@ -33,12 +33,13 @@ export function limited({ low, high }: LimitsAt, s: number, out: Limited): void 
 
 /**
  * Where to take the limits as a straight line next: at `target`, but no step leads over a knee without resting on it, since from the far
- * side of a knee nothing tells how soon to turn back.
+ * side of a knee nothing tells how soon to turn back. A step from beyond one limit to beyond the other is taken whole where `mayJump`: so
+ * positive feedback reaches the limit at which it stays.
  */
-export function limitStep({ low, high }: LimitsAt, s: number, target: number): number {
+export function limitStep({ low, high }: LimitsAt, s: number, target: number, mayJump: boolean): number {
   const isBetween = (knee: number | null): knee is number =>
     knee !== null && (s < knee ? target > knee : s > knee && target < knee);
-  if (isBetween(high) && isBetween(low)) return target > s ? low : high;
+  if (isBetween(high) && isBetween(low)) return mayJump ? target : target > s ? low : high;
   if (isBetween(high)) return high;
   return isBetween(low) ? low : target;
 }

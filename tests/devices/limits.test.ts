@@ -43,20 +43,26 @@ describe("the limits of an output", () => {
 
 describe("the step over the limits", () => {
   const limits = { low: -1, high: 2 };
+  const step = (s: number, target: number, mayJump = true) => limitStep(limits, s, target, mayJump);
 
   test("rests on a knee that it would cross, the nearer one first", () => {
-    expect(limitStep(limits, 0, 1e6)).toBe(2);
-    expect(limitStep(limits, 0, -1e6)).toBe(-1);
-    expect(limitStep(limits, 1e6, 0)).toBe(2);
-    expect(limitStep(limits, 1e6, -5)).toBe(2);
-    expect(limitStep(limits, -1e6, 5)).toBe(-1);
+    expect(step(0, 1e6)).toBe(2);
+    expect(step(0, -1e6)).toBe(-1);
+    expect(step(1e6, 0)).toBe(2);
+    expect(step(1e6, -5, false)).toBe(2);
+    expect(step(-1e6, 5, false)).toBe(-1);
+  });
+
+  test("goes from beyond one limit to beyond the other where it may jump", () => {
+    expect(step(1e6, -5)).toBe(-5);
+    expect(step(-1e6, 5)).toBe(5);
   });
 
   test("goes from a knee wherever it is asked to, and freely between", () => {
-    expect(limitStep(limits, 2, 1e6)).toBe(1e6);
-    expect(limitStep(limits, 2, 0)).toBe(0);
-    expect(limitStep(limits, 2, -7)).toBe(-1);
-    expect(limitStep(limits, 0.5, 1.9)).toBe(1.9);
-    expect(limitStep({ low: null, high: null }, 0, 1e9)).toBe(1e9);
+    expect(step(2, 1e6)).toBe(1e6);
+    expect(step(2, 0)).toBe(0);
+    expect(step(2, -7)).toBe(-1);
+    expect(step(0.5, 1.9)).toBe(1.9);
+    expect(limitStep({ low: null, high: null }, 0, 1e9, false)).toBe(1e9);
   });
 });

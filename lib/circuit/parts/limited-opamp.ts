@@ -16,6 +16,8 @@ export class LimitedOpampPart extends OpampPart implements JunctionPart, Proof {
   /** Where the limits are taken as a straight line, V, and the law there. */
   private s = 0;
   private readonly law = { v: 0, slope: 1 };
+  /** It has been from one limit to the other since it last settled; more than once would be to and fro. */
+  private hasJumped = false;
   private weight = 1;
 
   override read(values: PointValues): void {
@@ -28,12 +30,14 @@ export class LimitedOpampPart extends OpampPart implements JunctionPart, Proof {
   }
 
   start(): void {
+    this.hasJumped = false;
     const { low, high } = this.limits;
     const inside = (low ?? -1) < 0 && (high ?? 1) > 0;
     this.s = inside ? 0 : low !== null && high !== null ? (low + high) / 2 : (low ?? high!);
   }
 
   settle(state: State): void {
+    this.hasJumped = false;
     this.s = this.asked(state);
   }
 
@@ -42,8 +46,12 @@ export class LimitedOpampPart extends OpampPart implements JunctionPart, Proof {
     const target = this.asked(state);
     this.s = target;
     if (Math.abs(target - s) <= FREE * KNEE) return true;
-    this.s = limitStep(this.limits, s, target);
-    return this.s === target;
+    const next = limitStep(this.limits, s, target, !this.hasJumped);
+    const { low, high } = this.limits;
+    if (low !== null && high !== null && Math.min(s, next) < low && Math.max(s, next) > high)
+      this.hasJumped = true;
+    this.s = next;
+    return next === target;
   }
 
   apart(state: State): number {
