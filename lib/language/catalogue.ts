@@ -12,7 +12,6 @@ export const CATALOGUE = {
   FRM3: "A value is missing",
   FRM4: "Something is left over",
   FRM5: "A bracket is not closed",
-  FRM6: "A statement this server does not speak yet",
   FRM7: "A path out of order",
   FRM8: "A comparison out of place",
   FRM9: "A statement given twice",
@@ -20,6 +19,7 @@ export const CATALOGUE = {
   FRM11: "An element in the wrong form",
   FRM12: "A function with the wrong number of values",
   FRM13: "A statement of the file inside a block",
+  FRM14: "A parameter that means nothing alone",
 
   NAM1: "A name that is already taken",
   NAM2: "A word of the language used as a name",

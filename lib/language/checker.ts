@@ -146,7 +146,7 @@ function checkSize(
   }
   const points = sweeps.reduce((product, sweep) => product * sweep.values.length, 1);
   const branches = elements.filter(
-    (element) => element.kind === "voltage" || element.kind === "opamp",
+    ({ kind, law }) => kind === "voltage" || kind === "opamp" || kind === "gain" || law?.quantity === "volts",
   ).length;
   const values = points * (shows.length + nets.length + branches);
   if (values > MOST_VALUES) {

@@ -11,6 +11,8 @@ export interface ParameterKind {
   readonly low?: number;
   readonly high?: number;
   readonly open?: boolean;
+  /** A parameter without which this one means nothing. */
+  readonly needs?: string;
   readonly about: string;
 }
 
@@ -119,12 +121,22 @@ const transistor: Readonly<Record<string, ParameterKind>> = {
     "no leakage of the emitter junction",
     "saturation current of the base's leakage to the emitter, at T0",
   ),
-  n_leak_e: { ...ideality, absent: "2", about: "ideality factor of the leakage to the emitter" },
+  n_leak_e: {
+    ...ideality,
+    needs: "I_leak_e",
+    absent: "2",
+    about: "ideality factor of the leakage to the emitter",
+  },
   I_leak_c: positiveCurrent(
     "no leakage of the collector junction",
     "saturation current of the base's leakage to the collector, at T0",
   ),
-  n_leak_c: { ...ideality, absent: "2", about: "ideality factor of the leakage to the collector" },
+  n_leak_c: {
+    ...ideality,
+    needs: "I_leak_c",
+    absent: "2",
+    about: "ideality factor of the leakage to the collector",
+  },
   I_knee_f: positiveCurrent(
     "no forward high injection",
     "collector current at which forward high injection sets in",
@@ -192,8 +204,11 @@ export const KINDS: Readonly<Record<ElementKind, DeviceKind>> = {
         open: true,
         about: "reverse voltage at which I_breakdown flows",
       },
-      I_breakdown: positiveCurrent("Is", "reverse current at V_breakdown"),
-      n_breakdown: { ...ideality, about: "ideality factor of the breakdown" },
+      I_breakdown: {
+        ...positiveCurrent("Is", "reverse current at V_breakdown"),
+        needs: "V_breakdown",
+      },
+      n_breakdown: { ...ideality, about: "ideality factor of the breakdown", needs: "V_breakdown" },
       photocurrent: {
         dimension: AMPERE,
         unit: "A",
@@ -240,8 +255,20 @@ export const KINDS: Readonly<Record<ElementKind, DeviceKind>> = {
         about: "current into plus less current into minus",
       },
       R_out: resistance("output resistance"),
-      out_low: { dimension: VOLT, unit: "V", absent: "no lower limit", about: "lowest output voltage" },
-      out_high: { dimension: VOLT, unit: "V", absent: "no upper limit", about: "highest output voltage" },
+      out_low: {
+        dimension: VOLT,
+        needs: "gain",
+        unit: "V",
+        absent: "no lower limit",
+        about: "lowest output voltage",
+      },
+      out_high: {
+        dimension: VOLT,
+        needs: "gain",
+        unit: "V",
+        absent: "no upper limit",
+        about: "highest output voltage",
+      },
     },
     about: "operational amplifier; without a gain it is ideal",
   },
@@ -262,14 +289,5 @@ export const KINDS: Readonly<Record<ElementKind, DeviceKind>> = {
     about: "element whose voltage (volts) or current from plus to minus (amps) is an expression of signals",
   },
 };
-
-/**
- * What the language has but no part works out yet: refused by the checker, so that nothing given is silently left out. An entry
- * goes when its part lands.
- */
-export const LATER_PARAMETERS: Readonly<Partial<Record<ElementKind, readonly string[]>>> = {};
-
-/** Kinds of which the same holds. */
-export const LATER_KINDS: ReadonlySet<string> = new Set(["law", "gain"]);
 
 export const MODEL_KINDS: readonly ModelKind[] = ["diode", "npn", "pnp", "opamp"];

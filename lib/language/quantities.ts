@@ -24,10 +24,10 @@ export class Quantities {
     private readonly report: Report,
   ) {}
 
-  /** The value where it has the wanted dimension, else null and a diagnostic. Signals are not allowed. */
-  fitting(expression: Expression, want: Want): Typed | null {
+  /** The value where it has the wanted dimension, else null and a diagnostic. */
+  fitting(expression: Expression, want: Want, signals = false): Typed | null {
     const judged = this.typing.judge(expression, {
-      signals: false,
+      signals,
       wanted: want.unit === "1" ? null : want.unit,
     });
     if (judged === null) return null;

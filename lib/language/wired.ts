@@ -1,6 +1,6 @@
 import type { ElementKind, ModelKind } from "./ast";
 import type { Flat } from "./expand";
-import { KINDS, LATER_KINDS, MODEL_KINDS } from "./kinds";
+import { KINDS, MODEL_KINDS } from "./kinds";
 import { Names, ownName } from "./names";
 import type { Report } from "./report";
 import type { Span } from "./span";
@@ -17,9 +17,11 @@ export interface Wired extends Span {
   readonly tolerance: ToleranceSyntax | null;
   /** Parameters beyond the value. */
   readonly settings: readonly Setting[];
+  /** Whether all of its statement could be read. */
+  readonly isWhole: boolean;
 }
 
-const SPOKEN = Object.keys(KINDS).filter((kind) => !LATER_KINDS.has(kind));
+const SPOKEN = Object.keys(KINDS);
 
 type Followed = { readonly kind: ElementKind; readonly model: string | null };
 
@@ -58,9 +60,13 @@ export class Wirer {
         return;
       }
       const model = followed.model ?? this.modelAfter(kind, part.value);
-      if (KINDS[kind].value === null && model === null) {
+      if (KINDS[kind].follows === "model" && model === null) {
         if (part.value === null) this.wantModel(part.kind, kind);
         return;
+      }
+      if (kind === "law" && part.value !== null && part.value.kind !== "hole") {
+        const message = "A law has its expression in braces; write it as `law { volts = … }`.";
+        this.report.error("FRM11", part.value, message);
       }
       if (followed.model !== null && part.value !== null) {
         const message = `${quote(part.kind.text)} is a model, and what follows a model takes no value here; remove it.`;
@@ -70,7 +76,7 @@ export class Wirer {
         this.report.error(
           "UNI10",
           part.tolerance,
-          "This element has no value of its own, so it takes no tolerance; give it to the model.",
+          "This element has no value of its own, so it takes no tolerance; give it to what it follows.",
         );
       }
       this.add(
@@ -81,6 +87,7 @@ export class Wirer {
           value: KINDS[kind].value === null ? null : part.value,
           tolerance: part.tolerance,
           settings: part.settings,
+          isWhole: statement.whole,
           from: part.from,
           to: part.to,
         },
@@ -99,7 +106,7 @@ export class Wirer {
       return;
     }
     const { kind, model } = followed;
-    if (KINDS[kind].value === null && model === null) {
+    if (KINDS[kind].follows === "model" && model === null) {
       this.wantModel(statement.of, kind);
       return;
     }
@@ -120,11 +127,12 @@ export class Wirer {
       this.report.error("WIR5", statement.name, message);
     }
     if (open.length > 0 && !statement.whole) return;
-    const { from, to } = statement;
+    const { from, to, whole: isWhole } = statement;
     this.add(statement.name, followed, pins, {
       value: value?.value ?? null,
       tolerance: value?.tolerance ?? null,
       settings,
+      isWhole,
       from,
       to,
     });
@@ -134,7 +142,7 @@ export class Wirer {
     name: Word,
     { kind, model }: Followed,
     pins: Readonly<Record<string, string>>,
-    rest: Span & Pick<Wired, "value" | "tolerance" | "settings">,
+    rest: Span & Pick<Wired, "value" | "tolerance" | "settings" | "isWhole">,
   ): void {
     if (this.names.meaningOf(name.text) !== "element" || this.names.placeOf(name.text).from !== name.from)
       return;
@@ -169,8 +177,7 @@ export class Wirer {
   /** The kind that the word after `:` names, or that of the model it names. */
   private follow(word: Word): Followed | null {
     if (word.text === "") return null;
-    if (Object.hasOwn(KINDS, word.text) && !LATER_KINDS.has(word.text))
-      return { kind: word.text as ElementKind, model: null };
+    if (Object.hasOwn(KINDS, word.text)) return { kind: word.text as ElementKind, model: null };
     const kind = this.models.get(word.text);
     if (kind !== undefined) return { kind, model: word.text };
     this.unknownKind(word);
@@ -180,10 +187,7 @@ export class Wirer {
   private unknownKind(word: Word): void {
     const meaning = this.names.meaningOf(word.text);
     if (meaning === "model" || meaning === "unread") return;
-    if (LATER_KINDS.has(word.text)) {
-      const message = `${quote(word.text)} is not yet part of the language this server speaks; take it out.`;
-      this.report.error("FRM6", word, message);
-    } else if (meaning === "block") {
+    if (meaning === "block") {
       const message = `${quote(ownName(word))} is a block, and its nets go by name; write it as \`X : ${ownName(word)} { net = …, … }\`.`;
       this.report.error("FRM11", word, message);
     } else if (meaning !== null) {
@@ -204,7 +208,7 @@ export class Wirer {
 
   /** `diode junction` on a path: the model named where other kinds have their value. */
   private modelAfter(kind: ElementKind, value: Expression | null): string | null {
-    if (KINDS[kind].value !== null || value === null || value.kind === "hole") return null;
+    if (KINDS[kind].follows !== "model" || value === null || value.kind === "hole") return null;
     const word = plainName(value);
     const of = word === null ? undefined : this.models.get(word.text);
     if (of === kind) return word!.text;

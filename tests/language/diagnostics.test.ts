@@ -7,6 +7,7 @@ import { MOST_ELEMENTS, MOST_TEXT } from "@/lib/language/limits";
 import { WIRING_PROBLEMS } from "@/tests/circuit/problems";
 import { BLOCK_PROBLEMS } from "./block-problems";
 import { CONTRACT_PROBLEMS } from "./contract-problems";
+import { LAW_PROBLEMS } from "./law-problems";
 import { LANGUAGE_PROBLEMS, type Problem } from "./problems";
 
 function unmark(marked: string): { text: string; from: number; to: number } {
@@ -31,9 +32,12 @@ function expectProblem(problem: Problem, diagnose: (text: string) => Diagnostic[
 }
 
 describe("each problem of a text is found once, at its place, in one sentence", () => {
-  test.each([...LANGUAGE_PROBLEMS, ...BLOCK_PROBLEMS, ...CONTRACT_PROBLEMS])("$code: $text", (problem) => {
-    expectProblem(problem, (text) => check(text).diagnostics);
-  });
+  test.each([...LANGUAGE_PROBLEMS, ...BLOCK_PROBLEMS, ...LAW_PROBLEMS, ...CONTRACT_PROBLEMS])(
+    "$code: $text",
+    (problem) => {
+      expectProblem(problem, (text) => check(text).diagnostics);
+    },
+  );
   test.each(WIRING_PROBLEMS)("$code: $text", (problem) => {
     expectProblem(problem, (text) => {
       const { design, diagnostics } = check(text);
@@ -77,7 +81,7 @@ describe("limits", () => {
 
 test("every code of the catalogue is produced by a test, and no test knows another", () => {
   const tested = new Set(
-    [...LANGUAGE_PROBLEMS, ...BLOCK_PROBLEMS, ...CONTRACT_PROBLEMS, ...WIRING_PROBLEMS].map(
+    [...LANGUAGE_PROBLEMS, ...BLOCK_PROBLEMS, ...LAW_PROBLEMS, ...CONTRACT_PROBLEMS, ...WIRING_PROBLEMS].map(
       (problem) => problem.code,
     ),
   );

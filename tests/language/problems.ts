@@ -50,7 +50,6 @@ export const LANGUAGE_PROBLEMS: readonly Problem[] = [
     text: within("model m : diode «{» Is = 1 fA"),
     mended: within("model m : diode { Is = 1 fA }"),
   },
-  { code: "FRM6", text: within("T1 : «law» { plus = in, minus = ground, volts = 1 V }") },
   { code: "FRM7", text: within("ground -- «in»") },
   { code: "FRM7", text: within("ground -- R2 : resistor 1 kΩ -- «R3» : resistor 1 kΩ -- in") },
   { code: "FRM7", text: within("ground -- R2 : resistor 1 k«Ω»") },
