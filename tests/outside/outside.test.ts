@@ -10,9 +10,11 @@ import { MIRRORS } from "./mirrors";
 import { ONE_QUADRANT } from "./one-quadrant";
 import { PAIRS } from "./pairs";
 import { SATURATION } from "./saturation";
+import { SOLAR_CELLS, SOLAR_TABLE } from "./solar-cells";
 import { misses, solveText } from "./solve";
 import { TEXTBOOK_TABLE } from "./textbook";
 import { TEXTBOOK_DIODES } from "./textbook-diodes";
+import { THERMOMETER } from "./thermometer";
 import { WIDLAR } from "./widlar";
 
 /** Every table of tests/reference with the ids of its records and the netlists that cover them. */
@@ -21,6 +23,8 @@ const TABLES: readonly (readonly [string, readonly string[], readonly OutsideCas
   ["diode with resistor", DIODE_TABLE.map(({ id }) => id), DIODES],
   ["log converters", LOG_TABLE.map(({ id }) => id), LOG_CONVERTERS],
   ["junction over temperature", ["temperature"], JUNCTION_TEMPERATURE],
+  ["solar cells", SOLAR_TABLE, SOLAR_CELLS],
+  ["silicon thermometer", ["TH1"], THERMOMETER],
   ["antilog converters", ANTILOG_TABLE.map(({ id }) => id), ANTILOG_CONVERTERS],
   [
     "textbook circuits",
