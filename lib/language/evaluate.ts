@@ -12,8 +12,9 @@ export interface Scope {
 }
 
 /**
- * The value of a checked expression in coherent SI units. A comparison is 1 where it holds and 0 where it does not. Where the
- * mathematics has no value (1/0, ln(−1)) the result is not finite; nothing is thrown. Depth is bounded by the parser's cap.
+ * The value of a checked expression in coherent SI units. A comparison is 1 where it holds, 0 where it does not, and NaN where a
+ * side of it is none, so that nothing unknown is ever taken for false. Where the mathematics has no value (1/0, ln(−1)) the
+ * result is not finite; nothing is thrown. Depth is bounded by the parser's cap.
  */
 export function evaluate(typed: Typed, scope: Scope): number {
   switch (typed.op) {
@@ -53,20 +54,27 @@ function binary(op: "+" | "-" | "*" | "/" | "^" | "<=" | ">=" | "<" | ">", a: nu
     case "^":
       return a ** b;
     case "<=":
-      return a <= b ? 1 : 0;
+      return truth(a <= b, a, b);
     case ">=":
-      return a >= b ? 1 : 0;
+      return truth(a >= b, a, b);
     case "<":
-      return a < b ? 1 : 0;
+      return truth(a < b, a, b);
     case ">":
-      return a > b ? 1 : 0;
+      return truth(a > b, a, b);
   }
+}
+
+function truth(holds: boolean, a: number, b: number): number {
+  return Number.isNaN(a) || Number.isNaN(b) ? Number.NaN : holds ? 1 : 0;
 }
 
 /** Only the branch that `if` chooses is worked out, so that it can guard the other. */
 function call(typed: Extract<Typed, { op: "call" }>, scope: Scope): number {
   const { callee, args } = typed;
-  if (callee === "if") return evaluate(evaluate(args[0]!, scope) !== 0 ? args[1]! : args[2]!, scope);
+  if (callee === "if") {
+    const condition = evaluate(args[0]!, scope);
+    return Number.isNaN(condition) ? condition : evaluate(condition !== 0 ? args[1]! : args[2]!, scope);
+  }
   const values = args.map((arg) => evaluate(arg, scope));
   const x = values[0]!;
   switch (callee) {

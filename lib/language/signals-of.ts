@@ -1,3 +1,4 @@
+import { AMPERE, type Dimension, VOLT, WATT } from "@/lib/units/dimension";
 import type { Signal, Typed } from "./ast";
 
 /** The signals that an expression reads, each once, in the order of the text. */
@@ -16,6 +17,11 @@ export function signalName(signal: Signal): string {
   if (signal.of === "net") return `${signal.net}.v`;
   if (signal.of === "element") return `${signal.element}.${signal.quantity}`;
   return `${signal.element}.${signal.pin}.i`;
+}
+
+export function dimensionOf(signal: Signal): Dimension {
+  if (signal.of === "net") return VOLT;
+  return signal.of === "pin" ? AMPERE : { v: VOLT, i: AMPERE, p: WATT }[signal.quantity];
 }
 
 export function sameSignal(a: Signal, b: Signal): boolean {
