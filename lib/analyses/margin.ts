@@ -39,9 +39,9 @@ export function marginsOf(
   switch (relation.kind) {
     case "compare": {
       const bound = along(relation.bound);
-      const sign = relation.operator.startsWith("<") ? 1 : -1;
+      const isUpper = relation.operator.startsWith("<");
       const isStrict = relation.operator.length === 1;
-      return { values: found.map((v, i) => sign * (bound[i]! - v)), isStrict };
+      return { values: found.map((v, i) => (isUpper ? bound[i]! - v : v - bound[i]!)), isStrict };
     }
     case "within": {
       const target = along(relation.target);
