@@ -19,27 +19,8 @@ export interface Job {
 export function compile(text: string): { diagnostics: readonly Diagnostic[]; job: Job | null } {
   const { design, diagnostics } = check(text);
   if (design === null) return { diagnostics, job: null };
-  const all = [...diagnostics, ...checkWiring(design), ...unsolvable(design)].sort(
-    (a, b) => a.from - b.from || a.to - b.to,
-  );
+  const all = [...diagnostics, ...checkWiring(design)].sort((a, b) => a.from - b.from || a.to - b.to);
   if (all.some(({ severity }) => severity === "error")) return { diagnostics: all, job: null };
   const circuit = numberUnknowns(design);
   return { diagnostics: all, job: { design, circuit, plan: planOf(design, circuit) } };
-}
-
-/** Elements that no part works out yet. */
-function unsolvable({ elements }: Design): Diagnostic[] {
-  return elements.flatMap(({ kind, name, from, to }) =>
-    kind === "law" || kind === "gain"
-      ? [
-          {
-            code: "FRM6",
-            severity: "error",
-            from,
-            to,
-            message: `No run works out the ${kind} \`${name}\` yet.`,
-          },
-        ]
-      : [],
-  );
 }

@@ -1,5 +1,6 @@
 import type { Design, Element, Signal, Typed } from "@/lib/language/ast";
 import { KINDS } from "@/lib/language/kinds";
+import { signalsOf } from "@/lib/language/signals-of";
 import { AMPERE, VOLT } from "@/lib/units/dimension";
 
 /** A current into a pin of an element. */
@@ -28,28 +29,22 @@ function powerless(typed: Typed, signal: Signal): Typed {
   };
 }
 
-/** The signals of an expression, each once, in the order of the text. */
-export function signalsOf(typed: Typed): readonly Signal[] {
-  const found = new Map<string, Signal>();
-  collect(typed, found);
-  return [...found.values()];
-}
-
-function collect(typed: Typed, into: Map<string, Signal>): void {
-  if (typed.op === "signal") into.set(JSON.stringify(typed.signal), typed.signal);
-  else if (typed.op === "negate") collect(typed.operand, into);
-  else if (typed.op === "call") for (const arg of typed.args) collect(arg, into);
+/** Every expression within an expression, itself first. */
+export function* nodesOf(typed: Typed): Generator<Typed> {
+  yield typed;
+  if (typed.op === "negate") yield* nodesOf(typed.operand);
+  else if (typed.op === "call") for (const arg of typed.args) yield* nodesOf(arg);
   else if ("left" in typed) {
-    collect(typed.left, into);
-    collect(typed.right, into);
+    yield* nodesOf(typed.left);
+    yield* nodesOf(typed.right);
   }
 }
 
 /** The current that a signal other than a voltage stands for; that of an element flows into its first pin. */
-export function pinCurrent(signal: Signal, kindOf: (element: string) => Element["kind"]): PinCurrent | null {
-  if (signal.of === "pin") return { element: signal.element, pin: signal.pin };
-  if (signal.of === "net" || signal.quantity === "v") return null;
-  return { element: signal.element, pin: KINDS[kindOf(signal.element)].pins[0]! };
+export function pinCurrent(signal: Signal, kind: Element["kind"]): PinCurrent | null {
+  if (signal.of === "net" || (signal.of === "element" && signal.quantity === "v")) return null;
+  const { element } = signal;
+  return { element, pin: signal.of === "pin" ? signal.pin : KINDS[kind].pins[0]! };
 }
 
 /** The currents that the laws of a design read, each once. */
@@ -59,7 +54,8 @@ export function currentsRead(design: Design): readonly PinCurrent[] {
   for (const { law } of design.elements) {
     if (law === null) continue;
     for (const signal of signalsOf(withoutPower(law.value))) {
-      const current = pinCurrent(signal, (element) => kinds.get(element)!);
+      if (signal.of === "net") continue;
+      const current = pinCurrent(signal, kinds.get(signal.element)!);
       if (current !== null) found.set(`${current.element}.${current.pin}`, current);
     }
   }
