@@ -1,5 +1,6 @@
 import type { Element, Model, NamedValue } from "@/lib/language/ast";
 import { KINDS } from "@/lib/language/kinds";
+import type { AssemblyCode } from "./assembly-code";
 import type { Circuit } from "./circuit";
 import type { Pattern } from "./pattern";
 import type { State } from "./state";
@@ -16,6 +17,8 @@ export interface Part {
   addConstantSlopes(jacobian: Float64Array): void;
   /** Adds its currents or mismatch to the residual and, where they depend on the unknowns, its slopes. */
   addTo(state: State): void;
+  /** Writes `addTo` as straight code, the same to the bit; false, with nothing written, where it is not so simple. */
+  write?(code: AssemblyCode): boolean;
   /** The current into a pin, A, at the present unknowns. */
   current(pin: string, state: State): number;
   /**

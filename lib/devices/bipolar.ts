@@ -1,5 +1,6 @@
 import { thermalVoltage } from "@/lib/units/constants";
 import type { DiodeAt } from "./diode";
+import { exp, expm1 } from "./exponential";
 import { UNIT } from "./rounding";
 import { type SaturationTerms, saturationCurrent, saturationDoubt } from "./saturation";
 
@@ -99,10 +100,10 @@ export function bipolarLaw(at: BipolarAt, vbe: number, vbc: number, vce: number,
   const { Is, eta, forwardBase, reverseBase, forwardEarly, reverseEarly } = at;
   const yf = vbe / eta;
   const yr = vbc / eta;
-  const ef = Math.expm1(yf);
-  const er = yr < -40 ? -1 : Math.expm1(yr);
-  const tf = yf < -1 ? Math.exp(yf) : ef + 1;
-  const tr = yr < -1 ? Math.exp(yr) : er + 1;
+  const ef = expm1(yf);
+  const er = yr < -40 ? -1 : expm1(yr);
+  const tf = yf < -1 ? exp(yf) : ef + 1;
+  const tr = yr < -1 ? exp(yr) : er + 1;
   const transport = Is * difference(tf, tr, vce / eta);
   const early = 1 - vbc * forwardEarly - vbe * reverseEarly;
   const slopeF = (Is * tf) / eta;
@@ -112,14 +113,14 @@ export function bipolarLaw(at: BipolarAt, vbe: number, vbc: number, vce: number,
   out.ibR = (reverseBase * tr) / eta;
   let intoC = reverseBase * er;
   if (at.leakE !== 0) {
-    out.ib += at.leakE * Math.expm1(vbe / at.etaE);
-    out.ibF += (at.leakE / at.etaE) * Math.exp(vbe / at.etaE);
+    out.ib += at.leakE * expm1(vbe / at.etaE);
+    out.ibF += (at.leakE / at.etaE) * exp(vbe / at.etaE);
   }
   if (at.leakC !== 0) {
-    const leak = at.leakC * Math.expm1(vbc / at.etaC);
+    const leak = at.leakC * expm1(vbc / at.etaC);
     out.ib += leak;
     intoC += leak;
-    out.ibR += (at.leakC / at.etaC) * Math.exp(vbc / at.etaC);
+    out.ibR += (at.leakC / at.etaC) * exp(vbc / at.etaC);
   }
   let factor = early;
   let byEarly = 1;
@@ -139,5 +140,5 @@ export function bipolarLaw(at: BipolarAt, vbe: number, vbc: number, vce: number,
 /** tf − tr where tf/tr = e^y, from y where the two are close. */
 function difference(tf: number, tr: number, y: number): number {
   if (Math.abs(y) > 1) return tf - tr;
-  return y > 0 ? -tf * Math.expm1(-y) : tr * Math.expm1(y);
+  return y > 0 ? -tf * expm1(-y) : tr * expm1(y);
 }

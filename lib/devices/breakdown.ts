@@ -1,4 +1,5 @@
 import { type CurrentAndSlope, type DiodeAt, junctionOf } from "./diode";
+import { exp, expm1 } from "./exponential";
 import { junctionStep } from "./junction-step";
 import { wrightOmega } from "./wright-omega";
 
@@ -23,7 +24,7 @@ const MOST_STEPS = 60;
 /** `amperes` at `volts` V; `eta` is n·V_T of the breakdown. */
 export function breakdownAt({ Rs }: DiodeAt, amperes: number, volts: number, eta: number): BreakdownAt {
   const origin = Math.min(0, eta * Math.log(amperes / SETTING_OUT) - volts);
-  const Is = amperes * Math.exp(-(origin + volts) / eta);
+  const Is = amperes * exp(-(origin + volts) / eta);
   return { amperes, volts, eta, mirror: { Is, eta, Rs, doubt: 0 }, origin };
 }
 
@@ -42,10 +43,10 @@ export function breakdownLaw(at: DiodeAt, reverse: BreakdownAt, v: number, out: 
 function sumAt({ Is, eta }: DiodeAt, reverse: BreakdownAt, u: number, out: CurrentAndSlope): void {
   const { amperes, volts } = reverse;
   const y = u / eta;
-  const e = Math.expm1(y);
-  const grown = Math.exp(-(u + volts) / reverse.eta);
-  out.i = Is * e - amperes * (grown - Math.exp(-volts / reverse.eta));
-  out.g = (Is / eta) * (y < -1 ? Math.exp(y) : e + 1) + (amperes / reverse.eta) * grown;
+  const e = expm1(y);
+  const grown = exp(-(u + volts) / reverse.eta);
+  out.i = Is * e - amperes * (grown - exp(-volts / reverse.eta));
+  out.g = (Is / eta) * (y < -1 ? exp(y) : e + 1) + (amperes / reverse.eta) * grown;
 }
 
 /** Forward and below half the breakdown voltage: Newton from the junction voltage without breakdown, kept between 0 and V. */
@@ -79,9 +80,9 @@ function beyond(at: DiodeAt, reverse: BreakdownAt, v: number, out: CurrentAndSlo
   let t = past - reverse.eta * wrightOmega(past / reverse.eta + Math.log(a));
   for (let step = 0; step < MOST_STEPS; step++) {
     if (!(t >= low && t <= high)) t = (low + high) / 2;
-    const grown = Math.exp(t / reverse.eta);
-    const forward = Math.exp(-(t + volts) / eta);
-    out.i = Is * (forward - 1) - amperes * (grown - Math.exp(-volts / reverse.eta));
+    const grown = exp(t / reverse.eta);
+    const forward = exp(-(t + volts) / eta);
+    out.i = Is * (forward - 1) - amperes * (grown - exp(-volts / reverse.eta));
     out.g = (Is / eta) * forward + (amperes / reverse.eta) * grown;
     const over = t - Rs * out.i - past;
     if (over > 0) high = t;

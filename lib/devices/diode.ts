@@ -1,4 +1,5 @@
 import { thermalVoltage } from "@/lib/units/constants";
+import { exp, expm1 } from "./exponential";
 import { type SaturationTerms, saturationCurrent, saturationDoubt } from "./saturation";
 import { wrightOmega } from "./wright-omega";
 
@@ -41,9 +42,9 @@ export function diodeLaw(at: DiodeAt, v: number, out: CurrentAndSlope): void {
   }
   const { Is, eta } = at;
   const y = v / eta;
-  const e = Math.expm1(y);
+  const e = expm1(y);
   out.i = Is * e;
-  out.g = (Is / eta) * (y < -1 ? Math.exp(y) : e + 1);
+  out.g = (Is / eta) * (y < -1 ? exp(y) : e + 1);
 }
 
 /**
@@ -61,11 +62,11 @@ function withResistance({ Is, eta, Rs }: DiodeAt, v: number, out: CurrentAndSlop
   }
   let y = u + a - w;
   for (let step = 0; step < 2; step++) {
-    const e = Math.expm1(y);
+    const e = expm1(y);
     y -= (y + a * e - u) / (1 + a * (e + 1));
   }
-  const slope = (Is / eta) * Math.exp(y);
-  out.i = Is * Math.expm1(y);
+  const slope = (Is / eta) * exp(y);
+  out.i = Is * expm1(y);
   out.g = slope / (1 + Rs * slope);
 }
 

@@ -1,5 +1,6 @@
 import { drivenCurrent } from "@/lib/devices/current";
 import type { Element } from "@/lib/language/ast";
+import type { AssemblyCode } from "../assembly-code";
 import { type Bench, moversOf, netAt, type Part } from "../part";
 import { flow, type State } from "../state";
 import type { PointValues } from "../values";
@@ -28,6 +29,11 @@ export class CurrentPart implements Part {
 
   addTo(state: State): void {
     flow(state, this.left, this.right, drivenCurrent(this.amperes, state.share));
+  }
+
+  write(code: AssemblyCode): boolean {
+    code.flow(this.left, this.right, code.let(`${code.object(this)}.amperes*share`));
+    return true;
   }
 
   current(pin: string, state: State): number {

@@ -4,6 +4,7 @@ import { breakdownDoubt, breakdownSpread, diodeDoubt, diodeSpread } from "@/lib/
 import { junctionStep } from "@/lib/devices/junction-step";
 import type { Element, Model } from "@/lib/language/ast";
 import { ROOM_TEMPERATURE, thermalVoltage } from "@/lib/units/constants";
+import type { AssemblyCode } from "../assembly-code";
 import {
   type Bench,
   FREE,
@@ -105,6 +106,27 @@ export class DiodePart implements JunctionPart, Proof {
     jacobian[places[1]]! -= law.g;
     jacobian[places[2]]! -= law.g;
     jacobian[places[3]]! += law.g;
+  }
+
+  write(code: AssemblyCode): boolean {
+    const { anode, cathode, places } = this;
+    const { params } = this.model;
+    if (["Rs", "V_breakdown", "photocurrent"].some((name) => params.has(name))) return false;
+    const self = code.object(this);
+    const v = code.let(`${self}.v`);
+    const at = code.let(`${self}.at`);
+    const law = code.let(`${self}.law`);
+    const y = code.let(`${v}/${at}.eta`);
+    const e = code.let(`expm1(${y})`);
+    const i = code.let(`${at}.Is*${e}`);
+    const g = code.let(`${at}.Is/${at}.eta*(${y}<-1?exp(${y}):${e}+1)`);
+    code.add(`${law}.i=${i};${law}.g=${g};`);
+    code.flow(anode, cathode, code.let(`${i}+${g}*(${code.across(anode, cathode)}-${v})`));
+    code.slope(places[0], "+=", g);
+    code.slope(places[1], "-=", g);
+    code.slope(places[2], "-=", g);
+    code.slope(places[3], "+=", g);
+    return true;
   }
 
   /** The voltage over junction and Rs, V. */

@@ -1,5 +1,6 @@
 import { biasInto, offsetAt, opampMismatch } from "@/lib/devices/opamp";
 import type { Element, Model } from "@/lib/language/ast";
+import type { AssemblyCode } from "../assembly-code";
 import { type Bench, figureOf, moversOf, netAt, type Part, type Proof } from "../part";
 import { across, flow, type State } from "../state";
 import { type PointValues, TEMPERATURE } from "../values";
@@ -76,6 +77,31 @@ export class OpampPart implements Part {
     const behind = this.behind(state);
     state.residual[branch] = opampMismatch(difference, offset, behind, inverseGain);
     state.scale[branch] = Math.abs(difference) + Math.abs(offset) + this.around(state) * inverseGain;
+  }
+
+  write(code: AssemblyCode): boolean {
+    const { plus, minus, out, ground, branch } = this;
+    const { params } = this.model;
+    const self = code.object(this);
+    code.flow(out, ground, code.let(code.unknown(branch)));
+    if (params.has("bias") || params.has("bias_offset")) {
+      code.flow(plus, ground, code.let(`${self}.intoPlus*share`));
+      code.flow(minus, ground, code.let(`${self}.intoMinus*share`));
+    }
+    const difference = code.let(code.across(plus, minus));
+    const offset = code.let(`${self}.offset*share`);
+    const hasOhms = params.has("R_out");
+    const drop = hasOhms ? `-${self}.ohms*${code.high(branch)}` : "";
+    const around = hasOhms ? `+${self}.ohms*Math.abs(${code.high(branch)})` : "";
+    const behind = code.let(code.across(out, ground) + drop);
+    const inverse = code.let(`${self}.inverseGain`);
+    const scale = `(Math.abs(${code.high(out)})${around})*${inverse}`;
+    code.law(
+      branch,
+      `${difference}+${offset}-${behind}*${inverse}`,
+      `Math.abs(${difference})+Math.abs(${offset})+${scale}`,
+    );
+    return true;
   }
 
   /** Output and bias currents. */

@@ -1,6 +1,7 @@
 import { conductance } from "@/lib/devices/resistor";
 import { UNIT } from "@/lib/devices/rounding";
 import type { Element } from "@/lib/language/ast";
+import type { AssemblyCode } from "../assembly-code";
 import { type Bench, figureOf, moversOf, netAt, type Part, type Proof } from "../part";
 import { across, flow, type State } from "../state";
 import { type PointValues, TEMPERATURE } from "../values";
@@ -49,6 +50,12 @@ export class ResistorPart implements Part, Proof {
 
   addTo(state: State): void {
     flow(state, this.left, this.right, this.g * across(state, this.left, this.right));
+  }
+
+  write(code: AssemblyCode): boolean {
+    const i = code.let(`${code.object(this)}.g*${code.across(this.left, this.right)}`);
+    code.flow(this.left, this.right, i);
+    return true;
   }
 
   /** A conductance that is or may become negative can cancel others, whose rounding then stays. */

@@ -4,6 +4,7 @@ import { diodeVoltage } from "@/lib/devices/diode";
 import { junctionStep } from "@/lib/devices/junction-step";
 import type { Element, Model } from "@/lib/language/ast";
 import { ROOM_TEMPERATURE } from "@/lib/units/constants";
+import type { AssemblyCode } from "../assembly-code";
 import {
   type Bench,
   FREE,
@@ -17,6 +18,7 @@ import {
 } from "../part";
 import { across, flow, type State } from "../state";
 import { type PointValues, TEMPERATURE } from "../values";
+import { writeTransistor } from "./transistor-code";
 
 /** An npn, or a pnp, which is the same with every voltage and current reversed. */
 export class TransistorPart implements JunctionPart, Proof {
@@ -148,6 +150,14 @@ export class TransistorPart implements JunctionPart, Proof {
     jacobian[places[6]!]! += icR + ibR;
     jacobian[places[7]!]! -= icF + icR + ibF + ibR;
     jacobian[places[8]!]! += icF + ibF;
+  }
+
+  write(code: AssemblyCode): boolean {
+    const { params } = this.model;
+    if (["I_leak_e", "I_leak_c", "I_knee_f", "I_knee_r"].some((name) => params.has(name))) return false;
+    const { c, b, e, sign } = this;
+    writeTransistor(code, code.object(this), { c, b, e, sign, ground: this.ground, places: this.places });
+    return true;
   }
 
   addDoubt(_: State, doubt: Float64Array): void {

@@ -1,5 +1,6 @@
 import { voltageMismatch } from "@/lib/devices/voltage";
 import type { Element } from "@/lib/language/ast";
+import type { AssemblyCode } from "../assembly-code";
 import { type Bench, moversOf, netAt, type Part } from "../part";
 import { across, flow, type State } from "../state";
 import type { PointValues } from "../values";
@@ -50,6 +51,15 @@ export class VoltagePart implements Part {
     const volts = this.volts * state.share;
     state.residual[branch] = voltageMismatch(drop, volts);
     state.scale[branch] = Math.abs(drop) + Math.abs(volts);
+  }
+
+  write(code: AssemblyCode): boolean {
+    const { left, right, branch } = this;
+    code.flow(left, right, code.let(code.unknown(branch)));
+    const drop = code.let(code.across(left, right));
+    const volts = code.let(`${code.object(this)}.volts*share`);
+    code.law(branch, `-${drop}-${volts}`, `Math.abs(${drop})+Math.abs(${volts})`);
+    return true;
   }
 
   current(pin: string, state: State): number {

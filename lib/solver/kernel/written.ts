@@ -1,5 +1,5 @@
+import { type Compiled, compiled } from "@/lib/circuit/compiled";
 import type { Elimination, SparseShape } from "../elimination";
-import { type Compiled, compiled } from "./compiled";
 import { GOOD_BACKWARD_ERROR, type Kernel } from "./kernel";
 
 /** Multiplications of generated code at most: the compiler behind it gives up on functions of some 2,500. */

@@ -1,0 +1,125 @@
+import { exp, expm1 } from "@/lib/devices/exponential";
+import { compiled } from "./compiled";
+import type { State } from "./state";
+
+/** Statements of generated code at most: the compiler behind it gives up on functions several times as long. */
+const MOST_STATEMENTS = 1500;
+
+type Maker = (
+  state: State,
+  constantSlopes: Float64Array,
+  objects: readonly object[],
+  exp_: typeof exp,
+  expm1_: typeof expm1,
+) => () => void;
+
+/**
+ * The assembly of a system as straight code: every sum in a variable of its own, every place a number. Parts write themselves
+ * into it, with the same operations in the same order as their `addTo`. Names in it are those of the program; of the user's
+ * there is nothing, not even a number: figures are read from the parts.
+ */
+export class AssemblyCode {
+  private readonly lines: string[] = [];
+  private readonly objects: object[] = [];
+  private readonly rows = new Set<number>();
+  private readonly voltages = new Set<number>();
+  private readonly places = new Set<number>();
+  private locals = 0;
+
+  /** `ground` is the number of ground, one past the last unknown. */
+  constructor(private readonly ground: number) {}
+
+  /** The name of an object whose figures the code reads. */
+  object(object: object): string {
+    return `o${this.objects.push(object) - 1}`;
+  }
+
+  add(statement: string): void {
+    if (this.lines.length <= MOST_STATEMENTS) this.lines.push(statement);
+  }
+
+  /** A variable with the value of an expression. */
+  let(expression: string): string {
+    const name = `t${this.locals++}`;
+    this.add(`let ${name}=${expression};`);
+    return name;
+  }
+
+  /** As `across` of a state. */
+  across(a: number, b: number): string {
+    const x = (i: number) => (i === this.ground ? "0" : `x${this.known(i)}`);
+    const low = (i: number) => (i === this.ground ? "0" : `l${this.known(i)}`);
+    return `(${x(a)}-${x(b)}+(${low(a)}-${low(b)}))`;
+  }
+
+  /** The two parts of an unknown, for a branch current. */
+  unknown(i: number): string {
+    return `(x${this.known(i)}+l${i})`;
+  }
+
+  high(i: number): string {
+    return i === this.ground ? "0" : `x${this.known(i)}`;
+  }
+
+  private known(i: number): number {
+    this.voltages.add(i);
+    return i;
+  }
+
+  /** As `flow` of a state; `amperes` is the name of a variable. */
+  flow(a: number, b: number, amperes: string): void {
+    const size = this.let(`Math.abs(${amperes})`);
+    if (a !== this.ground) this.add(`r${this.row(a)}+=${amperes};s${a}+=${size};`);
+    if (b !== this.ground) this.add(`r${this.row(b)}-=${amperes};s${b}+=${size};`);
+  }
+
+  /** Adds to the scale of a row. */
+  widen(row: number, by: string): void {
+    if (row !== this.ground) this.add(`s${this.row(row)}+=${by};`);
+  }
+
+  /** The mismatch of a branch law, and the magnitudes that it sums. */
+  law(row: number, mismatch: string, size: string): void {
+    this.add(`r${this.row(row)}=${mismatch};s${row}=${size};`);
+  }
+
+  private row(i: number): number {
+    this.rows.add(i);
+    return i;
+  }
+
+  /** Adds to the Jacobian; `operator` is += or -=. */
+  slope(place: number, operator: "+=" | "-=", expression: string): void {
+    if (place === 0) return;
+    this.places.add(place);
+    this.add(`j${place}${operator}${expression};`);
+  }
+
+  /** The code as a function over a state; null where it is too long, or none may be generated here. */
+  compile(state: State, constantSlopes: Float64Array): (() => void) | null {
+    if (this.lines.length + constantSlopes.length > MOST_STATEMENTS) return null;
+    const heads: string[] = [];
+    const tails: string[] = [];
+    for (const i of this.voltages) heads.push(`const x${i}=x[${i}],l${i}=l[${i}];`);
+    for (const place of this.places) heads.push(`let j${place}=c[${place}];`);
+    for (let i = 0; i < this.ground; i++) {
+      if (this.rows.has(i)) heads.push(`let r${i}=0,s${i}=0;`);
+      tails.push(this.rows.has(i) ? `r[${i}]=r${i};s[${i}]=s${i};` : `r[${i}]=0;s[${i}]=0;`);
+    }
+    for (let place = 1; place < constantSlopes.length; place++) {
+      tails.push(`j[${place}]=${this.places.has(place) ? `j${place}` : `c[${place}]`};`);
+    }
+    const text = [
+      "const {x,low:l,residual:r,scale:s,jacobian:j}=state;",
+      ...this.objects.map((_, k) => `const o${k}=objects[${k}];`),
+      "return ()=>{",
+      "const share=state.share;",
+      ...heads,
+      ...this.lines,
+      ...tails,
+      "};",
+    ].join("\n");
+    const maker = compiled<Maker>("state,c,objects,exp,expm1", text);
+    return maker === null ? null : maker(state, constantSlopes, this.objects, exp, expm1);
+  }
+}
