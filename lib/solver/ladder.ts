@@ -1,18 +1,33 @@
 import type { System } from "@/lib/circuit/system";
 import { largestResidual } from "./acceptance";
+import { Aided } from "./aided";
 import { Certificate } from "./certificate";
+import { damped } from "./damped";
 import { freeUnknowns } from "./dense";
 import type { SparseShape } from "./elimination";
+import { homotopy } from "./homotopy";
+import { lineSearch } from "./line-search";
 import { LinearSolver } from "./linear";
 import { type Attempt, type Bench, newton } from "./newton";
 import { type Outcome, RUNGS, type Rung } from "./outcome";
+import { pseudoTransient } from "./pseudo-transient";
 import { ramp } from "./ramp";
+import { shuntRamp } from "./shunt-ramp";
 import { unsettled } from "./unsettled";
 
 const WARM_STEPS = 12;
 const COLD_STEPS = 100;
+const SEARCH_STEPS = 60;
 /** Singular points of a strand whose matrix is decomposed; each may cost as much as a hundred points. */
 const MOST_DIAGNOSES = 16;
+
+/** Rungs that cost a thousand steps; after so many failed points in a row the next is not tried on them. */
+const DEAR: ReadonlySet<Rung> = new Set(["pseudo-transient", "shunt ramp", "homotopy"]);
+const MOST_DEAR = 3;
+/** A point that fails on every rung is reported as this one left it: at the largest part of the sources that it could bear. */
+const REPORTED: Rung = "source ramp";
+
+type Failed = Omit<Exclude<Outcome, { kind: "converged" }>, "iterations">;
 
 /** Solves a system point by point, each by the first rung of the ladder that leads to an accepted solution. */
 export class Ladder {
@@ -20,6 +35,8 @@ export class Ladder {
   private readonly linear: LinearSolver;
   private readonly shape: SparseShape;
   private readonly certificate: Certificate;
+  /** Points that failed since one was solved. */
+  private failures = 0;
   /** Diagnoses that the present strand may still have. */
   private diagnoses = MOST_DIAGNOSES;
 
@@ -46,6 +63,7 @@ export class Ladder {
     this.linear.reset();
     this.certificate.reset();
     this.diagnoses = MOST_DIAGNOSES;
+    this.failures = 0;
   }
 
   /** Solves the point to which the system is turned; with `isWarm` from the present unknowns first. */
@@ -53,23 +71,29 @@ export class Ladder {
     const { bench, system } = this;
     const { circuit, state } = system;
     let iterations = 0;
-    let last: Attempt = { kind: "iteration limit", iterations: 0, wasSingular: false };
-    let rung: Rung = "newton";
-    for (rung of RUNGS) {
+    let failed: Failed | null = null;
+    for (const rung of RUNGS) {
       if (rung === "warm start" && !isWarm) continue;
+      if (DEAR.has(rung) && this.failures >= MOST_DEAR) continue;
       state.share = 1;
-      last = this.attempt(rung);
-      iterations += last.iterations;
-      if (last.kind === "converged") break;
+      const { kind, wasSingular, ...spent } = this.attempt(rung);
+      iterations += spent.iterations;
+      if (kind === "converged") {
+        this.failures = 0;
+        const bound = this.isProving ? this.certificate.prove() : Number.NaN;
+        return { kind, iterations, residual: largestResidual(circuit, state), bound, rung };
+      }
+      if (rung !== REPORTED) continue;
+      const free = wasSingular && this.diagnoses-- > 0 ? freeUnknowns(this.shape, state.jacobian) : [];
+      failed = { kind, rung, residual: largestResidual(circuit, state), unsettled: unsettled(bench, free) };
     }
-    const { kind, wasSingular } = last;
-    const residual = largestResidual(circuit, state);
-    if (kind === "converged") {
-      const bound = this.isProving ? this.certificate.prove() : Number.NaN;
-      return { kind, iterations, residual, bound, rung };
-    }
-    const free = wasSingular && this.diagnoses-- > 0 ? freeUnknowns(this.shape, state.jacobian) : [];
-    return { kind, iterations, residual, rung, unsettled: unsettled(bench, free) };
+    this.failures += 1;
+    return { ...failed!, iterations };
+  }
+
+  private standAtRest(): void {
+    this.system.state.x.fill(0);
+    this.system.state.low.fill(0);
   }
 
   private attempt(rung: Rung): Attempt {
@@ -80,8 +104,20 @@ export class Ladder {
       case "newton":
         this.system.startCold();
         return newton(this.bench, false, COLD_STEPS);
+      case "line search":
+        this.standAtRest();
+        return lineSearch(this.bench, SEARCH_STEPS);
+      case "damped newton":
+        this.standAtRest();
+        return damped(this.bench, SEARCH_STEPS);
+      case "pseudo-transient":
+        return pseudoTransient(this.bench, new Aided(this.system));
       case "source ramp":
         return ramp(this.bench);
+      case "shunt ramp":
+        return shuntRamp(this.bench, new Aided(this.system));
+      case "homotopy":
+        return homotopy(this.bench, new Aided(this.system));
     }
   }
 }

@@ -63,7 +63,7 @@ function tame({ x, low }: State): void {
 }
 
 /** Takes the accepted step and one more; the count of steps, or 0 where the unknowns then fail the test that they passed. */
-function polish({ system, linear, step }: Bench): number {
+export function polish({ system, linear, step }: Bench): number {
   const { state, circuit } = system;
   for (let n = 0; n < POLISHING; n++) {
     advance(state, step);

@@ -1,5 +1,14 @@
 /** Rungs of the ladder (engine.md), tried in this order; the one that solved a point is kept with it. */
-export const RUNGS = ["warm start", "newton", "source ramp"] as const;
+export const RUNGS = [
+  "warm start",
+  "newton",
+  "line search",
+  "damped newton",
+  "pseudo-transient",
+  "source ramp",
+  "shunt ramp",
+  "homotopy",
+] as const;
 export type Rung = (typeof RUNGS)[number];
 
 export const OUTCOMES = ["converged", "iteration limit", "step too small", "singular", "not finite"] as const;

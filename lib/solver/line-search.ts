@@ -1,0 +1,62 @@
+import type { State } from "@/lib/circuit/state";
+import { advance } from "@/lib/circuit/state";
+import { isAccepted } from "./acceptance";
+import { type Attempt, type Bench, polish } from "./newton";
+
+/** Part of the linear model's decrease that is asked for (Armijo, Pacific J. Math. 16, 1966). */
+const ASKED = 1e-4;
+const LEAST = 1e-9;
+/** A shortened step is at least this part of the one before. */
+const CLAMP = 0.1;
+
+/**
+ * Newton's method on the laws themselves from the present unknowns, every step shortened until the sum of squares of the residual,
+ * each row in units of what it sums where the step begins, falls as Armijo's rule asks. At most `most` iterations.
+ */
+export function lineSearch(bench: Bench, most: number): Attempt {
+  const { system, linear, step } = bench;
+  const { state, circuit } = system;
+  const x = new Float64Array(state.x.length);
+  const low = new Float64Array(state.x.length);
+  const weights = new Float64Array(circuit.size);
+  system.settle();
+  system.assemble();
+  for (let iterations = 1; iterations <= most; iterations++) {
+    if (!linear.solve(state.jacobian, state.residual, step)) {
+      const isNumber = state.residual.every(Number.isFinite);
+      return { kind: isNumber ? "singular" : "not finite", iterations, wasSingular: isNumber };
+    }
+    if (isAccepted(circuit, state, step)) {
+      const polished = polish(bench);
+      if (polished > 0) return { kind: "converged", iterations: iterations + polished, wasSingular: false };
+    }
+    for (let i = 0; i < circuit.size; i++) weights[i] = 1 / (state.scale[i]! + Number.MIN_VALUE);
+    const before = merit(state, weights);
+    x.set(state.x);
+    low.set(state.low);
+    let part = 1;
+    for (;;) {
+      advance(state, step);
+      system.settle();
+      system.assemble();
+      const after = merit(state, weights);
+      if (after <= (1 - 2 * ASKED * part) * before) break;
+      state.x.set(x);
+      state.low.set(low);
+      // The parabola through both merits and the slope −2·before at the beginning.
+      const shrink = Number.isFinite(after) ? before / (after + before) : 0;
+      const next = part * Math.min(0.5, Math.max(CLAMP, shrink));
+      if (next < LEAST) return { kind: "step too small", iterations, wasSingular: false };
+      for (let j = 0; j < step.length; j++) step[j]! *= next / part;
+      part = next;
+    }
+  }
+  return { kind: "iteration limit", iterations: most, wasSingular: false };
+}
+
+/** Σ (weight_i·F_i)². */
+function merit({ residual }: State, weights: Float64Array): number {
+  let sum = 0;
+  for (let i = 0; i < weights.length; i++) sum += (weights[i]! * residual[i]!) ** 2;
+  return sum;
+}
