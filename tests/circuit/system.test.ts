@@ -12,6 +12,12 @@ model qn : npn { Is = 2 fA, beta_f = 100, beta_r = 2, Va_f = 50 V, Va_r = 9 V, b
 model qp : pnp { Is = 1 fA, beta_f = 60, Va_f = 30 V }
 model amp : opamp { gain = 1e5, offset = 1 mV, bias = 10 nA }
 model ideal : opamp { }
+model lit : diode { Is = 1 nA, n = 1.5, Rs = 3 Ω, V_breakdown = 0.2 V, I_breakdown = 1 µA, n_breakdown = 4, photocurrent = 1 µA }
+model full : npn {
+  Is = 2 fA, beta_f = 100, beta_r = 2, Va_f = 50 V, I_leak_e = 1 pA, I_leak_c = 2 pA, n_leak_c = 1.5,
+  I_knee_f = 10 nA, I_knee_r = 1 nA, R_base = 120 Ω, R_emitter = R / 1e4, R_collector = 0 Ω
+}
+model swing : opamp { gain = 3, offset = 1 mV, offset_drift = 2 µV/K, bias = 10 nA, bias_offset = 1 nA, R_out = 50 Ω, out_low = 0.1 V, out_high = 0.3 V }
 ground -- V1 : voltage V -- a -- R1 : resistor R { drift = 100 ppm/K } -- b
 b -- D1 : d -- c
 ground -- I1 : current I -- c
@@ -21,6 +27,12 @@ f -- R2 : resistor 1 kΩ -- ground
 A1 : amp { plus = c, minus = g, out = g }
 A2 : ideal { plus = g, minus = h, out = h }
 h -- R3 : resistor 2 kΩ -- ground
+b -- D2 : lit -- h
+Q3 : full { c = a, b = c, e = k }
+A3 : swing { plus = k, minus = c, out = m }
+G1 : gain { plus = a, minus = k, out = n, ratio = -2 }
+m -- L1 : law { amps = 1 mA * tanh(L1.v / 1 V) + 0.1 * Q2.e.i + R2.p / 1 V } -- n
+L2 : law { plus = k, minus = h, volts = sqrt(1 V * a.v) + L2.i * 1 kΩ + Q3.b.i * R }
 show R1.i`;
 
 function jobOf(text: string): Job {
@@ -49,8 +61,11 @@ describe("the unknowns", () => {
   test("are every net but ground, then every branch current, by the names of the language", () => {
     const { circuit } = jobOf(EVERY_KIND);
     expect(circuit.unknowns.map(({ name, unit }) => `${name} ${unit}`)).toEqual([
-      ...["a.v V", "b.v V", "c.v V", "f.v V", "g.v V", "h.v V"],
-      ...["V1.i A", "A1.out.i A", "A2.out.i A"],
+      ...["a.v V", "b.v V", "c.v V", "f.v V", "g.v V", "h.v V", "k.v V", "m.v V", "n.v V"],
+      // A resistance of plain 0 Ω has no net of its own, nor has the current of a law that is an unknown already.
+      ...["Q2.e_inner.v V", "R2.left_inner.v V", "Q3.b_inner.v V", "Q3.e_inner.v V"],
+      ...["V1.i A", "A1.out.i A", "A2.out.i A", "A3.out.i A", "G1.out.i A", "L2.i A"],
+      ...["Q2.e.i A", "R2.i A", "Q3.b.i A", "Q3.e.i A"],
     ]);
     expect(circuit.nets.get("ground")).toBe(circuit.size);
   });
@@ -61,7 +76,8 @@ describe("the modified nodal system", () => {
     const system = systemOf(EVERY_KIND);
     disturb(system);
     const residual = residualAt(system);
-    const nets = [...system.circuit.nets.values()];
+    const { unknowns, size } = system.circuit;
+    const nets = [...unknowns.keys()].filter((i) => unknowns[i]!.unit === "V").concat(size);
     const sum = nets.reduce((total, i) => total + residual[i]!, 0);
     const most = Math.max(...nets.map((i) => system.state.scale[i]!));
     expect(Math.abs(sum)).toBeLessThanOrEqual(1e-15 * most * nets.length);
