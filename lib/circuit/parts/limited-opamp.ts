@@ -6,8 +6,8 @@ import type { PointValues } from "../values";
 import { OpampPart } from "./opamp";
 
 /**
- * An amplifier whose output has limits: behind the output resistance it stands at L(s), s = A·(v_plus − v_minus + offset). The law
- * w·(L(s) − v_behind) = 0 has the weight w = 1/(1 + A·L'(s)), which keeps its slopes near 1 on both sides of a knee.
+ * An amplifier whose output has limits: behind the output resistance it stands at L(s), s = A·(v_plus − v_minus + offset). The law is
+ * kept divided by A as without limits, (L(s) − v_behind)/A = 0, so that its slope by the inputs is L'(s).
  */
 export class LimitedOpampPart extends OpampPart implements JunctionPart, Proof {
   override readonly proof: Proof = this;
@@ -18,7 +18,6 @@ export class LimitedOpampPart extends OpampPart implements JunctionPart, Proof {
   private readonly law = { v: 0, slope: 1 };
   /** It has been from one limit to the other since it last settled; more than once would be to and fro. */
   private hasJumped = false;
-  private weight = 1;
 
   override read(values: PointValues): void {
     super.read(values);
@@ -66,14 +65,13 @@ export class LimitedOpampPart extends OpampPart implements JunctionPart, Proof {
     this.addCurrents(state);
     const { branch, law, gain, s, places } = this;
     limited(this.limits, s, law);
-    const weight = 1 / (1 + gain * law.slope);
-    this.weight = weight;
+    const weight = 1 / gain;
     state.residual[branch] = weight * (law.v + law.slope * (this.asked(state) - s) - this.behind(state));
     state.scale[branch] = weight * (Math.abs(law.v) + this.around(state));
     const { jacobian } = state;
     const [, byPlus, byMinus, byOut, byCurrent] = places;
-    jacobian[byPlus]! += weight * gain * law.slope;
-    jacobian[byMinus]! -= weight * gain * law.slope;
+    jacobian[byPlus]! += law.slope;
+    jacobian[byMinus]! -= law.slope;
     jacobian[byOut]! -= weight;
     jacobian[byCurrent]! += weight * this.ohms;
   }
@@ -88,18 +86,18 @@ export class LimitedOpampPart extends OpampPart implements JunctionPart, Proof {
   }
 
   addDoubt(state: State, doubt: Float64Array): void {
-    const { branch, law, gain, weight, limits } = this;
+    const { branch, law, gain, limits } = this;
     const inputs = Math.abs(state.x[this.plus]!) + Math.abs(state.x[this.minus]!) + Math.abs(this.offset);
     const knees = Math.abs(limits.low ?? 0) + Math.abs(limits.high ?? 0) + KNEE;
     const outputs = Math.abs(law.v) + this.around(state) + knees;
-    doubt[branch]! += UNIT * weight * (8 * gain * law.slope * inputs + 16 * outputs);
+    doubt[branch]! += UNIT * (8 * law.slope * inputs + (16 * outputs) / gain);
   }
 
   /** |d ln L'/ds| ≤ 1/κ, since L' is a product of two logistic functions of opposite directions. */
   addSpread(_: State, radius: number, weights: Float64Array, spread: Float64Array): void {
-    const { branch, law, gain, weight } = this;
+    const { branch, law, gain } = this;
     const both = weights[this.plus]! + weights[this.minus]!;
     const rise = Math.expm1((gain * radius * both) / KNEE) + 64 * UNIT * (1 + Math.abs(this.s) / KNEE);
-    spread[branch]! += weight * gain * law.slope * rise * both;
+    spread[branch]! += law.slope * rise * both;
   }
 }
