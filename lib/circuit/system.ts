@@ -5,6 +5,8 @@ import type { Circuit } from "./circuit";
 import type { Bench, JunctionPart, Part } from "./part";
 import { CurrentPart } from "./parts/current";
 import { DiodePart } from "./parts/diode";
+import { GainPart } from "./parts/gain";
+import { LawPart } from "./parts/law";
 import { LimitedOpampPart } from "./parts/limited-opamp";
 import { OpampPart } from "./parts/opamp";
 import { ResistorPart } from "./parts/resistor";
@@ -40,8 +42,9 @@ export class System {
     const models = new Map(design.models.map((model) => [model.name, model]));
     const { pattern, values } = this;
     const modelOf = ({ model }: Element) => (model === null ? null : models.get(model)!);
+    const named = new Map(design.elements.map((element) => [element.name, element]));
     const elements = design.elements.map((element) =>
-      partOf(element, { element, model: modelOf(element), circuit, pattern, values }),
+      partOf(element, { element, model: modelOf(element), circuit, pattern, values }, named),
     );
     const terminals = [...circuit.terminals.values()].map(
       (terminal) =>
@@ -132,7 +135,7 @@ function isJunction(part: Part): part is JunctionPart {
   return "settle" in part;
 }
 
-function partOf({ kind }: Element, bench: Bench): Part {
+function partOf({ kind }: Element, bench: Bench, named: ReadonlyMap<string, Element>): Part {
   switch (kind) {
     case "resistor":
       return new ResistorPart(bench);
@@ -145,14 +148,15 @@ function partOf({ kind }: Element, bench: Bench): Part {
     case "npn":
     case "pnp":
       return new TransistorPart(bench);
+    case "gain":
+      return new GainPart(bench);
+    case "law":
+      return new LawPart(bench, named);
     case "opamp": {
       const { params } = bench.model!;
       return params.has("out_low") || params.has("out_high")
         ? new LimitedOpampPart(bench)
         : new OpampPart(bench);
     }
-    case "law":
-    case "gain":
-      throw new Error("The checker lets no law or gain through.");
   }
 }
