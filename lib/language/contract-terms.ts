@@ -1,10 +1,11 @@
 import { type Dimension, divide, PURE } from "@/lib/units/dimension";
 import type { Agreement } from "./agreement";
-import type { ReductionName, Show, Signal, Typed } from "./ast";
+import type { ReductionName, Show, Typed } from "./ast";
 import type { Names } from "./names";
 import type { Ranks } from "./rank";
 import { REDUCTIONS, type ReductionShape } from "./reductions";
 import type { Report } from "./report";
+import { signalName } from "./signals-of";
 import type { Span } from "./span";
 import type { Expression, Word } from "./syntax";
 import { quote } from "./token";
@@ -190,10 +191,4 @@ export class ContractTerms implements ContractPlace {
 
 function plain(typed: Typed): Judged {
   return { typed, point: false };
-}
-
-/** A signal as the language writes it. */
-function signalName(signal: Signal): string {
-  if (signal.of === "net") return `${signal.net}.v`;
-  return `${signal.element}.${signal.of === "pin" ? `${signal.pin}.i` : signal.quantity}`;
 }

@@ -1,0 +1,110 @@
+import type { Job } from "./compile";
+import { placeOnAxes } from "./plan";
+import { readAll } from "./readings";
+import type { ReadingDocument } from "./result";
+import { Rows } from "./rows";
+import { type Sensitivities, sensitivitiesOf } from "./sensitivity";
+
+/** What one toleranced value, or the common part of a track group, costs a reading. */
+export interface BudgetPart {
+  /** A part, or `track GROUP`. */
+  readonly part: string;
+  /** The name of its value; empty for a group. */
+  readonly parameter: string;
+  /** Change of the reading, in its unit, where the value goes to the upper end of its tolerance. */
+  readonly effect: number;
+  /** Change of the reading by one coherent unit of the value; null for a group. */
+  readonly slope: number | null;
+  /** Its share of the variance of the reading, 0 to 1. */
+  readonly share: number;
+}
+
+/** The error budget of a reading at one setting of the outer knobs. */
+export interface Budget {
+  readonly reading: string;
+  readonly unit: string;
+  readonly at: readonly { readonly knob: string; readonly unit: string; readonly value: number }[];
+  readonly nominal: number;
+  /** The reading with every value at that end of its tolerance which makes it least and most, to first order. */
+  readonly low: number;
+  readonly high: number;
+  /** Standard deviation to first order. */
+  readonly sigma: number;
+  /** The costliest first. */
+  readonly parts: readonly BudgetPart[];
+}
+
+/** Step of a reading's own difference, in half-widths of a variable. */
+const STEP = 0.01;
+
+/** Values worked out at most (nominal points × traces × variables and unknowns); a larger run has no budget. */
+const MOST_WORK = 2_000_000;
+
+/**
+ * Error budgets of every reading that is a number, to first order about the nominal design: variance Σ (s·σ)² with the share of
+ * each part (s·σ)²/Σ, worst case Σ |s·half-width|. Null where the run is too large, empty where nothing has a tolerance.
+ */
+export function budgetsOf(job: Job): Budget[] | null {
+  const { design, plan, circuit } = job;
+  const points = plan.points / (plan.draws + 1);
+  if (design.reads.length === 0) return [];
+  const toleranced = design.elements.length + design.lets.length;
+  if (points * Math.max(1, plan.traces.length) * (toleranced + circuit.size) > MOST_WORK) return null;
+  const found = sensitivitiesOf(job);
+  if (found.variables.length === 0) return [];
+  const nominal = { design, plan: { ...plan, draws: 0, points } };
+  const read = (traces: readonly Float64Array[]) => readAll(nominal, new Rows(nominal, { traces }));
+  const base = read(found.traces);
+  const effects = found.variables.map((_, v) => effectsOf(found, v, read));
+  return base.flatMap((reading, r) =>
+    reading.per === "point"
+      ? []
+      : reading.values.flatMap((value, row) => {
+          const of = effects.map((all) => all[r]![row]!);
+          if (value === null || !of.every(Number.isFinite)) return [];
+          const length = points / reading.values.length;
+          const places = placeOnAxes(plan, row * length).slice(1);
+          const at = places.map((place, i) => {
+            const { knob, unit, values } = plan.axes[i + 1]!;
+            return { knob, unit, value: values[place]! };
+          });
+          return [
+            { reading: reading.name, unit: reading.unit, at, nominal: value, ...budgetOf(value, of, found) },
+          ];
+        }),
+  );
+}
+
+/** Changes of every reading per half-width of a variable, by reading and row. */
+function effectsOf(
+  { traces, slopes }: Sensitivities,
+  v: number,
+  read: (traces: readonly Float64Array[]) => readonly ReadingDocument[],
+): number[][] {
+  const moved = (by: number) =>
+    read(traces.map((column, j) => column.map((value, i) => value + by * slopes[v]![j]![i]!)));
+  const [down, up] = [moved(-STEP), moved(STEP)];
+  const [far, wide] = [moved(-2 * STEP), moved(2 * STEP)];
+  return up.map(({ values }, r) =>
+    values.map((_, row) => {
+      const of = (all: readonly ReadingDocument[]) => all[r]!.values[row] ?? Number.NaN;
+      return (8 * (of(up) - of(down)) - (of(wide) - of(far))) / (12 * STEP);
+    }),
+  );
+}
+
+function budgetOf(
+  nominal: number,
+  effects: readonly number[],
+  { variables }: Sensitivities,
+): Pick<Budget, "low" | "high" | "sigma" | "parts"> {
+  const variance = effects.reduce((sum, effect, v) => sum + (effect * variables[v]!.sigma) ** 2, 0);
+  const reach = effects.reduce((sum, effect) => sum + Math.abs(effect), 0);
+  const parts = variables.map(({ part, parameter, sigma, half }, v): BudgetPart => {
+    const effect = effects[v]!;
+    const share = variance === 0 ? 0 : (effect * sigma) ** 2 / variance;
+    return { part, parameter, effect, slope: half === null ? null : effect / half, share };
+  });
+  parts.sort((a, b) => b.share - a.share);
+  return { low: nominal - reach, high: nominal + reach, sigma: Math.sqrt(variance), parts };
+}
