@@ -8,6 +8,8 @@ const RESIDUAL_FLOOR = 1e-18;
 const STEP = 1e-9;
 /** V. */
 const STEP_FLOOR = 1e-9;
+/** Newton's error after a step of d is d²/(2·n·V_T): after 2e-10 V, less than 1e-18 V. */
+const LAST_STEP = 2e-10;
 
 /**
  * The acceptance test. `state` must be assembled with every junction linearised at its actual voltage; `step` is the undamped
@@ -20,10 +22,8 @@ export function isAccepted(
   state: State,
   step: Float64Array,
 ): boolean {
-  const { x, residual, scale } = state;
-  for (let i = 0; i < size; i++) {
-    if (!(Math.abs(residual[i]!) <= RESIDUAL * scale[i]! + RESIDUAL_FLOOR)) return false;
-  }
+  if (!balances(size, state)) return false;
+  const { x, scale } = state;
   const nets = unknowns.length - branchNets.length;
   for (let j = 0; j < nets; j++) {
     if (!(Math.abs(step[j]!) <= STEP_FLOOR + STEP * Math.abs(x[j]!))) return false;
@@ -32,6 +32,22 @@ export function isAccepted(
     const [from, to] = branchNets[j - nets]!;
     const currents = Math.abs(x[j]!) + (from < size ? scale[from]! : 0) + (to < size ? scale[to]! : 0);
     if (!(Math.abs(step[j]!) <= STEP * currents + RESIDUAL_FLOOR)) return false;
+  }
+  return true;
+}
+
+/** The part of the test that does not look at a step: what is left over at every net and branch law. */
+export function balances(size: number, { residual, scale }: State): boolean {
+  for (let i = 0; i < size; i++) {
+    if (!(Math.abs(residual[i]!) <= RESIDUAL * scale[i]! + RESIDUAL_FLOOR)) return false;
+  }
+  return true;
+}
+
+/** Whether an accepted step is so short that what it leaves is below the rounding of the unknowns. */
+export function isLast({ unknowns, branchNets }: Circuit, { x }: State, step: Float64Array): boolean {
+  for (let j = unknowns.length - branchNets.length - 1; j >= 0; j--) {
+    if (!(Math.abs(step[j]!) <= LAST_STEP * (1 + Math.abs(x[j]!)))) return false;
   }
   return true;
 }

@@ -1,6 +1,7 @@
 import type { System } from "@/lib/circuit/system";
 import type { SparseShape } from "./elimination";
 import { type Linear, LinearSolver } from "./linear";
+import type { Bench } from "./newton";
 
 /**
  * The system with an aid that is turned on and off: a conductance from every net to a fixed voltage of its own, and for every amplifier
@@ -49,17 +50,10 @@ export class Aided implements Linear {
   }
 
   solve(jacobian: Float64Array, residual: Float64Array, step: Float64Array): boolean {
-    return this.linear.solve(this.apply(jacobian, residual), residual, step);
-  }
-
-  /** Adds the aid to `residual` and gives the slopes with it, in the places of `shape`. */
-  apply(jacobian: Float64Array, residual: Float64Array): Float64Array {
-    this.aid(residual);
-    return this.aidedValues(jacobian);
+    return this.linear.solve(this.aidedValues(jacobian), residual, step);
   }
 
   solveAgain(residual: Float64Array, step: Float64Array): void {
-    this.aid(residual);
     this.linear.solveAgain(residual, step);
   }
 
@@ -74,8 +68,15 @@ export class Aided implements Linear {
     return sign * (x[column]! - this.origin[column]! + low[column]!);
   }
 
-  private aid(residual: Float64Array): void {
-    const { scale } = this.system.state;
+  /** A bench on which the aid helps: its currents go into every residual, its slopes into every Jacobian. */
+  bench(step: Float64Array): Bench {
+    return { system: this.system, linear: this, step, assemble: () => this.assemble() };
+  }
+
+  assemble(): void {
+    const { system } = this;
+    system.assemble();
+    const { residual, scale } = system.state;
     for (let k = 0; k < this.aids.length; k++) {
       const amperes = this.conductance * this.pull(k);
       residual[this.aids[k]!.row]! += amperes;
@@ -83,8 +84,8 @@ export class Aided implements Linear {
     }
   }
 
-  /** The Jacobian at hand with the aid's slopes. */
-  private aidedValues(jacobian: Float64Array): Float64Array {
+  /** The Jacobian at hand with the aid's slopes, in the places of `shape`. */
+  aidedValues(jacobian: Float64Array): Float64Array {
     const { values, aids, conductance } = this;
     values.fill(0, jacobian.length);
     values.set(jacobian);

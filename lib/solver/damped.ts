@@ -32,7 +32,7 @@ export function damped(bench: Bench, most: number): Attempt {
     }
     if (isAccepted(circuit, state, step)) {
       const polished = polish(bench);
-      if (polished > 0) return { kind: "converged", iterations: iterations + polished, wasSingular: false };
+      if (polished >= 0) return { kind: "converged", iterations: iterations + polished, wasSingular: false };
       continue;
     }
     x.set(state.x);

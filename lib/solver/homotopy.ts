@@ -28,7 +28,7 @@ export function homotopy(bench: Bench, aided: Aided): Attempt {
   const curved = new Tied(system, aided);
   curved.turn(-FIRST);
   system.startCold();
-  const start = newton({ system, linear: aided, step: bench.step }, false, START_STEPS);
+  const start = newton(aided.bench(bench.step), false, START_STEPS);
   if (start.kind !== "converged") return start;
   const curve = new Curve(system, curved, -FIRST, 1);
   let length = FIRST_STEP;
@@ -63,11 +63,11 @@ class Tied implements Curved {
 
   linearise(slope: Float64Array): Float64Array {
     const { system, aided } = this;
-    system.assemble();
+    aided.assemble();
     slope.fill(0);
     for (let k = 0; k < aided.aids.length; k++) {
       slope[aided.aids[k]!.row]! -= Math.LN10 * aided.conductance * aided.pull(k);
     }
-    return aided.apply(system.state.jacobian, system.state.residual);
+    return aided.aidedValues(system.state.jacobian);
   }
 }

@@ -54,7 +54,12 @@ export class Ladder {
       columns: Int32Array.from(pattern.columns),
     };
     this.linear = new LinearSolver(this.shape, state.jacobian);
-    this.bench = { system, linear: this.linear, step: new Float64Array(circuit.size) };
+    this.bench = {
+      system,
+      linear: this.linear,
+      step: new Float64Array(circuit.size),
+      assemble: () => system.assemble(),
+    };
     this.certificate = new Certificate(system, this.linear);
   }
 

@@ -28,7 +28,7 @@ export function lineSearch(bench: Bench, most: number): Attempt {
     }
     if (isAccepted(circuit, state, step)) {
       const polished = polish(bench);
-      if (polished > 0) return { kind: "converged", iterations: iterations + polished, wasSingular: false };
+      if (polished >= 0) return { kind: "converged", iterations: iterations + polished, wasSingular: false };
     }
     for (let i = 0; i < circuit.size; i++) weights[i] = 1 / (state.scale[i]! + Number.MIN_VALUE);
     const before = merit(state, weights);

@@ -1,16 +1,16 @@
 import { advance, type State } from "@/lib/circuit/state";
 import type { System } from "@/lib/circuit/system";
-import { isAccepted } from "./acceptance";
+import { balances, isAccepted, isLast } from "./acceptance";
 import type { Linear } from "./linear";
 import type { OutcomeKind } from "./outcome";
 
-/** Steps that follow acceptance, with the Jacobian at hand, so that closed forms agree to the last digits. */
-const POLISHING = 2;
+/** Steps that follow acceptance at most, with the Jacobian at hand, so that closed forms agree to the last digits. */
+const POLISHING = 3;
 
 /** V, A. While steps are limited, unknowns beyond this are dropped: their rounding would hide what the junctions have reached. */
 const WILD = 1e4;
 
-/** What one run of Newton's method came to; `iterations` counts every step taken or weighed. */
+/** What one run of Newton's method came to; `iterations` counts every linear system solved, polishing included. */
 export interface Attempt {
   readonly kind: OutcomeKind;
   readonly iterations: number;
@@ -23,6 +23,8 @@ export interface Bench {
   readonly system: System;
   readonly linear: Linear;
   readonly step: Float64Array;
+  /** Fills residual, scale and Jacobian at the present unknowns, with whatever aids are on. */
+  readonly assemble: () => void;
 }
 
 /**
@@ -35,14 +37,14 @@ export function newton(bench: Bench, exact: boolean, most: number): Attempt {
   const { state, circuit } = system;
   let isExact = exact;
   for (let iterations = 1; iterations <= most; iterations++) {
-    system.assemble();
+    bench.assemble();
     if (!linear.solve(state.jacobian, state.residual, step)) {
       const areNumbers = state.residual.every(Number.isFinite) && state.jacobian.every(Number.isFinite);
       return { kind: areNumbers ? "singular" : "not finite", iterations, wasSingular: areNumbers };
     }
     if (isExact && isAccepted(circuit, state, step)) {
       const polished = polish(bench);
-      if (polished > 0) {
+      if (polished >= 0) {
         return { kind: "converged", iterations: iterations + polished, wasSingular: false };
       }
     } else advance(state, step);
@@ -62,14 +64,18 @@ function tame({ x, low }: State): void {
   low.fill(0);
 }
 
-/** Takes the accepted step and one more; the count of steps, or 0 where the unknowns then fail the test that they passed. */
-export function polish({ system, linear, step }: Bench): number {
+/**
+ * Takes the accepted step, and more with the Jacobian at hand until one is so short that it is the last. Leaves the system assembled at the
+ * unknowns. The count of further steps weighed, or −1 where the unknowns then fail the test that they passed.
+ */
+export function polish({ system, linear, step, assemble }: Bench): number {
   const { state, circuit } = system;
-  for (let n = 0; n < POLISHING; n++) {
+  for (let more = 0; ; more++) {
+    const ends = more === POLISHING || isLast(circuit, state, step);
     advance(state, step);
     system.settle();
-    system.assemble();
+    assemble();
+    if (ends) return balances(circuit.size, state) ? more : -1;
     linear.solveAgain(state.residual, step);
   }
-  return isAccepted(circuit, state, step) ? POLISHING : 0;
 }

@@ -14,7 +14,7 @@ export type Rung = (typeof RUNGS)[number];
 export const OUTCOMES = ["converged", "iteration limit", "step too small", "singular", "not finite"] as const;
 export type OutcomeKind = (typeof OUTCOMES)[number];
 
-/** What became of one point. `iterations` counts every Newton step over all rungs tried; `residual` is the largest |F_i|, A. */
+/** What became of one point. `iterations` counts every linear system solved over all rungs tried; `residual` is the largest |F_i|, A. */
 export type Outcome =
   | {
       readonly kind: "converged";

@@ -32,7 +32,7 @@ export function pseudoTransient(bench: Bench, aided: Aided): Attempt {
     state.share = Math.min(1, iterations / RISE);
     for (let j = 0; j < nets; j++) aided.origin[j] = state.x[j]! + state.low[j]!;
     system.settle();
-    system.assemble();
+    aided.assemble();
     if (!aided.solve(state.jacobian, state.residual, step)) {
       const isNumber = state.residual.every(Number.isFinite);
       return { kind: isNumber ? "singular" : "not finite", iterations, wasSingular: isNumber };

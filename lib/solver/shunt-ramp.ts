@@ -17,7 +17,7 @@ const MOST_STEPS = 600;
 export function shuntRamp(bench: Bench, aided: Aided): Attempt {
   const { system } = bench;
   const { state } = system;
-  const helped: Bench = { system, linear: aided, step: bench.step };
+  const helped = aided.bench(bench.step);
   const x = new Float64Array(state.x.length);
   const low = new Float64Array(state.x.length);
   aided.origin.fill(0);

@@ -52,4 +52,4 @@ test("random transistor networks are solved, and their currents balance by the l
     }
   }
   expect(solved).toBeGreaterThan(80);
-});
+}, 60_000);

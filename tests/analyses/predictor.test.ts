@@ -21,6 +21,19 @@ describe("the predictor", () => {
     expect(predictions(curve, 6)).toEqual([null, 3, 17, curve(3), curve(4), curve(5)]);
   });
 
+  test("follows a smooth curve by up to seven neighbours, to the last digits", () => {
+    const curve = (k: number) => 0.6 + 0.0257 * Math.log(100 + k);
+    const predicted = predictions(curve, 40);
+    // ∇⁷ of the logarithm at 110 is 720·0.0257/110⁷ = 1e-13.
+    for (let k = 12; k < 40; k++) expect(Math.abs(predicted[k]! - curve(k))).toBeLessThan(1e-12);
+  });
+
+  test("takes a lower degree where a higher one overshoots", () => {
+    const curve = (k: number) => (k < 20 ? 1 : 1 + 0.001 * (k - 20) + 0.0001 * Math.sin(1e6 * k));
+    const predicted = predictions(curve, 60);
+    for (let k = 30; k < 60; k++) expect(Math.abs(predicted[k]! - curve(k))).toBeLessThan(0.002);
+  });
+
   test("starts anew after a point that failed", () => {
     const curve = (k: number) => (k === 2 ? null : k);
     expect(predictions(curve, 6)).toEqual([null, 0, 2, null, 3, 5]);

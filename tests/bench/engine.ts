@@ -58,7 +58,12 @@ function sweepWith(job: Job, linearOf: (shape: SparseShape, system: System) => L
   system.startCold();
   system.assemble();
   const shape = { size: circuit.size, rows: pattern.rows, columns: pattern.columns };
-  const bench = { system, linear: linearOf(shape, system), step: new Float64Array(circuit.size) };
+  const bench = {
+    system,
+    linear: linearOf(shape, system),
+    step: new Float64Array(circuit.size),
+    assemble: () => system.assemble(),
+  };
   const predictor = new Predictor(state);
   let iterations = 0;
   for (const value of values) {
