@@ -14,13 +14,20 @@ export function plainLine(text: string): Line {
   return { text, run: null, columns: [] };
 }
 
-/** A statement on one line, cut where its neighbours of the same form align: before `=`, or before `:` and `{`. */
+/**
+ * A statement on one line, cut where its neighbours of the same form align: before `=`, before `:` and `{`, before the windows and
+ * the name of a requirement.
+ */
 export function statementLine(statement: Statement, row: readonly Token[], tight: ReadonlySet<number>): Line {
   const text = composeLine(row, tight);
   const cuts = cutsOf(statement, row);
   if (cuts === null) return plainLine(text);
   const edges = [0, ...cuts, row.length];
-  const columns = edges.slice(1).map((to, i) => composeLine(row.slice(edges[i]!, to), tight));
+  const columns = edges.slice(1).map((to, i) => {
+    const part = row.slice(edges[i]!, to);
+    // Two spaces stand before a comment, one of them between the columns.
+    return (part[0]?.kind === "comment" ? " " : "") + composeLine(part, tight);
+  });
   return { text, run: statement.kind === "knob" ? "let" : statement.kind, columns };
 }
 
@@ -37,9 +44,29 @@ function cutsOf(statement: Statement, row: readonly Token[]): number[] | null {
       return [1, 2, brace];
     case "device":
       return [1, brace];
+    case "read":
+      return [1, 2, ...placesOf(row, [statement.windows[0]?.from])];
+    case "require": {
+      const { windows, share, label } = statement;
+      const before = (place: number | undefined) => row.findLast((token) => token.from < (place ?? 0))?.from;
+      return placesOf(row, [windows[0]?.from ?? before(share?.from), before(label?.from)]);
+    }
     default:
       return null;
   }
+}
+
+/** Indices of the tokens at these offsets; what is not there would stand where the next does, or at the end. */
+function placesOf(row: readonly Token[], offsets: readonly (number | undefined)[]): number[] {
+  const comment = row.findIndex((token) => token.kind === "comment");
+  let next = comment === -1 ? row.length : comment;
+  return offsets
+    .toReversed()
+    .map((offset) => {
+      if (offset !== undefined) next = row.findIndex((token) => token.from >= offset);
+      return next;
+    })
+    .toReversed();
 }
 
 /** Sets runs of neighbouring lines in columns. */
@@ -59,10 +86,9 @@ function setColumns(run: readonly Line[]): string[] {
   const widths = run[0]!.columns.map((_, i) => Math.max(...run.map((line) => width(line.columns[i]!))));
   return run.map(({ columns }) =>
     columns
-      .map((column, i) =>
-        i === columns.length - 1 ? column : column + " ".repeat(widths[i]! - width(column)),
-      )
-      .join(" "),
+      .flatMap((column, i) => (widths[i] === 0 ? [] : [column + " ".repeat(widths[i]! - width(column))]))
+      .join(" ")
+      .trimEnd(),
   );
 }
 

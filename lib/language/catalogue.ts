@@ -33,6 +33,8 @@ export const CATALOGUE = {
   NAM10: "An unknown function",
   NAM11: "A value that must not move",
   NAM12: "A block that contains itself",
+  NAM13: "A shelf that is not at hand",
+  NAM14: "A shelf with a problem of its own",
 
   UNI1: "An unknown unit",
   UNI2: "A prefix without its unit",

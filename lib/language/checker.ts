@@ -5,15 +5,16 @@ import { checkContract } from "./contract";
 import type { Diagnostic } from "./diagnostic";
 import { DrawsCheck } from "./draws-check";
 import { ElementCheck, modelKinds } from "./elements";
-import { Expander, type Flat } from "./expand";
+import { Expander, type Expansion, type Flat } from "./expand";
 import { FUNCTION_NAMES } from "./functions";
 import { tokenize } from "./lexer";
-import { count, MOST_ELEMENTS, MOST_TEXT, MOST_VALUES } from "./limits";
+import { count, LEAST_SHELF_TEXT, MOST_ELEMENTS, MOST_SHELF_TEXT, MOST_TEXT, MOST_VALUES } from "./limits";
 import { declareAll, Names } from "./names";
 import { Nominal } from "./nominal";
 import { parseTokens } from "./parser";
 import { Quantities } from "./quantities";
 import { Report } from "./report";
+import { type CheckShelf, type Library, Shelves } from "./shelves";
 import { checkShows } from "./shows";
 import type { Span } from "./span";
 import { SweepCheck } from "./sweeps";
@@ -29,8 +30,34 @@ export interface Checked {
   readonly diagnostics: Diagnostic[];
 }
 
+/** Where the texts are that `use` names; without it no shelf is at hand. */
+export interface CheckOptions {
+  readonly library?: Library | null;
+}
+
 /** Reads and checks a netlist text: everything but its wiring, which is checked on the design. Never throws; linear time. */
-export function check(text: string): Checked {
+export function check(text: string, { library = null }: CheckOptions = {}): Checked {
+  const shelves = new Map<string, Checked>();
+  let left = MOST_SHELF_TEXT;
+  const one = (own: string, active: readonly string[]): Checked | null => {
+    left -= Math.max(own.length, LEAST_SHELF_TEXT);
+    if (left < 0) return null;
+    const known = shelves.get(own);
+    if (known !== undefined) return known;
+    const checked = checkText(own, active, library, one);
+    shelves.set(own, checked);
+    return checked;
+  };
+  return checkText(text, [], library, one);
+}
+
+/** As `check`, for a text that the shelves `active` are being fetched around. */
+function checkText(
+  text: string,
+  active: readonly string[],
+  library: Library | null,
+  checkShelf: CheckShelf,
+): Checked {
   const report = new Report();
   if (text.length > MOST_TEXT) {
     const message = `The text has ${count(text.length)} characters, and a netlist can have ${count(MOST_TEXT)} at most; split it.`;
@@ -38,12 +65,19 @@ export function check(text: string): Checked {
     return { netlist: { statements: [] }, design: null, diagnostics: report.sorted() };
   }
   const { netlist } = parseTokens(tokenize(text, report), text.length, report);
-  const design = checkNetlist(netlist, text, report);
+  const shelves = new Shelves(library, checkShelf, report);
+  const imports = shelves.imports(netlist.statements, active);
+  const expansion = new Expander(report).file(netlist.statements, imports);
+  const design = checkExpansion(expansion, text, shelves.isComplete, report);
   return { netlist, design: report.hasErrors ? null : design, diagnostics: report.sorted() };
 }
 
-function checkNetlist(netlist: Netlist, source: string, report: Report): Design {
-  const { statements, trials, isWhole } = new Expander(report).file(netlist.statements, []);
+function checkExpansion(
+  { statements, trials, isWhole }: Expansion,
+  source: string,
+  isComplete: boolean,
+  report: Report,
+): Design {
   const names = new Names(report, FUNCTION_NAMES);
   const nominal = new Nominal();
   const known = new Map<string, Known>();
@@ -52,7 +86,7 @@ function checkNetlist(netlist: Netlist, source: string, report: Report): Design 
   const typing = new Typing(agreement, names, report, known, (element) => pins.get(element) ?? null);
   const quantities = new Quantities(typing, agreement, nominal, report);
 
-  names.isIncomplete = statements.some((one) => one.kind === "block" && !one.isClosed);
+  names.isIncomplete = !isComplete || statements.some((one) => one.kind === "block" && !one.isClosed);
   declareAll(statements, names);
   const kinds = modelKinds(statements, names, report);
   const wired = new Wirer(names, kinds, report).wire(statements);

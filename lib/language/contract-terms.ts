@@ -87,14 +87,14 @@ export class ContractTerms implements ContractPlace {
   }
 
   /** The trace that a signal is kept as: the one that shows it, or one of its own by its spelling. */
-  kept(signal: Typed, span: Span): Typed {
+  kept(signal: Typed, { from, to }: Span): Typed {
     if (signal.op !== "signal") return signal;
     const key = JSON.stringify(signal.signal);
     const name = signalName(signal.signal);
     const shown = [...this.traces.values()].find(
       ({ value }) => value.op === "signal" && JSON.stringify(value.signal) === key,
     );
-    if (shown === undefined) this.traces.set(name, { name, value: signal, ...span });
+    if (shown === undefined) this.traces.set(name, { name, value: signal, from, to });
     return { op: "trace", name: shown?.name ?? name, dimension: signal.dimension };
   }
 

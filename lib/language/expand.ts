@@ -39,16 +39,18 @@ export interface Expansion {
   readonly isWhole: boolean;
 }
 
-/** Names of a shelf, in a scope of their own, and what they need. */
+/** A model or block of a shelf: its name there, and in the file. */
+interface Offer {
+  readonly local: string;
+  readonly name: string;
+  readonly block: BlockDefinition | null;
+  readonly kind: string | null;
+}
+
+/** What a shelf offers, and the statements that declare it under the names of the file. */
 export interface Import {
-  readonly scope: Scope;
   readonly statements: readonly Flat[];
-  /** Names that the file may use, with the places to report a clash at. */
-  readonly offered: readonly {
-    readonly name: string;
-    readonly block: BlockDefinition | null;
-    readonly kind: string | null;
-  }[];
+  readonly offered: readonly Offer[];
 }
 
 /** Takes blocks apart: every instance becomes the statements of its body under dotted names. */
@@ -72,7 +74,7 @@ export class Expander {
     const scope = new Scope("", null);
     for (const { statements: needed, offered } of imports) {
       this.flat.push(...needed);
-      for (const { name, block, kind } of offered) scope.set(name, { name, isShared: true, block, kind });
+      for (const one of offered) scope.set(one.local, { ...one, isShared: true });
     }
     scope.fill(statements, false, () => undefined);
     this.body(statements, scope, (statement) => statement);

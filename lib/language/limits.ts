@@ -8,6 +8,9 @@ export const MOST_DEPTH = 256;
 export const MOST_BLOCK_DEPTH = 16;
 /** Words and values that the instances of blocks may unfold to. */
 export const MOST_UNFOLDED = 60_000;
+/** UTF-16 units of all shelves that are fetched for a file, and what each counts for at least. */
+export const MOST_SHELF_TEXT = 2_097_152;
+export const LEAST_SHELF_TEXT = 4_096;
 export const MOST_ELEMENTS = 2_000;
 /** Product of the lengths of all sweeps. */
 export const MOST_POINTS = 1_000_000;

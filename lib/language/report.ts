@@ -10,6 +10,8 @@ export class Report {
   private readonly listed: Diagnostic[] = [];
   private unlisted = 0;
   private errors = 0;
+  /** What was found where: a block is checked once for every instance, and its problems are told once. */
+  private readonly told = new Set<string>();
 
   error(code: Code, span: Span, message: string, fix?: Fix): void {
     this.errors += 1;
@@ -54,6 +56,9 @@ export class Report {
   }
 
   private add(code: Code, severity: "error" | "warning", span: Span, message: string, fix?: Fix): void {
+    const key = `${code} ${span.from} ${span.to}`;
+    if (this.told.has(key)) return;
+    this.told.add(key);
     if (this.listed.length >= MOST_LISTED) {
       this.unlisted += 1;
       return;

@@ -187,6 +187,7 @@ export class Wirer {
   private unknownKind(word: Word): void {
     const meaning = this.names.meaningOf(word.text);
     if (meaning === "model" || meaning === "unread") return;
+    if (meaning === null && this.names.isIncomplete) return;
     if (meaning === "block") {
       const message = `${quote(ownName(word))} is a block, and its nets go by name; write it as \`X : ${ownName(word)} { net = …, … }\`.`;
       this.report.error("FRM11", word, message);
