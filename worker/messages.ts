@@ -1,7 +1,12 @@
+import type { KeptJudgement } from "@/lib/analyses/verdict";
 import type { StoredShard } from "@/lib/services/chunks/columns";
 
-/** What the main thread asks of a computing thread: the flat points [from, to) of the run of `text`. */
-export interface Task {
+/** What the main thread asks of a computing thread. */
+export type Task = SolveTask | JudgeTask;
+
+/** The flat points [from, to) of the run of `text`. */
+export interface SolveTask {
+  readonly kind: "solve";
   readonly text: string;
   readonly from: number;
   readonly to: number;
@@ -9,11 +14,22 @@ export interface Task {
   readonly points: number;
 }
 
-/** What a computing thread answers. A task ends with "solved" or "broken". */
+/** The requirements and error budgets of the run of `text`, all of whose points are stored. */
+export interface JudgeTask {
+  readonly kind: "judge";
+  readonly text: string;
+  /** One column a trace, in the order of the plan. */
+  readonly traces: readonly Float64Array[];
+  /** Points of the whole run, as it was planned. */
+  readonly points: number;
+}
+
+/** What a computing thread answers. A task ends with "solved", "judged" or "broken". */
 export type Reply =
   /** The thread has solved its warm-up and waits for tasks. */
   | { readonly kind: "ready" }
   | { readonly kind: "progress"; readonly pointsDone: number }
   | { readonly kind: "solved"; readonly result: StoredShard }
+  | { readonly kind: "judged"; readonly judgement: KeptJudgement }
   /** The solver threw, which it never should; `reason` is for the log. */
   | { readonly kind: "broken"; readonly reason: string };

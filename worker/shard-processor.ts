@@ -7,6 +7,7 @@ import { completeShard } from "@/lib/services/shards/complete-shard";
 import { failShard } from "@/lib/services/shards/fail-shard";
 import { releaseShard } from "@/lib/services/shards/release-shard";
 import * as sentences from "@/lib/services/shards/sentences";
+import { Judge } from "./judge";
 import { LeaseKeeper } from "./lease-keeper";
 import { isPassing, persist } from "./retry";
 import type { Ended, Limits } from "./thread";
@@ -29,11 +30,14 @@ export class ShardProcessor {
   readonly #stopping = new AbortController();
   /** The shards under way, each ended by its own signal. */
   readonly #underWay = new Set<AbortController>();
+  private readonly judge: Judge;
 
   constructor(
     private readonly pool: Pick<ThreadPool, "solve">,
     private readonly settings: Settings,
-  ) {}
+  ) {
+    this.judge = new Judge(pool, this.#stopping.signal, settings.limits);
+  }
 
   /** Breaks off what is under way and gives the claims back. */
   stop(): void {
@@ -46,7 +50,8 @@ export class ShardProcessor {
       if (this.#stopping.signal.aborted) return { againIn: 0 };
       const { name, leaseSeconds } = this.settings;
       const claimed = await claimShard({ ...job, worker: name, leaseSeconds });
-      if (claimed.kind === "over") return "done";
+      // The job of a stored shard comes again where the run's judgement was lost.
+      if (claimed.kind === "over") return await this.judge.run(job.runId);
       if (claimed.kind === "held") return { againIn: claimed.milliseconds + AGAIN_MS };
       return await this.#compute(claimed.claim);
     } catch (error) {
@@ -78,7 +83,7 @@ export class ShardProcessor {
     try {
       const { text, from, to, points } = claim;
       const progress = (pointsDone: number) => keeper.progress(pointsDone);
-      return await this.pool.solve({ text, from, to, points }, end.signal, progress);
+      return await this.pool.solve({ kind: "solve", text, from, to, points }, end.signal, progress);
     } finally {
       this.#underWay.delete(end);
       keeper.close();
@@ -90,7 +95,9 @@ export class ShardProcessor {
     switch (ended.kind) {
       case "solved":
         await persist(this.#stopping.signal, () => completeShard(claim, ended.result));
-        return "done";
+        return this.judge.run(claim.runId);
+      case "judged":
+        throw new Error("A shard was answered with a judgement.");
       case "out of time":
         return this.#fail(claim, sentences.outOfTime(claim, limits.seconds));
       case "out of memory":

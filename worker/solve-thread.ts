@@ -1,8 +1,9 @@
 import { parentPort } from "node:worker_threads";
 import { compile, type Job } from "@/lib/analyses/compile";
 import { solveRange } from "@/lib/analyses/sweep";
+import { finalJudgement } from "@/lib/analyses/verdict";
 import { storedForm } from "@/lib/services/chunks/columns";
-import type { Reply, Task } from "./messages";
+import type { Reply, SolveTask, Task } from "./messages";
 import { WARM_UP } from "./warm-up";
 
 /** Time between two words about progress, ms. */
@@ -24,24 +25,32 @@ function jobOf(text: string): Job {
   return job;
 }
 
-function solve({ text, from, to, points }: Task, tell: (reply: Reply) => void): Reply {
+/** Does a task; what the solver throws, which it never should, becomes an answer. */
+function answer(task: Task, tell: (reply: Reply) => void): Reply {
   try {
-    const job = jobOf(text);
-    if (job.plan.points !== points) throw new Error(`Planned ${points} points, found ${job.plan.points}.`);
-    let told = performance.now();
-    const result = solveRange(job, from, to, (pointsDone) => {
-      const now = performance.now();
-      if (now - told < PROGRESS_MS) return;
-      told = now;
-      tell({ kind: "progress", pointsDone });
-    });
-    return { kind: "solved", result: storedForm(result) };
+    const job = jobOf(task.text);
+    if (job.plan.points !== task.points) {
+      throw new Error(`Planned ${task.points} points, found ${job.plan.points}.`);
+    }
+    if (task.kind === "judge") return { kind: "judged", judgement: finalJudgement(job, task) };
+    return solve(job, task, tell);
   } catch (error) {
     return {
       kind: "broken",
       reason: error instanceof Error ? (error.stack ?? error.message) : String(error),
     };
   }
+}
+
+function solve(job: Job, { from, to }: SolveTask, tell: (reply: Reply) => void): Reply {
+  let told = performance.now();
+  const result = solveRange(job, from, to, (pointsDone) => {
+    const now = performance.now();
+    if (now - told < PROGRESS_MS) return;
+    told = now;
+    tell({ kind: "progress", pointsDone });
+  });
+  return { kind: "solved", result: storedForm(result) };
 }
 
 /** The memory behind the chunks, which is handed over and not copied. */
@@ -52,10 +61,10 @@ function buffersOf(reply: Reply): ArrayBuffer[] {
 
 const port = parentPort;
 if (port === null) throw new Error("This file runs as a thread of the worker process.");
-for (let i = 0; i < 3; i++) solve(WARM_UP, () => undefined);
+for (let i = 0; i < 3; i++) answer(WARM_UP, () => undefined);
 kept.clear();
 port.on("message", (task: Task) => {
   const tell = (reply: Reply) => port.postMessage(reply, buffersOf(reply));
-  tell(solve(task, tell));
+  tell(answer(task, tell));
 });
 port.postMessage({ kind: "ready" } satisfies Reply);

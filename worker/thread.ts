@@ -1,10 +1,12 @@
 import { type ResourceLimits, Worker } from "node:worker_threads";
+import type { KeptJudgement } from "@/lib/analyses/verdict";
 import type { StoredShard } from "@/lib/services/chunks/columns";
 import type { Reply, Task } from "./messages";
 
 /** How a task ended. */
 export type Ended =
   | { readonly kind: "solved"; readonly result: StoredShard }
+  | { readonly kind: "judged"; readonly judgement: KeptJudgement }
   | { readonly kind: "aborted" }
   | { readonly kind: "out of time" }
   | { readonly kind: "out of memory" }
@@ -28,7 +30,7 @@ function spawn(resourceLimits: ResourceLimits): Worker {
   return new Worker(program, { eval: true, execArgv: [], resourceLimits });
 }
 
-/** One computing thread. It takes one task at a time; after anything but "solved" or "broken" it is gone. */
+/** One computing thread. It takes one task at a time; after anything but "solved", "judged" or "broken" it is gone. */
 export class Thread {
   readonly #worker: Worker;
   /** Settles once the thread has warmed up; rejects when it cannot start. */
@@ -76,7 +78,7 @@ export class Thread {
       this.#onGone = end;
       this.#onReply = (reply) => {
         if (reply.kind === "progress") onProgress(reply.pointsDone);
-        else if (reply.kind === "solved" || reply.kind === "broken") end(reply);
+        else if (reply.kind !== "ready") end(reply);
       };
       signal.addEventListener("abort", abort);
       if (signal.aborted) abort();

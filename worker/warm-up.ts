@@ -1,4 +1,4 @@
-import type { Task } from "./messages";
+import type { SolveTask } from "./messages";
 
 const POINTS = 121;
 
@@ -6,7 +6,8 @@ const POINTS = 121;
  * A small run that every thread solves before it takes work: by then the language and the solver are compiled to machine code,
  * and the first curve of the first real run comes as soon as that of any other.
  */
-export const WARM_UP: Task = {
+export const WARM_UP: SolveTask = {
+  kind: "solve",
   text: `title "Warm-up"
 knob I_in = 1 µA
 model junction : diode { Is = 2 nA, n = 1.9, Rs = 4 Ω }

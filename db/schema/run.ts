@@ -1,3 +1,4 @@
+import { sql } from "drizzle-orm";
 import {
   foreignKey,
   index,
@@ -11,12 +12,14 @@ import {
   uuid,
 } from "drizzle-orm/pg-core";
 import type { Plan } from "@/lib/analyses/plan";
+import type { KeptJudgement } from "@/lib/analyses/verdict";
 import { netlist } from "./netlist";
 import { revision } from "./revision";
 import { user } from "./user";
 import { workspace } from "./workspace";
 
 export const runStatus = pgEnum("run_status", ["queued", "running", "done", "failed", "cancelled"]);
+export const runVerdict = pgEnum("run_verdict", ["holds", "broken", "no data"]);
 
 /** Which points of a run its small curve shows: at most 64 along the first axis, in ascending order of `x` from 0 to 1. */
 export interface Preview {
@@ -56,6 +59,11 @@ export const run = pgTable(
     finishedAt: timestamp("finished_at", { withTimezone: true }),
     /** One sentence why the whole run could not be computed; null otherwise. */
     error: text(),
+    /** Of the requirements; null before they are judged and where there are none. */
+    verdict: runVerdict(),
+    /** Readings, requirements with margins, error budgets; null before they are judged. */
+    judgement: jsonb().$type<KeptJudgement>(),
+    judgedAt: timestamp("judged_at", { withTimezone: true }),
     requestedBy: uuid("requested_by")
       .notNull()
       .references(() => user.id),
@@ -65,6 +73,7 @@ export const run = pgTable(
     unique("run_number").on(table.workspaceId, table.number),
     index("run_netlist").on(table.netlistId, table.number),
     index("run_status").on(table.status),
+    index("run_unjudged").on(table.finishedAt).where(sql`status = 'done' AND judged_at IS NULL`),
     foreignKey({
       name: "run_revision",
       columns: [table.netlistId, table.revisionNumber],

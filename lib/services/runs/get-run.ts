@@ -5,6 +5,7 @@ import { revision } from "@/db/schema/revision";
 import { run } from "@/db/schema/run";
 import { user } from "@/db/schema/user";
 import type { Plan } from "@/lib/analyses/plan";
+import type { KeptJudgement } from "@/lib/analyses/verdict";
 import type { Actor } from "@/lib/permissions/actor";
 import { authorize } from "@/lib/permissions/authorize";
 import { findRun } from "./find-run";
@@ -13,6 +14,8 @@ import { RUN_COLUMNS, type RunRow, rowOf } from "./run-columns";
 /** The state of a run and what it set out to do, without its results. */
 export interface RunSummary extends RunRow {
   readonly plan: Plan;
+  /** Null before the run is judged. */
+  readonly judgement: KeptJudgement | null;
 }
 
 /** Throws "not found" for a run that is not in the actor's workspace. */
@@ -21,7 +24,7 @@ export async function getRun(actor: Actor, id: string): Promise<RunSummary> {
   const asked = await findRun(db, actor, id);
   authorize(actor, "run.read", asked);
   const [row] = await db
-    .select({ ...RUN_COLUMNS, plan: run.plan })
+    .select({ ...RUN_COLUMNS, plan: run.plan, judgement: run.judgement })
     .from(run)
     .innerJoin(netlist, eq(netlist.id, run.netlistId))
     .innerJoin(revision, and(eq(revision.netlistId, run.netlistId), eq(revision.number, run.revisionNumber)))

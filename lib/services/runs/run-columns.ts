@@ -2,6 +2,7 @@ import { netlist } from "@/db/schema/netlist";
 import { revision } from "@/db/schema/revision";
 import { run } from "@/db/schema/run";
 import { user } from "@/db/schema/user";
+import type { Verdict } from "@/lib/analyses/result";
 
 export type RunStatus = (typeof run.$inferSelect)["status"];
 
@@ -21,6 +22,8 @@ export interface RunRow {
   readonly queuedAt: string;
   readonly startedAt: string | null;
   readonly finishedAt: string | null;
+  /** Of the requirements; null before they are judged and where there are none. */
+  readonly verdict: Verdict | null;
   /** One sentence why the whole run could not be computed; null otherwise. */
   readonly error: string | null;
   /** Name of whoever queued it. */
@@ -45,6 +48,7 @@ export const RUN_COLUMNS = {
   queuedAt: run.queuedAt,
   startedAt: run.startedAt,
   finishedAt: run.finishedAt,
+  verdict: run.verdict,
   error: run.error,
   requestedBy: user.name,
   engineVersion: run.engineVersion,

@@ -25,3 +25,15 @@ export function brokenOff(points: Points, attempts: number): string {
 export function engineChanged(): string {
   return "The service was updated with another engine while this run was under way, and a run is never mixed. Queue it again.";
 }
+
+export function judgementTooLong(seconds: number): string {
+  return `All points are solved, but judging the requirements took longer than the limit of ${count(seconds)} s. Read fewer reductions or sweep fewer points.`;
+}
+
+export function judgementTooLarge(memory: number): string {
+  return `All points are solved, but judging the requirements took more memory than the limit of ${count(memory)} MiB. Sweep fewer points.`;
+}
+
+export function judgementBroken(): string {
+  return "All points are solved, but the requirements could not be judged. This is a fault of the service, not of the netlist: report it to whoever runs it.";
+}

@@ -1,0 +1,22 @@
+import { type Budget, budgetsOf } from "./budget";
+import type { Job } from "./compile";
+import { judge } from "./judge";
+import type { ReadingDocument, RequirementDocument, Verdict } from "./result";
+import type { Columns } from "./rows";
+
+/** What a finished run keeps of its judgement. */
+export interface KeptJudgement {
+  readonly verdict: Verdict | null;
+  readonly requirements: readonly RequirementDocument[];
+  /** Those that are one number a sweep; the others follow from the traces. */
+  readonly readings: readonly ReadingDocument[];
+  /** Error budgets of the readings; null where the run is too large for them. */
+  readonly budgets: readonly Budget[] | null;
+}
+
+/** Judges a finished run and works out the error budgets of its readings. Without requirements the verdict is null. */
+export function finalJudgement(job: Job, columns: Columns): KeptJudgement {
+  const { verdict, requirements, readings } = judge(job, columns);
+  const numbers = readings.filter(({ per }) => per === "sweep");
+  return { verdict, requirements, readings: numbers, budgets: budgetsOf(job) };
+}
