@@ -43,6 +43,7 @@ const ALLOWED: Readonly<Record<string, readonly string[]>> = {
   "lib/services": ["db", "lib/queue", "lib/mail", "lib/env.ts", ...SHARED],
   "lib/auth": ["lib/services", "lib/env.ts", ...SHARED],
   "lib/api": ["lib/services", "lib/auth", "lib/env.ts", ...SHARED],
+  "lib/cli": PURE_PARTS,
   "lib/stack": ["db"],
   db: ["lib/services", "lib/auth", "lib/queue", "lib/env.ts", ...SHARED],
   worker: ["lib/services", "lib/queue", "lib/env.ts", ...SHARED],

@@ -13,12 +13,16 @@ export interface Outputs {
   readonly worker: string;
 }
 
+/** Where the launcher of the command line looks for what was built: main.mjs and solve-thread.mjs. */
+const COMMAND_LINE = ".build/cli";
+
 export const DEMO_OUTPUTS: Outputs = { pages: ".next", worker: ".build/worker" };
 
 /** Builds what the sources have changed since. */
 export async function buildAll(outputs: Outputs): Promise<void> {
   const stamp = sourceStamp(process.cwd());
   await unlessStamped(outputs.worker, stamp, () => buildWorker(outputs.worker));
+  await unlessStamped(COMMAND_LINE, stamp, () => buildCommandLine(COMMAND_LINE));
   await unlessStamped(outputs.pages, stamp, async () => {
     console.log("Building the pages (about a minute the first time).");
     await buildPages(outputs.pages);
@@ -48,8 +52,17 @@ async function buildPages(folder: string): Promise<void> {
 
 /** One file for the worker and one for the thread that computes; packages stay in node_modules. */
 export async function buildWorker(folder: string): Promise<void> {
+  await bundleInto(folder, ["./worker/main.ts", "./worker/solve-thread.ts"]);
+}
+
+/** One file for the command line and one for the threads that solve. */
+export async function buildCommandLine(folder: string): Promise<void> {
+  await bundleInto(folder, ["./lib/cli/main.ts", "./lib/cli/solve-thread.ts"]);
+}
+
+async function bundleInto(folder: string, entryPoints: string[]): Promise<void> {
   await bundle({
-    entryPoints: ["./worker/main.ts", "./worker/solve-thread.ts"],
+    entryPoints,
     outdir: folder,
     outExtension: { ".js": ".mjs" },
     bundle: true,
