@@ -1,4 +1,4 @@
-import { LuDecomposition, Matrix, SingularValueDecomposition } from "ml-matrix";
+import { EigenvalueDecomposition, LuDecomposition, Matrix, SingularValueDecomposition } from "ml-matrix";
 import type { SparseShape } from "./elimination";
 
 /** Unknowns of a dense decomposition at most; beyond it the time would be felt. */
@@ -76,4 +76,51 @@ function scaledMatrix(
   });
   for (let i = 0; i < size; i++) matrix.mulRow(i, scales[i]!);
   return { matrix, scales };
+}
+
+/** What a matrix J says of the solution at which it was taken; null where it is singular, not finite or too large. */
+export interface Index {
+  /** Sign of det J. */
+  readonly sign: 1 | -1;
+  /** Whether every mode of D·dx/dt = −F decays: every eigenvalue of J⁻¹·D but those of rounding has a positive real part. */
+  readonly isStable: boolean;
+}
+
+/** An eigenvalue of J⁻¹·D below this part of the largest is one of the 0 that algebraic rows give. */
+const ALGEBRAIC = 1e-9;
+
+/** `masses` are the entries of D, as row, column and value. */
+export function indexOf(
+  shape: SparseShape,
+  values: Float64Array,
+  masses: readonly { readonly row: number; readonly column: number; readonly mass: number }[],
+): Index | null {
+  const scaled = scaledMatrix(shape, values);
+  if (scaled === null) return null;
+  const factors = new LuDecomposition(scaled.matrix);
+  if (factors.isSingular()) return null;
+  // The determinant itself may leave the range of a number; its sign is that of the pivots and of their permutation.
+  const upper = factors.upperTriangularMatrix;
+  let sign: 1 | -1 = permutationSign(factors.pivotPermutationVector);
+  for (let i = 0; i < shape.size; i++) if (upper.get(i, i) < 0) sign = sign === 1 ? -1 : 1;
+  const mass = Matrix.zeros(shape.size, shape.size);
+  for (const { row, column, mass: one } of masses) mass.set(row, column, one * scaled.scales[row]!);
+  const { realEigenvalues } = new EigenvalueDecomposition(factors.solve(mass));
+  const largest = Math.max(...realEigenvalues.map(Math.abs));
+  return { sign, isStable: realEigenvalues.every((real) => real >= -ALGEBRAIC * largest) };
+}
+
+/** −1 to the count of its cycles of even length. */
+function permutationSign(permutation: readonly number[]): 1 | -1 {
+  let sign: 1 | -1 = 1;
+  const seen = new Set<number>();
+  for (const start of permutation.keys()) {
+    let length = 0;
+    for (let at = start; !seen.has(at); at = permutation[at]!) {
+      seen.add(at);
+      length += 1;
+    }
+    if (length > 0 && length % 2 === 0) sign = sign === 1 ? -1 : 1;
+  }
+  return sign;
 }

@@ -15,12 +15,17 @@ const MOST_STEPS = 600;
  * before it; a stage that fails is tried again with a smaller fall. Ends with the conductances taken away.
  */
 export function shuntRamp(bench: Bench, aided: Aided): Attempt {
+  aided.origin.fill(0);
+  return tied(bench, aided);
+}
+
+/** The same with every net tied to the voltage that the aid's origin gives it. */
+export function tied(bench: Bench, aided: Aided): Attempt {
   const { system } = bench;
   const { state } = system;
   const helped = aided.bench(bench.step);
   const x = new Float64Array(state.x.length);
   const low = new Float64Array(state.x.length);
-  aided.origin.fill(0);
   system.startCold();
   let reached = FIRST / FIRST_PART;
   let part = FIRST_PART;
