@@ -16,19 +16,24 @@ export function plainLine(text: string): Line {
 
 /**
  * A statement on one line, cut where its neighbours of the same form align: before `=`, before `:` and `{`, before the windows and
- * the name of a requirement.
+ * the name of a requirement. `margin` stands before it: inside a block it is set in.
  */
-export function statementLine(statement: Statement, row: readonly Token[], tight: ReadonlySet<number>): Line {
-  const text = composeLine(row, tight);
+export function statementLine(
+  statement: Statement,
+  row: readonly Token[],
+  tight: ReadonlySet<number>,
+  margin: string,
+): Line {
+  const text = margin + composeLine(row, tight);
   const cuts = cutsOf(statement, row);
   if (cuts === null) return plainLine(text);
   const edges = [0, ...cuts, row.length];
   const columns = edges.slice(1).map((to, i) => {
     const part = row.slice(edges[i]!, to);
     // Two spaces stand before a comment, one of them between the columns.
-    return (part[0]?.kind === "comment" ? " " : "") + composeLine(part, tight);
+    return (i === 0 ? margin : "") + (part[0]?.kind === "comment" ? " " : "") + composeLine(part, tight);
   });
-  return { text, run: statement.kind === "knob" ? "let" : statement.kind, columns };
+  return { text, run: `${margin}${statement.kind === "knob" ? "let" : statement.kind}`, columns };
 }
 
 /** Token indices at which columns begin. */

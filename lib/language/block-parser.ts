@@ -25,7 +25,7 @@ export class BlockParser {
       cursor.wantSymbol(")", "the nets of the block");
       cursor.wantSymbol("{", "the nets of the block");
     }
-    return { kind: "block", name, ports, statements: [], isClosed: true, ...span };
+    return { kind: "block", name, ports, statements: [], headTo: cursor.behind, isClosed: true, ...span };
   }
 
   /** `use "NAME" [revision N]`, after the word `use`. */

@@ -3,11 +3,13 @@ import { Cursor } from "./cursor";
 import { ExpressionParser } from "./expression-parser";
 import { tokenize } from "./lexer";
 import { MOST_TEXT } from "./limits";
+import { LineOwners } from "./line-owners";
 import { parseTokens } from "./parser";
 import { Report } from "./report";
 import { composeLine } from "./spacing-rules";
-import type { Statement } from "./syntax";
 import type { Token } from "./token";
+
+const INDENT = "  ";
 
 /**
  * The canonical form of a netlist: canonical spelling and spacing, at most one blank line between statements, `=`, `:` and `{`
@@ -20,22 +22,23 @@ export function format(text: string): string {
   const report = new Report();
   const tokens = tokenize(text, report);
   const { netlist, tight } = parseTokens(tokens, text.length, report);
-  const owners = new Owners(netlist.statements);
+  const owners = new LineOwners(netlist.statements);
   let from = 0;
   let depth = 0;
   const lines = rowsOf(tokens).map((row, i): Line => {
     const raw = source[i]!.trimEnd();
     const to = from + source[i]!.length;
-    const { statement, begins } = owners.of(row, from, to);
+    const { statement, end, begins, isAlone, level } = owners.of(row, from, to);
     from = to + 1;
     if (begins) depth = 0;
     if (row.length === 0 || (statement !== null && !statement.whole)) return plainLine(raw);
-    if (statement === null) return plainLine(composeLine(row, tight));
+    const margin = INDENT.repeat(level);
+    if (statement === null) return plainLine(margin + composeLine(row, tight));
+    if (isAlone && end <= to) return statementLine(statement, row, tight, margin);
     const closers = closersAhead(row);
     const indent = closers > 0 ? depth - closers : Math.max(1, depth);
     depth = depthAfter(row, depth);
-    if (begins && statement.to <= to) return statementLine(statement, row, tight);
-    return plainLine((begins ? "" : "  ".repeat(indent)) + composeLine(row, tight));
+    return plainLine(margin + (begins ? "" : INDENT.repeat(Math.max(0, indent))) + composeLine(row, tight));
   });
   return finish(alignRuns(lines));
 }
@@ -60,23 +63,6 @@ function rowsOf(tokens: readonly Token[]): Token[][] {
     else rows[rows.length - 1]!.push(token);
   }
   return rows;
-}
-
-/** Finds the statement that a line belongs to; lines are asked for in order. */
-class Owners {
-  private next = 0;
-
-  constructor(private readonly statements: readonly Statement[]) {}
-
-  of(row: readonly Token[], from: number, to: number): { statement: Statement | null; begins: boolean } {
-    while (this.next < this.statements.length && this.statements[this.next]!.to < from) this.next += 1;
-    const statement = this.statements[this.next];
-    if (statement === undefined || statement.from > to) return { statement: null, begins: false };
-    const begins = statement.from >= from;
-    if (begins && !row.some((token) => token.from === statement.from))
-      return { statement: null, begins: false };
-    return { statement, begins };
-  }
 }
 
 function closersAhead(row: readonly Token[]): number {

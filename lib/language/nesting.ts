@@ -70,6 +70,8 @@ export class Nesting {
     this.statements = around;
     if (this.frames.length >= MOST_BLOCK_DEPTH) return;
     const block: BlockStatement | null = head.kind === "block" ? head : null;
-    this.statements.push(block === null ? head : { ...block, statements: inner, isClosed, to });
+    this.statements.push(
+      block === null ? head : { ...block, statements: inner, headTo: head.to, isClosed, to },
+    );
   }
 }

@@ -117,12 +117,13 @@ export type StatementForm =
     })
   /** `use "shelf-name" revision 3`; null without a revision. */
   | (Span & { readonly kind: "use"; readonly shelf: Word; readonly revision: Expression | null })
-  /** `block NAME(net, …) { … }`. `isClosed` is false where its brace is missing. */
+  /** `block NAME(net, …) { … }`; its head ends at `headTo`. `isClosed` is false where its brace is missing. */
   | (Span & {
       readonly kind: "block";
       readonly name: Word;
       readonly ports: readonly Word[];
       readonly statements: readonly Statement[];
+      readonly headTo: number;
       readonly isClosed: boolean;
     })
   | (Span & { readonly kind: "draws"; readonly count: Expression; readonly seed: Expression })

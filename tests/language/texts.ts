@@ -62,6 +62,15 @@ const FRAGMENTS = [
     "1 %",
     "2 V²",
   ],
+  ...["block b(a) {\n", "block b(a) {", "\n}\n", "X : b { a = a }", "X.a.v", "X.R", 'use "b" revision 3'],
+  ...[
+    "gain { plus = a, minus = b, out = c, ratio = 2 }",
+    "law { amps = 1 mS * a.v }",
+    "volts",
+    "amps",
+    "ratio",
+  ],
+  ...["seed", "revision", "draws 3 seed 1", "seek 2", "as", "of", "and", "for", "at", "rising", "between"],
   ...["exp", "ln", "sqrt", "if", "min", "V_T", "pi", "mean", '"text"', '"open', "§", "😀", "é", "\ud800"],
 ];
 
@@ -114,21 +123,35 @@ const expression = fc.letrec<{ any: string }>((tie) => ({
   ),
 })).any;
 
+const statement = fc.oneof(
+  fc
+    .tuple(fc.constantFrom("let", "knob"), ident, expression)
+    .map(([word, name, value]) => `${word}  ${name}=${value}`),
+  fc.tuple(ident, expression).map(([name, value]) => `show ${name}   =${value} ,\n  ${value}`),
+  fc.tuple(ident, expression).map(([name, value]) => `model ${name}:diode{Is=${value} , # note\n\nn = 1}`),
+  fc.tuple(ident, ident, expression).map(([a, b, value]) => `${a}--R : resistor ${value}±1%--${b}`),
+  fc.tuple(ident, expression).map(([a, value]) => `sweep ${a} over ${value},\n# between\n ${value}`),
+  fc.tuple(ident, ident, expression).map(([a, b, value]) => `L1:law{plus=${a},minus=${b} ,volts=${value}}`),
+  fc.tuple(ident, expression).map(([a, value]) => `X : part{p=${a},\n R=${value}±1%}`),
+  fc.tuple(ident, expression, expression).map(([a, x, y]) => `require ${x}<=${y} at ${a}=${x}   as "so"`),
+  fc.tuple(ident, expression).map(([a, x]) => `read ${a}=highest( ${x} )  for ${a} in ${x} .. 2 V`),
+  fc.constantFrom("draws  10 seed 7", "seek 3", 'use  "shelf" revision 2'),
+  fc.constantFrom("", "# alone", "   # indented", "\t"),
+);
+
+const block = fc
+  .tuple(
+    fc.constantFrom("part", "stage"),
+    fc.array(statement, { maxLength: 5 }),
+    fc.constantFrom("", "# end"),
+  )
+  .map(([name, inner, end]) => `block ${name} (p,q){ # head\n${inner.join("\n")}\n   } ${end}`);
+
+const nestedBlock = fc
+  .tuple(fc.array(fc.oneof(statement, block), { maxLength: 4 }))
+  .map(([inner]) => `block outer(p){\n${inner.join("\n")}\n}`);
+
 /** Statements of good form, badly spaced; their names and units may not be right. */
 export const wellFormed = fc
-  .array(
-    fc.oneof(
-      fc
-        .tuple(fc.constantFrom("let", "knob"), ident, expression)
-        .map(([word, name, value]) => `${word}  ${name}=${value}`),
-      fc.tuple(ident, expression).map(([name, value]) => `show ${name}   =${value} ,\n  ${value}`),
-      fc
-        .tuple(ident, expression)
-        .map(([name, value]) => `model ${name}:diode{Is=${value} , # note\n\nn = 1}`),
-      fc.tuple(ident, ident, expression).map(([a, b, value]) => `${a}--R : resistor ${value}±1%--${b}`),
-      fc.tuple(ident, expression).map(([a, value]) => `sweep ${a} over ${value},\n# between\n ${value}`),
-      fc.constantFrom("", "# alone", "   # indented", "\t"),
-    ),
-    { maxLength: 12 },
-  )
+  .array(fc.oneof({ weight: 8, arbitrary: statement }, block, nestedBlock), { maxLength: 12 })
   .map((statements) => statements.join("\n"));
