@@ -3,11 +3,13 @@ import type { Report } from "@/lib/language/report";
 import { components } from "./strong-components";
 import { UnionFind } from "./union-find";
 import { GROUND, list, type Wiring } from "./wiring-graph";
+import { drivesCurrent, elementsOf, isDriver, netsSensed } from "./wiring-laws";
 
 /**
- * Amplifiers with no path from their output back to an input. A path leads through any element but a current element, and from
- * the inputs of other amplifiers to their outputs; never through ground or a net that voltage elements tie to it, which do not
- * move. So an amplifier has feedback exactly where its output and one of its inputs lie in one strong component.
+ * Amplifiers with no path from their output back to an input. A path leads through any element but one that drives a current, from
+ * the inputs of other amplifiers and gains to their outputs, and from what a law reads to its ends; never through ground or a net
+ * that voltage elements tie to it, which do not move. So an amplifier has feedback exactly where its output and one of its
+ * inputs lie in one strong component.
  */
 export function checkFeedback(wiring: Wiring, ideal: ReadonlySet<Element>, report: Report): void {
   const { design, net } = wiring;
@@ -20,21 +22,29 @@ export function checkFeedback(wiring: Wiring, ideal: ReadonlySet<Element>, repor
   const moves = (n: number): boolean => stiff.find(n) !== stiff.find(GROUND);
   const joined = new UnionFind(wiring.nets.length);
   for (const element of design.elements) {
-    if (element.kind === "opamp" || element.kind === "current") continue;
+    if (isDriver(element) || drivesCurrent(element)) continue;
     const nets = Object.keys(element.pins)
       .map((pin) => net(element, pin))
       .filter(moves);
     for (const other of nets) joined.union(nets[0]!, other);
   }
   const edges = new Map<number, number[]>();
-  for (const amplifier of amplifiers) {
-    for (const input of inputsOf(amplifier, wiring)) {
+  const lead = (inputs: readonly number[], output: number): void => {
+    const to = joined.find(output);
+    for (const input of inputs) {
       const from = joined.find(input);
-      const to = joined.find(net(amplifier, "out"));
       const list = edges.get(from);
       if (list === undefined) edges.set(from, [to]);
       else list.push(to);
     }
+  };
+  const numbers = new Map(wiring.nets.map((name, i) => [name, i]));
+  const named = elementsOf(design);
+  for (const element of design.elements) {
+    if (isDriver(element)) lead(inputsOf(element, wiring), net(element, "out"));
+    if (element.law === null) continue;
+    const sensed = netsSensed(element, named).map((name) => numbers.get(name)!);
+    for (const pin of Object.keys(element.pins)) lead(sensed, net(element, pin));
   }
   const component = components(wiring.nets.length, (n) => edges.get(n) ?? []);
   for (const amplifier of amplifiers) {

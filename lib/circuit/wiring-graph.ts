@@ -1,4 +1,5 @@
 import type { Design, Element, Typed } from "@/lib/language/ast";
+import { elementsOf, netsSensed } from "./wiring-laws";
 
 export const GROUND = 0;
 
@@ -16,6 +17,8 @@ export interface Wiring {
   readonly connections: readonly (readonly Connection[])[];
   /** Numbers of the nets whose voltage a trace reads. */
   readonly shown: ReadonlySet<number>;
+  /** Numbers of the nets that laws read. */
+  readonly sensed: ReadonlySet<number>;
   /** The number of the net at a pin. */
   net(element: Element, pin: string): number;
 }
@@ -40,7 +43,11 @@ export function wiringOf(design: Design): Wiring {
   for (const show of design.shows) {
     for (const name of netsRead(show.value)) shown.add(numbers.get(name)!);
   }
-  return { design, nets, connections, shown, net };
+  const named = elementsOf(design);
+  const sensed = new Set(
+    design.elements.flatMap((element) => netsSensed(element, named)).map((name) => numbers.get(name)!),
+  );
+  return { design, nets, connections, shown, sensed, net };
 }
 
 function netsRead(typed: Typed): string[] {

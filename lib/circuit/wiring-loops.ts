@@ -1,7 +1,9 @@
 import type { Element } from "@/lib/language/ast";
+import { KINDS } from "@/lib/language/kinds";
 import type { Report } from "@/lib/language/report";
 import { UnionFind } from "./union-find";
 import { GROUND, list, type Wiring } from "./wiring-graph";
+import { holdsVoltage, isDriver } from "./wiring-laws";
 
 /** Loops for which the members are looked up; each costs a walk over the voltage elements. */
 const MOST_WALKS = 20;
@@ -21,8 +23,11 @@ interface Tie {
 export function checkLoops(wiring: Wiring, ideal: ReadonlySet<Element>, report: Report): void {
   const { elements } = wiring.design;
   const voltages = elements
-    .filter((element) => element.kind === "voltage")
-    .map((element): Tie => ({ element, from: wiring.net(element, "left"), to: wiring.net(element, "right") }))
+    .filter(holdsVoltage)
+    .map((element): Tie => {
+      const [first, second] = KINDS[element.kind].pins as [string, string];
+      return { element, from: wiring.net(element, first), to: wiring.net(element, second) };
+    })
     .filter((tie) => tie.from !== tie.to);
   const outputs = soleDrivers(wiring, voltages, report);
   const race =
@@ -46,7 +51,7 @@ function soleDrivers(wiring: Wiring, voltages: readonly Tie[], report: Report): 
   }
   const outputs: Tie[] = [];
   for (const element of wiring.design.elements) {
-    if (element.kind !== "opamp") continue;
+    if (!isDriver(element)) continue;
     const out = wiring.net(element, "out");
     const rival = drivers.get(out);
     if (out === GROUND) {

@@ -3,15 +3,19 @@ import { nearest } from "@/lib/language/nearest";
 import type { Report } from "@/lib/language/report";
 import { UnionFind } from "./union-find";
 import { GROUND, list, type Wiring } from "./wiring-graph";
+import { drivesCurrent, isDriver } from "./wiring-laws";
+
+/** Parameters that give a transistor base current. */
+const BASE_CURRENTS = ["beta_f", "beta_r", "I_leak_e", "I_leak_c"];
 
 /** One-connection nets for which a near name is searched. */
 const MOST_SEARCHES = 40;
 
 /**
  * Nets with one connection, nets with no path to ground, and cuts of current elements. A path leads through resistors, voltage
- * elements, diodes and transistors, and from an amplifier's output to ground; not through a current element, which lets
- * no voltage settle, nor into what takes no current of its own: an amplifier's input, the base of a transistor without
- * current gains.
+ * elements, diodes, transistors and laws, and from the output of an amplifier or gain to ground; not through what drives a
+ * current, which lets no voltage settle, nor into what takes no current of its own: the input of an amplifier or gain, the base of
+ * a transistor without base current.
  */
 export function checkReach(wiring: Wiring, report: Report): void {
   const reach = conducting(wiring);
@@ -33,12 +37,12 @@ export function checkReach(wiring: Wiring, report: Report): void {
 function conducting(wiring: Wiring): UnionFind {
   const sets = new UnionFind(wiring.nets.length);
   const withoutGains = wiring.design.models.filter(
-    ({ params }) => !params.has("beta_f") && !params.has("beta_r"),
+    ({ params }) => !BASE_CURRENTS.some((name) => params.has(name)),
   );
   const baseless = new Set(withoutGains.map((model) => model.name));
   for (const element of wiring.design.elements) {
-    if (element.kind === "current") continue;
-    if (element.kind === "opamp") {
+    if (drivesCurrent(element)) continue;
+    if (isDriver(element)) {
       sets.union(wiring.net(element, "out"), GROUND);
       continue;
     }
@@ -55,6 +59,8 @@ function checkEnds(wiring: Wiring, isSettled: (net: number) => boolean, report: 
   const wellConnected = wiring.nets.filter((_, net) => wiring.connections[net]!.length > 1);
   wiring.connections.forEach((connections, net) => {
     if (net === GROUND || connections.length !== 1) return;
+    // What a law reads is as good as a second connection, where the net has a voltage without it.
+    if (wiring.sensed.has(net) && isSettled(net)) return;
     ends.add(net);
     const name = wiring.nets[net]!;
     const place = wiring.design.netPlaces.get(name)!;
@@ -87,7 +93,7 @@ function checkIsland(wiring: Wiring, nets: readonly number[], report: Report): v
   const cut = new Set<Element>();
   for (const net of nets) {
     for (const { element } of wiring.connections[net]!) {
-      if (element.kind === "current" && !within(wiring, element, inside)) cut.add(element);
+      if (drivesCurrent(element) && !within(wiring, element, inside)) cut.add(element);
     }
   }
   if (cut.size === 0) {

@@ -55,7 +55,7 @@ describe("a term at its neutral limit is, byte for byte, the term left out", () 
       (more: string) => resistor(more.replace(", ", " { ").concat(more === "" ? "" : " }")),
       "drift = 0 ppm/K",
     ],
-  ])("%#: %s", (text, neutral) => {
+  ])("%#: $1", (text, neutral) => {
     expect(bytesOf(text(`, ${neutral}`))).toEqual(bytesOf(text("")));
   });
 
@@ -72,7 +72,7 @@ describe("a term at its neutral limit is, byte for byte, the term left out", () 
     [amplifier, "bias_offset = 1 pA"],
     [amplifier, "R_out = 100 Ω"],
     [amplifier, "out_high = 5 V"],
-  ])("and is not where it counts, %#: %s", (text, given) => {
+  ])("and is not where it counts, %#: $1", (text, given) => {
     expect(bytesOf(text(`, ${given}`))).not.toEqual(bytesOf(text("")));
   });
 
