@@ -1,6 +1,7 @@
 import type { Element, Signal, Typed } from "@/lib/language/ast";
 import { differentiate } from "@/lib/language/differentiate";
 import { evaluate, type Scope } from "@/lib/language/evaluate";
+import { evaluateInterval, type Interval, type IntervalScope } from "@/lib/language/interval";
 import { KINDS } from "@/lib/language/kinds";
 import { signalName, signalsOf } from "@/lib/language/signals-of";
 import { branchAt, type Circuit } from "./circuit";
@@ -40,6 +41,9 @@ export class LawExpression {
   private readonly figures = new Map<string, number>();
   private readonly scope: Scope & { thermalVoltage: number };
   private at: Float64Array = new Float64Array(0);
+  /** As `scope`, with each signal within `around` of where it is. */
+  private readonly ranges: IntervalScope;
+  private around: Float64Array = new Float64Array(0);
 
   constructor(law: Typed, circuit: Circuit, elements: ReadonlyMap<string, Element>, values: PointValues) {
     this.value = withoutPower(law);
@@ -60,6 +64,32 @@ export class LawExpression {
       signal: (signal) => this.at[this.numbers.get(signal)!]!,
       thermalVoltage: 0,
     };
+    const { scope } = this;
+    this.ranges = {
+      knob: scope.knob,
+      let: scope.let,
+      signal: (signal) => {
+        const k = this.numbers.get(signal)!;
+        return { low: this.at[k]! - this.around[k]!, high: this.at[k]! + this.around[k]! };
+      },
+      get thermalVoltage() {
+        return scope.thermalVoltage;
+      },
+    };
+  }
+
+  /** Where the value lies while each signal stays within `around` of `signals`, rounding included. */
+  valueRange(signals: Float64Array, around: Float64Array): Interval {
+    this.at = signals;
+    this.around = around;
+    return evaluateInterval(this.value, this.ranges);
+  }
+
+  /** Where the slope by signal `k` lies likewise. */
+  slopeRange(k: number, signals: Float64Array, around: Float64Array): Interval {
+    this.at = signals;
+    this.around = around;
+    return evaluateInterval(this.slopes[k]!, this.ranges);
   }
 
   /** Reads the knobs and values of the law as they are for its element now. */

@@ -1,6 +1,7 @@
+import { UNIT } from "@/lib/devices/rounding";
 import type { Element } from "@/lib/language/ast";
 import { LawExpression } from "../law-expression";
-import { type Bench, type JunctionPart, netAt } from "../part";
+import { type Bench, type JunctionPart, netAt, type Proof } from "../part";
 import { across, flow, type State } from "../state";
 import type { PointValues } from "../values";
 
@@ -22,7 +23,8 @@ const ROUNDED = 1e-5;
  * An element whose voltage, or whose current from plus to minus, is an expression of signals. It is linearised at values of the
  * signals of its own, which stay where the expression has a value and does not run away.
  */
-export class LawPart implements JunctionPart {
+export class LawPart implements JunctionPart, Proof {
+  readonly proof: Proof = this;
   readonly element: Element;
   readonly movers: ReadonlySet<string>;
   private readonly expression: LawExpression;
@@ -174,6 +176,35 @@ export class LawPart implements JunctionPart {
     const drop = across(state, plus, minus);
     state.residual[branch] = drop - value;
     state.scale[branch] = Math.abs(drop) + Math.abs(value) + rounded;
+  }
+
+  /** Interval arithmetic at the signals themselves, which are known to a few roundings. */
+  addDoubt({ share }: State, doubt: Float64Array): void {
+    const { expression, y, trial, value, plus, minus, branch } = this;
+    for (let k = 0; k < y.length; k++) trial[k] = 4 * UNIT * Math.abs(y[k]!);
+    const { low, high } = expression.valueRange(y, trial);
+    const most = share * Math.max(high - value, value - low);
+    if (branch < 0) {
+      doubt[plus]! += most;
+      doubt[minus]! += most;
+    } else doubt[branch]! += most;
+  }
+
+  /** Interval arithmetic over the ball. */
+  addSpread({ share }: State, radius: number, weights: Float64Array, spread: Float64Array): void {
+    const { expression, y, trial, slopes, plus, minus, branch } = this;
+    const { sources } = expression;
+    const weightOf = (k: number) => weights[sources[k]!.from]! + weights[sources[k]!.less]!;
+    for (let k = 0; k < y.length; k++) trial[k] = radius * weightOf(k) + 4 * UNIT * Math.abs(y[k]!);
+    let most = 0;
+    for (let k = 0; k < y.length; k++) {
+      const { low, high } = expression.slopeRange(k, y, trial);
+      most += share * weightOf(k) * Math.max(high - slopes[k]!, slopes[k]! - low);
+    }
+    if (branch < 0) {
+      spread[plus]! += most;
+      spread[minus]! += most;
+    } else spread[branch]! += most;
   }
 
   current(pin: string, state: State): number {

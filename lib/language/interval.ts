@@ -1,0 +1,161 @@
+import type { Signal, Typed } from "./ast";
+
+/** All values from `low` to `high`. */
+export interface Interval {
+  readonly low: number;
+  readonly high: number;
+}
+
+/** Where an expression finds the ranges of its signals; knobs and values are exact as they stand. */
+export interface IntervalScope {
+  knob(name: string): number;
+  let(name: string): number;
+  signal(signal: Signal): Interval;
+  readonly thermalVoltage: number;
+}
+
+/** Relative widening of one operation, four units in the last place each way, and absolute, for underflow. */
+const WIDE = 2 ** -50;
+const TINY = Number.MIN_VALUE * 4;
+/** k·T/q with rounded constants. */
+const WIDE_THERMAL = 2 ** -49;
+
+const ANYTHING: Interval = { low: Number.NEGATIVE_INFINITY, high: Number.POSITIVE_INFINITY };
+
+/**
+ * An interval that holds the exact value of an expression for all values of its signals, rounding included (Moore, Interval Analysis,
+ * 1966). Infinite where nothing is known: over a pole, out of a function's domain, or where `if` is not decided, since it may jump there.
+ */
+export function evaluateInterval(typed: Typed, scope: IntervalScope): Interval {
+  switch (typed.op) {
+    case "constant":
+      return point(typed.value);
+    case "knob":
+      return point(scope.knob(typed.name));
+    case "let":
+      return point(scope.let(typed.name));
+    case "thermal voltage":
+      return widened(scope.thermalVoltage, scope.thermalVoltage, WIDE_THERMAL);
+    case "signal":
+      return scope.signal(typed.signal);
+    case "negate": {
+      const { low, high } = evaluateInterval(typed.operand, scope);
+      return { low: -high, high: -low };
+    }
+    case "call":
+      return call(typed, scope);
+    case "reduce":
+    case "trace":
+    case "reading":
+      return ANYTHING;
+    default:
+      return binary(typed.op, evaluateInterval(typed.left, scope), evaluateInterval(typed.right, scope));
+  }
+}
+
+function point(value: number): Interval {
+  return Number.isNaN(value) ? ANYTHING : { low: value, high: value };
+}
+
+function widened(low: number, high: number, by = WIDE): Interval {
+  // NaN, too, is not finite, and becomes anything.
+  if (!Number.isFinite(low) || !Number.isFinite(high)) return ANYTHING;
+  return { low: low - Math.abs(low) * by - TINY, high: high + Math.abs(high) * by + TINY };
+}
+
+function hull(values: readonly number[]): Interval {
+  return widened(Math.min(...values), Math.max(...values));
+}
+
+function binary(
+  op: "+" | "-" | "*" | "/" | "^" | "<=" | ">=" | "<" | ">",
+  a: Interval,
+  b: Interval,
+): Interval {
+  switch (op) {
+    case "+":
+      return widened(a.low + b.low, a.high + b.high);
+    case "-":
+      return widened(a.low - b.high, a.high - b.low);
+    case "*":
+      return product(a, b);
+    case "/":
+      if (b.low <= 0 && b.high >= 0) return ANYTHING;
+      return hull([a.low / b.low, a.low / b.high, a.high / b.low, a.high / b.high]);
+    case "^":
+      return power(a, b);
+    case "<":
+    case "<=":
+      return comparison(a, b, op === "<");
+    case ">":
+    case ">=":
+      return comparison(b, a, op === ">");
+  }
+}
+
+function product(a: Interval, b: Interval): Interval {
+  const isNothing = (one: Interval) => one.low === 0 && one.high === 0;
+  if (isNothing(a) || isNothing(b)) return point(0);
+  return hull([a.low * b.low, a.low * b.high, a.high * b.low, a.high * b.high]);
+}
+
+/** 1 or 0 where it is decided, else from 0 to 1. */
+function comparison(a: Interval, b: Interval, isStrict: boolean): Interval {
+  if (isStrict ? a.high < b.low : a.high <= b.low) return point(1);
+  if (isStrict ? a.low >= b.high : a.low > b.high) return point(0);
+  return { low: 0, high: 1 };
+}
+
+function power(a: Interval, b: Interval): Interval {
+  if (b.low === b.high && Number.isInteger(b.low)) {
+    const n = b.low;
+    if (n < 0 && a.low <= 0 && a.high >= 0) return ANYTHING;
+    const ends = [a.low ** n, a.high ** n];
+    return hull(n % 2 === 0 && n > 0 && a.low < 0 && a.high > 0 ? [...ends, 0] : ends);
+  }
+  if (!(a.low > 0))
+    return a.low === 0 && b.low > 0 ? { low: 0, high: power(point(a.high), b).high } : ANYTHING;
+  return hull([a.low ** b.low, a.low ** b.high, a.high ** b.low, a.high ** b.high]);
+}
+
+function call(typed: Extract<Typed, { op: "call" }>, scope: IntervalScope): Interval {
+  const ranges = () => typed.args.map((arg) => evaluateInterval(arg, scope));
+  const rising = (f: (x: number) => number) => {
+    const { low, high } = evaluateInterval(typed.args[0]!, scope);
+    return widened(f(low), f(high));
+  };
+  switch (typed.callee) {
+    case "if": {
+      const condition = evaluateInterval(typed.args[0]!, scope);
+      if (condition.low > 0 || condition.high < 0) return evaluateInterval(typed.args[1]!, scope);
+      if (condition.low === 0 && condition.high === 0) return evaluateInterval(typed.args[2]!, scope);
+      return ANYTHING;
+    }
+    case "exp": {
+      const range = rising(Math.exp);
+      return { low: Math.max(0, range.low), high: range.high };
+    }
+    case "ln":
+      return rising(Math.log);
+    case "log10":
+      return rising(Math.log10);
+    case "sqrt":
+      return rising(Math.sqrt);
+    case "tanh":
+      return rising(Math.tanh);
+    case "atan":
+      return rising(Math.atan);
+    case "abs": {
+      const [{ low, high }] = ranges() as [Interval];
+      return low >= 0 ? { low, high } : { low: high <= 0 ? -high : 0, high: Math.max(-low, high) };
+    }
+    case "min":
+      return pick(ranges(), Math.min);
+    case "max":
+      return pick(ranges(), Math.max);
+  }
+}
+
+function pick(ranges: readonly Interval[], of: (...values: number[]) => number): Interval {
+  return { low: of(...ranges.map(({ low }) => low)), high: of(...ranges.map(({ high }) => high)) };
+}
