@@ -1,6 +1,7 @@
 import type { Element } from "@/lib/language/ast";
 import { KINDS } from "@/lib/language/kinds";
 import type { Report } from "@/lib/language/report";
+import { hasSignals } from "@/lib/language/signals-of";
 import { UnionFind } from "./union-find";
 import { GROUND, list, type Wiring } from "./wiring-graph";
 import { holdsVoltage, isDriver } from "./wiring-laws";
@@ -38,8 +39,9 @@ export function checkLoops(wiring: Wiring, ideal: ReadonlySet<Element>, report: 
     .filter((tie) => tie.from !== tie.to);
   const twice =
     "fix the same voltage twice, since the inputs of an ideal amplifier have no difference; wire one of them apart";
-  // Loops of voltage elements alone have been reported.
-  findLoops(wiring, [...voltages, ...inputs], (tie) => tie.element.kind === "opamp", twice, report);
+  // Loops of voltage elements alone have been reported; a law that reads signals can follow them.
+  const fixed = voltages.filter(({ element }) => element.law === null || !hasSignals(element.law.value));
+  findLoops(wiring, [...fixed, ...inputs], (tie) => tie.element.kind === "opamp", twice, report);
 }
 
 /** Reports nets with two drivers; the outputs that are the only driver of their net. */
