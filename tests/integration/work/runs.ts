@@ -38,7 +38,9 @@ export async function runUntil(
   }
 }
 
-export const ended = ({ status }: RunRecord) => status !== "queued" && status !== "running";
+/** Nothing more will change: it failed, was cancelled, or is done and judged. */
+export const ended = ({ status, judgedAt }: RunRecord) =>
+  status === "done" ? judgedAt !== null : status !== "queued" && status !== "running";
 
 export interface StoredPoints {
   /** SHA-256 over every chunk's place, count, extremes and bytes, in order. */
