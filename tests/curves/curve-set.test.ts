@@ -51,6 +51,24 @@ describe("storeys", () => {
     ]);
   });
 
+  it("gives an error its own storey beside a signal of either sign, and leaves on one ruler what a logarithm can hold", () => {
+    const axis = { knob: "V_x", unit: "V", scale: "logarithmic", values: [1e-3, 1e-2, 1e-1, 1] } as const;
+    const points = { outcome: axis.values.map(() => "converged" as const) };
+    const keysOf = (columns: Record<string, readonly number[]>) => {
+      const traces = Object.entries(columns).map(([name, values]) => ({ name, unit: "V", values }));
+      const set = curveSet({ axes: [axis], traces, points })!;
+      return storeysOf(set, usualChoice(set)).map(({ key, traces: names }) => [key, ...names]);
+    };
+    const error = [1e-4, 2e-4, 1e-4, 3e-4];
+    expect(keysOf({ out: [-1, -0.5, 0.5, 1], error })).toEqual([
+      ["V", "out"],
+      ["V small", "error"],
+    ]);
+    expect(keysOf({ out: [-1, -0.5, 0.5, 1], ideal: [-1, -0.5, 0.5, 0.9] })).toEqual([["V", "out", "ideal"]]);
+    expect(keysOf({ out: [-1, -0.5, 0.5, 1], nothing: [0, 0, 0, 0] })).toEqual([["V", "out", "nothing"]]);
+    expect(keysOf({ out: [1e-3, 1e-2, 1e-1, 1], error })).toEqual([["V", "out", "error"]]);
+  });
+
   it("draws twelve of many settings unless asked for others, the first and the last among them", () => {
     const set = madeUpSet(
       [1, 2],
@@ -84,6 +102,23 @@ describe("account and summary", () => {
     const sentence = plain(summarise(set, storeysOf(set, usualChoice(set)), accountOf(set, [0])));
     expect(sentence).toContain("product rises from 300.0 V to 3.000 kV");
     expect(sentence).toContain("All 2 points are solved.");
+  });
+
+  it("calls level what differs by less than its figures show", () => {
+    const { axes, points } = madeUpSource([1, 2], [283.15, 298.15]);
+    const crumbs = { name: "drive", unit: "V", values: [5, 5 + 4e-9, 1, 1 - 1e-9] };
+    const said = (values: readonly number[]) => {
+      const set = curveSet({ axes, points, traces: [{ ...crumbs, values }] })!;
+      return plain(summarise(set, storeysOf(set, usualChoice(set)), accountOf(set, [0, 1])));
+    };
+    expect(said(crumbs.values)).toContain("drive is level in each, between 1.000 V and 5.000 V");
+    expect(said([5, 5 + 4e-9, 5, 5 - 1e-9])).toContain("drive is 5.000 V throughout");
+    expect(said([5, 5.1, 1, 1.1])).toContain("drive rises in each");
+  });
+
+  it("says that nothing was kept where the netlist shows nothing", () => {
+    const set = curveSet({ ...madeUpSource([1, 2], [300]), traces: [] })!;
+    expect(summarise(set, [], accountOf(set, [0]))).toMatch(/^No trace was kept\./);
   });
 
   it("does not count points that are still to come as failed", () => {

@@ -65,13 +65,13 @@ export function CurveFigure({ set, name, view, onView, point, onPoint, waiting }
           fit={plot.horizontal.fit}
           onChange={(x) => onView({ x })}
         />
-        {plot.storeys.map(({ unit, traces, axis }) => (
+        {plot.storeys.map(({ key, traces, axis }) => (
           <AxisSwitch
-            key={unit}
-            name={traces.length === 1 ? traces[0]! : unit}
+            key={key}
+            name={traces.length === 1 ? traces[0]! : key}
             scale={axis.mapping.scale}
             fit={axis.fit}
-            onChange={(scale) => onView({ y: { ...view.y, [unit]: scale } })}
+            onChange={(scale) => onView({ y: { ...view.y, [key]: scale } })}
           />
         ))}
       </div>
@@ -96,7 +96,9 @@ export function CurveFigure({ set, name, view, onView, point, onPoint, waiting }
         )}
         {plot.storeys.length === 0 && (
           <p className="border-y py-6 text-quiet text-sm">
-            No trace is chosen. Choose one in the table of lines below.
+            {set.source.traces.length === 0
+              ? "The netlist shows nothing, so no trace was kept. Add a line such as show out.v and run it again; the nets of a single point stand beside."
+              : "No trace is chosen. Choose one in the table of lines below."}
           </p>
         )}
       </div>

@@ -4,7 +4,7 @@ import { shownUnit, shownValue } from "./figures-in-words";
 import { FEW_POINTS } from "./line-style";
 import { extent, type Range, verticalRange, zoomed } from "./range";
 import { LINEAR, type LogarithmicFit, logarithmicFit, type Mapping, placeOf, type Scale } from "./scale";
-import { type Choice, type Storey, storeysOf, usualChoice } from "./storeys";
+import { type Choice, type Storey, storeysOf, usualChoice, usualScale } from "./storeys";
 import { decadeLabels, linearLabels, type TickLabels } from "./tick-labels";
 import { type Tick, ticksOf } from "./ticks";
 
@@ -13,7 +13,7 @@ export interface CurveView {
   readonly traces: readonly string[] | null;
   readonly families: readonly number[] | null;
   readonly x: Scale | null;
-  /** By unit, one a storey. */
+  /** By the key of a storey, which is its unit unless a unit has two. */
   readonly y: Readonly<Record<string, Scale>>;
   /** Part of the sweep that is in view, in coherent values of the first knob. */
   readonly zoom: Range | null;
@@ -34,12 +34,6 @@ export interface StoreyView extends Storey {
   readonly axis: Axis;
   readonly height: number;
 }
-
-/**
- * Over a ruler, values that reach over this many decades stand on a logarithmic axis unless the reader says otherwise. More than
- * the upper bound are no measure of anything: a value near zero is then a rest of rounding.
- */
-const MANY_DECADES = { from: 3, to: 15 };
 
 /** Px along the ruler that a label takes with the room around it. */
 const LABEL_ROOM = 60;
@@ -93,7 +87,7 @@ export function storeyViews(set: CurveSet, view: CurveView, horizontal: Axis, na
   return storeys.map((storey, index) => {
     const columns = storey.lines.map(({ values }) => values);
     const fit = logarithmicFit(columns.flat());
-    const scale = view.y[storey.unit] ?? usualScale(set, fit);
+    const scale = view.y[storey.key] ?? usualScale(set, fit);
     const mapping: Mapping = scale === "logarithmic" && fit.fits ? { scale, sign: fit.sign } : LINEAR;
     const visible = columns.map((column) => column.filter((_, i) => inView[i]));
     const found = extent(visible, mapping);
@@ -104,11 +98,6 @@ export function storeyViews(set: CurveSet, view: CurveView, horizontal: Axis, na
     const axis = { mapping, range, ticks, labels: labelsOf(ticks, mapping, storey.unit, false), fit };
     return { ...storey, axis, height };
   });
-}
-
-function usualScale({ axis }: CurveSet, fit: LogarithmicFit): Scale {
-  const many = fit.fits && fit.decades > MANY_DECADES.from && fit.decades < MANY_DECADES.to;
-  return many && axis.scale === "logarithmic" ? "logarithmic" : "linear";
 }
 
 /** Places of the swept values along the horizontal axis, ascending. */

@@ -39,7 +39,7 @@ export function PlotFrame(props: Props) {
         <div className="grid" style={{ gap: STOREY_GAP }}>
           {storeys.map((storey) => (
             <StoreyPlot
-              key={storey.unit}
+              key={storey.key}
               storey={storey}
               horizontal={horizontal}
               x={x}

@@ -7,6 +7,9 @@ export interface Gutters {
   readonly labelled: boolean;
 }
 
+/** Room for the word "failed" before its strip, px. */
+const FAILED = 52;
+
 /** Advance of a figure at 12 px, px. */
 const FIGURE = 7.3;
 
@@ -17,7 +20,7 @@ export const NARROW = 560;
 export function guttersFor(frame: number, storeys: readonly StoreyView[]): Gutters {
   const widest = (texts: Iterable<string>) => Math.max(0, ...[...texts].map((text) => text.length)) * FIGURE;
   const figures = widest(storeys.flatMap(({ axis }) => [...axis.labels.texts.values()]));
-  const left = Math.ceil(Math.max(40, figures + 20));
+  const left = Math.ceil(Math.max(FAILED, figures + 20));
   const labels = widest(storeys.flatMap(({ lines }) => lines.map(({ label }) => label)));
   const labelled = frame >= NARROW && labels > 0 && labels + 34 < 0.3 * frame;
   return { left, right: labelled ? Math.ceil(labels + 34) : 28, labelled };

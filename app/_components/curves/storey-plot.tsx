@@ -47,7 +47,7 @@ export const StoreyPlot = memo(function StoreyPlot({ storey, horizontal, x, widt
   const only = storey.traces.length === 1 ? storey.traces[0] : null;
   return (
     <div className="relative" style={{ height, width }}>
-      <div ref={host} aria-hidden="true" className="absolute inset-0" data-storey={storey.unit} />
+      <div ref={host} aria-hidden="true" className="absolute inset-0" data-storey={storey.key} />
       <VerticalAxis axis={axis} height={height} />
       <p
         className="absolute top-1 left-2 z-10 max-w-full truncate bg-paper/80 pr-1 text-xs"

@@ -3,6 +3,8 @@ import { formatQuantity } from "@/lib/units/quantity";
 import type { CurveSet } from "./curve-set";
 import { type Account, spansInWords } from "./failed-spans";
 import { formatKnob } from "./figures-in-words";
+import { extent } from "./range";
+import { LINEAR } from "./scale";
 import type { Line, Storey } from "./storeys";
 
 /** What a plot shows, in sentences: what is drawn over what, where each trace goes, how many points failed and where. */
@@ -16,6 +18,7 @@ export function summarise(set: CurveSet, storeys: readonly Storey[], account: Ac
   const traces = storeys.flatMap(({ traces, lines }) =>
     traces.map((name) => course(lines.filter((line) => line.trace === name))),
   );
+  if (set.source.traces.length === 0) return `No trace was kept. ${pointsInWords(set, account)}`;
   if (traces.length === 0) return `No trace is chosen. ${pointsInWords(set, account)}`;
   return `Over ${over}${settings}: ${traces.join("; ")}. ${pointsInWords(set, account)}`;
 }
@@ -38,8 +41,10 @@ function course(lines: readonly Line[]): string {
   // What is smaller than rounding leaves of the largest value is zero to a reader.
   const rest = 1e-15 * Math.max(Math.abs(low), Math.abs(high));
   const show = (value: number) => formatQuantity(Math.abs(value) < rest ? 0 : value, line.unit);
-  if (low === high) return `${line.trace} is ${show(low)} throughout`;
+  if (show(low) === show(high)) return `${line.trace} is ${show(low)} throughout`;
   const ways = new Set(lines.map(({ values: column }) => way(column)));
+  if (ways.size === 1 && ways.has("level"))
+    return `${line.trace} is level in each, between ${show(low)} and ${show(high)}`;
   if (ways.size > 1 || ways.has("turns")) return `${line.trace} lies between ${show(low)} and ${show(high)}`;
   const [verb, from, to] = ways.has("rises") ? ["rises", low, high] : ["falls", high, low];
   return lines.length === 1
@@ -47,7 +52,12 @@ function course(lines: readonly Line[]): string {
     : `${line.trace} ${verb} in each, between ${show(low)} and ${show(high)}`;
 }
 
-function way(column: readonly (number | null)[]): "rises" | "falls" | "turns" {
+/** Which way a line goes; level where it stays within a millionth of its largest value, less than any figure here shows. */
+function way(column: readonly (number | null)[]): "level" | "rises" | "falls" | "turns" {
+  const found = extent([column], LINEAR);
+  if (found === null) return "level";
+  const size = Math.max(Math.abs(found.from), Math.abs(found.to));
+  if (found.to - found.from <= 1e-6 * size) return "level";
   let rises = true;
   let falls = true;
   let before: number | null = null;
