@@ -136,7 +136,7 @@ test("two people on one netlist: the later save is refused, and neither text is 
   await mine.getByText(/^revision 2$/).waitFor();
   expect(await shownText(mine)).toContain("let theirs = 2 V");
   expect(await shownText(mine)).not.toContain("let mine");
-  await mine.getByRole("button", { name: "Take it back" }).click();
+  await mine.getByRole("button", { name: "Restore it" }).click();
   await mine.getByText("draft on revision 2").waitFor();
   expect(await shownText(mine)).toContain("let mine = 1 V");
 });
@@ -170,7 +170,7 @@ test("a tab that dies loses nothing: the next visit offers the text", async () =
   const notice = next.getByRole("alert").filter({ hasText: "A text of yours is not in any revision" });
   await notice.waitFor();
   expect(await shownText(next)).not.toContain("precious");
-  await notice.getByRole("button", { name: "Take it back" }).click();
+  await notice.getByRole("button", { name: "Restore it" }).click();
   await expect.poll(() => shownText(next), PATIENT).toContain("let precious = 1 V");
   expect(await notice.count()).toBe(0);
 });

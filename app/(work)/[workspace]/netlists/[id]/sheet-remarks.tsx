@@ -10,9 +10,11 @@ import type { SheetState } from "./use-sheet";
 export function SheetRemarks({
   sheet,
   workspace,
+  netlistId,
 }: {
   readonly sheet: SheetState;
   readonly workspace: string;
+  readonly netlistId: string;
 }) {
   const { aside, remark, unsafe, broken, changed, saved } = sheet;
   return (
@@ -24,7 +26,7 @@ export function SheetRemarks({
           </p>
           <div className="mt-2 flex flex-wrap gap-2">
             <Button size="small" onClick={sheet.takeBack}>
-              Take it back
+              Restore it
             </Button>
             <Button size="small" tone="quiet" onClick={sheet.dropAside}>
               Drop it
@@ -39,6 +41,14 @@ export function SheetRemarks({
             {remark.made !== undefined && (
               <Link href={`/${workspace}/netlists/${remark.made}`} className="link min-h-7">
                 Open your copy
+              </Link>
+            )}
+            {remark.signedOut === true && (
+              <Link
+                href={`/sign-in?next=${encodeURIComponent(`/${workspace}/netlists/${netlistId}`)}`}
+                className="link min-h-7"
+              >
+                Sign in
               </Link>
             )}
             <Button size="small" tone="quiet" onClick={() => sheet.setRemark(null)}>

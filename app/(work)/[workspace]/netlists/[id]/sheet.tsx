@@ -48,7 +48,7 @@ export function Sheet({ workspace, netlist, latest, runs, role, mayQueue }: Prop
   return (
     <div className="flex grow flex-col">
       <SheetHeader sheet={sheet} title={latest.title} netlist={netlist} role={role} mayQueue={mayQueue} />
-      <SheetRemarks sheet={sheet} workspace={workspace} />
+      <SheetRemarks sheet={sheet} workspace={workspace} netlistId={netlist.id} />
       <div className="grid grow lg:grid-cols-[minmax(0,1fr)_minmax(320px,25%)] lg:grid-rows-[minmax(480px,1fr)]">
         <div className="flex h-[min(75dvh,720px)] min-w-0 flex-col border-b lg:h-0 lg:min-h-full lg:border-r lg:border-b-0">
           <div className="min-h-0 grow">

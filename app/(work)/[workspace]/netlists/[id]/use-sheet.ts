@@ -17,6 +17,8 @@ export interface Remark {
   readonly detail: string;
   /** A netlist to look at. */
   readonly made?: string;
+  /** Nobody is signed in any more; the text waits as a draft. */
+  readonly signedOut?: boolean;
 }
 
 interface Asked {
@@ -56,8 +58,8 @@ export function useSheet({ workspace, netlistId, latest, mayQueue }: Asked) {
   const failed = async (title: string, answer: { status: number; detail: string }) => {
     setWorking(null);
     const newest = answer.status === 409 ? await fetchLatest() : null;
-    if (newest === null) refuse(title, answer.detail);
-    else setTheirs(newest);
+    if (newest !== null) return setTheirs(newest);
+    setRemark({ tone: "broken", title, detail: answer.detail, signedOut: answer.status === 401 });
   };
 
   const queue = async () => {
