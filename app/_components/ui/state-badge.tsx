@@ -40,3 +40,13 @@ export function StateBadge({ state, failed = 0 }: { readonly state: State; reado
     </span>
   );
 }
+
+/** What to show of a run: its verdict once it is judged and wholly solved, else its state. */
+export function shownState(run: {
+  readonly status: Extract<State, "queued" | "running" | "done" | "failed" | "cancelled">;
+  readonly verdict?: Extract<State, "holds" | "broken" | "no data"> | null;
+  readonly pointsFailed: number;
+}): State {
+  if (run.status !== "done" || !run.verdict) return run.status;
+  return run.pointsFailed > 0 && run.verdict === "holds" ? "done" : run.verdict;
+}

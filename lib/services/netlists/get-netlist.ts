@@ -36,6 +36,7 @@ export async function getNetlist(actor: Actor, id: string): Promise<NetlistDetai
         id: lastRun.id,
         number: lastRun.number,
         status: lastRun.status,
+        verdict: lastRun.verdict,
         points: lastRun.points,
         pointsFailed: lastRun.pointsFailed,
       },

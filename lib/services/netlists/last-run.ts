@@ -2,12 +2,14 @@ import { desc, eq } from "drizzle-orm";
 import type { Queryable } from "@/db/client";
 import { netlist } from "@/db/schema/netlist";
 import { run } from "@/db/schema/run";
+import type { Verdict } from "@/lib/analyses/result";
 
 /** The newest run of a netlist, as lists show it. */
 export interface LastRun {
   readonly id: string;
   readonly number: number;
   readonly status: (typeof run.$inferSelect)["status"];
+  readonly verdict: Verdict | null;
   readonly points: number;
   readonly pointsFailed: number;
 }
@@ -19,6 +21,7 @@ export function lastRunOf(db: Queryable) {
       id: run.id,
       number: run.number,
       status: run.status,
+      verdict: run.verdict,
       points: run.points,
       pointsFailed: run.pointsFailed,
     })

@@ -60,6 +60,7 @@ export async function listNetlists(
         id: lastRun.id,
         number: lastRun.number,
         status: lastRun.status,
+        verdict: lastRun.verdict,
         points: lastRun.points,
         pointsFailed: lastRun.pointsFailed,
       },

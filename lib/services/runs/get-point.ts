@@ -2,7 +2,7 @@ import { and, eq, gt, lte } from "drizzle-orm";
 import { database } from "@/db/client";
 import { run } from "@/db/schema/run";
 import { shard } from "@/db/schema/shard";
-import { placeOnAxes } from "@/lib/analyses/plan";
+import { drawOf, placeOnAxes } from "@/lib/analyses/plan";
 import { AppError } from "@/lib/errors";
 import type { Actor } from "@/lib/permissions/actor";
 import { authorize } from "@/lib/permissions/authorize";
@@ -66,7 +66,14 @@ export async function getPoint(actor: Actor, id: string, point: number): Promise
   const unsettled = holder?.failures.find((one) => one.point === point)?.unsettled ?? [];
   return {
     point,
-    at: plan.axes.map(({ knob, unit, values: along }, axis) => ({ knob, unit, value: along[place[axis]!]! })),
+    at: [
+      ...plan.axes.map(({ knob, unit, values: along }, axis) => ({
+        knob,
+        unit,
+        value: along[place[axis]!]!,
+      })),
+      ...(plan.draws > 0 ? [{ knob: "draw", unit: "1", value: drawOf(plan, point) }] : []),
+    ],
     outcome,
     iterations: figure("iterations"),
     residual: figure("residual"),

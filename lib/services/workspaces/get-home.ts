@@ -3,6 +3,7 @@ import { database } from "@/db/client";
 import { netlist } from "@/db/schema/netlist";
 import { run } from "@/db/schema/run";
 import { user } from "@/db/schema/user";
+import type { Verdict } from "@/lib/analyses/result";
 import type { Actor } from "@/lib/permissions/actor";
 import { authorize } from "@/lib/permissions/authorize";
 import type { RunStatus } from "../runs/run-columns";
@@ -18,6 +19,7 @@ export interface HomeRun {
   readonly title: string;
   readonly revision: number;
   readonly status: RunStatus;
+  readonly verdict: Verdict | null;
   readonly points: number;
   readonly pointsDone: number;
   readonly pointsFailed: number;
@@ -30,7 +32,7 @@ export interface HomeRun {
 
 export interface Home {
   readonly counts: { readonly netlists: number; readonly runs: number };
-  /** Newest runs of netlists that failed, or that left points unsolved; the newest first. */
+  /** Newest runs of netlists that failed, left points unsolved, or broke a requirement; the newest first. */
   readonly failing: readonly HomeRun[];
   /** Queued and running, the oldest first. */
   readonly running: readonly HomeRun[];
@@ -48,7 +50,10 @@ export async function getHome(actor: Actor): Promise<Home> {
     .innerJoin(netlist, and(eq(netlist.id, run.netlistId), isNull(netlist.archivedAt)))
     .where(inWorkspace)
     .orderBy(run.netlistId, desc(run.number));
-  const broken = or(eq(run.status, "failed"), and(eq(run.status, "done"), gt(run.pointsFailed, 0)));
+  const broken = or(
+    eq(run.status, "failed"),
+    and(eq(run.status, "done"), or(gt(run.pointsFailed, 0), inArray(run.verdict, ["broken", "no data"]))),
+  );
   const [netlists, runs, failing, running, recent] = await Promise.all([
     db
       .select({ total: count() })
@@ -76,6 +81,7 @@ async function runsWhere(matches: SQL | undefined, order: SQL, most: number): Pr
       title: run.title,
       revision: run.revisionNumber,
       status: run.status,
+      verdict: run.verdict,
       points: run.points,
       pointsDone: run.pointsDone,
       pointsFailed: run.pointsFailed,

@@ -1,6 +1,6 @@
 import Link from "next/link";
 import { counted, formatCount } from "@/app/_components/ui/count";
-import { StateBadge } from "@/app/_components/ui/state-badge";
+import { StateBadge, shownState } from "@/app/_components/ui/state-badge";
 import { StateMark } from "@/app/_components/ui/state-mark";
 import { ProgressLine } from "@/app/_components/ui/states";
 import type { HomeRun } from "./home-run";
@@ -65,7 +65,7 @@ function RunLine({ workspace, run }: { readonly workspace: string; readonly run:
           run {run.number}, revision {run.revision}
         </span>
       </p>
-      <StateBadge state={run.status} failed={run.pointsFailed} />
+      <StateBadge state={shownState(run)} failed={run.pointsFailed} />
     </div>
   );
 }

@@ -7,6 +7,7 @@ export interface HomeRun {
   readonly title: string;
   readonly revision: number;
   readonly status: "queued" | "running" | "done" | "failed" | "cancelled";
+  readonly verdict: "holds" | "broken" | "no data" | null;
   readonly points: number;
   readonly pointsDone: number;
   readonly pointsFailed: number;

@@ -3,7 +3,7 @@ import { ButtonLink } from "@/app/_components/ui/button";
 import { classNames } from "@/app/_components/ui/class-names";
 import { formatCount } from "@/app/_components/ui/count";
 import { Sparkline } from "@/app/_components/ui/sparkline";
-import { StateBadge } from "@/app/_components/ui/state-badge";
+import { StateBadge, shownState } from "@/app/_components/ui/state-badge";
 import { EmptyState } from "@/app/_components/ui/states";
 import { Cell, HeadCell, Table } from "@/app/_components/ui/table";
 import { When } from "@/app/_components/ui/when";
@@ -68,7 +68,7 @@ export function RecentRuns({
                   <When iso={run.queuedAt} />
                 </Cell>
                 <Cell>
-                  <StateBadge state={run.status} failed={run.pointsFailed} />
+                  <StateBadge state={shownState(run)} failed={run.pointsFailed} />
                 </Cell>
               </tr>
             ))}

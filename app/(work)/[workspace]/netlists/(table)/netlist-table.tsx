@@ -9,7 +9,7 @@ import {
 } from "@tanstack/react-table";
 import Link from "next/link";
 import { classNames } from "@/app/_components/ui/class-names";
-import { StateBadge } from "@/app/_components/ui/state-badge";
+import { StateBadge, shownState } from "@/app/_components/ui/state-badge";
 import { Cell, HeadCell, Table } from "@/app/_components/ui/table";
 import { When } from "@/app/_components/ui/when";
 import type { ListState, SortKey } from "./list-state";
@@ -132,7 +132,7 @@ function Row({ workspace, row }: { readonly workspace: string; readonly row: Net
             aria-label={`Run ${lastRun.number} of ${row.title}: ${lastRun.status}`}
             className="inline-block min-h-6 underline-offset-3 hover:underline"
           >
-            <StateBadge state={lastRun.status} failed={lastRun.pointsFailed} />
+            <StateBadge state={shownState(lastRun)} failed={lastRun.pointsFailed} />
           </Link>
         )}
       </Cell>

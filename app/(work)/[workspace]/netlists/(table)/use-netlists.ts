@@ -15,6 +15,7 @@ export interface NetlistRow {
     readonly id: string;
     readonly number: number;
     readonly status: "queued" | "running" | "done" | "failed" | "cancelled";
+    readonly verdict: "holds" | "broken" | "no data" | null;
     readonly pointsFailed: number;
     readonly points: number;
   } | null;

@@ -4,7 +4,7 @@ import { useQuery } from "@tanstack/react-query";
 import Link from "next/link";
 import { ButtonLink } from "@/app/_components/ui/button";
 import { formatCount } from "@/app/_components/ui/count";
-import { StateBadge } from "@/app/_components/ui/state-badge";
+import { StateBadge, shownState } from "@/app/_components/ui/state-badge";
 import { ProgressLine } from "@/app/_components/ui/states";
 import { When } from "@/app/_components/ui/when";
 import { ask } from "./ask";
@@ -82,7 +82,7 @@ function RunItem({ workspace, run, newest }: ItemProps) {
         >
           Run {run.number}
         </Link>
-        <StateBadge state={run.status} failed={run.pointsFailed} />
+        <StateBadge state={shownState(run)} failed={run.pointsFailed} />
       </div>
       <p className="text-quiet text-xs">
         revision {run.revision}, {formatCount(run.points)} points, {run.requestedBy},{" "}

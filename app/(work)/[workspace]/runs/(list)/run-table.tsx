@@ -4,7 +4,7 @@ import Link from "next/link";
 import { classNames } from "@/app/_components/ui/class-names";
 import { counted, formatCount } from "@/app/_components/ui/count";
 import { formatSpan } from "@/app/_components/ui/span-of-time";
-import { StateBadge } from "@/app/_components/ui/state-badge";
+import { StateBadge, shownState } from "@/app/_components/ui/state-badge";
 import { ProgressLine } from "@/app/_components/ui/states";
 import { Cell, HeadCell, Table } from "@/app/_components/ui/table";
 import { When } from "@/app/_components/ui/when";
@@ -76,7 +76,7 @@ export function RunTable({
               {row.status === "done" ? formatSpan(row.startedAt, row.finishedAt) : ""}
             </Cell>
             <Cell>
-              <StateBadge state={row.status} failed={row.pointsFailed} />
+              <StateBadge state={shownState(row)} failed={row.pointsFailed} />
               {row.status === "running" && (
                 <ProgressLine done={row.pointsDone} total={row.points} label={`Run ${row.number}`} />
               )}

@@ -34,6 +34,11 @@ export function RunFacts({ workspace, run }: { readonly workspace: string; reado
             {sweepInWords(axis)}
           </Fact>
         ))}
+        {run.plan.draws > 0 && (
+          <Fact name="Draws">
+            {formatCount(run.plan.draws)} beside the nominal design, which the curves show
+          </Fact>
+        )}
         <Fact name="Points">
           {formatCount(run.pointsDone - run.pointsFailed)} solved, {formatCount(run.pointsFailed)} failed, of{" "}
           {formatCount(run.points)}

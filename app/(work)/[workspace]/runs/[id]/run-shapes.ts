@@ -1,4 +1,6 @@
 import type { Plan } from "@/lib/analyses/plan";
+import type { Verdict } from "@/lib/analyses/result";
+import type { KeptJudgement } from "@/lib/analyses/verdict";
 
 export type RunStatus = "queued" | "running" | "done" | "failed" | "cancelled";
 
@@ -28,6 +30,9 @@ export interface RunState extends Progress {
   readonly engineVersion: string;
   readonly lastEvent: number;
   readonly plan: Plan;
+  /** Of the requirements; null before they are judged and where there are none. */
+  readonly verdict: Verdict | null;
+  readonly judgement: KeptJudgement | null;
 }
 
 interface Figure {

@@ -1,5 +1,5 @@
 import { counted, formatCount } from "@/app/_components/ui/count";
-import { StateBadge } from "@/app/_components/ui/state-badge";
+import { StateBadge, shownState } from "@/app/_components/ui/state-badge";
 import { ProgressLine } from "@/app/_components/ui/states";
 import { isLive, type RunState } from "./run-shapes";
 
@@ -10,7 +10,7 @@ export function RunStatusLine({ run, behind }: { readonly run: RunState; readonl
     <section aria-label="State of the run" className="grid border-b">
       <div className="flex flex-wrap items-baseline gap-x-4 gap-y-1 px-4 py-2.5 text-sm md:px-6">
         <span data-run-status={status}>
-          <StateBadge state={status} failed={run.pointsFailed} />
+          <StateBadge state={shownState(run)} failed={run.pointsFailed} />
         </span>
         <p className="min-w-0 text-quiet">
           <span role="status">

@@ -3,7 +3,7 @@
 import { useRouter } from "next/navigation";
 import { useCallback, useEffect, useMemo, useState } from "react";
 import { CurveFigure } from "@/app/_components/curves/curve-figure";
-import { curveSet } from "@/app/_components/curves/curve-set";
+import { type CurveSource, curveSet } from "@/app/_components/curves/curve-set";
 import { NumberTable } from "@/app/_components/curves/number-table";
 import { Notice } from "@/app/_components/ui/notice";
 import { Tabs } from "@/app/_components/ui/tabs";
@@ -11,11 +11,16 @@ import { Cautions, type VoltageSpan } from "./cautions";
 import { OperatingPoint } from "./operating-point";
 import { type PageState, readPageState, writePageState } from "./page-state";
 import { PointPanel } from "./point-panel";
+import { ReadingList } from "./reading-list";
+import { RequirementList } from "./requirement-list";
 import { RunFacts } from "./run-facts";
 import { RunHeader } from "./run-header";
 import { isLive, type PointAccount, type RunState } from "./run-shapes";
 import { RunStatusLine } from "./run-status-line";
 import { type Found, useLiveRun } from "./use-live-run";
+
+/** A finished run is judged within this time, ms, unless it is large. */
+const JUDGED = 1500;
 
 interface Props {
   readonly workspace: string;
@@ -48,10 +53,15 @@ export function RunView(props: Props) {
     }
   }, [state]);
 
-  // What only the server knows of a finished run (its extremes) is asked for once.
+  // What only the server knows of a finished run: its extremes at once, its judgement a moment later.
+  const judged = first.judgement !== null || first.error !== null;
   useEffect(() => {
-    if (finished) router.refresh();
-  }, [finished, router]);
+    if (!finished) return;
+    router.refresh();
+    if (judged) return;
+    const timer = setTimeout(() => router.refresh(), JUDGED);
+    return () => clearTimeout(timer);
+  }, [finished, judged, router]);
 
   const source = useMemo(
     () =>
@@ -63,6 +73,7 @@ export function RunView(props: Props) {
     [document, run.plan],
   );
   const set = useMemo(() => curveSet(source), [source]);
+  const numbers = useMemo(() => withDraws(source, run.plan.draws), [source, run.plan.draws]);
   const chosen = state.point !== null && state.point < run.points ? state.point : set === null ? 0 : null;
 
   return (
@@ -106,7 +117,7 @@ export function RunView(props: Props) {
                   label: "Table of numbers",
                   content: (
                     <NumberTable
-                      source={source}
+                      source={numbers}
                       page={state.page}
                       failedOnly={state.failed}
                       point={chosen}
@@ -128,12 +139,25 @@ export function RunView(props: Props) {
             choosable={set !== null}
             onPoint={(next) => show({ point: next })}
           />
+          <RequirementList requirements={document?.requirements ?? []} />
+          <ReadingList
+            readings={document?.readings ?? []}
+            axes={run.plan.axes}
+            budgets={first.judgement?.budgets ?? []}
+          />
           <RunFacts workspace={workspace} run={run} />
           <Cautions span={span} />
         </div>
       </div>
     </>
   );
+}
+
+/** The draws as one more axis, for the table that lists every point. The curves are those of draw 0, the nominal design. */
+function withDraws(source: CurveSource, draws: number): CurveSource {
+  if (draws === 0) return source;
+  const values = Array.from({ length: draws + 1 }, (_, draw) => draw);
+  return { ...source, axes: [...source.axes, { knob: "draw", unit: "1", scale: "list", values }] };
 }
 
 /** Why no curve can be there yet; null when what is there is all there is. */
