@@ -26,8 +26,8 @@ export function Cautions({ span }: { readonly span: VoltageSpan | null }) {
       )}
       <p className="max-w-prose text-quiet text-sm">
         These are direct-current operating points of the models in the netlist, at nominal values. They leave
-        out dynamics and bandwidth, noise, breakdown of junctions, high injection, self-heating, and whatever
-        the netlist does not name, such as leakage of a board. Results are no proof of safety.
+        out dynamics and bandwidth, noise, self-heating, and whatever the netlist does not give, such as the
+        breakdown of a junction or the leakage of a board. Results are no proof of safety.
       </p>
     </section>
   );
