@@ -34,6 +34,8 @@ export interface Sought {
 const QUIET = 12;
 const RESTLESS = 60;
 const NEWTON_STEPS = 40;
+/** V: how far around a known point its own neighbourhood is searched. */
+const BESIDE = 0.2;
 /** V: solutions that are closer, and not proved apart, are one. */
 const SAME = 1e-7;
 /** F at every net, beside 1 s of every amplifier. */
@@ -42,17 +44,18 @@ const CAPACITANCE = 1e-6;
 const HELD = 1e6;
 
 /** Looks for up to `most` operating points at the setting to which the system is turned, by deflation and scattered starts. */
-export function seek(system: System, most: number, first: readonly Float64Array[] = []): Sought {
-  return new Search(system, most).run(first);
+export function seek(system: System, most: number): Sought {
+  return new Seeker(system).seek(most);
 }
 
-class Search {
+/** Looks for the operating points of a system, at one setting after another; what it finds depends on the setting alone. */
+export class Seeker {
   private readonly bench: Bench;
   private readonly shape: SparseShape;
   private readonly linear: LinearSolver;
   private readonly aided: Aided;
   private readonly certificate: Certificate;
-  private readonly points: OperatingPoint[] = [];
+  private points: OperatingPoint[] = [];
   private readonly spent = { iterations: 0 };
   private readonly nets: number;
   /** D of D·dx/dt = −F: F at the nets, s at the amplifiers. */
@@ -62,10 +65,7 @@ class Search {
   private low = -1;
   private high = 1;
 
-  constructor(
-    private readonly system: System,
-    private readonly most: number,
-  ) {
+  constructor(private readonly system: System) {
     const { circuit, pattern, state } = system;
     this.aided = new Aided(system);
     this.shape = {
@@ -87,27 +87,50 @@ class Search {
     this.nets = circuit.unknowns.filter(({ unit }) => unit === "V").length;
   }
 
-  run(first: readonly Float64Array[]): Sought {
+  seek(most: number): Sought {
+    this.points = [];
+    this.spent.iterations = 0;
+    this.seed = 1;
+    [this.low, this.high] = [-1, 1];
     const outcome = new Ladder(this.system, false).solve(false);
     this.spent.iterations += outcome.iterations;
-    if (outcome.kind === "converged") this.arrive();
-    for (const start of first) this.from(start);
+    if (outcome.kind === "converged") this.keep();
     let quiet = 0;
-    for (let k = 0; this.points.length < this.most && quiet < (this.sum === 1 ? QUIET : RESTLESS); k++) {
-      const before = this.points.length;
-      this.start(k);
-      quiet = this.points.length > before ? 0 : quiet + 1;
+    for (let k = 0; this.points.length < most && quiet < (this.sum === 1 ? QUIET : RESTLESS); k++) {
+      quiet = this.start(k) ? 0 : quiet + 1;
     }
     const points = this.points.toSorted(inOrder);
     return { points, isComplete: this.sum === 1, iterations: this.spent.iterations };
+  }
+
+  /** Settles from the present unknowns; null where that comes to nothing. */
+  arrive(): OperatingPoint | null {
+    const { system, bench } = this;
+    const { state } = system;
+    system.settle();
+    const attempt = newton(bench, true, NEWTON_STEPS);
+    this.spent.iterations += attempt.iterations;
+    if (attempt.kind !== "converged") return null;
+    this.certificate.reset();
+    return { x: state.x.slice(0, -1), bound: this.certificate.prove(), ...this.judge() };
+  }
+
+  /** Whether two points are one: within what is proved of both, or very close where nothing is. */
+  isSame(a: OperatingPoint, b: OperatingPoint): boolean {
+    let apart = 0;
+    for (let j = 0; j < this.nets; j++) apart = Math.max(apart, Math.abs(a.x[j]! - b.x[j]!));
+    return Number.isNaN(a.bound + b.bound) ? apart < SAME : apart <= a.bound + b.bound + Number.EPSILON;
   }
 
   private get sum(): number {
     return this.points.reduce((sum, { index }) => sum + index, 0);
   }
 
-  /** Four kinds of start in turn: held at scattered voltages, midway between known points, scattered, and beside a known point. */
-  private start(k: number): void {
+  /**
+   * Four kinds of start in turn: held at scattered voltages, midway between known points, scattered, and beside a known point. True
+   * where it leads to a new point.
+   */
+  private start(k: number): boolean {
     const { state } = this.system;
     const kind = k % 4;
     const [one, other] = [this.pick(), this.pick()];
@@ -115,54 +138,30 @@ class Search {
     if (kind === 0) {
       for (let j = 0; j < this.nets; j++) this.aided.origin[j] = this.scattered();
       this.spent.iterations += tied(this.bench, this.aided).iterations;
-      this.arrive();
-      return;
+      return this.keep();
     }
     state.x.fill(0);
     const share = 0.25 + 0.5 * this.next();
     for (let j = 0; j < this.bench.step.length; j++) {
-      if (kind === 1 && one !== undefined) state.x[j] = share * one.x[j]! + (1 - share) * other!.x[j]!;
-      else if (kind === 3 && one !== undefined)
-        state.x[j] = one.x[j]! + (j < this.nets ? 0.2 * (this.next() - 0.5) : 0);
-      else if (j < this.nets) state.x[j] = this.scattered();
+      const isNet = j < this.nets;
+      if (one === undefined || other === undefined || kind === 2) state.x[j] = isNet ? this.scattered() : 0;
+      else if (kind === 1) state.x[j] = share * one.x[j]! + (1 - share) * other.x[j]!;
+      else state.x[j] = one.x[j]! + (isNet ? BESIDE * (this.next() - 0.5) : 0);
     }
-    if (
-      deflated(
-        this.bench,
-        this.points.map(({ x }) => x),
-        this.spent,
-      )
-    )
-      this.arrive();
+    const known = this.points.map(({ x }) => x);
+    return deflated(this.bench, known, this.spent) && this.keep();
   }
 
-  private from(start: Float64Array): void {
-    this.system.state.x.set(start);
-    this.system.state.low.fill(0);
-    this.arrive();
-  }
-
-  /** Settles from the present unknowns and keeps where that ends, if it is a solution that is not known. */
-  private arrive(): void {
-    const { system, bench, points } = this;
-    const { state } = system;
-    system.settle();
-    const attempt = newton(bench, true, NEWTON_STEPS);
-    this.spent.iterations += attempt.iterations;
-    if (attempt.kind !== "converged") return;
-    const x = state.x.slice(0, -1);
-    this.certificate.reset();
-    const bound = this.certificate.prove();
-    const isKnown = points.some((known) => {
-      const apart = this.distance(known.x, x);
-      return Number.isNaN(bound + known.bound) ? apart < SAME : apart <= bound + known.bound + Number.EPSILON;
-    });
-    if (isKnown) return;
+  /** Keeps where the present unknowns settle, if that is a point that is not known. */
+  private keep(): boolean {
+    const found = this.arrive();
+    if (found === null || this.points.some((known) => this.isSame(known, found))) return false;
     for (let j = 0; j < this.nets; j++) {
-      this.low = Math.min(this.low, x[j]!);
-      this.high = Math.max(this.high, x[j]!);
+      this.low = Math.min(this.low, found.x[j]!);
+      this.high = Math.max(this.high, found.x[j]!);
     }
-    points.push({ x, bound, ...this.judge() });
+    this.points.push(found);
+    return true;
   }
 
   private judge(): Pick<OperatingPoint, "isStable" | "index"> {
@@ -174,12 +173,6 @@ class Search {
     aided.conductance = 0;
     if (here === null || held === null) return { isStable: false, index: 0 };
     return { isStable: here.isStable && here.sign === held.sign, index: here.sign === held.sign ? 1 : -1 };
-  }
-
-  private distance(a: Float64Array, b: Float64Array): number {
-    let most = 0;
-    for (let j = 0; j < this.nets; j++) most = Math.max(most, Math.abs(a[j]! - b[j]!));
-    return most;
   }
 
   private pick(): OperatingPoint | undefined {

@@ -1,0 +1,72 @@
+import { describe, expect, test } from "vitest";
+import { type Branch, branchesOf } from "@/lib/analyses/branches";
+import { compile } from "@/lib/analyses/compile";
+import { SEVERAL, textOf } from "../outside/several-solutions";
+
+const record = (id: string) => SEVERAL.find((one) => one.id === id)!;
+
+function jobOf(text: string) {
+  const { job, diagnostics } = compile(text);
+  if (job === null) throw new Error(diagnostics.map(({ message }) => message).join(" "));
+  return job;
+}
+
+/** `s` where a branch is stable, `u` where not, `.` where it does not reach. */
+const drawn = ({ points }: Branch) =>
+  points.map((point) => (point === null ? "." : point.isStable ? "s" : "u")).join("");
+
+describe.each([
+  ["MS4", (text: string) => text.replace("81 points", "41 points"), "VIN"],
+  ["MS2", (text: string) => text.replace("show", "sweep E from 0 V to 1.2 V, 41 points\nshow"), "E"],
+] as const)("the branches of %s", (id, change, knob) => {
+  const job = jobOf(`seek 4\n${change(textOf(record(id)))}`);
+  const { branches, folds, isComplete } = branchesOf(job);
+  const turns = record(id)
+    .turning_points!.map((turn) => Number(turn[knob]))
+    .toSorted((a, b) => a - b);
+  const [lower, upper] = turns as [number, number];
+
+  test("turn back where the record says", () => {
+    const found = folds.map(({ value }) => value).sort((a, b) => a - b);
+    expect(found).toHaveLength(2);
+    for (const [k, value] of found.entries()) expect(Math.abs(value - turns[k]!)).toBeLessThan(1e-12);
+  });
+
+  test("are three: up to the one fold, from the other on, and between them one that is not stable", () => {
+    const { values } = job.plan.axes[0]!;
+    const draw = (of: (value: number) => string) => values.map(of).join("");
+    expect(isComplete).toBe(true);
+    expect(branches.map(drawn).sort()).toEqual(
+      [
+        draw((value) => (value <= upper ? "s" : ".")),
+        draw((value) => (value >= lower ? "s" : ".")),
+        draw((value) => (value >= lower && value <= upper ? "u" : ".")),
+      ].sort(),
+    );
+  });
+
+  test("are proved at every point, and show their traces", () => {
+    for (const { points } of branches) {
+      for (const point of points) {
+        if (point === null) continue;
+        expect(point.bound).toBeLessThan(1e-10);
+        expect(point.traces).toEqual([point.x[job.circuit.nets.get(id === "MS4" ? "c1" : "v")!]]);
+      }
+    }
+  });
+});
+
+describe("branches without an axis", () => {
+  test("are the operating points themselves", () => {
+    const { branches, folds, isComplete } = branchesOf(jobOf(`seek 4\n${textOf(record("MS5"))}`));
+    expect(branches.map(drawn)).toEqual(["s", "u", "s"]);
+    expect(folds).toEqual([]);
+    expect(isComplete).toBe(true);
+  });
+
+  test("say where fewer are asked for than there are", () => {
+    const { branches, isComplete } = branchesOf(jobOf(`seek 1\n${textOf(record("MS3"))}`));
+    expect(branches).toHaveLength(1);
+    expect(isComplete).toBe(branches[0]!.points[0]!.index === 1);
+  });
+});
