@@ -142,7 +142,8 @@ class References {
         within === scope ? scope.find(word.text) : (within?.names.get(word.text) ?? null);
       if (symbol === null) return;
       this.note(symbol, word);
-      const block = symbol.meaning === "instance" ? symbol.scope.find(symbol.of ?? "") : null;
+      const block: NamedSymbol | null =
+        symbol.meaning === "instance" ? symbol.scope.find(symbol.of ?? "") : null;
       within = block === null ? null : insideOf(block);
       if (within === null) return;
     }

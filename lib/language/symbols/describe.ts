@@ -1,0 +1,90 @@
+import { KINDS } from "../kinds";
+import { isKind } from "../scope";
+import type { Statement } from "../syntax";
+import { insideOf, portsOf } from "./declare";
+import type { NamedSymbol } from "./symbol";
+
+/** Elements named for a net at most. */
+const MOST_NAMED = 8;
+
+/** What a symbol is, in a line or two, from the text alone. */
+export function describeSymbol(symbol: NamedSymbol, text: string): string[] {
+  const { name, meaning, of, scope } = symbol;
+  switch (meaning) {
+    case "knob":
+      return [
+        symbol.definition === null
+          ? "temperature: the ambient of the file, 25 °C"
+          : `knob ${name}${given(symbol, text)}`,
+      ];
+    case "let":
+      return [`let ${name}${given(symbol, text)}`];
+    case "model":
+      return [`model ${name}: ${kindLine(of)}`];
+    case "element": {
+      const model = scope.find(of ?? "");
+      const kind = model?.meaning === "model" ? `${of}, ${kindLine(model.of)}` : kindLine(of);
+      return [`element ${name}: ${kind}`];
+    }
+    case "block": {
+      const knobs = [...(insideOf(symbol)?.names.values() ?? [])].filter((one) => one.meaning === "knob");
+      const line = `block ${name}(${portsOf(symbol).join(", ")})`;
+      return knobs.length === 0 ? [line] : [line, `knobs: ${knobs.map((one) => one.name).join(", ")}`];
+    }
+    case "instance": {
+      const block = scope.find(of ?? "");
+      return [`${name}: an instance of ${of}(${block === null ? "" : portsOf(block).join(", ")})`];
+    }
+    case "port":
+      return [`net ${name} of the block, joined to a net outside`];
+    case "net":
+      return name === "ground" ? ["ground: the net that voltages are counted from"] : [netLine(symbol)];
+    case "trace":
+      return [`trace ${name}${shown(symbol, text)}`];
+    case "reading":
+      return [`reading ${name}${given(symbol, text)}`];
+  }
+}
+
+function kindLine(kind: string | null): string {
+  return kind !== null && isKind(kind) ? `${kind}, ${KINDS[kind].about}` : (kind ?? "");
+}
+
+/** ` = value ± tolerance` as it is written. */
+function given({ statement }: NamedSymbol, text: string): string {
+  if (statement?.kind !== "let" && statement?.kind !== "knob" && statement?.kind !== "read") return "";
+  const { value, to } = statement;
+  return ` = ${text.slice(value.from, statement.kind === "read" ? value.to : to).replace(/\s+/gu, " ")}`;
+}
+
+function shown({ statement, name }: NamedSymbol, text: string): string {
+  const item =
+    statement?.kind === "show" ? statement.items.find((one) => one.name?.text === name) : undefined;
+  return item === undefined ? "" : ` = ${text.slice(item.value.from, item.value.to).replace(/\s+/gu, " ")}`;
+}
+
+function netLine({ name, scope, places }: NamedSymbol): string {
+  const statements = [...scope.names.values()].flatMap(({ statement }) =>
+    statement === null ? [] : [statement],
+  );
+  const wired = new Set<string>();
+  for (const statement of [...new Set(statements)].sort((a, b) => a.from - b.from))
+    for (const one of wiredTo(statement, name)) wired.add(one);
+  const named = [...wired];
+  const list = named.slice(0, MOST_NAMED).join(", ") + (named.length > MOST_NAMED ? " and more" : "");
+  return named.length === 0 ? `net ${name}, named ${places.length} times` : `net ${name}, wired to ${list}`;
+}
+
+function wiredTo(statement: Statement, net: string): string[] {
+  if (statement.kind === "path") {
+    return statement.parts.flatMap(({ name }, k) =>
+      statement.nets[k]?.text === net || statement.nets[k + 1]?.text === net ? [name.text] : [],
+    );
+  }
+  if (statement.kind !== "device") return [];
+  return statement.settings.flatMap(({ name, value }) =>
+    value.kind === "name" && value.path.length === 1 && value.path[0]!.text === net
+      ? [`${statement.name.text}.${name.text}`]
+      : [],
+  );
+}
