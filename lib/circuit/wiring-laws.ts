@@ -18,28 +18,33 @@ export function isDriver({ kind }: Element): boolean {
   return kind === "opamp" || kind === "gain";
 }
 
-/** Holds a voltage whatever its current: a voltage element, or a law of volts that does not read its own current. */
+/** Holds a voltage whatever the currents: a voltage element, or a law of volts that reads no current. */
 export function holdsVoltage(element: Element): boolean {
   if (element.kind === "voltage") return true;
-  return element.law?.quantity === "volts" && !readsOwn(element, (signal) => signal !== "v");
+  return element.law?.quantity === "volts" && signalsOf(element.law.value).every(isVoltage);
+}
+
+function isVoltage(signal: Signal): boolean {
+  return signal.of === "net" || (signal.of === "element" && signal.quantity === "v");
+}
+
+/** Amplifiers with an output resistance, whose output another element may well drive. */
+export function softAmplifiers({ models, elements }: Design): ReadonlySet<Element> {
+  const soft = new Set(models.filter(({ params }) => params.has("R_out")).map(({ name }) => name));
+  return new Set(elements.filter(({ kind, model }) => kind === "opamp" && soft.has(model!)));
 }
 
 /** Drives a current whatever its voltage: a current element, or a law of amperes that does not read the voltage over itself. */
 export function drivesCurrent(element: Element): boolean {
   if (element.kind === "current") return true;
-  return element.law?.quantity === "amps" && !readsOwn(element, (signal) => signal !== "i");
+  return element.law?.quantity === "amps" && !readsOwnVoltage(element);
 }
 
-/** Whether a law reads its own voltage, directly or by its nets, current or power. */
-function readsOwn(element: Element, isMeant: (quantity: "v" | "i" | "p") => boolean): boolean {
+/** Whether a law reads the voltage over itself or at one of its ends. */
+function readsOwnVoltage(element: Element): boolean {
   const ends = Object.values(element.pins).filter((net) => net !== "ground");
-  const quantityOf = (signal: Signal): "v" | "i" | "p" | null => {
-    if (signal.of === "net") return ends.includes(signal.net) ? "v" : null;
-    if (signal.element !== element.name) return null;
-    return signal.of === "pin" ? "i" : signal.quantity;
-  };
   return signalsOf(element.law!.value).some((signal) => {
-    const quantity = quantityOf(signal);
-    return quantity !== null && isMeant(quantity);
+    if (signal.of === "net") return ends.includes(signal.net);
+    return isVoltage(signal) && signal.element === element.name;
   });
 }

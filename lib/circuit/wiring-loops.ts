@@ -4,7 +4,7 @@ import type { Report } from "@/lib/language/report";
 import { hasSignals } from "@/lib/language/signals-of";
 import { UnionFind } from "./union-find";
 import { GROUND, list, type Wiring } from "./wiring-graph";
-import { holdsVoltage, isDriver } from "./wiring-laws";
+import { holdsVoltage, isDriver, softAmplifiers } from "./wiring-laws";
 
 /** Loops for which the members are looked up; each costs a walk over the voltage elements. */
 const MOST_WALKS = 20;
@@ -18,7 +18,7 @@ interface Tie {
 
 /**
  * Two drivers on a net, and loops of elements that each fix a voltage: their voltages need not add up to zero, and a current
- * could run round the loop unseen. An amplifier's output fixes the voltage of its net to ground; the inputs of an ideal
+ * could run round the loop unseen. An output without resistance fixes the voltage of its net to ground; the inputs of an ideal
  * amplifier fix a difference of zero.
  */
 export function checkLoops(wiring: Wiring, ideal: ReadonlySet<Element>, report: Report): void {
@@ -52,8 +52,9 @@ function soleDrivers(wiring: Wiring, voltages: readonly Tie[], report: Report): 
     if (to === GROUND) drivers.set(from, element);
   }
   const outputs: Tie[] = [];
+  const soft = softAmplifiers(wiring.design);
   for (const element of wiring.design.elements) {
-    if (!isDriver(element)) continue;
+    if (!isDriver(element) || soft.has(element)) continue;
     const out = wiring.net(element, "out");
     const rival = drivers.get(out);
     if (out === GROUND) {

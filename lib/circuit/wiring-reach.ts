@@ -3,7 +3,7 @@ import { nearest } from "@/lib/language/nearest";
 import type { Report } from "@/lib/language/report";
 import { UnionFind } from "./union-find";
 import { GROUND, list, type Wiring } from "./wiring-graph";
-import { drivesCurrent, isDriver } from "./wiring-laws";
+import { drivesCurrent, elementsOf, holdsVoltage, isDriver, netsSensed } from "./wiring-laws";
 
 /** Parameters that give a transistor base current. */
 const BASE_CURRENTS = ["beta_f", "beta_r", "I_leak_e", "I_leak_c"];
@@ -50,7 +50,26 @@ function conducting(wiring: Wiring): UnionFind {
     const nets = pins.map((pin) => wiring.net(element, pin));
     for (const net of nets) sets.union(net, nets[0]!);
   }
+  joinBySensing(wiring, sets);
   return sets;
+}
+
+/**
+ * A law that drives a current by a voltage which nothing else ties to ground may settle that voltage: two of them across each other
+ * do. Whether it does is the solver's to say.
+ */
+function joinBySensing({ design, nets, net }: Wiring, sets: UnionFind): void {
+  const numbers = new Map(nets.map((name, i) => [name, i]));
+  const named = elementsOf(design);
+  const joins = design.elements
+    .filter((element) => element.law !== null && drivesCurrent(element))
+    .map((law) => ({ law, sensed: netsSensed(law, named).map((name) => numbers.get(name)!) }))
+    .filter(({ sensed }) => sensed.some((one) => sets.find(one) !== sets.find(GROUND)));
+  for (const { law, sensed } of joins) {
+    for (const one of [...Object.keys(law.pins).map((pin) => net(law, pin)), ...sensed]) {
+      sets.union(sensed[0]!, one);
+    }
+  }
 }
 
 /** Nets with one connection. Shown by a trace and settled they may be meant, as the output of a stage; else they are a slip. */
@@ -67,6 +86,7 @@ function checkEnds(wiring: Wiring, isSettled: (net: number) => boolean, report: 
     const { element, pin } = connections[0]!;
     const message = `The net ${list([name])} has one connection, ${list([`${element.name}.${pin}`])}`;
     if (isSettled(net) && wiring.shown.has(net)) {
+      if (element.kind === "gain" || holdsVoltage(element)) return;
       report.warning("WIR1", place, `${message}; nothing loads it.`);
       return;
     }

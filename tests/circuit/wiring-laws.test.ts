@@ -34,6 +34,20 @@ describe("laws and gains in the wiring", () => {
     const across = (volts: string) => `ground -- L1 : law { volts = ${volts} } -- in`;
     expect(problemsOf(across("1 V"))[0]).toMatch(/^WIR3 L1 : law/);
     expect(problemsOf(across("1 kΩ * L1.i"))).toEqual([]);
+    expect(problemsOf(across("1 kΩ * V1.i"))).toEqual([]);
+  });
+
+  test("two laws that each drive a current by the other's voltage settle both", () => {
+    const across =
+      "a -- L1 : law { amps = 1 mS * b.v } -- ground\nb -- L2 : law { amps = -1 mS * a.v } -- ground";
+    expect(problemsOf(`${across}\nground -- I2 : current 1 mA -- a\nshow a.v`)).toEqual([]);
+  });
+
+  test("behind an output resistance two amplifiers may drive a net", () => {
+    const two = (model: string) =>
+      `model real : opamp { ${model} }\nA1 : real { plus = in, minus = o, out = o }\nA2 : real { plus = in, minus = o, out = o }`;
+    expect(problemsOf(two("gain = 1e5"))[0]).toMatch(/^WIR8 A2/);
+    expect(problemsOf(two("gain = 1e5, R_out = 50 Ω"))).toEqual([]);
   });
 
   test("the output of a gain drives its net, alone", () => {
