@@ -87,6 +87,8 @@ export const CATALOGUE = {
   CAP3: "Too many elements",
   CAP4: "Too many points",
   CAP5: "Too many values to keep",
+  CAP7: "Too many readings and requirements",
+  CAP8: "Too much to judge",
   CAP6: "More problems than are listed",
 } as const;
 

@@ -8,7 +8,15 @@ import { ElementCheck, modelKinds } from "./elements";
 import { Expander, type Expansion, type Flat } from "./expand";
 import { FUNCTION_NAMES } from "./functions";
 import { tokenize } from "./lexer";
-import { count, LEAST_SHELF_TEXT, MOST_ELEMENTS, MOST_SHELF_TEXT, MOST_TEXT, MOST_VALUES } from "./limits";
+import {
+  count,
+  LEAST_SHELF_TEXT,
+  MOST_ELEMENTS,
+  MOST_POINTS,
+  MOST_SHELF_TEXT,
+  MOST_TEXT,
+  MOST_VALUES,
+} from "./limits";
 import { declareAll, Names } from "./names";
 import { Nominal } from "./nominal";
 import { parseTokens } from "./parser";
@@ -122,7 +130,9 @@ function checkExpansion(
   const title = titleOf(statements, report);
   const netPlaces = placesOf(names, own);
   const nets = [...netPlaces.keys()];
-  checkSize(isWhole ? elements : [], nets, sweeps, shows, report);
+  const random = draws?.count ?? 0;
+  checkSize(isWhole ? elements : [], nets, { sweeps, random }, shows, report);
+  checkDraws(statements, sweeps, random, report);
   if (shows.length === 0 && !report.hasErrors) {
     const span = { from: source.length, to: source.length };
     report.warning(
@@ -169,7 +179,7 @@ function placesOf(names: Names, own: (named: { readonly name: string }) => boole
 function checkSize(
   elements: readonly Element[],
   nets: readonly string[],
-  sweeps: readonly Sweep[],
+  { sweeps, random }: { readonly sweeps: readonly Sweep[]; readonly random: number },
   shows: readonly Show[],
   report: Report,
 ): void {
@@ -178,13 +188,27 @@ function checkSize(
     const message = `The netlist has ${count(elements.length)} elements, and a circuit can have ${count(MOST_ELEMENTS)} at most.`;
     report.error("CAP3", first, message);
   }
-  const points = sweeps.reduce((product, sweep) => product * sweep.values.length, 1);
+  const points = sweeps.reduce((product, sweep) => product * sweep.values.length, random + 1);
   const branches = elements.filter(
     ({ kind, law }) => kind === "voltage" || kind === "opamp" || kind === "gain" || law?.quantity === "volts",
   ).length;
   const values = points * (shows.length + nets.length + branches);
   if (values > MOST_VALUES) {
     const message = `The plan would keep ${count(values)} values (points times traces and unknowns), and ${count(MOST_VALUES)} is the most; sweep fewer points.`;
-    report.error("CAP5", sweeps[sweeps.length - 1]!, message);
+    report.error("CAP5", sweeps[sweeps.length - 1] ?? shows[0] ?? elements[0]!, message);
   }
+}
+
+/** The nominal points are bounded with the sweeps; here those of all draws. */
+function checkDraws(
+  statements: readonly Flat[],
+  sweeps: readonly Sweep[],
+  random: number,
+  report: Report,
+): void {
+  const points = sweeps.reduce((product, sweep) => product * sweep.values.length, 1);
+  const statement = statements.find(({ kind }) => kind === "draws");
+  if (statement === undefined || points * (random + 1) <= MOST_POINTS) return;
+  const message = `With ${count(random)} draws and the nominal one the plan has ${count(points * (random + 1))} points, and a plan can have ${count(MOST_POINTS)} at most; draw fewer.`;
+  report.error("CAP4", statement, message);
 }

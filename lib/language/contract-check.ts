@@ -12,6 +12,7 @@ import { RelationCheck } from "./relation-check";
 import type { Report } from "./report";
 import type { Expression, Statement } from "./syntax";
 import { quote } from "./token";
+import { narrowed } from "./window";
 import type { WindowCheck } from "./window-check";
 
 type ReadStatement = Extract<Statement, { kind: "read" }>;
@@ -64,10 +65,10 @@ export class ContractCheck {
     const own = windows.windows(syntaxes);
     const isOwner = names.meaningOf(name.text) === "reading" && names.placeOf(name.text).from === name.from;
     if (typed === null || own === null || !isOwner || !terms.isFree(name)) return null;
-    const all = [...own, ...this.inherited([typed])];
+    const all = narrowed([...own, ...this.inherited([typed])]);
     if (!this.isMeasured(value, [typed]) || !this.hasPoints(value, [typed], all)) return null;
     const rank = this.rankOf([typed], all);
-    if (rank === "point" && ![...within(typed)].some((part) => givesTrace(part))) {
+    if (rank === "point" && !within(typed).some((part) => givesTrace(part))) {
       const text = this.bench.agreement.text(value);
       const message = `${text} is a trace and has no single value; reduce it, as in \`highest(…)\`, or keep it with ${quote("show")}.`;
       this.bench.report.error("CON6", value, message);
@@ -89,7 +90,7 @@ export class ContractCheck {
     const share = this.relations.share(statement.share);
     if (typed === null || relation === null || own === null || share === false) return null;
     const all = [typed, ...relation.values];
-    const whole = [...own, ...this.inherited(all)];
+    const whole = narrowed([...own, ...this.inherited(all)]);
     if (!this.isMeasured(value, all) || !this.isOpen(statement, all) || !this.hasPoints(value, all, whole))
       return null;
     if (!this.relations.canRise(statement, this.rankOf([typed], []), windows.placesOfFirst(whole)))
@@ -124,8 +125,7 @@ export class ContractCheck {
 
   /** Something that the circuit decides must be among what is read or required. */
   private isMeasured(value: Expression, all: readonly Typed[]): boolean {
-    if (all.some((typed) => [...within(typed)].some(({ op }) => op === "trace" || op === "reading")))
-      return true;
+    if (all.some((typed) => within(typed).some(({ op }) => op === "trace" || op === "reading"))) return true;
     const message = `${this.bench.agreement.text(value)} says nothing of the circuit; use a trace, a signal or a reading.`;
     this.bench.report.error("CON7", value, message);
     return false;
@@ -135,9 +135,7 @@ export class ContractCheck {
   private isOpen({ windows }: RequireStatement, all: readonly Typed[]): boolean {
     const first = this.bench.windows.first?.knob;
     const closed = windows.find(({ knob }) => knob.text === first);
-    const goes = all.some(
-      (typed) => this.bench.ranks.of(typed) === "point" || [...within(typed)].some(goesAlong),
-    );
+    const goes = all.some((typed) => this.bench.ranks.of(typed) === "point" || within(typed).some(goesAlong));
     if (closed === undefined || goes) return true;
     const message = `What is required here is one number a sweep of ${quote(closed.knob.text)}; give this window to its ${quote("read")}.`;
     this.bench.report.error("CON13", closed, message);
@@ -153,7 +151,7 @@ export class ContractCheck {
       return false;
     }
     const line = all
-      .flatMap((typed) => [...within(typed)])
+      .flatMap((typed) => within(typed))
       .find((part) => part.op === "reduce" && REDUCTIONS[part.reduction].line);
     if (line?.op !== "reduce" || this.bench.windows.placesOfFirst(windows) > 1) return true;
     const message = `${quote(line.reduction)} goes along two points at least, and this window holds one; widen it.`;

@@ -21,6 +21,8 @@ export type Traces = Map<string, Show>;
 export class ContractTerms implements ContractPlace {
   /** Dimensions of the readings so far, null where one was not understood. */
   readonly readings = new Map<string, Dimension | null>();
+  /** The traces that show a signal and nothing else, by the signal. */
+  private readonly shown = new Map<string, string>();
   private readonly place: Place = { signals: true, wanted: null, contract: this };
 
   constructor(
@@ -31,7 +33,11 @@ export class ContractTerms implements ContractPlace {
     private readonly ranks: Ranks,
     private readonly windows: WindowCheck,
     private readonly report: Report,
-  ) {}
+  ) {
+    for (const { name, value } of traces.values()) {
+      if (value.op === "signal") this.shown.set(signalName(value.signal), name);
+    }
+  }
 
   judge(expression: Expression, wanted: string | null = null): Typed | null {
     return this.judged(expression, wanted)?.typed ?? null;
@@ -89,13 +95,10 @@ export class ContractTerms implements ContractPlace {
   /** The trace that a signal is kept as: the one that shows it, or one of its own by its spelling. */
   kept(signal: Typed, { from, to }: Span): Typed {
     if (signal.op !== "signal") return signal;
-    const key = JSON.stringify(signal.signal);
     const name = signalName(signal.signal);
-    const shown = [...this.traces.values()].find(
-      ({ value }) => value.op === "signal" && JSON.stringify(value.signal) === key,
-    );
-    if (shown === undefined) this.traces.set(name, { name, value: signal, from, to });
-    return { op: "trace", name: shown?.name ?? name, dimension: signal.dimension };
+    const shown = this.shown.get(name) ?? name;
+    if (!this.traces.has(shown)) this.traces.set(shown, { name: shown, value: signal, from, to });
+    return { op: "trace", name: shown, dimension: signal.dimension };
   }
 
   reduce(call: Call, reduction: ReductionName): Judged | null {

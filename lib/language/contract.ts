@@ -1,12 +1,13 @@
 import type { Agreement } from "./agreement";
-import type { Design, Knob, NamedValue, Show, Sweep } from "./ast";
+import type { Design, Knob, NamedValue, Reading, Requirement, Show, Sweep } from "./ast";
 import { ContractCheck } from "./contract-check";
 import { ContractTerms } from "./contract-terms";
 import type { Flat } from "./expand";
+import { count, MOST_CONTRACT, MOST_VALUES } from "./limits";
 import type { Names } from "./names";
 import type { Nominal } from "./nominal";
 import type { Quantities } from "./quantities";
-import { Ranks } from "./rank";
+import { Ranks, within } from "./rank";
 import type { Report } from "./report";
 import type { Known, Typing } from "./typing";
 import { WindowCheck } from "./window-check";
@@ -59,7 +60,33 @@ export function checkContract(
     report,
   };
   const contract = new ContractCheck(bench);
+  const beyond = statements.filter(({ kind }) => kind === "read" || kind === "require")[MOST_CONTRACT];
+  if (beyond !== undefined) {
+    const message = `A netlist can have ${count(MOST_CONTRACT)} readings and requirements at most; split it.`;
+    report.error("CAP7", beyond, message);
+    return { shows, reads: [], requirements: [] };
+  }
   const reads = contract.reads(statements);
   const requirements = contract.requirements(statements);
+  checkWork(reads, requirements, sweeps, draws, report);
   return { shows: [...traces.values()], reads, requirements };
+}
+
+/** What is worked out for every point, so that a run is judged within seconds. */
+function checkWork(
+  reads: readonly Reading[],
+  requirements: readonly Requirement[],
+  sweeps: readonly Sweep[],
+  draws: Design["draws"],
+  report: Report,
+): void {
+  const points = sweeps.reduce((product, { values }) => product * values.length, (draws?.count ?? 0) + 1);
+  let nodes = 0;
+  for (const { value, from, to } of [...reads, ...requirements]) {
+    nodes += within(value).length;
+    if (points * nodes <= MOST_VALUES) continue;
+    const message = `To judge the contract up to here ${count(points * nodes)} values would be worked out (points times what stands in it), and ${count(MOST_VALUES)} is the most; sweep fewer points.`;
+    report.error("CAP8", { from, to }, message);
+    return;
+  }
 }

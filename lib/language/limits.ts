@@ -16,7 +16,9 @@ export const MOST_ELEMENTS = 2_000;
 export const MOST_POINTS = 1_000_000;
 /** Operating points looked for at each setting. */
 export const MOST_BRANCHES = 32;
-/** Points × (traces + unknowns). */
+/** Readings and requirements. */
+export const MOST_CONTRACT = 1_000;
+/** Points × (traces + unknowns), and points × (names, numbers and operators of readings and requirements). */
 export const MOST_VALUES = 50_000_000;
 
 /** A count with narrow no-break spaces between groups of three, for messages. */

@@ -61,27 +61,13 @@ export class Ranks {
 }
 
 /** Every expression within, itself first. */
-export function* within(typed: Typed): Iterable<Typed> {
-  yield typed;
-  switch (typed.op) {
-    case "negate":
-      yield* within(typed.operand);
-      break;
-    case "call":
-    case "reduce":
-      for (const arg of typed.args) yield* within(arg);
-      break;
-    case "+":
-    case "-":
-    case "*":
-    case "/":
-    case "^":
-    case "<=":
-    case ">=":
-    case "<":
-    case ">":
-      yield* within(typed.left);
-      yield* within(typed.right);
-      break;
+export function within(typed: Typed): Typed[] {
+  const found = [typed];
+  for (let i = 0; i < found.length; i++) {
+    const part = found[i]!;
+    if (part.op === "negate") found.push(part.operand);
+    else if (part.op === "call" || part.op === "reduce") found.push(...part.args);
+    else if ("left" in part) found.push(part.left, part.right);
   }
+  return found;
 }

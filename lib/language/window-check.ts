@@ -10,7 +10,7 @@ import type { Span } from "./span";
 import type { Binding, Expression, WindowSyntax, Word } from "./syntax";
 import { quote } from "./token";
 import type { Known } from "./typing";
-import { isInWindow, nearestValue, placesWithin } from "./window";
+import { Grid, isInWindow, narrowed } from "./window";
 
 /** The plan as far as it is understood; `isPlanKnown` is false where a sweep was not, and nothing is then said of its points. */
 export interface WindowPlan {
@@ -23,6 +23,7 @@ export interface WindowPlan {
 /** Checks windows and the places of `at(…)` against the plan. */
 export class WindowCheck {
   private readonly defaults: ReadonlyMap<string, number>;
+  private readonly grids: ReadonlyMap<string, Grid>;
 
   constructor(
     private readonly plan: WindowPlan,
@@ -34,6 +35,7 @@ export class WindowCheck {
     this.defaults = new Map(
       plan.knobs.flatMap(({ name, value }) => (value.op === "constant" ? [[name, value.value]] : [])),
     );
+    this.grids = new Map(plan.sweeps.map((sweep) => [sweep.knob, new Grid(sweep)]));
   }
 
   /** The sweep that readings go along; null where there is none. */
@@ -45,13 +47,13 @@ export class WindowCheck {
     return this.plan.isPlanKnown;
   }
 
-  /** The windows, null where one was reported: together those of a knob hold a point of the plan. */
+  /** The windows, one a knob, null where one was reported: together those of a knob hold a point of the plan. */
   windows(syntaxes: readonly WindowSyntax[]): Window[] | null {
-    const windows: Window[] = [];
+    let windows: Window[] = [];
     for (const syntax of syntaxes) {
       const window = this.window(syntax);
       if (window === null) return null;
-      windows.push(window);
+      windows = narrowed([...windows, window]);
       if (this.emptySweep(windows) === null) continue;
       const message = `No point of the sweep of ${quote(window.knob)} lies in all of these windows; widen one of them.`;
       this.report.error("CON1", syntax, message);
@@ -69,13 +71,17 @@ export class WindowCheck {
   /** How many places of the first sweep lie in the windows; 1 without a sweep. */
   placesOfFirst(windows: readonly Window[]): number {
     if (!this.isPlanKnown) return Number.POSITIVE_INFINITY;
-    return this.first === null ? 1 : placesWithin(this.first, windows).length;
+    if (this.first === null) return 1;
+    const { knob, values } = this.first;
+    const window = windows.find((one) => one.knob === knob);
+    return window === undefined ? values.length : this.grids.get(knob)!.count(window);
   }
 
   /** The knob of a sweep of which no point lies in the windows, null where each has one. */
   emptySweep(windows: readonly Window[]): string | null {
     if (!this.isPlanKnown) return null;
-    return this.plan.sweeps.find((sweep) => placesWithin(sweep, windows).length === 0)?.knob ?? null;
+    const isEmpty = (window: Window) => this.grids.get(window.knob)?.count(window) === 0;
+    return windows.find(isEmpty)?.knob ?? null;
   }
 
   private window({ knob, low, high, from, to }: WindowSyntax): Window | null {
@@ -116,14 +122,13 @@ export class WindowCheck {
 
   private holdsPoint(window: Window, low: Expression, high: Expression | null, { unit }: Want): boolean {
     if (!this.isPlanKnown) return true;
-    const sweep = this.plan.sweeps.find(({ knob }) => knob === window.knob);
-    const values = sweep?.values ?? [this.defaults.get(window.knob) ?? window.low];
-    if (values.some((value) => isInWindow(window, value))) return true;
+    const grid = this.grids.get(window.knob);
+    const fixed = this.defaults.get(window.knob) ?? window.low;
+    if (grid === undefined ? isInWindow(window, fixed) : grid.count(window) > 0) return true;
     const place: Span = high === null ? low : { from: low.from, to: high.to };
-    const only = sweep === undefined ? values[0]! : nearestValue(sweep, window.low);
-    const text = spellQuantity(only, unit);
+    const text = spellQuantity(grid === undefined ? fixed : grid.nearest(window.low), unit);
     const start =
-      sweep === undefined
+      grid === undefined
         ? `${quote(window.knob)} is ${text} at every point, since it is not swept`
         : `The sweep of ${quote(window.knob)} has no point ${high === null ? "there" : "in this window"}; the nearest is ${text}`;
     const fix = high === null ? { title: `Change to ${text}`, from: low.from, to: low.to, text } : undefined;

@@ -143,6 +143,19 @@ export const CONTRACT_PROBLEMS: readonly Problem[] = [
   { code: "CON12", text: within("read a = highest(out) + «b»\nread b = lowest(out)") },
   { code: "CON12", text: within("read a = highest(out) + «a»") },
   { code: "CON13", text: within("read a = highest(out)\nrequire a <= 1 V «at k = 1 V»") },
+  { code: "CAP4", text: within("«draws 200000 seed 1»\nrequire out <= 1 V"), says: "draw fewer" },
+  {
+    code: "CAP7",
+    text: within(
+      `${Array.from({ length: 1000 }, (_, i) => `require out <= ${i + 1} V`).join("\n")}\n«read a = highest(out)»`,
+    ),
+  },
+  {
+    code: "CAP8",
+    text: still(
+      `knob m = 1 V\nsweep m from 0 V to 1 V, 900000 points\nrequire out <= 1 V\n«require ${"out + ".repeat(30)}out <= 1 V»`,
+    ),
+  },
   { code: "CON14", text: within("require out <= 1 V\n«require out<=1 V»") },
   { code: "CON14", text: within('require out <= 1 V as "a"\nrequire out <= 2 V as «"a"»') },
 ];
