@@ -64,6 +64,17 @@ const LONG: readonly (readonly [what: string, line: (i: number) => string])[] = 
     "sweeps that leave the ranges of their knobs",
     (i) => `knob k${i} = 1 V in 0 V .. 2 V\nsweep k${i} from 1 V to 3 V, 999999 points\n`,
   ],
+  [
+    "windows beside a point of long sweeps",
+    (i) =>
+      i === 0
+        ? "knob k = 1 V\nsweep k from 0 V to 1 V, 999999 points\na -- R1 : resistor k / 1 mA -- ground\n"
+        : `read r${i} = highest(a.v) for k in 1.${i} V .. 2 V ${i > 990 ? "for k in 0 V .. 1 V ".repeat(300) : ""}\n`,
+  ],
+  [
+    "readings that each use all before",
+    (i) => `read r${i} = highest(a${i}.v) + r${i - 1} + r${i >> 1} at temperature = ${i} K\n`,
+  ],
   ["values that each use the one after", (i) => `let a${i} = a${i + 1} + 1\n`],
   [
     "loops of voltage elements",
