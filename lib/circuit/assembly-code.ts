@@ -1,4 +1,4 @@
-import { exp, expm1 } from "@/lib/devices/exponential";
+import { expm1, exponentials } from "@/lib/devices/exponential";
 import { compiled } from "./compiled";
 import type { State } from "./state";
 
@@ -9,8 +9,11 @@ type Maker = (
   state: State,
   constantSlopes: Float64Array,
   objects: readonly object[],
-  exp_: typeof exp,
-  expm1_: typeof expm1,
+  exponents: Float64Array,
+  less: Float64Array,
+  whole: Float64Array,
+  together: typeof exponentials,
+  one: typeof expm1,
 ) => () => void;
 
 /**
@@ -24,6 +27,8 @@ export class AssemblyCode {
   private readonly rows = new Set<number>();
   private readonly voltages = new Set<number>();
   private readonly places = new Set<number>();
+  private readonly early: string[] = [];
+  private exponents = 0;
   private locals = 0;
 
   /** `ground` is the number of ground, one past the last unknown. */
@@ -35,7 +40,7 @@ export class AssemblyCode {
   }
 
   add(statement: string): void {
-    if (this.lines.length <= MOST_STATEMENTS) this.lines.push(statement);
+    if (!this.isFull) this.lines.push(statement);
   }
 
   /** A variable with the value of an expression. */
@@ -43,6 +48,27 @@ export class AssemblyCode {
     const name = `t${this.locals++}`;
     this.add(`let ${name}=${expression};`);
     return name;
+  }
+
+  /** A variable as of `let`, known before all exponentials are worked out. */
+  first(expression: string): string {
+    const name = `t${this.locals++}`;
+    if (!this.isFull) this.early.push(`const ${name}=${expression};`);
+    return name;
+  }
+
+  /**
+   * Variables with e^y − 1 and e^y, in the same bytes as `expm1` and, below −1, `exp`; above −1 the second is the first plus 1. All
+   * exponentials of a system are worked out together, so that y may hold nothing but what `first` gives.
+   */
+  exponentials(y: string): { less: string; whole: string } {
+    const k = this.exponents++;
+    if (!this.isFull) this.early.push(`Y[${k}]=${y};`);
+    return { less: this.let(`E[${k}]`), whole: this.let(`T[${k}]`) };
+  }
+
+  private get isFull(): boolean {
+    return this.lines.length > MOST_STATEMENTS;
   }
 
   /** As `across` of a state. */
@@ -112,14 +138,18 @@ export class AssemblyCode {
     const text = [
       "const {x,low:l,residual:r,scale:s,jacobian:j}=state;",
       ...this.objects.map((_, k) => `const o${k}=objects[${k}];`),
-      "return ()=>{",
+      "return function assemble(){",
       "const share=state.share;",
+      ...this.early,
+      this.exponents === 0 ? "" : `exponentials(Y,E,T,${this.exponents});`,
       ...heads,
       ...this.lines,
       ...tails,
       "};",
     ].join("\n");
-    const maker = compiled<Maker>("state,c,objects,exp,expm1", text);
-    return maker === null ? null : maker(state, constantSlopes, this.objects, exp, expm1);
+    const maker = compiled<Maker>("state,c,objects,Y,E,T,exponentials,expm1", text);
+    if (maker === null) return null;
+    const array = () => new Float64Array(this.exponents);
+    return maker(state, constantSlopes, this.objects, array(), array(), array(), exponentials, expm1);
   }
 }

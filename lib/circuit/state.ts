@@ -44,15 +44,16 @@ export function flow(state: State, a: number, b: number, amperes: number): void 
 }
 
 /** Adds `step` to the unknowns; the rounding error of each sum stays in `low` (Knuth's two-sum). */
-export function advance(state: State, step: Float64Array): void {
-  const { x, low } = state;
-  for (let j = x.length - 2; j >= 0; j--) {
+export function advance({ x, low }: State, step: Float64Array): void {
+  const size = x.length - 1;
+  for (let j = 0; j < size; j++) {
     const a = x[j]!;
     const d = step[j]!;
     const sum = a + d;
     const part = sum - a;
     const rest = low[j]! + (a - (sum - part) + (d - part));
-    x[j] = sum + rest;
-    low[j] = rest - (x[j]! - sum);
+    const high = sum + rest;
+    x[j] = high;
+    low[j] = rest - (high - sum);
   }
 }

@@ -98,19 +98,20 @@ export function bipolarAt(terms: BipolarTerms, kelvin: number): BipolarAt {
  */
 export function bipolarLaw(at: BipolarAt, vbe: number, vbc: number, vce: number, out: BipolarCurrents): void {
   const { Is, eta, forwardBase, reverseBase, forwardEarly, reverseEarly } = at;
+  const perVolt = 1 / eta;
   const yf = vbe / eta;
   const yr = vbc / eta;
   const ef = expm1(yf);
   const er = yr < -40 ? -1 : expm1(yr);
   const tf = yf < -1 ? exp(yf) : ef + 1;
   const tr = yr < -1 ? exp(yr) : er + 1;
-  const transport = Is * difference(tf, tr, vce / eta);
+  const transport = Is * (Math.abs(vce) > eta ? tf - tr : difference(tf, tr, vce / eta));
   const early = 1 - vbc * forwardEarly - vbe * reverseEarly;
-  const slopeF = (Is * tf) / eta;
-  const slopeR = (Is * tr) / eta;
+  const slopeF = Is * tf * perVolt;
+  const slopeR = Is * tr * perVolt;
   out.ib = forwardBase * ef + reverseBase * er;
-  out.ibF = (forwardBase * tf) / eta;
-  out.ibR = (reverseBase * tr) / eta;
+  out.ibF = forwardBase * tf * perVolt;
+  out.ibR = reverseBase * tr * perVolt;
   let intoC = reverseBase * er;
   if (at.leakE !== 0) {
     out.ib += at.leakE * expm1(vbe / at.etaE);
@@ -137,8 +138,7 @@ export function bipolarLaw(at: BipolarAt, vbe: number, vbc: number, vce: number,
     -slopeR * factor + transport * (byCharge * at.reverseKnee * slopeR - byEarly * forwardEarly) - out.ibR;
 }
 
-/** tf − tr where tf/tr = e^y, from y where the two are close. */
+/** tf − tr where tf/tr = e^y and the two are close, from y. */
 function difference(tf: number, tr: number, y: number): number {
-  if (Math.abs(y) > 1) return tf - tr;
   return y > 0 ? -tf * expm1(-y) : tr * expm1(y);
 }

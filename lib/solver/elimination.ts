@@ -16,7 +16,7 @@ export interface SparseShape {
  * row; then, for each row below, the place of its multiplier and the places it changes. `rowOf` and `columnOf` give the row and
  * column of each step's pivot; `rowPlaces`, `rowColumns` with `rowStarts` give the pivot rows, `belowPlaces`, `belowRows`
  * with `belowStarts` the multipliers, for the two substitutions. `anchors`: of each row, the place of its largest entry on the
- * sample. `operations` counts the multiplications of a factorisation and a solution.
+ * sample. `changed`: the rows from which anything is subtracted. `operations` counts the multiplications of a factorisation and a solution.
  */
 export interface Elimination {
   readonly places: number;
@@ -31,6 +31,7 @@ export interface Elimination {
   readonly belowPlaces: Int32Array;
   readonly belowRows: Int32Array;
   readonly anchors: Int32Array;
+  readonly changed: Int32Array;
   readonly operations: number;
 }
 
@@ -81,8 +82,17 @@ export function eliminate(shape: SparseShape, sample: Float64Array): Elimination
     belowPlaces: Int32Array.from(steps.flatMap(({ below }) => below.map(([, entry]) => entry.place))),
     belowRows: Int32Array.from(steps.flatMap(({ below }) => below.map(([row]) => row))),
     anchors: anchorsOf(shape, sample),
+    changed: changedBy(steps),
     operations,
   };
+}
+
+function changedBy(steps: readonly Step[]): Int32Array {
+  const changed = new Set<number>();
+  for (const { right, below } of steps) {
+    if (right.length > 0) for (const [row] of below) changed.add(row);
+  }
+  return Int32Array.from(changed).sort();
 }
 
 function anchorsOf({ size, rows }: SparseShape, sample: Float64Array): Int32Array {

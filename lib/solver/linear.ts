@@ -1,11 +1,12 @@
 import { backwardError } from "./backward-error";
 import { DenseFactors } from "./dense";
 import { type Elimination, eliminate, type SparseShape } from "./elimination";
-import { GOOD_BACKWARD_ERROR, type Kernel } from "./kernel/kernel";
+import type { Kernel } from "./kernel/kernel";
 import { ListedKernel } from "./kernel/listed";
 import { WrittenKernel } from "./kernel/written";
 
-/** A step that keeps a larger backward error with new pivots too is not to be had. */
+/** A step whose backward error is larger asks for new pivots; one that keeps a large one with new pivots too is not to be had. */
+const GOOD_BACKWARD_ERROR = 1e-9;
 const WORST_BACKWARD_ERROR = 1e-3;
 
 /** Solutions with the sample's pivots before code is generated for them: one operating point does not repay it. */

@@ -113,13 +113,12 @@ export class DiodePart implements JunctionPart, Proof {
     const { params } = this.model;
     if (["Rs", "V_breakdown", "photocurrent"].some((name) => params.has(name))) return false;
     const self = code.object(this);
-    const v = code.let(`${self}.v`);
-    const at = code.let(`${self}.at`);
+    const v = code.first(`${self}.v`);
+    const at = code.first(`${self}.at`);
     const law = code.let(`${self}.law`);
-    const y = code.let(`${v}/${at}.eta`);
-    const e = code.let(`expm1(${y})`);
-    const i = code.let(`${at}.Is*${e}`);
-    const g = code.let(`${at}.Is/${at}.eta*(${y}<-1?exp(${y}):${e}+1)`);
+    const { less, whole } = code.exponentials(`${v}/${at}.eta`);
+    const i = code.let(`${at}.Is*${less}`);
+    const g = code.let(`${at}.Is/${at}.eta*${whole}`);
     code.add(`${law}.i=${i};${law}.g=${g};`);
     code.flow(anode, cathode, code.let(`${i}+${g}*(${code.across(anode, cathode)}-${v})`));
     code.slope(places[0], "+=", g);

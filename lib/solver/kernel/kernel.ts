@@ -1,5 +1,8 @@
-/** Part of a row's own size that may be left over by a solution before its pivots are doubted. */
-export const GOOD_BACKWARD_ERROR = 1e-9;
+/**
+ * How often the largest entry of a row on the sample may be contained in what is subtracted from the row. The backward error of a
+ * solution is at most a few roundings of that (Reid, J. Inst. Math. Appl. 8, 1971): below 1e-10.
+ */
+export const MOST_GROWTH = 1e5;
 
 /**
  * The numbers of one elimination: a kernel knows its multiplications and keeps nothing between calls but arrays to work in.
@@ -10,8 +13,9 @@ export const GOOD_BACKWARD_ERROR = 1e-9;
  */
 export interface Kernel {
   /**
-   * Factorises and solves J·d = −b. The static pivots are watched by what growth of the factors would spoil: true where in
-   * every row |J·d + b| ≤ 1e-9·(|its largest entry on the sample|·max|d| + |b|), which is enough for a small backward error.
+   * Factorises and solves J·d = −b. The growth that static pivots may let loose is watched: true where for every row all that was
+   * subtracted from it is at most MOST_GROWTH times its entry that was the largest on the sample, and where pivots and solution
+   * are finite. False says only that the solution wants a test of its own.
    */
   solve(a: Float64Array, b: Float64Array, d: Float64Array, f: Float64Array): boolean;
   /** Solves J·d = −b with the factors at hand. */

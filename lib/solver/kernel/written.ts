@@ -1,6 +1,6 @@
 import { type Compiled, compiled } from "@/lib/circuit/compiled";
 import type { Elimination, SparseShape } from "../elimination";
-import { GOOD_BACKWARD_ERROR, type Kernel } from "./kernel";
+import { type Kernel, MOST_GROWTH } from "./kernel";
 
 /** Multiplications of generated code at most: the compiler behind it gives up on functions of some 2,500. */
 const MOST_OPERATIONS = 1500;
@@ -40,7 +40,7 @@ export class WrittenKernel implements Kernel {
   }
 }
 
-/** Variables: v of a place, p the inverse of a pivot, w of a row, x of a column, r what a row leaves over, m the longest. */
+/** Variables: v of a place, p the inverse of a pivot, w of a row, x of a column, q a product, g what is subtracted from a row. */
 function solveText(shape: SparseShape, plan: Elimination): string {
   return [
     factorText(shape, plan),
@@ -49,15 +49,18 @@ function solveText(shape: SparseShape, plan: Elimination): string {
       (place) => `v${place}`,
       (k) => `p${k}`,
     ),
-    monitorText(shape, plan),
+    monitorText(plan),
   ].join("\n");
 }
 
-function factorText({ rows }: SparseShape, { factor, pivots, places }: Elimination): string {
-  const lines: string[] = [];
+function factorText({ rows }: SparseShape, plan: Elimination): string {
+  const { factor, pivots, places, changed, belowRows } = plan;
+  const lines = Array.from(changed, (row) => `let g${row}=0;`);
   for (let k = 1; k < places; k++) lines.push(`let v${k}=${k < rows.length ? `a[${k}]` : 0};`);
   const kept: string[] = [];
   let at = 0;
+  let s = 0;
+  let products = 0;
   for (let k = 0; k < pivots.length; k++) {
     lines.push(`const p${k}=1/v${factor[at]};`);
     kept.push(`f[${places + k}]=p${k};`);
@@ -70,7 +73,12 @@ function factorText({ rows }: SparseShape, { factor, pivots, places }: Eliminati
       const multiplier = factor[at++]!;
       lines.push(`v${multiplier}*=p${k};`);
       kept.push(keep(multiplier));
-      for (let j = 0; j < right; j++) lines.push(`v${factor[at + j]}-=v${multiplier}*v${factor[row + j]};`);
+      const target = belowRows[s++];
+      for (let j = 0; j < right; j++) {
+        const q = `q${products++}`;
+        lines.push(`const ${q}=v${multiplier}*v${factor[row + j]};`);
+        lines.push(`v${factor[at + j]}-=${q};g${target}+=Math.abs(${q});`);
+      }
       at += right;
     }
   }
@@ -113,17 +121,19 @@ function substitutionText(
   return lines.join("\n");
 }
 
-function monitorText({ rows, columns, size }: SparseShape, { anchors }: Elimination): string {
-  const lines = ["let m=0;"];
-  const left = Array.from({ length: size }, (_, i) => `b[${i}]`);
-  for (let k = 1; k < rows.length; k++) left[rows[k]!] += `+a[${k}]*x${columns[k]}`;
-  for (let i = 0; i < size; i++) lines.push(`m=Math.max(m,Math.abs(x${i}));`);
-  lines.push("if(!(m<Infinity))return 0;");
-  for (let i = 0; i < size; i++) {
-    const whole = `Math.abs(a[${anchors[i]}])*m+Math.abs(b[${i}])`;
-    lines.push(`if(!(Math.abs(${left[i]})<=${GOOD_BACKWARD_ERROR}*(${whole})))return 0;`);
+function monitorText({ anchors, changed, pivots, columnOf }: Elimination): string {
+  const lines: string[] = [];
+  for (const row of changed) {
+    lines.push(`if(!(g${row}<=${MOST_GROWTH}*Math.abs(a[${anchors[row]}])))return 0;`);
   }
-  lines.push("return 1;");
+  const strands: string[] = ["0", "0", "0", "0"];
+  pivots.forEach((place, k) => {
+    strands[k & 3] += `+(v${place}+x${columnOf[k]})`;
+  });
+  lines.push(
+    `const t=${strands[0]}+(${strands[1]})+((${strands[2]})+(${strands[3]}));`,
+    "return t-t===0?1:0;",
+  );
   return lines.join("\n");
 }
 
