@@ -24,7 +24,10 @@ export class Nesting {
   /** Adds a statement; `opens` says that a brace was opened at its end, in which what follows stands. */
   add(statement: Statement, opens: boolean): void {
     if (!opens) {
-      this.statements.push(statement);
+      const { kind, from, to, whole } = statement;
+      this.statements.push(
+        kind === "block" ? { kind: "broken", declares: statement.name, from, to, whole } : statement,
+      );
       return;
     }
     if (this.frames.length === MOST_BLOCK_DEPTH) {
