@@ -45,12 +45,12 @@ export function AxisSwitch({
               type="radio"
               name={group}
               value={value}
+              aria-label={value}
               checked={scale === value}
               onChange={() => onChange(value)}
               className="absolute inset-0 cursor-pointer opacity-0"
             />
             {label}
-            {value === "logarithmic" && <span className="sr-only">arithmic</span>}
           </label>
         ))}
       </span>
