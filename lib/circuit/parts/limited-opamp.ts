@@ -66,10 +66,9 @@ export class LimitedOpampPart extends OpampPart implements JunctionPart, Proof {
     const { branch, law, gain, s, places } = this;
     limited(this.limits, s, law);
     const weight = 1 / gain;
-    const asked = this.asked(state);
-    state.residual[branch] = weight * (law.v + law.slope * (asked - s) - this.behind(state));
+    state.residual[branch] = weight * (law.v + law.slope * (this.asked(state) - s) - this.behind(state));
     // Beyond a limit the inputs no longer count, however far apart they are.
-    const inputs = Math.abs(weight * asked) + Math.abs(this.offset * state.share);
+    const inputs = Math.abs(across(state, this.plus, this.minus)) + Math.abs(this.offset * state.share);
     state.scale[branch] = law.slope * inputs + weight * (Math.abs(law.v) + this.around(state));
     const { jacobian } = state;
     const [, byPlus, byMinus, byOut, byCurrent] = places;
