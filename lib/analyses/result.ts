@@ -1,5 +1,6 @@
 import type { Diagnostic } from "@/lib/language/diagnostic";
 import type { OutcomeKind, Rung } from "@/lib/solver/outcome";
+import type { BranchesDocument } from "./branches-document";
 import type { Yield } from "./yield";
 
 /** One axis of a run: the first sweep first. `values` in coherent SI units (temperature in K). */
@@ -69,6 +70,8 @@ export interface RunDocument {
   readonly requirements: readonly RequirementDocument[];
   readonly diagnostics: readonly (Diagnostic & { readonly line: number; readonly column: number })[];
   readonly failures: readonly Failure[];
+  /** All operating points, where the text asks for several. */
+  readonly branches?: readonly BranchesDocument[];
 }
 
 /**

@@ -1,4 +1,5 @@
 import { availableParallelism } from "node:os";
+import { branchesDocument } from "@/lib/analyses/branches-document";
 import { toDocument } from "@/lib/analyses/document";
 import type { RunDocument } from "@/lib/analyses/result";
 import { lineStarts, placeOf } from "@/lib/language/span";
@@ -91,7 +92,9 @@ async function documentOf(
   const progress = new Progress(name, plan.points, world, isQuiet);
   const results = await crew.solve({ text, shelf }, plan, (pointsDone) => progress.tell(pointsDone));
   progress.end();
-  return toDocument({ plan, design, text, ...gather(plan, results), diagnostics });
+  const document = toDocument({ plan, design, text, ...gather(plan, results), diagnostics });
+  const branches = branchesDocument(job);
+  return branches === null ? document : { ...document, branches };
 }
 
 /** The document of a netlist that cannot be solved. */

@@ -54,6 +54,7 @@ export class Seeker {
   private readonly shape: SparseShape;
   private readonly linear: LinearSolver;
   private readonly aided: Aided;
+  private readonly ladder: Ladder;
   private readonly certificate: Certificate;
   private points: OperatingPoint[] = [];
   private readonly spent = { iterations: 0 };
@@ -68,6 +69,7 @@ export class Seeker {
   constructor(private readonly system: System) {
     const { circuit, pattern, state } = system;
     this.aided = new Aided(system);
+    this.ladder = new Ladder(system, false);
     this.shape = {
       size: circuit.size,
       rows: Int32Array.from(pattern.rows),
@@ -92,7 +94,8 @@ export class Seeker {
     this.spent.iterations = 0;
     this.seed = 1;
     [this.low, this.high] = [-1, 1];
-    const outcome = new Ladder(this.system, false).solve(false);
+    this.ladder.reset();
+    const outcome = this.ladder.solve(false);
     this.spent.iterations += outcome.iterations;
     if (outcome.kind === "converged") this.keep();
     let quiet = 0;

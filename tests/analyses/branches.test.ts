@@ -1,7 +1,10 @@
-import { describe, expect, test } from "vitest";
+import { describe, expect, test, vi } from "vitest";
 import { type Branch, branchesOf } from "@/lib/analyses/branches";
+import { branchesDocument } from "@/lib/analyses/branches-document";
 import { compile } from "@/lib/analyses/compile";
 import { SEVERAL, textOf } from "../outside/several-solutions";
+
+vi.setConfig({ testTimeout: 60_000 });
 
 const record = (id: string) => SEVERAL.find((one) => one.id === id)!;
 
@@ -53,6 +56,38 @@ describe.each([
         expect(point.traces).toEqual([point.x[job.circuit.nets.get(id === "MS4" ? "c1" : "v")!]]);
       }
     }
+  });
+});
+
+describe("the branches of a run document", () => {
+  test("have one value a setting in every column, null where a branch does not reach, for every row", () => {
+    const text = textOf(record("MS4")).replace("81 points", "21 points");
+    const job = jobOf(`seek 4\n${text.replace("show", "sweep temperature over 290 K, 310 K\nshow")}`);
+    const rows = branchesDocument(job)!;
+    expect(JSON.parse(JSON.stringify(rows))).toEqual(rows);
+    expect(rows.map(({ at }) => at)).toEqual([290, 310].map((value) => [{ knob: "temperature", value }]));
+    for (const { branches, folds, complete } of rows) {
+      expect(complete).toBe(true);
+      expect(branches).toHaveLength(3);
+      expect(folds).toHaveLength(2);
+      for (const { stable, bound, traces } of branches) {
+        expect([stable.length, bound.length, traces[0]!.values.length]).toEqual([21, 21, 21]);
+        for (const [k, value] of stable.entries()) {
+          expect([bound[k] === null, traces[0]!.values[k] === null]).toEqual([
+            value === null,
+            value === null,
+          ]);
+        }
+      }
+    }
+    // Is does not follow temperature here, so that junctions need V_T·ln(I/Is) more voltage where it is warmer: both rise.
+    const folds = rows.map((row) => row.folds.map(({ value }) => value).sort());
+    expect(folds[1]![0]!).toBeGreaterThan(folds[0]![0]!);
+    expect(folds[1]![1]!).toBeGreaterThan(folds[0]![1]!);
+  });
+
+  test("are not there where a text does not seek", () => {
+    expect(branchesDocument(jobOf(textOf(record("MS5"))))).toBeNull();
   });
 });
 

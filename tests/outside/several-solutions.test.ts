@@ -1,8 +1,10 @@
-import { describe, expect, test } from "vitest";
+import { describe, expect, test, vi } from "vitest";
 import { compile } from "@/lib/analyses/compile";
 import { System } from "@/lib/circuit/system";
 import { seek } from "@/lib/solver/seek";
 import { SEVERAL, textOf } from "./several-solutions";
+
+vi.setConfig({ testTimeout: 60_000 });
 
 describe.each(SEVERAL)("$id: $source", (record) => {
   const { job, diagnostics } = compile(textOf(record));
