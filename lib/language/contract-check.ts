@@ -45,8 +45,8 @@ export class ContractCheck {
 
   reads(statements: readonly Flat[]): Reading[] {
     return statements.flatMap((statement) => {
-      if (statement.kind !== "read" || !statement.whole) return [];
-      const reading = this.reading(statement);
+      if (statement.kind !== "read") return [];
+      const reading = statement.whole ? this.reading(statement) : null;
       if (reading === null) this.bench.terms.readings.set(statement.name.text, null);
       return reading === null ? [] : [reading];
     });

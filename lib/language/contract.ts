@@ -46,6 +46,12 @@ export function checkContract(
   const plan = { sweeps, knobs, known, isPlanKnown };
   const windows = new WindowCheck(plan, names, quantities, agreement, report);
   const terms = new ContractTerms(traces, typing, agreement, names, ranks, windows, report);
+  for (const statement of statements) {
+    if (statement.kind !== "show") continue;
+    // A trace that was not understood is known by its name, so that its uses stay quiet.
+    for (const { name } of statement.items)
+      if (name !== null && !traces.has(name.text)) terms.readings.set(name.text, null);
+  }
   const random = draws === null && asked("draws") > 0 ? null : (draws?.count ?? 0);
   const bench = {
     source: understood.source,

@@ -50,6 +50,10 @@ export const CONTRACT_PROBLEMS: readonly Problem[] = [
     text: within("require out <= 1 V at «kk» = 1 V"),
     mended: within("require out <= 1 V at k = 1 V"),
   },
+  { code: "NAM3", text: within("show y = «nowhere».v\nrequire y <= 1 V"), says: "declare it" },
+  { code: "NAM3", text: within("read a = highest(«nowhere».v)\nrequire a <= 1 V") },
+  { code: "FRM3", text: within("read a «=»\nrequire a <= 1 V") },
+  { code: "PLN4", text: within("draws «0» seed 1\nrequire out <= 1 V in 5 % of draws") },
   { code: "NAM4", text: within("read a = highest(out)\nlet b = «a»") },
   {
     code: "NAM10",
