@@ -100,7 +100,11 @@ function checkExpansion(
   const wired = new Wirer(names, kinds, report).wire(statements);
   for (const one of wired) pins.set(one.name.text, one.pins);
 
-  const { knobs, lets: allLets } = checkValues(statements, {
+  const {
+    knobs,
+    lets: allLets,
+    ranges,
+  } = checkValues(statements, {
     names,
     agreement,
     typing,
@@ -126,7 +130,8 @@ function checkExpansion(
   const contract = checkContract(statements, { ...understood, ...asked });
   const { shows } = contract;
 
-  if (!report.hasErrors) checkBounds({ lets, models, elements, sweeps }, nominal, report);
+  if (!report.hasErrors)
+    checkBounds({ lets, ranges: ranges.filter(own), models, elements, sweeps }, nominal, report);
   const title = titleOf(statements, report);
   const netPlaces = placesOf(names, own);
   const nets = [...netPlaces.keys()];

@@ -22,11 +22,17 @@ interface Bench {
   readonly report: Report;
 }
 
+/** The value of a block's knob, and the range in which it must stay. */
+export interface RangedValue extends NamedValue {
+  readonly low: number;
+  readonly high: number;
+}
+
 /** Checks all lets and knobs, in an order in which each uses only those before it, and fills `known` and `nominal`. */
 export function checkValues(
   statements: readonly Flat[],
   bench: Bench,
-): { knobs: Knob[]; lets: NamedValue[] } {
+): { knobs: Knob[]; lets: NamedValue[]; ranges: RangedValue[] } {
   const owners = new Map<string, ValueStatement>();
   for (const statement of statements) {
     if (statement.kind !== "let" && statement.kind !== "knob" && statement.kind !== "parameter") continue;
@@ -39,6 +45,7 @@ export function checkValues(
   }
   const knobs: Knob[] = [];
   const lets: NamedValue[] = [];
+  const ranges: RangedValue[] = [];
   if (!owners.has("temperature")) knobs.push(defaultTemperature(bench));
   for (const statement of inOrder(owners, bench.names, bench.report)) {
     const judged =
@@ -46,14 +53,18 @@ export function checkValues(
         ? parameterOf(statement, bench)
         : bench.typing.judge(statement.value, { signals: false, wanted: wantedFor(statement) });
     if (judged === null) continue;
-    if (statement.kind !== "knob") lets.push(letOf(statement, judged, bench));
-    else {
+    if (statement.kind !== "knob") {
+      const value = letOf(statement, judged, bench);
+      lets.push(value);
+      const range = statement.kind === "parameter" ? rangeOf(statement, value.value, bench) : null;
+      if (range !== null) ranges.push({ ...value, ...range });
+    } else {
       const knob = knobOf(statement, judged, bench);
       if (knob !== null) knobs.push(knob);
     }
   }
   const textual = (a: NamedValue, b: NamedValue) => a.from - b.from;
-  return { knobs: knobs.sort(textual), lets };
+  return { knobs: knobs.sort(textual), lets, ranges };
 }
 
 function isOwner(names: Names, name: string, from: number, kind: "let" | "knob"): boolean {
@@ -94,7 +105,6 @@ function letOf(statement: ValueStatement, { typed, point }: Judged, bench: Bench
   bench.nominal.set(name.text, number);
   bench.nominal.setMover(name.text, mover);
   const tolerance = bench.quantities.tolerance(statement.tolerance, typed);
-  if (mover === null && statement.kind === "parameter") rangeOf(statement, typed, number, bench);
   return { name: name.text, value: typed, tolerance, from: statement.from, to: statement.to };
 }
 
@@ -122,13 +132,15 @@ function knobOf(statement: ValueStatement, { typed, point }: Judged, bench: Benc
   nominal.set(name.text, number);
   const folded: Typed = { op: "constant", value: number, dimension: typed.dimension };
   const tolerance = quantities.tolerance(statement.tolerance, folded);
-  const range = rangeOf(statement, folded, number, bench);
+  const range = rangeOf(statement, folded, bench);
   return { name: name.text, value: folded, tolerance, range, from: statement.from, to: statement.to };
 }
 
-function rangeOf(statement: ValueStatement, folded: Typed, number: number, bench: Bench): Knob["range"] {
+/** The range of a knob, in which its value must lie. */
+function rangeOf(statement: ValueStatement, folded: Typed, bench: Bench): Knob["range"] {
   if (statement.range === null) return null;
-  const { quantities, report, agreement } = bench;
+  const { quantities, nominal, report, agreement } = bench;
+  const number = nominal.of(folded);
   const unit = spellableUnit(folded.dimension) ?? "1";
   const want = {
     dimension: folded.dimension,

@@ -86,6 +86,13 @@ export const BLOCK_PROBLEMS: readonly Problem[] = [
   { code: "PLN4", text: within("draws 10 seed «-1»") },
   { code: "PLN4", text: within("seek «0»") },
   { code: "PLN6", text: within(`${stage}\nX : stage { in = in, out = ground, R = «2 MΩ» }`) },
+  {
+    code: "PLN9",
+    text: within(
+      `${stage}\nknob r = 1 kΩ\nX : stage { in = in, out = ground, R = 2 * r }\n«sweep r from 1 kΩ to 1 MΩ, 3 points»`,
+    ),
+    says: "but must be at most 1.000",
+  },
   { code: "CAP2", text: within(nested(MOST_BLOCK_DEPTH)) },
   {
     code: "CAP3",
