@@ -47,6 +47,12 @@ async function service(): Promise<string> {
   return serve(await cluster.database("sweepwright_bench"), DEMO_PASSWORD);
 }
 
+/** The figures that a measure printed as an object on a line of its own; what else it said counts for nothing. */
+function printedBy(text: string): object {
+  const line = text.split("\n").findLast((one) => one.startsWith("{"));
+  return line === undefined ? {} : JSON.parse(line);
+}
+
 async function tidyUp(): Promise<void> {
   closeServices();
   endCommands();
@@ -65,14 +71,20 @@ try {
   const options = words.filter((word) => word.startsWith("-"));
   const names = chosen(words.filter((word) => !word.startsWith("-")));
   const env = names.some(drivesBrowser) ? { E2E_URL: await service() } : {};
+  const isJson = options.includes("--json");
+  const figures: Record<string, unknown> = {};
   for (const name of names) {
     // Standard output belongs to the measures alone, so that --json can be piped on.
     console.error(`── ${name}`);
-    const { code } = await run(process.execPath, ["--import", "tsx", `${FOLDER}/${name}.ts`, ...options], {
-      env,
-    });
-    if (code !== 0) process.exitCode = 1;
+    const words = ["--import", "tsx", `${FOLDER}/${name}.ts`, ...options];
+    const { code, text } = await run(process.execPath, words, { env, output: isJson ? "keep" : "show" });
+    if (code !== 0) {
+      process.exitCode = 1;
+      if (isJson) console.error(text);
+    }
+    Object.assign(figures, printedBy(text));
   }
+  if (isJson) console.log(JSON.stringify(figures));
 } catch (error) {
   console.error(explain(error));
   process.exitCode = 1;
