@@ -77,6 +77,20 @@ const LONG: readonly (readonly [what: string, line: (i: number) => string])[] = 
   ],
   ["values that each use the one after", (i) => `let a${i} = a${i + 1} + 1\n`],
   [
+    "blocks with an instance each and a mistake each",
+    (i) =>
+      `block b${i}(a) {\n  a -- R1 : resistor ${i} V -- x\n  let k = kk\n}\nX${i} : b${i} { a = n, q = 1 }\n`,
+  ],
+  ["blocks that are never closed", (i) => `block b${i}(a) {\n  a -- R1 : resistor 1 kΩ -- x\n`],
+  [
+    "names inside instances that are not there",
+    (i) => `block b${i}(a) {\n}\nX${i} : b${i} { a = n }\nlet y${i} = X${i}.zz\n`,
+  ],
+  [
+    "laws of unknown nets",
+    (i) => `L${i} : law { plus = a${i}, minus = ground, amps = 1 mA * tanh(nn${i}.v / 1 V) }\n`,
+  ],
+  [
     "loops of voltage elements",
     (i) => `n${i} -- V${i} : voltage 1 V -- n${i + 1}\nground -- W${i} : voltage 1 V -- n${i}\n`,
   ],
