@@ -71,6 +71,7 @@ export class Rows implements Scope {
   /** Whether a row lies in the windows of the outer knobs. */
   isWithin(row: number, windows: readonly Window[]): boolean {
     const { axes } = this.contract.plan;
+    if (windows.length === 0 || axes.length < 2) return true;
     const places = placeOnAxes(this.contract.plan, row * this.length);
     return windows.every((window) => {
       const axis = axes.findIndex(({ knob }) => knob === window.knob);
@@ -91,7 +92,8 @@ export class Rows implements Scope {
   }
 
   private stand(row: number, selection: Selection): void {
-    if (row !== this.row || selection !== this.selection) this.reductions = new Map();
+    const isNew = row !== this.row || selection !== this.selection;
+    if (isNew && this.reductions.size > 0) this.reductions = new Map();
     this.row = row;
     this.selection = selection;
     this.at = 0;

@@ -147,5 +147,7 @@ class StatementParser {
 /** A guess at what a line was to be, from its first tokens. */
 function meant(cursor: Cursor): string {
   if (cursor.token.kind === "word" && cursor.isSymbol("=", 1)) return "to name a value write `let` before it";
+  if (["for", "at", "in", "as"].includes(cursor.token.text))
+    return `a requirement stands on one line: join ${quote(cursor.token.text)} to the line before`;
   return "a line begins with a word such as `let`, `model`, `sweep` or `show`, with `net -- …` or with `name : kind`";
 }

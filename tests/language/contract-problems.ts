@@ -30,6 +30,7 @@ export const CONTRACT_PROBLEMS: readonly Problem[] = [
   { code: "FRM2", text: within("require out <= 1 V at k «in» 1 V") },
   { code: "FRM2", text: within("require out <= 1 V in 95 % «draws»") },
   { code: "FRM2", text: within("require out <= 1 V as «name»") },
+  { code: "FRM1", text: within("require out <= 1 V\n  «at» k = 1 V"), says: "to the line before" },
   { code: "FRM4", text: within('require out <= 1 V as "name" «at» k = 1 V') },
   { code: "FRM8", text: within("require 0 V <= out «<=» 1 V"), says: "between" },
   { code: "FRM12", text: within("require «highest(out, 1 V)» <= 2 V") },
