@@ -40,7 +40,7 @@ export const FAMILIES_AT_ONCE = 12;
 const MANY_DECADES = { from: 3, to: 15 };
 
 /** On a linear axis a trace so many times smaller than the largest is a flat line: an error beside its signal. */
-const FLAT = 30;
+const FLAT = 16;
 
 /** The scale of a vertical axis when nobody chose. */
 export function usualScale({ axis }: CurveSet, fit: LogarithmicFit): Scale {
