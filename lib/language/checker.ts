@@ -2,7 +2,7 @@ import { Agreement } from "./agreement";
 import type { Design, Element, Show, Sweep } from "./ast";
 import { checkBounds } from "./bounds";
 import { checkContract } from "./contract";
-import type { Diagnostic } from "./diagnostic";
+import { type Diagnostic, removal } from "./diagnostic";
 import { DrawsCheck } from "./draws-check";
 import { ElementCheck, modelKinds } from "./elements";
 import { Expander, type Expansion, type Flat } from "./expand";
@@ -167,7 +167,12 @@ function titleOf(statements: readonly Flat[], report: Report): string {
   for (const statement of statements) {
     if (statement.kind !== "title") continue;
     if (title !== null)
-      report.error("FRM9", statement, "A netlist has one title; remove this one or the other.");
+      report.error(
+        "FRM9",
+        statement,
+        "A netlist has one title; remove this one or the other.",
+        removal(statement),
+      );
     title ??= statement.text.text;
   }
   return title ?? "";

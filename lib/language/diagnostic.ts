@@ -18,3 +18,8 @@ export interface Diagnostic extends Span {
   readonly message: string;
   readonly fix?: Fix;
 }
+
+/** The fix that takes a stretch of the text out. */
+export function removal({ from, to }: Span): Fix {
+  return { title: "Remove it", from, to, text: "" };
+}

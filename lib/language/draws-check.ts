@@ -1,5 +1,6 @@
 import { PURE } from "@/lib/units/dimension";
 import type { Design } from "./ast";
+import { removal } from "./diagnostic";
 import type { Flat } from "./expand";
 import { count, MOST_BRANCHES, MOST_POINTS } from "./limits";
 import type { Quantities } from "./quantities";
@@ -34,7 +35,8 @@ export class DrawsCheck {
   ): Extract<Statement, { kind: K }> | null {
     const found = statements.filter((one): one is Extract<Statement, { kind: K }> => one.kind === kind);
     for (const more of found.slice(1)) {
-      this.report.error("FRM9", more, `A netlist has one \`${kind}\`; remove this one or the other.`);
+      const message = `A netlist has one \`${kind}\`; remove this one or the other.`;
+      this.report.error("FRM9", more, message, removal(more));
     }
     return found[0] ?? null;
   }

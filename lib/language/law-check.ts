@@ -1,5 +1,6 @@
 import { AMPERE, VOLT } from "@/lib/units/dimension";
 import type { Element, Typed } from "./ast";
+import { removal } from "./diagnostic";
 import type { Nominal } from "./nominal";
 import type { Quantities } from "./quantities";
 import type { Report } from "./report";
@@ -47,7 +48,7 @@ export class LawCheck {
   private law({ value, tolerance }: Setting, quantity: Quantity, owner: string): Element["law"] {
     if (tolerance !== null) {
       const message = "A law takes no tolerance; give it to a value that the law uses.";
-      this.report.error("UNI10", tolerance, message);
+      this.report.error("UNI10", tolerance, message, removal(tolerance));
     }
     const want = { ...QUANTITIES[quantity], what: `${quote(quantity)} of the law ${quote(owner)}` };
     const typed = this.quantities.fitting(value, want, true);

@@ -1,3 +1,4 @@
+import { removal } from "./diagnostic";
 import { nearest } from "./nearest";
 import type { Report } from "./report";
 import type { BlockStatement } from "./scope";
@@ -43,7 +44,8 @@ export class Ports {
       this.report.error("FRM10", value, message);
       return;
     }
-    if (tolerance !== null) this.report.error("UNI10", tolerance, "A net takes no tolerance; remove it.");
+    if (tolerance !== null)
+      this.report.error("UNI10", tolerance, "A net takes no tolerance; remove it.", removal(tolerance));
     nets.set(name.text, value.path[0]!);
   }
 

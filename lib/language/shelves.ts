@@ -1,4 +1,4 @@
-import type { Diagnostic } from "./diagnostic";
+import { type Diagnostic, removal } from "./diagnostic";
 import type { Flat, Import } from "./expand";
 import type { Report } from "./report";
 import { Rewriter } from "./rewrite";
@@ -39,6 +39,7 @@ export class Shelves {
           "FRM9",
           statement,
           `"${statement.shelf.text}" is used twice; remove one of the two.`,
+          removal(statement),
         );
         return [];
       }

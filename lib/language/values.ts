@@ -152,11 +152,10 @@ function rangeOf(statement: ValueStatement, folded: Typed, bench: Bench): Knob["
   if (low === null || high === null) return null;
   const span = { from: statement.range.low.from, to: statement.range.high.to };
   if (low >= high) {
-    report.error(
-      "PLN7",
-      span,
-      "The range of a knob goes from its lower end to its higher end; exchange the two.",
-    );
+    const text = `${agreement.source(statement.range.high)} .. ${agreement.source(statement.range.low)}`;
+    const fix = { title: "Exchange the two", ...span, text };
+    const message = "The range of a knob goes from its lower end to its higher end; exchange the two.";
+    report.error("PLN7", span, message, low > high ? fix : undefined);
     return null;
   }
   if (number < low || number > high) {

@@ -1,4 +1,5 @@
 import type { ElementKind, ModelKind } from "./ast";
+import { removal } from "./diagnostic";
 import type { Flat } from "./expand";
 import { KINDS, MODEL_KINDS } from "./kinds";
 import { Names, ownName } from "./names";
@@ -159,7 +160,12 @@ export class Wirer {
       return;
     }
     if (setting.tolerance !== null) {
-      this.report.error("UNI10", setting.tolerance, "A pin takes no tolerance; remove it.");
+      this.report.error(
+        "UNI10",
+        setting.tolerance,
+        "A pin takes no tolerance; remove it.",
+        removal(setting.tolerance),
+      );
     }
     this.names.mentionNet(net);
     pins[setting.name.text] = net.text;

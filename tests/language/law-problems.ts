@@ -41,6 +41,10 @@ export const LAW_PROBLEMS: readonly Problem[] = [
   },
   { code: "UNI8", text: within("model d : diode { Is = 1 fA, photocurrent = «-1 A» }") },
   { code: "UNI9", text: within(`${open}volts = «1 V / 0» }`) },
-  { code: "UNI10", text: within(`${open}amps = 1 mA «± 1 %» }`) },
+  {
+    code: "UNI10",
+    text: within(`${open}amps = 1 mA «± 1 %» }`),
+    mended: within(`${open}amps = 1 mA  }`),
+  },
   { code: "WIR5", text: within("«G1» : gain { plus = in, minus = ground, ratio = 2 }"), says: "`out`" },
 ];

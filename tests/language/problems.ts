@@ -232,7 +232,11 @@ export const LANGUAGE_PROBLEMS: readonly Problem[] = [
   { code: "PLN6", text: within("knob k = «3 V» in 0 V .. 2 V") },
   { code: "PLN6", text: within("knob k = 1 V in 0 V .. 2 V\nsweep k «from 1 V to 3 V, 5 points»") },
   { code: "PLN6", text: within("sweep temperature «over 0 K, 300 K»") },
-  { code: "PLN7", text: within("knob k = 1 V in «2 V .. 0 V»") },
+  {
+    code: "PLN7",
+    text: within("knob k = 1 V in «2 V .. 0 V»"),
+    mended: within("knob k = 1 V in 0 V .. 2 V"),
+  },
   {
     code: "PLN9",
     text: within("knob R = 1 kΩ\nground -- R2 : resistor R -- in\n«sweep R from 0 Ω to 2 kΩ, 3 points»"),
