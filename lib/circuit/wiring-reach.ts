@@ -90,7 +90,7 @@ function checkEnds(wiring: Wiring, isSettled: (net: number) => boolean, report: 
       report.warning("WIR1", place, `${message}; nothing loads it.`);
       return;
     }
-    const near = ends.size <= MOST_SEARCHES ? nearest(name, wellConnected) : null;
+    const near = ends.size <= MOST_SEARCHES ? nearAround(name, wellConnected) : null;
     if (near === null) {
       const mend = isSettled(net)
         ? "connect it to something or show its voltage"
@@ -102,6 +102,17 @@ function checkEnds(wiring: Wiring, isSettled: (net: number) => boolean, report: 
     report.error("WIR1", place, `${message}; did you mean ${list([near])}?`, fix);
   });
   return ends;
+}
+
+/** The net of the same instance, or of the file, that was probably meant: its name as it is written there. */
+function nearAround(name: string, nets: readonly string[]): string | null {
+  const own = name.lastIndexOf(".") + 1;
+  const prefix = name.slice(0, own);
+  const around = nets.filter((net) => net.startsWith(prefix) && !net.includes(".", own));
+  return nearest(
+    name.slice(own),
+    around.map((net) => net.slice(own)),
+  );
 }
 
 /** Nets joined to each other but not to ground. */

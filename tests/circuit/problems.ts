@@ -27,6 +27,18 @@ export const WIRING_PROBLEMS: readonly Problem[] = [
       "in -- R4 : resistor 1 kΩ -- output",
     ),
   },
+  {
+    code: "WIR1",
+    text: lines(
+      "block b(p) {\n  p -- R2 : resistor 1 kΩ -- middle -- R3 : resistor 1 kΩ -- ground\n  p -- R4 : resistor 1 kΩ -- «midlde»\n}",
+      "X : b { p = in }",
+    ),
+    mended: lines(
+      "block b(p) {\n  p -- R2 : resistor 1 kΩ -- middle -- R3 : resistor 1 kΩ -- ground\n  p -- R4 : resistor 1 kΩ -- middle\n}",
+      "X : b { p = in }",
+    ),
+    says: "`X.midlde`",
+  },
   { code: "WIR1", text: lines("in -- I1 : current 1 µA -- «x»", "show x.v") },
   { code: "WIR1", text: lines("A1 : amp { plus = «x», minus = o, out = o }", "show x.v") },
   {
