@@ -26,17 +26,18 @@ export interface RunMatter {
 
 /**
  * The run document of what is known: JSON without NaN, null where a point is not solved. A netlist without requirements breaks
- * none, so its verdict is "holds" as soon as one point is solved and "no data" before.
+ * none, so its verdict is "holds" as soon as one point is solved and "no data" before, as it is of one that can no longer be read.
  */
 export function toDocument(matter: RunMatter): RunDocument {
   const { plan, text, outcome } = matter;
   const solved = OUTCOMES.indexOf("converged");
+  const solvedOrNot = outcome.includes(solved) ? "holds" : "no data";
   const starts = lineStarts(text);
   const judgement = matter.design === null ? null : judge({ design: matter.design, plan }, matter);
   return {
     format: "sweepwright-run/1",
     title: plan.title,
-    verdict: judgement?.verdict ?? (outcome.includes(solved) ? "holds" : "no data"),
+    verdict: judgement === null ? "no data" : (judgement.verdict ?? solvedOrNot),
     axes: plan.axes,
     draws: plan.draws,
     traces: plan.traces.map(({ name, unit }, k) => ({

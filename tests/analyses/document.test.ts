@@ -79,4 +79,57 @@ describe("the run document", () => {
     const { diagnostics } = toDocument(matterOf(source));
     expect(diagnostics.map(({ code, line, column }) => [code, line, column])).toEqual([["PLN8", 3, 1]]);
   });
+
+  describe("of a netlist with a contract", () => {
+    const source = `title "Contract"
+knob I = 1 µA
+model junction : diode { Is = 1 fA ± 20 % }
+ground -- I1 : current I -- a -- D1 : diode junction -- ground
+sweep I from 1 nA to 1 µA, 1 per decade
+sweep temperature over 0 °C, 25 °C
+draws 6 seed 3
+show v = a.v
+read slope = per_decade(v)
+require slope within 59.16 mV ± 0.1 % at temperature = 25 °C as "scale"
+require D1.p <= 0.5 µW in 50 % of draws
+`;
+    const whole = toDocument(matterOf(source));
+
+    test("keeps every draw, and the signals that the contract alone asks for", () => {
+      expect(whole.draws).toBe(6);
+      expect(whole.traces.map(({ name, values }) => [name, values.length])).toEqual([
+        ["v", 4 * 2 * 7],
+        ["D1.p", 4 * 2 * 7],
+      ]);
+      expect(whole.readings.map(({ name, unit, per, values }) => [name, unit, per, values.length])).toEqual([
+        ["slope", "V", "sweep", 2 * 7],
+      ]);
+      expect(JSON.parse(JSON.stringify(whole))).toEqual(whole);
+    });
+
+    test("has the verdict of its worst requirement", () => {
+      expect(whole.requirements.map(({ label, verdict, unit }) => [label, verdict, unit])).toEqual([
+        ["scale", "holds", "V"],
+        ["D1.p <= 0.5 µW in 50 % of draws", "broken", "W"],
+      ]);
+      expect(whole.verdict).toBe("broken");
+      expect(whole.requirements[1]!.worst!.at[0]).toEqual({ knob: "I", unit: "A", value: 1e-6 });
+    });
+
+    test("holds nothing before the points are in", () => {
+      const matter = matterOf(source);
+      const unknown = matter.traces.map((column) => column.map(() => Number.NaN));
+      const { verdict, requirements } = toDocument({ ...matter, traces: unknown });
+      expect(verdict).toBe("no data");
+      for (const one of requirements) {
+        expect(one).toMatchObject({ verdict: "no data", margin: null, worst: null });
+        expect(one.yield).toMatchObject({ holds: 0, of: 6, low: 0 });
+      }
+    });
+
+    test("has no contract where the text can no longer be read", () => {
+      const { readings, requirements, verdict } = toDocument({ ...matterOf(source), design: null });
+      expect([readings, requirements, verdict]).toEqual([[], [], "no data"]);
+    });
+  });
 });
