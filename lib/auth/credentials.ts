@@ -5,7 +5,14 @@ import { openSession } from "@/lib/services/sessions/open-session";
 import { passwordMatches } from "./password";
 import { throttle } from "./throttle";
 
-const given = z.object({ email: z.string().trim().min(1).max(254), password: z.string().min(1).max(1_000) });
+/** PostgreSQL takes no NUL, so no account has one in its address. */
+const email = z
+  .string()
+  .trim()
+  .min(1)
+  .max(254)
+  .refine((text) => !text.includes("\0"));
+const given = z.object({ email, password: z.string().min(1).max(1_000) });
 
 export interface SignedIn {
   readonly userId: string;

@@ -122,7 +122,7 @@ describe("a request that changes something", () => {
 });
 
 describe("ids", () => {
-  it.each(["x", "' OR 1=1 --", "00000000-0000-4000-8000-000000000000", "%00"])(
+  it.each(["x", "' OR 1=1 --", "00000000-0000-4000-8000-000000000000", "%00", "\0", "\ud800"])(
     "%j is known nowhere",
     async (id) => {
       const actor = await makeActor("admin");
@@ -135,6 +135,21 @@ describe("ids", () => {
         call(cancelRun, actor, { params: { id }, method: "POST" }),
       ]);
       expect(responses.map(({ status }) => status)).toEqual([404, 404, 404, 404, 404, 404]);
+    },
+  );
+});
+
+describe("a workspace", () => {
+  it.each(["\0", "north\0bench", "\ud800", "%", "x".repeat(5_000), "' OR 1=1 --"])(
+    "%j is known nowhere, by address and by body",
+    async (workspace) => {
+      const actor = await makeActor("admin");
+      const responses = await Promise.all([
+        call(listNetlists, actor, { search: { workspace } }),
+        call(listRuns, actor, { search: { workspace } }),
+        call(createNetlist, actor, { body: { workspace, text: DIODE_TEXT } }),
+      ]);
+      expect(responses.map(({ status }) => status)).toEqual([404, 404, 404]);
     },
   );
 });

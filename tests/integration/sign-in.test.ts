@@ -58,6 +58,7 @@ describe("sign-in", () => {
     ["an unknown address", { email: "nobody@bench.example" }],
     ["no password", { password: "" }],
     ["what is no text", { password: { $ne: "" } }],
+    ["an address that PostgreSQL cannot hold", { email: "a\0@bench.example" }],
   ])("answers %s with null, and opens nothing", async (_, wrong) => {
     const { id, email } = await makeUser();
     expect(await authorize({ email, password: PASSWORD, ...wrong })).toBeNull();

@@ -172,6 +172,13 @@ describe("uploadNetlists", () => {
     });
   });
 
+  it("cuts a long file name between characters", async () => {
+    const actor = await makeActor();
+    const [made] = await uploadNetlists(actor, [{ name: `${"a".repeat(119)}😀.swn`, text: "# x\n" }]);
+    const id = made !== undefined && "id" in made ? made.id : "";
+    expect((await getNetlist(actor, id)).title).toBe("a".repeat(119));
+  });
+
   it("refuses a viewer before any file is read", async () => {
     const files = [{ name: "head.swn", text: DIODE_TEXT }];
     await expect(uploadNetlists(await makeActor("viewer"), files)).rejects.toMatchObject({

@@ -34,6 +34,12 @@ async function jobsOf(runId: string): Promise<number> {
 }
 
 describe("startRun", () => {
+  it("gives a run a title that lists can show, however long the text's own is", async () => {
+    const actor = await makeActor();
+    const { id } = await makeRun(actor, { text: DIODE_TEXT.replace("A diode", "t  ".repeat(50_000)) });
+    expect((await getRun(actor, id)).title).toBe("t ".repeat(60));
+  });
+
   it("writes the run, its shards without gap or overlap, one event, and a job for each shard", async () => {
     const actor = await makeActor("engineer", undefined, "Erna Invented");
     const { id: netlistId } = await makeNetlist(actor, LONG);

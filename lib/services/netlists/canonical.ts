@@ -18,8 +18,13 @@ export function titleIn(text: string): string | null {
   const { netlist } = parseTokens(tokenize(text, report), text.length, report);
   for (const statement of netlist.statements) {
     if (statement.kind !== "title") continue;
-    const title = statement.text.text.replaceAll(/\s+/g, " ").trim();
-    if (title !== "") return Array.from(title).slice(0, MOST_TITLE).join("");
+    const title = asTitle(statement.text.text);
+    if (title !== "") return title;
   }
   return null;
+}
+
+/** `text` on one line and at most 120 characters long, as lists show it. */
+export function asTitle(text: string): string {
+  return Array.from(text.replaceAll(/\s+/g, " ").trim()).slice(0, MOST_TITLE).join("");
 }

@@ -33,6 +33,8 @@ async function take(actor: Actor, file: unknown): Promise<{ id: string }> {
   const title = name
     .replace(/^.*[\\/]/, "")
     .slice(0, -".swn".length)
-    .slice(0, 120);
+    .slice(0, 120)
+    // The cut may have left half of a character, which could not be stored.
+    .replace(/\p{Surrogate}$/u, "");
   return createNetlist(actor, { title, text: text.replace(/^\uFEFF/, "") });
 }

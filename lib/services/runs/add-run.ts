@@ -8,6 +8,7 @@ import { shardsOf } from "@/lib/analyses/strands";
 import { ENGINE_VERSION } from "@/lib/analyses/version";
 import type { Actor } from "@/lib/permissions/actor";
 import { appendEvent } from "../events/append-event";
+import { asTitle } from "../netlists/canonical";
 import type { NetlistRecord } from "../netlists/find-netlist";
 import { previewOf } from "./preview";
 
@@ -42,7 +43,7 @@ export async function addRun(
       number: taken!.number,
       netlistId: of.id,
       revisionNumber,
-      title: plan.title || of.title,
+      title: asTitle(plan.title) || of.title,
       plan,
       preview: previewOf(plan),
       points: plan.points,

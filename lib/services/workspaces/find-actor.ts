@@ -13,6 +13,9 @@ export type Whereabouts =
   | { readonly netlistId: string }
   | { readonly runId: string };
 
+/** What may be a slug: anything else is asked of no database, which would choke on a NUL. */
+const SLUG = /^[\w-]{1,100}$/;
+
 /**
  * `user` as a member of a workspace, with the role the database holds now. Null when there is no such workspace or thing, or
  * when the user is no member: the two look the same from outside. For lib/auth alone.
@@ -20,8 +23,11 @@ export type Whereabouts =
 export async function findActor(user: User, where: Whereabouts): Promise<Actor | null> {
   const db = database();
   let match: SQL | undefined;
-  if ("slug" in where) match = eq(workspace.slug, where.slug);
-  else {
+  if ("slug" in where) {
+    // A server action may be sent anything for a text.
+    if (typeof where.slug !== "string" || !SLUG.test(where.slug)) return null;
+    match = eq(workspace.slug, where.slug);
+  } else {
     const id = "runId" in where ? where.runId : where.netlistId;
     if (!z.uuid().safeParse(id).success) return null;
     const thing = "runId" in where ? run : netlist;

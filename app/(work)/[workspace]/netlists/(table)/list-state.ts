@@ -20,7 +20,8 @@ export function readListState(search: URLSearchParams): ListState {
   const sort = SORT_KEYS.find((key) => key === search.get("sort")) ?? START.sort;
   const page = Number(search.get("page") ?? 1);
   return {
-    query: (search.get("query") ?? "").slice(0, 200),
+    // What is no text, or was cut in half, cannot be searched for.
+    query: (search.get("query") ?? "").slice(0, 200).replaceAll(/[\0\p{Surrogate}]/gu, ""),
     sort,
     direction: search.get("direction") === "ascending" ? "ascending" : usualDirection(search, sort),
     page: Number.isInteger(page) && page > 0 && page < 1e6 ? page : 1,

@@ -16,7 +16,8 @@ export const PAGE_SIZE = 25;
 export function readListState(search: URLSearchParams): ListState {
   const page = Number(search.get("page") ?? 1);
   return {
-    query: (search.get("query") ?? "").slice(0, 200),
+    // What is no text, or was cut in half, cannot be searched for.
+    query: (search.get("query") ?? "").slice(0, 200).replaceAll(/[\0\p{Surrogate}]/gu, ""),
     status: STATUSES.find((status) => status === search.get("status")) ?? null,
     page: Number.isInteger(page) && page > 0 && page < 1e6 ? page : 1,
   };
