@@ -63,10 +63,15 @@ export async function openPage(browser: Browser, options: BrowserContextOptions 
 /** Signs in by the form and waits for the workspace's home. */
 export async function signIn(page: Page, who: Who): Promise<void> {
   await page.goto("/sign-in");
+  await fillSignIn(page, who);
+  await page.waitForURL(`**/${WORKSPACE}`);
+}
+
+/** Fills and sends the sign-in form that is open. */
+export async function fillSignIn(page: Page, who: Who): Promise<void> {
   await page.getByLabel("E-mail").fill(emailOf(who));
   await page.getByLabel("Password").fill(process.env.SWEEPWRIGHT_DEMO_PASSWORD || "log-ratio-bench-7");
   await page.getByRole("button", { name: "Sign in" }).click();
-  await page.waitForURL(`**/${WORKSPACE}`);
 }
 
 function emailOf(who: Who): string {

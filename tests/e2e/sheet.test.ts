@@ -4,6 +4,7 @@ import {
   baseUrl,
   expectAccessible,
   expectNoSidewaysScroll,
+  fillSignIn,
   launchBrowser,
   openPage,
   picture,
@@ -173,6 +174,22 @@ test("a tab that dies loses nothing: the next visit offers the text", async () =
   await notice.getByRole("button", { name: "Restore it" }).click();
   await expect.poll(() => shownText(next), PATIENT).toContain("let precious = 1 V");
   expect(await notice.count()).toBe(0);
+});
+
+test("a writer who was signed out elsewhere is told so, signs in, and finds the text again", async () => {
+  const { page, id } = await onSheet("Signed out");
+  await typeAtEnd(page, "let precious = 1 V\n");
+  await page.getByText("draft on revision 1").waitFor();
+  await page.context().clearCookies();
+  await save(page);
+  const notice = page.getByRole("alert").filter({ hasText: "The revision was not saved" });
+  await notice.getByRole("link", { name: "Sign in" }).click();
+  await page.waitForURL(/\/sign-in\?next=/);
+  await fillSignIn(page, "erik");
+  await page.waitForURL((url) => url.pathname.endsWith(id));
+  await editorOf(page);
+  await page.getByRole("button", { name: "Restore it" }).click();
+  await expect.poll(() => shownText(page), PATIENT).toContain("let precious = 1 V");
 });
 
 test("the way out for the Tab key, which is written beside the editor, works", async () => {

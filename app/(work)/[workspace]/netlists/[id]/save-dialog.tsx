@@ -14,7 +14,7 @@ export function SaveDialog({ sheet }: { readonly sheet: SheetState }) {
   const submit = (event: FormEvent<HTMLFormElement>) => {
     event.preventDefault();
     const message = String(new FormData(event.currentTarget).get("message") ?? "").trim();
-    void sheet.save(message).then((done) => done && openSave(false));
+    void sheet.save(message);
   };
 
   return (

@@ -77,8 +77,8 @@ export function useSheet({ workspace, netlistId, latest, mayQueue }: Asked) {
     setWorking(null);
   };
 
-  const save = async (message: string): Promise<boolean> => {
-    if (!mayQueue || busy !== null) return false;
+  const save = async (message: string): Promise<void> => {
+    if (!mayQueue || busy !== null) return;
     setRemark(null);
     setWorking("saving");
     const now = settle();
@@ -87,10 +87,9 @@ export function useSheet({ workspace, netlistId, latest, mayQueue }: Asked) {
       `/api/v1/netlists/${netlistId}/revisions`,
       body,
     );
-    if (!answer.ok) {
-      await failed("The revision was not saved", answer);
-      return answer.status === 409;
-    }
+    // Before the remark comes: behind an open dialog nobody could read it.
+    openSave(false);
+    if (!answer.ok) return failed("The revision was not saved", answer);
     setWorking(null);
     const { revision, hash, changed: made } = answer.body;
     setSaved({ ...saved, text: now, revision, hash });
@@ -99,7 +98,6 @@ export function useSheet({ workspace, netlistId, latest, mayQueue }: Asked) {
       setRemark({ tone: "plain", title: `The text means the same as revision ${revision}`, detail });
     }
     router.refresh();
-    return true;
   };
 
   /** Puts another text on the sheet; the one that stands there can be had back by undo. */
