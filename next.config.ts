@@ -21,6 +21,8 @@ const config: NextConfig = {
   distDir,
   poweredByHeader: false,
   reactStrictMode: true,
+  // No picture here needs Next.js's service that fetches and scales pictures for whoever asks.
+  images: { unoptimized: true },
   // Packages that must stay as they are on disk: they load files of their own or are native.
   serverExternalPackages: [
     "pg",

@@ -39,10 +39,7 @@ export const config = {
   matcher: [
     {
       source: "/((?!api/|_next/static/|_next/image/|icon.svg|favicon.ico).*)",
-      missing: [
-        { type: "header", key: "next-router-prefetch" },
-        { type: "header", key: "purpose", value: "prefetch" },
-      ],
+      missing: [{ type: "header", key: "next-router-prefetch" }],
     },
   ],
 };

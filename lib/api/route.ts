@@ -15,11 +15,17 @@ export function route<P>(work: (request: Request, params: P) => Promise<unknown>
     try {
       requireSameOrigin(request);
       const answer = await work(request, await params);
-      return answer instanceof Response ? answer : json(answer);
+      return answer instanceof Response ? kept(answer) : json(answer);
     } catch (error) {
       return problem(error);
     }
   };
+}
+
+/** `response`, which no cache keeps unless it says so itself. */
+function kept(response: Response): Response {
+  if (!response.headers.has("cache-control")) response.headers.set("cache-control", "private, no-store");
+  return response;
 }
 
 /** `value` as a JSON answer that no shared cache keeps. */

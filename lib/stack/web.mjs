@@ -1,5 +1,6 @@
 import { createServer } from "node:http";
 import next from "next";
+import { arrive } from "./arrival.mjs";
 
 /**
  * The web service: the built pages behind Node's own server (Next.js's guide "Custom Server"). It is ours for one reason:
@@ -15,7 +16,12 @@ const handle = app.getRequestHandler();
 await app.prepare();
 
 const server = createServer((request, response) => {
-  if (!behindProxy) request.headers["x-forwarded-for"] = request.socket.remoteAddress ?? "unknown";
+  const refused = arrive(request, behindProxy);
+  if (refused !== null) {
+    response.writeHead(refused, { "content-type": "text/plain", connection: "close" });
+    response.end(refused === 405 ? "This method is not answered.\n" : "This is no address of a page.\n");
+    return;
+  }
   handle(request, response).catch((error) => {
     console.error("A request broke off.", error);
     if (!response.headersSent) response.writeHead(500);

@@ -1,6 +1,7 @@
 import { afterEach, beforeEach, describe, expect, it, vi } from "vitest";
 import { readJson } from "@/lib/api/body";
 import { alreadyHas } from "@/lib/api/etag";
+import { json, route } from "@/lib/api/route";
 import { requireSameOrigin } from "@/lib/api/same-origin";
 
 beforeEach(() => void vi.stubEnv("NEXTAUTH_URL", "https://bench.example"));
@@ -39,6 +40,27 @@ describe("requireSameOrigin", () => {
     ["GET", "anywhere, when nothing changes", { cookie, origin: "https://evil.example" }],
   ])("lets %s from %s through", (method, _, headers) => {
     expect(() => requireSameOrigin(request(method, headers))).not.toThrow();
+  });
+});
+
+describe("route", () => {
+  const ask = async (answer: unknown) => {
+    const response = await route(async () => answer)(request("GET", {}), { params: Promise.resolve({}) });
+    return response.headers.get("cache-control");
+  };
+
+  it("lets no shared cache keep an answer, whoever made it", async () => {
+    expect(await ask({ rows: [] })).toBe("private, no-store");
+    expect(await ask(new Response("a page of sign-in"))).toBe("private, no-store");
+    expect(await ask(new Response(null, { status: 302, headers: { location: "/" } }))).toBe(
+      "private, no-store",
+    );
+  });
+
+  it("leaves an answer what it says of itself", async () => {
+    expect(await ask(json({}, { headers: { "cache-control": "private, no-cache" } }))).toBe(
+      "private, no-cache",
+    );
   });
 });
 

@@ -38,6 +38,11 @@ describe("every page", () => {
     expect(tags.filter((tag) => !tag.includes(`nonce="${nonce}"`))).toEqual([]);
   });
 
+  it("carries it also when a browser fetches it ahead of a visit", async () => {
+    const ahead = await fetch(`${baseUrl()}/sign-in`, { headers: { purpose: "prefetch" } });
+    expect(policyOf(ahead).get("default-src")).toEqual(["'self'"]);
+  });
+
   it("cannot be framed, is not sniffed and tells no other site where it came from", async () => {
     for (const path of ["/", "/sign-in", "/api/health"]) {
       const { headers } = await fetch(baseUrl() + path);
@@ -46,6 +51,17 @@ describe("every page", () => {
       expect(headers.get("referrer-policy")).toBe("strict-origin-when-cross-origin");
       expect(headers.get("x-powered-by")).toBeNull();
     }
+  });
+});
+
+describe("the server", () => {
+  it("fetches and scales no pictures for others", async () => {
+    const query = new URLSearchParams({ url: "/icon.svg", w: "64", q: "75" });
+    expect((await fetch(`${baseUrl()}/_next/image?${query}`)).status).toBe(404);
+  });
+
+  it("answers an address that is none with 400", async () => {
+    expect((await fetch(`${baseUrl()}/api/v1/runs/%E0%A4%A`)).status).toBe(400);
   });
 });
 
