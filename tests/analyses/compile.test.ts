@@ -3,9 +3,9 @@ import { describe, expect, test } from "vitest";
 import { compile } from "@/lib/analyses/compile";
 import { placeOnAxes } from "@/lib/analyses/plan";
 
-const EXAMPLES = readdirSync("examples").map(
-  (name) => [name, readFileSync(`examples/${name}`, "utf8")] as const,
-);
+const EXAMPLES = readdirSync("examples")
+  .filter((name) => name.endsWith(".swn"))
+  .map((name) => [name, readFileSync(`examples/${name}`, "utf8")] as const);
 
 describe("compiling", () => {
   test.each(EXAMPLES)("gives a job and no diagnostic: %s", (_, text) => {
