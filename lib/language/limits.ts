@@ -7,7 +7,7 @@ export const MOST_DEPTH = 256;
 /** Blocks within blocks. */
 export const MOST_BLOCK_DEPTH = 16;
 /** Words and values that the instances of blocks may unfold to. */
-export const MOST_UNFOLDED = 60_000;
+export const MOST_UNFOLDED = 30_000;
 /** UTF-16 units of all shelves that are fetched for a file, and what each counts for at least. */
 export const MOST_SHELF_TEXT = 2_097_152;
 export const LEAST_SHELF_TEXT = 4_096;

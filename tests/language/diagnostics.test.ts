@@ -31,7 +31,7 @@ function expectProblem(problem: Problem, diagnose: (text: string) => Diagnostic[
   expect(diagnose(mended).map((one) => one.code)).not.toContain(problem.code);
 }
 
-describe("each problem of a text is found once, at its place, in one sentence", () => {
+describe("each problem of a text is found once, at its place, in one sentence", { timeout: 60_000 }, () => {
   test.each([...LANGUAGE_PROBLEMS, ...BLOCK_PROBLEMS, ...LAW_PROBLEMS, ...CONTRACT_PROBLEMS])(
     "$code: $text",
     (problem) => {
