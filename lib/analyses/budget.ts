@@ -47,7 +47,7 @@ const MOST_WORK = 2_000_000;
 export function budgetsOf(job: Job): Budget[] | null {
   const { design, plan, circuit } = job;
   const points = plan.points / (plan.draws + 1);
-  if (design.reads.length === 0) return [];
+  if (design.reads.length === 0 || !isToleranced(design)) return [];
   const toleranced = design.elements.length + design.lets.length;
   if (points * Math.max(1, plan.traces.length) * (toleranced + circuit.size) > MOST_WORK) return null;
   const found = sensitivitiesOf(job);
@@ -73,6 +73,12 @@ export function budgetsOf(job: Job): Budget[] | null {
           ];
         }),
   );
+}
+
+function isToleranced({ knobs, lets, models, elements }: Job["design"]): boolean {
+  const given = [...models, ...elements].flatMap(({ params }) => [...params.values()]);
+  const values = elements.flatMap(({ value }) => (value === null ? [] : [value]));
+  return [...knobs, ...lets, ...given, ...values].some(({ tolerance }) => tolerance !== null);
 }
 
 /** Changes of every reading per half-width of a variable, by reading and row. */
