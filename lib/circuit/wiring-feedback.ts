@@ -1,4 +1,4 @@
-import type { Element } from "@/lib/language/ast";
+import type { Design, Element } from "@/lib/language/ast";
 import type { Report } from "@/lib/language/report";
 import { components } from "./strong-components";
 import { UnionFind } from "./union-find";
@@ -46,18 +46,26 @@ export function checkFeedback(wiring: Wiring, ideal: ReadonlySet<Element>, repor
     const sensed = netsSensed(element, named).map((name) => numbers.get(name)!);
     for (const pin of Object.keys(element.pins)) lead(sensed, net(element, pin));
   }
+  const limited = limitedAmplifiers(design);
   const component = components(wiring.nets.length, (n) => edges.get(n) ?? []);
   for (const amplifier of amplifiers) {
     // An output on a net that does not move has been reported as a second driver.
     if (!moves(net(amplifier, "out"))) continue;
     const out = component[joined.find(net(amplifier, "out"))];
     const fedBack = inputsOf(amplifier, wiring).some((n) => moves(n) && component[joined.find(n)] === out);
-    if (!fedBack) reportOpenLoop(amplifier, ideal.has(amplifier), report);
+    if (!fedBack && !limited.has(amplifier)) reportOpenLoop(amplifier, ideal.has(amplifier), report);
   }
 }
 
 function inputsOf(amplifier: Element, { net }: Wiring): number[] {
   return [net(amplifier, "plus"), net(amplifier, "minus")];
+}
+
+/** Amplifiers with both limits, which may well run open as comparators. */
+function limitedAmplifiers({ models, elements }: Design): ReadonlySet<Element> {
+  const both = models.filter(({ params }) => params.has("out_low") && params.has("out_high"));
+  const limited = new Set(both.map(({ name }) => name));
+  return new Set(elements.filter(({ model }) => limited.has(model ?? "")));
 }
 
 /** Open loop an ideal amplifier has no defined output; one with a gain merely has a very large one. */

@@ -50,6 +50,13 @@ describe("laws and gains in the wiring", () => {
     expect(problemsOf(two("gain = 1e5, R_out = 50 Ω"))).toEqual([]);
   });
 
+  test("an amplifier with both limits may run open as a comparator", () => {
+    const open = (model: string) =>
+      `model real : opamp { ${model} }\nA1 : real { plus = in, minus = ground, out = o }\no -- R2 : resistor 1 kΩ -- ground`;
+    expect(problemsOf(open("gain = 1e5, out_low = -12 V"))[0]).toMatch(/^WIR6 A1/);
+    expect(problemsOf(open("gain = 1e5, out_low = -12 V, out_high = 12 V"))).toEqual([]);
+  });
+
   test("the output of a gain drives its net, alone", () => {
     expect(problemsOf("G1 : gain { plus = in, minus = ground, out = in, ratio = 2 }")[0]).toMatch(/^WIR8 G1/);
     const chain =
