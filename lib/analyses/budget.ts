@@ -23,6 +23,8 @@ export interface BudgetPart {
 export interface Budget {
   readonly reading: string;
   readonly unit: string;
+  /** The place of its value among those of the reading. */
+  readonly row: number;
   readonly at: readonly { readonly knob: string; readonly unit: string; readonly value: number }[];
   readonly nominal: number;
   /** The reading with every value at that end of its tolerance which makes it least and most, to first order. */
@@ -69,7 +71,14 @@ export function budgetsOf(job: Job): Budget[] | null {
             return { knob, unit, value: values[place]! };
           });
           return [
-            { reading: reading.name, unit: reading.unit, at, nominal: value, ...budgetOf(value, of, found) },
+            {
+              reading: reading.name,
+              unit: reading.unit,
+              row,
+              at,
+              nominal: value,
+              ...budgetOf(value, of, found),
+            },
           ];
         }),
   );

@@ -192,11 +192,13 @@ describe("a budget", () => {
 sweep k from 1 V to 2 V, 3 points
 sweep temperature over 0 °C, 25 °C
 read top = highest(o.v)
+read warm = highest(o.v) at temperature = 25 °C
 read bend = deviation(o.v)`;
     const found = budgets(text);
-    expect(found.map(({ reading, at }) => [reading, at[0]!.value])).toEqual([
-      ["top", 273.15],
-      ["top", 298.15],
+    expect(found.map(({ reading, row, at }) => [reading, row, at[0]!.value])).toEqual([
+      ["top", 0, 273.15],
+      ["top", 1, 298.15],
+      ["warm", 1, 298.15],
     ]);
   });
 

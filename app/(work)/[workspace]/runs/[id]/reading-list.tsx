@@ -40,7 +40,7 @@ export function ReadingList({ readings, axes, budgets }: Props) {
                 <tr key={`${reading.name} ${row}`}>
                   <Cell>
                     {reading.name} <span className="text-quiet text-xs">{settingOf(axes, row)}</span>
-                    <Costs budget={budgets.filter((one) => one.reading === reading.name)[row]} />
+                    <Costs budget={budgets.find((one) => one.reading === reading.name && one.row === row)} />
                   </Cell>
                   <Cell figure>{formatValue(reading.values[row] ?? null, reading.unit)}</Cell>
                   {spread && <Cell figure>{spreadOf(reading, settings, row)}</Cell>}
@@ -54,7 +54,7 @@ export function ReadingList({ readings, axes, budgets }: Props) {
   );
 }
 
-/** What costs a reading the most, to first order. */
+/** The worst case of a reading and what costs it the most, to first order. */
 function Costs({ budget }: { readonly budget: Budget | undefined }) {
   if (budget === undefined) return null;
   const named = budget.parts.slice(0, NAMED).filter(({ share }) => share >= 0.005);
@@ -62,7 +62,12 @@ function Costs({ budget }: { readonly budget: Budget | undefined }) {
   const words = named.map(
     ({ part, parameter, share }) => `${part}${parameter && ` ${parameter}`} ${Math.round(100 * share)} %`,
   );
-  return <p className="text-quiet text-xs">Of its spread: {words.join(", ")}</p>;
+  const [low, high] = [budget.low, budget.high].map((value) => formatValue(value, budget.unit));
+  return (
+    <p className="text-quiet text-xs">
+      Worst case {low} to {high}; of its spread: {words.join(", ")}
+    </p>
+  );
 }
 
 function settingOf(axes: readonly AxisDocument[], row: number): string {
