@@ -5,6 +5,14 @@ import type { State } from "./state";
 /** Statements of generated code at most: the compiler behind it gives up on functions several times as long. */
 const MOST_STATEMENTS = 1500;
 
+/** One term of a sum that ends up in an array; without operator, the whole of it. */
+interface Sum {
+  readonly array: "r" | "s" | "j";
+  readonly index: number;
+  readonly operator: "+" | "-" | "";
+  readonly by: string;
+}
+
 type Maker = (
   state: State,
   constantSlopes: Float64Array,
@@ -22,11 +30,9 @@ type Maker = (
  * there is nothing, not even a number: figures are read from the parts.
  */
 export class AssemblyCode {
-  private readonly lines: string[] = [];
+  private readonly lines: (string | Sum)[] = [];
   private readonly objects: object[] = [];
-  private readonly rows = new Set<number>();
   private readonly voltages = new Set<number>();
-  private readonly places = new Set<number>();
   private readonly early: string[] = [];
   private exponents = 0;
   private locals = 0;
@@ -88,6 +94,7 @@ export class AssemblyCode {
   }
 
   private known(i: number): number {
+    if (!this.voltages.has(i)) this.add(`const x${i}=x[${i}],l${i}=l[${i}];`);
     this.voltages.add(i);
     return i;
   }
@@ -95,46 +102,39 @@ export class AssemblyCode {
   /** As `flow` of a state; `amperes` is the name of a variable. */
   flow(a: number, b: number, amperes: string): void {
     const size = this.let(`Math.abs(${amperes})`);
-    if (a !== this.ground) this.add(`r${this.row(a)}+=${amperes};s${a}+=${size};`);
-    if (b !== this.ground) this.add(`r${this.row(b)}-=${amperes};s${b}+=${size};`);
+    this.sum("r", a, "+", amperes);
+    this.sum("s", a, "+", size);
+    this.sum("r", b, "-", amperes);
+    this.sum("s", b, "+", size);
   }
 
   /** Adds to the scale of a row. */
   widen(row: number, by: string): void {
-    if (row !== this.ground) this.add(`s${this.row(row)}+=${by};`);
+    this.sum("s", row, "+", by);
   }
 
   /** The mismatch of a branch law, and the magnitudes that it sums. */
   law(row: number, mismatch: string, size: string): void {
-    this.add(`r${this.row(row)}=${mismatch};s${row}=${size};`);
+    this.sum("r", row, "", mismatch);
+    this.sum("s", row, "", size);
   }
 
-  private row(i: number): number {
-    this.rows.add(i);
-    return i;
+  /** Adds to the Jacobian. */
+  slope(place: number, operator: "+" | "-", expression: string): void {
+    if (place !== 0) this.sum("j", place, operator, expression);
   }
 
-  /** Adds to the Jacobian; `operator` is += or -=. */
-  slope(place: number, operator: "+=" | "-=", expression: string): void {
-    if (place === 0) return;
-    this.places.add(place);
-    this.add(`j${place}${operator}${expression};`);
+  private sum(array: Sum["array"], index: number, operator: Sum["operator"], by: string): void {
+    if (array !== "j" && index === this.ground) return;
+    if (!this.isFull) this.lines.push({ array, index, operator, by });
   }
 
-  /** The code as a function over a state; null where it is too long, or none may be generated here. */
+  /**
+   * The code as a function over a state whose Jacobian holds the constant slopes wherever none but them is added; null where it
+   * is too long, or none may be generated here.
+   */
   compile(state: State, constantSlopes: Float64Array): (() => void) | null {
     if (this.lines.length + constantSlopes.length > MOST_STATEMENTS) return null;
-    const heads: string[] = [];
-    const tails: string[] = [];
-    for (const i of this.voltages) heads.push(`const x${i}=x[${i}],l${i}=l[${i}];`);
-    for (const place of this.places) heads.push(`let j${place}=c[${place}];`);
-    for (let i = 0; i < this.ground; i++) {
-      if (this.rows.has(i)) heads.push(`let r${i}=0,s${i}=0;`);
-      tails.push(this.rows.has(i) ? `r[${i}]=r${i};s[${i}]=s${i};` : `r[${i}]=0;s[${i}]=0;`);
-    }
-    for (let place = 1; place < constantSlopes.length; place++) {
-      tails.push(`j[${place}]=${this.places.has(place) ? `j${place}` : `c[${place}]`};`);
-    }
     const text = [
       "const {x,low:l,residual:r,scale:s,jacobian:j}=state;",
       ...this.objects.map((_, k) => `const o${k}=objects[${k}];`),
@@ -142,14 +142,39 @@ export class AssemblyCode {
       "const share=state.share;",
       ...this.early,
       this.exponents === 0 ? "" : `exponentials(Y,E,T,${this.exponents});`,
-      ...heads,
-      ...this.lines,
-      ...tails,
+      ...this.written(),
       "};",
     ].join("\n");
     const maker = compiled<Maker>("state,c,objects,Y,E,T,exponentials,expm1", text);
     if (maker === null) return null;
     const array = () => new Float64Array(this.exponents);
     return maker(state, constantSlopes, this.objects, array(), array(), array(), exponentials, expm1);
+  }
+
+  /** The lines with each sum in a variable from its first to its last term, so that few are alive at a time. */
+  private written(): string[] {
+    const remaining = new Map<string, number>();
+    const nameOf = ({ array, index }: Pick<Sum, "array" | "index">) => `${array}${index}`;
+    for (const line of this.lines) {
+      if (typeof line !== "string") remaining.set(nameOf(line), (remaining.get(nameOf(line)) ?? 0) + 1);
+    }
+    const begun = new Set<string>();
+    const lines = this.lines.map((line) => {
+      if (typeof line === "string") return line;
+      const { array, index, operator, by } = line;
+      const name = nameOf(line);
+      const before = begun.has(name) ? name : array === "j" ? `c[${index}]` : "0";
+      const value = operator === "" ? by : `${before}${operator}(${by})`;
+      const left = remaining.get(name)! - 1;
+      remaining.set(name, left);
+      if (left === 0) return `${array}[${index}]=${value};`;
+      if (begun.has(name)) return `${name}=${value};`;
+      begun.add(name);
+      return `let ${name}=${value};`;
+    });
+    for (let i = 0; i < this.ground; i++) {
+      for (const array of ["r", "s"]) if (!remaining.has(`${array}${i}`)) lines.push(`${array}[${i}]=0;`);
+    }
+    return lines;
   }
 }

@@ -55,8 +55,11 @@ export class Assembly {
   /** Residual, scale and Jacobian at the present unknowns and linearisation. */
   run(): void {
     const { state, others } = this;
-    if (this.written !== null) this.written();
-    else this.add();
+    if (this.written === null) this.add();
+    else {
+      if (others.length > 0) state.jacobian.set(this.constantSlopes);
+      this.written();
+    }
     for (let k = 0; k < others.length; k++) others[k]!.addTo(state);
     if (++this.count === FIRST_LISTED) this.compile();
   }

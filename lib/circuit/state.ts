@@ -11,7 +11,7 @@ export interface State {
   readonly residual: Float64Array;
   /** The sum of the magnitudes that `residual` sums. */
   readonly scale: Float64Array;
-  /** Values of the Jacobian, places as in the pattern. */
+  /** Values of the Jacobian, places as in the pattern; read only, but for the assembly. */
   readonly jacobian: Float64Array;
   /** The part of every source that acts; 1 but while sources are ramped. */
   share: number;

@@ -92,6 +92,7 @@ export class System {
   private gatherConstantSlopes(): void {
     this.constantSlopes.fill(0);
     for (const part of this.parts) part.addConstantSlopes(this.constantSlopes);
+    this.state.jacobian.set(this.constantSlopes);
   }
 
   /** Residual, scale and Jacobian at the present unknowns and linearisation. */

@@ -78,12 +78,7 @@ export class Steps {
   /** Assembly alone. */
   arrive(k: number): System {
     const { system } = this;
-    const { x, low } = system.state;
-    const from = this.each[k % POINTS]!;
-    for (let j = 0; j < from.length; j++) {
-      x[j] = from[j]!;
-      low[j] = 0;
-    }
+    system.state.x.set(this.each[k % POINTS]!);
     system.settle();
     system.assemble();
     return system;

@@ -121,10 +121,10 @@ export class DiodePart implements JunctionPart, Proof {
     const g = code.let(`${at}.Is/${at}.eta*${whole}`);
     code.add(`${law}.i=${i};${law}.g=${g};`);
     code.flow(anode, cathode, code.let(`${i}+${g}*(${code.across(anode, cathode)}-${v})`));
-    code.slope(places[0], "+=", g);
-    code.slope(places[1], "-=", g);
-    code.slope(places[2], "-=", g);
-    code.slope(places[3], "+=", g);
+    code.slope(places[0], "+", g);
+    code.slope(places[1], "-", g);
+    code.slope(places[2], "-", g);
+    code.slope(places[3], "+", g);
     return true;
   }
 

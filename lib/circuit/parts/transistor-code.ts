@@ -51,13 +51,13 @@ export function writeTransistor(code: AssemblyCode, part: string, where: Transis
   code.widen(c, intoC);
   code.widen(b, intoB);
   code.widen(e, `${intoC}+${intoB}`);
-  code.slope(places[0]!, "-=", icR);
-  code.slope(places[1]!, "+=", `${icF}+${icR}`);
-  code.slope(places[2]!, "-=", icF);
-  code.slope(places[3]!, "-=", ibR);
-  code.slope(places[4]!, "+=", `${ibF}+${ibR}`);
-  code.slope(places[5]!, "-=", ibF);
-  code.slope(places[6]!, "+=", `${icR}+${ibR}`);
-  code.slope(places[7]!, "-=", `(${icF}+${icR}+${ibF}+${ibR})`);
-  code.slope(places[8]!, "+=", `${icF}+${ibF}`);
+  code.slope(places[0]!, "-", icR);
+  code.slope(places[1]!, "+", `${icF}+${icR}`);
+  code.slope(places[2]!, "-", icF);
+  code.slope(places[3]!, "-", ibR);
+  code.slope(places[4]!, "+", `${ibF}+${ibR}`);
+  code.slope(places[5]!, "-", ibF);
+  code.slope(places[6]!, "+", `${icR}+${ibR}`);
+  code.slope(places[7]!, "-", `(${icF}+${icR}+${ibF}+${ibR})`);
+  code.slope(places[8]!, "+", `${icF}+${ibF}`);
 }

@@ -53,36 +53,45 @@ function solveText(shape: SparseShape, plan: Elimination): string {
   ].join("\n");
 }
 
+/** A value is fetched where it is first needed and kept where it is final, so that few are alive at a time. */
 function factorText({ rows }: SparseShape, plan: Elimination): string {
   const { factor, pivots, places, changed, belowRows } = plan;
   const lines = Array.from(changed, (row) => `let g${row}=0;`);
-  for (let k = 1; k < places; k++) lines.push(`let v${k}=${k < rows.length ? `a[${k}]` : 0};`);
-  const kept: string[] = [];
+  const fetched = new Set<number>();
+  const fetch = (place: number) => {
+    if (!fetched.has(place)) lines.push(`let v${place}=${place < rows.length ? `a[${place}]` : 0};`);
+    fetched.add(place);
+  };
   let at = 0;
   let s = 0;
   let products = 0;
   for (let k = 0; k < pivots.length; k++) {
-    lines.push(`const p${k}=1/v${factor[at]};`);
-    kept.push(`f[${places + k}]=p${k};`);
+    const pivot = factor[at]!;
     const below = factor[at + 1]!;
     const right = factor[at + 2]!;
     const row = at + 3;
     at = row + right;
-    for (let j = 0; j < right; j++) kept.push(keep(factor[row + j]!));
+    fetch(pivot);
+    lines.push(`const p${k}=1/v${pivot};`, `f[${places + k}]=p${k};`);
+    for (let j = 0; j < right; j++) {
+      fetch(factor[row + j]!);
+      lines.push(keep(factor[row + j]!));
+    }
     for (let i = 0; i < below; i++) {
       const multiplier = factor[at++]!;
-      lines.push(`v${multiplier}*=p${k};`);
-      kept.push(keep(multiplier));
+      fetch(multiplier);
+      lines.push(`v${multiplier}*=p${k};`, keep(multiplier));
       const target = belowRows[s++];
       for (let j = 0; j < right; j++) {
         const q = `q${products++}`;
+        fetch(factor[at + j]!);
         lines.push(`const ${q}=v${multiplier}*v${factor[row + j]};`);
         lines.push(`v${factor[at + j]}-=${q};g${target}+=Math.abs(${q});`);
       }
       at += right;
     }
   }
-  return [...lines, ...kept].join("\n");
+  return lines.join("\n");
 }
 
 function keep(place: number): string {
@@ -105,9 +114,15 @@ function substitutionText(
   const { rowOf, columnOf, rowStarts, rowPlaces, rowColumns, belowStarts, belowPlaces, belowRows } = plan;
   const size = rowOf.length;
   const lines: string[] = [];
-  for (let i = 0; i < size; i++) lines.push(`let w${i}=-b[${i}];`);
+  const fetched = new Set<number>();
+  const fetch = (row: number) => {
+    if (!fetched.has(row)) lines.push(`let w${row}=-b[${row}];`);
+    fetched.add(row);
+  };
   for (let k = 0; k < size; k++) {
+    fetch(rowOf[k]!);
     for (let s = belowStarts[k]!; s < belowStarts[k + 1]!; s++) {
+      fetch(belowRows[s]!);
       lines.push(`w${belowRows[s]}-=${value(belowPlaces[s]!)}*w${rowOf[k]};`);
     }
   }
