@@ -1,6 +1,7 @@
 import type { Proof } from "@/lib/circuit/part";
 import type { System } from "@/lib/circuit/system";
 import { UNIT } from "@/lib/devices/rounding";
+import { DenseFactors } from "./dense";
 import { Inverse } from "./inverse";
 import type { Linear } from "./linear";
 
@@ -8,6 +9,8 @@ import type { Linear } from "./linear";
 const BALL = 1e-9;
 const SMALLEST_BALL = 1e-15;
 const LARGEST_BALL = 1e-2;
+/** V. No radius is less, so that a circuit at rest, whose voltages have no error at all, leaves its currents one. */
+const LEAST_RADIUS = 1e-24;
 const MOST_TRIES = 6;
 /** A neighbour's inverse serves while it leaves less than this of the unit matrix; the bound is then at most twice as wide. */
 const WORN = 0.5;
@@ -47,13 +50,13 @@ export class Certificate {
 
   constructor(
     private readonly system: System,
-    linear: Linear,
+    private readonly linear: Linear,
   ) {
     const { circuit, parts, pattern } = system;
     const { size } = circuit;
     this.parts = parts.flatMap(({ proof }) => (proof === undefined || proof === "linear" ? [] : [proof]));
     this.canProve = size <= MOST_UNKNOWNS && parts.every(({ proof }) => proof !== undefined);
-    this.inverse = new Inverse(pattern, linear);
+    this.inverse = new Inverse(pattern);
     this.isVoltage = circuit.unknowns.map(({ unit }) => unit === "V");
     this.roundings = new Float64Array(size + 1).fill(16);
     for (const { element } of parts) {
@@ -80,10 +83,11 @@ export class Certificate {
     const isReused = this.inverse.isKnown;
     let radius = isReused ? this.search(WORN) : Number.NaN;
     if (Number.isNaN(radius)) {
-      this.inverse.renew(this.system.state.jacobian);
+      this.inverse.renew(this.system.state.jacobian, this.linear);
       this.weigh();
       radius = this.search(1);
     }
+    if (Number.isNaN(radius)) radius = this.searchDensely();
     if (Number.isNaN(radius)) this.inverse.forget();
     return radius > SUSPECT && !this.isExplained(radius) ? Number.NaN : radius;
   }
@@ -105,6 +109,17 @@ export class Certificate {
       doubt[i] = Math.abs(residual[i]!) * residualShare + roundings[i]! * UNIT * scale[i]!;
     }
     for (let k = 0; k < parts.length; k++) parts[k]!.addDoubt(state, doubt);
+  }
+
+  /** Once more with pivots chosen row by row, where sparse ones make a poor inverse. */
+  private searchDensely(): number {
+    const { jacobian } = this.system.state;
+    const factors = DenseFactors.of(this.system.pattern, jacobian);
+    if (factors === null) return Number.NaN;
+    const solveAgain = (residual: Float64Array, step: Float64Array) => factors.solve(residual, step);
+    this.inverse.renew(jacobian, { solveAgain });
+    this.weigh();
+    return this.search(1);
   }
 
   /** Weights in proportion to Y; at least a part of 1 V, or of the current that 1 V makes in the rows that a current enters. */
@@ -161,19 +176,26 @@ export class Certificate {
     for (let k = 0; k < parts.length; k++) parts[k]!.addSpread(state, ball, weights, spread);
     inverse.bound(state.jacobian, weights, this.roundings, this.doubt, spread);
     const { left, error, change } = inverse;
-    let radius = Number.MIN_VALUE;
+    let radius = LEAST_RADIUS;
+    let fits = true;
     for (let i = 0; i < isVoltage.length; i++) {
       if (!isVoltage[i]) continue;
       const weight = weights[i]!;
+      const moved = (left[i]! + change[i]!) * WIDENED;
+      if (most === 1 && moved >= WORN * weight && SPARE * moved <= 1) {
+        // A net that hardly errs by itself is moved by others, and is given room for that.
+        weights[i] = SPARE * moved;
+        fits = false;
+        continue;
+      }
       if (!(left[i]! < most * weight)) return FAR;
-      const share = weight - (left[i]! + change[i]!) * WIDENED;
+      const share = weight - moved;
       if (!(share > 0)) return change[i]! > left[i]! ? LARGE : FAR;
       const needed = (error[i]! / share) * WIDENED;
       if (needed > radius) radius = needed;
     }
     if (!(radius < Number.POSITIVE_INFINITY)) return FAR;
     if (radius > ball) return { kind: "ball too small", radius };
-    let fits = true;
     for (let i = 0; i < isVoltage.length; i++) {
       if (isVoltage[i]) continue;
       const needed = (error[i]! / radius + left[i]! + change[i]!) * WIDENED;

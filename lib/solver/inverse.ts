@@ -27,10 +27,7 @@ export class Inverse {
   private isWeighed = false;
   private values = new Float64Array(0);
 
-  constructor(
-    shape: SparseShape,
-    private readonly linear: Linear,
-  ) {
+  constructor(shape: SparseShape) {
     const { size, rows, columns } = shape;
     this.size = size;
     const vector = () => new Float64Array(size);
@@ -55,9 +52,9 @@ export class Inverse {
     this.isKnown = false;
   }
 
-  /** Inverts with the factors of the linear solver's last solution, which belong to `jacobian` or a close neighbour of it. */
-  renew(jacobian: Float64Array): void {
-    const { size, unit, linear, column } = this;
+  /** Inverts with the factors of a linear solver's last solution, which belong to `jacobian` or a close neighbour of it. */
+  renew(jacobian: Float64Array, linear: Pick<Linear, "solveAgain">): void {
+    const { size, unit, column } = this;
     if (this.values.length === 0) this.values = new Float64Array(size * size);
     const { values } = this;
     for (let k = 0; k < size; k++) {

@@ -1,5 +1,6 @@
 import type { State } from "@/lib/circuit/state";
 import { advance } from "@/lib/circuit/state";
+import type { System } from "@/lib/circuit/system";
 import { isAccepted } from "./acceptance";
 import { type Attempt, type Bench, polish } from "./newton";
 
@@ -11,7 +12,7 @@ const CLAMP = 0.1;
 
 /**
  * Newton's method on the laws themselves from the present unknowns, every step shortened until the sum of squares of the residual,
- * each row in units of what it sums where the step begins, falls as Armijo's rule asks. At most `most` iterations.
+ * each row in units of what it sums and what the step changes in it, falls as Armijo's rule asks. At most `most` iterations.
  */
 export function lineSearch(bench: Bench, most: number): Attempt {
   const { system, linear, step } = bench;
@@ -30,7 +31,7 @@ export function lineSearch(bench: Bench, most: number): Attempt {
       const polished = polish(bench);
       if (polished >= 0) return { kind: "converged", iterations: iterations + polished, wasSingular: false };
     }
-    for (let i = 0; i < circuit.size; i++) weights[i] = 1 / (state.scale[i]! + Number.MIN_VALUE);
+    weigh(system, step, weights);
     const before = merit(state, weights);
     x.set(state.x);
     low.set(state.low);
@@ -52,6 +53,16 @@ export function lineSearch(bench: Bench, most: number): Attempt {
     }
   }
   return { kind: "iteration limit", iterations: most, wasSingular: false };
+}
+
+/** What each row sums, and what the whole step would change in it; a row that does neither weighs nothing. */
+function weigh({ state, pattern }: System, step: Float64Array, weights: Float64Array): void {
+  const { rows, columns } = pattern;
+  for (let i = 0; i < weights.length; i++) weights[i] = state.scale[i]!;
+  for (let k = 1; k < rows.length; k++) {
+    weights[rows[k]!]! += Math.abs(state.jacobian[k]! * step[columns[k]!]!);
+  }
+  for (let i = 0; i < weights.length; i++) weights[i] = weights[i] === 0 ? 0 : 1 / weights[i]!;
 }
 
 /** Σ (weight_i·F_i)². */
