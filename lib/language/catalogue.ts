@@ -89,6 +89,7 @@ export const CATALOGUE = {
   CAP5: "Too many values to keep",
   CAP7: "Too many readings and requirements",
   CAP8: "Too much to judge",
+  CAP9: "A name that is too long",
   CAP6: "More problems than are listed",
 } as const;
 

@@ -16,6 +16,7 @@ import {
   MOST_SHELF_TEXT,
   MOST_TEXT,
   MOST_VALUES,
+  MOST_WORD,
 } from "./limits";
 import { declareAll, Names } from "./names";
 import { Nominal } from "./nominal";
@@ -27,6 +28,7 @@ import { checkShows } from "./shows";
 import type { Span } from "./span";
 import { SweepCheck } from "./sweeps";
 import type { Netlist } from "./syntax";
+import { quote, type Token } from "./token";
 import { type Known, Typing } from "./typing";
 import { checkValues } from "./values";
 import { Wirer } from "./wired";
@@ -72,7 +74,9 @@ function checkText(
     report.error("CAP1", { from: 0, to: text.length }, message);
     return { netlist: { statements: [] }, design: null, diagnostics: report.sorted() };
   }
-  const { netlist } = parseTokens(tokenize(text, report), text.length, report);
+  const tokens = tokenize(text, report);
+  const { netlist } = parseTokens(tokens, text.length, report);
+  if (hasLongWords(tokens, report)) return { netlist, design: null, diagnostics: report.sorted() };
   const shelves = new Shelves(library, checkShelf, report);
   const imports = shelves.imports(netlist.statements, active);
   const expansion = new Expander(report).file(netlist.statements, imports);
@@ -148,6 +152,16 @@ function checkExpansion(
   }
   const plan = { sweeps, draws, seek, ...contract };
   return { title, knobs, lets, models, elements, nets, netPlaces, ...plan };
+}
+
+/** Reports the words that are too long for names; with them a text is understood no further. */
+function hasLongWords(tokens: readonly Token[], report: Report): boolean {
+  const long = tokens.filter(({ kind, text }) => kind === "word" && text.length > MOST_WORD);
+  for (const word of long) {
+    const message = `${quote(word.text)} has ${count(word.text.length)} characters, and a name can have ${count(MOST_WORD)} at most; shorten it.`;
+    report.error("CAP9", { from: word.from, to: word.to }, message);
+  }
+  return long.length > 0;
 }
 
 /** Tells what belongs to the circuit from what was made to check a block without an instance. */

@@ -2,6 +2,8 @@
 
 /** UTF-16 units of text. */
 export const MOST_TEXT = 262_144;
+/** UTF-16 units of a word: blocks within blocks put names before names, so that long ones would multiply. */
+export const MOST_WORD = 128;
 /** Brackets within brackets, and links in a chain such as a + b + c. */
 export const MOST_DEPTH = 256;
 /** Blocks within blocks. */

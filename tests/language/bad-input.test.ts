@@ -26,6 +26,12 @@ const BAD: readonly (readonly [what: string, text: string, code: string, says: s
   ["10,000 calls inside each other", `${divider}\nlet a = ${"exp(".repeat(10_000)}`, "CAP2", "`let`"],
   ["10,000 minus signs", `${divider}\nlet a = ${"- ".repeat(10_000)}1\nshow out.v`, "CAP2", "`let`"],
   [
+    "a long name before the thousand names of a block",
+    `${divider}\nblock b(a) {\n${Array.from({ length: 900 }, (_, i) => `  a -- R${i} : resistor 1 kΩ -- ground\n`).join("")}}\n${"x".repeat(200_000)} : b { a = in }\nshow out.v`,
+    "CAP9",
+    "shorten it",
+  ],
+  [
     "a loop of voltage elements",
     `${divider}\nin -- V2 : voltage 1 V -- top -- V3 : voltage 1 V -- ground\nshow out.v`,
     "WIR3",

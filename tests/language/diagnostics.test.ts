@@ -3,7 +3,7 @@ import { checkWiring } from "@/lib/circuit/wiring";
 import { CATALOGUE } from "@/lib/language/catalogue";
 import { check } from "@/lib/language/checker";
 import type { Diagnostic } from "@/lib/language/diagnostic";
-import { MOST_ELEMENTS, MOST_TEXT } from "@/lib/language/limits";
+import { MOST_ELEMENTS, MOST_TEXT, MOST_WORD } from "@/lib/language/limits";
 import { WIRING_PROBLEMS } from "@/tests/circuit/problems";
 import { BLOCK_PROBLEMS } from "./block-problems";
 import { CONTRACT_PROBLEMS } from "./contract-problems";
@@ -69,6 +69,15 @@ describe("limits", () => {
     expect(code(`${nets}knob k = 1 V\nsweep k from 1 V to 2 V, 819673 points\nshow n1.v`)).toEqual(["CAP5"]);
   });
 
+  test("CAP9: a name as long as allowed is understood, one character more is not", () => {
+    const named = (length: number) => {
+      const net = "x".repeat(length);
+      return `ground -- V1 : voltage 1 V -- ${net} -- R1 : resistor 1 kΩ -- ground\nshow ${net}.v\n`;
+    };
+    expect(code(named(MOST_WORD))).toEqual([]);
+    expect(code(named(MOST_WORD + 1))).toEqual(["CAP9", "CAP9"]);
+  });
+
   test("CAP6: after two hundred problems the rest is counted", () => {
     const { diagnostics } = check("let = 1\n".repeat(300));
     expect(diagnostics).toHaveLength(201);
@@ -86,6 +95,6 @@ test("every code of the catalogue is produced by a test, and no test knows anoth
     ),
   );
   // Those of `use` are in use.test.ts.
-  for (const code of ["CAP1", "CAP3", "CAP5", "CAP6", "NAM13", "NAM14"]) tested.add(code);
+  for (const code of ["CAP1", "CAP3", "CAP5", "CAP6", "CAP9", "NAM13", "NAM14"]) tested.add(code);
   expect([...tested].sort()).toEqual(Object.keys(CATALOGUE).sort());
 });
