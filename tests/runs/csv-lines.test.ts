@@ -44,4 +44,17 @@ describe("points as comma-separated values", () => {
       "",
     ]);
   });
+
+  it("name the draw of each point where there are draws, the nominal one first", () => {
+    const drawn = [...csvLines({ ...DOCUMENT, axes: DOCUMENT.axes.slice(0, 1), draws: 1 })]
+      .join("")
+      .split("\r\n");
+    expect(drawn[0]).toMatch(/^point,draw,V_in/u);
+    expect(drawn.slice(1, 5).map((line) => line.split(",").slice(0, 3).join(","))).toEqual([
+      "0,0,-0.5",
+      "1,0,0.1",
+      "2,1,-0.5",
+      "3,1,0.1",
+    ]);
+  });
 });

@@ -6,24 +6,26 @@ const PIECE = 1000;
 
 /**
  * A run document as comma-separated values (RFC 4180), in pieces: a head line with the unit in brackets, then a line a point.
- * Values are in coherent SI units with every digit they have; an unsolved value is empty.
+ * Values are in coherent SI units with every digit they have; an unsolved value is empty. Draw 0 is the nominal design.
  */
 export function* csvLines(document: RunDocument): Generator<string, void> {
-  const { axes, traces, points } = document;
+  const { axes, draws, traces, points } = document;
+  const count = points.outcome.length;
+  const ofOneDraw = count / (draws + 1);
   const heads = [
     "point",
+    ...(draws > 0 ? ["draw"] : []),
     ...axes.map(({ knob, unit }) => headed(knob, unit)),
     ...traces.map(({ name, unit }) => headed(name, unit)),
     "outcome",
   ];
   yield `${heads.map(quoted).join(",")}\r\n`;
-  const count = points.outcome.length;
   for (let from = 0; from < count; from += PIECE) {
     let piece = "";
     for (let k = from; k < Math.min(count, from + PIECE); k++) {
       const setting = settingOf(axes, k).map(({ value }) => value);
       const values = traces.map(({ values: column }) => column[k] ?? "");
-      piece += `${[k, ...setting, ...values, points.outcome[k] ?? "not solved"].join(",")}\r\n`;
+      piece += `${[k, ...(draws > 0 ? [Math.floor(k / ofOneDraw)] : []), ...setting, ...values, points.outcome[k] ?? "not solved"].join(",")}\r\n`;
     }
     yield piece;
   }
