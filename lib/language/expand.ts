@@ -2,7 +2,7 @@ import { count, MOST_UNFOLDED } from "./limits";
 import { Ports } from "./ports";
 import type { Report } from "./report";
 import { Rewriter } from "./rewrite";
-import { type BlockDefinition, type BlockStatement, Scope } from "./scope";
+import { type BlockDefinition, type BlockStatement, isKind, Scope } from "./scope";
 import type { Span } from "./span";
 import type { Expression, Setting, Statement, ToleranceSyntax, Word } from "./syntax";
 import { quote } from "./token";
@@ -90,7 +90,8 @@ export class Expander {
   ): void {
     for (const statement of statements) {
       if (this.full()) return;
-      const definition = statement.kind === "device" ? scope.find(statement.of.text)?.block : undefined;
+      const isInstance = statement.kind === "device" && !isKind(statement.of.text);
+      const definition = isInstance ? scope.find(statement.of.text)?.block : null;
       if (statement.kind === "block") {
         this.flat.push({ ...statement, name: scope.declared(statement.name), statements: [] });
         const own = scope.find(statement.name.text)?.block;

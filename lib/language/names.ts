@@ -173,7 +173,8 @@ export class Names {
 
   private isReserved(name: string, meaning: Meaning): boolean {
     if (STATEMENT_WORDS.has(name) || CONSTANTS.has(name) || this.reserved.has(name)) return true;
-    if (meaning === "model") return Object.hasOwn(KINDS, name) || name === "ground" || name === "temperature";
+    if (meaning === "model" || meaning === "block")
+      return Object.hasOwn(KINDS, name) || name === "ground" || name === "temperature";
     return false;
   }
 }

@@ -35,6 +35,8 @@ export const BLOCK_PROBLEMS: readonly Problem[] = [
   { code: "NAM1", text: within("block b(«a», a) {\n}".replace("«a», a", "a, «a»")) },
   { code: "NAM1", text: inBlock("let «a» = 1 V"), says: "in a block" },
   { code: "NAM1", text: inBlock("let k = 1 V\n  let «k» = 1 V") },
+  { code: "NAM2", text: within("block «gain»(a) {\n}") },
+  { code: "NAM2", text: within("block b(«ground») {\n}") },
   { code: "NAM2", text: inBlock("let «min» = 1 V") },
   { code: "NAM2", text: inBlock("knob «temperature» = 20 °C") },
   { code: "NAM3", text: inBlock("let k = 1 V\n  let l = «kk»"), mended: inBlock("let k = 1 V\n  let l = k") },
