@@ -82,7 +82,8 @@ export class Certificate {
     this.gatherDoubt(1);
     const isReused = this.inverse.isKnown;
     let radius = isReused ? this.search(WORN) : Number.NaN;
-    if (Number.isNaN(radius)) {
+    // A worn inverse makes rounding look twice as large, so a suspect radius is seen through a fresh one.
+    if (Number.isNaN(radius) || (isReused && radius > SUSPECT)) {
       this.inverse.renew(this.system.state.jacobian, this.linear);
       this.weigh();
       radius = this.search(1);
@@ -129,7 +130,7 @@ export class Certificate {
     inverse.carry(this.doubt);
     const { error } = inverse;
     const largest = error.reduce((most, one, i) => (isVoltage[i] && one > most ? one : most), 0);
-    const scale = largest > 0 && largest < Number.POSITIVE_INFINITY ? 1 / largest : 1;
+    const scale = largest > LEAST_RADIUS && largest < Number.POSITIVE_INFINITY ? 1 / largest : 1;
     const { rows, columns } = pattern;
     const sums = new Float64Array(weights.length);
     for (let k = 1; k < rows.length; k++) {
