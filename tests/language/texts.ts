@@ -123,6 +123,29 @@ const expression = fc.letrec<{ any: string }>((tie) => ({
   ),
 })).any;
 
+const clause = fc.oneof(
+  fc.constant(""),
+  fc.tuple(ident, expression).map(([a, x]) => ` at  ${a}=${x}`),
+  fc.tuple(ident, expression, expression).map(([a, x, y]) => ` for ${a} in ${x}..${y}`),
+);
+const relation = fc.oneof(
+  fc.constantFrom(" rising", "   falling"),
+  fc.tuple(fc.constantFrom("<=", " >", "≥"), expression).map((parts) => parts.join("")),
+  fc.tuple(expression, expression).map(([x, y]) => ` within ${x}+-${y}`),
+  fc.tuple(expression, expression).map(([x, y]) => ` between ${x}  and ${y}`),
+);
+const tail = fc.constantFrom("", "# why", '  as  "so"', " in 95% of draws", ' in 5 % of draws as "so" # why');
+
+/** Readings and requirements, with and without every clause that neighbours are aligned by. */
+const contract = fc.oneof(
+  fc
+    .tuple(expression, relation, clause, clause, tail)
+    .map(([x, holds, one, two, end]) => `require ${x}${holds}${one}${two}${end}`),
+  fc
+    .tuple(ident, expression, clause, fc.constantFrom("", "  # why"))
+    .map(([a, x, one, end]) => `read ${a}=highest( ${x} )${one}${end}`),
+);
+
 const statement = fc.oneof(
   fc
     .tuple(fc.constantFrom("let", "knob"), ident, expression)
@@ -133,8 +156,7 @@ const statement = fc.oneof(
   fc.tuple(ident, expression).map(([a, value]) => `sweep ${a} over ${value},\n# between\n ${value}`),
   fc.tuple(ident, ident, expression).map(([a, b, value]) => `L1:law{plus=${a},minus=${b} ,volts=${value}}`),
   fc.tuple(ident, expression).map(([a, value]) => `X : part{p=${a},\n R=${value}±1%}`),
-  fc.tuple(ident, expression, expression).map(([a, x, y]) => `require ${x}<=${y} at ${a}=${x}   as "so"`),
-  fc.tuple(ident, expression).map(([a, x]) => `read ${a}=highest( ${x} )  for ${a} in ${x} .. 2 V`),
+  contract,
   fc.constantFrom("draws  10 seed 7", "seek 3", 'use  "shelf" revision 2'),
   fc.constantFrom("", "# alone", "   # indented", "\t"),
 );
