@@ -13,22 +13,29 @@ function queue(): ShardQueue {
   return held[KEY];
 }
 
+/** The last place there is in BullMQ. */
+const MOST_PRIORITY = 2_097_152;
+/** Before it all first shards go, after it the rest, lower numbers first. */
+const REST = 100;
+
 /**
  * Puts shards on the queue. The first shard of a run goes before all others, so that a first curve comes early even behind a
- * long run. Throws when the queue's store does not answer; the connection is then opened anew at the next use.
+ * long run; the rest of several runs take turns by their index. `ahead` is how many runs whoever asked has open already: the
+ * more, the longer this one waits behind those of other people. Throws when the queue's store does not answer; the connection is
+ * then opened anew at the next use.
  */
-export async function enqueueShards(jobs: readonly ShardJob[]): Promise<void> {
+export async function enqueueShards(jobs: readonly ShardJob[], ahead = 0): Promise<void> {
   const opened = queue();
   // A first shard is put on alone and ahead, which reaches a worker several milliseconds sooner than a batch does.
   const first = jobs.filter(({ index }) => index === 0);
   const rest = jobs.filter(({ index }) => index > 0);
   try {
     for (const job of first) {
-      const { name, data, opts } = entry(job);
+      // In BullMQ no priority comes before any priority.
+      const { name, data, opts } = entry(job, Math.min(ahead, REST - 1));
       await opened.add(name, data, opts);
     }
-    // In BullMQ no priority comes before any priority.
-    if (rest.length > 0) await opened.addBulk(rest.map((job) => entry(job, { priority: 10 })));
+    if (rest.length > 0) await opened.addBulk(rest.map((job) => entry(job, REST + job.index * (1 + ahead))));
   } catch (error) {
     delete held[KEY];
     void opened.close().catch(() => undefined);
@@ -36,8 +43,9 @@ export async function enqueueShards(jobs: readonly ShardJob[]): Promise<void> {
   }
 }
 
-function entry(job: ShardJob, more: { priority?: number } = {}) {
-  const opts = { jobId: jobId(job), removeOnComplete: true, removeOnFail: true, ...more };
+function entry(job: ShardJob, priority: number) {
+  const order = priority === 0 ? {} : { priority: Math.min(priority, MOST_PRIORITY) };
+  const opts = { jobId: jobId(job), removeOnComplete: true, removeOnFail: true, ...order };
   return { name: SHARD_QUEUE, data: shardJob.parse(job), opts };
 }
 
