@@ -138,7 +138,7 @@ describe("the formatter", { timeout: 60_000 }, () => {
       part.replace(/ *(?<![-+/^·])([=:{},±*]) */gu, "$1").replace(/([\w²]) +#/gu, "$1#"),
     );
     const spread = outsideStrings(text, (part) =>
-      part.replace(/([=:{},*()])/gu, "  $1   ").replace(/\n/gu, "  \r\n"),
+      part.replace(/((?<![<>])=|[:{},*()])/gu, "  $1   ").replace(/\n/gu, "  \r\n"),
     );
     for (const other of [squeezed, spread, text.replaceAll("Ω", "ohm").replaceAll("µ", "u")]) {
       expect(meaning(check(other).design)).toBe(meaning(design));
