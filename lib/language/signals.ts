@@ -47,7 +47,7 @@ export function resolveSignal(
     );
   }
   if (!allowed) {
-    const message = `${quote(whole)} is known only once the circuit is solved; use it in ${quote("show")}.`;
+    const message = `${quote(whole)} is known only once the circuit is solved; use it in ${quote("show")}, a law, a reading or a requirement.`;
     report.error("NAM4", expression, message);
     return null;
   }

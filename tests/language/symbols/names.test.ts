@@ -130,7 +130,7 @@ describe("in every example", () => {
   );
 });
 
-test("no text makes any of it throw, and a place always holds its name", () => {
+test("no text makes any of it throw, and a place always holds its name", { timeout: 120_000 }, () => {
   fc.assert(
     fc.property(anyText, fc.nat(), (text, chance) => {
       const any = check(text);
