@@ -58,7 +58,7 @@ function factorText({ rows }: SparseShape, plan: Elimination): string {
   const { factor, pivots, places, changed, belowRows } = plan;
   const lines = Array.from(changed, (row) => `let g${row}=0;`);
   const fetched = new Set<number>();
-  const fetch = (place: number) => {
+  const load = (place: number) => {
     if (!fetched.has(place)) lines.push(`let v${place}=${place < rows.length ? `a[${place}]` : 0};`);
     fetched.add(place);
   };
@@ -71,20 +71,20 @@ function factorText({ rows }: SparseShape, plan: Elimination): string {
     const right = factor[at + 2]!;
     const row = at + 3;
     at = row + right;
-    fetch(pivot);
+    load(pivot);
     lines.push(`const p${k}=1/v${pivot};`, `f[${places + k}]=p${k};`);
     for (let j = 0; j < right; j++) {
-      fetch(factor[row + j]!);
+      load(factor[row + j]!);
       lines.push(keep(factor[row + j]!));
     }
     for (let i = 0; i < below; i++) {
       const multiplier = factor[at++]!;
-      fetch(multiplier);
+      load(multiplier);
       lines.push(`v${multiplier}*=p${k};`, keep(multiplier));
       const target = belowRows[s++];
       for (let j = 0; j < right; j++) {
         const q = `q${products++}`;
-        fetch(factor[at + j]!);
+        load(factor[at + j]!);
         lines.push(`const ${q}=v${multiplier}*v${factor[row + j]};`);
         lines.push(`v${factor[at + j]}-=${q};g${target}+=Math.abs(${q});`);
       }
@@ -115,14 +115,14 @@ function substitutionText(
   const size = rowOf.length;
   const lines: string[] = [];
   const fetched = new Set<number>();
-  const fetch = (row: number) => {
+  const load = (row: number) => {
     if (!fetched.has(row)) lines.push(`let w${row}=-b[${row}];`);
     fetched.add(row);
   };
   for (let k = 0; k < size; k++) {
-    fetch(rowOf[k]!);
+    load(rowOf[k]!);
     for (let s = belowStarts[k]!; s < belowStarts[k + 1]!; s++) {
-      fetch(belowRows[s]!);
+      load(belowRows[s]!);
       lines.push(`w${belowRows[s]}-=${value(belowPlaces[s]!)}*w${rowOf[k]};`);
     }
   }
