@@ -75,8 +75,7 @@ function call(typed: Extract<Typed, { op: "call" }>, scope: Scope): number {
     const condition = evaluate(args[0]!, scope);
     return Number.isNaN(condition) ? condition : evaluate(condition !== 0 ? args[1]! : args[2]!, scope);
   }
-  const values = args.map((arg) => evaluate(arg, scope));
-  const x = values[0]!;
+  const x = evaluate(args[0]!, scope);
   switch (callee) {
     case "exp":
       return Math.exp(x);
@@ -89,12 +88,24 @@ function call(typed: Extract<Typed, { op: "call" }>, scope: Scope): number {
     case "abs":
       return Math.abs(x);
     case "min":
-      return Math.min(...values);
+      return extreme(args, x, scope, Math.min);
     case "max":
-      return Math.max(...values);
+      return extreme(args, x, scope, Math.max);
     case "tanh":
       return Math.tanh(x);
     case "atan":
       return Math.atan(x);
   }
+}
+
+/** The least or largest of the values, `first` being that of the first one; nothing is allocated, since laws are worked out in loops. */
+function extreme(
+  args: readonly Typed[],
+  first: number,
+  scope: Scope,
+  of: (a: number, b: number) => number,
+): number {
+  let found = first;
+  for (let k = 1; k < args.length; k++) found = of(found, evaluate(args[k]!, scope));
+  return found;
 }

@@ -101,12 +101,17 @@ export class LawPart implements JunctionPart, Proof {
   follow(state: State): boolean {
     const { expression, y, target, trial } = this;
     expression.measure(state, target);
-    if (y.every((from, k) => Math.abs(target[k]! - from) <= SMALL * Math.abs(from))) {
+    let change = 0;
+    let isSmall = true;
+    for (let k = 0; k < y.length; k++) {
+      const step = target[k]! - y[k]!;
+      change += this.slopes[k]! * step;
+      if (!(Math.abs(step) <= SMALL * Math.abs(y[k]!))) isSmall = false;
+    }
+    if (isSmall) {
       y.set(target);
       return true;
     }
-    let change = 0;
-    for (let k = 0; k < y.length; k++) change += this.slopes[k]! * (target[k]! - y[k]!);
     const allowed = RISE * Math.abs(this.value) + this.free;
     for (let part = 1, n = 0; n < MOST_HALVINGS; part /= 2, n++) {
       for (let k = 0; k < y.length; k++) {
