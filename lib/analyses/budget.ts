@@ -1,8 +1,10 @@
+import type { Reading } from "@/lib/language/ast";
 import type { Job } from "./compile";
-import { placeOnAxes } from "./plan";
+import { judge } from "./judge";
+import { type Plan, placeOnAxes } from "./plan";
 import { readAll } from "./readings";
 import type { ReadingDocument } from "./result";
-import { Rows } from "./rows";
+import { type Contract, Rows } from "./rows";
 import { type Sensitivities, sensitivitiesOf } from "./sensitivity";
 
 /** What one toleranced value, or the common part of a track group, costs a reading. */
@@ -42,46 +44,80 @@ const STEP = 0.01;
 /** Values worked out at most (nominal points × traces × variables and unknowns); a larger run has no budget. */
 const MOST_WORK = 2_000_000;
 
+/** Error budgets of a run, or null where it is too large for them. */
+export interface Budgets {
+  readonly readings: readonly Budget[];
+  /** Of what each requirement is about, where it is worst in the nominal design; `reading` is its label. */
+  readonly requirements: readonly Budget[];
+}
+
+/** Error budgets of the readings alone. */
+export function budgetsOf(job: Job): readonly Budget[] | null {
+  return allBudgets(job)?.readings ?? null;
+}
+
 /**
- * Error budgets of every reading that is a number, to first order about the nominal design: variance Σ (s·σ)² with the share of
- * each part (s·σ)²/Σ, worst case Σ |s·half-width|. Null where the run is too large, empty where nothing has a tolerance.
+ * Error budgets of every reading that is a number and of every requirement, to first order about the nominal design: variance
+ * Σ (s·σ)² with the share of each part (s·σ)²/Σ, worst case Σ |s·half-width|. Empty where nothing has a tolerance.
  */
-export function budgetsOf(job: Job): Budget[] | null {
+export function allBudgets(job: Job): Budgets | null {
   const { design, plan, circuit } = job;
   const points = plan.points / (plan.draws + 1);
-  if (design.reads.length === 0 || !isToleranced(design)) return [];
+  const asks = design.reads.length + design.requirements.length > 0;
+  if (!asks || !isToleranced(design)) return { readings: [], requirements: [] };
   const toleranced = design.elements.length + design.lets.length;
   if (points * Math.max(1, plan.traces.length) * (toleranced + circuit.size) > MOST_WORK) return null;
   const found = sensitivitiesOf(job);
-  if (found.variables.length === 0) return [];
+  if (found.variables.length === 0) return { readings: [], requirements: [] };
   const nominal = { design, plan: { ...plan, draws: 0, points } };
-  const read = (traces: readonly Float64Array[]) => readAll(nominal, new Rows(nominal, { traces }));
-  const base = read(found.traces);
+  const worst = worstValues(nominal, found.traces);
+  const contract = { ...nominal, design: { ...design, reads: [...design.reads, ...worst] } };
+  const read = (traces: readonly Float64Array[]) => readAll(contract, new Rows(contract, { traces }));
   const effects = found.variables.map((_, v) => effectsOf(found, v, read));
-  return base.flatMap((reading, r) =>
-    reading.per === "point"
-      ? []
-      : reading.values.flatMap((value, row) => {
-          const of = effects.map((all) => all[r]![row]!);
-          if (value === null || !of.every(Number.isFinite)) return [];
-          const length = points / reading.values.length;
-          const places = placeOnAxes(plan, row * length).slice(1);
-          const at = places.map((place, i) => {
-            const { knob, unit, values } = plan.axes[i + 1]!;
-            return { knob, unit, value: values[place]! };
-          });
-          return [
-            {
-              reading: reading.name,
-              unit: reading.unit,
-              row,
-              at,
-              nominal: value,
-              ...budgetOf(value, of, found),
-            },
-          ];
-        }),
+  const budgets = read(found.traces).map((reading, r) =>
+    budgetsOfOne(reading, r, effects, found, nominal.plan),
   );
+  const labels = new Map(worst.map(({ name, label }) => [name, label]));
+  const named = budgets.slice(design.reads.length).flat();
+  return {
+    readings: budgets.slice(0, design.reads.length).flat(),
+    requirements: named.map((one) => ({ ...one, reading: labels.get(one.reading)! })),
+  };
+}
+
+/** What every requirement is about, read where it is worst in the nominal design. No name of a file has a blank in it. */
+function worstValues(
+  nominal: Contract,
+  traces: readonly Float64Array[],
+): (Reading & { readonly label: string })[] {
+  const { requirements } = judge(nominal, { traces });
+  return nominal.design.requirements.flatMap(({ label, value, windows, from, to }, i) => {
+    const { worst } = requirements[i]!;
+    if (worst === null) return [];
+    const pinned = worst.at.map(({ knob, value: at }) => ({ knob, low: at, high: at, from, to }));
+    return [{ name: `require ${i}`, label, value, windows: [...windows, ...pinned], from, to }];
+  });
+}
+
+/** The budgets of a reading, one a row; none of a trace. */
+function budgetsOfOne(
+  { name, unit, per, values }: ReadingDocument,
+  r: number,
+  effects: readonly (readonly (readonly number[])[])[],
+  found: Sensitivities,
+  plan: Plan,
+): Budget[] {
+  if (per === "point") return [];
+  return values.flatMap((value, row) => {
+    const of = effects.map((all) => all[r]![row]!);
+    if (value === null || !of.every(Number.isFinite)) return [];
+    const places = placeOnAxes(plan, row * (plan.points / values.length)).slice(1);
+    const at = places.map((place, i) => {
+      const { knob, unit: its, values: along } = plan.axes[i + 1]!;
+      return { knob, unit: its, value: along[place]! };
+    });
+    return [{ reading: name, unit, row, at, nominal: value, ...budgetOf(value, of, found) }];
+  });
 }
 
 function isToleranced({ knobs, lets, models, elements }: Job["design"]): boolean {

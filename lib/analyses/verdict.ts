@@ -1,4 +1,4 @@
-import { type Budget, budgetsOf } from "./budget";
+import { allBudgets, type Budget } from "./budget";
 import type { Job } from "./compile";
 import { judge } from "./judge";
 import type { ReadingDocument, RequirementDocument, Verdict } from "./result";
@@ -12,11 +12,15 @@ export interface KeptJudgement {
   readonly readings: readonly ReadingDocument[];
   /** Error budgets of the readings; null where the run is too large for them. */
   readonly budgets: readonly Budget[] | null;
+  /** Error budgets of what the requirements are about, where each is worst in the nominal design; likewise. */
+  readonly causes: readonly Budget[] | null;
 }
 
-/** Judges a finished run and works out the error budgets of its readings. Without requirements the verdict is null. */
+/** Judges a finished run and works out the error budgets of its readings and requirements. Without requirements the verdict is null. */
 export function finalJudgement(job: Job, columns: Columns): KeptJudgement {
   const { verdict, requirements, readings } = judge(job, columns);
   const numbers = readings.filter(({ per }) => per === "sweep");
-  return { verdict, requirements, readings: numbers, budgets: budgetsOf(job) };
+  const all = allBudgets(job);
+  const [budgets, causes] = [all?.readings ?? null, all?.requirements ?? null];
+  return { verdict, requirements, readings: numbers, budgets, causes };
 }

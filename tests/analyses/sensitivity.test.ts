@@ -1,5 +1,5 @@
 import { describe, expect, test } from "vitest";
-import { type Budget, budgetsOf } from "@/lib/analyses/budget";
+import { allBudgets, type Budget, budgetsOf } from "@/lib/analyses/budget";
 import { compile } from "@/lib/analyses/compile";
 import { judge } from "@/lib/analyses/judge";
 import { solveRange } from "@/lib/analyses/sweep";
@@ -200,6 +200,30 @@ read bend = deviation(o.v)`;
       ["top", 1, 298.15],
       ["warm", 1, 298.15],
     ]);
+  });
+
+  test("is of what each requirement is about, where that is worst", () => {
+    const text = `knob k = 1 V
+ground -- V1 : voltage k -- a -- R1 : resistor 1 kΩ ± 2 % -- o -- R2 : resistor 1 kΩ ± 1 % -- ground
+sweep k from 1 V to 2 V, 3 points
+sweep temperature over 0 °C, 25 °C
+read top = highest(o.v)
+require o.v within k / 2 ± 1 % as "half"
+require R1.i <= 0.8 mA for k in 1 V .. 1.6 V
+require top <= 2 V as "top"`;
+    const { requirements } = allBudgets(jobOf(text))!;
+    expect(requirements.map(({ reading, nominal }) => [reading, nominal])).toEqual([
+      ["half", 0.5],
+      ["R1.i <= 0.8 mA for k in 1 V .. 1.6 V", 0.75e-3],
+      ["top", 1],
+    ]);
+    const [half, current, top] = requirements;
+    expect(half!.parts.map(({ part, share }) => [part, share])).toEqual([
+      ["R1", expect.closeTo(0.8, 9)],
+      ["R2", expect.closeTo(0.2, 9)],
+    ]);
+    expect(effects(current!)["R1/value"]).toBeCloseTo((-0.02 * 0.75e-3) / 2, 12);
+    expect(effects(top!)["R2/value"]).toBeCloseTo(0.01 / 2, 9);
   });
 
   test("is empty where nothing has a tolerance, and absent where the run is too large", () => {

@@ -2,9 +2,7 @@ import { formatKnob, formatValue } from "@/app/_components/curves/figures-in-wor
 import { Cell, HeadCell, Table, TableFrame } from "@/app/_components/ui/table";
 import type { Budget } from "@/lib/analyses/budget";
 import type { AxisDocument, ReadingDocument } from "@/lib/analyses/result";
-
-/** Parts of a budget that are named; the rest is their sum. */
-const NAMED = 3;
+import { Costs } from "./costs";
 
 interface Props {
   readonly readings: readonly ReadingDocument[];
@@ -51,22 +49,6 @@ export function ReadingList({ readings, axes, budgets }: Props) {
         </Table>
       </TableFrame>
     </section>
-  );
-}
-
-/** The worst case of a reading and what costs it the most, to first order. */
-function Costs({ budget }: { readonly budget: Budget | undefined }) {
-  if (budget === undefined) return null;
-  const named = budget.parts.slice(0, NAMED).filter(({ share }) => share >= 0.005);
-  if (named.length === 0) return null;
-  const words = named.map(
-    ({ part, parameter, share }) => `${part}${parameter && ` ${parameter}`} ${Math.round(100 * share)} %`,
-  );
-  const [low, high] = [budget.low, budget.high].map((value) => formatValue(value, budget.unit));
-  return (
-    <p className="text-quiet text-xs">
-      Worst case {low} to {high}; of its spread: {words.join(", ")}
-    </p>
   );
 }
 

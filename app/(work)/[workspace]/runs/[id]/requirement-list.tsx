@@ -1,10 +1,21 @@
 import { formatKnob } from "@/app/_components/curves/figures-in-words";
 import { StateBadge } from "@/app/_components/ui/state-badge";
+import type { Budget } from "@/lib/analyses/budget";
 import type { RequirementDocument } from "@/lib/analyses/result";
 import { formatQuantity } from "@/lib/units/quantity";
+import { Costs } from "./costs";
 
-/** What the netlist requires and how it came out: verdict, margin, the worst place, and the yield over the draws. */
-export function RequirementList({ requirements }: { readonly requirements: readonly RequirementDocument[] }) {
+interface Props {
+  readonly requirements: readonly RequirementDocument[];
+  /** Error budgets of what the requirements are about, by their labels. */
+  readonly causes: readonly Budget[];
+}
+
+/**
+ * What the netlist requires and how it came out: verdict, margin, the worst place, the yield over the draws, and the parts whose
+ * tolerances move it the most.
+ */
+export function RequirementList({ requirements, causes }: Props) {
   if (requirements.length === 0) return null;
   return (
     <section aria-labelledby="requirements">
@@ -20,6 +31,7 @@ export function RequirementList({ requirements }: { readonly requirements: reado
               <StateBadge state={one.verdict} />
             </div>
             <p className="text-quiet text-sm">{inWords(one)}</p>
+            <Costs budget={causes.find(({ reading }) => reading === one.label)} />
           </li>
         ))}
       </ul>

@@ -139,7 +139,10 @@ export function RunView(props: Props) {
             choosable={set !== null}
             onPoint={(next) => show({ point: next })}
           />
-          <RequirementList requirements={document?.requirements ?? []} />
+          <RequirementList
+            requirements={document?.requirements ?? []}
+            causes={first.judgement?.causes ?? []}
+          />
           <ReadingList
             readings={document?.readings ?? []}
             axes={run.plan.axes}
