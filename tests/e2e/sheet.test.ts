@@ -112,6 +112,8 @@ test("saving makes a revision with a message; a text that only looks different m
   await page.keyboard.press("Enter");
   await page.getByRole("dialog").waitFor({ state: "hidden" });
   await page.getByText(/^revision 2$/).waitFor();
+  const box = await editorOf(page);
+  await expect.poll(() => box.evaluate((one) => one === document.activeElement), PATIENT).toBe(true);
   await typeAtEnd(page, "\n\n\n");
   await page.getByText("draft on revision 2").waitFor();
   await save(page);

@@ -1,7 +1,7 @@
 "use client";
 
 import { Dialog as Radix } from "radix-ui";
-import type { ReactNode } from "react";
+import { type ReactNode, useRef } from "react";
 
 /**
  * A dialog over the page: focus stays inside, Escape closes it and gives focus back. `description` says in one sentence
@@ -22,11 +22,22 @@ export function Dialog({
   readonly children?: ReactNode;
   readonly actions: ReactNode;
 }) {
+  // Without a trigger of its own the dialog would leave focus on the page's body.
+  const before = useRef<Element | null>(null);
   return (
     <Radix.Root open={open} onOpenChange={onOpenChange}>
       <Radix.Portal>
         <Radix.Overlay className="fixed inset-0 z-40 bg-black/40" />
-        <Radix.Content className="fixed top-1/2 left-1/2 z-50 max-h-[calc(100dvh-32px)] w-[min(560px,calc(100vw-32px))] -translate-x-1/2 -translate-y-1/2 overflow-y-auto rounded-[2px] border border-edge bg-surface p-6 text-ink">
+        <Radix.Content
+          onOpenAutoFocus={() => {
+            before.current = document.activeElement;
+          }}
+          onCloseAutoFocus={(event) => {
+            event.preventDefault();
+            if (before.current instanceof HTMLElement) before.current.focus();
+          }}
+          className="fixed top-1/2 left-1/2 z-50 max-h-[calc(100dvh-32px)] w-[min(560px,calc(100vw-32px))] -translate-x-1/2 -translate-y-1/2 overflow-y-auto rounded-[2px] border border-edge bg-surface p-6 text-ink"
+        >
           <Radix.Title className="font-semibold text-lg">{title}</Radix.Title>
           <Radix.Description className="mt-1 text-quiet text-sm">{description}</Radix.Description>
           {children !== undefined && <div className="mt-4">{children}</div>}
