@@ -1,6 +1,6 @@
-import { eq } from "drizzle-orm";
+import { eq, sql } from "drizzle-orm";
 import { describe, expect, it } from "vitest";
-import { database } from "@/db/client";
+import { database, type Queryable } from "@/db/client";
 import { DIODE_TEXT, makeActor, makeNetlist, makeRun, makeWorkspace } from "@/db/factories";
 import { netlist } from "@/db/schema/netlist";
 import { run } from "@/db/schema/run";
@@ -8,6 +8,7 @@ import type { Actor } from "@/lib/permissions/actor";
 import { createNetlist } from "@/lib/services/netlists/create-netlist";
 import { listNetlists } from "@/lib/services/netlists/list-netlists";
 import { saveRevision } from "@/lib/services/netlists/save-revision";
+import { searching } from "@/lib/services/netlists/search";
 import { ownDatabase } from "../integration/own-database";
 
 ownDatabase();
@@ -142,5 +143,35 @@ describe("the list", () => {
     await database().update(netlist).set({ archivedAt: new Date() }).where(eq(netlist.title, "gone"));
     const { rows, total } = await listNetlists(writer, {});
     expect([rows.map((row) => row.id), total]).toEqual([[id], 1]);
+  });
+});
+
+describe("a search that costs too much", () => {
+  const sleep = (seconds: number) => (db: Queryable) => db.execute(sql`select pg_sleep(${seconds})`);
+
+  it("is ended after five seconds, and says so", async () => {
+    await expect(searching(await makeActor(), "x", sleep(60))).rejects.toMatchObject({
+      code: "invalid",
+      message: expect.stringContaining("longer than 5 s"),
+    });
+  });
+
+  it("is refused beside three others of the same person, and not to anybody else", async () => {
+    const actor = await makeActor();
+    const going = Array.from({ length: 3 }, () => searching(actor, "x", sleep(2)));
+    await expect(listNetlists(actor, { query: "x" })).rejects.toMatchObject({ code: "too many" });
+    expect((await listNetlists(actor, {})).total).toBe(0);
+    expect((await listNetlists(await makeActor(), { query: "x" })).total).toBe(0);
+    await Promise.all(going);
+    expect((await listNetlists(actor, { query: "x" })).total).toBe(0);
+  });
+
+  it("leaves its connection without a limit", async () => {
+    const actor = await makeActor();
+    await searching(actor, "x", (db) => db.execute(sql`select 1`));
+    const { rows } = await database().execute<{ limit: string }>(
+      sql`select current_setting('statement_timeout') as limit`,
+    );
+    expect(rows[0]!.limit).toBe("0");
   });
 });

@@ -1,6 +1,5 @@
 import { and, asc, count, desc, eq, isNull, type SQL, sql } from "drizzle-orm";
 import type { z } from "zod";
-import { database } from "@/db/client";
 import { netlist } from "@/db/schema/netlist";
 import { revision } from "@/db/schema/revision";
 import { user } from "@/db/schema/user";
@@ -9,7 +8,7 @@ import { authorize } from "@/lib/permissions/authorize";
 import { readInput } from "../read-input";
 import { type LastRun, lastRunOf } from "./last-run";
 import { listInput } from "./schemas";
-import { containsWords } from "./search";
+import { containsWords, searching } from "./search";
 
 export interface NetlistRow {
   readonly id: string;
@@ -33,55 +32,53 @@ export async function listNetlists(
 ): Promise<{ rows: NetlistRow[]; total: number }> {
   authorize(actor, "netlist.read", { workspaceId: actor.workspaceId });
   const { query, sort, direction, page, size } = readInput(listInput, input);
-  const db = database();
-  const lastRun = lastRunOf(db);
-  const keys: Record<typeof sort, SQL> = {
-    title: sql`lower(${netlist.title})`,
-    updated: sql`${netlist.updatedAt}`,
-    owner: sql`lower(${user.name})`,
-    status: sql`${lastRun.status}`,
-  };
-  const order = direction === "ascending" ? asc : desc;
-  const matches = and(
-    eq(netlist.workspaceId, actor.workspaceId),
-    isNull(netlist.archivedAt),
-    containsWords(query, [netlist.title, user.name, revision.text]),
-  );
-  const isNewest = and(eq(revision.netlistId, netlist.id), eq(revision.number, netlist.latestRevision));
-  const found = db
-    .select({
-      id: netlist.id,
-      number: netlist.number,
-      title: netlist.title,
-      owner: user.name,
-      updatedAt: netlist.updatedAt,
-      revision: netlist.latestRevision,
-      lastRun: {
-        id: lastRun.id,
-        number: lastRun.number,
-        status: lastRun.status,
-        verdict: lastRun.verdict,
-        points: lastRun.points,
-        pointsFailed: lastRun.pointsFailed,
-      },
-    })
-    .from(netlist)
-    .innerJoin(user, eq(user.id, netlist.createdBy))
-    .innerJoin(revision, isNewest)
-    .leftJoinLateral(lastRun, sql`true`)
-    .where(matches)
-    .orderBy(sql`${order(keys[sort])} nulls last`, order(netlist.number))
-    .limit(size)
-    .offset((page - 1) * size);
-  const counted = db
-    .select({ total: count() })
-    .from(netlist)
-    .innerJoin(user, eq(user.id, netlist.createdBy))
-    .innerJoin(revision, isNewest)
-    .where(matches);
-  const [rows, [all]] = await Promise.all([found, counted]);
-  return {
-    rows: rows.map((row) => ({ ...row, updatedAt: row.updatedAt.toISOString() })),
-    total: all?.total ?? 0,
-  };
+  const [rows, total] = await searching(actor, query, async (db) => {
+    const lastRun = lastRunOf(db);
+    const keys: Record<typeof sort, SQL> = {
+      title: sql`lower(${netlist.title})`,
+      updated: sql`${netlist.updatedAt}`,
+      owner: sql`lower(${user.name})`,
+      status: sql`${lastRun.status}`,
+    };
+    const order = direction === "ascending" ? asc : desc;
+    const matches = and(
+      eq(netlist.workspaceId, actor.workspaceId),
+      isNull(netlist.archivedAt),
+      containsWords(query, [netlist.title, user.name, revision.text]),
+    );
+    const isNewest = and(eq(revision.netlistId, netlist.id), eq(revision.number, netlist.latestRevision));
+    const found = await db
+      .select({
+        id: netlist.id,
+        number: netlist.number,
+        title: netlist.title,
+        owner: user.name,
+        updatedAt: netlist.updatedAt,
+        revision: netlist.latestRevision,
+        lastRun: {
+          id: lastRun.id,
+          number: lastRun.number,
+          status: lastRun.status,
+          verdict: lastRun.verdict,
+          points: lastRun.points,
+          pointsFailed: lastRun.pointsFailed,
+        },
+      })
+      .from(netlist)
+      .innerJoin(user, eq(user.id, netlist.createdBy))
+      .innerJoin(revision, isNewest)
+      .leftJoinLateral(lastRun, sql`true`)
+      .where(matches)
+      .orderBy(sql`${order(keys[sort])} nulls last`, order(netlist.number))
+      .limit(size)
+      .offset((page - 1) * size);
+    const [all] = await db
+      .select({ total: count() })
+      .from(netlist)
+      .innerJoin(user, eq(user.id, netlist.createdBy))
+      .innerJoin(revision, isNewest)
+      .where(matches);
+    return [found, all?.total ?? 0] as const;
+  });
+  return { rows: rows.map((row) => ({ ...row, updatedAt: row.updatedAt.toISOString() })), total };
 }

@@ -173,7 +173,9 @@ test("a run of another workspace, and one that never was, is not found; nobody i
 test("a hundred readers share one listening connection", async () => {
   const actor = await makeActor();
   const { id } = await makeRun(actor);
-  const readers = await Promise.all(Array.from({ length: 100 }, () => follow(actor, id)));
+  const room = { id: actor.workspaceId, slug: actor.workspaceSlug };
+  const people = await Promise.all(Array.from({ length: 5 }, () => makeActor("viewer", room)));
+  const readers = await Promise.all(Array.from({ length: 100 }, (_, i) => follow(people[i % 5]!, id)));
   await Promise.all(readers.map((reader) => reader.until(1)));
   await advance(id, 3);
   const { rows } = await database().execute<{ listeners: number }>(sql`
@@ -237,4 +239,22 @@ test("silence is broken by a comment, and the stream ends when the session has e
   await endSession(actor.sessionId);
   await reader.ended;
   expect(reader.ids).toEqual([1]);
+});
+
+test("one person follows thirty runs at once and no more, until a page of theirs is closed", async () => {
+  const actor = await makeActor();
+  const { id } = await makeRun(actor);
+  const readers = await Promise.all(Array.from({ length: 30 }, () => follow(actor, id)));
+  expect(new Set(readers.map(({ response }) => response.status))).toEqual(new Set([200]));
+  const refused = await ask(actor, id);
+  expect([refused.status, (await refused.json()).code]).toEqual([429, "too many"]);
+  const colleague = await makeActor("viewer", { id: actor.workspaceId, slug: actor.workspaceSlug });
+  const other = await follow(colleague, id);
+  await other.until(1);
+  await Promise.all([other.leave(), readers.pop()!.leave()]);
+  const next = await follow(actor, id);
+  await next.until(1);
+  await finish(id);
+  await Promise.all([...readers, next].map(({ ended }) => ended));
+  expect((await ask(actor, id, { lastEventId: "0" })).status).toBe(200);
 });

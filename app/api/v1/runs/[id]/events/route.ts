@@ -1,6 +1,7 @@
 import { route } from "@/lib/api/route";
 import { actorForRun } from "@/lib/auth/actor";
 import { listEvents, type RunEvent } from "@/lib/services/events/list-events";
+import { Gate } from "@/lib/services/gate";
 import { eventStream, isLast } from "./stream";
 
 const HEADERS = {
@@ -10,6 +11,9 @@ const HEADERS = {
   "x-accel-buffering": "no",
 };
 
+/** Streams of one person at a time: each asks the database at every event. A page that gets none asks by itself instead. */
+const streams = new Gate(30, "You follow thirty runs at once already. Close a few of their pages.");
+
 /** The event a reader has seen last: by the header that browsers send when they come again, or by `?after=` at first. */
 function lastSeen(request: Request): number {
   const told = request.headers.get("last-event-id") ?? new URL(request.url).searchParams.get("after");
@@ -18,7 +22,8 @@ function lastSeen(request: Request): number {
 
 /**
  * GET → the events of a run as server-sent events, `id` being their sequence and `data` the state after each; from where the
- * reader stopped on, and until the run has ended. 204, which tells browsers to stay away, when there is nothing more to come.
+ * reader stopped on, and until the run has ended. 204, which tells browsers to stay away, when there is nothing more to come; 429
+ * to a person who has thirty of them.
  */
 export const GET = route<{ id: string }>(async (request, { id }) => {
   const actor = await actorForRun(id, request);
@@ -32,6 +37,7 @@ export const GET = route<{ id: string }>(async (request, { id }) => {
     after: known ? seen : 0,
     reader: () => actorForRun(id, request),
     signal: request.signal,
+    onEnd: streams.enter(actor.userId),
   });
   return new Response(stream, { headers: HEADERS });
 });

@@ -23,6 +23,8 @@ interface Input {
   readonly signal: AbortSignal;
   /** Longest silence, ms: a comment then keeps what lies between from closing the connection. */
   readonly heartbeat?: number;
+  /** Called when the stream has ended, for whatever reason; maybe more than once. */
+  readonly onEnd?: () => void;
 }
 
 /**
@@ -46,6 +48,7 @@ export function eventStream(input: Input): ReadableStream<Uint8Array> {
     unlisten();
     signal.removeEventListener("abort", end);
     wake();
+    input.onEnd?.();
   };
   signal.addEventListener("abort", end);
   if (signal.aborted) end();
