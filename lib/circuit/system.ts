@@ -109,13 +109,15 @@ export class System {
 
   /** Linearises every junction at its actual voltage. */
   settle(): void {
-    for (const junction of this.junctions) junction.settle(this.state);
+    const { junctions, state } = this;
+    for (let k = 0; k < junctions.length; k++) junctions[k]!.settle(state);
   }
 
   /** Takes junction steps towards the actual voltages; true where all linearisation voltages equal the actual ones. */
   follow(): boolean {
     let exact = true;
-    for (const junction of this.junctions) if (!junction.follow(this.state)) exact = false;
+    const { junctions, state } = this;
+    for (let k = 0; k < junctions.length; k++) if (!junctions[k]!.follow(state)) exact = false;
     return exact;
   }
 

@@ -6,6 +6,8 @@ export interface SparseShape {
   readonly size: number;
   readonly rows: ArrayLike<number>;
   readonly columns: ArrayLike<number>;
+  /** 1 at each place that holds +1 or −1, and keeps it. */
+  readonly units?: Uint8Array;
 }
 
 /**
@@ -32,6 +34,8 @@ export interface Elimination {
   readonly belowRows: Int32Array;
   readonly anchors: Int32Array;
   readonly changed: Int32Array;
+  /** Of each place, +1 or −1 where the elimination leaves it at that whatever the values are, or 0. */
+  readonly constants: Int8Array;
   readonly operations: number;
 }
 
@@ -83,6 +87,7 @@ export function eliminate(shape: SparseShape, sample: Float64Array): Elimination
     belowRows: Int32Array.from(steps.flatMap(({ below }) => below.map(([row]) => row))),
     anchors: anchorsOf(shape, sample),
     changed: changedBy(steps),
+    constants: constantsOf(shape, sample, Int32Array.from(factor), matrix.places),
     operations,
   };
 }
@@ -93,6 +98,31 @@ function changedBy(steps: readonly Step[]): Int32Array {
     if (right.length > 0) for (const [row] of below) changed.add(row);
   }
   return Int32Array.from(changed).sort();
+}
+
+/** What units the elimination leaves: those from which nothing is subtracted, divided by their pivot where they lie below one. */
+function constantsOf(
+  { units }: SparseShape,
+  sample: Float64Array,
+  factor: Int32Array,
+  places: number,
+): Int8Array {
+  const constants = new Int8Array(places);
+  if (units === undefined) return constants;
+  for (let k = 1; k < units.length; k++)
+    if (units[k] === 1 && Math.abs(sample[k]!) === 1) constants[k] = sample[k]!;
+  for (let at = 0; at < factor.length; ) {
+    const pivot = factor[at]!;
+    const below = factor[at + 1]!;
+    const right = factor[at + 2]!;
+    at += 3 + right;
+    for (let i = 0; i < below; i++) {
+      constants[factor[at]!]! *= constants[pivot]!;
+      for (let j = 1; j <= right; j++) constants[factor[at + j]!] = 0;
+      at += right + 1;
+    }
+  }
+  return constants;
 }
 
 function anchorsOf({ size, rows }: SparseShape, sample: Float64Array): Int32Array {

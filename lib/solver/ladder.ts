@@ -52,6 +52,7 @@ export class Ladder {
       size: circuit.size,
       rows: Int32Array.from(pattern.rows),
       columns: Int32Array.from(pattern.columns),
+      units: pattern.units,
     };
     this.linear = new LinearSolver(this.shape, state.jacobian);
     this.bench = {

@@ -34,6 +34,7 @@ export class Steps {
       size: circuit.size,
       rows: Int32Array.from(pattern.rows),
       columns: Int32Array.from(pattern.columns),
+      units: pattern.units,
     };
     this.points = new Float64Array(POINTS * this.size);
     for (let k = 0; k < POINTS; k++) {

@@ -40,7 +40,7 @@ export class OpampPart implements Part {
     this.branch = branch;
     const hasGain = params.has("gain");
     this.places = [
-      pattern.place(this.out, branch),
+      pattern.placeOfOne(this.out, branch),
       pattern.place(branch, this.plus),
       pattern.place(branch, this.minus),
       hasGain ? pattern.place(branch, this.out) : 0,

@@ -25,10 +25,10 @@ export class TerminalPart implements Part {
     const given = resistance === null ? [] : [model!.params.get(resistance)!];
     this.movers = moversOf(given, values);
     this.places = [
-      pattern.place(net, branch),
-      pattern.place(inner, branch),
-      pattern.place(branch, net),
-      pattern.place(branch, inner),
+      pattern.placeOfOne(net, branch),
+      pattern.placeOfOne(inner, branch),
+      pattern.placeOfOne(branch, net),
+      pattern.placeOfOne(branch, inner),
       resistance === null ? 0 : pattern.place(branch, branch),
     ];
   }

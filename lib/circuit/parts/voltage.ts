@@ -25,10 +25,10 @@ export class VoltagePart implements Part {
     this.right = netAt(bench, "right");
     this.branch = branch;
     this.places = [
-      pattern.place(this.left, branch),
-      pattern.place(this.right, branch),
-      pattern.place(branch, this.left),
-      pattern.place(branch, this.right),
+      pattern.placeOfOne(this.left, branch),
+      pattern.placeOfOne(this.right, branch),
+      pattern.placeOfOne(branch, this.left),
+      pattern.placeOfOne(branch, this.right),
     ];
   }
 

@@ -46,8 +46,8 @@ function solveText(shape: SparseShape, plan: Elimination): string {
     factorText(shape, plan),
     substitutionText(
       plan,
-      (place) => `v${place}`,
-      (k) => `p${k}`,
+      (place) => numberOf(plan, place),
+      (k) => inverseOf(plan, k),
     ),
     monitorText(plan),
   ].join("\n");
@@ -55,11 +55,12 @@ function solveText(shape: SparseShape, plan: Elimination): string {
 
 /** A value is fetched where it is first needed and kept where it is final, so that few are alive at a time. */
 function factorText({ rows }: SparseShape, plan: Elimination): string {
-  const { factor, pivots, places, changed, belowRows } = plan;
+  const { factor, pivots, places, changed, belowRows, constants } = plan;
   const lines = Array.from(changed, (row) => `let g${row}=0;`);
   const fetched = new Set<number>();
   const load = (place: number) => {
-    if (!fetched.has(place)) lines.push(`let v${place}=${place < rows.length ? `a[${place}]` : 0};`);
+    if (constants[place] === 0 && !fetched.has(place))
+      lines.push(`let v${place}=${place < rows.length ? `a[${place}]` : 0};`);
     fetched.add(place);
   };
   let at = 0;
@@ -72,20 +73,22 @@ function factorText({ rows }: SparseShape, plan: Elimination): string {
     const row = at + 3;
     at = row + right;
     load(pivot);
-    lines.push(`const p${k}=1/v${pivot};`, `f[${places + k}]=p${k};`);
+    if (constants[pivot] === 0) lines.push(`const p${k}=1/v${pivot};`, `f[${places + k}]=p${k};`);
     for (let j = 0; j < right; j++) {
       load(factor[row + j]!);
-      lines.push(keep(factor[row + j]!));
+      lines.push(keep(plan, factor[row + j]!));
     }
     for (let i = 0; i < below; i++) {
       const multiplier = factor[at++]!;
       load(multiplier);
-      lines.push(`v${multiplier}*=p${k};`, keep(multiplier));
+      if (constants[multiplier] === 0) {
+        lines.push(`v${multiplier}=${times(`v${multiplier}`, inverseOf(plan, k))};`, keep(plan, multiplier));
+      }
       const target = belowRows[s++];
       for (let j = 0; j < right; j++) {
         const q = `q${products++}`;
         load(factor[at + j]!);
-        lines.push(`const ${q}=v${multiplier}*v${factor[row + j]};`);
+        lines.push(`const ${q}=${times(numberOf(plan, multiplier), numberOf(plan, factor[row + j]!))};`);
         lines.push(`v${factor[at + j]}-=${q};g${target}+=Math.abs(${q});`);
       }
       at += right;
@@ -94,16 +97,39 @@ function factorText({ rows }: SparseShape, plan: Elimination): string {
   return lines.join("\n");
 }
 
-function keep(place: number): string {
-  return `f[${place}]=v${place};`;
+function keep({ constants }: Elimination, place: number): string {
+  return constants[place] === 0 ? `f[${place}]=v${place};` : "";
+}
+
+function numberOf({ constants }: Elimination, place: number): string {
+  return constants[place] === 0 ? `v${place}` : `${constants[place]}`;
+}
+
+function inverseOf({ constants, pivots }: Elimination, k: number): string {
+  return constants[pivots[k]!] === 0 ? `p${k}` : `${constants[pivots[k]!]}`;
+}
+
+/** Where a later solution finds a factor and the inverse of a pivot. */
+function keptBy(plan: Elimination): { value: (place: number) => string; inverse: (k: number) => string } {
+  const { constants, pivots, places } = plan;
+  return {
+    value: (place) => (constants[place] === 0 ? `f[${place}]` : numberOf(plan, place)),
+    inverse: (k) => (constants[pivots[k]!] === 0 ? `f[${places + k}]` : inverseOf(plan, k)),
+  };
+}
+
+/** A product; a factor of +1 or −1 costs nothing and changes no bit but the sign. */
+function times(a: string, b: string): string {
+  if (a === "1") return b;
+  if (b === "1") return a;
+  if (a === "-1") return `(-(${b}))`;
+  if (b === "-1") return `(-(${a}))`;
+  return `${a}*${b}`;
 }
 
 function againText(plan: Elimination): string {
-  return substitutionText(
-    plan,
-    (place) => `f[${place}]`,
-    (k) => `f[${plan.places + k}]`,
-  );
+  const { value, inverse } = keptBy(plan);
+  return substitutionText(plan, value, inverse);
 }
 
 function substitutionText(
@@ -123,27 +149,29 @@ function substitutionText(
     load(rowOf[k]!);
     for (let s = belowStarts[k]!; s < belowStarts[k + 1]!; s++) {
       load(belowRows[s]!);
-      lines.push(`w${belowRows[s]}-=${value(belowPlaces[s]!)}*w${rowOf[k]};`);
+      lines.push(`w${belowRows[s]}-=${times(value(belowPlaces[s]!), `w${rowOf[k]}`)};`);
     }
   }
   for (let k = size - 1; k >= 0; k--) {
     let sum = `w${rowOf[k]}`;
     for (let s = rowStarts[k]!; s < rowStarts[k + 1]!; s++) {
-      sum += `-${value(rowPlaces[s]!)}*x${rowColumns[s]}`;
+      sum += `-${times(value(rowPlaces[s]!), `x${rowColumns[s]}`)}`;
     }
-    lines.push(`const x${columnOf[k]}=(${sum})*${inverse(k)};`, `d[${columnOf[k]}]=x${columnOf[k]};`);
+    lines.push(`const x${columnOf[k]}=${times(`(${sum})`, inverse(k))};`);
+    lines.push(`d[${columnOf[k]}]=x${columnOf[k]};`);
   }
   return lines.join("\n");
 }
 
-function monitorText({ anchors, changed, pivots, columnOf }: Elimination): string {
+function monitorText(plan: Elimination): string {
+  const { anchors, changed, pivots, columnOf } = plan;
   const lines: string[] = [];
   for (const row of changed) {
     lines.push(`if(!(g${row}<=${MOST_GROWTH}*Math.abs(a[${anchors[row]}])))return 0;`);
   }
   const strands: string[] = ["0", "0", "0", "0"];
   pivots.forEach((place, k) => {
-    strands[k & 3] += `+(v${place}+x${columnOf[k]})`;
+    strands[k & 3] += `+(${numberOf(plan, place)}+x${columnOf[k]})`;
   });
   lines.push(
     `const t=${strands[0]}+(${strands[1]})+((${strands[2]})+(${strands[3]}));`,
@@ -153,21 +181,22 @@ function monitorText({ anchors, changed, pivots, columnOf }: Elimination): strin
 }
 
 function transposedText(plan: Elimination): string {
-  const { rowOf, columnOf, rowStarts, rowPlaces, rowColumns, places } = plan;
+  const { value, inverse } = keptBy(plan);
+  const { rowOf, columnOf, rowStarts, rowPlaces, rowColumns } = plan;
   const { belowStarts, belowPlaces, belowRows } = plan;
   const size = rowOf.length;
   const lines: string[] = [];
   for (let j = 0; j < size; j++) lines.push(`let w${j}=b[${j}];`);
   for (let k = 0; k < size; k++) {
-    lines.push(`w${columnOf[k]}*=f[${places + k}];`);
+    lines.push(`w${columnOf[k]}=${times(`w${columnOf[k]}`, inverse(k))};`);
     for (let s = rowStarts[k]!; s < rowStarts[k + 1]!; s++) {
-      lines.push(`w${rowColumns[s]}-=f[${rowPlaces[s]}]*w${columnOf[k]};`);
+      lines.push(`w${rowColumns[s]}-=${times(value(rowPlaces[s]!), `w${columnOf[k]}`)};`);
     }
   }
   for (let k = size - 1; k >= 0; k--) {
     let sum = `w${columnOf[k]}`;
     for (let s = belowStarts[k]!; s < belowStarts[k + 1]!; s++) {
-      sum += `-f[${belowPlaces[s]}]*x${belowRows[s]}`;
+      sum += `-${times(value(belowPlaces[s]!), `x${belowRows[s]}`)}`;
     }
     lines.push(`const x${rowOf[k]}=${sum};`, `d[${rowOf[k]}]=x${rowOf[k]};`);
   }

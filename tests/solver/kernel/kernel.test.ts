@@ -4,7 +4,7 @@ import type { Kernel } from "@/lib/solver/kernel/kernel";
 import { ListedKernel } from "@/lib/solver/kernel/listed";
 import { WrittenKernel } from "@/lib/solver/kernel/written";
 import { LinearSolver } from "@/lib/solver/linear";
-import { chain, leftOver, randomSystem, type SparseSystem, stream } from "./systems";
+import { chain, leftOver, randomSystem, type SparseSystem, stream, withUnits } from "./systems";
 
 interface Both {
   readonly system: SparseSystem;
@@ -39,6 +39,24 @@ describe("generated code and the list of operations", () => {
         const values = both.system.values.map((value) => value * (1 + 0.5 * (next() - 0.5)));
         const b = Float64Array.from({ length: size + 1 }, () => next() - 0.5);
         const listed = answers(both.listed, both, values, b);
+        expect(answers(both.written, both, values, b)).toEqual(listed);
+      }
+    }
+  });
+
+  test.each([2, 6, 15])("give the same bytes where units are known, %i pairs", (pairs) => {
+    const next = stream(pairs + 7);
+    for (let trial = 0; trial < 8; trial++) {
+      const both = bothOf(withUnits(pairs, next));
+      expect(both.plan.constants.some((constant) => constant !== 0)).toBe(true);
+      for (let k = 0; k < 4; k++) {
+        const { units } = both.system.shape;
+        const values = both.system.values.map((value, place) =>
+          units![place] === 1 ? value : value * next(),
+        );
+        const b = Float64Array.from({ length: 2 * pairs + 1 }, () => next() - 0.5);
+        const listed = answers(both.listed, both, values, b);
+        expect(listed.isGood).toBe(true);
         expect(answers(both.written, both, values, b)).toEqual(listed);
       }
     }

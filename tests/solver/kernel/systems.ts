@@ -66,6 +66,25 @@ export function rail(nets: number): SparseSystem {
   });
 }
 
+/** Nets joined at random, each held by a source of its own: branch currents and laws with entries of +1 and −1 that stay. */
+export function withUnits(pairs: number, next: () => number): SparseSystem {
+  const units = [0];
+  const system = systemOf(2 * pairs, (add) => {
+    const put = (row: number, column: number, value: number, isUnit: boolean) => {
+      add(row, column, value);
+      units.push(isUnit ? 1 : 0);
+    };
+    for (let i = 0; i < pairs; i++) {
+      put(i, i, 2 + next(), false);
+      put(i, pairs + i, next() < 0.5 ? 1 : -1, true);
+      put(pairs + i, i, next() < 0.5 ? 1 : -1, true);
+      if (next() < 0.5) put(pairs + i, (i + 1) % pairs, -1e-6 * (1 + next()), false);
+      if (pairs > 2) put(i, (i + 1) % pairs, -next(), false);
+    }
+  });
+  return { ...system, shape: { ...system.shape, units: Uint8Array.from(units) } };
+}
+
 /** The largest |J·d + b|_i (or of Jᵀ) as a part of Σ_j |J_ij·d_j| + |b_i|: the componentwise backward error of a solution. */
 export function leftOver(
   { shape, values }: SparseSystem,
