@@ -50,8 +50,12 @@ export class Crew {
 
   private async start(): Promise<Worker> {
     const worker = spawn();
-    await this.hear(worker, (reply) => (reply.kind === "ready" ? worker : null));
-    return worker;
+    try {
+      return await this.hear(worker, (reply) => (reply.kind === "ready" ? worker : null));
+    } catch (reason) {
+      await worker.terminate();
+      throw reason;
+    }
   }
 
   private ask(

@@ -1,7 +1,9 @@
 import type { RunDocument } from "@/lib/analyses/result";
 import { formatQuantity } from "@/lib/units/quantity";
+import { branchRows, foldRows, missingLine } from "./branch-rows";
+import { section } from "./section";
 import { sparkline } from "./sparkline";
-import { type Ink, type Paint, tabulate } from "./style";
+import type { Ink, Paint } from "./style";
 import { knobValue, worstPlace, yieldText } from "./verdicts";
 
 /** Failed points that are told one by one. */
@@ -13,8 +15,14 @@ const INK: Readonly<Record<RunDocument["verdict"], Ink>> = {
   "no data": "open",
 };
 
-/** A run for people. `curve` is the width of the curves in characters, 0 for none. */
-export function reportText(document: RunDocument, file: string, paint: Paint, curve: number): string {
+/** A run for people, with the rows of its budget. `curve` is the width of the curves in characters, 0 for none. */
+export function reportText(
+  document: RunDocument,
+  budget: readonly (readonly string[])[],
+  file: string,
+  paint: Paint,
+  curve: number,
+): string {
   const title = document.title === "" ? file : `${document.title} (${file})`;
   return [
     paint("strong", title),
@@ -24,16 +32,14 @@ export function reportText(document: RunDocument, file: string, paint: Paint, cu
     ...section(paint, traces(document, curve)),
     ...section(paint, readings(document)),
     ...section(paint, requirements(document, paint)),
+    ...section(paint, budget),
+    ...section(paint, branchRows(document)),
+    ...section(paint, foldRows(document)),
+    ...missingLine(document),
     "",
   ]
     .map((line) => `${line}\n`)
     .join("");
-}
-
-function section(paint: Paint, rows: readonly (readonly string[])[]): string[] {
-  if (rows.length < 2) return [];
-  const [head, ...lines] = tabulate(rows);
-  return ["", paint("faint", head!), ...lines];
 }
 
 function account({ points }: RunDocument): string {

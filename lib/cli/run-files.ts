@@ -4,6 +4,7 @@ import { toDocument } from "@/lib/analyses/document";
 import type { RunDocument } from "@/lib/analyses/result";
 import { lineStarts, placeOf } from "@/lib/language/span";
 import { annotation } from "./annotations";
+import { budgetRows } from "./budget-rows";
 import { RUN } from "./commands";
 import { type Compiled, compileSource, explain, netlistCase, remarksOf } from "./compiled";
 import { Crew } from "./crew";
@@ -49,7 +50,9 @@ export async function runFiles(given: Given, world: World): Promise<ExitCode> {
       else if (isLines) {
         for (const remark of [...remarksOf(compiled), ...brokenRemarks(compiled, document)])
           output.write(annotation(remark));
-      } else if (compiled.job !== null) output.write(reportText(document, source.name, paint, curve));
+      } else if (compiled.job !== null) {
+        output.write(reportText(document, budgetRows(compiled.job), source.name, paint, curve));
+      }
       const cases = [netlistCase(compiled), ...requirementCases(document)];
       suites.push({ file: source.name, title: document.title, cases });
       codes.push(codeOf(compiled, document));
