@@ -1,0 +1,18 @@
+import { execFileSync } from "node:child_process";
+import { describe, expect, test } from "vitest";
+
+/** What print-bytes prints in a process of its own. */
+function printed(netlist: string, ...flags: string[]): string[] {
+  const words = [...flags, "--import", "tsx", "tests/solver/kernel/print-bytes.ts", netlist];
+  return execFileSync(process.execPath, words, { encoding: "utf8" }).trim().split(" ");
+}
+
+describe("where code may not be generated", () => {
+  test("a sweep gives the same bytes", { timeout: 60_000 }, () => {
+    const netlist = "examples/one-quadrant-multiplier.swn";
+    const [may, bytes] = printed(netlist);
+    const [mayNot, listed] = printed(netlist, "--disallow-code-generation-from-strings");
+    expect([may, mayNot]).toEqual(["true", "false"]);
+    expect(listed).toBe(bytes);
+  });
+});
