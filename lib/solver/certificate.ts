@@ -3,7 +3,8 @@ import type { System } from "@/lib/circuit/system";
 import { UNIT } from "@/lib/devices/rounding";
 import { DenseFactors } from "./dense";
 import { Inverse } from "./inverse";
-import type { Linear } from "./linear";
+import type { LinearSolver } from "./linear";
+import { TriangularBounds } from "./triangular";
 
 /** V. The ball in which slopes are bounded first; what proves a point is usually a thousand times smaller. */
 const BALL = 1e-9;
@@ -14,8 +15,10 @@ const LEAST_RADIUS = 1e-24;
 const MOST_TRIES = 6;
 /** A neighbour's inverse serves while it leaves less than this of the unit matrix; the bound is then at most twice as wide. */
 const WORN = 0.5;
-/** Unknowns of a point that is proved at most: the inverse is dense. */
-const MOST_UNKNOWNS = 1500;
+/** V. Where the sparse factors prove a wider radius, or none, the inverse is tried. */
+const CONTENT = 1e-11;
+/** Unknowns of a point for which an inverse, which is dense, is made. */
+const MOST_DENSE = 300;
 /** V. A wider radius must come from rounding: an answer that one more step would mend is refused. */
 const SUSPECT = 1e-10;
 /** How many times the part that rounding makes. */
@@ -40,7 +43,13 @@ const LEAST_CURRENT_WEIGHT = 1e-30;
 export class Certificate {
   private readonly parts: readonly Proof[];
   private readonly canProve: boolean;
+  private readonly triangular: TriangularBounds;
   private readonly inverse: Inverse;
+  /** Those in use. */
+  private bounds: TriangularBounds | Inverse;
+  private readonly step: Float64Array;
+  /** The weights are those of this point or of a neighbour. */
+  private isWeighed = false;
   private readonly isVoltage: readonly boolean[];
   /** Roundings in the sum of each row. */
   private readonly roundings: Float64Array;
@@ -50,13 +59,16 @@ export class Certificate {
 
   constructor(
     private readonly system: System,
-    private readonly linear: Linear,
+    private readonly linear: LinearSolver,
   ) {
     const { circuit, parts, pattern } = system;
     const { size } = circuit;
     this.parts = parts.flatMap(({ proof }) => (proof === undefined || proof === "linear" ? [] : [proof]));
-    this.canProve = size <= MOST_UNKNOWNS && parts.every(({ proof }) => proof !== undefined);
+    this.canProve = parts.every(({ proof }) => proof !== undefined);
+    this.triangular = new TriangularBounds(pattern);
     this.inverse = new Inverse(pattern);
+    this.bounds = this.triangular;
+    this.step = new Float64Array(size);
     this.isVoltage = circuit.unknowns.map(({ unit }) => unit === "V");
     this.roundings = new Float64Array(size + 1).fill(16);
     for (const { element } of parts) {
@@ -71,6 +83,7 @@ export class Certificate {
   /** Forgets the neighbour, at the beginning of a strand. */
   reset(): void {
     this.inverse.forget();
+    this.isWeighed = false;
   }
 
   /**
@@ -80,6 +93,32 @@ export class Certificate {
   prove(): number {
     if (!this.canProve) return Number.NaN;
     this.gatherDoubt(1);
+    const sparse = this.searchSparsely();
+    if (sparse <= CONTENT || this.isVoltage.length > MOST_DENSE) return this.judged(sparse);
+    this.bounds = this.inverse;
+    const dense = this.searchByInverse();
+    return this.judged(Number.isNaN(dense) || sparse < dense ? sparse : dense);
+  }
+
+  private judged(radius: number): number {
+    return radius > SUSPECT && !this.isExplained(radius) ? Number.NaN : radius;
+  }
+
+  /** By the factors of the Jacobian at hand. */
+  private searchSparsely(): number {
+    const { state } = this.system;
+    if (!this.linear.solve(state.jacobian, state.residual, this.step)) return Number.NaN;
+    const factors = this.linear.atHand;
+    if (factors === null) return Number.NaN;
+    this.triangular.use(factors);
+    this.bounds = this.triangular;
+    const radius = this.isWeighed ? this.search(WORN) : Number.NaN;
+    if (!Number.isNaN(radius)) return radius;
+    this.weigh();
+    return this.search(1);
+  }
+
+  private searchByInverse(): number {
     const isReused = this.inverse.isKnown;
     let radius = isReused ? this.search(WORN) : Number.NaN;
     // A worn inverse makes rounding look twice as large, so a suspect radius is seen through a fresh one.
@@ -90,15 +129,15 @@ export class Certificate {
     }
     if (Number.isNaN(radius)) radius = this.searchDensely();
     if (Number.isNaN(radius)) this.inverse.forget();
-    return radius > SUSPECT && !this.isExplained(radius) ? Number.NaN : radius;
+    return radius;
   }
 
   /** Whether rounding alone makes about as wide a radius. */
   private isExplained(radius: number): boolean {
-    const { inverse, isVoltage } = this;
+    const { bounds, isVoltage } = this;
     this.gatherDoubt(0);
-    inverse.carry(this.doubt);
-    return inverse.error.some((error, i) => isVoltage[i] && EXPLAINED * error >= radius);
+    bounds.carry(this.doubt);
+    return bounds.error.some((error, i) => isVoltage[i] && EXPLAINED * error >= radius);
   }
 
   /** |F|·`residualShare` + δF: what is left over, the roundings of the sums, and those within the laws. */
@@ -125,10 +164,10 @@ export class Certificate {
 
   /** Weights in proportion to Y; at least a part of 1 V, or of the current that 1 V makes in the rows that a current enters. */
   private weigh(): void {
-    const { weights, isVoltage, inverse } = this;
+    const { weights, isVoltage, bounds } = this;
     const { pattern, state } = this.system;
-    inverse.carry(this.doubt);
-    const { error } = inverse;
+    bounds.carry(this.doubt);
+    const { error } = bounds;
     const largest = error.reduce((most, one, i) => (isVoltage[i] && one > most ? one : most), 0);
     const scale = largest > LEAST_RADIUS && largest < Number.POSITIVE_INFINITY ? 1 / largest : 1;
     const { rows, columns } = pattern;
@@ -137,7 +176,8 @@ export class Certificate {
       if (isVoltage[columns[k]!]) sums[rows[k]!]! += Math.abs(state.jacobian[k]!);
     }
     weights.fill(0);
-    inverse.reweigh();
+    this.isWeighed = true;
+    bounds.reweigh();
     for (let k = 1; k < rows.length; k++) {
       const j = columns[k]!;
       const natural = isVoltage[j] ? 1 : sums[rows[k]!]!;
@@ -171,12 +211,12 @@ export class Certificate {
   }
 
   private attempt(ball: number, most: number): Found {
-    const { inverse, weights, spread, isVoltage, parts } = this;
+    const { bounds, weights, spread, isVoltage, parts } = this;
     const { state } = this.system;
     spread.fill(0);
     for (let k = 0; k < parts.length; k++) parts[k]!.addSpread(state, ball, weights, spread);
-    inverse.bound(state.jacobian, weights, this.roundings, this.doubt, spread);
-    const { left, error, change } = inverse;
+    bounds.bound(state.jacobian, weights, this.roundings, this.doubt, spread);
+    const { left, error, change } = bounds;
     let radius = LEAST_RADIUS;
     let fits = true;
     for (let i = 0; i < isVoltage.length; i++) {
@@ -205,7 +245,7 @@ export class Certificate {
       weights[i] = Math.max(SPARE * needed, LEAST_CURRENT_WEIGHT);
       fits = false;
     }
-    if (!fits) inverse.reweigh();
+    if (!fits) bounds.reweigh();
     return fits ? { kind: "proved", radius } : { kind: "weights too small" };
   }
 }

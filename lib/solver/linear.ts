@@ -21,6 +21,12 @@ export interface Linear {
   solveTransposed(right: Float64Array, solution: Float64Array): void;
 }
 
+/** The factors of the last matrix: `values` as a kernel keeps them, places as in `plan`. */
+export interface Factors {
+  readonly plan: Elimination;
+  readonly values: Float64Array;
+}
+
 /**
  * Solves J·d = −F for one structure many times. Pivots are chosen once on a sample, and from then on a factorisation is a list
  * of multiplications over reused arrays, after a while as generated code; both give the same bytes. Pivots stay while the
@@ -77,6 +83,11 @@ export class LinearSolver implements Linear {
   solveTransposed(right: Float64Array, solution: Float64Array): void {
     if (this.dense !== null) this.dense.solveTransposed(right, solution);
     else this.kernel!.solveTransposed(right, solution, this.factors);
+  }
+
+  /** Null where the last matrix was factorised densely or not at all. */
+  get atHand(): Factors | null {
+    return this.plan === null || this.dense !== null ? null : { plan: this.plan, values: this.factors };
   }
 
   private use(plan: Elimination | null, kernel: Kernel | null): void {
