@@ -85,9 +85,21 @@ export class LinearSolver implements Linear {
     else this.kernel!.solveTransposed(right, solution, this.factors);
   }
 
-  /** Null where the last matrix was factorised densely or not at all. */
+  /** Null where the last matrix was factorised densely or not at all. Pivots stand as their inverses only. */
   get atHand(): Factors | null {
-    return this.plan === null || this.dense !== null ? null : { plan: this.plan, values: this.factors };
+    const { plan, factors } = this;
+    if (plan === null || this.dense !== null) return null;
+    // Generated code has constant factors in its text and does not keep them.
+    const { constants, pivots, places } = plan;
+    if (this.kernel === this.firstWritten) {
+      for (let place = 0; place < places; place++) {
+        if (constants[place] !== 0) factors[place] = constants[place]!;
+      }
+      for (let k = 0; k < pivots.length; k++) {
+        if (constants[pivots[k]!] !== 0) factors[places + k] = constants[pivots[k]!]!;
+      }
+    }
+    return { plan, values: factors };
   }
 
   private use(plan: Elimination | null, kernel: Kernel | null): void {

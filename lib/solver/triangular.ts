@@ -94,14 +94,14 @@ export class TriangularBounds {
   private residue(weights: Float64Array, into: Float64Array): void {
     const { work } = this;
     const { plan, values } = this.factors!;
-    const { rowOf, columnOf, pivots, rowStarts, rowPlaces, rowColumns, belowStarts, belowPlaces, belowRows } =
+    const { rowOf, columnOf, places, rowStarts, rowPlaces, rowColumns, belowStarts, belowPlaces, belowRows } =
       plan;
     const size = work.length;
     into.fill(0);
     work.fill(4);
     for (let k = 0; k < size; k++) {
       const row = rowOf[k]!;
-      let sum = Math.abs(values[pivots[k]!]!) * weights[columnOf[k]!]!;
+      let sum = weights[columnOf[k]!]! / Math.abs(values[places + k]!);
       for (let s = rowStarts[k]!; s < rowStarts[k + 1]!; s++) {
         sum += Math.abs(values[rowPlaces[s]!]!) * weights[rowColumns[s]!]!;
       }
