@@ -43,17 +43,24 @@ export function toDocument(matter: RunMatter): RunDocument {
     traces: plan.traces.map(({ name, unit }, k) => ({
       name,
       unit,
-      values: Array.from(matter.traces[k]!, (value) => (Number.isFinite(value) ? value : null)),
+      values: listOf(matter.traces[k]!, (value) => (Number.isFinite(value) ? value : null)),
     })),
     points: {
-      outcome: Array.from(outcome, (index) => OUTCOMES[index] ?? null),
-      bound: Array.from(matter.bound, (bound) => (Number.isFinite(bound) ? bound : null)),
-      iterations: Array.from(matter.iterations, (count) => (Number.isNaN(count) ? 0 : count)),
-      rung: Array.from(matter.rung, (index) => RUNGS[index] ?? null),
+      outcome: listOf(outcome, (index) => OUTCOMES[index] ?? null),
+      bound: listOf(matter.bound, (bound) => (Number.isFinite(bound) ? bound : null)),
+      iterations: listOf(matter.iterations, (count) => (Number.isNaN(count) ? 0 : count)),
+      rung: listOf(matter.rung, (index) => RUNGS[index] ?? null),
     },
     readings: judgement?.readings ?? [],
     requirements: judgement?.requirements ?? [],
     diagnostics: matter.diagnostics.map((one) => ({ ...one, ...placeOf(starts, one.from) })),
     failures: [...matter.failures].sort((a, b) => a.point - b.point),
   };
+}
+
+/** A column as a list. A plain loop: over millions of points `Array.from` takes several times as long, and others wait meanwhile. */
+function listOf<T>(column: Float64Array, of: (value: number) => T): T[] {
+  const list = new Array<T>(column.length);
+  for (let k = 0; k < column.length; k++) list[k] = of(column[k]!);
+  return list;
 }

@@ -1,35 +1,33 @@
 import { describe, expect, it } from "vitest";
-import { csvLines } from "@/app/(work)/[workspace]/runs/[id]/csv-lines";
-import type { RunDocument } from "@/lib/analyses/result";
+import { csvHead, csvLines } from "@/app/(work)/[workspace]/runs/[id]/csv-lines";
+import type { PointBlock } from "@/lib/services/runs/point-blocks";
 
 /** Made up; not from any solver. */
-const DOCUMENT: RunDocument = {
-  format: "sweepwright-run/1",
-  title: "Made up",
-  verdict: "no data",
+const PLAN = {
   axes: [
-    { knob: "V_in", unit: "V", scale: "list", values: [-0.5, 0.1] },
-    { knob: "temperature", unit: "K", scale: "list", values: [283.15, 298.15] },
+    { knob: "V_in", unit: "V", scale: "list" as const, values: [-0.5, 0.1] },
+    { knob: "temperature", unit: "K", scale: "list" as const, values: [283.15, 298.15] },
   ],
   draws: 0,
+  points: 4,
   traces: [
-    { name: 'a "quoted", one', unit: "V", values: [null, 0.1 + 0.2, 1e-20, null] },
-    { name: "=ratio", unit: "1", values: [null, 1, 2, null] },
+    { name: 'a "quoted", one', unit: "V" },
+    { name: "=ratio", unit: "1" },
   ],
-  points: {
-    outcome: ["singular", "converged", "converged", null],
-    bound: [null, null, null, null],
-    iterations: [50, 2, 2, 0],
-    rung: [null, "newton", "warm start", null],
-  },
-  readings: [],
-  requirements: [],
-  diagnostics: [],
-  failures: [],
 };
+const BLOCKS: readonly PointBlock[] = [
+  {
+    from: 0,
+    traces: [Float64Array.of(Number.NaN, 0.1 + 0.2, 1e-20), Float64Array.of(Number.NaN, 1, 2)],
+    outcome: ["singular", "converged", "converged"],
+  },
+  { from: 3, traces: [Float64Array.of(Number.NaN), Float64Array.of(Number.NaN)], outcome: [null] },
+];
+const linesOf = (plan: Parameters<typeof csvHead>[0]) =>
+  [csvHead(plan), ...BLOCKS.map((block) => csvLines(plan, block))].join("").split("\r\n");
 
 describe("points as comma-separated values", () => {
-  const lines = [...csvLines(DOCUMENT)].join("").split("\r\n");
+  const lines = linesOf(PLAN);
 
   it("have a head with units, quoted where it must be (RFC 4180), and never a formula", () => {
     expect(lines[0]).toBe(`point,V_in [V],temperature [K],"a ""quoted"", one [V]",'=ratio,outcome`);
@@ -46,9 +44,7 @@ describe("points as comma-separated values", () => {
   });
 
   it("name the draw of each point where there are draws, the nominal one first", () => {
-    const drawn = [...csvLines({ ...DOCUMENT, axes: DOCUMENT.axes.slice(0, 1), draws: 1 })]
-      .join("")
-      .split("\r\n");
+    const drawn = linesOf({ ...PLAN, axes: PLAN.axes.slice(0, 1), draws: 1 });
     expect(drawn[0]).toMatch(/^point,draw,V_in/u);
     expect(drawn.slice(1, 5).map((line) => line.split(",").slice(0, 3).join(","))).toEqual([
       "0,0,-0.5",

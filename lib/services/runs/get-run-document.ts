@@ -5,12 +5,14 @@ import { run } from "@/db/schema/run";
 import { shard } from "@/db/schema/shard";
 import { compile } from "@/lib/analyses/compile";
 import { toDocument } from "@/lib/analyses/document";
+import type { Plan } from "@/lib/analyses/plan";
 import type { RunDocument } from "@/lib/analyses/result";
 import type { Actor } from "@/lib/permissions/actor";
 import { authorize } from "@/lib/permissions/authorize";
 import { traceColumn } from "../chunks/columns";
 import { readColumns } from "../chunks/read-columns";
 import { findRun, type RunRecord } from "./find-run";
+import { LARGE, roomFor } from "./large-documents";
 
 /** Names the form of the document; raised with every change of it, so that readers drop what they kept. */
 const FORM = "1";
@@ -22,14 +24,21 @@ export async function getRunVersion(actor: Actor, id: string): Promise<string> {
   return versionOf(asked);
 }
 
+export interface FoundDocument {
+  readonly document: RunDocument;
+  readonly etag: string;
+  /** The document is large: to be sent in pieces. */
+  readonly large: boolean;
+  /** Says that a large document is no longer needed, so that the next one may be read. */
+  readonly release: () => void;
+}
+
 /**
  * The run document, with what is solved so far. `etag` is weak and never newer than the document: it is read first, and results
- * are stored together with the event that tells of them.
+ * are stored together with the event that tells of them. Throws "too large" for a run of more than 16 million numbers, and
+ * "too many" while other large ones are being read.
  */
-export async function getRunDocument(
-  actor: Actor,
-  id: string,
-): Promise<{ document: RunDocument; etag: string }> {
+export async function getRunDocument(actor: Actor, id: string): Promise<FoundDocument> {
   const db = database();
   const asked = await findRun(db, actor, id);
   authorize(actor, "run.read", asked);
@@ -39,10 +48,22 @@ export async function getRunDocument(
     .innerJoin(revision, and(eq(revision.netlistId, run.netlistId), eq(revision.number, run.revisionNumber)))
     .where(eq(run.id, asked.id));
   const { plan, text } = of!;
+  const numbers = asked.points * (plan.traces.length + 4);
+  const release = roomFor(actor.userId, numbers);
+  try {
+    const document = await documentOf(asked, plan, text);
+    return { document, etag: versionOf(asked), large: numbers >= LARGE, release };
+  } catch (error) {
+    release();
+    throw error;
+  }
+}
+
+async function documentOf(asked: RunRecord, plan: Plan, text: string): Promise<RunDocument> {
   const traces = plan.traces.map((_, i) => traceColumn(i));
   const [columns, shards] = await Promise.all([
     readColumns(asked.id, asked.points, [...traces, "outcome", "iterations", "rung", "bound"]),
-    db
+    database()
       .select({ failures: shard.failures })
       .from(shard)
       .where(eq(shard.runId, asked.id))
@@ -50,7 +71,7 @@ export async function getRunDocument(
   ]);
   const column = (name: string) => columns.get(name) ?? new Float64Array(asked.points).fill(Number.NaN);
   const { job, diagnostics } = compile(text);
-  const document = toDocument({
+  return toDocument({
     design: job?.design ?? null,
     plan: { ...plan, title: asked.title },
     text,
@@ -62,7 +83,6 @@ export async function getRunDocument(
     failures: shards.flatMap(({ failures }) => failures),
     diagnostics,
   });
-  return { document, etag: versionOf(asked) };
 }
 
 function versionOf({ id, lastEvent }: RunRecord): string {

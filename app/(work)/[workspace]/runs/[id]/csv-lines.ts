@@ -1,17 +1,11 @@
 import { settingOf } from "@/app/_components/curves/curve-set";
-import type { RunDocument } from "@/lib/analyses/result";
+import type { Plan } from "@/lib/analyses/plan";
+import type { PointBlock } from "@/lib/services/runs/point-blocks";
 
-/** Points in one piece of text. */
-const PIECE = 1000;
+type Planned = Pick<Plan, "axes" | "draws" | "points" | "traces">;
 
-/**
- * A run document as comma-separated values (RFC 4180), in pieces: a head line with the unit in brackets, then a line a point.
- * Values are in coherent SI units with every digit they have; an unsolved value is empty. Draw 0 is the nominal design.
- */
-export function* csvLines(document: RunDocument): Generator<string, void> {
-  const { axes, draws, traces, points } = document;
-  const count = points.outcome.length;
-  const ofOneDraw = count / (draws + 1);
+/** The head line of a run's points as comma-separated values (RFC 4180), the unit of each column in brackets. */
+export function csvHead({ axes, draws, traces }: Planned): string {
   const heads = [
     "point",
     ...(draws > 0 ? ["draw"] : []),
@@ -19,16 +13,23 @@ export function* csvLines(document: RunDocument): Generator<string, void> {
     ...traces.map(({ name, unit }) => headed(name, unit)),
     "outcome",
   ];
-  yield `${heads.map(quoted).join(",")}\r\n`;
-  for (let from = 0; from < count; from += PIECE) {
-    let piece = "";
-    for (let k = from; k < Math.min(count, from + PIECE); k++) {
-      const setting = settingOf(axes, k).map(({ value }) => value);
-      const values = traces.map(({ values: column }) => column[k] ?? "");
-      piece += `${[k, ...(draws > 0 ? [Math.floor(k / ofOneDraw)] : []), ...setting, ...values, points.outcome[k] ?? "not solved"].join(",")}\r\n`;
-    }
-    yield piece;
+  return `${heads.map(quoted).join(",")}\r\n`;
+}
+
+/**
+ * A line a point of `block`. Values are in coherent SI units with every digit they have; an unsolved value is empty. Draw 0 is
+ * the nominal design.
+ */
+export function csvLines({ axes, draws, points }: Planned, { from, traces, outcome }: PointBlock): string {
+  const ofOneDraw = points / (draws + 1);
+  let lines = "";
+  for (let i = 0; i < outcome.length; i++) {
+    const k = from + i;
+    const setting = settingOf(axes, k).map(({ value }) => value);
+    const values = traces.map((column) => (Number.isFinite(column[i]) ? column[i] : ""));
+    lines += `${[k, ...(draws > 0 ? [Math.floor(k / ofOneDraw)] : []), ...setting, ...values, outcome[i] ?? "not solved"].join(",")}\r\n`;
   }
+  return lines;
 }
 
 function headed(name: string, unit: string): string {

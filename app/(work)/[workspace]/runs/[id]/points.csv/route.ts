@@ -1,36 +1,28 @@
-import { problem } from "@/lib/api/problem";
+import { route } from "@/lib/api/route";
 import { actorFor } from "@/lib/auth/actor";
-import { getRun } from "@/lib/services/runs/get-run";
-import { getRunDocument } from "@/lib/services/runs/get-run-document";
-import { csvLines } from "../csv-lines";
-
-interface Context {
-  readonly params: Promise<{ readonly workspace: string; readonly id: string }>;
-}
+import { getPointBlocks } from "@/lib/services/runs/point-blocks";
+import { csvHead, csvLines } from "../csv-lines";
 
 /** GET → every point of a run as comma-separated values in UTF-8: setting, traces, outcome; coherent SI units. */
-export async function GET(request: Request, { params }: Context): Promise<Response> {
-  try {
-    const { workspace, id } = await params;
-    const actor = await actorFor(workspace, request);
-    const [run, { document }] = await Promise.all([getRun(actor, id), getRunDocument(actor, id)]);
-    const lines = csvLines(document);
-    const encoder = new TextEncoder();
-    const body = new ReadableStream<Uint8Array>({
-      pull(controller) {
-        const { value, done } = lines.next();
-        if (done) controller.close();
-        else controller.enqueue(encoder.encode(value));
-      },
-    });
-    return new Response(body, {
-      headers: {
-        "content-type": "text/csv; charset=utf-8; header=present",
-        "content-disposition": `attachment; filename="run-${run.number}.csv"`,
-        "cache-control": "private, no-store",
-      },
-    });
-  } catch (error) {
-    return problem(error);
-  }
-}
+export const GET = route<{ workspace: string; id: string }>(async (request, { workspace, id }) => {
+  const actor = await actorFor(workspace, request);
+  const { run, blocks } = await getPointBlocks(actor, id);
+  const encoder = new TextEncoder();
+  const body = new ReadableStream<Uint8Array>({
+    start(controller) {
+      controller.enqueue(encoder.encode(csvHead(run.plan)));
+    },
+    async pull(controller) {
+      const { value, done } = await blocks.next();
+      if (done) controller.close();
+      else controller.enqueue(encoder.encode(csvLines(run.plan, value)));
+    },
+  });
+  return new Response(body, {
+    headers: {
+      "content-type": "text/csv; charset=utf-8; header=present",
+      "content-disposition": `attachment; filename="run-${run.number}.csv"`,
+      "cache-control": "private, no-store",
+    },
+  });
+});
