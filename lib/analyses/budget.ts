@@ -90,7 +90,12 @@ function worstValues(
   nominal: Contract,
   traces: readonly Float64Array[],
 ): (Reading & { readonly label: string })[] {
-  const { requirements } = judge(nominal, { traces });
+  // Without draws a share of them has no worst place, so each is judged as if it held for all.
+  const all = nominal.design.requirements.map((one) => ({ ...one, share: null }));
+  const { requirements } = judge(
+    { ...nominal, design: { ...nominal.design, requirements: all } },
+    { traces },
+  );
   return nominal.design.requirements.flatMap(({ label, value, windows, from, to }, i) => {
     const { worst } = requirements[i]!;
     if (worst === null) return [];

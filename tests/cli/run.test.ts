@@ -64,6 +64,24 @@ describe("sweepwright run", { timeout: 60_000 }, () => {
     expect(err).toMatch(/^-: 11 points in/u);
   });
 
+  test("tells what costs a requirement the most, also one that need not hold in every draw", async () => {
+    const input = divider('require out within 0.5 V ± 1 % at V_in = 1 V in 90 % of draws as "half"')
+      .replace("R1 : resistor 1 kΩ", "R1 : resistor 1 kΩ ± 1 %")
+      .replace("R2 : resistor 1 kΩ", "R2 : resistor 1 kΩ ± 2 %")
+      .replace("show", "draws 10 seed 1\nshow");
+    const { out } = await shell(["run", "--quiet", "-"], { input });
+    // Both resistors move the half alike, so their shares go with the squares of their tolerances, 4 to 1.
+    expect(out).toMatch(/\nbudget .*\n(.*\n)?half .* R2 80 %, R1 20 %\n/u);
+  });
+
+  test("tells all operating points where the text asks for them", async () => {
+    const { out, code } = await shell(["run", "--quiet", "examples/schmitt-trigger.swn"]);
+    expect(code).toBe(0);
+    expect(out).toMatch(/\n1 +1\sV to 2\.4\sV +stable /u);
+    expect(out).toMatch(/\n3 +1\.4\sV to 2\.4\sV +unstable /u);
+    expect(out).toMatch(/\nfold at 2\.411/u);
+  });
+
   test("draws and colours on a terminal alone, and leaves colour out where NO_COLOR says so", async () => {
     const shown = await shell(["run", "-"], { input: HOLDS, terminal: true });
     expect(shown.out).toContain("▁▂");
