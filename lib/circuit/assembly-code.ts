@@ -2,7 +2,7 @@ import { expm1, exponentials } from "@/lib/devices/exponential";
 import { compiled } from "./compiled";
 import type { State } from "./state";
 
-/** Statements of generated code at most: the compiler behind it gives up on functions several times as long. */
+/** Statements and entries of generated code at most: each takes up to 40 bytes of the 60 kB beyond which V8 no longer optimises. */
 const MOST_STATEMENTS = 1500;
 
 /** One term of a sum that ends up in an array; without operator, the whole of it. */
@@ -26,8 +26,8 @@ type Maker = (
 
 /**
  * The assembly of a system as straight code: every sum in a variable of its own, every place a number. Parts write themselves
- * into it, with the same operations in the same order as their `addTo`. Names in it are those of the program; of the user's
- * there is nothing, not even a number: figures are read from the parts.
+ * into it, with the same operations in the same order as their `addTo`. Names in it are those of the program (no build may rename
+ * properties); of the user's there is nothing, not even a number: figures are read from the parts.
  */
 export class AssemblyCode {
   private readonly lines: (string | Sum)[] = [];

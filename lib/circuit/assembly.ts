@@ -1,3 +1,4 @@
+import { exponentials } from "@/lib/devices/exponential";
 import { AssemblyCode } from "./assembly-code";
 import type { Part } from "./part";
 import { CurrentPart } from "./parts/current";
@@ -22,7 +23,9 @@ export class Assembly {
   private readonly opamps: OpampPart[] = [];
   private readonly diodes: DiodePart[] = [];
   private readonly transistors: TransistorPart[] = [];
-  private readonly others: Part[] = [];
+  private readonly others: readonly Part[];
+  /** Of the diodes: v/η, and what `exponentials` makes of it. */
+  private readonly exponents: readonly [Float64Array, Float64Array, Float64Array];
   private code: AssemblyCode | null;
   private written: (() => void) | null = null;
   private count = 0;
@@ -49,6 +52,8 @@ export class Assembly {
         taken.add(part);
       }
     }
+    const array = () => new Float64Array(this.diodes.length);
+    this.exponents = [array(), array(), array()];
     this.others = parts.filter((part) => !taken.has(part));
   }
 
@@ -79,7 +84,10 @@ export class Assembly {
     for (let k = 0; k < voltages.length; k++) voltages[k]!.addTo(state);
     for (let k = 0; k < currents.length; k++) currents[k]!.addTo(state);
     for (let k = 0; k < opamps.length; k++) opamps[k]!.addTo(state);
-    for (let k = 0; k < diodes.length; k++) diodes[k]!.addTo(state);
+    const [ys, less, whole] = this.exponents;
+    for (let k = 0; k < diodes.length; k++) diodes[k]!.ask(ys, k);
+    exponentials(ys, less, whole, diodes.length);
+    for (let k = 0; k < diodes.length; k++) diodes[k]!.addGiven(state, less, whole, k);
     for (let k = 0; k < transistors.length; k++) transistors[k]!.addTo(state);
   }
 }

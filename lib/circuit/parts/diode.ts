@@ -97,8 +97,25 @@ export class DiodePart implements JunctionPart, Proof {
   addConstantSlopes(): void {}
 
   addTo(state: State): void {
+    this.lawAt(this.v, this.law);
+    this.stamp(state);
+  }
+
+  /** The exponent of a plain junction, v/η, into ys[k]. */
+  ask(ys: Float64Array, k: number): void {
+    ys[k] = this.v / this.at.eta;
+  }
+
+  /** As `addTo` of a plain junction, with what `exponentials` gave for its exponent. */
+  addGiven(state: State, less: Float64Array, whole: Float64Array, k: number): void {
+    const { law, at } = this;
+    law.i = at.Is * less[k]!;
+    law.g = (at.Is / at.eta) * whole[k]!;
+    this.stamp(state);
+  }
+
+  private stamp(state: State): void {
     const { anode, cathode, law, places } = this;
-    this.lawAt(this.v, law);
     flow(state, anode, cathode, law.i + law.g * (this.junction(state) - this.v));
     if (this.photocurrent !== 0) flow(state, cathode, anode, this.photocurrent * state.share);
     const { jacobian } = state;

@@ -2,8 +2,8 @@ import { type Compiled, compiled } from "@/lib/circuit/compiled";
 import type { Elimination, SparseShape } from "../elimination";
 import { type Kernel, MOST_GROWTH } from "./kernel";
 
-/** Multiplications of generated code at most: the compiler behind it gives up on functions of some 2,500. */
-const MOST_OPERATIONS = 1500;
+/** Multiplications and entries of generated code at most: each takes up to 50 bytes of the 60 kB beyond which V8 no longer optimises. */
+const MOST_OPERATIONS = 1100;
 
 /**
  * An elimination as generated code: every value in a variable of its own, every place a number, no loop and no test of a place. The
