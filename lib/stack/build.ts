@@ -11,18 +11,18 @@ export interface Outputs {
   readonly pages: string;
   /** Folder of main.mjs and solve-thread.mjs. */
   readonly worker: string;
+  /** Folder of main.mjs and solve-thread.mjs of the command line, where its launcher looks for them; null: not built. */
+  readonly commandLine: string | null;
 }
 
-/** Where the launcher of the command line looks for what was built: main.mjs and solve-thread.mjs. */
-const COMMAND_LINE = ".build/cli";
-
-export const DEMO_OUTPUTS: Outputs = { pages: ".next", worker: ".build/worker" };
+export const DEMO_OUTPUTS: Outputs = { pages: ".next", worker: ".build/worker", commandLine: ".build/cli" };
 
 /** Builds what the sources have changed since. */
 export async function buildAll(outputs: Outputs): Promise<void> {
   const stamp = sourceStamp(process.cwd());
   await unlessStamped(outputs.worker, stamp, () => buildWorker(outputs.worker));
-  await unlessStamped(COMMAND_LINE, stamp, () => buildCommandLine(COMMAND_LINE));
+  const { commandLine } = outputs;
+  if (commandLine !== null) await unlessStamped(commandLine, stamp, () => buildCommandLine(commandLine));
   await unlessStamped(outputs.pages, stamp, async () => {
     console.log("Building the pages (about a minute the first time).");
     await buildPages(outputs.pages);

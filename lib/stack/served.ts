@@ -5,7 +5,11 @@ import { TEST_FOLDER, writeTestTsconfig } from "./phases";
 import { freePort } from "./ports";
 import { type Running, startWeb, startWorker } from "./programs";
 
-const OUTPUTS: Outputs = { pages: `${TEST_FOLDER}/next`, worker: `${TEST_FOLDER}/worker` };
+const OUTPUTS: Outputs = {
+  pages: `${TEST_FOLDER}/next`,
+  worker: `${TEST_FOLDER}/worker`,
+  commandLine: null,
+};
 
 /** The production build for the browser tests, in folders of its own. */
 export async function buildForTests(): Promise<void> {
