@@ -1,6 +1,8 @@
 import { compile } from "@/lib/analyses/compile";
 import { System } from "@/lib/circuit/system";
+import { Certificate } from "@/lib/solver/certificate";
 import { Ladder } from "@/lib/solver/ladder";
+import { LinearSolver } from "@/lib/solver/linear";
 import type { Outcome } from "@/lib/solver/outcome";
 import { distance } from "./answers";
 import { textOf } from "./circuit";
@@ -34,4 +36,28 @@ export function scoreOf(seed: number, answers: readonly bigint[]): Score {
 export function quantile(values: readonly number[], part: number): number {
   const sorted = values.toSorted((a, b) => a - b);
   return sorted[Math.min(sorted.length - 1, Math.floor(part * sorted.length))]!;
+}
+
+/** A planted wrong answer: one net 1 nV off its solution. What is still proved of it (V, NaN for nothing), and how far it is off. */
+export function plantedAt(
+  seed: number,
+  answers: readonly bigint[],
+  k: number,
+): { bound: number; error: number } {
+  const circuit = randomCircuit(seed);
+  const { job } = compile(textOf(circuit));
+  const system = new System(job!.design, job!.circuit);
+  new Ladder(system, false).solve(false);
+  const { state } = system;
+  const numbers = circuit.nets.map((net) => system.circuit.nets.get(net)!);
+  state.x[numbers[k % numbers.length]!]! += 1e-9;
+  state.low.fill(0);
+  system.settle();
+  system.assemble();
+  const linear = new LinearSolver(system.pattern, state.jacobian);
+  const step = new Float64Array(job!.circuit.size);
+  linear.solve(state.jacobian, state.residual, step);
+  const bound = new Certificate(system, linear).prove();
+  const error = Math.max(...numbers.map((number, i) => distance(state.x[number]!, answers[i]!)));
+  return { bound, error };
 }

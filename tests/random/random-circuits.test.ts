@@ -1,6 +1,6 @@
 import { describe, expect, test } from "vitest";
 import { HOW_MANY, readAnswers } from "./answers";
-import { quantile, scoreOf } from "./measure";
+import { plantedAt, quantile, scoreOf } from "./measure";
 
 /** The part of the set that every test run solves; `npx tsx tests/random/whole.ts` solves the whole. */
 const PART = 150;
@@ -28,6 +28,12 @@ describe("random circuits from a cold start", () => {
         0.5,
       ),
     ).toBeLessThanOrEqual(10e-12);
+  });
+
+  test("answers planted 1 nV off are refused, but where rounding alone may be as much", () => {
+    const planted = answers.slice(0, PART).map((one, k) => plantedAt(k + 1, one, 7 * k));
+    expect(planted.filter(({ bound, error }) => !Number.isNaN(bound) && !(error <= bound))).toEqual([]);
+    expect(planted.filter(({ bound }) => Number.isNaN(bound)).length).toBeGreaterThan(0.95 * PART);
   });
 
   test("take 15 steps at the median and 30 at the 95th percentile, at most", () => {
