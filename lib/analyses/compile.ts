@@ -22,7 +22,7 @@ export function compile(
 ): { diagnostics: readonly Diagnostic[]; job: Job | null } {
   const { design, diagnostics } = check(text, options);
   if (design === null) return { diagnostics, job: null };
-  const all = [...diagnostics, ...checkWiring(design)].sort((a, b) => a.from - b.from || a.to - b.to);
+  const all = [...diagnostics, ...checkWiring(design, text)].sort((a, b) => a.from - b.from || a.to - b.to);
   if (all.some(({ severity }) => severity === "error")) return { diagnostics: all, job: null };
   const circuit = numberUnknowns(design);
   return { diagnostics: all, job: { design, circuit, plan: planOf(design, circuit) } };

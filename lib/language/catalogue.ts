@@ -6,6 +6,7 @@ export const CATALOGUE = {
   TXT1: "A character the language does not use",
   TXT2: "A text that is not closed",
   TXT3: "A number beyond reach",
+  TXT4: "A comma for the decimal point",
 
   FRM1: "A line that begins no statement",
   FRM2: "Something else belongs here",
@@ -56,6 +57,7 @@ export const CATALOGUE = {
   WIR7: "A shorted element",
   WIR8: "Two drivers on a net",
   WIR9: "Nothing is wired",
+  WIR10: "Nothing touches ground",
 
   PLN1: "A sweep of something that is no knob",
   PLN2: "A knob swept twice",

@@ -2,7 +2,7 @@ import type { Cursor } from "./cursor";
 import { MOST_DEPTH } from "./limits";
 import type { Span } from "./span";
 import type { BinaryOperator, Binding, Expression, UnaryOperator, Word } from "./syntax";
-import { PRECEDENCE, quote } from "./token";
+import { PRECEDENCE, quote, type Token } from "./token";
 
 const COMPARISON = 1;
 const ADDITION = 2;
@@ -16,12 +16,23 @@ export class ExpressionParser {
   private depth = 0;
   /** Height of the tree made last. */
   private height = 0;
+  /** Whether commas part values here, so that `4,7` may be two of them. */
+  private listed = false;
 
   constructor(private readonly cursor: Cursor) {}
 
   /** Any expression, comparisons included. */
   expression(): Expression {
     return this.binary(COMPARISON);
+  }
+
+  /** Reads what stands between commas. */
+  among<T>(parse: () => T): T {
+    const outside = this.listed;
+    this.listed = true;
+    const result = parse();
+    this.listed = outside;
+    return result;
   }
 
   /** An expression without a comparison, as in a tolerance. */
@@ -90,6 +101,7 @@ export class ExpressionParser {
     this.height = 1;
     if (token.kind === "number") {
       cursor.take();
+      if (!this.listed) this.decimalComma(token);
       const unit = cursor.token.kind === "unit" ? cursor.takeWord() : null;
       return { kind: "number", value: Number(token.text), unit, from: token.from, to: cursor.behind };
     }
@@ -102,6 +114,21 @@ export class ExpressionParser {
     }
     cursor.failHere("FRM3", "A value is wanted here");
     return { kind: "hole", from: token.from, to: token.from };
+  }
+
+  /** `4,7` where no list can stand: the point was meant. */
+  private decimalComma(whole: Token): void {
+    const { cursor } = this;
+    const [comma, rest] = [cursor.token, cursor.peek(1)];
+    if (comma.text !== "," || rest.kind !== "number" || !/^\d+$/u.test(`${whole.text}${rest.text}`)) return;
+    if (comma.from !== whole.to || rest.from !== comma.to) return;
+    const unit = cursor.peek(2).kind === "unit" ? cursor.peek(2) : null;
+    const text = `${whole.text}.${rest.text}${unit === null ? "" : ` ${unit.text}`}`;
+    const span = { from: whole.from, to: (unit ?? rest).to };
+    const message = `A number has a decimal point, not a comma; write ${quote(text)}.`;
+    cursor.note("TXT4", span, message, { title: `Write ${text}`, ...span, text });
+    cursor.take();
+    cursor.take();
   }
 
   private name(): Expression {
@@ -122,7 +149,7 @@ export class ExpressionParser {
     while (!cursor.isSymbol(")") && !cursor.atEnd) {
       const name = cursor.token.kind === "word" && cursor.isSymbol("=", 1) ? cursor.takeWord() : null;
       if (name !== null) cursor.take();
-      const value = this.nested(() => this.expression());
+      const value = this.among(() => this.nested(() => this.expression()));
       if (name === null) args.push(value);
       else bindings.push({ name, value, from: name.from, to: value.to });
       height = Math.max(height, this.height);

@@ -36,14 +36,17 @@ export function parseTokens(tokens: readonly Token[], length: number, report: Re
     const closes = nesting.isInside && cursor.acceptSymbol("}");
     const form = closes ? null : parser.statement(from);
     const to = Math.max(cursor.behind, form?.to ?? 0);
+    const rest = cursor.token;
     if (!cursor.atEnd) {
       const message = `The statement is complete before ${quote(cursor.token.text)}; begin a new line there or remove it.`;
       cursor.fail("FRM4", cursor.token, message);
     }
     const end = cursor.token.from;
     const whole = cursor.leave();
-    if (form === null) nesting.close(to);
-    else nesting.add({ ...form, from, to: whole ? to : end, whole }, cursor.justOpened);
+    if (form === null) {
+      nesting.close(to);
+      if (!whole) nesting.add({ kind: "broken", declares: null, from: rest.from, to: end, whole }, false);
+    } else nesting.add({ ...form, from, to: whole ? to : end, whole }, cursor.justOpened);
   }
   return { netlist: { statements: nesting.finish() }, tight: cursor.tight };
 }
@@ -137,7 +140,7 @@ class StatementParser {
       const name: Word | null =
         cursor.token.kind === "word" && cursor.isSymbol("=", 1) ? cursor.takeWord() : null;
       if (name !== null) cursor.take();
-      const value = this.expressions.expression();
+      const value = this.expressions.among(() => this.expressions.expression());
       items.push({ name, value, from, to: value.to });
     } while (cursor.acceptSymbol(","));
     return { kind: "show", items, ...span };

@@ -19,8 +19,9 @@ export class PlanParser {
   private range(): SweepRange {
     const { cursor, expressions } = this;
     if (cursor.acceptWord("over")) {
-      const values = [expressions.sum()];
-      while (cursor.acceptSymbol(",")) values.push(expressions.sum());
+      const one = () => expressions.among(() => expressions.sum());
+      const values = [one()];
+      while (cursor.acceptSymbol(",")) values.push(one());
       return { kind: "list", values };
     }
     if (!cursor.acceptWord("from")) {
@@ -29,7 +30,8 @@ export class PlanParser {
     }
     const start = expressions.sum();
     if (!cursor.acceptWord("to")) cursor.failHere("FRM2", "`to` and the end of the range are wanted here");
-    const stop = expressions.sum();
+    // A count may follow close behind: `to 1,20 per decade`.
+    const stop = expressions.among(() => expressions.sum());
     const spacings = "`, 20 per decade`, `, 51 points` or `, step 1 V`";
     if (!cursor.acceptSymbol(",")) cursor.failHere("FRM2", `The spacing is wanted here: ${spacings}`);
     if (cursor.acceptWord("step"))

@@ -10,7 +10,9 @@ import { quote } from "./token";
 
 /** What stands for a unit in other places: spelled-out names and habits, without prefix. */
 const SPELLED_OUT: readonly (readonly [RegExp, string])[] = [
+  [/^mega?(?=.)/iu, "M"],
   [/ohms?$/iu, "Ω"],
+  [/^r$/iu, "Ω"],
   [/volts?$/iu, "V"],
   [/amp(?:ere)?s?$/iu, "A"],
   [/watts?$/iu, "W"],
@@ -45,8 +47,16 @@ export function unitOfLiteral(
     report.error("UNI6", word, message, change(word, differences));
     return null;
   }
+  if (/\p{L}\d+$/u.test(word.text) && pointByLetter(literal, wanted, report)) return null;
+  if (/^mega?$/iu.test(word.text)) {
+    const proposal = `${literal.value} M${wanted ?? "Ω"}`;
+    const message = `${quote(word.text)} is no prefix, mega is ${quote("M")}; write ${quote(proposal)}.`;
+    report.error("UNI2", literal, message, change(literal, proposal));
+    return null;
+  }
   const prefix = word.text === "u" ? "µ" : word.text;
-  if (PREFIXES.has(prefix)) {
+  // A lone R is ohms to everyone but the table of prefixes.
+  if (PREFIXES.has(prefix) && prefix !== "R") {
     const proposal = `${literal.value} ${prefix}${wanted ?? likelyUnit(prefix)}`;
     const message = `${quote(`${literal.value}${word.text}`)} has a prefix but no unit; write ${quote(proposal)}.`;
     report.error("UNI2", literal, message, change(literal, proposal));
@@ -60,6 +70,32 @@ export function unitOfLiteral(
   }
   reportUnknownUnit(word, report);
   return null;
+}
+
+/** `4k7`, `2R2`, `3V3`: a prefix or unit in the place of the decimal point. Says whether it is that. */
+function pointByLetter(
+  literal: Extract<Expression, { kind: "number" }>,
+  wanted: string | null,
+  report: Report,
+): boolean {
+  const parts = /^([\p{L}])(\d+)$/u.exec(literal.unit!.text);
+  if (parts === null || !Number.isInteger(literal.value)) return false;
+  const [, letter, digits] = parts as unknown as [string, string, string];
+  const prefix = letter === "u" ? "µ" : letter === "K" ? "k" : letter;
+  const number = `${literal.value}.${digits}`;
+  const written = `${literal.value}${literal.unit!.text}`;
+  const start = `${quote(written)} has a letter in the place of the decimal point`;
+  const unit = /^[rR]$/u.test(letter) ? "Ω" : PREFIXES.has(prefix) ? null : letter;
+  if (unit !== null && parseUnit(unit) === null) return false;
+  if (unit === null && wanted === null) {
+    const example = `${number} ${prefix}${likelyUnit(prefix)}`;
+    const message = `${start}; write a point there, and behind the number the prefix with its unit, as in ${quote(example)}.`;
+    report.error("UNI1", literal, message);
+    return true;
+  }
+  const proposal = `${number} ${unit ?? `${prefix}${wanted}`}`;
+  report.error("UNI1", literal, `${start}; write ${quote(proposal)}.`, change(literal, proposal));
+  return true;
 }
 
 function reportUnknownUnit(word: Word, report: Report): void {

@@ -10,6 +10,16 @@ function lines(...more: string[]): string {
   return `${[source, ideal, finite, npn, bare, ...more].join("\n")}\n`;
 }
 
+/** A circuit whose drivers count from ground while nothing is wired to it. */
+function groundless(first: string, net: string): string {
+  return `${[
+    "model real : opamp { gain = 1e6 }",
+    `${first} -- V1 : voltage 1 V -- in -- R1 : resistor 1 kΩ -- m -- R2 : resistor 1 kΩ -- out`,
+    `A1 : real { plus = ${net}, minus = m, out = out }`,
+    `out -- R3 : resistor 1 kΩ -- ${net}`,
+  ].join("\n")}\n`;
+}
+
 /** Wiring problems: the text has nothing else to complain about. */
 export const WIRING_PROBLEMS: readonly Problem[] = [
   { code: "WIR1", text: lines("in -- R2 : resistor 1 kΩ -- «out»"), says: "`R2.right`" },
@@ -133,4 +143,19 @@ export const WIRING_PROBLEMS: readonly Problem[] = [
     text: lines("in -- R2 : resistor 1 kΩ -- m", "«A1 : amp { plus = in, minus = m, out = ground }»"),
   },
   { code: "WIR9", text: "«»" },
+  {
+    code: "WIR10",
+    text: groundless("«gnd»", "gnd"),
+    mended: groundless("ground", "ground"),
+    says: "did you mean `ground` for `gnd`?",
+  },
+  { code: "WIR10", text: groundless("«Ground»", "Ground"), mended: groundless("ground", "ground") },
+  { code: "WIR10", text: groundless("«vss»", "vss"), mended: groundless("ground", "ground") },
+  { code: "WIR10", text: groundless("«common»", "common"), says: "give the common net the name `ground`" },
+  {
+    code: "WIR10",
+    text: "block b(p, gnd) {\n  p -- R1 : resistor 1 kΩ -- gnd\n}\n«gnd» -- V1 : voltage 1 V -- in\nX : b { p = in, gnd = gnd }\n",
+    mended:
+      "block b(p, gnd) {\n  p -- R1 : resistor 1 kΩ -- gnd\n}\nground -- V1 : voltage 1 V -- in\nX : b { p = in, gnd = ground }\n",
+  },
 ];

@@ -9,6 +9,7 @@ import { BLOCK_PROBLEMS } from "./block-problems";
 import { CONTRACT_PROBLEMS } from "./contract-problems";
 import { LAW_PROBLEMS } from "./law-problems";
 import { LANGUAGE_PROBLEMS, type Problem } from "./problems";
+import { SPELLING_PROBLEMS } from "./spelling-problems";
 
 function unmark(marked: string): { text: string; from: number; to: number } {
   const from = marked.indexOf("«");
@@ -32,17 +33,20 @@ function expectProblem(problem: Problem, diagnose: (text: string) => Diagnostic[
 }
 
 describe("each problem of a text is found once, at its place, in one sentence", { timeout: 60_000 }, () => {
-  test.each([...LANGUAGE_PROBLEMS, ...BLOCK_PROBLEMS, ...LAW_PROBLEMS, ...CONTRACT_PROBLEMS])(
-    "$code: $text",
-    (problem) => {
-      expectProblem(problem, (text) => check(text).diagnostics);
-    },
-  );
+  test.each([
+    ...LANGUAGE_PROBLEMS,
+    ...BLOCK_PROBLEMS,
+    ...LAW_PROBLEMS,
+    ...CONTRACT_PROBLEMS,
+    ...SPELLING_PROBLEMS,
+  ])("$code: $text", (problem) => {
+    expectProblem(problem, (text) => check(text).diagnostics);
+  });
   test.each(WIRING_PROBLEMS)("$code: $text", (problem) => {
     expectProblem(problem, (text) => {
       const { design, diagnostics } = check(text);
       expect(diagnostics.filter((one) => one.code !== "PLN8")).toEqual([]);
-      return checkWiring(design!);
+      return checkWiring(design!, text);
     });
   });
 });
@@ -90,9 +94,14 @@ describe("limits", () => {
 
 test("every code of the catalogue is produced by a test, and no test knows another", () => {
   const tested = new Set(
-    [...LANGUAGE_PROBLEMS, ...BLOCK_PROBLEMS, ...LAW_PROBLEMS, ...CONTRACT_PROBLEMS, ...WIRING_PROBLEMS].map(
-      (problem) => problem.code,
-    ),
+    [
+      ...LANGUAGE_PROBLEMS,
+      ...BLOCK_PROBLEMS,
+      ...LAW_PROBLEMS,
+      ...CONTRACT_PROBLEMS,
+      ...SPELLING_PROBLEMS,
+      ...WIRING_PROBLEMS,
+    ].map((problem) => problem.code),
   );
   // Those of `use` are in use.test.ts.
   for (const code of ["CAP1", "CAP3", "CAP5", "CAP6", "CAP9", "NAM13", "NAM14"]) tested.add(code);

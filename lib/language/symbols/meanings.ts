@@ -57,7 +57,7 @@ export const CONSTANT_MEANINGS: Readonly<Record<string, string>> = {
 
 /** Parts of a signal after its last dot. */
 export const SIGNAL_MEANINGS: Readonly<Record<"v" | "i" | "p", string>> = {
-  v: "voltage: of a net to ground, of an element from its left net to its right one",
+  v: "voltage: of a net to ground, of an element the left net less the right one, so that of a `voltage` element is minus its value",
   i: "current: through an element from left to right, or into a pin",
   p: "power that an element takes up",
 };

@@ -40,7 +40,9 @@ describe("the text under the pointer", () => {
     [
       "a signal",
       place("ls.v", 0, 3),
-      ["voltage: of a net to ground, of an element from its left net to its right one"],
+      [
+        "voltage: of a net to ground, of an element the left net less the right one, so that of a `voltage` element is minus its value",
+      ],
     ],
   ])("tells of %s", (_, offset, lines) => {
     expect(linesAt(offset)).toEqual(lines);
