@@ -65,7 +65,7 @@ export class ElementCheck {
 
   private model(statement: ModelStatement, kind: ModelKind): Model {
     const { name, settings, whole, from, to } = statement;
-    const owner = { text: `the ${kind} ${quote(name.text)}`, model: null, name, isWhole: whole };
+    const owner = { text: `the ${kind} ${quote(name.text)}`, model: null, name, isWhole: whole, pins: [] };
     const params = this.parameters.of(settings, KINDS[kind].parameters, owner);
     return { name: name.text, kind, params, from, to };
   }
@@ -73,7 +73,7 @@ export class ElementCheck {
   element(wired: Wired): Element {
     const { kind, model, pins, name, isWhole, from, to } = wired;
     const { follows, parameters } = KINDS[kind];
-    const owner = { text: `the ${kind} ${quote(name.text)}`, model, name, isWhole };
+    const owner = { text: `the ${kind} ${quote(name.text)}`, model, name, isWhole, pins: KINDS[kind].pins };
     const law = follows === "law" ? this.laws.of(wired) : null;
     const settings = follows === "law" ? this.laws.others(wired.settings) : wired.settings;
     const params = this.parameters.of(settings, model === null ? parameters : {}, owner);

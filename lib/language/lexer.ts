@@ -5,6 +5,10 @@ import { CLAUSE_WORDS, quote, SYMBOLS, type Token } from "./token";
 
 const BLANK = /[^\S\n]+/uy;
 const COMMENT = /#[^\n]*/uy;
+const SLASHED = /\/\/[^\n]*/uy;
+const SEMICOLON = /^;+$/u;
+/** Something behind semicolons in their line. */
+const SOMETHING = /;+[^\S\n]*[^\s]/uy;
 const NUMBER = /(?:\d+(?:\.\d+)?|\.\d+)(?:[eE][+-]?\d+)?/uy;
 const WORD = /[\p{L}_][\p{L}0-9_]*/uy;
 const STRING = /"(?:[^"\\\n]|\\[^\n])*("?)/uy;
@@ -68,6 +72,12 @@ export function tokenize(text: string, report: Report): Token[] {
       push("comment", comment[0].length, comment[0].trimEnd());
       continue;
     }
+    const slashed = match(SLASHED);
+    if (slashed !== null) {
+      reportComment(report, at, "//");
+      push("comment", slashed[0].length, slashed[0].trimEnd());
+      continue;
+    }
     const number = match(NUMBER);
     if (number !== null) {
       if (!Number.isFinite(Number(number[0]))) {
@@ -99,7 +109,8 @@ export function tokenize(text: string, report: Report): Token[] {
       continue;
     }
     const stray = match(STRAY)?.[0] ?? String.fromCodePoint(text.codePointAt(at)!);
-    reportStray(report, at, stray);
+    if (SEMICOLON.test(stray) && match(SOMETHING) !== null) reportComment(report, at, stray);
+    else reportStray(report, at, stray);
     push("unknown", stray.length, stray);
   }
   return tokens;
@@ -135,6 +146,12 @@ function reportOpenText(report: Report, from: number, source: string): void {
     to,
     text: '"',
   });
+}
+
+function reportComment(report: Report, from: number, mark: string): void {
+  const span = { from, to: from + mark.length };
+  const fix = { ...span, title: "Write #", text: "#" };
+  report.error("TXT1", span, `A comment begins with ${quote("#")}, not with ${quote(mark)}.`, fix);
 }
 
 function reportStray(report: Report, from: number, stray: string): void {

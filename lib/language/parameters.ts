@@ -14,7 +14,16 @@ export interface Owner {
   readonly model: string | null;
   readonly name: Word;
   readonly isWhole: boolean;
+  /** Pins of its kind, none for a model. */
+  readonly pins: readonly string[];
 }
+
+/** Names that the terminal resistances of a transistor go by elsewhere. */
+const KNOWN_ELSEWHERE: Readonly<Record<string, string>> = {
+  Rb: "R_base",
+  Re: "R_emitter",
+  Rc: "R_collector",
+};
 
 /** Checks `parameter = value` of models and elements against kinds.ts. */
 export class Parameters {
@@ -87,11 +96,14 @@ export class Parameters {
     this.report.error("UNI8", value, `The parameter ${quote(name)} (${shape.about}) must be ${bounds}.`);
   }
 
-  private unknown(name: Setting["name"], known: readonly string[], { text, model }: Owner): void {
+  private unknown(name: Setting["name"], known: readonly string[], { text, model, pins }: Owner): void {
     const start = `${text[0]!.toUpperCase()}${text.slice(1)} has no pin or parameter ${quote(name.text)}`;
     const list = known.length === 0 ? "it takes no parameters" : `its parameters are ${known.join(", ")}`;
-    const otherwise = model === null ? list : `parameters are given in the model ${quote(model)}`;
-    this.report.propose("NAM6", name, start, () => nearest(name.text, known), otherwise);
+    const others = model === null ? list : `parameters are given in the model ${quote(model)}`;
+    const otherwise = pins.length === 0 ? others : `its pins are ${pins.join(", ")}, and ${others}`;
+    const alias = Object.hasOwn(KNOWN_ELSEWHERE, name.text) ? KNOWN_ELSEWHERE[name.text]! : "";
+    const search = () => (known.includes(alias) ? alias : nearest(name.text, [...pins, ...known]));
+    this.report.propose("NAM6", name, start, search, otherwise);
   }
 
   /** Parameters that must be given, and those that mean nothing without another. */

@@ -72,9 +72,12 @@ class StatementParser {
     const span = { from, to: first.to };
     if (first.kind === "word") {
       if (cursor.isSymbol("--", 1)) return this.parts.path(span);
+      if (cursor.isSymbol("-", 1) && cursor.peek(2).kind === "word" && cursor.isSymbol(":", 3))
+        return this.parts.path(span);
       if (cursor.isSymbol(":", 1)) return this.parts.device(span);
       if (STATEMENT_WORDS.has(first.text)) return this.known(cursor.take().text, span);
     }
+    if (first.kind === "number" && cursor.isSymbol("--", 1)) return this.parts.path(span);
     cursor.fail("FRM1", first, `No statement begins with ${quote(first.text)}; ${meant(cursor)}.`);
     return { kind: "broken", declares: null, ...span };
   }

@@ -4,6 +4,8 @@ import type { Span } from "./span";
 import type { PathPart, Setting, StatementForm, ToleranceSyntax, Word } from "./syntax";
 import { quote } from "./token";
 
+export const ZERO = "A net is called by a name, and the one that voltages are counted from is `ground`.";
+
 /** Reads what is wired: paths, devices, models, and the settings and tolerances inside them. */
 export class PartParser {
   constructor(
@@ -14,7 +16,7 @@ export class PartParser {
   /** `net -- NAME : kind … -- net -- …`; nets and parts must take turns and a net stands at both ends. */
   path(span: Span): StatementForm {
     const { cursor } = this;
-    const nets: Word[] = [cursor.wantWord("The name of a net")];
+    const nets: Word[] = [this.net()];
     const parts: PathPart[] = [];
     while (cursor.acceptSymbol("--")) {
       if (cursor.token.kind === "word" && !cursor.isSymbol(":", 1)) {
@@ -22,7 +24,7 @@ export class PartParser {
         break;
       }
       const part = this.part();
-      parts.push(part);
+      parts.push(this.withoutNet(part));
       if (!cursor.acceptSymbol("--")) {
         cursor.failHere("FRM7", `The path wants ${quote("--")} and a net after ${quote(part.name.text)}`);
       } else if (cursor.token.kind === "word" && cursor.isSymbol(":", 1)) {
@@ -30,9 +32,38 @@ export class PartParser {
         const message = `Between ${quote(part.name.text)} and ${quote(next.text)} the path wants a net; name it: \`… -- net -- ${next.text} : …\`.`;
         cursor.fail("FRM7", next, message);
       }
-      nets.push(cursor.wantWord("The name of a net"));
+      nets.push(this.net());
     }
+    if (cursor.isSymbol("-") && cursor.peek(1).kind === "word") this.wantDashes(cursor.token);
     return { kind: "path", nets, parts, ...span };
+  }
+
+  /** The name of a net, with `ground` for a net that is called 0. */
+  private net(): Word {
+    const { cursor } = this;
+    const { token } = cursor;
+    if (token.kind !== "number" || token.text !== "0") return cursor.wantWord("The name of a net");
+    const fix = { title: "Change to ground", from: token.from, to: token.to, text: "ground" };
+    cursor.fail("FRM2", token, ZERO, fix);
+    return { text: "ground", from: token.from, to: token.to };
+  }
+
+  /** A part whose value has swallowed the net behind a single `-`, without it. */
+  private withoutNet(part: PathPart): PathPart {
+    const { value } = part;
+    if (value?.kind !== "binary" || value.operator !== "-") return part;
+    if (value.right.kind !== "name" || value.right.path.length !== 1) return part;
+    const goesOn = this.cursor.peek(1).kind === "word" && this.cursor.isSymbol(":", 2);
+    if (!this.cursor.atEnd && !(this.cursor.isSymbol("--") && goesOn)) return part;
+    this.wantDashes({ from: value.left.to, to: value.right.from });
+    return { ...part, value: { kind: "hole", from: value.from, to: value.to } };
+  }
+
+  /** `at` is a single minus sign, or what is between its neighbours. */
+  private wantDashes(at: Span): void {
+    const text = at.to - at.from === 1 ? "--" : " -- ";
+    const fix = { title: "Write --", from: at.from, to: at.to, text };
+    this.cursor.fail("FRM7", at, "Nets and elements of a path are joined by `--`, not by `-`.", fix);
   }
 
   private elementMissing(left: Word): string {

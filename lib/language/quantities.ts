@@ -140,13 +140,21 @@ export class Quantities {
           ? want.unit
           : mistakenUnit(expression.unit.text, want.dimension);
     if (unit === null || expression.kind !== "number") {
-      this.report.error("UNI3", expression, `${message}.`);
+      this.report.error("UNI3", expression, `${message}; ${mending(expression, want)}.`);
       return;
     }
     const text = `${expression.value} ${unit}`;
     const fix = { title: `Write ${text}`, from: expression.from, to: expression.to, text };
     this.report.error("UNI3", expression, `${message}; write ${quote(text)}.`, fix);
   }
+}
+
+/** How a value of a wrong unit is mended where no one unit was surely meant. */
+function mending(expression: Expression, want: Want): string {
+  const isLiteral = expression.kind === "number";
+  if (!sameDimension(want.dimension, PURE))
+    return `give ${isLiteral ? "a value" : "an expression"} in ${want.unit}`;
+  return isLiteral ? "leave its unit out" : "divide it by a quantity of its unit";
 }
 
 /** Written with % or ppm: a share of the value even where the value is itself a pure number. */

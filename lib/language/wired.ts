@@ -3,6 +3,7 @@ import { removal } from "./diagnostic";
 import type { Flat } from "./expand";
 import { KINDS, MODEL_KINDS } from "./kinds";
 import { Names, ownName } from "./names";
+import { ZERO } from "./part-parser";
 import type { Report } from "./report";
 import type { Span } from "./span";
 import type { Expression, Setting, Statement, ToleranceSyntax, Word } from "./syntax";
@@ -155,6 +156,16 @@ export class Wirer {
     const net = plainName(setting.value);
     if (net === null) {
       if (setting.value.kind === "hole") return;
+      if (setting.value.kind === "number" && setting.value.value === 0 && setting.value.unit === null) {
+        const { from, to } = setting.value;
+        this.report.error("FRM10", { from, to }, ZERO, {
+          title: "Change to ground",
+          from,
+          to,
+          text: "ground",
+        });
+        return;
+      }
       const message = `The pin ${quote(setting.name.text)} wants the name of a net, as in \`${setting.name.text} = out\`.`;
       this.report.error("FRM10", setting.value, message);
       return;

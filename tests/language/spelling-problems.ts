@@ -45,4 +45,71 @@ export const SPELLING_PROBLEMS: readonly Problem[] = [
     says: "mega is `M`",
   },
   { code: "UNI2", text: within("let a = «10 Meg»"), mended: within("let a = 10 MΩ") },
+
+  { code: "TXT1", text: within("let a = 1 V «//» note"), mended: within("let a = 1 V # note") },
+  { code: "TXT1", text: within("«//» let a = 1 V"), mended: within("# let a = 1 V") },
+  { code: "TXT1", text: within("let a = 1 V «;» note"), mended: within("let a = 1 V # note") },
+  { code: "TXT1", text: within("let a = 1 V«;»"), mended: within("let a = 1 V") },
+
+  {
+    code: "FRM2",
+    text: within("in -- R2 : resistor 1 kΩ -- «0»"),
+    mended: within("in -- R2 : resistor 1 kΩ -- ground"),
+    says: "`ground`",
+  },
+  {
+    code: "FRM2",
+    text: within("«0» -- R2 : resistor 1 kΩ -- in"),
+    mended: within("ground -- R2 : resistor 1 kΩ -- in"),
+  },
+  {
+    code: "FRM10",
+    text: within("R2 : resistor { left = «0», right = in, value = 1 kΩ }"),
+    mended: within("R2 : resistor { left = ground, right = in, value = 1 kΩ }"),
+  },
+  {
+    code: "FRM7",
+    text: within("in «-» R2 : resistor 1 kΩ -- ground"),
+    mended: within("in -- R2 : resistor 1 kΩ -- ground"),
+    says: "joined by `--`",
+  },
+  {
+    code: "FRM7",
+    text: within("in -- R2 : resistor 1 kΩ« - »ground"),
+    mended: within("in -- R2 : resistor 1 kΩ -- ground"),
+  },
+  {
+    code: "FRM7",
+    text: within("in -- R2 : resistor 1 kΩ« - »m -- R3 : resistor 1 kΩ -- ground"),
+    mended: within("in -- R2 : resistor 1 kΩ -- m -- R3 : resistor 1 kΩ -- ground"),
+  },
+  {
+    code: "FRM7",
+    text: within("in -- R2 : resistor 1 kΩ -- m «-» R3 : resistor 1 kΩ -- ground"),
+    mended: within("in -- R2 : resistor 1 kΩ -- m -- R3 : resistor 1 kΩ -- ground"),
+  },
+
+  {
+    code: "NAM6",
+    text: within("model m : npn { Is = 1 fA }\nQ1 : m { c = in, b = in, e = ground, «drain» = in }"),
+    says: "its pins are c, b, e",
+  },
+  {
+    code: "NAM6",
+    text: within("R2 : resistor { left = in, right = ground, value = 1 kΩ, «anode» = in }"),
+    says: "its pins are left, right",
+  },
+  {
+    code: "NAM6",
+    text: within("model m : npn { Is = 1 fA, «Re» = 1 Ω }"),
+    mended: within("model m : npn { Is = 1 fA, R_emitter = 1 Ω }"),
+  },
+  {
+    code: "NAM6",
+    text: within("model m : npn { Is = 1 fA, «Rb» = 1 Ω }"),
+    mended: within("model m : npn { Is = 1 fA, R_base = 1 Ω }"),
+  },
+
+  { code: "UNI3", text: within("ground -- R2 : resistor «1 V» -- in"), says: "give a value in Ω" },
+  { code: "UNI3", text: within("model m : diode { Is = 1 fA, n = «1 V» }"), says: "leave its unit out" },
 ];
