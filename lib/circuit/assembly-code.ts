@@ -1,5 +1,5 @@
 import { expm1, exponentials } from "@/lib/devices/exponential";
-import { compiled } from "./compiled";
+import { compiled, type Warmth } from "./compiled";
 import type { State } from "./state";
 
 /** Statements and entries of generated code at most: each takes up to 40 bytes of the 60 kB beyond which V8 no longer optimises. */
@@ -11,6 +11,12 @@ interface Sum {
   readonly index: number;
   readonly operator: "+" | "-" | "";
   readonly by: string;
+}
+
+/** An assembly as generated code. */
+export interface WrittenAssembly {
+  readonly run: () => void;
+  readonly warmth: Warmth;
 }
 
 type Maker = (
@@ -133,7 +139,7 @@ export class AssemblyCode {
    * The code as a function over a state whose Jacobian holds the constant slopes wherever none but them is added; null where it
    * is too long, or none may be generated here.
    */
-  compile(state: State, constantSlopes: Float64Array): (() => void) | null {
+  compile(state: State, constantSlopes: Float64Array): WrittenAssembly | null {
     if (this.lines.length + constantSlopes.length > MOST_STATEMENTS) return null;
     const text = [
       "const {x,low:l,residual:r,scale:s,jacobian:j}=state;",
@@ -145,10 +151,20 @@ export class AssemblyCode {
       ...this.written(),
       "};",
     ].join("\n");
-    const maker = compiled<Maker>("state,c,objects,Y,E,T,exponentials,expm1", text);
-    if (maker === null) return null;
+    const found = compiled<Maker>("state,c,objects,Y,E,T,exponentials,expm1", text);
+    if (found === null) return null;
     const array = () => new Float64Array(this.exponents);
-    return maker(state, constantSlopes, this.objects, array(), array(), array(), exponentials, expm1);
+    const run = found.made(
+      state,
+      constantSlopes,
+      this.objects,
+      array(),
+      array(),
+      array(),
+      exponentials,
+      expm1,
+    );
+    return { run, warmth: found.warmth };
   }
 
   /** The lines with each sum in a variable from its first to its last term, so that few are alive at a time. */

@@ -1,5 +1,5 @@
 import { exponentials } from "@/lib/devices/exponential";
-import { AssemblyCode } from "./assembly-code";
+import { AssemblyCode, type WrittenAssembly } from "./assembly-code";
 import type { Part } from "./part";
 import { CurrentPart } from "./parts/current";
 import { DiodePart } from "./parts/diode";
@@ -9,8 +9,8 @@ import { TransistorPart } from "./parts/transistor";
 import { VoltagePart } from "./parts/voltage";
 import type { State } from "./state";
 
-/** Assemblies before code is generated: one operating point does not repay it. */
-const FIRST_LISTED = 24;
+/** Assemblies before code is generated: a short sweep does not repay it. */
+const FIRST_LISTED = 2000;
 
 /**
  * Adds the parts of a system up, kind by kind: first those that can be written as straight code, then the others. Each kind has a
@@ -27,7 +27,7 @@ export class Assembly {
   /** Of the diodes: v/η, and what `exponentials` makes of it. */
   private readonly exponents: readonly [Float64Array, Float64Array, Float64Array];
   private code: AssemblyCode | null;
-  private written: (() => void) | null = null;
+  private written: WrittenAssembly | null = null;
   private count = 0;
 
   constructor(
@@ -60,10 +60,10 @@ export class Assembly {
   /** Residual, scale and Jacobian at the present unknowns and linearisation. */
   run(): void {
     const { state, others } = this;
-    if (this.written === null) this.add();
+    if (this.written?.warmth.isUsed() !== true) this.add();
     else {
       if (others.length > 0) state.jacobian.set(this.constantSlopes);
-      this.written();
+      this.written.run();
     }
     for (let k = 0; k < others.length; k++) others[k]!.addTo(state);
     if (++this.count === FIRST_LISTED) this.compile();

@@ -9,8 +9,8 @@ import { WrittenKernel } from "./kernel/written";
 const GOOD_BACKWARD_ERROR = 1e-9;
 const WORST_BACKWARD_ERROR = 1e-3;
 
-/** Solutions with the sample's pivots before code is generated for them: one operating point does not repay it. */
-const FIRST_LISTED = 24;
+/** Solutions before code is generated for the sample's pivots: a short sweep does not repay it. */
+const FIRST_LISTED = 2000;
 
 /** What Newton's method asks of linear algebra: solve J·d = −F into `step`, then again with the same J. */
 export interface Linear {
@@ -35,7 +35,7 @@ export interface Factors {
 export class LinearSolver implements Linear {
   private readonly first: Elimination | null;
   private readonly firstListed: Kernel | null;
-  private firstWritten: Kernel | null = null;
+  private firstWritten: WrittenKernel | null = null;
   private solutions = 0;
   private plan: Elimination | null = null;
   private kernel: Kernel | null = null;
@@ -57,7 +57,7 @@ export class LinearSolver implements Linear {
 
   /** Goes back to the pivots of the sample. */
   reset(): void {
-    this.use(this.first, this.firstWritten ?? this.firstListed);
+    this.use(this.first, this.firstListed);
   }
 
   /** Factorises `jacobian` and solves for `step`. False where the matrix is singular or not finite. */
@@ -109,14 +109,16 @@ export class LinearSolver implements Linear {
     if (length !== this.factors.length) this.factors = new Float64Array(length);
   }
 
-  /** Generates code for the sample's pivots, and goes over to it where these are in use. */
+  /** Generates code for the sample's pivots. */
   private write(): void {
-    if (this.first === null) return;
-    this.firstWritten = WrittenKernel.of(this.shape, this.first);
-    if (this.firstWritten !== null && this.plan === this.first) this.kernel = this.firstWritten;
+    if (this.first !== null) this.firstWritten = WrittenKernel.of(this.shape, this.first);
   }
 
   private attempt(jacobian: Float64Array, residual: Float64Array, step: Float64Array, most: number): boolean {
+    const { firstWritten } = this;
+    if (firstWritten !== null && this.plan === this.first) {
+      this.kernel = firstWritten.warmth.isUsed() ? firstWritten : this.firstListed;
+    }
     if (this.kernel === null) return false;
     if (this.kernel.solve(jacobian, residual, step, this.factors)) return true;
     return this.errorOf(jacobian, residual, step) <= most;

@@ -9,6 +9,11 @@ const ROUNDS = 8;
 /** Nanoseconds that a batch should take. */
 const BATCH = 1e6;
 
+/** Steps and milliseconds of warming up. */
+const WARM_STEPS = 30_000;
+const MOST_WARMING = 3000;
+const LEAST_WARMING = 2000;
+
 const SECTIONS = [10, 100, 1000, 10_000];
 
 /** Unknowns up to which the dense LU is measured; its cost grows with their cube. */
@@ -29,7 +34,7 @@ interface Figures {
 function contest(job: Job, native: Native | null): Figures {
   const steps = new Steps(job);
   const take = (k: number) => steps.take(k);
-  nanoseconds(take, 2000, 3);
+  warmUp(take);
   const length = Math.max(1, Math.round(BATCH / nanoseconds(take, 100, 20)));
   const times = {
     ours: [] as number[],
@@ -58,6 +63,14 @@ function contest(job: Job, native: Native | null): Figures {
     native: least(times.native),
     bytesPerStep: bytesPerStep(take, 20 * length),
   };
+}
+
+/** Takes steps until generated code has been taken into use and optimised, which a busy machine does late. */
+function warmUp(take: (k: number) => void): void {
+  const begun = performance.now();
+  for (let k = 0; performance.now() - begun < MOST_WARMING && k < WARM_STEPS; k++) take(k);
+  const late = performance.now();
+  for (let k = 0; performance.now() - late < LEAST_WARMING; k++) take(k);
 }
 
 function compare(theirs: Float64Array, ours: Float64Array, { circuit, plan }: Job): void {

@@ -4,7 +4,7 @@ import { compile } from "@/lib/analyses/compile";
 import { System } from "@/lib/circuit/system";
 
 /** Assemblies after which code has taken over. */
-const MANY = 30;
+const MANY = 2100;
 
 function systemOf(text: string): System {
   const { job, diagnostics } = compile(text);

@@ -1,4 +1,4 @@
-import { type Compiled, compiled } from "@/lib/circuit/compiled";
+import { type Compiled, compiled, type Warmth } from "@/lib/circuit/compiled";
 import type { Elimination, SparseShape } from "../elimination";
 import { type Kernel, MOST_GROWTH } from "./kernel";
 
@@ -16,13 +16,14 @@ export class WrittenKernel implements Kernel {
   private constructor(
     private readonly plan: Elimination,
     private readonly whole: Compiled,
+    readonly warmth: Warmth,
   ) {}
 
   /** Null where the elimination is too long for straight code, or none may be generated here. */
   static of(shape: SparseShape, plan: Elimination): WrittenKernel | null {
     if (plan.operations + shape.rows.length > MOST_OPERATIONS) return null;
     const whole = compiled("a,b,d,f", solveText(shape, plan));
-    return whole === null ? null : new WrittenKernel(plan, whole);
+    return whole === null ? null : new WrittenKernel(plan, whole.made, whole.warmth);
   }
 
   solve(a: Float64Array, b: Float64Array, d: Float64Array, f: Float64Array): boolean {
@@ -30,12 +31,12 @@ export class WrittenKernel implements Kernel {
   }
 
   solveAgain(b: Float64Array, d: Float64Array, f: Float64Array): void {
-    this.again ??= compiled("b,d,f", againText(this.plan))!;
+    this.again ??= compiled("b,d,f", againText(this.plan))!.made;
     this.again(b, d, f);
   }
 
   solveTransposed(b: Float64Array, d: Float64Array, f: Float64Array): void {
-    this.transposed ??= compiled("b,d,f", transposedText(this.plan))!;
+    this.transposed ??= compiled("b,d,f", transposedText(this.plan))!.made;
     this.transposed(b, d, f);
   }
 }

@@ -4,9 +4,9 @@ import { compile } from "@/lib/analyses/compile";
 import { solveRange } from "@/lib/analyses/sweep";
 import { mayCompile } from "@/lib/circuit/compiled";
 
-/** Prints whether code may be generated here, and a hash of the bytes that the first 600 points of a netlist file give. */
+/** Prints whether code may be generated here, and a hash of the bytes that the first 1,200 points of a netlist file give. */
 const { job } = compile(readFileSync(process.argv[2]!, "utf8"));
-const { traces, unknowns, residual, iterations } = solveRange(job!, 0, Math.min(600, job!.plan.points));
+const { traces, unknowns, residual, iterations } = solveRange(job!, 0, Math.min(1200, job!.plan.points));
 const hash = createHash("sha256");
 for (const column of [...traces, ...unknowns, residual, iterations])
   hash.update(new Uint8Array(column.buffer));
