@@ -130,8 +130,22 @@ export class Quantities {
     return { amount, relative };
   }
 
+  /** `over 4,7 kΩ`: in a list the 4 is read as a value of its own, and lacks its unit. */
+  private hasDecimalComma(expression: Expression): boolean {
+    if (expression.kind !== "number" || expression.unit !== null) return false;
+    const { from, to } = expression;
+    const behind = /^,(\d+)/u.exec(this.agreement.source({ from: to, to: to + 20 }));
+    if (behind === null || !Number.isInteger(expression.value)) return false;
+    const text = `${expression.value}.${behind[1]}`;
+    const span = { from, to: to + behind[0].length };
+    const message = `A number has a decimal point, not a comma; write ${quote(text)}, or give each value of the list its unit.`;
+    this.report.error("TXT4", span, message, { title: `Write ${text}`, ...span, text });
+    return true;
+  }
+
   private reportMisfit(expression: Expression, typed: Typed, want: Want): void {
     const wanted = sameDimension(want.dimension, PURE) ? "a pure number" : `in ${want.unit}`;
+    if (this.hasDecimalComma(expression)) return;
     const message = `${want.what} is ${wanted}, but ${this.agreement.text(expression)} is ${describeDimension(typed.dimension)}`;
     const unit =
       expression.kind !== "number" || sameDimension(want.dimension, PURE)

@@ -8,6 +8,11 @@ export const SPELLING_PROBLEMS: readonly Problem[] = [
     mended: within("ground -- R2 : resistor 4.7 kΩ -- in"),
     says: "decimal point",
   },
+  {
+    code: "TXT4",
+    text: within("knob k = 1 V\nsweep k over «4,7» V, 5 V"),
+    mended: within("knob k = 1 V\nsweep k over 4.7 V, 5 V"),
+  },
   { code: "TXT4", text: within("let a = 2 * «4,7»"), mended: within("let a = 2 * 4.7") },
   {
     code: "TXT4",
