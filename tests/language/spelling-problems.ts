@@ -117,4 +117,5 @@ export const SPELLING_PROBLEMS: readonly Problem[] = [
 
   { code: "UNI3", text: within("ground -- R2 : resistor «1 V» -- in"), says: "give a value in Ω" },
   { code: "UNI3", text: within("model m : diode { Is = 1 fA, n = «1 V» }"), says: "leave its unit out" },
+  { code: "UNI10", text: within("ground -- R2 : resistor 1 kΩ ± «5» -- in"), says: "write `5 Ω` or `5 %`" },
 ];
