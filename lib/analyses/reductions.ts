@@ -34,7 +34,7 @@ export class Course {
 /** Reductions of one trace to one number. */
 type Single = Exclude<ReductionName, "deviation" | "error_from" | "at" | "reach">;
 
-/** A reduction of `ys`, one value a point of the course; NaN where any of them is no number. For `decades_where` a value is 1 or 0. */
+/** A reduction of `ys`, one value a point of its course; NaN where any of them is no number. For `decades_where` a value is 1 or 0. */
 export function reduce(name: Single, ys: Float64Array, course: Course): number {
   if (ys.length === 0 || !ys.every(Number.isFinite)) return Number.NaN;
   switch (name) {
