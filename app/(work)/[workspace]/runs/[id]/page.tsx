@@ -62,7 +62,7 @@ export default async function RunPage({ params, searchParams }: Props) {
       key={run.id}
       workspace={workspace}
       first={run}
-      found={found}
+      found={found && { document: found.document, etag: found.etag }}
       point={point}
       span={span}
       search={search.toString()}
