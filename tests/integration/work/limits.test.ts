@@ -12,7 +12,7 @@ import type { Limits } from "@/worker/thread";
 import { ThreadPool } from "@/worker/thread-pool";
 import { type OwnDatabase, ownDatabase } from "./own-database";
 import { runRow, runUntil, shardRows, storedPoints } from "./runs";
-import { ladderText, largeText, longText, SLOW_TEXT } from "./texts";
+import { largeText, longText, SLOW_TEXT } from "./texts";
 
 let own: OwnDatabase;
 let actor: Actor;
@@ -62,7 +62,7 @@ test("a run cancelled while it computes is left at once, and nothing of the shar
 
 test("progress is told along the way, not oftener than five times a second", async () => {
   const processor = await processorWith({ seconds: 120, memory: 512 });
-  const { id } = await makeRun(actor, { text: ladderText(150) });
+  const { id } = await makeRun(actor, { text: SLOW_TEXT });
   expect(await processor.handle({ runId: id, index: 1 })).toBe("done");
   const told = await database().select().from(event).where(eq(event.runId, id)).orderBy(asc(event.sequence));
   // The last one tells of the stored shard, and is not held back.
