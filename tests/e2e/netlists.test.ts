@@ -49,20 +49,20 @@ describe("the table of netlists", () => {
     await page.goto(LIST);
     await page.getByRole("searchbox", { name: "Search netlists" }).fill("square-root");
     await page.waitForURL("**/netlists?query=square-root");
-    await page.getByText("1 found").waitFor();
+    await page.getByRole("main").getByText("1 found").waitFor();
     expect(await titles()).toEqual(["Square-root extractor"]);
     await page.reload();
-    await page.getByText("1 found").waitFor();
+    await page.getByRole("main").getByText("1 found").waitFor();
     await page.getByRole("searchbox", { name: "Search netlists" }).fill("no such circuit");
     await page.getByText("No netlist matches “no such circuit”").waitFor();
     await page.getByRole("button", { name: "Show all netlists" }).click();
-    await page.getByText("in this workspace").waitFor();
+    await page.getByRole("main").getByText("in this workspace").waitFor();
     expect((await titles()).length).toBeGreaterThan(6);
   });
 
   it("sorts both ways by the keyboard and says so to a screen reader", async () => {
     await page.goto(`${LIST}?query=one-quadrant`);
-    await page.getByText("2 found").waitFor();
+    await page.getByRole("main").getByText("2 found").waitFor();
     const sort = page.getByRole("button", { name: "Title" });
     await sort.focus();
     await page.keyboard.press("Enter");
@@ -139,7 +139,7 @@ describe("the table of netlists", () => {
       ] as const,
     );
     await page.goto(`${LIST}?query=${encodeURIComponent(MARK)}&sort=title&direction=asc`);
-    await page.getByText("30 found").waitFor();
+    await page.getByRole("main").getByText("30 found").waitFor();
     const first = await titles();
     await page.getByRole("button", { name: /Next/ }).click();
     await page.waitForURL(/page=2/);
