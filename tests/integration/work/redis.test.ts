@@ -8,6 +8,7 @@ import { Redis } from "ioredis";
 import { afterAll, afterEach, beforeAll, expect, test, vi } from "vitest";
 import { database } from "@/db/client";
 import { makeActor, makeNetlist, makeRun } from "@/db/factories";
+import { openThrottle } from "@/lib/auth/throttle";
 import { startRun } from "@/lib/services/runs/start-run";
 import { ensureTools, REDIS } from "@/lib/stack/debian";
 import { freePort } from "@/lib/stack/ports";
@@ -103,4 +104,23 @@ test("a Redis that lost everything costs nothing: the table knows what is to be 
   );
   await startWorker();
   expect(await runUntil(id, ended)).toMatchObject({ status: "done", shardsLeft: 0 });
+});
+
+test("attempts to sign in are counted in Redis by all processes together, without anybody's address in clear", async () => {
+  const [here, there] = [openThrottle(process.env.REDIS_URL), openThrottle(process.env.REDIS_URL)];
+  try {
+    for (let i = 0; i < 10; i++) {
+      await (i % 2 === 0 ? here : there).attempt("erik@bench.example", `192.0.2.${i}`);
+    }
+    await expect(there.attempt("erik@bench.example", "192.0.2.99")).rejects.toMatchObject({
+      code: "too many",
+    });
+    await here.succeeded("erik@bench.example", "192.0.2.1");
+    await there.attempt("erik@bench.example", "192.0.2.1");
+    const keys = await redis.keys("sign-in-account:*");
+    expect(keys).toHaveLength(1);
+    expect(keys[0]).not.toContain("erik");
+  } finally {
+    await Promise.all([here.close(), there.close()]);
+  }
 });
