@@ -1,16 +1,24 @@
 import type { Requirement } from "@/lib/language/ast";
 import { Ranks } from "@/lib/language/rank";
 import { unitOf } from "@/lib/units/quantity";
-import { marginsOf, valuesOf } from "./margin";
+import { boundedTrace, windowsOf } from "./bounded-trace";
+import { type Margins, marginsOf, valuesOf } from "./margin";
 import { placeOnAxes } from "./plan";
 import type { RequirementDocument, Verdict } from "./result";
 import type { Contract, Rows, Selection } from "./rows";
+import { type Compared, finite, Spread } from "./spread";
 import { yieldOf } from "./yield";
 
-/** What a requirement came to in one draw: its worst margin with its flat point, null where none is known. */
+/** The worst of a draw: its margin, its flat point and what was compared there. */
+interface Worst extends Compared {
+  readonly margin: number;
+  readonly point: number;
+}
+
+/** What a requirement came to in one draw; `worst` is null where no margin is known. */
 interface DrawResult {
   readonly draw: number;
-  readonly worst: { readonly margin: number; readonly point: number } | null;
+  readonly worst: Worst | null;
   readonly isBroken: boolean;
   /** Something that it needs is not known. */
   readonly lacks: boolean;
@@ -28,7 +36,7 @@ export function requireAll(contract: Contract, rows: Rows): RequirementDocument[
 
 function judgeOne(
   requirement: Requirement,
-  { plan }: Contract,
+  { design, plan }: Contract,
   rows: Rows,
   ranks: Ranks,
 ): RequirementDocument {
@@ -36,7 +44,8 @@ function judgeOne(
   const isTrace =
     !("bound" in relation || "target" in relation || "low" in relation) ||
     [value, ...valuesOf(relation)].some((typed) => ranks.of(typed) === "point");
-  const results = resultsOf(requirement, isTrace, rows);
+  const spread = new Spread();
+  const results = resultsOf(requirement, isTrace, rows, spread);
   const random = results.slice(1);
   const decisive = share === null ? lowest(results) : atShare(random, share);
   const { worst, draw } = decisive ?? { worst: null, draw: 0 };
@@ -53,11 +62,42 @@ function judgeOne(
     unit: unitOf(value.dimension),
     worst: worst === null ? null : { draw, at },
     ...(random.length === 0 ? {} : { yield: yieldOf(held, random.length) }),
+    ...comparedAt(worst, results[0]?.worst ?? null, spread),
+    windows: windowsOf(requirement, design),
+    bounds: boundedTrace(requirement, isTrace, spread.limits),
   };
 }
 
-/** One result a draw, the nominal one first. */
-function resultsOf({ value, relation, windows }: Requirement, isTrace: boolean, rows: Rows): DrawResult[] {
+/** What is compared over all draws, as the limits of the worst place show it. */
+function comparedAt(
+  worst: Worst | null,
+  nominal: Worst | null,
+  spread: Spread,
+): Pick<RequirementDocument, "allowed" | "value"> {
+  const place = worst ?? spread.limits;
+  if (place === null) {
+    return {
+      allowed: { low: null, high: null },
+      value: { nominal: null, worst: null, low: null, high: null },
+    };
+  }
+  return {
+    allowed: { low: finite(place.low), high: finite(place.high) },
+    value: {
+      nominal: nominal && spread.shownAt(place, nominal),
+      worst: worst && finite(worst.value),
+      ...spread.endsAt(place),
+    },
+  };
+}
+
+/** One result a draw, the nominal one first; all that is compared goes into `spread`. */
+function resultsOf(
+  { value, relation, windows }: Requirement,
+  isTrace: boolean,
+  rows: Rows,
+  spread: Spread,
+): DrawResult[] {
   const selection: Selection = rows.select(windows);
   const results: DrawResult[] = [];
   for (let row = 0; row < rows.count; row++) {
@@ -69,9 +109,12 @@ function resultsOf({ value, relation, windows }: Requirement, isTrace: boolean, 
     margins.values.forEach((margin, i) => {
       if (Number.isNaN(margin)) lacks = true;
       else if (margin < 0 || (margins.isStrict && margin === 0)) isBroken = true;
-      const place = isTrace ? selection.places[i]! : 0;
-      if (Number.isFinite(margin) && !(margin >= (worst?.margin ?? Number.POSITIVE_INFINITY))) {
-        worst = { margin, point: row * rows.length + place };
+      if (!Number.isFinite(margin)) return;
+      const compared = comparedIn(margins, i);
+      spread.add(compared);
+      if (!(margin >= (worst?.margin ?? Number.POSITIVE_INFINITY))) {
+        const place = isTrace ? selection.places[i]! : 0;
+        worst = { margin, point: row * rows.length + place, ...compared };
       }
     });
     if (margins.values.length === 0) lacks = true;
@@ -79,6 +122,10 @@ function resultsOf({ value, relation, windows }: Requirement, isTrace: boolean, 
   }
   // Without a margin nothing was looked at, whatever the reason.
   return results.map((one) => (one.worst === null ? { ...one, lacks: true } : one));
+}
+
+function comparedIn({ compared, low, high }: Margins, i: number): Compared {
+  return { value: compared[i]!, low: low[i]!, high: high[i]! };
 }
 
 function lowest(results: readonly DrawResult[]): DrawResult | null {

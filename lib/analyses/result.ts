@@ -41,6 +41,26 @@ export interface RequirementDocument {
   } | null;
   /** The random draws in which it holds, where there are any. */
   readonly yield?: Yield;
+  /** The limits of what it compares, in `unit`, at the worst place; null on a side without one, or where they are not known. */
+  readonly allowed: { readonly low: number | null; readonly high: number | null };
+  /**
+   * What it compares, in `unit`: at the worst place of the nominal design and of all, and the least and the most over points and
+   * draws. Where the limits differ from point to point, as those of the worst place show it (spread.ts). Null where not known.
+   */
+  readonly value: {
+    readonly nominal: number | null;
+    readonly worst: number | null;
+    readonly low: number | null;
+    readonly high: number | null;
+  };
+  /** The parts of the sweeps that it looks at; ends in coherent SI units, both the same for a single value. */
+  readonly windows: readonly { readonly knob: string; readonly low: number; readonly high: number }[];
+  /** The trace, or reading per point, whose own values it bounds, with the bounds that hold at all its points; null otherwise. */
+  readonly bounds: {
+    readonly trace: string;
+    readonly low: number | null;
+    readonly high: number | null;
+  } | null;
 }
 
 /** A failed point with its reason, for people. */

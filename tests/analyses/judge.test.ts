@@ -44,7 +44,7 @@ describe("a relation holds, with its margin and the place of the worst", () => {
 
   test("a reduction has no place on the first knob", () => {
     const found = required("highest(y) - lowest(y) <= 2.5 V", [1, 2, 3, 4]);
-    expect(found).toEqual({
+    expect(found).toMatchObject({
       label: "highest(y) - lowest(y) <= 2.5 V",
       verdict: "broken",
       margin: -0.5,

@@ -15,7 +15,7 @@ import { findRun, type RunRecord } from "./find-run";
 import { LARGE, roomFor } from "./large-documents";
 
 /** Names the form of the document; raised with every change of it, so that readers drop what they kept. */
-const FORM = "1";
+const FORM = "2";
 
 /** The version of a run's document, as an entity tag: it changes with every event of the run. */
 export async function getRunVersion(actor: Actor, id: string): Promise<string> {
