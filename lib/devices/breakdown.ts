@@ -1,4 +1,4 @@
-import { type CurrentAndSlope, type DiodeAt, junctionOf } from "./diode";
+import { type CurrentAndSlope, type DiodeAt, diodeLaw, junctionOf } from "./diode";
 import { exp, expm1 } from "./exponential";
 import { junctionStep } from "./junction-step";
 import { wrightOmega } from "./wright-omega";
@@ -101,7 +101,13 @@ function behind({ Rs }: DiodeAt, drop: number, out: CurrentAndSlope): void {
   out.g /= 1 + ratio;
 }
 
-/** The junction step of junction-step.ts where both ends of the characteristic rise. */
+/** What the mirror carries; written by `breakdownStep` alone. */
+const mirrored: CurrentAndSlope = { i: 0, g: 0 };
+
+/**
+ * The junction step of junction-step.ts where both ends of the characteristic rise. Beyond its origin the mirror is asked for its own
+ * current, which is less than the diode's by what flows at the origin: with the diode's, steps near there would end before the target.
+ */
 export function breakdownStep(
   at: DiodeAt,
   { mirror, origin }: BreakdownAt,
@@ -111,7 +117,8 @@ export function breakdownStep(
   target: number,
 ): number {
   if (v < origin) {
-    const next = origin - junctionStep(mirror, origin - v, -i, g, origin - target);
+    diodeLaw(mirror, origin - v, mirrored);
+    const next = origin - junctionStep(mirror, origin - v, mirrored.i, mirrored.g, origin - target);
     return next > 0 ? fromRest(at, next) : next;
   }
   const next = junctionStep(at, v, i, g, target);

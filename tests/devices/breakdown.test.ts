@@ -111,4 +111,18 @@ describe("the step of a junction with breakdown", () => {
     expect(stepFrom(-3, -1)).toBe(-1);
     expect(stepFrom(-1, -4)).toBe(-4);
   });
+
+  test("comes to rest at its target from wherever the breakdown begins", () => {
+    // A junction whose current stands still on the way makes Newton's method wait for it for ever.
+    const { diode, reverse } = zener;
+    for (const from of [1e-9, 1e-7, 1e-6, 2e-6, 1e-5, 1e-3]) {
+      const v = -reverse.volts - reverse.eta * Math.log(from / reverse.amperes);
+      for (const by of [-5, -1.4, -0.3, 0.3, 1.4, 5]) {
+        const target = v + by * reverse.eta;
+        let at = v;
+        for (let step = 0; step < 12; step++) at = stepFrom(at, target);
+        expect(Math.abs(at - target), `${from} A, ${by}`).toBeLessThanOrEqual(0.01 * diode.eta);
+      }
+    }
+  });
 });
