@@ -62,6 +62,7 @@ function judgeOne(
     unit: unitOf(value.dimension),
     worst: worst === null ? null : { draw, at },
     ...(random.length === 0 ? {} : { yield: yieldOf(held, random.length) }),
+    share,
     ...comparedAt(worst, results[0]?.worst ?? null, spread),
     windows: windowsOf(requirement, design),
     bounds: boundedTrace(requirement, isTrace, spread.limits),

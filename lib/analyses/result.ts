@@ -41,6 +41,8 @@ export interface RequirementDocument {
   } | null;
   /** The random draws in which it holds, where there are any. */
   readonly yield?: Yield;
+  /** The share of the draws in which it must hold, 0 to 1; null: in every one. */
+  readonly share: number | null;
   /** The limits of what it compares, in `unit`, at the worst place; null on a side without one, or where they are not known. */
   readonly allowed: { readonly low: number | null; readonly high: number | null };
   /**

@@ -1,0 +1,64 @@
+import { formatKnob, formatValue } from "@/app/_components/curves/figures-in-words";
+import type { RequirementDocument } from "@/lib/analyses/result";
+import { formatAxis, formatQuantity } from "@/lib/units/quantity";
+
+/** Significant digits of a value that stands beside its limits. */
+const DIGITS = 3;
+
+/** "at most 0.5 mV", "within ±0.5 mV", "0.99 to 1.01"; empty where no limit is known. */
+export function limitsInWords({ allowed, unit }: RequirementDocument): string {
+  const { low, high } = allowed;
+  const show = (value: number) => formatAxis(Number(value.toPrecision(6)), unit);
+  if (low === null) return high === null ? "" : `at most ${show(high)}`;
+  if (high === null) return `at least ${show(low)}`;
+  if (low === -high) return `within ±${show(high)}`;
+  return `${show(low)} to ${show(high)}`;
+}
+
+/** The worst value in short: as many digits as tell it from the limit that it is nearest to. */
+export function worstInWords({ value, allowed, unit }: RequirementDocument): string {
+  const { worst } = value;
+  if (worst === null) return "no value";
+  const limits = [allowed.low, allowed.high].filter((limit) => limit !== null && limit !== worst);
+  const isTold = (digits: number) =>
+    limits.every((limit) => Number(worst.toPrecision(digits)) !== Number(limit!.toPrecision(digits)));
+  let digits = DIGITS;
+  while (digits < 9 && !isTold(digits)) digits++;
+  return formatQuantity(worst, unit, digits);
+}
+
+/** "temperature 40 °C, draw 211"; empty where it is the same everywhere. */
+export function placeInWords({ worst }: RequirementDocument): string {
+  if (worst === null) return "";
+  const at = worst.at.map((knob) => `${knob.knob} ${formatKnob(knob, knob.value, 4)}`);
+  return [...at, ...(worst.draw > 0 ? [`draw ${worst.draw}`] : [])].join(", ");
+}
+
+/** What a margin bar shows, as a sentence for those who do not see it. */
+export function marginSentence(requirement: RequirementDocument): string {
+  const { label, verdict, unit, margin, value } = requirement;
+  const verb = { holds: "holds", broken: "is broken", "no data": "has no data" }[verdict];
+  const parts = [`${label} ${verb}`];
+  const limits = limitsInWords(requirement);
+  const place = placeInWords(requirement);
+  if (value.worst !== null) {
+    const asked = limits === "" ? "" : `; allowed ${limits}`;
+    parts.push(`worst value ${worstInWords(requirement)}${place && ` at ${place}`}${asked}`);
+  }
+  if (margin !== null) {
+    const size = formatQuantity(Math.abs(margin), unit, DIGITS);
+    parts.push(margin < 0 ? `missed by ${size}` : `margin ${size}`);
+  }
+  if (value.low !== null && value.high !== null && value.low !== value.high) {
+    parts.push(
+      `all values ${formatValueShort(value.low, unit)} to ${formatValueShort(value.high, unit)}, nominal ${
+        value.nominal === null ? "not known" : formatValueShort(value.nominal, unit)
+      }`,
+    );
+  }
+  return `${parts.join("; ")}.`;
+}
+
+function formatValueShort(value: number, unit: string): string {
+  return value === 0 ? formatValue(0, unit) : formatQuantity(value, unit, DIGITS);
+}
