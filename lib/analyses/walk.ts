@@ -8,23 +8,35 @@ import { drawOf, placeOnAxes } from "./plan";
 import { Predictor } from "./predictor";
 import { strandAt } from "./strands";
 
-/**
- * Solves the flat points [from, to) of a job one after the other; `each` sees the system at every one of them, just solved. Each
- * strand starts cold, so that a point does not depend on the range in which it is asked for; a range that begins inside a
- * strand solves the strand's beginning too.
- */
+/** A flat point just solved; the system stands at it until the next one is asked for. */
+export interface Stop {
+  readonly point: number;
+  readonly outcome: Outcome;
+  readonly system: System;
+}
+
+/** Solves the flat points [from, to) of a job one after the other; `each` sees the system at every one of them, just solved. */
 export function walk(
   job: Job,
   from: number,
   to: number,
   each: (point: number, outcome: Outcome, system: System) => void,
 ): void {
+  for (const { point, outcome, system } of stops(job, from, to)) each(point, outcome, system);
+}
+
+/**
+ * Solves the flat points [from, to) of a job one at a time, as they are asked for. Each strand starts cold, so that a point does
+ * not depend on the range in which it is asked for; a range that begins inside a strand solves the strand's beginning too.
+ * Without `isProving` no bounds are sought, which is quicker.
+ */
+export function* stops(job: Job, from: number, to: number, isProving = true): Generator<Stop, void, void> {
   const { design, circuit, plan } = job;
   const system = new System(design, circuit);
   const draws = new Draws(design);
   let draw = 0;
   turnTo(system, job, 0);
-  const ladder = new Ladder(system);
+  const ladder = new Ladder(system, isProving);
   const predictor = new Predictor(system.state);
   for (let strand = strandAt(plan, Math.min(from, plan.points - 1)); strand.from < to; ) {
     ladder.reset();
@@ -38,7 +50,7 @@ export function walk(
       turnFirst(system, job, point);
       const outcome = ladder.solve(predictor.predict());
       predictor.learn(outcome.kind === "converged");
-      if (point >= from) each(point, outcome, system);
+      if (point >= from) yield { point, outcome, system };
     }
     if (strand.to >= plan.points) break;
     strand = strandAt(plan, strand.to);
