@@ -1,6 +1,7 @@
 import type { Requirement } from "@/lib/language/ast";
 import { Ranks } from "@/lib/language/rank";
 import { unitOf } from "@/lib/units/quantity";
+import { boundedReading } from "./bounded-reading";
 import { boundedTrace, windowsOf } from "./bounded-trace";
 import { type Margins, marginsOf, valuesOf } from "./margin";
 import { placeOnAxes } from "./plan";
@@ -63,32 +64,31 @@ function judgeOne(
     worst: worst === null ? null : { draw, at },
     ...(random.length === 0 ? {} : { yield: yieldOf(held, random.length) }),
     share,
-    ...comparedAt(worst, results[0]?.worst ?? null, spread),
+    ...comparedAt(worst, results, spread),
     windows: windowsOf(requirement, design),
     bounds: boundedTrace(requirement, isTrace, spread.limits),
+    reading: isTrace ? null : boundedReading(requirement, rows),
   };
 }
 
 /** What is compared over all draws, as the limits of the worst place show it. */
 function comparedAt(
   worst: Worst | null,
-  nominal: Worst | null,
+  results: readonly DrawResult[],
   spread: Spread,
-): Pick<RequirementDocument, "allowed" | "value"> {
-  const place = worst ?? spread.limits;
-  if (place === null) {
+): Pick<RequirementDocument, "allowed" | "value" | "drawn"> {
+  if (worst === null) {
     return {
       allowed: { low: null, high: null },
       value: { nominal: null, worst: null, low: null, high: null },
+      drawn: results.map(() => null),
     };
   }
+  const drawn = results.map((one) => one.worst && spread.shownAt(worst, one.worst));
   return {
-    allowed: { low: finite(place.low), high: finite(place.high) },
-    value: {
-      nominal: nominal && spread.shownAt(place, nominal),
-      worst: worst && finite(worst.value),
-      ...spread.endsAt(place),
-    },
+    allowed: { low: finite(worst.low), high: finite(worst.high) },
+    value: { nominal: drawn[0] ?? null, worst: finite(worst.value), ...spread.endsAt(worst) },
+    drawn,
   };
 }
 

@@ -55,6 +55,8 @@ export interface RequirementDocument {
     readonly low: number | null;
     readonly high: number | null;
   };
+  /** What it compares at the worst place of each draw, the nominal design first, likewise. */
+  readonly drawn: readonly (number | null)[];
   /** The parts of the sweeps that it looks at; ends in coherent SI units, both the same for a single value. */
   readonly windows: readonly { readonly knob: string; readonly low: number; readonly high: number }[];
   /** The trace, or reading per point, whose own values it bounds, with the bounds that hold at all its points; null otherwise. */

@@ -68,6 +68,7 @@ describe("limits and what is compared with them", () => {
     const none = required("require y <= 3 V", Array(4).fill(Number.NaN));
     expect(none.allowed).toEqual({ low: null, high: null });
     expect(none.value).toEqual({ nominal: null, worst: null, low: null, high: null });
+    expect(none.drawn).toEqual([null]);
     expect(none.bounds).toEqual({ trace: "y", low: null, high: null });
   });
 });
@@ -80,6 +81,7 @@ describe("over draws", () => {
     const found = required("require y <= 3.5 V", y, drawn);
     expect(found).toMatchObject({ verdict: "broken", worst: { draw: 2 }, margin: -0.5 });
     expect(found.value).toEqual({ nominal: 2, worst: 4, low: 0, high: 4 });
+    expect(found.drawn).toEqual([2, 2, 4, 3]);
   });
 
   test("a share is decided by its draw, which the worst value is of", () => {
@@ -113,3 +115,51 @@ describe("the trace that is bounded, and where", () => {
     expect(required("require y <= 3 V", Y).windows).toEqual([]);
   });
 });
+
+describe("the reading that is bounded", () => {
+  const twoTemperatures = `${SWEEP}sweep temperature over 0 °C, 25 °C\n`;
+  const y = [1, 2, 3, 4, 2, 4, 6, 8];
+
+  test("with its limits at each setting, whatever they depend on", () => {
+    const found = required(
+      "read top = highest(y)\nrequire top within 10 V * temperature / 298.15 K ± 50 %",
+      y,
+      twoTemperatures,
+    );
+    // 10 V at 25 °C and 10 · 273.15/298.15 V at 0 °C.
+    const cold = (10 * 273.15) / 298.15;
+    expect(found.reading?.name).toBe("top");
+    expect(found.reading?.limits).toEqual([
+      { low: expect.closeTo(0.5 * cold, 9), high: expect.closeTo(1.5 * cold, 9) },
+      { low: expect.closeTo(5, 9), high: expect.closeTo(15, 9) },
+    ]);
+  });
+
+  test.each([
+    ["top <= 9 V at temperature = 25 °C", [none(), { low: null, high: 9 }]],
+    ["abs(top) <= 9 V", [within(9), within(9)]],
+    ["abs(top) >= 1 V", [none(), none()]],
+    ["top between 0 V and 9 V", [zeroTo(9), zeroTo(9)]],
+  ])("%s", (contract, limits) => {
+    const found = required(`read top = highest(y)\nrequire ${contract}`, y, twoTemperatures);
+    expect(found.reading).toEqual({ name: "top", limits });
+  });
+
+  test("not where it is about anything else", () => {
+    expect(required("require highest(y) <= 9 V", Y).reading).toBeNull();
+    expect(required("require y <= 9 V", Y).reading).toBeNull();
+    expect(required("read bend = deviation(y)\nrequire bend <= 9 V", Y).reading).toBeNull();
+  });
+});
+
+function none() {
+  return { low: null, high: null };
+}
+
+function within(size: number) {
+  return { low: -size, high: size };
+}
+
+function zeroTo(high: number) {
+  return { low: 0, high };
+}

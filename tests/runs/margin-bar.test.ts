@@ -21,6 +21,8 @@ const BEND: RequirementDocument = {
   value: { nominal: 0.00031, worst: 0.00064, low: -0.0001, high: 0.00064 },
   windows: [{ knob: "I_sample", low: 1e-8, high: 1e-4 }],
   bounds: { trace: "bend", low: -0.0005, high: 0.0005 },
+  reading: null,
+  drawn: [0.00031],
 };
 
 describe("places on a margin bar", () => {
