@@ -29,12 +29,14 @@ export interface Branches {
   /** In the order of the first point of each, then of its voltages. */
   readonly branches: readonly Branch[];
   readonly folds: readonly Fold[];
-  /** Whether the indices added up wherever all points were looked for. */
+  /** Whether the indices of the points at every value of the axis add up to 1, as those of all points do. */
   readonly isComplete: boolean;
 }
 
 /** Values of the first axis at which all operating points are looked for; between them curves are followed. */
 const SETTINGS = 9;
+/** Further values at which it is looked again, where the indices do not add up after that. */
+const REPAIRS = 9;
 const LONGEST = 0.5;
 const FIRST_STEP = 0.05;
 const GROWTH = 1.6;
@@ -47,7 +49,7 @@ const MARGIN = 1e-9;
 /**
  * The operating points of one row of a plan, whose first flat point is `from`, as branches over the first axis: at nine settings
  * all are looked for, and from each a curve is followed by its arclength up and down, through its folds, until it leaves the axis
- * or closes. A plan without an axis has branches of one point.
+ * or closes; where the indices then do not add up, more are looked for. A plan without an axis has branches of one point.
  */
 export function branchesOf(job: Job, from = 0): Branches {
   return new Follower(job, from).follow();
@@ -58,11 +60,12 @@ class Follower {
   private readonly seeker: Seeker;
   private readonly curved: KnobCurve | null;
   private readonly values: readonly number[];
+  /** The values as parameters of the curve. */
+  private readonly parameters: readonly number[];
   /** What is found at each value of the axis. */
   private readonly found: BranchPoint[][];
   private readonly branches: (BranchPoint | null)[][] = [];
   private readonly folds: Fold[] = [];
-  private isComplete = true;
 
   constructor(
     private readonly job: Job,
@@ -77,6 +80,7 @@ class Follower {
     const axis = plan.axes[0];
     this.values = axis?.values ?? [Number.NaN];
     this.curved = axis === undefined || axis.values.length < 2 ? null : new KnobCurve(this.system, axis);
+    this.parameters = this.values.map((value) => this.curved?.toParameter(value) ?? 0);
     this.found = this.values.map(() => []);
   }
 
@@ -85,13 +89,12 @@ class Follower {
     const settings = new Set(
       Array.from({ length: SETTINGS }, (_, k) => Math.round((k * last) / (SETTINGS - 1))),
     );
-    for (const k of settings) {
-      this.turn(k);
-      const sought = this.seeker.seek(this.job.design.seek ?? 1);
-      this.isComplete &&= sought.isComplete;
-      for (const point of sought.points) {
-        if (!this.isKnown(k, point)) this.trace(k, point);
-      }
+    for (const k of settings) this.seekAt(k);
+    for (let n = 0; n < REPAIRS; n++) {
+      const k = this.found.findIndex((_, place) => !settings.has(place) && !this.addsUp(place));
+      if (k < 0) break;
+      settings.add(k);
+      this.seekAt(k);
     }
     const first = (branch: readonly (BranchPoint | null)[]) => branch.findIndex((point) => point !== null);
     const branches = this.branches
@@ -100,8 +103,19 @@ class Follower {
     return {
       branches: branches.map((points) => ({ points })),
       folds: this.folds,
-      isComplete: this.isComplete,
+      isComplete: this.found.every((_, k) => this.addsUp(k)),
     };
+  }
+
+  private seekAt(k: number): void {
+    this.turn(k);
+    for (const point of this.seeker.seek(this.job.design.seek ?? 1, this.found[k]).points) {
+      if (!this.isKnown(k, point)) this.trace(k, point);
+    }
+  }
+
+  private addsUp(k: number): boolean {
+    return this.found[k]!.reduce((sum, { index }) => sum + index, 0) === 1;
   }
 
   private turn(k: number): void {
@@ -120,7 +134,7 @@ class Follower {
     for (const sense of [1, -1] as const) {
       this.turn(k);
       this.put(point.x);
-      const curve = new Curve(this.system, this.curved, this.curved.toParameter(this.values[k]!), sense);
+      const curve = new Curve(this.system, this.curved, this.parameters[k]!, sense);
       if (this.run(curve, start, k)) return;
     }
   }
@@ -175,8 +189,8 @@ class Follower {
     const after = state.x.slice();
     const [low, high] = [Math.min(parameter, curve.parameter), Math.max(parameter, curve.parameter)];
     let isOpen = true;
-    for (const [k, value] of this.values.entries()) {
-      const at = this.curved!.toParameter(value);
+    for (let k = 0; k < this.parameters.length; k++) {
+      const at = this.parameters[k]!;
       if (at < low - MARGIN || at > high + MARGIN || branch[k] !== null || high === low) continue;
       const share = (at - parameter) / (curve.parameter - parameter);
       this.turn(k);

@@ -1,7 +1,8 @@
-import type { System } from "@/lib/circuit/system";
 import type { Aided } from "./aided";
-import { Curve, type Curved } from "./curve";
+import { Curve } from "./curve";
 import { type Attempt, type Bench, newton } from "./newton";
+import { scatter } from "./scatter";
+import { type Fading, TiedCurve } from "./tied-curve";
 
 /** S, as powers of ten: where the path begins and where the circuit is tried as it is. */
 const FIRST = 1;
@@ -12,8 +13,10 @@ const GROWTH = 1.5;
 const START_STEPS = 60;
 const FINAL_STEPS = 25;
 const MOST_STEPS = 1500;
-/** V: the fixed voltages are spread over as much, so that the path meets no branching point (with probability one). */
-const SPREAD = 0.5;
+const FADING: Fading = {
+  conductance: (parameter) => 10 ** -parameter,
+  slope: (parameter) => -Math.LN10 * 10 ** -parameter,
+};
 
 /**
  * Fixed-point homotopy with arclength (Melville, Trajković, Fang and Watson, IEEE Trans. CAD 12, 1993): F(x) + g·(x − a) = 0 is followed from a
@@ -21,11 +24,8 @@ const SPREAD = 0.5;
  */
 export function homotopy(bench: Bench, aided: Aided): Attempt {
   const { system } = bench;
-  aided.origin.forEach((_, j) => {
-    // Fixed numbers that have nothing to do with each other: the fractions of multiples of the golden ratio.
-    aided.origin[j] = SPREAD * (((j + 1) * 0.6180339887498949) % 1);
-  });
-  const curved = new Tied(system, aided);
+  scatter(aided.origin);
+  const curved = new TiedCurve(system, aided, FADING);
   curved.turn(-FIRST);
   system.startCold();
   const start = newton(aided.bench(bench.step), false, START_STEPS);
@@ -45,29 +45,4 @@ export function homotopy(bench: Bench, aided: Aided): Attempt {
     return { ...last, iterations: spent() + last.iterations };
   }
   return { kind: "iteration limit", iterations: spent(), wasSingular: false };
-}
-
-class Tied implements Curved {
-  readonly shape;
-
-  constructor(
-    private readonly system: System,
-    private readonly aided: Aided,
-  ) {
-    this.shape = aided.shape;
-  }
-
-  turn(parameter: number): void {
-    this.aided.conductance = 10 ** -parameter;
-  }
-
-  linearise(slope: Float64Array): Float64Array {
-    const { system, aided } = this;
-    aided.assemble();
-    slope.fill(0);
-    for (let k = 0; k < aided.aids.length; k++) {
-      slope[aided.aids[k]!.row]! -= Math.LN10 * aided.conductance * aided.pull(k);
-    }
-    return aided.aidedValues(system.state.jacobian);
-  }
 }

@@ -7,6 +7,7 @@ import type { SparseShape } from "./elimination";
 import { Ladder } from "./ladder";
 import { LinearSolver } from "./linear";
 import { type Bench, newton } from "./newton";
+import { partner } from "./partner";
 import { tied } from "./shunt-ramp";
 
 /** One operating point of a circuit at one setting. */
@@ -33,6 +34,8 @@ export interface Sought {
 /** Starts that find nothing new before the search ends, where the indices add up and where they do not. */
 const QUIET = 12;
 const RESTLESS = 60;
+/** Ways in which the known points are paired with others. */
+const PAIRINGS = 3;
 const NEWTON_STEPS = 40;
 /** V: how far around a known point its own neighbourhood is searched. */
 const BESIDE = 0.2;
@@ -89,8 +92,9 @@ export class Seeker {
     this.nets = circuit.unknowns.filter(({ unit }) => unit === "V").length;
   }
 
-  seek(most: number): Sought {
-    this.points = [];
+  /** Looks for up to `most` points, of which some may be known. */
+  seek(most: number, known: readonly OperatingPoint[] = []): Sought {
+    this.points = [...known];
     this.spent.iterations = 0;
     this.seed = 1;
     [this.low, this.high] = [-1, 1];
@@ -101,6 +105,7 @@ export class Seeker {
     let quiet = 0;
     for (let k = 0; this.points.length < most && quiet < (this.sum === 1 ? QUIET : RESTLESS); k++) {
       quiet = this.start(k) ? 0 : quiet + 1;
+      if (quiet === QUIET && this.pair(most)) quiet = 0;
     }
     const points = this.points.toSorted(inOrder);
     return { points, isComplete: this.sum === 1, iterations: this.spent.iterations };
@@ -155,6 +160,23 @@ export class Seeker {
     return deflated(this.bench, known, this.spent) && this.keep();
   }
 
+  /** Follows the curves that lead from the known points to their partners; true where one was new. */
+  private pair(most: number): boolean {
+    const { state } = this.system;
+    const before = this.points.length;
+    // A single point whose index is 1 has no partner.
+    if (before === 1 && this.sum === 1) return false;
+    for (let variant = 0; variant < PAIRINGS; variant++) {
+      for (const point of this.points) {
+        if (this.points.length >= most) return this.points.length > before;
+        state.x.set(point.x);
+        state.low.fill(0);
+        if (partner(this.bench, this.aided, variant, this.spent)) this.keep();
+      }
+    }
+    return this.points.length > before;
+  }
+
   /** Keeps where the present unknowns settle, if that is a point that is not known. */
   private keep(): boolean {
     const found = this.arrive();
@@ -172,7 +194,7 @@ export class Seeker {
     const { state } = this.system;
     const here = indexOf(shape, state.jacobian, this.masses);
     aided.conductance = HELD;
-    const held: Index | null = indexOf(aided.shape, aided.aidedValues(state.jacobian), []);
+    const held: Index | null = indexOf(aided.shape, aided.aidedValues(state.jacobian), null);
     aided.conductance = 0;
     if (here === null || held === null) return { isStable: false, index: 0 };
     return { isStable: here.isStable && here.sign === held.sign, index: here.sign === held.sign ? 1 : -1 };

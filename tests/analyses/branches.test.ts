@@ -1,3 +1,4 @@
+import { readFileSync } from "node:fs";
 import { describe, expect, test, vi } from "vitest";
 import { type Branch, branchesOf } from "@/lib/analyses/branches";
 import { branchesDocument } from "@/lib/analyses/branches-document";
@@ -56,6 +57,30 @@ describe.each([
         expect(point.traces).toEqual([point.x[job.circuit.nets.get(id === "MS4" ? "c1" : "v")!]]);
       }
     }
+  });
+});
+
+describe("the alarm of the indices along an axis", () => {
+  const bandgap = readFileSync("examples/bandgap-start-up.swn", "utf8");
+
+  test("rings where a branch is missing: the reference has three that do not meet, and two are asked for", () => {
+    const text = bandgap.replace("seek 3", "seek 2");
+    expect(text).not.toBe(bandgap);
+    const { branches, folds, isComplete } = branchesOf(jobOf(text));
+    expect([branches.length, folds.length, isComplete]).toEqual([2, 0, false]);
+  });
+
+  test("rings where a branch goes on as an unstable one, and the two beside it are not asked for", () => {
+    // A flip-flop that is one only while its supply is above half a volt; one point a setting is asked for.
+    const text = textOf(record("MS3")).replace(/voltage 5 V/, "voltage supply");
+    const swept = (range: string) =>
+      jobOf(
+        `seek 1\nknob supply = 5 V\n${text.replace("show", `sweep supply from ${range}, 11 points\nshow`)}`,
+      );
+    expect(branchesOf(swept("0 V to 0.5 V")).isComplete).toBe(true);
+    const { branches, isComplete } = branchesOf(swept("0 V to 5 V"));
+    expect(branches.map(drawn)).toEqual(["ssuuuuuuuuu"]);
+    expect(isComplete).toBe(false);
   });
 });
 

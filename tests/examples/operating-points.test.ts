@@ -10,8 +10,9 @@ function branchesIn(name: string): Branches {
 
 describe("the examples with several operating points", () => {
   test("the bandgap reference has a zero state and a working one, and an unstable point between them", () => {
-    const { branches, folds } = branchesIn("bandgap-start-up");
+    const { branches, folds, isComplete } = branchesIn("bandgap-start-up");
     expect(folds).toEqual([]);
+    expect(isComplete).toBe(true);
     const middle = branches.map(({ points }) => points[6]!).sort((a, b) => a.traces[0]! - b.traces[0]!);
     expect(middle.map(({ isStable }) => isStable)).toEqual([true, false, true]);
     expect(middle[0]!.traces[0]!).toBeLessThan(1e-3);
@@ -20,7 +21,8 @@ describe("the examples with several operating points", () => {
   });
 
   test("the trigger has its thresholds at the folds, and three points between them", () => {
-    const { branches, folds } = branchesIn("schmitt-trigger");
+    const { branches, folds, isComplete } = branchesIn("schmitt-trigger");
+    expect(isComplete).toBe(true);
     const thresholds = folds.map(({ value }) => value).sort();
     expect(thresholds[0]).toBeCloseTo(1.39, 2);
     expect(thresholds[1]).toBeCloseTo(2.41, 2);
