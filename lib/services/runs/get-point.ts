@@ -3,6 +3,7 @@ import { database } from "@/db/client";
 import { run } from "@/db/schema/run";
 import { shard } from "@/db/schema/shard";
 import { drawOf, placeOnAxes } from "@/lib/analyses/plan";
+import { reasonOf } from "@/lib/analyses/reasons";
 import { AppError } from "@/lib/errors";
 import type { Actor } from "@/lib/permissions/actor";
 import { authorize } from "@/lib/permissions/authorize";
@@ -10,7 +11,6 @@ import { OUTCOMES, type OutcomeKind, RUNGS, type Rung } from "@/lib/solver/outco
 import { traceColumn, unknownColumn } from "../chunks/columns";
 import { readPoint } from "../chunks/read-columns";
 import { findRun } from "./find-run";
-import { reasonOf } from "./reason";
 
 interface Figure {
   readonly name: string;
