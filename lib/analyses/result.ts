@@ -65,6 +65,11 @@ export interface RequirementDocument {
     readonly low: number | null;
     readonly high: number | null;
   } | null;
+  /** The reading per sweep that it bounds, with its limits at each setting of the outer axes, null where it has none; else null. */
+  readonly reading: {
+    readonly name: string;
+    readonly limits: readonly { readonly low: number | null; readonly high: number | null }[];
+  } | null;
 }
 
 /** A failed point with its reason, for people. */
