@@ -8,17 +8,23 @@ import type { NamedSymbol } from "./symbol";
 const MOST_NAMED = 8;
 
 /** What a symbol is, in a line or two, from the text alone. */
-export function describeSymbol(symbol: NamedSymbol, text: string): string[] {
+export function describeSymbol(symbol: NamedSymbol): string[] {
+  const { shelf } = symbol.scope;
+  const lines = linesOf(symbol);
+  return shelf === null || symbol.definition === null ? lines : [...lines, `from the shelf "${shelf.name}"`];
+}
+
+function linesOf(symbol: NamedSymbol): string[] {
   const { name, meaning, of, scope } = symbol;
   switch (meaning) {
     case "knob":
       return [
         symbol.definition === null
           ? "temperature: the ambient of the file, 25 °C"
-          : `knob ${name}${given(symbol, text)}`,
+          : `knob ${name}${given(symbol)}`,
       ];
     case "let":
-      return [`let ${name}${given(symbol, text)}`];
+      return [`let ${name}${given(symbol)}`];
     case "model":
       return [`model ${name}: ${kindLine(of)}`];
     case "element": {
@@ -40,10 +46,17 @@ export function describeSymbol(symbol: NamedSymbol, text: string): string[] {
     case "net":
       return name === "ground" ? ["ground: the net that voltages are counted from"] : [netLine(symbol)];
     case "trace":
-      return [`trace ${name}${shown(symbol, text)}`];
+      return [`trace ${name}${shown(symbol)}`];
+    case "group":
+      return [groupLine(symbol)];
     case "reading":
-      return [`reading ${name}${given(symbol, text)}`];
+      return [`reading ${name}${given(symbol)}`];
   }
+}
+
+function groupLine({ name, places }: NamedSymbol): string {
+  const many = places.length === 1 ? "one value follows it so far" : `${places.length} values follow it`;
+  return `group ${name}: what tracks with it shares one draw; ${many}`;
 }
 
 function kindLine(kind: string | null): string {
@@ -51,16 +64,17 @@ function kindLine(kind: string | null): string {
 }
 
 /** ` = value ± tolerance` as it is written. */
-function given({ statement }: NamedSymbol, text: string): string {
+function given({ statement, scope }: NamedSymbol): string {
   if (statement?.kind !== "let" && statement?.kind !== "knob" && statement?.kind !== "read") return "";
   const { value, to } = statement;
-  return ` = ${text.slice(value.from, statement.kind === "read" ? value.to : to).replace(/\s+/gu, " ")}`;
+  return ` = ${scope.text.slice(value.from, statement.kind === "read" ? value.to : to).replace(/\s+/gu, " ")}`;
 }
 
-function shown({ statement, name }: NamedSymbol, text: string): string {
+function shown({ statement, name, scope }: NamedSymbol): string {
   const item =
     statement?.kind === "show" ? statement.items.find((one) => one.name?.text === name) : undefined;
-  return item === undefined ? "" : ` = ${text.slice(item.value.from, item.value.to).replace(/\s+/gu, " ")}`;
+  if (item === undefined) return "";
+  return ` = ${scope.text.slice(item.value.from, item.value.to).replace(/\s+/gu, " ")}`;
 }
 
 function netLine({ name, scope, places }: NamedSymbol): string {

@@ -28,12 +28,16 @@ export interface Hover extends Span {
 }
 
 /** What stands at an offset of a text, null where there is nothing to say. Works with a text that has errors too. */
-export function hoverAt(text: string, checked: Checked, offset: number): Hover | null {
-  const symbols = symbolsOf(checked.netlist, text);
+export function hoverAt(
+  text: string,
+  checked: Pick<Checked, "netlist" | "design">,
+  offset: number,
+  symbols = symbolsOf(checked.netlist, text),
+): Hover | null {
   const found = symbols.at(offset);
   if (found !== null) {
     const { symbol, from, to } = found;
-    return { from, to, lines: [...describeSymbol(symbol, text), ...valueLines(symbol, checked.design)] };
+    return { from, to, lines: [...describeSymbol(symbol), ...valueLines(symbol, checked.design)] };
   }
   const tokens = tokenize(text, new Report());
   const at = tokens.findIndex((token) => token.from <= offset && offset < token.to);

@@ -20,6 +20,10 @@ export const STATEMENT_MEANINGS: Readonly<Record<string, string>> = {
 export const CLAUSE_MEANINGS: Readonly<Record<string, string>> = {
   from: "the range of a sweep, as in `from 1 nA to 1 mA, 20 per decade`",
   over: "the values of a sweep, as in `over 10 °C, 25 °C, 40 °C`",
+  "±": "the tolerance, half its width: `± 1 %` of the value or `± 50 Ω`",
+  to: "the end of a sweep, then `20 per decade`, `121 points` or `step 10 mV` after a comma",
+  "per decade": "so many values a decade",
+  points: "so many values in all, both ends among them",
   in: "the range of a knob or window, or `in 95 % of draws`",
   uniform: "every value within the tolerance is as likely, which is the law where none is given",
   normal: "a bell curve of which the tolerance is so many standard deviations, as in `normal 3 sigma`",

@@ -1,4 +1,4 @@
-import { check } from "../checker";
+import { type CheckOptions, check } from "../checker";
 import { FUNCTION_NAMES } from "../functions";
 import { tokenize } from "../lexer";
 import { Report } from "../report";
@@ -20,20 +20,24 @@ export type Renaming = { readonly edits: readonly Edit[] } | { readonly refusal:
  * Gives the name at an offset another one, wherever it is written. Refused where the new name is none, is taken where it would be
  * seen, or would bring in a problem that the text has not now.
  */
-export function renameAt(text: string, offset: number, name: string): Renaming {
-  const checked = check(text);
-  const symbols = symbolsOf(checked.netlist, text);
+export function renameAt(text: string, offset: number, name: string, options: CheckOptions = {}): Renaming {
+  const checked = check(text, options);
+  const symbols = symbolsOf(checked.netlist, text, options.library);
   const symbol = symbols.at(offset)?.symbol;
   if (symbol === undefined) return { refusal: "There is no name here." };
   if (symbol.definition === null || symbol.name === "temperature") {
     return { refusal: `${quote(symbol.name)} belongs to the language and keeps its name.` };
+  }
+  const { shelf } = symbol.scope;
+  if (shelf !== null) {
+    return { refusal: `${quote(symbol.name)} comes from the shelf "${shelf.name}"; rename it there.` };
   }
   const refusal = refusalOf(symbol, name);
   if (refusal !== null) return { refusal };
   const edits = symbol.places.map(({ from, to }) => ({ from, to, text: name }));
   const errors = (all: readonly { severity: string }[]) =>
     all.filter((one) => one.severity === "error").length;
-  if (errors(check(applied(text, edits)).diagnostics) > errors(checked.diagnostics)) {
+  if (errors(check(applied(text, edits), options).diagnostics) > errors(checked.diagnostics)) {
     return { refusal: `With the name ${quote(name)} the netlist would have a new problem.` };
   }
   return { edits };
@@ -49,6 +53,7 @@ function refusalOf(symbol: NamedSymbol, name: string): string | null {
   if (isWord || isKind(name) || name === "ground" || name === "temperature") {
     return `${quote(name)} is a word of the language.`;
   }
+  if (symbol.meaning === "group") return symbol.scope.groups.has(name) ? `${quote(name)} is taken.` : null;
   return isTaken(symbol, name) ? `${quote(name)} is taken.` : null;
 }
 

@@ -16,6 +16,9 @@ export interface Standing {
   readonly braces: { readonly of: string; readonly given: readonly string[] } | null;
 }
 
+/** UTF-16 units behind the cursor in which the end of its braces is looked for. */
+const MOST_AHEAD = 2_000;
+
 const PART_OF_WORD = /[\p{L}\p{N}_%°]/u;
 
 /** Null where nothing is completed: inside a comment or a text in quotation marks. */
@@ -42,16 +45,26 @@ export function standingAt(text: string, offset: number): Standing | null {
     begun: text.slice(from, offset),
     from,
     statement: isHead ? first.text : "",
-    braces: bracesAround(before),
+    braces: bracesAround(before, settingsAfter(text, offset)),
   };
 }
 
-function bracesAround(before: readonly Token[]): Standing["braces"] {
+/** The names that are given between an offset and the end of its braces. */
+function settingsAfter(text: string, offset: number): string[] {
+  const rest = text.slice(offset, offset + MOST_AHEAD);
+  const close = rest.search(/[{}]/);
+  const tokens = close === -1 || rest[close] === "{" ? [] : tokenize(rest.slice(0, close), new Report());
+  return tokens.flatMap((token, k) => {
+    return token.kind === "word" && tokens[k + 1]?.text === "=" ? [token.text] : [];
+  });
+}
+
+function bracesAround(before: readonly Token[], after: readonly string[]): Standing["braces"] {
   const open = before.findLastIndex(({ kind, text }) => kind === "symbol" && (text === "{" || text === "}"));
   if (open === -1 || before[open]!.text === "}") return null;
   const colon = before.findLastIndex(({ text }, k) => k < open && text === ":");
   const given = before.flatMap((token, k) =>
     k > open && token.kind === "word" && before[k + 1]?.text === "=" ? [token.text] : [],
   );
-  return { of: before[colon + 1]?.text ?? "", given };
+  return { of: before[colon + 1]?.text ?? "", given: [...given, ...after] };
 }

@@ -1,7 +1,9 @@
 import type { Span } from "../span";
 import type { Statement } from "../syntax";
 
-/** What a name stands for, as an editor tells it. "trace" is what `show NAME = …` keeps; "port" a net of a block's head. */
+/**
+ * What a name stands for, as an editor tells it. "trace" is what `show NAME = …` keeps; "port" a net of a block's head;
+ * "group" what parts `track` with. */
 export type SymbolMeaning =
   | "net"
   | "element"
@@ -12,7 +14,8 @@ export type SymbolMeaning =
   | "block"
   | "port"
   | "trace"
-  | "reading";
+  | "reading"
+  | "group";
 
 /** A name of the file or of a block, and every place where it is written. */
 export interface NamedSymbol {
@@ -29,17 +32,27 @@ export interface NamedSymbol {
   readonly places: readonly Span[];
 }
 
+/** A text that names are brought in from; `span` is where the file names it. */
+export interface Shelf {
+  readonly name: string;
+  readonly span: Span;
+}
+
 /** The names of the file, or of one block with those of the scopes around it. */
 export class NameScope {
   readonly names = new Map<string, NamedSymbol & { places: Span[] }>();
   /** Traces have a namespace of their own, since `show out = out.v` is fine. */
   readonly traces = new Map<string, NamedSymbol & { places: Span[] }>();
+  /** So have the groups of tolerances. */
+  readonly groups = new Map<string, NamedSymbol & { places: Span[] }>();
   readonly inner: NameScope[] = [];
 
-  /** `span` is where the names hold. */
+  /** `span` is where the names hold, in `text`; `shelf` is null where that is the file itself. */
   constructor(
     readonly span: Span,
     readonly parent: NameScope | null,
+    readonly text: string,
+    readonly shelf: Shelf | null,
   ) {
     parent?.inner.push(this);
   }

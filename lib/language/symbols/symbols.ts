@@ -1,6 +1,7 @@
+import type { Library } from "../shelves";
 import type { Span } from "../span";
 import type { Expression, Netlist, Setting, Statement, ToleranceSyntax, WindowSyntax, Word } from "../syntax";
-import { declareScopes, insideOf, pinsOf } from "./declare";
+import { declareScopes, groupNamed, insideOf, pinsOf } from "./declare";
 import type { NamedSymbol, NameScope } from "./symbol";
 
 type Open = NamedSymbol & { places: Span[] };
@@ -16,8 +17,8 @@ export class Symbols {
   /** In the order of the text; no two overlap. */
   readonly occurrences: readonly Occurrence[];
 
-  constructor(netlist: Netlist, length: number) {
-    this.file = declareScopes(netlist, length);
+  constructor(netlist: Netlist, text: string, library: Library | null) {
+    this.file = declareScopes(netlist, text, library);
     const found = new Map<number, Occurrence>();
     new References((symbol, { from, to }) => {
       if (!found.has(from) && to > from) found.set(from, { symbol, from, to });
@@ -191,7 +192,10 @@ class References {
   private tolerance(tolerance: ToleranceSyntax | null, scope: NameScope): void {
     if (tolerance === null) return;
     this.expression(tolerance.amount, scope);
-    if (tolerance.track?.within) this.expression(tolerance.track.within, scope);
+    const { track } = tolerance;
+    if (track === null) return;
+    if (track.group.text !== "") this.note(groupNamed(track.group, scope), track.group);
+    if (track.within !== null) this.expression(track.within, scope);
   }
 
   private windows(windows: readonly WindowSyntax[], scope: NameScope): void {
@@ -202,7 +206,7 @@ class References {
   }
 }
 
-/** The names of a checked netlist. */
-export function symbolsOf(netlist: Netlist, text: string): Symbols {
-  return new Symbols(netlist, text.length);
+/** The names of a netlist; those of the shelves that it uses are among them where `library` has their texts. */
+export function symbolsOf(netlist: Netlist, text: string, library: Library | null = null): Symbols {
+  return new Symbols(netlist, text, library);
 }

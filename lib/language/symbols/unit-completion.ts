@@ -7,7 +7,7 @@ const FIRST = ["V", "A", "Ω", "W", "K"];
 const USUAL_PREFIXES = ["f", "p", "n", "µ", "m", "", "k", "M", "G"];
 
 /** Units that begin as what is written, with the usual prefixes; other prefixes once one is begun. */
-export function unitsLike(begun: string): { text: string; about: string }[] {
+export function unitsLike(begun: string): { text: string; about: string; spelled: string }[] {
   const rest = [...UNITS.keys()].filter((unit) => !FIRST.includes(unit));
   const prefixes = [...PREFIXES.keys()].filter((prefix) => begun !== "" && begun.startsWith(prefix));
   const all = [
@@ -18,8 +18,13 @@ export function unitsLike(begun: string): { text: string; about: string }[] {
     ...prefixes.flatMap((prefix) => [...UNITS.keys()].map((unit) => prefix + unit)),
   ];
   return [...new Set(all)]
-    .filter((text) => text.startsWith(begun))
-    .map((text) => ({ text, about: aboutUnit(text) }));
+    .map((text) => ({ text, about: aboutUnit(text), spelled: inAscii(text) }))
+    .filter(({ text, spelled }) => text.startsWith(begun) || (begun !== "" && spelled.startsWith(begun)));
+}
+
+/** As one writes it on a keyboard without Ω, µ and °. */
+function inAscii(unit: string): string {
+  return unit.replace("Ω", "ohm").replace(/^µ/u, "u").replace("°C", "degC");
 }
 
 function aboutUnit(text: string): string {
