@@ -14,14 +14,24 @@ const MOST_TITLE = 120;
 
 /** What a text calls itself, at most 120 characters; null when it has no title. */
 export function titleIn(text: string): string | null {
-  const report = new Report();
-  const { netlist } = parseTokens(tokenize(text, report), text.length, report);
-  for (const statement of netlist.statements) {
-    if (statement.kind !== "title") continue;
-    const title = asTitle(statement.text.text);
+  for (const { text: word } of titles(text)) {
+    const title = asTitle(word.text);
     if (title !== "") return title;
   }
   return null;
+}
+
+/** `text` with another title in its place; a text without one gets none. A quotation mark in the title becomes an apostrophe. */
+export function retitled(text: string, title: string): string {
+  const [first] = titles(text);
+  if (first === undefined) return text;
+  return `${text.slice(0, first.from)}title "${title.replaceAll('"', "'")}"${text.slice(first.to)}`;
+}
+
+function titles(text: string) {
+  const report = new Report();
+  const { netlist } = parseTokens(tokenize(text, report), text.length, report);
+  return netlist.statements.filter((statement) => statement.kind === "title");
 }
 
 /** `text` on one line and at most 120 characters long, as lists show it. */

@@ -1,6 +1,7 @@
-import { desc, eq } from "drizzle-orm";
+import { and, desc, eq, type SQL } from "drizzle-orm";
 import type { Queryable } from "@/db/client";
 import { netlist } from "@/db/schema/netlist";
+import { revision } from "@/db/schema/revision";
 import { run } from "@/db/schema/run";
 import type { Verdict } from "@/lib/analyses/result";
 
@@ -16,6 +17,15 @@ export interface LastRun {
 
 /** A lateral subquery with the newest run of the netlist of the row outside. */
 export function lastRunOf(db: Queryable) {
+  return newest(db, eq(run.netlistId, netlist.id));
+}
+
+/** As `lastRunOf`, of the revision of the row outside. */
+export function lastRunOfRevision(db: Queryable) {
+  return newest(db, and(eq(run.netlistId, revision.netlistId), eq(run.revisionNumber, revision.number)));
+}
+
+function newest(db: Queryable, ofRow: SQL | undefined) {
   return db
     .select({
       id: run.id,
@@ -26,7 +36,7 @@ export function lastRunOf(db: Queryable) {
       pointsFailed: run.pointsFailed,
     })
     .from(run)
-    .where(eq(run.netlistId, netlist.id))
+    .where(ofRow)
     .orderBy(desc(run.number))
     .limit(1)
     .as("last_run");

@@ -55,6 +55,19 @@ export const saveInput = z.object({
   message: message.optional(),
 });
 
+const number = whole(1, 2_147_483_647);
+
+export const revisionsInput = z.object({ netlistId: z.string(), ...paging });
+
+export const restoreInput = z.object({
+  netlistId: z.string(),
+  number,
+  base: number,
+  message: message.optional(),
+});
+
+export const duplicateInput = z.object({ netlistId: z.string(), number });
+
 export const netlistFile = z.object({ name: z.string().min(1).max(255), text: z.string() });
 
 /** Throws "too large" for a text longer than a netlist can be. */

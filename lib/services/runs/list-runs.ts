@@ -18,12 +18,13 @@ export async function listRuns(
   input: z.input<typeof listInput>,
 ): Promise<{ rows: RunRow[]; total: number }> {
   authorize(actor, "run.read", { workspaceId: actor.workspaceId });
-  const { query, status, netlistId, page, size } = readInput(listInput, input);
+  const { query, status, netlistId, revision: number, page, size } = readInput(listInput, input);
   const db = database();
   const matches = and(
     eq(run.workspaceId, actor.workspaceId),
     status === undefined ? undefined : eq(run.status, status),
     netlistId === undefined ? undefined : eq(run.netlistId, netlistId),
+    number === undefined ? undefined : eq(run.revisionNumber, number),
     containsWords(query, [run.title, user.name, sql`${run.number}::text`]),
   );
   const found = db
