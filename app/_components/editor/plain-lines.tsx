@@ -4,7 +4,7 @@ import { FONT_SIZE, LINE_HEIGHT, TOKEN_INKS } from "./palette";
 /** Beyond it a text is shown without colours, since nobody waits for them. UTF-16 units. */
 const MOST_COLOURED = 40_000;
 
-interface Piece {
+export interface Piece {
   readonly at: number;
   readonly text: string;
   readonly ink: string | undefined;
