@@ -2,6 +2,7 @@ import type { Design } from "@/lib/language/ast";
 import type { Diagnostic } from "@/lib/language/diagnostic";
 import { lineStarts, placeOf } from "@/lib/language/span";
 import { OUTCOMES, RUNGS } from "@/lib/solver/outcome";
+import type { BranchesDocument } from "./branches-document";
 import { judge } from "./judge";
 import type { Plan } from "./plan";
 import type { Failure, RunDocument } from "./result";
@@ -21,6 +22,8 @@ export interface RunMatter {
   /** V; NaN where not proved. */
   readonly bound: Float64Array;
   readonly failures: readonly Failure[];
+  /** The branches, one document a row, null where a row is not in yet; null or absent where the text does not ask for several operating points. */
+  readonly branches?: readonly (BranchesDocument | null)[] | null;
   readonly diagnostics: readonly Diagnostic[];
 }
 
@@ -55,6 +58,7 @@ export function toDocument(matter: RunMatter): RunDocument {
     requirements: judgement?.requirements ?? [],
     diagnostics: matter.diagnostics.map((one) => ({ ...one, ...placeOf(starts, one.from) })),
     failures: [...matter.failures].sort((a, b) => a.point - b.point),
+    ...(matter.branches ? { branches: matter.branches.filter((row) => row !== null) } : {}),
   };
 }
 

@@ -11,6 +11,8 @@ export interface Plan {
   /** Random draws of the tolerances; with the nominal one, draw 0, there is one more. */
   readonly draws: number;
   readonly points: number;
+  /** Operating points looked for at each setting; absent where the text does not ask for several. */
+  readonly seek?: number;
   readonly traces: readonly { readonly name: string; readonly unit: string }[];
   /** Net voltages (`out.v`), then branch currents (`V1.i`, `A1.out.i`), in the order of the circuit. */
   readonly unknowns: readonly { readonly name: string; readonly unit: "V" | "A" }[];
@@ -26,6 +28,7 @@ export function planOf(design: Design, circuit: Circuit): Plan {
     axes,
     draws,
     points: axes.reduce((product, axis) => product * axis.values.length, draws + 1),
+    ...(design.seek === null ? {} : { seek: design.seek }),
     traces: design.shows.map(({ name, value }) => ({ name, unit: unitOf(value.dimension) })),
     unknowns: circuit.unknowns,
   };
@@ -44,4 +47,15 @@ export function placeOnAxes(plan: Plan, point: number): number[] {
 /** The draw of a flat point; 0 is nominal. */
 export function drawOf({ points, draws }: Plan, point: number): number {
   return Math.floor(point / (points / (draws + 1)));
+}
+
+/** The sweeps of the first knob in which several operating points are looked for: one a setting of the outer knobs, without draws. */
+export function soughtRows({ axes, seek }: Plan): number {
+  if (seek === undefined) return 0;
+  return axes.slice(1).reduce((product, { values }) => product * values.length, 1);
+}
+
+/** Points of one sweep of the first knob; 1 where nothing is swept. */
+export function rowLength({ axes }: Pick<Plan, "axes">): number {
+  return axes[0]?.values.length ?? 1;
 }

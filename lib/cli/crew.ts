@@ -1,10 +1,11 @@
 import type { Worker } from "node:worker_threads";
-import type { Plan } from "@/lib/analyses/plan";
+import type { BranchesDocument } from "@/lib/analyses/branches-document";
+import { type Plan, soughtRows } from "@/lib/analyses/plan";
 import type { ShardResult } from "@/lib/analyses/result";
 import { EXIT, Refusal } from "./exit-codes";
 import { piecesOf } from "./pieces";
 import { spawn } from "./spawn";
-import type { Netlist, Piece, Reply, Task } from "./thread-messages";
+import type { Netlist, Reply, Task } from "./thread-messages";
 
 /** Threads that solve one netlist after another; started when there is work for them. */
 export class Crew {
@@ -26,22 +27,24 @@ export class Crew {
     onProgress: (pointsDone: number) => void,
   ): Promise<ShardResult[]> {
     const pieces = piecesOf(plan, this.size);
-    const results: ShardResult[] = [];
     const done: number[] = pieces.map(() => 0);
-    let next = 0;
-    const work = async (k: number): Promise<void> => {
-      this.workers[k] ??= this.start();
-      const worker = await this.workers[k];
-      while (next < pieces.length) {
-        const place = next++;
-        results[place] = await this.ask(worker, netlist, pieces[place]!, (pointsDone) => {
-          done[place] = pointsDone;
+    return this.share(pieces, (worker, piece, place) =>
+      this.ask(worker, { ...netlist, ...piece }, (reply) => {
+        if (reply.kind === "progress") {
+          done[place] = reply.pointsDone;
           onProgress(done.reduce((sum, points) => sum + points, 0));
-        });
-      }
-    };
-    await Promise.all(Array.from({ length: Math.min(this.size, pieces.length) }, (_, k) => work(k)));
-    return results;
+        }
+        return reply.kind === "solved" ? reply.result : null;
+      }),
+    );
+  }
+
+  /** Looks for the operating points of every row of a plan whose text asks for several; in the order of the rows. */
+  async seek(netlist: Netlist, plan: Plan): Promise<BranchesDocument[]> {
+    const rows = Array.from({ length: soughtRows(plan) }, (_, row) => ({ row }));
+    return this.share(rows, (worker, row) =>
+      this.ask(worker, { ...netlist, ...row }, (reply) => (reply.kind === "sought" ? reply.branches : null)),
+    );
   }
 
   async close(): Promise<void> {
@@ -58,17 +61,28 @@ export class Crew {
     }
   }
 
-  private ask(
-    worker: Worker,
-    netlist: Netlist,
-    piece: Piece,
-    onProgress: (pointsDone: number) => void,
-  ): Promise<ShardResult> {
-    const result = this.hear(worker, (reply) => {
-      if (reply.kind === "progress") onProgress(reply.pointsDone);
-      return reply.kind === "solved" ? reply.result : null;
-    });
-    worker.postMessage({ ...netlist, ...piece } satisfies Task);
+  /** Hands tasks to the threads, each to the next that is free. */
+  private async share<T, R>(
+    tasks: readonly T[],
+    todo: (worker: Worker, task: T, place: number) => Promise<R>,
+  ): Promise<R[]> {
+    const results: R[] = [];
+    let next = 0;
+    const work = async (k: number): Promise<void> => {
+      this.workers[k] ??= this.start();
+      const worker = await this.workers[k];
+      while (next < tasks.length) {
+        const place = next++;
+        results[place] = await todo(worker, tasks[place]!, place);
+      }
+    };
+    await Promise.all(Array.from({ length: Math.min(this.size, tasks.length) }, (_, k) => work(k)));
+    return results;
+  }
+
+  private ask<R>(worker: Worker, task: Task, answer: (reply: Reply) => R | null): Promise<R> {
+    const result = this.hear(worker, answer);
+    worker.postMessage(task);
     return result;
   }
 

@@ -1,5 +1,4 @@
 import { availableParallelism } from "node:os";
-import { branchesDocument } from "@/lib/analyses/branches-document";
 import { toDocument } from "@/lib/analyses/document";
 import type { RunDocument } from "@/lib/analyses/result";
 import { lineStarts, placeOf } from "@/lib/language/span";
@@ -94,10 +93,9 @@ async function documentOf(
   const { plan, design } = job;
   const progress = new Progress(name, plan.points, world, isQuiet);
   const results = await crew.solve({ text, shelf }, plan, (pointsDone) => progress.tell(pointsDone));
+  const branches = plan.seek === undefined ? null : await crew.seek({ text, shelf }, plan);
   progress.end();
-  const document = toDocument({ plan, design, text, ...gather(plan, results), diagnostics });
-  const branches = branchesDocument(job);
-  return branches === null ? document : { ...document, branches };
+  return toDocument({ plan, design, text, ...gather(plan, results), branches, diagnostics });
 }
 
 /** The document of a netlist that cannot be solved. */

@@ -1,4 +1,5 @@
 import { parentPort } from "node:worker_threads";
+import { branchesRow } from "@/lib/analyses/branches-document";
 import { compile, type Job } from "@/lib/analyses/compile";
 import { solveRange } from "@/lib/analyses/sweep";
 import type { Netlist, Reply, Task } from "./thread-messages";
@@ -22,7 +23,9 @@ function jobOf({ text, shelf }: Netlist): Job {
 const tell = (reply: Reply) => port.postMessage(reply);
 port.on("message", (task: Task) => {
   try {
-    const result = solveRange(jobOf(task), task.from, task.to, (pointsDone) =>
+    const job = jobOf(task);
+    if ("row" in task) return tell({ kind: "sought", branches: branchesRow(job, task.row) });
+    const result = solveRange(job, task.from, task.to, (pointsDone) =>
       tell({ kind: "progress", pointsDone }),
     );
     tell({ kind: "solved", result });

@@ -92,6 +92,7 @@ export const CATALOGUE = {
   CAP7: "Too many readings and requirements",
   CAP8: "Too much to judge",
   CAP9: "A name that is too long",
+  CAP10: "Too much to seek",
   CAP6: "More problems than are listed",
 } as const;
 

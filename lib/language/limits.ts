@@ -18,6 +18,10 @@ export const MOST_ELEMENTS = 2_000;
 export const MOST_POINTS = 1_000_000;
 /** Operating points looked for at each setting. */
 export const MOST_BRANCHES = 32;
+/** What `seek` goes through: sweeps of the first knob, their points together, and unknowns of the circuit. */
+export const MOST_SOUGHT_SWEEPS = 1_000;
+export const MOST_SOUGHT_POINTS = 100_000;
+export const MOST_SOUGHT_UNKNOWNS = 100;
 /** Readings and requirements. */
 export const MOST_CONTRACT = 1_000;
 /** Points × (traces + unknowns), and points × (names, numbers and operators of readings and requirements). */
