@@ -1,11 +1,13 @@
 import { describe, expect, it } from "vitest";
-import { choiceOf, horizontalAxis, storeyViews, USUAL_VIEW } from "@/app/_components/curves/curve-view";
+import { horizontalAxis } from "@/app/_components/curves/axes";
+import { nearest } from "@/app/_components/curves/columns";
+import { choiceOf, drawnChoice, USUAL_VIEW } from "@/app/_components/curves/curve-view";
 import { placeLabels } from "@/app/_components/curves/label-places";
 import { moved } from "@/app/_components/curves/move-cursor";
 import { verticalRange, zoomed } from "@/app/_components/curves/range";
 import { readQuantity } from "@/app/_components/curves/read-quantity";
-import { nearest, reduceColumns } from "@/app/_components/curves/reduce-columns";
 import { LINEAR } from "@/app/_components/curves/scale";
+import { storeyViews } from "@/app/_components/curves/storey-views";
 import { madeUpSet } from "./multiplier";
 
 describe("axes of a view", () => {
@@ -38,6 +40,15 @@ describe("axes of a view", () => {
       traces: [],
       families: [1],
     });
+  });
+
+  it("narrows what is drawn to the one trace or setting seen alone, and leaves the choice as it was", () => {
+    const set = madeUpSet([1, 2]);
+    const alone = { ...USUAL_VIEW, families: [0], only: { family: 1 } };
+    expect(drawnChoice(set, alone).families).toEqual([1]);
+    expect(choiceOf(set, alone).families).toEqual([0]);
+    expect(drawnChoice(set, { ...USUAL_VIEW, only: { trace: "ratio" } }).traces).toEqual(["ratio"]);
+    expect(drawnChoice(set, { ...USUAL_VIEW, only: { trace: "gone" } }).traces).toEqual(["product", "ratio"]);
   });
 
   it("fits a storey to what is in view", () => {
@@ -78,35 +89,13 @@ describe("ranges", () => {
   });
 });
 
-describe("reduction", () => {
-  it("keeps every peak: the extremes of the reduced line are those of the whole one", () => {
-    const length = 200_000;
-    const x = Array.from({ length }, (_, i) => i);
-    const y: (number | null)[] = x.map((i) => Math.sin(i / 5000));
-    y[123_456] = 40;
-    y[77_777] = -30;
-    const { x: gridX, ys } = reduceColumns({ x, ys: [y] }, { from: 0, to: length - 1 }, 700);
-    expect(gridX).toHaveLength(1400);
-    expect(Math.max(...ys[0]!.map((v) => v ?? 0))).toBe(40);
-    expect(Math.min(...ys[0]!.map((v) => v ?? 0))).toBe(-30);
-    const peak = gridX[ys[0]!.indexOf(40)]!;
-    expect(Math.abs(peak - 123_456)).toBeLessThan(length / 700);
-  });
-
-  it("leaves a gap where a column has no number, and keeps the order of fall and rise within one", () => {
-    const x = [0, 1, 2, 3, 8, 9];
-    const { ys } = reduceColumns({ x, ys: [[5, 1, null, null, 2, 7]] }, { from: 0, to: 10 }, 5);
-    expect(ys[0]).toEqual([5, 1, null, null, null, null, null, null, 2, 7]);
-  });
-
-  it("finds the nearest abscissa", () => {
+describe("cursor keys", () => {
+  it("find the nearest abscissa", () => {
     expect([-5, 0.4, 0.6, 9].map((at) => nearest([0, 1, 2], at))).toEqual([0, 0, 1, 2]);
     expect(nearest([], 1)).toBe(-1);
   });
-});
 
-describe("cursor keys", () => {
-  const field = { x: [0, 1, 2, 3, 4, 5], families: [0, 3], view: { from: 1, to: 4 } };
+  const field = { x: Float64Array.of(0, 1, 2, 3, 4, 5), families: [0, 3], view: { from: 1, to: 4 } };
 
   it("start in the middle, step, and stop at the ends of the view", () => {
     expect(moved("ArrowRight", false, null, field)).toEqual({ place: 2, family: 0 });

@@ -1,6 +1,8 @@
+import type { Axis } from "./axes";
+import { valueIn } from "./columns";
 import type { Cursor } from "./cursor-layer";
-import type { Axis, StoreyView } from "./curve-view";
 import { downIn, STOREY_GAP } from "./nearest-line";
+import type { StoreyView } from "./storey-views";
 
 /** The chosen point: a copper pointer on the ruler, as on a slide rule, and a filled mark on each of its lines. */
 export function ChosenMark({
@@ -12,7 +14,7 @@ export function ChosenMark({
 }: {
   readonly storeys: readonly StoreyView[];
   readonly horizontal: Axis;
-  readonly x: readonly number[];
+  readonly x: Float64Array;
   readonly width: number;
   readonly chosen: Cursor;
 }) {
@@ -25,7 +27,7 @@ export function ChosenMark({
     const offset = top;
     top += storey.height + STOREY_GAP;
     return storey.lines.flatMap((line) => {
-      const value = line.family === chosen.family ? (line.values[chosen.place] ?? null) : null;
+      const value = line.family === chosen.family ? valueIn(line.values, chosen.place) : null;
       const down = value === null ? null : downIn(storey, value);
       return down === null ? [] : [{ key: line.key, top: offset + down }];
     });

@@ -1,14 +1,17 @@
 "use client";
 
 import { type KeyboardEvent, type PointerEvent, useRef, useState } from "react";
+import type { Axis } from "./axes";
+import { nearest } from "./columns";
 import { CursorMarks } from "./cursor-marks";
 import type { CurveSet } from "./curve-set";
-import type { Axis, StoreyView } from "./curve-view";
 import { formatKnob } from "./figures-in-words";
 import { moved } from "./move-cursor";
 import { nearestLine } from "./nearest-line";
 import type { Range } from "./range";
-import { nearest } from "./reduce-columns";
+import type { StoreyView } from "./storey-views";
+import type { Zoom } from "./use-zoom";
+import { zoomByKey } from "./zoom-keys";
 
 /** Where the cursor stands: a place along the sweep, and the setting it follows. */
 export interface Cursor {
@@ -20,7 +23,7 @@ interface Props {
   readonly set: CurveSet;
   readonly storeys: readonly StoreyView[];
   readonly horizontal: Axis;
-  readonly x: readonly number[];
+  readonly x: Float64Array;
   readonly width: number;
   readonly cursor: Cursor | null;
   readonly describedBy: string;
@@ -28,6 +31,7 @@ interface Props {
   readonly onChoose: (cursor: Cursor) => void;
   /** The part dragged over, in places of the horizontal axis. */
   readonly onZoom: (range: Range) => void;
+  readonly zoom: Zoom;
 }
 
 /** Px a press may wander before it is a drag. */
@@ -38,6 +42,7 @@ export function CursorLayer(props: Props) {
   const { set, storeys, horizontal, x, width, cursor, onCursor, onChoose, onZoom } = props;
   const pressed = useRef<number | null>(null);
   const [drag, setDrag] = useState<Range | null>(null);
+  const [edge, setEdge] = useState<number | null>(null);
   const { from, to } = horizontal.range;
   const families = [...new Set(storeys.flatMap(({ lines }) => lines.map(({ family }) => family)))];
 
@@ -79,7 +84,18 @@ export function CursorLayer(props: Props) {
       if (cursor !== null) onChoose(cursor);
       return;
     }
-    if (event.key === "Escape") return onCursor(null);
+    if (event.key === "Escape") {
+      setEdge(null);
+      return onCursor(null);
+    }
+    if (event.ctrlKey || event.metaKey || event.altKey) return;
+    const at = cursor === null ? undefined : x[cursor.place];
+    if (event.key.toLowerCase() === "z") {
+      if (at === undefined) return;
+      if (edge !== null && edge !== at) onZoom({ from: Math.min(edge, at), to: Math.max(edge, at) });
+      return setEdge(edge === null ? at : null);
+    }
+    if (zoomByKey(event.key, at, props.zoom)) return event.preventDefault();
     const next = moved(event.key, event.shiftKey, cursor, { x, families, view: horizontal.range });
     if (next === null) return;
     event.preventDefault();
@@ -113,13 +129,23 @@ export function CursorLayer(props: Props) {
         setDrag(null);
       }}
       onPointerLeave={() => pressed.current === null && onCursor(null)}
-      onBlur={() => onCursor(null)}
+      onBlur={() => {
+        setEdge(null);
+        onCursor(null);
+      }}
       onKeyDown={press}
     >
       {drag !== null && (
         <div
           className="absolute top-0 h-full border-accent border-x bg-accent/10"
           style={{ left: drag.from, width: drag.to - drag.from }}
+        />
+      )}
+      {edge !== null && edge >= from && edge <= to && (
+        <div
+          className="absolute top-0 h-full border-accent border-l-2 border-double"
+          style={{ left: (width * (edge - from)) / (to - from) }}
+          data-edge
         />
       )}
       {cursor !== null && drag === null && <CursorMarks {...props} cursor={cursor} />}

@@ -1,17 +1,20 @@
 import { classNames } from "@/app/_components/ui/class-names";
 import { formatQuantity } from "@/lib/units/quantity";
+import type { Axis } from "./axes";
+import { valueIn } from "./columns";
 import type { Cursor } from "./cursor-layer";
 import type { CurveSet } from "./curve-set";
 import { pointAt } from "./curve-set";
-import type { Axis, StoreyView } from "./curve-view";
+import { whyMissing } from "./failed-reasons";
 import { formatKnob, formatValue } from "./figures-in-words";
 import { downIn, STOREY_GAP } from "./nearest-line";
+import type { StoreyView } from "./storey-views";
 
 interface Props {
   readonly set: CurveSet;
   readonly storeys: readonly StoreyView[];
   readonly horizontal: Axis;
-  readonly x: readonly number[];
+  readonly x: Float64Array;
   readonly width: number;
   readonly cursor: Cursor;
 }
@@ -25,14 +28,14 @@ export function CursorMarks({ set, storeys, horizontal, x, width, cursor }: Prop
   );
   const followed = storeys.flatMap(({ lines }) => lines.filter(({ family }) => family === cursor.family));
   const label = set.families[cursor.family]?.label ?? "";
-  const bound = set.source.points.bound?.[pointAt(set, cursor.family, cursor.place)] ?? null;
+  const bound = boundAt(set, cursor);
   const right = left < width / 2;
   return (
     <div aria-hidden="true" className="pointer-events-none">
       <div className="absolute top-0 h-full border-accent border-l" style={{ left }} />
       {storeys.map((storey, i) =>
         storey.lines.map((line) => {
-          const value = line.values[cursor.place] ?? null;
+          const value = valueIn(line.values, cursor.place);
           const down = value === null ? null : downIn(storey, value);
           if (down === null) return null;
           return (
@@ -62,12 +65,25 @@ export function CursorMarks({ set, storeys, horizontal, x, width, cursor }: Prop
           <p key={line.key} className="flex justify-between gap-4 whitespace-nowrap">
             <span className="text-quiet">{line.trace}</span>
             <span className="figures text-xs">
-              {line.values[cursor.place] === null
+              {valueIn(line.values, cursor.place) === null
                 ? missing(set, cursor)
-                : formatValue(line.values[cursor.place] ?? null, line.unit)}
+                : formatValue(valueIn(line.values, cursor.place), line.unit)}
             </span>
           </p>
         ))}
+        {storeys.flatMap(({ bands, unit }) =>
+          bands
+            .filter(({ key }) => followed.some((line) => line.key === key))
+            .map((band) => {
+              const [low, high] = [valueIn(band.low, cursor.place), valueIn(band.high, cursor.place)];
+              if (low === null || high === null) return null;
+              return (
+                <p key={band.key} className="figures whitespace-nowrap text-quiet text-xs">
+                  draws {formatQuantity(low, unit, 4)} to {formatQuantity(high, unit, 4)}
+                </p>
+              );
+            }),
+        )}
         {bound !== null && (
           <p className="figures whitespace-nowrap text-quiet text-xs">
             proved within {formatQuantity(bound, "V", 2)}
@@ -80,16 +96,20 @@ export function CursorMarks({ set, storeys, horizontal, x, width, cursor }: Prop
 
 /** Why there is no value at the cursor. */
 export function missing(set: CurveSet, { family, place }: Cursor): string {
-  const outcome = set.source.points.outcome[pointAt(set, family, place)] ?? null;
-  if (outcome === null) return "not solved";
-  return outcome === "converged" ? "no value" : `failed: ${outcome}`;
+  if (set.source.absent?.[family]?.[place] === 1) return "no point here";
+  return whyMissing(set.source, pointAt(set, family, place));
+}
+
+function boundAt(set: CurveSet, { family, place }: Cursor): number | null {
+  const { bound } = set.source.points;
+  return bound === undefined ? null : valueIn(bound, pointAt(set, family, place));
 }
 
 /** Below the followed line in the first storey, or above it where there is no room below. */
 function boxTop(storeys: readonly StoreyView[], cursor: Cursor): number {
   const [first] = storeys;
   const line = first?.lines.find(({ family }) => family === cursor.family);
-  const value = line?.values[cursor.place] ?? null;
+  const value = line === undefined ? null : valueIn(line.values, cursor.place);
   const down = first === undefined || value === null ? null : downIn(first, value);
   if (first === undefined || down === null) return 48;
   return down > first.height / 2 ? Math.max(32, down - 88) : down + 24;

@@ -1,20 +1,26 @@
 "use client";
 
-import { useDeferredValue, useId, useMemo, useRef, useState } from "react";
-import { AxisSwitch } from "./axis-switch";
+import { useCallback, useDeferredValue, useId, useMemo, useRef, useState } from "react";
+import type { AllowedBand } from "@/lib/analyses/allowed-bands";
+import { horizontalAxis, placesOf } from "./axes";
 import type { Cursor } from "./cursor-layer";
 import { type CurveSet, placeOfPoint, pointAt } from "./curve-set";
-import { type CurveView, choiceOf, horizontalAxis, placesOf, storeyViews } from "./curve-view";
+import { type CurveView, choiceOf, drawnChoice } from "./curve-view";
 import { accountOf } from "./failed-spans";
-import { coherentValue } from "./figures-in-words";
+import { FigureControls } from "./figure-controls";
 import { useWidth } from "./frame-width";
 import { LineTable } from "./line-table";
 import { PlotFrame } from "./plot-frame";
 import { guttersFor, NARROW } from "./plot-gutters";
 import type { Range } from "./range";
-import { valueAt } from "./scale";
 import { SpokenCursor } from "./spoken-cursor";
+import { type Beside, storeyViews } from "./storey-views";
+import { storeysOf } from "./storeys";
 import { summarise } from "./summary-sentence";
+import { useBands } from "./use-bands";
+import { useZoom } from "./use-zoom";
+import { valuesOf } from "./view-range";
+import { shownWorst } from "./worst-draw";
 import { ZoomFields } from "./zoom-fields";
 
 interface Props {
@@ -26,55 +32,67 @@ interface Props {
   /** Flat number of the chosen point. */
   readonly point: number | null;
   readonly onPoint: (point: number) => void;
+  /** Flat number of the point under the cursor, each time it moves; null where it leaves the plot. */
+  readonly onCursor?: (point: number | null) => void;
   /** Why there are no values at all yet; null once there may be some. */
   readonly waiting: string | null;
+  /** What requirements allow, to be shaded. */
+  readonly allowed?: readonly AllowedBand[];
 }
 
-/** A plot with all that belongs to it: axis switches, storeys on their ruler, the view as fields, a summary, the lines. */
-export function CurveFigure({ set, name, view, onView, point, onPoint, waiting }: Props) {
+const NO_BANDS: readonly AllowedBand[] = [];
+
+/** A plot with all that belongs to it: switches, storeys on their ruler, the view as fields, a summary, the lines. */
+export function CurveFigure(props: Props) {
+  const { set, name, view, onView, point, onPoint, onCursor, waiting, allowed = NO_BANDS } = props;
   const id = useId();
   const frame = useRef<HTMLDivElement>(null);
   const frameWidth = useWidth(frame);
   const [cursor, setCursor] = useState<Cursor | null>(null);
+  const [followed, setFollowed] = useState<number | null>(null);
   const spoken = useDeferredValue(cursor);
   const narrow = frameWidth < NARROW;
 
-  const plot = useMemo(() => {
-    const rough = horizontalAxis(set, view, frameWidth);
-    const gutters = guttersFor(frameWidth, storeyViews(set, view, rough, narrow));
-    const width = Math.max(0, frameWidth - gutters.left - gutters.right);
-    const horizontal = horizontalAxis(set, view, width);
-    const storeys = storeyViews(set, view, horizontal, narrow);
-    return { gutters, width, horizontal, storeys, x: placesOf(set, horizontal.mapping) };
-  }, [set, view, frameWidth, narrow]);
   const choice = useMemo(() => choiceOf(set, view), [set, view]);
-  const account = useMemo(() => accountOf(set, choice.families), [set, choice]);
-  const summary = useMemo(() => summarise(set, plot.storeys, account), [set, plot.storeys, account]);
+  const drawn = useMemo(() => drawnChoice(set, view), [set, view]);
+  const lines = useMemo(() => storeysOf(set, drawn), [set, drawn]);
+  const account = useMemo(() => accountOf(set, drawn.families), [set, drawn]);
+  const summary = useMemo(() => summarise(set, lines, account), [set, lines, account]);
+  const bands = useBands(set, drawn.traces, view.band !== false);
+  const worst = shownWorst(set, view)?.draw ?? null;
+  const beside: Beside = useMemo(() => ({ allowed, bands, worst }), [allowed, bands, worst]);
 
-  const zoom = ({ from, to }: Range) => {
-    const value = (place: number) =>
-      Number(coherentValue(set.axis, valueAt(plot.horizontal.mapping, place)).toPrecision(5));
-    onView({ zoom: { from: value(from), to: value(to) } });
-  };
+  const rulerFor = useCallback(
+    (zoom: Range | null) => horizontalAxis(set, { ...view, zoom }, frameWidth),
+    [set, view, frameWidth],
+  );
+  const { zoom, act } = useZoom(
+    set,
+    view.zoom,
+    rulerFor,
+    useCallback((next) => onView({ zoom: next }), [onView]),
+  );
+  const { scale, sign } = rulerFor(null).mapping;
+  const x = useMemo(() => placesOf(set, { scale, sign }), [set, scale, sign]);
+  const plot = useMemo(() => {
+    const seen = { ...view, zoom };
+    const rough = horizontalAxis(set, seen, frameWidth);
+    const gutters = guttersFor(frameWidth, storeyViews(set, seen, rough, narrow, beside, x));
+    const width = Math.max(0, frameWidth - gutters.left - gutters.right);
+    const horizontal = horizontalAxis(set, seen, width);
+    return { gutters, width, horizontal, storeys: storeyViews(set, seen, horizontal, narrow, beside, x), x };
+  }, [set, view, zoom, frameWidth, narrow, beside, x]);
+
+  const moveCursor = useCallback(
+    (next: Cursor | null) => {
+      setCursor(next);
+      onCursor?.(next === null ? null : pointAt(set, next.family, next.place));
+    },
+    [set, onCursor],
+  );
   return (
     <figure aria-label={name} aria-describedby={`${id}-summary`} className="grid min-w-0 gap-4">
-      <div className="flex flex-wrap items-center gap-x-5 gap-y-2" data-print="never">
-        <AxisSwitch
-          name={set.axis.knob}
-          scale={plot.horizontal.mapping.scale}
-          fit={plot.horizontal.fit}
-          onChange={(x) => onView({ x })}
-        />
-        {plot.storeys.map(({ key, traces, axis }) => (
-          <AxisSwitch
-            key={key}
-            name={traces.length === 1 ? traces[0]! : key}
-            scale={axis.mapping.scale}
-            fit={axis.fit}
-            onChange={(scale) => onView({ y: { ...view.y, [key]: scale } })}
-          />
-        ))}
-      </div>
+      <FigureControls set={set} plot={plot} view={view} onView={onView} />
       <div
         ref={frame}
         className="min-w-0 overflow-hidden"
@@ -86,39 +104,45 @@ export function CurveFigure({ set, name, view, onView, point, onPoint, waiting }
             set={set}
             failed={account.spans}
             cursor={cursor}
+            followed={followed}
             chosen={point === null ? null : placeOfPoint(set, point)}
             describedBy={`${id}-keys`}
             empty={waiting ?? "No point is solved here"}
-            onCursor={setCursor}
+            onCursor={moveCursor}
+            onFollow={setFollowed}
             onChoose={({ family, place }) => onPoint(pointAt(set, family, place))}
-            onZoom={zoom}
+            onZoom={(range) => act.show(valuesOf(set, plot.horizontal, range))}
+            zoom={act}
           />
         )}
         {plot.storeys.length === 0 && (
           <p className="border-y py-6 text-quiet text-sm">
-            {set.source.traces.length === 0
+            {set.traces.length === 0
               ? "The netlist shows nothing, so no trace was kept. Add a line such as show out.v and run it again; the nets of a single point stand beside."
               : "No trace is chosen. Choose one in the table of lines below."}
           </p>
         )}
       </div>
-      <ZoomFields set={set} zoom={view.zoom} onZoom={(next) => onView({ zoom: next })} />
+      <ZoomFields set={set} zoom={view.zoom} act={act} />
       <figcaption id={`${id}-summary`} className="max-w-prose text-sm">
         {waiting ?? summary}
+        {set.source.note !== undefined && ` ${set.source.note}`}
       </figcaption>
       <p id={`${id}-keys`} className="max-w-prose text-quiet text-xs" data-print="never">
         Point at the plot, or focus it and use the arrow keys: left and right along the sweep, up and down
-        between settings, Shift for ten points. A click or Enter chooses a point; dragging shows a part of the
-        sweep.
+        between settings, Shift for ten points. A click or Enter chooses a point. Dragging shows a part of the
+        sweep, and so does Z at both its ends; plus and minus, comma and full stop, or the ruler dragged along
+        move the view; 0 shows the whole sweep, Backspace the view before.
       </p>
       <SpokenCursor set={set} storeys={plot.storeys} cursor={spoken} />
       <LineTable
         set={set}
-        storeys={plot.storeys}
+        storeys={lines}
         choice={choice}
+        only={view.only ?? null}
         cursor={cursor}
-        onTraces={(traces) => onView({ traces })}
-        onFamilies={(families) => onView({ families })}
+        onView={onView}
+        onFollow={setFollowed}
       />
     </figure>
   );

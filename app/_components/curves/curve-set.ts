@@ -1,17 +1,8 @@
-import type { AxisDocument, TraceDocument } from "@/lib/analyses/result";
-import type { OutcomeKind } from "@/lib/solver/outcome";
+import { type Column, columnFrom } from "./columns";
+import type { CurveAxis, CurveSource, CurveTrace } from "./curve-source";
 import { formatKnob, isAmbient } from "./figures-in-words";
 
-/** What curves are drawn from: a run document, or a plan with empty columns while nothing is solved. */
-export interface CurveSource {
-  readonly axes: readonly AxisDocument[];
-  readonly traces: readonly TraceDocument[];
-  readonly points: {
-    readonly outcome: readonly (OutcomeKind | null)[];
-    /** A true solution lies within so many volts; null without a proof. Absent while nothing is solved. */
-    readonly bound?: readonly (number | null)[];
-  };
-}
+export type { CurveSource } from "./curve-source";
 
 /** One setting of the outer sweeps: a curve of each trace. */
 export interface Family {
@@ -20,34 +11,70 @@ export interface Family {
   readonly label: string;
 }
 
+/** A trace to be drawn: one that the netlist shows, or a reading that has a value at each point. */
+export interface CurveColumn extends CurveTrace {
+  readonly isReading: boolean;
+}
+
 /** The curves of a run: the horizontal axis in ascending order, the settings, and where each value stands. */
 export interface CurveSet {
-  readonly axis: AxisDocument;
+  readonly axis: CurveAxis;
   /** Swept values in ascending order, coherent SI units. */
-  readonly x: readonly number[];
+  readonly x: Float64Array;
   /** Index on the first axis of each of `x`. */
-  readonly order: readonly number[];
+  readonly order: Int32Array;
+  readonly isAscending: boolean;
   readonly families: readonly Family[];
-  readonly outer: readonly AxisDocument[];
+  readonly outer: readonly CurveAxis[];
   readonly source: CurveSource;
+  /** Traces in the order of the netlist, then readings per point. */
+  readonly traces: readonly CurveColumn[];
+  /** Random draws whose values are here. */
+  readonly draws: number;
+  /** Columns of the nominal design in the order of `x`, by trace and setting; filled as they are asked for. */
+  readonly columns: Map<string, Float64Array>;
 }
 
 /** Null for a run without a sweep, which has one operating point and no curve. */
 export function curveSet(source: CurveSource): CurveSet | null {
   const [axis, ...outer] = source.axes;
   if (axis === undefined) return null;
-  const order = axis.values.map((_, index) => index).sort((a, b) => axis.values[a]! - axis.values[b]!);
-  const count = outer.reduce((product, { values }) => product * values.length, 1);
+  const { values } = axis;
+  const isAscending = values.every((value, i) => i === 0 || value >= values[i - 1]!);
+  const order = Int32Array.from(values, (_, i) => i);
+  if (!isAscending) order.sort((a, b) => values[a]! - values[b]!);
+  const count = outer.reduce((product, one) => product * one.values.length, 1);
   const texts = outer.map(settingTexts);
   const families = Array.from({ length: count }, (_, index) => ({
     index,
     label: familyLabel(outer, texts, index),
   }));
-  return { axis, x: order.map((index) => axis.values[index]!), order, families, outer, source };
+  return {
+    axis,
+    x: Float64Array.from(order, (index) => values[index]!),
+    order,
+    isAscending,
+    families,
+    outer,
+    source,
+    traces: tracesOf(source),
+    draws: source.draws ?? 0,
+    columns: new Map(),
+  };
+}
+
+/** A reading of the name of a trace stands for it, as a later line of the netlist could not. */
+function tracesOf({ traces, readings = [] }: CurveSource): CurveColumn[] {
+  const shown = new Set(traces.map(({ name }) => name));
+  const below = readings.filter(({ name, per }) => per === "point" && !shown.has(name));
+  return [
+    ...traces.map((trace) => ({ ...trace, isReading: false })),
+    ...below.map(({ name, unit, values }) => ({ name, unit, values, isReading: true })),
+  ];
 }
 
 /** Index on each outer axis of a family; the first outer sweep turns fastest. */
-export function outerIndices(outer: readonly AxisDocument[], family: number): number[] {
+export function outerIndices(outer: readonly CurveAxis[], family: number): number[] {
   let rest = family;
   return outer.map(({ values }) => {
     const index = rest % values.length;
@@ -57,14 +84,15 @@ export function outerIndices(outer: readonly AxisDocument[], family: number): nu
 }
 
 /** The settings of an axis in as few digits, four at least, as tell them apart. */
-function settingTexts(axis: AxisDocument): string[] {
+function settingTexts(axis: CurveAxis): readonly string[] {
+  if (axis.names !== undefined) return axis.names;
   const written = (digits: number) => axis.values.map((value) => formatKnob(axis, value, digits));
   const short = written(4);
   return new Set(short).size === short.length ? short : written(6);
 }
 
 function familyLabel(
-  outer: readonly AxisDocument[],
+  outer: readonly CurveAxis[],
   texts: readonly (readonly string[])[],
   family: number,
 ): string {
@@ -72,7 +100,7 @@ function familyLabel(
   return outer
     .map((axis, i) => {
       const text = texts[i]![indices[i]!]!;
-      return isAmbient(axis) ? text : `${axis.knob} ${text}`;
+      return isAmbient(axis) || axis.names !== undefined ? text : `${axis.knob} ${text}`;
     })
     .join(", ");
 }
@@ -90,21 +118,33 @@ export function placeOfPoint(set: CurveSet, point: number): { family: number; pl
   return { family, place: set.order.indexOf(point % length) };
 }
 
-/** The column of one trace in one family, in the order of `x`; null where unsolved. */
-export function columnOf(set: CurveSet, trace: TraceDocument, family: number): (number | null)[] {
-  const from = family * set.x.length;
-  return set.order.map((index) => trace.values[from + index] ?? null);
+/** The column of one trace in one family, in the order of `x`, NaN where unsolved. The nominal one unless a draw is named. */
+export function columnOf(set: CurveSet, trace: CurveColumn, family: number, draw = 0): Float64Array {
+  const key = `${draw} ${family} ${trace.name}`;
+  let column = set.columns.get(key);
+  if (column === undefined) {
+    column = ordered(set, trace.values, (draw * set.families.length + family) * set.x.length);
+    set.columns.set(key, column);
+  }
+  return column;
+}
+
+function ordered({ isAscending, order, x }: CurveSet, values: Column, from: number): Float64Array {
+  const all = columnFrom(values);
+  if (isAscending && all.length >= from + x.length) return all.subarray(from, from + x.length);
+  return Float64Array.from(order, (index) => all[from + index] ?? Number.NaN);
 }
 
 /** The setting of a point, the first sweep first. */
 export function settingOf(
-  axes: readonly AxisDocument[],
+  axes: readonly CurveAxis[],
   point: number,
-): { axis: AxisDocument; value: number }[] {
+): { axis: CurveAxis; value: number; text: string }[] {
   let rest = point;
   return axes.map((axis) => {
-    const value = axis.values[rest % axis.values.length]!;
+    const index = rest % axis.values.length;
     rest = Math.floor(rest / axis.values.length);
-    return { axis, value };
+    const value = axis.values[index]!;
+    return { axis, value, text: axis.names?.[index] ?? formatKnob(axis, value) };
   });
 }

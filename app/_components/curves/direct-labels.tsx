@@ -1,6 +1,11 @@
-import type { Axis, StoreyView } from "./curve-view";
+import { classNames } from "@/app/_components/ui/class-names";
+import type { Axis } from "./axes";
 import { placeLabels } from "./label-places";
+import { inView } from "./line-path";
+import { cssColour } from "./line-style";
 import { placeOf } from "./scale";
+import type { StoreyView } from "./storey-views";
+import type { Line } from "./storeys";
 
 /** Px between the middles of two labels. */
 const GAP = 15;
@@ -12,18 +17,22 @@ export function DirectLabels({
   storey,
   horizontal,
   x,
+  followed,
 }: {
   readonly storey: StoreyView;
   readonly horizontal: Axis;
-  readonly x: readonly number[];
+  readonly x: Float64Array;
+  /** The setting that the reader follows. */
+  readonly followed: number | null;
 }) {
   const { axis, height, lines } = storey;
   const down = (place: number) => (height * (axis.range.to - place)) / (axis.range.to - axis.range.from);
   const wishes = lines.flatMap((line) => {
-    const at = lastPlace(line.values, x, horizontal, axis);
+    const at = lastPlace(line, x, horizontal, axis);
     return line.label === "" || at === null ? [] : [{ key: line.key, at: down(at) - EDGE }];
   });
-  const places = placeLabels(wishes, height - 2 * EDGE, GAP);
+  const kept = lines.find(({ family }) => family === followed)?.key ?? null;
+  const places = placeLabels(wishes, height - 2 * EDGE, GAP, kept);
   return (
     <div aria-hidden="true">
       {lines.map((line) => {
@@ -32,13 +41,17 @@ export function DirectLabels({
         return (
           <span
             key={line.key}
-            className="figures absolute left-full ml-1.5 flex -translate-y-1/2 items-center gap-1.5 whitespace-nowrap text-xs leading-none"
+            className={classNames(
+              "figures absolute left-full ml-1.5 flex -translate-y-1/2 items-center gap-1.5 whitespace-nowrap text-xs leading-none",
+              followed !== null && line.family !== followed && "opacity-50",
+            )}
+            data-family={line.family}
             style={{ top: top + EDGE }}
           >
             <svg aria-hidden="true" width="14" height="4" viewBox="0 0 14 4" fill="none">
               <path
                 d="M0 2H14"
-                stroke={`var(${line.style.colour})`}
+                stroke={cssColour(line.style)}
                 strokeWidth="2"
                 strokeDasharray={line.style.dash.join(" ")}
               />
@@ -52,17 +65,10 @@ export function DirectLabels({
 }
 
 /** The place on the vertical axis where a line last stands inside the view. */
-function lastPlace(
-  values: readonly (number | null)[],
-  x: readonly number[],
-  horizontal: Axis,
-  axis: Axis,
-): number | null {
-  for (let i = values.length - 1; i >= 0; i--) {
-    const at = x[i]!;
-    const value = values[i] ?? null;
-    if (value === null || at > horizontal.range.to || at < horizontal.range.from) continue;
-    return placeOf(axis.mapping, value);
+function lastPlace({ values }: Line, x: Float64Array, horizontal: Axis, axis: Axis): number | null {
+  const { from, to } = horizontal.range;
+  for (let i = inView(x, horizontal.range).end - 1; i >= 0 && x[i]! >= from; i--) {
+    if (x[i]! <= to && Number.isFinite(values[i])) return placeOf(axis.mapping, values[i]!);
   }
   return null;
 }

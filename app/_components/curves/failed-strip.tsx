@@ -1,9 +1,9 @@
-import type { Axis } from "./curve-view";
+import type { Axis } from "./axes";
 import type { FailedSpan } from "./failed-spans";
 
 interface Props {
   readonly spans: readonly FailedSpan[];
-  readonly x: readonly number[];
+  readonly x: Float64Array;
   readonly horizontal: Axis;
   readonly width: number;
 }

@@ -1,4 +1,4 @@
-import type { LineStyle } from "./line-style";
+import { cssColour, type LineStyle } from "./line-style";
 
 /** A short piece of a line in its colour and dashes, for labels and legends. */
 export function LineSample({ style }: { readonly style: LineStyle }) {
@@ -11,12 +11,7 @@ export function LineSample({ style }: { readonly style: LineStyle }) {
       fill="none"
       className="inline-block shrink-0"
     >
-      <path
-        d="M0 4H26"
-        stroke={`var(${style.colour})`}
-        strokeWidth="2"
-        strokeDasharray={style.dash.join(" ")}
-      />
+      <path d="M0 4H26" stroke={cssColour(style)} strokeWidth="2" strokeDasharray={style.dash.join(" ")} />
     </svg>
   );
 }

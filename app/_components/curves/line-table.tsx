@@ -1,38 +1,47 @@
 "use client";
 
-import { type ReactNode, useState } from "react";
+import { memo, type ReactNode, useState } from "react";
+import { Button } from "@/app/_components/ui/button";
+import { classNames } from "@/app/_components/ui/class-names";
 import { formatCount } from "@/app/_components/ui/count";
 import { INPUT_CLASS } from "@/app/_components/ui/field";
 import { Cell, HeadCell, Table, TableFrame } from "@/app/_components/ui/table";
+import { valueIn } from "./columns";
 import type { Cursor } from "./cursor-layer";
 import { missing } from "./cursor-marks";
-import { type CurveSet, type Family, pointAt } from "./curve-set";
-import type { StoreyView } from "./curve-view";
+import { type CurveColumn, type CurveSet, type Family, pointAt } from "./curve-set";
+import type { CurveView, Isolated } from "./curve-view";
 import { formatKnob, formatValue } from "./figures-in-words";
 import { LineSample } from "./line-sample";
-import type { Choice } from "./storeys";
+import type { Choice, Storey } from "./storeys";
 
 interface Props {
   readonly set: CurveSet;
-  readonly storeys: readonly StoreyView[];
+  readonly storeys: readonly Storey[];
   readonly choice: Choice;
+  /** What is seen alone. */
+  readonly only: Isolated | null;
   readonly cursor: Cursor | null;
-  readonly onTraces: (traces: readonly string[]) => void;
-  readonly onFamilies: (families: readonly number[]) => void;
+  readonly onView: (change: Partial<CurveView>) => void;
+  readonly onFollow: (family: number | null) => void;
 }
 
 /** Settings listed at once, beside those that are drawn. */
 const FEW_ROWS = 30;
 
-/** The lines of the plot: a column a trace, a row a setting, each with its switch, its sample, and its value at the cursor. */
-export function LineTable({ set, storeys, choice, cursor, onTraces, onFamilies }: Props) {
+/**
+ * The lines of the plot: a column a trace, a row a setting, each with its switch, its sample, and its value at the cursor. What
+ * stands beside a switch shows that one alone, and all others again; a row pointed at or reached by Tab is followed in the plot.
+ */
+export const LineTable = memo(function LineTable(props: Props) {
+  const { set, storeys, choice, only, cursor, onView, onFollow } = props;
   const [wanted, setWanted] = useState("");
-  const { traces } = set.source;
+  const { traces } = set;
   const drawn = new Map(storeys.flatMap(({ lines }) => lines.map((line) => [line.key, line] as const)));
   const at = cursor === null ? null : set.x[cursor.place];
-  const value = (trace: (typeof traces)[number], family: number) => {
+  const value = (trace: CurveColumn, family: number) => {
     if (cursor === null) return "";
-    const found = trace.values[pointAt(set, family, cursor.place)] ?? null;
+    const found = valueIn(trace.values, pointAt(set, family, cursor.place));
     return found === null ? missing(set, { family, place: cursor.place }) : formatValue(found, trace.unit);
   };
   const toggled = <T,>(list: readonly T[], item: T, all: readonly T[]) =>
@@ -41,22 +50,57 @@ export function LineTable({ set, storeys, choice, cursor, onTraces, onFamilies }
   const indices = set.families.map(({ index }) => index);
   const many = set.families.length > FEW_ROWS;
   const rows = many ? found(set.families, choice.families, wanted) : set.families;
+  const isOnly = (one: Isolated) => JSON.stringify(only) === JSON.stringify(one);
+  const switchFor = (
+    name: string,
+    one: Isolated,
+    checked: boolean,
+    onChange: () => void,
+    label: ReactNode,
+  ) => (
+    <Switch
+      name={name}
+      checked={checked}
+      only={isOnly(one)}
+      onChange={onChange}
+      onOnly={() => onView({ only: isOnly(one) ? null : one })}
+    >
+      {label}
+    </Switch>
+  );
   return (
     <div className="grid gap-2">
-      {many && (
-        <label className="flex flex-wrap items-center gap-2">
-          <span className="text-quiet text-xs">Find a setting</span>
-          <input
-            type="search"
-            value={wanted}
-            onChange={({ target }) => setWanted(target.value)}
-            className={`${INPUT_CLASS} figures min-h-7! w-48!`}
-          />
-          <span className="text-quiet text-xs" aria-live="polite">
-            {formatCount(rows.length)} of {formatCount(set.families.length)} settings listed, the drawn ones
-            among them
-          </span>
-        </label>
+      {set.families.length > 6 && (
+        <div className="flex flex-wrap items-center gap-2">
+          {many && (
+            <label className="flex flex-wrap items-center gap-2">
+              <span className="text-quiet text-xs">Find a setting</span>
+              <input
+                type="search"
+                value={wanted}
+                onChange={({ target }) => setWanted(target.value)}
+                className={`${INPUT_CLASS} figures min-h-7! w-48!`}
+              />
+            </label>
+          )}
+          <Button
+            size="small"
+            onClick={() => onView({ families: many ? rows.map(({ index }) => index) : indices, only: null })}
+          >
+            {many && wanted.trim() !== ""
+              ? "Draw those found"
+              : `Draw all ${formatCount(many ? rows.length : indices.length)}`}
+          </Button>
+          <Button size="small" tone="quiet" onClick={() => onView({ families: null, only: null })}>
+            The usual ones
+          </Button>
+          {many && (
+            <span className="text-quiet text-xs" aria-live="polite">
+              {formatCount(rows.length)} of {formatCount(set.families.length)} settings listed, the drawn ones
+              among them
+            </span>
+          )}
+        </div>
       )}
       <TableFrame label="Lines of the plot" className="max-h-96 overflow-y-auto">
         <Table className="w-auto min-w-full">
@@ -74,12 +118,13 @@ export function LineTable({ set, storeys, choice, cursor, onTraces, onFamilies }
               {traces.map(({ name, unit }) => (
                 <HeadCell key={name} figure>
                   {traces.length > 1 ? (
-                    <Switch
-                      checked={choice.traces.includes(name)}
-                      onChange={() => onTraces(toggled(choice.traces, name, names))}
-                    >
-                      <Named name={name} unit={unit} />
-                    </Switch>
+                    switchFor(
+                      name,
+                      { trace: name },
+                      choice.traces.includes(name),
+                      () => onView({ traces: toggled(choice.traces, name, names) }),
+                      <Named name={name} unit={unit} />,
+                    )
                   ) : (
                     <Named name={name} unit={unit} />
                   )}
@@ -87,27 +132,33 @@ export function LineTable({ set, storeys, choice, cursor, onTraces, onFamilies }
               ))}
             </tr>
           </thead>
-          <tbody>
-            {rows.map((family) => (
-              <tr key={family.index}>
+          <tbody onPointerLeave={() => onFollow(null)}>
+            {rows.map(({ index, label }) => (
+              <tr
+                key={index}
+                onPointerEnter={() => set.families.length > 1 && onFollow(index)}
+                onFocus={() => set.families.length > 1 && onFollow(index)}
+                onBlur={() => onFollow(null)}
+              >
                 <Cell className="py-1!">
                   {set.families.length > 1 ? (
-                    <Switch
-                      checked={choice.families.includes(family.index)}
-                      onChange={() => onFamilies(toggled(choice.families, family.index, indices))}
-                    >
-                      <span className="figures text-xs">{family.label}</span>
-                    </Switch>
+                    switchFor(
+                      label,
+                      { family: index },
+                      choice.families.includes(index),
+                      () => onView({ families: toggled(choice.families, index, indices) }),
+                      <span className="figures text-xs">{label}</span>,
+                    )
                   ) : (
                     <span className="text-quiet text-xs">one setting</span>
                   )}
                 </Cell>
                 {traces.map((trace) => {
-                  const line = drawn.get(`${trace.name} ${family.index}`);
+                  const line = drawn.get(`${trace.name} ${index}`);
                   return (
                     <Cell key={trace.name} figure className="py-1!">
                       <span className="flex min-h-6 items-center justify-end gap-2.5 text-xs">
-                        {value(trace, family.index)}
+                        {value(trace, index)}
                         {line !== undefined && <LineSample style={line.style} />}
                       </span>
                     </Cell>
@@ -120,7 +171,7 @@ export function LineTable({ set, storeys, choice, cursor, onTraces, onFamilies }
       </TableFrame>
     </div>
   );
-}
+});
 
 /** The settings whose label holds all words of `wanted`, and in any case those that are drawn; so many rows at most. */
 function found(families: readonly Family[], drawn: readonly number[], wanted: string): readonly Family[] {
@@ -134,20 +185,38 @@ function found(families: readonly Family[], drawn: readonly number[], wanted: st
   });
 }
 
-function Switch({
-  checked,
-  onChange,
-  children,
-}: {
+interface SwitchProps {
+  readonly name: string;
   readonly checked: boolean;
+  readonly only: boolean;
   readonly onChange: () => void;
+  readonly onOnly: () => void;
   readonly children: ReactNode;
-}) {
+}
+
+/** Draws one or hides it, and beside that shows it alone. */
+function Switch({ name, checked, only, onChange, onOnly, children }: SwitchProps) {
   return (
-    <label className="inline-flex min-h-6 cursor-pointer items-center gap-2 whitespace-nowrap text-ink">
-      <input type="checkbox" checked={checked} onChange={onChange} className="size-3.5 accent-accent" />
-      {children}
-    </label>
+    <span className="inline-flex items-center gap-1.5">
+      <label className="inline-flex min-h-6 cursor-pointer items-center gap-2 whitespace-nowrap text-ink">
+        <input type="checkbox" checked={checked} onChange={onChange} className="size-3.5 accent-accent" />
+        {children}
+      </label>
+      <button
+        type="button"
+        aria-label={`Only ${name}`}
+        aria-pressed={only}
+        onClick={onOnly}
+        className={classNames(
+          "min-h-6 min-w-6 rounded-[2px] border px-1.5 font-normal text-xs",
+          only
+            ? "border-ink bg-ink text-paper"
+            : "border-transparent text-quiet hover:border-edge hover:text-ink",
+        )}
+      >
+        only
+      </button>
+    </span>
   );
 }
 

@@ -1,5 +1,5 @@
+import { atLeast } from "./columns";
 import type { Range } from "./range";
-import { atLeast } from "./reduce-columns";
 
 interface Position {
   readonly place: number;
@@ -18,7 +18,7 @@ export function moved(
     x,
     families,
     view,
-  }: { readonly x: readonly number[]; readonly families: readonly number[]; readonly view: Range },
+  }: { readonly x: Float64Array; readonly families: readonly number[]; readonly view: Range },
 ): Position | null {
   const first = atLeast(x, view.from - 1e-9 * Math.abs(view.from));
   const last = atLeast(x, view.to + 1e-9 * Math.abs(view.to) + Number.MIN_VALUE) - 1;

@@ -1,5 +1,6 @@
-import type { StoreyView } from "./curve-view";
+import { valueIn } from "./columns";
 import { placeOf } from "./scale";
+import type { StoreyView } from "./storey-views";
 
 /** Px from the top of a storey to a value on it; null where the axis does not hold it. */
 export function downIn({ axis, height }: Pick<StoreyView, "axis" | "height">, value: number): number | null {
@@ -15,7 +16,7 @@ export function nearestLine(storeys: readonly StoreyView[], place: number, top: 
   for (const storey of storeys) {
     const inside = top >= offset && top <= offset + storey.height;
     for (const line of inside ? storey.lines : []) {
-      const value = line.values[place] ?? null;
+      const value = valueIn(line.values, place);
       const down = value === null ? null : downIn(storey, value);
       if (down === null) continue;
       const distance = Math.abs(offset + down - top);

@@ -5,8 +5,10 @@ import { classNames } from "@/app/_components/ui/class-names";
 import { formatCount } from "@/app/_components/ui/count";
 import { Pager } from "@/app/_components/ui/pager";
 import { Cell, HeadCell, Table, TableFrame } from "@/app/_components/ui/table";
+import { valueIn } from "./columns";
 import { type CurveSource, settingOf } from "./curve-set";
-import { formatKnob, formatValue } from "./figures-in-words";
+import { whyMissing } from "./failed-reasons";
+import { formatValue } from "./figures-in-words";
 
 interface Props {
   readonly source: CurveSource;
@@ -92,9 +94,9 @@ export function NumberTable({ source, page, failedOnly, point, onPage, onFailedO
                       {formatCount(k)}
                     </button>
                   </Cell>
-                  {settingOf(axes, k).map(({ axis, value }) => (
+                  {settingOf(axes, k).map(({ axis, text }) => (
                     <Cell key={axis.knob} figure className="py-1! align-middle!">
-                      {formatKnob(axis, value)}
+                      {text}
                     </Cell>
                   ))}
                   {traces.map(({ name, unit, values }) => (
@@ -103,13 +105,13 @@ export function NumberTable({ source, page, failedOnly, point, onPage, onFailedO
                       figure
                       className={classNames(
                         "py-1! align-middle!",
-                        (values[k] ?? null) === null && "text-quiet",
+                        valueIn(values, k) === null && "text-quiet",
                       )}
                     >
-                      {formatValue(values[k] ?? null, unit)}
+                      {formatValue(valueIn(values, k), unit)}
                     </Cell>
                   ))}
-                  <Outcome outcome={points.outcome[k] ?? null} />
+                  <Outcome outcome={points.outcome[k] ?? null} why={whyMissing(source, k)} />
                 </tr>
               ))}
             </tbody>
@@ -121,13 +123,13 @@ export function NumberTable({ source, page, failedOnly, point, onPage, onFailedO
   );
 }
 
-function Outcome({ outcome }: { readonly outcome: string | null }) {
+function Outcome({ outcome, why }: { readonly outcome: string | null; readonly why: string }) {
   const failed = outcome !== null && outcome !== "converged";
   return (
     <Cell
       className={classNames("whitespace-nowrap py-1! align-middle!", failed ? "text-broken" : "text-quiet")}
     >
-      {outcome === null ? "not solved" : failed ? `failed: ${outcome}` : "converged"}
+      {outcome === "converged" ? outcome : why}
     </Cell>
   );
 }

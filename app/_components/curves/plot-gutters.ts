@@ -1,4 +1,4 @@
-import type { StoreyView } from "./curve-view";
+import type { StoreyView } from "./storey-views";
 
 /** Room beside the plotting area, px, and whether lines are labelled at their ends. */
 export interface Gutters {

@@ -1,3 +1,4 @@
+import { endsIn } from "./pyramid";
 import { type Mapping, placeOf } from "./scale";
 import { niceStep } from "./ticks";
 
@@ -7,20 +8,32 @@ export interface Range {
   readonly to: number;
 }
 
-/** Lowest and highest place of the numbers among `columns`; null when there is none that the axis can hold. */
-export function extent(columns: Iterable<readonly (number | null)[]>, mapping: Mapping): Range | null {
-  let from = Number.POSITIVE_INFINITY;
-  let to = Number.NEGATIVE_INFINITY;
+/** Lowest and highest value among the points [from, to) of columns; null when there is none. */
+export function valuesBetween(
+  columns: Iterable<Float64Array>,
+  from = 0,
+  to = Number.POSITIVE_INFINITY,
+): { readonly low: number; readonly high: number } | null {
+  let low = Number.POSITIVE_INFINITY;
+  let high = Number.NEGATIVE_INFINITY;
   for (const column of columns) {
-    for (const value of column) {
-      if (value === null) continue;
-      const place = placeOf(mapping, value);
-      if (place === null) continue;
-      if (place < from) from = place;
-      if (place > to) to = place;
-    }
+    const ends = endsIn(column, from, Math.min(to, column.length));
+    if (ends === null) continue;
+    low = Math.min(low, column[ends.low]!);
+    high = Math.max(high, column[ends.high]!);
   }
-  return from <= to ? { from, to } : null;
+  return low <= high ? { low, high } : null;
+}
+
+/** The places of a span of values; null where the axis cannot hold it. */
+export function placesOfValues(
+  found: { readonly low: number; readonly high: number } | null,
+  mapping: Mapping,
+): Range | null {
+  if (found === null) return null;
+  const from = placeOf(mapping, found.low);
+  const to = placeOf(mapping, found.high);
+  return from === null || to === null ? null : { from, to };
 }
 
 /**

@@ -38,6 +38,11 @@ export function logarithmicFit(values: Iterable<number | null | undefined>): Log
     if (value < low) low = value;
     if (value > high) high = value;
   }
+  return fitOf(low, high);
+}
+
+/** What values from `low` to `high` allow; there are none where `low` is above `high`. */
+export function fitOf(low: number, high: number): LogarithmicFit {
   if (low > high) return { fits: false, reason: "no values" };
   if (low < 0 && high > 0) return { fits: false, reason: "both signs" };
   if (low === 0 || high === 0) return { fits: false, reason: "zero" };

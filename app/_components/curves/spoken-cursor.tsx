@@ -1,11 +1,12 @@
 "use client";
 
 import { useEffect, useState } from "react";
+import { valueIn } from "./columns";
 import type { Cursor } from "./cursor-layer";
 import { missing } from "./cursor-marks";
 import { type CurveSet, pointAt } from "./curve-set";
-import type { StoreyView } from "./curve-view";
 import { formatKnob, formatValue } from "./figures-in-words";
+import type { StoreyView } from "./storey-views";
 
 /** Ms of rest before the values are read out, so that a held arrow key does not queue up sentences. */
 const REST = 300;
@@ -38,7 +39,7 @@ function spoken(set: CurveSet, storeys: readonly StoreyView[], { family, place }
     lines
       .filter((line) => line.family === family)
       .map((line) => {
-        const value = line.values[place] ?? null;
+        const value = valueIn(line.values, place);
         return `${line.trace} ${value === null ? missing(set, { family, place }) : formatValue(value, unit)}`;
       }),
   );

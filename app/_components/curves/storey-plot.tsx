@@ -1,63 +1,60 @@
 "use client";
 
-import { memo, useLayoutEffect, useRef } from "react";
-import type { Axis, StoreyView } from "./curve-view";
+import { memo, useEffect, useLayoutEffect, useRef } from "react";
+import type { Axis } from "./axes";
 import { DirectLabels } from "./direct-labels";
-import { placeOf } from "./scale";
-import { drawStorey } from "./storey-canvas";
-import { useColours } from "./theme-colours";
+import { StoreyCanvas, type StoreyDrawing } from "./storey-canvas";
+import { StoreyNames } from "./storey-names";
+import type { StoreyView } from "./storey-views";
+import { type Colours, useColours } from "./theme-colours";
 import { VerticalAxis } from "./vertical-axis";
 
 interface Props {
   readonly storey: StoreyView;
   readonly horizontal: Axis;
   /** Places of the swept values. */
-  readonly x: readonly number[];
+  readonly x: Float64Array;
   /** Width of the plotting area, px. */
   readonly width: number;
   readonly labelled: boolean;
+  /** The setting that the reader follows; the lines of others step back. Null for none. */
+  readonly followed: number | null;
   /** What stands there while no value does. */
   readonly empty: string;
 }
 
+/** How much is left of a line while another is followed. */
+const FAINT = 0.25;
+/** Px. */
+const STROKE = { nominal: 1.75, worst: 1.25 };
+const WORST_DASH = [1.5, 2.5] as const;
+
 /** One storey: its lines on a canvas, every word over it as text. The table beside the plot says the same in numbers. */
-export const StoreyPlot = memo(function StoreyPlot({ storey, horizontal, x, width, labelled, empty }: Props) {
+export const StoreyPlot = memo(function StoreyPlot(props: Props) {
+  const { storey, horizontal, x, width, labelled, followed, empty } = props;
   const host = useRef<HTMLDivElement>(null);
+  const canvas = useRef<StoreyCanvas | null>(null);
   const colours = useColours();
-  const { axis, height, lines } = storey;
+  const { axis, height } = storey;
 
   useLayoutEffect(() => {
     if (host.current === null || colours === null || width <= 0) return;
-    return drawStorey(host.current, {
-      x,
-      lines: lines.map(({ values, style }) => ({
-        style,
-        ys: values.map((value) => (value === null ? null : placeOf(axis.mapping, value))),
-      })),
-      horizontal: horizontal.range,
-      vertical: axis.range,
-      horizontalTicks: horizontal.ticks,
-      verticalTicks: axis.ticks,
-      width,
-      height,
-      colours,
-    });
-  }, [x, lines, axis, horizontal, width, height, colours]);
+    canvas.current ??= new StoreyCanvas(host.current);
+    canvas.current.show(drawingOf(storey, { horizontal, x, width, colours, followed }));
+  }, [x, storey, horizontal, width, colours, followed]);
+  useEffect(
+    () => () => {
+      canvas.current?.destroy();
+      canvas.current = null;
+    },
+    [],
+  );
 
-  const only = storey.traces.length === 1 ? storey.traces[0] : null;
   return (
     <div className="relative" style={{ height, width }}>
       <div ref={host} aria-hidden="true" className="absolute inset-0" data-storey={storey.key} />
       <VerticalAxis axis={axis} height={height} />
-      <p
-        className="absolute top-1 left-2 z-10 max-w-full truncate bg-paper/80 pr-1 text-xs"
-        aria-hidden="true"
-      >
-        {only ?? storey.traces.join(", ")}
-        <span className="figures ml-2 text-quiet text-xs">
-          {axis.labels.unit === "1" ? "" : axis.labels.unit}
-        </span>
-      </p>
+      <StoreyNames storey={storey} horizontal={horizontal} width={width} />
       {axis.ticks.length === 0 && (
         <p
           className="absolute inset-0 flex items-center justify-center text-quiet text-sm"
@@ -66,7 +63,45 @@ export const StoreyPlot = memo(function StoreyPlot({ storey, horizontal, x, widt
           {empty}
         </p>
       )}
-      {labelled && <DirectLabels storey={storey} horizontal={horizontal} x={x} />}
+      {labelled && <DirectLabels storey={storey} horizontal={horizontal} x={x} followed={followed} />}
     </div>
   );
 });
+
+interface Frame {
+  readonly horizontal: Axis;
+  readonly x: Float64Array;
+  readonly width: number;
+  readonly colours: Colours;
+  readonly followed: number | null;
+}
+
+function drawingOf(storey: StoreyView, { horizontal, x, width, colours, followed }: Frame): StoreyDrawing {
+  const { axis, height, lines, worst, bands, allowed } = storey;
+  const { mapping } = axis;
+  const alpha = (family: number) => (followed === null || followed === family ? 1 : FAINT);
+  return {
+    lines: [
+      ...worst.map(({ values, absent, style, family }) => ({
+        ...{ x, values, mapping, absent, alpha: alpha(family), marked: false, stroke: STROKE.worst },
+        style: { ...style, dash: WORST_DASH },
+      })),
+      ...lines.map(({ values, absent, style, family }) => ({
+        ...{ x, values, mapping, absent, style, alpha: alpha(family), marked: true, stroke: STROKE.nominal },
+      })),
+    ],
+    bands: bands.map(({ low, high, style }) => ({
+      style,
+      low: { x, values: low, mapping, absent: null },
+      high: { x, values: high, mapping, absent: null },
+    })),
+    allowed,
+    horizontal: horizontal.range,
+    vertical: axis.range,
+    horizontalTicks: horizontal.ticks,
+    verticalTicks: axis.ticks,
+    width,
+    height,
+    colours,
+  };
+}

@@ -1,6 +1,7 @@
-import { type CurveSet, columnOf, type Family } from "./curve-set";
-import { type LineStyle, styleInTurn, styleOf } from "./line-style";
-import { type LogarithmicFit, logarithmicFit, type Scale } from "./scale";
+import { type CurveColumn, type CurveSet, columnOf, type Family } from "./curve-set";
+import { FEW_STYLES, type LineStyle, styleInOrder, styleInTurn, styleOf } from "./line-style";
+import { valuesBetween } from "./range";
+import { fitOf, type LogarithmicFit, type Scale } from "./scale";
 
 /** One curve: a trace at one setting of the outer sweeps. */
 export interface Line {
@@ -11,17 +12,21 @@ export interface Line {
   /** What stands beside its end; empty where the storey's name says it already. */
   readonly label: string;
   readonly style: LineStyle;
-  /** In the order of the curve set's `x`; null where unsolved. */
-  readonly values: readonly (number | null)[];
+  /** In the order of the curve set's `x`; NaN where unsolved. */
+  readonly values: Float64Array;
+  /** Places of `x` that this line has no point at, by 1; null where it has one at each. */
+  readonly absent: Uint8Array | null;
 }
 
 /** Traces of one unit, and of a size that can be seen together, on one vertical axis. */
 export interface Storey {
-  /** Tells storeys apart, also in addresses: the unit, or "V small" for what would lie flat on the axis of "V". */
+  /** Tells storeys apart, also in addresses: the unit, "V small" for what would lie flat on the axis of "V", "V read" for readings. */
   readonly key: string;
   readonly unit: string;
   readonly traces: readonly string[];
   readonly lines: readonly Line[];
+  /** Of readings, which are derived from the traces above. */
+  readonly isReading: boolean;
 }
 
 /** Which traces and settings are drawn. */
@@ -55,73 +60,89 @@ export function usualChoice(set: CurveSet): Choice {
   const families = Array.from({ length: shown }, (_, i) =>
     shown < 2 ? 0 : Math.round((i * (count - 1)) / (shown - 1)),
   );
-  return { traces: set.source.traces.map(({ name }) => name), families };
+  return { traces: set.traces.map(({ name }) => name), families };
 }
 
-/** The storeys of a choice, in the order in which the netlist shows the traces. */
+/** The storeys of a choice: traces in the order in which the netlist shows them, below them what it reads at each point. */
 export function storeysOf(set: CurveSet, choice: Choice): Storey[] {
-  const chosen = set.source.traces.filter(({ name }) => choice.traces.includes(name));
-  const families = set.families.filter(({ index }) => choice.families.includes(index));
-  const units = [...new Set(chosen.map(({ unit }) => unit))];
-  const crowded = units.some((unit) => chosen.filter((trace) => trace.unit === unit).length > 1);
-  const groups = units.flatMap((unit) =>
-    bySize(
-      set,
-      unit,
-      chosen.filter((trace) => trace.unit === unit),
-    ),
-  );
+  const wanted = new Set(choice.traces);
+  const drawn = new Set(choice.families);
+  const chosen = set.traces.filter(({ name }) => wanted.has(name));
+  const families = set.families.filter(({ index }) => drawn.has(index));
+  const above = chosen.filter(({ isReading }) => !isReading);
+  const below = chosen.filter(({ isReading }) => isReading);
+  const groups = [
+    ...unitsOf(above).flatMap((traces) => bySize(set, traces)),
+    ...unitsOf(below).map((traces) => ({ ...whole(traces), key: `${traces[0]!.unit} read` })),
+  ];
+  const crowded = groups.some(({ traces }) => traces.length > 1);
   return groups.map(({ key, unit, traces }) => {
-    const lines = traces.flatMap((trace) =>
-      families.map((family) => {
-        const turn = set.source.traces.findIndex(({ name }) => name === trace.name);
-        return {
-          key: `${trace.name} ${family.index}`,
-          trace: trace.name,
-          unit,
-          family: family.index,
-          label: labelOf(trace.name, family, traces.length),
-          style: lineStyle(set.families.length, crowded, turn, family.index),
-          values: columnOf(set, trace, family.index),
-        };
-      }),
-    );
-    return { key, unit, traces: traces.map(({ name }) => name), lines };
+    const lines = traces.flatMap((trace) => {
+      const turn = set.traces.findIndex(({ name }) => name === trace.name);
+      return families.map((family) => ({
+        key: `${trace.name} ${family.index}`,
+        trace: trace.name,
+        unit,
+        family: family.index,
+        label: labelOf(trace.name, family, traces.length),
+        style: lineStyle(set, crowded, turn, family.index),
+        values: columnOf(set, trace, family.index),
+        absent: set.source.absent?.[family.index] ?? null,
+      }));
+    });
+    return { key, unit, traces: traces.map(({ name }) => name), lines, isReading: traces[0]!.isReading };
   });
 }
 
 interface Group {
   readonly key: string;
   readonly unit: string;
-  readonly traces: CurveSet["source"]["traces"];
+  readonly traces: readonly CurveColumn[];
+}
+
+function unitsOf(traces: readonly CurveColumn[]): (readonly CurveColumn[])[] {
+  return [...new Set(traces.map(({ unit }) => unit))].map((unit) =>
+    traces.filter((trace) => trace.unit === unit),
+  );
+}
+
+function whole(traces: readonly CurveColumn[]): Group {
+  const { unit } = traces[0]!;
+  return { key: unit, unit, traces };
 }
 
 /** The traces of one unit in one group, or in two where a linear axis of them all would show the small ones as flat lines. */
-function bySize(set: CurveSet, unit: string, traces: Group["traces"]): Group[] {
-  const whole = { key: unit, unit, traces };
-  if (traces.length < 2 || usualScale(set, logarithmicFit(valuesOf(traces))) === "logarithmic")
-    return [whole];
-  const sizes = traces.map((trace) => sizeOf(trace.values));
-  const most = Math.max(...sizes);
-  const isSmall = (size: number) => size > 0 && size * FLAT < most;
-  if (!sizes.some(isSmall)) return [whole];
+function bySize(set: CurveSet, traces: readonly CurveColumn[]): Group[] {
+  const all = whole(traces);
+  if (traces.length < 2) return [all];
+  const spans = traces.map((trace) =>
+    valuesBetween(set.families.map(({ index }) => columnOf(set, trace, index))),
+  );
+  const low = Math.min(...spans.map((span) => span?.low ?? Number.POSITIVE_INFINITY));
+  const high = Math.max(...spans.map((span) => span?.high ?? Number.NEGATIVE_INFINITY));
+  if (usualScale(set, fitOf(low, high)) === "logarithmic") return [all];
+  const most = Math.max(Math.abs(low), Math.abs(high));
+  const isSmall = spans.map((span) => {
+    const size = span === null ? 0 : Math.max(Math.abs(span.low), Math.abs(span.high));
+    return size > 0 && size * FLAT < most;
+  });
+  if (!isSmall.includes(true)) return [all];
   return [
-    { ...whole, traces: traces.filter((_, i) => !isSmall(sizes[i]!)) },
-    { key: `${unit} small`, unit, traces: traces.filter((_, i) => isSmall(sizes[i]!)) },
+    { ...all, traces: traces.filter((_, i) => !isSmall[i]) },
+    { ...all, key: `${all.unit} small`, traces: traces.filter((_, i) => isSmall[i]) },
   ];
 }
 
-function* valuesOf(traces: Group["traces"]): Generator<number | null> {
-  for (const { values } of traces) yield* values;
-}
-
-function sizeOf(values: readonly (number | null)[]): number {
-  return values.reduce<number>((most, value) => Math.max(most, Math.abs(value ?? 0)), 0);
-}
-
-/** Where traces share a storey, colour tells the trace and dashes the setting; else one number tells both. */
-function lineStyle(families: number, crowded: boolean, trace: number, family: number): LineStyle {
-  if (families === 1) return styleInTurn(trace);
+/**
+ * Where traces share a storey, colour tells the trace and dashes the setting; else one number tells both. More settings than there
+ * are dash patterns stand in an order, and their colours follow it, with dashes for the trace.
+ */
+function lineStyle(set: CurveSet, crowded: boolean, trace: number, family: number): LineStyle {
+  const { length } = set.families;
+  const own = set.source.styles?.[family];
+  if (own !== undefined) return styleOf(crowded ? trace : own.colour, own.dash);
+  if (length === 1) return styleInTurn(trace);
+  if (length > FEW_STYLES) return styleInOrder(family, length, crowded ? trace : 0);
   return crowded ? styleOf(trace, family) : styleInTurn(family);
 }
 

@@ -3,8 +3,7 @@ import { formatQuantity } from "@/lib/units/quantity";
 import type { CurveSet } from "./curve-set";
 import { type Account, spansInWords } from "./failed-spans";
 import { formatKnob } from "./figures-in-words";
-import { extent } from "./range";
-import { LINEAR } from "./scale";
+import { valuesBetween } from "./range";
 import type { Line, Storey } from "./storeys";
 
 /** What a plot shows, in sentences: what is drawn over what, where each trace goes, how many points failed and where. */
@@ -34,10 +33,9 @@ function settingsDrawn(set: CurveSet, storeys: readonly Storey[]): string {
 function course(lines: readonly Line[]): string {
   const [line] = lines;
   if (line === undefined) return "no setting is chosen";
-  const values = lines.flatMap((one) => one.values.filter((value) => value !== null));
-  if (values.length === 0) return `${line.trace} has no value`;
-  const low = values.reduce((a, b) => Math.min(a, b));
-  const high = values.reduce((a, b) => Math.max(a, b));
+  const found = valuesBetween(lines.map(({ values }) => values));
+  if (found === null) return `${line.trace} has no value`;
+  const { low, high } = found;
   // What is smaller than rounding leaves of the largest value is zero to a reader.
   const rest = 1e-15 * Math.max(Math.abs(low), Math.abs(high));
   const show = (value: number) => formatQuantity(Math.abs(value) < rest ? 0 : value, line.unit);
@@ -53,18 +51,19 @@ function course(lines: readonly Line[]): string {
 }
 
 /** Which way a line goes; level where it stays within a millionth of its largest value, less than any figure here shows. */
-function way(column: readonly (number | null)[]): "level" | "rises" | "falls" | "turns" {
-  const found = extent([column], LINEAR);
+function way(column: Float64Array): "level" | "rises" | "falls" | "turns" {
+  const found = valuesBetween([column]);
   if (found === null) return "level";
-  const size = Math.max(Math.abs(found.from), Math.abs(found.to));
-  if (found.to - found.from <= 1e-6 * size) return "level";
+  const size = Math.max(Math.abs(found.low), Math.abs(found.high));
+  if (found.high - found.low <= 1e-6 * size) return "level";
   let rises = true;
   let falls = true;
-  let before: number | null = null;
-  for (const value of column) {
-    if (value === null) continue;
-    if (before !== null && value < before) rises = false;
-    if (before !== null && value > before) falls = false;
+  let before = Number.NaN;
+  for (let i = 0; i < column.length && (rises || falls); i++) {
+    const value = column[i]!;
+    if (Number.isNaN(value)) continue;
+    if (value < before) rises = false;
+    if (value > before) falls = false;
     before = value;
   }
   return rises ? "rises" : falls ? "falls" : "turns";

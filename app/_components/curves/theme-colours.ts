@@ -2,18 +2,21 @@
 
 import { useMemo, useSyncExternalStore } from "react";
 
+const TRACES = ["--trace-1", "--trace-2", "--trace-3", "--trace-4", "--trace-5", "--trace-6"] as const;
 const TOKENS = [
-  "--trace-1",
-  "--trace-2",
-  "--trace-3",
-  "--trace-4",
-  "--trace-5",
-  "--trace-6",
+  ...TRACES,
   "--grid",
   "--rule",
+  "--edge",
   "--paper",
+  "--surface",
+  "--ink",
+  "--quiet",
+  "--holds",
+  "--broken",
 ] as const;
 
+export type TraceToken = (typeof TRACES)[number];
 export type ColourToken = (typeof TOKENS)[number];
 export type Colours = Readonly<Record<ColourToken, string>>;
 

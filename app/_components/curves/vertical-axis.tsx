@@ -1,4 +1,4 @@
-import type { Axis } from "./curve-view";
+import type { Axis } from "./axes";
 
 /** Figures left of a storey; on a logarithmic axis the engraved ticks of a ruler too. */
 export function VerticalAxis({ axis, height }: { readonly axis: Axis; readonly height: number }) {

@@ -7,16 +7,29 @@ import type { CurveSet } from "./curve-set";
 import { formatKnob } from "./figures-in-words";
 import type { Range } from "./range";
 import { readQuantity } from "./read-quantity";
+import type { Zoom } from "./use-zoom";
+import { CLOSER, STEP } from "./zoom-keys";
+
+const MOVES: readonly {
+  readonly name: string;
+  readonly label: string;
+  readonly does: (zoom: Zoom) => void;
+}[] = [
+  { name: "Closer", label: "+", does: ({ stretch }) => stretch(CLOSER) },
+  { name: "Wider", label: "\u2212", does: ({ stretch }) => stretch(1 / CLOSER) },
+  { name: "Move the view left", label: "\u2190", does: ({ pan }) => pan(-STEP) },
+  { name: "Move the view right", label: "\u2192", does: ({ pan }) => pan(STEP) },
+];
 
 /** The part of the sweep in view, as two fields: what dragging over the plot does, for those who do not drag. */
 export function ZoomFields({
   set,
   zoom,
-  onZoom,
+  act,
 }: {
   readonly set: CurveSet;
   readonly zoom: Range | null;
-  readonly onZoom: (zoom: Range | null) => void;
+  readonly act: Zoom;
 }) {
   const id = useId();
   const from = formatKnob(set.axis, zoom?.from ?? set.x[0] ?? 0);
@@ -42,7 +55,7 @@ export function ZoomFields({
       );
     }
     setProblem(null);
-    onZoom({ from: low.value, to: high.value });
+    act.show({ from: low.value, to: high.value });
   };
 
   const field = (end: "from" | "to", label: string) => (
@@ -67,7 +80,25 @@ export function ZoomFields({
       <Button type="submit" size="small">
         Show
       </Button>
-      <Button size="small" tone="quiet" disabled={zoom === null} onClick={() => onZoom(null)}>
+      <span className="inline-flex">
+        {MOVES.map(({ name, label, does }) => (
+          <Button
+            key={name}
+            size="small"
+            tone="quiet"
+            aria-label={name}
+            title={name}
+            className="min-w-7 px-1.5! text-base leading-none"
+            onClick={() => does(act)}
+          >
+            <span aria-hidden="true">{label}</span>
+          </Button>
+        ))}
+      </span>
+      <Button size="small" tone="quiet" disabled={!act.canGoBack} onClick={act.back}>
+        Back
+      </Button>
+      <Button size="small" tone="quiet" disabled={zoom === null} onClick={() => act.show(null)}>
         Whole sweep
       </Button>
       {problem !== null && (
