@@ -40,9 +40,16 @@ function settingsOf({ plan }: Job): { index: number; turned: Map<string, number>
 }
 
 function expectSameBytes(row: Row, solved: ShardResult): void {
-  const columns = ({ outcome, rung, iterations, bound, traces }: Row | ShardResult) =>
-    [outcome, rung, iterations, bound, ...traces].map((column) => Buffer.from(column.buffer).toString("hex"));
-  expect(columns(row)).toEqual(columns(solved));
+  const hex = (columns: readonly Float64Array[]) =>
+    columns.map((one) => Buffer.from(one.buffer).toString("hex"));
+  const account = ({ outcome, rung, iterations, bound }: Row | ShardResult) => [
+    outcome,
+    rung,
+    iterations,
+    bound,
+  ];
+  expect(hex(account(row))).toEqual(hex(account(solved)));
+  expect(hex(row.traces.map(({ values }) => values))).toEqual(hex(solved.traces));
 }
 
 describe("the preview of an example is the row of its run, bit for bit", () => {
@@ -121,13 +128,7 @@ test("an outer sweep can be set to what it does not have", async () => {
   const [row] = (await previewOf(text, new Map([["temperature", 303.15]]))).rows();
   const [listed] = (await previewOf(text.replace("over 10 °C, 25 °C, 40 °C", "over 30 °C"))).rows();
   expect(row!.axes[1]!.values).toEqual([303.15]);
-  expectSameBytes(row!, {
-    ...listed!,
-    from: 0,
-    to: listed!.length,
-    unknowns: [],
-    residual: new Float64Array(),
-  });
+  expect({ ...row, taken: 0 }).toEqual({ ...listed, taken: 0 });
 });
 
 const LONG = `title "Long"
@@ -148,7 +149,7 @@ test("a row that takes long is shown coarsely first, then whole without proofs, 
   expect(coarse.axes[0]!.values.length).toBeLessThan(70);
   expect(coarse.length).toBe(601);
   expect(coarse.readings[0]!.values[0]).toBeCloseTo(whole.readings[0]!.values[0]!, 9);
-  expect([...unproved.traces[0]!]).toEqual([...whole.traces[0]!]);
+  expect(unproved.traces).toEqual(whole.traces);
   expect(unproved.bound.every(Number.isNaN)).toBe(true);
   expectSameBytes(whole, solveRange(jobOf(LONG), 0, 601));
 });

@@ -38,20 +38,33 @@ interface Props {
   readonly waiting: string | null;
   /** What requirements allow, to be shaded. */
   readonly allowed?: readonly AllowedBand[];
+  /** A lower plot with all that belongs to it folded away below, where curves are one thing among several. */
+  readonly brief?: boolean;
 }
 
 const NO_BANDS: readonly AllowedBand[] = [];
 
 /** A plot with all that belongs to it: switches, storeys on their ruler, the view as fields, a summary, the lines. */
 export function CurveFigure(props: Props) {
-  const { set, name, view, onView, point, onPoint, onCursor, waiting, allowed = NO_BANDS } = props;
+  const {
+    set,
+    name,
+    view,
+    onView,
+    point,
+    onPoint,
+    onCursor,
+    waiting,
+    allowed = NO_BANDS,
+    brief = false,
+  } = props;
   const id = useId();
   const frame = useRef<HTMLDivElement>(null);
   const frameWidth = useWidth(frame);
   const [cursor, setCursor] = useState<Cursor | null>(null);
   const [followed, setFollowed] = useState<number | null>(null);
   const spoken = useDeferredValue(cursor);
-  const narrow = frameWidth < NARROW;
+  const narrow = brief || frameWidth < NARROW;
 
   const choice = useMemo(() => choiceOf(set, view), [set, view]);
   const drawn = useMemo(() => drawnChoice(set, view), [set, view]);
@@ -90,9 +103,38 @@ export function CurveFigure(props: Props) {
     },
     [set, onCursor],
   );
+  const controls = <FigureControls set={set} plot={plot} view={view} onView={onView} />;
+  const below = (
+    <>
+      <ZoomFields set={set} zoom={view.zoom} act={act} />
+      <figcaption id={`${id}-summary`} className="max-w-prose text-sm">
+        {waiting ?? summary}
+        {set.source.note !== undefined && ` ${set.source.note}`}
+      </figcaption>
+      <p id={`${id}-keys`} className="max-w-prose text-quiet text-xs" data-print="never">
+        Point at the plot, or focus it and use the arrow keys: left and right along the sweep, up and down
+        between settings, Shift for ten points. A click or Enter chooses a point. Dragging shows a part of the
+        sweep, and so does Z at both its ends; plus and minus, comma and full stop, or the ruler dragged along
+        move the view; 0 shows the whole sweep, Backspace the view before.
+      </p>
+      <LineTable
+        set={set}
+        storeys={lines}
+        choice={choice}
+        only={view.only ?? null}
+        cursor={cursor}
+        onView={onView}
+        onFollow={setFollowed}
+      />
+    </>
+  );
   return (
-    <figure aria-label={name} aria-describedby={`${id}-summary`} className="grid min-w-0 gap-4">
-      <FigureControls set={set} plot={plot} view={view} onView={onView} />
+    <figure
+      aria-label={name}
+      aria-describedby={`${id}-summary`}
+      className={brief ? "grid min-w-0 gap-1" : "grid min-w-0 gap-4"}
+    >
+      {!brief && controls}
       <div
         ref={frame}
         className="min-w-0 overflow-hidden"
@@ -123,27 +165,19 @@ export function CurveFigure(props: Props) {
           </p>
         )}
       </div>
-      <ZoomFields set={set} zoom={view.zoom} act={act} />
-      <figcaption id={`${id}-summary`} className="max-w-prose text-sm">
-        {waiting ?? summary}
-        {set.source.note !== undefined && ` ${set.source.note}`}
-      </figcaption>
-      <p id={`${id}-keys`} className="max-w-prose text-quiet text-xs" data-print="never">
-        Point at the plot, or focus it and use the arrow keys: left and right along the sweep, up and down
-        between settings, Shift for ten points. A click or Enter chooses a point. Dragging shows a part of the
-        sweep, and so does Z at both its ends; plus and minus, comma and full stop, or the ruler dragged along
-        move the view; 0 shows the whole sweep, Backspace the view before.
-      </p>
       <SpokenCursor set={set} storeys={plot.storeys} cursor={spoken} />
-      <LineTable
-        set={set}
-        storeys={lines}
-        choice={choice}
-        only={view.only ?? null}
-        cursor={cursor}
-        onView={onView}
-        onFollow={setFollowed}
-      />
+      {!brief && below}
+      {brief && (
+        <details data-print="never">
+          <summary className="inline-flex min-h-6 items-center text-quiet text-xs">
+            Axes, zoom, lines and numbers of these curves
+          </summary>
+          <div className="mt-2 grid gap-4">
+            {controls}
+            {below}
+          </div>
+        </details>
+      )}
     </figure>
   );
 }

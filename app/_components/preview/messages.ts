@@ -57,7 +57,11 @@ export interface Row {
   readonly axes: readonly AxisDocument[];
   /** Places that the whole row has. */
   readonly length: number;
-  readonly traces: readonly Float64Array[];
+  readonly traces: readonly {
+    readonly name: string;
+    readonly unit: string;
+    readonly values: Float64Array;
+  }[];
   /** Index into OUTCOMES and RUNGS. */
   readonly outcome: Float64Array;
   readonly rung: Float64Array;

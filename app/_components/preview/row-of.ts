@@ -25,8 +25,8 @@ export function rowOf({ excerpt, result, stage, length, taken }: Solved): Row {
     stage,
     axes: plan.axes,
     length,
-    // Unknowns stay behind for the figures; these are done with.
-    ...{ traces, outcome, rung, iterations, bound },
+    traces: plan.traces.map((trace, k) => ({ ...trace, values: traces[k]! })),
+    ...{ outcome, rung, iterations, bound },
     failures: result.failures.map((one) => ({ ...one, point: one.point - from })),
     readings: readings.filter(({ name }) => !elsewhere.readings.has(name)),
     requirements: requirements.filter((_, index) => !elsewhere.requirements.has(index)),
@@ -39,7 +39,9 @@ export function rowOf({ excerpt, result, stage, length, taken }: Solved): Row {
   };
 }
 
-/** The arrays of a row, which change hands when it is sent. */
+/** The arrays of a row, which change hands when it is sent; its unknowns stay behind for the figures. */
 export function arraysOf({ traces, outcome, rung, iterations, bound }: Row): ArrayBuffer[] {
-  return [...traces, outcome, rung, iterations, bound].map(({ buffer }) => buffer as ArrayBuffer);
+  return [...traces.map(({ values }) => values), outcome, rung, iterations, bound].map(
+    ({ buffer }) => buffer as ArrayBuffer,
+  );
 }

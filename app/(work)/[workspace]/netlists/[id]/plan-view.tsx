@@ -1,9 +1,8 @@
 import type { Examined } from "@/app/_components/editor/use-examination";
-import { counted, formatCount } from "@/app/_components/ui/count";
-import { formatQuantity } from "@/lib/units/quantity";
+import { counted } from "@/app/_components/ui/count";
 import { SweepRuler } from "./sweep-ruler";
 
-/** What a run of the text would compute: sweeps on their rulers, traces, knobs. While the text has errors, the plan before them stays. */
+/** What a run of the text would compute: sweeps on their rulers, and traces. While the text has errors, the plan before them stays. */
 export function PlanView({ examined }: { readonly examined: Examined | null }) {
   const plan = examined?.latestPlan ?? null;
   const past = plan !== null && examined?.plan === null;
@@ -48,24 +47,10 @@ export function PlanView({ examined }: { readonly examined: Examined | null }) {
             ])}
             empty="Nothing is shown, so a run would keep no trace."
           />
-          <h3 className="caption mt-6">Knobs</h3>
-          <Pairs
-            label="Knobs"
-            rows={plan.knobs.map(({ name, unit, value }) => [name, name, knobText(value, unit, name)])}
-            empty="None."
-          />
-          <p className="mt-3 text-quiet text-sm">
-            {counted(plan.elements, "element")}, {formatCount(plan.unknowns)} unknowns a point
-          </p>
         </div>
       )}
     </section>
   );
-}
-
-/** Temperatures are held in K and read in °C. */
-function knobText(value: number, unit: string, name: string): string {
-  return name === "temperature" ? formatQuantity(value - 273.15, "°C") : formatQuantity(value, unit);
 }
 
 function Pairs({

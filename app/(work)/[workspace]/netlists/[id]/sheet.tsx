@@ -4,6 +4,9 @@ import { useEffect, useState } from "react";
 import type { TabDoes } from "@/app/_components/editor/editor-handle";
 import { NetlistEditor } from "@/app/_components/editor/netlist-editor";
 import { ProblemList } from "@/app/_components/editor/problem-list";
+import { PreviewPane } from "@/app/_components/preview/preview-pane";
+import { usePreviewing } from "@/app/_components/preview/use-preview";
+import { type WrittenKnob, writeKnobs } from "@/app/_components/preview/write-knobs";
 import type { Role } from "@/lib/permissions/actor";
 import { ConflictDialog } from "./conflict-dialog";
 import { LastRuns } from "./last-runs";
@@ -24,10 +27,11 @@ interface Props {
   readonly mayQueue: boolean;
 }
 
-/** The sheet of a netlist: its text to write in, what is wrong with it, what a run would compute, and the runs so far. */
+/** The sheet of a netlist: its text to write in, what is wrong with it, a preview of its curves, what a run would compute, and the runs so far. */
 export function Sheet({ workspace, netlist, latest, runs, role, mayQueue }: Props) {
   const sheet = useSheet({ workspace, netlistId: netlist.id, latest, mayQueue });
   const { editor, examined, text, saved } = sheet;
+  const previewing = usePreviewing(latest.text);
   const [tab, setTab] = useState<TabDoes>("indents");
   const problems = examined?.diagnostics ?? [];
 
@@ -45,11 +49,21 @@ export function Sheet({ workspace, netlist, latest, runs, role, mayQueue }: Prop
     return () => window.removeEventListener("keydown", press);
   });
 
+  const edited = () => {
+    sheet.edited();
+    if (editor.current !== null) previewing.setText(editor.current.text());
+  };
+  const write = (knobs: readonly WrittenKnob[]) => {
+    const now = editor.current?.text() ?? text;
+    const change = writeKnobs(now, knobs);
+    if (change !== null) editor.current?.mend({ title: "Write the knobs", ...change }, now);
+  };
+
   return (
     <div className="flex grow flex-col">
       <SheetHeader sheet={sheet} title={latest.title} netlist={netlist} role={role} mayQueue={mayQueue} />
       <SheetRemarks sheet={sheet} workspace={workspace} netlistId={netlist.id} />
-      <div className="grid grow lg:grid-cols-[minmax(0,1fr)_minmax(320px,25%)] lg:grid-rows-[minmax(480px,1fr)]">
+      <div className="grid grow lg:grid-cols-2 lg:grid-rows-[minmax(480px,1fr)]">
         <div className="flex h-[min(75dvh,720px)] min-w-0 flex-col border-b lg:h-0 lg:min-h-full lg:border-r lg:border-b-0">
           <div className="min-h-0 grow">
             <NetlistEditor
@@ -57,7 +71,7 @@ export function Sheet({ workspace, netlist, latest, runs, role, mayQueue }: Prop
               initial={latest.text}
               readOnly={!mayQueue}
               problems={examined}
-              onEdit={sheet.edited}
+              onEdit={edited}
               onQueue={() => void sheet.queue()}
               onSave={() => mayQueue && sheet.openSave(true)}
               onTab={setTab}
@@ -72,13 +86,20 @@ export function Sheet({ workspace, netlist, latest, runs, role, mayQueue }: Prop
               onMend={(one) => one.fix !== undefined && editor.current?.mend(one.fix, examined.text)}
             />
           )}
-          <StatusLine examined={examined} stale={examined?.text !== text} tab={tab} readOnly={!mayQueue} />
         </div>
         <div className="grid min-w-0 content-start gap-8 px-4 py-4 md:px-6 lg:h-0 lg:min-h-full lg:overflow-y-auto">
+          <PreviewPane previewing={previewing} onWrite={mayQueue ? write : undefined} />
           <PlanView examined={examined} />
           <LastRuns workspace={workspace} netlistId={netlist.id} title={latest.title} first={runs} />
         </div>
       </div>
+      <StatusLine
+        examined={examined}
+        stale={examined?.text !== text}
+        previewing={previewing}
+        tab={tab}
+        readOnly={!mayQueue}
+      />
       <ConflictDialog sheet={sheet} base={saved.revision} />
     </div>
   );

@@ -2,6 +2,9 @@
 
 import type { TabDoes } from "@/app/_components/editor/editor-handle";
 import type { Examined } from "@/app/_components/editor/use-examination";
+import type { Previewing } from "@/app/_components/preview/previewing";
+import { proofInWords } from "@/app/_components/preview/row-words";
+import { usePreview } from "@/app/_components/preview/use-preview";
 import { counted } from "@/app/_components/ui/count";
 import { useKeyNames } from "./use-key-names";
 
@@ -9,23 +12,19 @@ interface Props {
   readonly examined: Examined | null;
   /** The text has changed since it was examined. */
   readonly stale: boolean;
+  readonly previewing: Previewing;
   readonly tab: TabDoes;
   readonly readOnly: boolean;
 }
 
-/** Under the text: how many problems it has, the size of what it would compute, and how the Tab key gets out of the editor. */
-export function StatusLine({ examined, stale, tab, readOnly }: Props) {
+/** Under the sheet: how many problems the text has, how large its circuit is, what is proved of the preview, and how the Tab key gets out of the editor. */
+export function StatusLine({ examined, stale, previewing, tab, readOnly }: Props) {
   const keys = useKeyNames();
   return (
     <div className="figures flex shrink-0 flex-wrap items-center justify-between gap-x-6 gap-y-1 border-t bg-paper px-4 py-2 text-quiet text-xs md:px-6">
       <p className="flex flex-wrap gap-x-4" aria-busy={stale}>
         <span role="status">{examined === null ? "checking…" : problemText(examined)}</span>
-        {examined !== null && examined.plan !== null && (
-          <>
-            <span>{counted(examined.plan.points, "point")}</span>
-            <span>{counted(examined.plan.unknowns, "unknown")}</span>
-          </>
-        )}
+        <CircuitSize previewing={previewing} />
       </p>
       {!readOnly && (
         <p aria-live="polite">
@@ -34,6 +33,21 @@ export function StatusLine({ examined, stale, tab, readOnly }: Props) {
         </p>
       )}
     </div>
+  );
+}
+
+function CircuitSize({ previewing }: Pick<Props, "previewing">) {
+  const outline = usePreview(previewing, (preview) => preview.outline);
+  const row = usePreview(previewing, (preview) => preview.row);
+  const isOld = usePreview(previewing, (preview) => preview.isStale && preview.state !== "solving");
+  if (outline === null) return null;
+  return (
+    <>
+      <span>
+        {counted(outline.unknowns, "unknown")}, {counted(outline.junctions, "junction")}
+      </span>
+      {row !== null && <span>{isOld ? "preview of an earlier text" : proofInWords(row)}</span>}
+    </>
   );
 }
 

@@ -1,0 +1,108 @@
+"use client";
+
+import { useCallback } from "react";
+import { classNames } from "@/app/_components/ui/class-names";
+import { KnobList } from "./knob-list";
+import type { Outline, Row } from "./messages";
+import { PreviewCurves } from "./preview-curves";
+import { PreviewRemark } from "./preview-remark";
+import type { Previewing } from "./previewing";
+import { ReadingRows } from "./reading-rows";
+import { RequirementBars } from "./requirement-bars";
+import { rowInWords } from "./row-words";
+import { SettingChoice } from "./setting-choice";
+import { SpokenPreview } from "./spoken-preview";
+import { usePreview } from "./use-preview";
+import type { WrittenKnob } from "./write-knobs";
+
+interface Props {
+  readonly previewing: Previewing;
+  /** Puts values of knobs into the text; absent where it may not be changed. */
+  readonly onWrite?: ((knobs: readonly WrittenKnob[]) => void) | undefined;
+}
+
+/** What a run of the text would show, solved in the browser as one types: one sweep, nominal, kept nowhere. */
+export function PreviewPane({ previewing, onWrite }: Props) {
+  const preview = usePreview(previewing, (all) => all);
+  const { outline, row, isStale, state, turned, place } = preview;
+  const turn = useCallback(
+    (knob: string, value: number | null) => previewing.turn(knob, value),
+    [previewing],
+  );
+  const reset = useCallback(() => previewing.reset(), [previewing]);
+  const first = outline?.axes[0];
+  const stand = useCallback(
+    (next: number) => {
+      if (first !== undefined) previewing.turn(first.knob, first.values[next]!);
+    },
+    [previewing, first],
+  );
+  const isOld = isStale && state !== "solving";
+  return (
+    <section aria-labelledby="preview" className="grid min-w-0 gap-6">
+      <div className="grid min-w-0 gap-2">
+        <div className="flex min-h-7 flex-wrap items-center justify-between gap-x-6 gap-y-1">
+          <h2 id="preview" className="caption">
+            Preview{" "}
+            <span className={classNames("ml-2 font-normal", isOld && "line-through")}>
+              {row === null ? "" : rowInWords(row)}
+            </span>
+          </h2>
+          {outline !== null && row !== null && outline.axes.length > 1 && (
+            <div className="flex flex-wrap gap-x-4 gap-y-1">
+              {outline.axes.slice(1).map((axis) => (
+                <SettingChoice
+                  key={axis.knob}
+                  axis={axis}
+                  value={settingOf(axis.knob, turned, row, outline)}
+                  onTurn={turn}
+                />
+              ))}
+            </div>
+          )}
+        </div>
+        <PreviewRemark preview={preview} />
+        {row !== null && outline !== null && (
+          <div
+            data-preview={isStale ? "stale" : row.stage}
+            aria-busy={state === "solving"}
+            className={classNames("min-w-0", isOld && "opacity-60")}
+          >
+            <PreviewCurves outline={outline} row={row} place={place} onPlace={stand} />
+          </div>
+        )}
+      </div>
+      {row !== null && (row.requirements.length > 0 || row.elsewhere.length > 0) && (
+        <div className={classNames(isOld && "opacity-60")}>
+          <RequirementBars requirements={row.requirements} elsewhere={row.elsewhere} />
+        </div>
+      )}
+      {row !== null && (
+        <div className={classNames("empty:hidden", isOld && "opacity-60")}>
+          <ReadingRows readings={row.readings} />
+        </div>
+      )}
+      {outline !== null && (
+        <KnobList
+          outline={outline}
+          turned={turned}
+          place={place}
+          onTurn={turn}
+          onReset={reset}
+          onWrite={state === "wrong" ? undefined : onWrite}
+        />
+      )}
+      <SpokenPreview preview={preview} />
+    </section>
+  );
+}
+
+/** What an outer sweep is set to: what was asked for, else what the row stands at. */
+function settingOf(knob: string, turned: ReadonlyMap<string, number>, row: Row, { axes }: Outline): number {
+  const asked = turned.get(knob);
+  if (asked !== undefined) return asked;
+  return (
+    row.axes.find((axis) => axis.knob === knob)?.values[0] ??
+    axes.find((axis) => axis.knob === knob)!.values[0]!
+  );
+}
