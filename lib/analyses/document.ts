@@ -27,11 +27,34 @@ export interface RunMatter {
   readonly diagnostics: readonly Diagnostic[];
 }
 
+/** What a run document says beside its columns. */
+export type DocumentFrame = Omit<RunDocument, "traces" | "points">;
+
 /**
  * The run document of what is known: JSON without NaN, null where a point is not solved. A netlist without requirements breaks
  * none, so its verdict is "holds" as soon as one point is solved and "no data" before, as it is of one that can no longer be read.
  */
 export function toDocument(matter: RunMatter): RunDocument {
+  const { format, title, verdict, axes, draws, ...rest } = frameOf(matter);
+  return {
+    ...{ format, title, verdict, axes, draws },
+    traces: matter.plan.traces.map(({ name, unit }, k) => ({
+      name,
+      unit,
+      values: listOf(matter.traces[k]!, (value) => (Number.isFinite(value) ? value : null)),
+    })),
+    points: {
+      outcome: listOf(matter.outcome, (index) => OUTCOMES[index] ?? null),
+      bound: listOf(matter.bound, (bound) => (Number.isFinite(bound) ? bound : null)),
+      iterations: listOf(matter.iterations, (count) => (Number.isNaN(count) ? 0 : count)),
+      rung: listOf(matter.rung, (index) => RUNGS[index] ?? null),
+    },
+    ...rest,
+  };
+}
+
+/** Judges what is known and says all but the columns themselves. */
+export function frameOf(matter: RunMatter): DocumentFrame {
   const { plan, text, outcome } = matter;
   const solved = OUTCOMES.indexOf("converged");
   const solvedOrNot = outcome.includes(solved) ? "holds" : "no data";
@@ -43,17 +66,6 @@ export function toDocument(matter: RunMatter): RunDocument {
     verdict: judgement === null ? "no data" : (judgement.verdict ?? solvedOrNot),
     axes: plan.axes,
     draws: plan.draws,
-    traces: plan.traces.map(({ name, unit }, k) => ({
-      name,
-      unit,
-      values: listOf(matter.traces[k]!, (value) => (Number.isFinite(value) ? value : null)),
-    })),
-    points: {
-      outcome: listOf(outcome, (index) => OUTCOMES[index] ?? null),
-      bound: listOf(matter.bound, (bound) => (Number.isFinite(bound) ? bound : null)),
-      iterations: listOf(matter.iterations, (count) => (Number.isNaN(count) ? 0 : count)),
-      rung: listOf(matter.rung, (index) => RUNGS[index] ?? null),
-    },
     readings: judgement?.readings ?? [],
     requirements: judgement?.requirements ?? [],
     diagnostics: matter.diagnostics.map((one) => ({ ...one, ...placeOf(starts, one.from) })),

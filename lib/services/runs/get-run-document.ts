@@ -3,8 +3,9 @@ import { database } from "@/db/client";
 import { revision } from "@/db/schema/revision";
 import { run } from "@/db/schema/run";
 import { shard } from "@/db/schema/shard";
+import { encodeColumns } from "@/lib/analyses/columns-document";
 import { compile } from "@/lib/analyses/compile";
-import { toDocument } from "@/lib/analyses/document";
+import { type RunMatter, toDocument } from "@/lib/analyses/document";
 import type { Plan } from "@/lib/analyses/plan";
 import type { RunDocument } from "@/lib/analyses/result";
 import type { Actor } from "@/lib/permissions/actor";
@@ -24,13 +25,16 @@ export async function getRunVersion(actor: Actor, id: string): Promise<string> {
   return versionOf(asked);
 }
 
-export interface FoundDocument {
-  readonly document: RunDocument;
+export interface Found {
   readonly etag: string;
   /** The document is large: to be sent in pieces. */
   readonly large: boolean;
   /** Says that a large document is no longer needed, so that the next one may be read. */
   readonly release: () => void;
+}
+
+export interface FoundDocument extends Found {
+  readonly document: RunDocument;
 }
 
 /**
@@ -39,27 +43,39 @@ export interface FoundDocument {
  * "too many" while other large ones are being read.
  */
 export async function getRunDocument(actor: Actor, id: string): Promise<FoundDocument> {
+  return found(actor, id, (matter) => ({ document: toDocument(matter) }));
+}
+
+/** The same in its binary form, of the same version and limits: pieces of bytes, to be sent one after another. */
+export async function getRunColumns(
+  actor: Actor,
+  id: string,
+): Promise<Found & { readonly pieces: readonly Uint8Array[] }> {
+  return found(actor, id, (matter) => ({ pieces: encodeColumns(matter) }));
+}
+
+async function found<T>(actor: Actor, id: string, of: (matter: RunMatter) => T): Promise<Found & T> {
   const db = database();
   const asked = await findRun(db, actor, id);
   authorize(actor, "run.read", asked);
-  const [of] = await db
+  const [record] = await db
     .select({ plan: run.plan, text: revision.text })
     .from(run)
     .innerJoin(revision, and(eq(revision.netlistId, run.netlistId), eq(revision.number, run.revisionNumber)))
     .where(eq(run.id, asked.id));
-  const { plan, text } = of!;
+  const { plan, text } = record!;
   const numbers = asked.points * (plan.traces.length + 4);
   const release = roomFor(actor.userId, numbers);
   try {
-    const document = await documentOf(asked, plan, text);
-    return { document, etag: versionOf(asked), large: numbers >= LARGE, release };
+    const matter = await matterOf(asked, plan, text);
+    return { ...of(matter), etag: versionOf(asked), large: numbers >= LARGE, release };
   } catch (error) {
     release();
     throw error;
   }
 }
 
-async function documentOf(asked: RunRecord, plan: Plan, text: string): Promise<RunDocument> {
+async function matterOf(asked: RunRecord, plan: Plan, text: string): Promise<RunMatter> {
   const traces = plan.traces.map((_, i) => traceColumn(i));
   const [columns, shards] = await Promise.all([
     readColumns(asked.id, asked.points, [...traces, "outcome", "iterations", "rung", "bound"]),
@@ -71,7 +87,7 @@ async function documentOf(asked: RunRecord, plan: Plan, text: string): Promise<R
   ]);
   const column = (name: string) => columns.get(name) ?? new Float64Array(asked.points).fill(Number.NaN);
   const { job, diagnostics } = compile(text);
-  return toDocument({
+  return {
     design: job?.design ?? null,
     plan: { ...plan, title: asked.title },
     text,
@@ -82,7 +98,7 @@ async function documentOf(asked: RunRecord, plan: Plan, text: string): Promise<R
     bound: column("bound"),
     failures: shards.flatMap(({ failures }) => failures),
     diagnostics,
-  });
+  };
 }
 
 function versionOf({ id, lastEvent }: RunRecord): string {
