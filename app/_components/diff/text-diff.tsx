@@ -1,6 +1,6 @@
 "use client";
 
-import { useEffect, useId, useMemo, useRef, useState } from "react";
+import { useEffect, useId, useMemo, useRef, useState, useSyncExternalStore } from "react";
 import { linesOf as colouredLines } from "../editor/plain-lines";
 import { Button, Keys } from "../ui/button";
 import { counted } from "../ui/count";
@@ -14,7 +14,8 @@ export type DiffForm = "beside" | "inline";
 interface Props {
   readonly before: { readonly text: string; readonly label: string };
   readonly after: { readonly text: string; readonly label: string };
-  readonly form: DiffForm;
+  /** Null: as the width of the window allows. */
+  readonly form: DiffForm | null;
   readonly onForm: (form: DiffForm) => void;
 }
 
@@ -22,8 +23,10 @@ interface Props {
 const AT_ONCE = 2_000;
 
 /** Two texts line by line with the words that differ marked; what did not change is folded; Alt with the arrows goes from change to change. */
-export function TextDiff({ before, after, form, onForm }: Props) {
+export function TextDiff({ before, after, form: asked, onForm }: Props) {
   const id = useId();
+  const isWide = useSyncExternalStore(watchWidth, widthNow, () => true);
+  const form = asked ?? (isWide ? "beside" : "inline");
   const place = useRef<HTMLDivElement>(null);
   const [unfolded, setUnfolded] = useState<ReadonlySet<number>>(new Set());
   const [most, setMost] = useState(AT_ONCE);
@@ -69,7 +72,7 @@ export function TextDiff({ before, after, form, onForm }: Props) {
   });
 
   return (
-    <div ref={place} className="grid gap-3">
+    <div ref={place} className="grid grid-cols-[minmax(0,1fr)] gap-3">
       <div className="flex flex-wrap items-center gap-x-4 gap-y-2" data-print="never">
         <p role="status" className="text-quiet text-sm">
           {changes.length === 0
@@ -119,4 +122,16 @@ export function TextDiff({ before, after, form, onForm }: Props) {
       )}
     </div>
   );
+}
+
+const WIDE = "(min-width: 768px)";
+
+function watchWidth(change: () => void): () => void {
+  const query = matchMedia(WIDE);
+  query.addEventListener("change", change);
+  return () => query.removeEventListener("change", change);
+}
+
+function widthNow(): boolean {
+  return matchMedia(WIDE).matches;
 }

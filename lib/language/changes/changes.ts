@@ -102,7 +102,7 @@ function nameChanges(sort: "element" | "net", names: ReadonlyMap<string, string>
 function sweepChanges(before: Design, after: Design, writers: Writers): Change[] {
   const changes: Change[] = [];
   const add = (deed: Deed, name: string, says: string, brief: string) =>
-    changes.push({ sort: "sweep", deed, subjects: [`sweep of ${name}`], says, brief });
+    changes.push({ sort: "sweep", deed, subjects: [name], says, brief });
   const old = new Map(before.sweeps.map((one) => [one.knob, one]));
   for (const one of after.sweeps) {
     const was = old.get(one.knob);

@@ -25,7 +25,7 @@ export function traceChanges(before: readonly Show[], after: readonly Show[], wr
   const old = new Map(before.map((one) => [one.name, one]));
   for (const show of after) {
     const was = old.get(show.name);
-    const subject = `trace ${show.name}`;
+    const subject = show.name;
     if (was === undefined) add("added", subject, `added${text(show, writers.after)}`, "added");
     else if (!sameMeaning(was.value, show.value)) {
       const now = writers.after.typed(show.value);
@@ -33,7 +33,7 @@ export function traceChanges(before: readonly Show[], after: readonly Show[], wr
     }
   }
   const left = new Set(after.map(({ name }) => name));
-  for (const { name } of before) if (!left.has(name)) add("removed", `trace ${name}`, "removed", "removed");
+  for (const { name } of before) if (!left.has(name)) add("removed", name, "removed", "removed");
   return changes;
 }
 
@@ -50,7 +50,7 @@ export function readingChanges(
   for (const reading of after) {
     const was = old.get(reading.name);
     const now = text(reading, writers.after);
-    const subject = `reading ${reading.name}`;
+    const subject = reading.name;
     if (was === undefined) add("added", subject, `added, ${now}`, "added");
     else if (!sameMeaning(was.value, reading.value) || !sameMeaning(was.windows, reading.windows)) {
       add("changed", subject, `${text(was, writers.before)} became ${now}`, `is ${now} now`);
@@ -59,7 +59,7 @@ export function readingChanges(
   const left = new Set(after.map(({ name }) => name));
   for (const one of before) {
     if (!left.has(one.name))
-      add("removed", `reading ${one.name}`, `removed, it was ${text(one, writers.before)}`, "removed");
+      add("removed", one.name, `removed, it was ${text(one, writers.before)}`, "removed");
   }
   return changes;
 }
@@ -80,18 +80,17 @@ export function requirementChanges(before: Design, after: Design, writers: Write
     // Its bound may be a let that changed elsewhere in the text.
     if (isSame && deed === "same" && was.label === now.label) continue;
     if (isSame && deed === "same") {
-      add("renamed", `requirement “${was.label}”`, `is called “${now.label}” now`, "has another name");
+      add("renamed", was.label, `is called “${now.label}” now`, "has another name");
       continue;
     }
     const [old, next] = texts(was, now, writers);
     const tail = deed === "same" || deed === "other" ? "" : `, ${deed}`;
     const says = old === next ? `${next}, by values it names${tail}` : `${old} became ${next}${tail}`;
-    add(deed === "same" || deed === "other" ? "changed" : deed, `requirement “${now.label}”`, says, next);
+    add(deed === "same" || deed === "other" ? "changed" : deed, now.label, says, next);
   }
-  for (const one of come)
-    add("added", `requirement “${one.label}”`, `added, ${whole(one, writers.after)}`, "added");
+  for (const one of come) add("added", one.label, `added, ${whole(one, writers.after)}`, "added");
   for (const one of gone)
-    add("removed", `requirement “${one.label}”`, `removed, it was ${whole(one, writers.before)}`, "removed");
+    add("removed", one.label, `removed, it was ${whole(one, writers.before)}`, "removed");
   return changes;
 }
 

@@ -13,17 +13,20 @@ import { RUNS_SHOWN, type RunLine, type RunLines } from "./run-line";
 interface Props {
   readonly workspace: string;
   readonly netlistId: string;
+  /** Only the runs of this revision. */
+  readonly revision?: number;
   readonly title: string;
   readonly first: RunLines;
 }
 
 /** The latest runs of this netlist with their state; looked up every two seconds while one of them moves. */
-export function LastRuns({ workspace, netlistId, title, first }: Props) {
+export function LastRuns({ workspace, netlistId, revision, title, first }: Props) {
   const { data, error } = useQuery({
-    queryKey: ["runs", workspace, netlistId],
+    queryKey: ["runs", workspace, netlistId, revision ?? "all"],
     initialData: first,
     queryFn: async () => {
       const search = new URLSearchParams({ workspace, netlistId, page: "1", size: String(RUNS_SHOWN) });
+      if (revision !== undefined) search.set("revision", String(revision));
       const answer = await ask<RunLines>(`/api/v1/runs?${search}`);
       if (!answer.ok) throw new Error(answer.detail);
       return answer.body;
@@ -34,7 +37,7 @@ export function LastRuns({ workspace, netlistId, title, first }: Props) {
     <section aria-labelledby="last-runs">
       <div className="flex min-h-7 items-center justify-between gap-4">
         <h2 id="last-runs" className="caption">
-          Last runs
+          {revision === undefined ? "Last runs" : `Runs of revision ${revision}`}
         </h2>
         {data.total > RUNS_SHOWN && (
           <ButtonLink

@@ -1,6 +1,7 @@
 "use client";
 
-import { Button, Keys } from "@/app/_components/ui/button";
+import { usePathname } from "next/navigation";
+import { Button, ButtonLink, Keys } from "@/app/_components/ui/button";
 import { counted } from "@/app/_components/ui/count";
 import { PageHeader } from "@/app/_components/ui/page-header";
 import type { Role } from "@/lib/permissions/actor";
@@ -21,6 +22,7 @@ interface Props {
 export function SheetHeader({ sheet, title, netlist, role, mayQueue }: Props) {
   const { saved, changed, errors, busy, editor } = sheet;
   const keys = useKeyNames();
+  const path = usePathname();
   const remark = (
     <>
       <span aria-live="polite">
@@ -50,6 +52,7 @@ export function SheetHeader({ sheet, title, netlist, role, mayQueue }: Props) {
               {reason}
             </p>
           )}
+          <ButtonLink href={`${path}/revisions`}>History</ButtonLink>
           {mayQueue && (
             <>
               <Button onClick={() => editor.current?.format()}>Format</Button>

@@ -1,0 +1,44 @@
+import type { AxisDocument, ReadingDocument, RequirementDocument, Verdict } from "@/lib/analyses/result";
+
+/** A finished run of a revision, as far as it is compared without its curves. */
+export interface ComparedRun {
+  readonly id: string;
+  readonly number: number;
+  readonly verdict: Verdict | null;
+  /** False for a moment after it has finished. */
+  readonly isJudged: boolean;
+  readonly requirements: readonly RequirementDocument[];
+  /** Those with one value a sweep. */
+  readonly readings: readonly ReadingDocument[];
+  /** The outer sweeps. */
+  readonly axes: readonly AxisDocument[];
+  readonly draws: number;
+}
+
+/** One of the two revisions. */
+export interface Side {
+  readonly number: number;
+  readonly hash: string;
+  readonly text: string;
+  readonly message: string | null;
+  readonly author: string;
+  /** ISO 8601. */
+  readonly savedAt: string;
+  /** The newest run in whatever state; null where it never ran. */
+  readonly newest: {
+    readonly id: string;
+    readonly number: number;
+    readonly status: "queued" | "running" | "done" | "failed" | "cancelled";
+    readonly verdict: Verdict | null;
+    readonly pointsFailed: number;
+    readonly error: string | null;
+  } | null;
+  /** The newest one that finished; null where none did. */
+  readonly run: ComparedRun | null;
+}
+
+/** The two revisions that `3..5` names; null for anything else. */
+export function readPair(text: string): readonly [number, number] | null {
+  const [, a, b] = /^([1-9]\d{0,8})\.\.([1-9]\d{0,8})$/.exec(text) ?? [];
+  return a === undefined || b === undefined ? null : [Number(a), Number(b)];
+}
