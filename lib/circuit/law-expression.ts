@@ -43,6 +43,7 @@ export class LawExpression {
   private at: Float64Array = new Float64Array(0);
   /** As `scope`, with each signal within `around` of where it is. */
   private readonly ranges: IntervalScope;
+  private readonly rangesOfSlopes: IntervalScope;
   private around: Float64Array = new Float64Array(0);
 
   constructor(law: Typed, circuit: Circuit, elements: ReadonlyMap<string, Element>, values: PointValues) {
@@ -76,6 +77,14 @@ export class LawExpression {
         return scope.thermalVoltage;
       },
     };
+    const { ranges } = this;
+    this.rangesOfSlopes = {
+      ...ranges,
+      isContinuous: true,
+      get thermalVoltage() {
+        return scope.thermalVoltage;
+      },
+    };
   }
 
   /** Where the value lies while each signal stays within `around` of `signals`, rounding included. */
@@ -85,11 +94,13 @@ export class LawExpression {
     return evaluateInterval(this.value, this.ranges);
   }
 
-  /** Where the slope by signal `k` lies likewise. */
+  /** Where the slope by signal `k` lies likewise; at a kink, where a value has no jump, between those of both sides. */
   slopeRange(k: number, signals: Float64Array, around: Float64Array): Interval {
     this.at = signals;
     this.around = around;
-    return evaluateInterval(this.slopes[k]!, this.ranges);
+    const range = evaluateInterval(this.slopes[k]!, this.ranges);
+    if (isBounded(range) || !isBounded(evaluateInterval(this.value, this.ranges))) return range;
+    return evaluateInterval(this.slopes[k]!, this.rangesOfSlopes);
   }
 
   /** Reads the knobs and values of the law as they are for its element now. */
@@ -118,4 +129,8 @@ export class LawExpression {
     this.at = signals;
     for (let k = 0; k < into.length; k++) into[k] = evaluate(this.slopes[k]!, this.scope);
   }
+}
+
+function isBounded({ low, high }: Interval): boolean {
+  return Number.isFinite(low) && Number.isFinite(high);
 }

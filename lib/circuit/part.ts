@@ -28,18 +28,22 @@ export interface Part {
   readonly proof?: "linear" | Proof;
 }
 
+export type Gap = readonly [number, number];
+
 /**
  * What the certificate asks of a law that is not linear, right after `settle` and `addTo`. Vectors have the entries of a State's.
  */
 export interface Proof {
+  /** The numbers of the unknowns between which lie the differences on which its slopes depend; ground for a single one. */
+  readonly gaps: readonly Gap[];
   /** Adds, row by row, the most by which the law as computed may be off by rounding: A of a net, V of a branch law. */
   addDoubt(state: State, doubt: Float64Array): void;
   /**
-   * Adds, row by row, the most by which Σ_j |slope_ij|·weights_j can change while |x_j − x̄_j| ≤ weights_j·radius for every unknown,
-   * counted from the slopes as computed: Σ_j sup|slope_ij(x) − slope_ij|·weights_j. `weights` are V per V of a net (1) and A per V of a
-   * branch current; ground has 0.
+   * Adds, row by row, the most by which the sum of slope·change can change while every gap k moves by at most widths[at + k]·radius, counted
+   * from the slopes as computed: Σ_k sup|slope_ik − as computed|·widths[at + k]. Widths are V per V of a gap between nets, A per V of a
+   * branch current.
    */
-  addSpread(state: State, radius: number, weights: Float64Array, spread: Float64Array): void;
+  addSpread(state: State, radius: number, widths: Float64Array, at: number, spread: Float64Array): void;
 }
 
 /** A part with junctions, which are linearised at voltages of their own while a step is limited. */

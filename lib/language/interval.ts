@@ -12,6 +12,11 @@ export interface IntervalScope {
   let(name: string): number;
   signal(signal: Signal): Interval;
   readonly thermalVoltage: number;
+  /**
+   * The expression is the slope of a function that is continuous where the signals range: an `if` that is not decided is then a kink, and
+   * stands for all values of both its branches (Clarke, Optimization and Nonsmooth Analysis, 1983, from memory).
+   */
+  readonly isContinuous?: boolean;
 }
 
 /** Relative widening of one operation, four units in the last place each way, and absolute, for underflow. */
@@ -57,10 +62,14 @@ function point(value: number): Interval {
   return Number.isNaN(value) ? ANYTHING : { low: value, high: value };
 }
 
+/** An end that has overflowed is beyond the largest number, wherever that may be. */
 function widened(low: number, high: number, by = WIDE): Interval {
-  // NaN, too, is not finite, and becomes anything.
-  if (!Number.isFinite(low) || !Number.isFinite(high)) return ANYTHING;
-  return { low: low - Math.abs(low) * by - TINY, high: high + Math.abs(high) * by + TINY };
+  if (Number.isNaN(low) || Number.isNaN(high)) return ANYTHING;
+  const [down, up] = [low - Math.abs(low) * by - TINY, high + Math.abs(high) * by + TINY];
+  return {
+    low: low === Number.POSITIVE_INFINITY ? Number.MAX_VALUE : down,
+    high: high === Number.NEGATIVE_INFINITY ? -Number.MAX_VALUE : up,
+  };
 }
 
 function hull(values: readonly number[]): Interval {
@@ -120,27 +129,29 @@ function power(a: Interval, b: Interval): Interval {
 
 function call(typed: Extract<Typed, { op: "call" }>, scope: IntervalScope): Interval {
   const ranges = () => typed.args.map((arg) => evaluateInterval(arg, scope));
-  const rising = (f: (x: number) => number) => {
+  const rising = (f: (x: number) => number, from = Number.NEGATIVE_INFINITY) => {
     const { low, high } = evaluateInterval(typed.args[0]!, scope);
-    return widened(f(low), f(high));
+    return low >= from ? widened(f(low), f(high)) : ANYTHING;
   };
   switch (typed.callee) {
     case "if": {
       const condition = evaluateInterval(typed.args[0]!, scope);
       if (condition.low > 0 || condition.high < 0) return evaluateInterval(typed.args[1]!, scope);
       if (condition.low === 0 && condition.high === 0) return evaluateInterval(typed.args[2]!, scope);
-      return ANYTHING;
+      if (scope.isContinuous !== true) return ANYTHING;
+      const [one, other] = [evaluateInterval(typed.args[1]!, scope), evaluateInterval(typed.args[2]!, scope)];
+      return { low: Math.min(one.low, other.low), high: Math.max(one.high, other.high) };
     }
     case "exp": {
       const range = rising(Math.exp);
       return { low: Math.max(0, range.low), high: range.high };
     }
     case "ln":
-      return rising(Math.log);
+      return rising(Math.log, Number.MIN_VALUE);
     case "log10":
-      return rising(Math.log10);
+      return rising(Math.log10, Number.MIN_VALUE);
     case "sqrt":
-      return rising(Math.sqrt);
+      return rising(Math.sqrt, 0);
     case "tanh":
       return rising(Math.tanh);
     case "atan":

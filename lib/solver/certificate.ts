@@ -5,6 +5,7 @@ import { DenseFactors } from "./dense";
 import { Inverse } from "./inverse";
 import type { LinearSolver } from "./linear";
 import { TriangularBounds } from "./triangular";
+import { Widths } from "./widths";
 
 /** V. The ball in which slopes are bounded first; what proves a point is usually a thousand times smaller. */
 const BALL = 1e-9;
@@ -38,13 +39,17 @@ const LEAST_CURRENT_WEIGHT = 1e-30;
  *   Y_i + (Z_i + P_i)·r < w_i·r for every i,   Y = |R|·(|F| + δF),   Z = |I − R·J|·w,   P = |R|·(sup|J(x) − J|·w).
  * δF and P come from the parts, the rounding of R·J and of every sum is added. The weights w follow Y of a fresh inverse, so that an
  * output that is an exponential of the nets inside does not decide for all; 1 is the largest of a voltage, those of branch
- * currents are in A per V.
+ * currents are in A per V. Where nets are known far worse than the gaps between them, as around an amplifier that follows one, the gaps are
+ * held to widths of their own: rows more that must satisfy the same.
  */
 export class Certificate {
   private readonly parts: readonly Proof[];
   private readonly canProve: boolean;
   private readonly triangular: TriangularBounds;
   private readonly inverse: Inverse;
+  private readonly widths: Widths;
+  /** The inverse with a row for each gap; made where it is first needed. */
+  private gapped: Inverse | null = null;
   /** Those in use. */
   private bounds: TriangularBounds | Inverse;
   private readonly step: Float64Array;
@@ -56,7 +61,6 @@ export class Certificate {
   private readonly weights: Float64Array;
   private readonly doubt: Float64Array;
   private readonly spread: Float64Array;
-
   constructor(
     private readonly system: System,
     private readonly linear: LinearSolver,
@@ -64,6 +68,7 @@ export class Certificate {
     const { circuit, parts, pattern } = system;
     const { size } = circuit;
     this.parts = parts.flatMap(({ proof }) => (proof === undefined || proof === "linear" ? [] : [proof]));
+    this.widths = new Widths(this.parts.flatMap(({ gaps }) => gaps));
     this.canProve = parts.every(({ proof }) => proof !== undefined);
     this.triangular = new TriangularBounds(pattern);
     this.inverse = new Inverse(pattern);
@@ -101,7 +106,7 @@ export class Certificate {
   }
 
   private judged(radius: number): number {
-    return radius > SUSPECT && !this.isExplained(radius) ? Number.NaN : radius;
+    return radius > SUSPECT && !this.isExplained() ? Number.NaN : radius;
   }
 
   /** By the factors of the Jacobian at hand. */
@@ -127,17 +132,24 @@ export class Certificate {
       this.weigh();
       radius = this.search(1);
     }
-    if (Number.isNaN(radius)) radius = this.searchDensely();
-    if (Number.isNaN(radius)) this.inverse.forget();
+    if (Number.isNaN(radius)) radius = this.searchDensely(this.inverse);
+    if (Number.isNaN(radius)) {
+      this.inverse.forget();
+      radius = this.searchByGaps();
+    }
     return radius;
   }
 
-  /** Whether rounding alone makes about as wide a radius. */
-  private isExplained(radius: number): boolean {
-    const { bounds, isVoltage } = this;
+  /** Whether rounding alone makes about as much of the voltage that may err the most. */
+  private isExplained(): boolean {
+    const { error } = this.bounds;
+    let worst = 0;
+    for (let i = 1; i < this.isVoltage.length; i++)
+      if (this.isVoltage[i] && error[i]! > error[worst]!) worst = i;
+    const whole = error[worst]!;
     this.gatherDoubt(0);
-    bounds.carry(this.doubt);
-    return bounds.error.some((error, i) => isVoltage[i] && EXPLAINED * error >= radius);
+    this.bounds.carry(this.doubt);
+    return EXPLAINED * error[worst]! >= whole;
   }
 
   /** |F|·`residualShare` + δF: what is left over, the roundings of the sums, and those within the laws. */
@@ -152,14 +164,28 @@ export class Certificate {
   }
 
   /** Once more with pivots chosen row by row, where sparse ones make a poor inverse. */
-  private searchDensely(): number {
+  private searchDensely(inverse: Inverse): number {
     const { jacobian } = this.system.state;
     const factors = DenseFactors.of(this.system.pattern, jacobian);
     if (factors === null) return Number.NaN;
     const solveAgain = (residual: Float64Array, step: Float64Array) => factors.solve(residual, step);
-    this.inverse.renew(jacobian, { solveAgain });
+    inverse.renew(jacobian, { solveAgain });
+    this.bounds = inverse;
     this.weigh();
     return this.search(1);
+  }
+
+  /** With every gap held to the width that its own error asks for, which grows where that is not enough. */
+  private searchByGaps(): number {
+    const { pattern } = this.system;
+    this.gapped ??= new Inverse(
+      pattern,
+      this.parts.flatMap(({ gaps }) => gaps),
+    );
+    for (let gap = 0; gap < this.widths.values.length; gap++) this.widths.hold(gap, 0);
+    const radius = this.searchDensely(this.gapped);
+    this.widths.release();
+    return radius;
   }
 
   /** Weights in proportion to Y; at least a part of 1 V, or of the current that 1 V makes in the rows that a current enters. */
@@ -200,21 +226,29 @@ export class Certificate {
     return Number.NaN;
   }
 
-  /** Seen from the rounded voltages, which are what is kept. */
+  /** The most by which a voltage may be off, seen from the rounded voltages, which are what is kept. */
   private widened(radius: number): number {
     const { low } = this.system.state;
     let most = 0;
+    let heaviest = 0;
     for (let j = 0; j < this.isVoltage.length; j++) {
-      if (this.isVoltage[j] && Math.abs(low[j]!) > most) most = Math.abs(low[j]!);
+      if (!this.isVoltage[j]) continue;
+      most = Math.max(most, Math.abs(low[j]!));
+      heaviest = Math.max(heaviest, this.weights[j]!);
     }
-    return (radius + most) * WIDENED;
+    return (radius * heaviest + most) * WIDENED;
   }
 
   private attempt(ball: number, most: number): Found {
-    const { bounds, weights, spread, isVoltage, parts } = this;
+    const { bounds, weights, spread, isVoltage, parts, widths } = this;
     const { state } = this.system;
     spread.fill(0);
-    for (let k = 0; k < parts.length; k++) parts[k]!.addSpread(state, ball, weights, spread);
+    widths.measure(weights);
+    for (let k = 0, at = 0; k < parts.length; k++) {
+      const part = parts[k]!;
+      part.addSpread(state, ball, widths.values, at, spread);
+      at += part.gaps.length;
+    }
     bounds.bound(state.jacobian, weights, this.roundings, this.doubt, spread);
     const { left, error, change } = bounds;
     let radius = LEAST_RADIUS;
@@ -246,6 +280,14 @@ export class Certificate {
       fits = false;
     }
     if (!fits) bounds.reweigh();
+    for (let gap = 0; gap < widths.values.length; gap++) {
+      if (!widths.isHeld(gap)) continue;
+      const row = isVoltage.length + gap;
+      const needed = (error[row]! / radius + left[row]! + change[row]!) * WIDENED;
+      if (needed < widths.values[gap]!) continue;
+      widths.hold(gap, SPARE * needed);
+      fits = false;
+    }
     return fits ? { kind: "proved", radius } : { kind: "weights too small" };
   }
 }

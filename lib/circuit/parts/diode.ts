@@ -9,6 +9,7 @@ import {
   type Bench,
   FREE,
   figureOf,
+  type Gap,
   type JunctionPart,
   moversOf,
   NEARLY_WHOLE,
@@ -25,6 +26,7 @@ import { type PointValues, TEMPERATURE } from "../values";
  */
 export class DiodePart implements JunctionPart, Proof {
   readonly proof: Proof = this;
+  readonly gaps: readonly Gap[];
   readonly element: Element;
   readonly movers: ReadonlySet<string>;
   private readonly model: Model;
@@ -48,6 +50,7 @@ export class DiodePart implements JunctionPart, Proof {
     const c = netAt(bench, "cathode");
     this.anode = a;
     this.cathode = c;
+    this.gaps = [[a, c]];
     this.places = [pattern.place(a, a), pattern.place(a, c), pattern.place(c, a), pattern.place(c, c)];
   }
 
@@ -163,14 +166,14 @@ export class DiodePart implements JunctionPart, Proof {
     doubt[this.cathode]! += most;
   }
 
-  addSpread(_: State, radius: number, weights: Float64Array, spread: Float64Array): void {
+  addSpread(_: State, radius: number, widths: Float64Array, from: number, spread: Float64Array): void {
     const { anode, cathode, at, reverse, v, law } = this;
-    const both = weights[anode]! + weights[cathode]!;
-    const delta = radius * both;
+    const width = widths[from]!;
+    const delta = radius * width;
     const change =
       reverse === null ? diodeSpread(at, v, law.g, delta) : breakdownSpread(at, reverse, v, law.g, delta);
-    spread[anode]! += change * both;
-    spread[cathode]! += change * both;
+    spread[anode]! += change * width;
+    spread[cathode]! += change * width;
   }
 
   current(pin: string, state: State): number {

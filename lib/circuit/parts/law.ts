@@ -1,7 +1,7 @@
 import { UNIT } from "@/lib/devices/rounding";
 import type { Element } from "@/lib/language/ast";
 import { LawExpression } from "../law-expression";
-import { type Bench, type JunctionPart, netAt, type Proof } from "../part";
+import { type Bench, type Gap, type JunctionPart, netAt, type Proof } from "../part";
 import { across, flow, type State } from "../state";
 import type { PointValues } from "../values";
 
@@ -25,6 +25,7 @@ const ROUNDED = 1e-5;
  */
 export class LawPart implements JunctionPart, Proof {
   readonly proof: Proof = this;
+  readonly gaps: readonly Gap[];
   readonly element: Element;
   readonly movers: ReadonlySet<string>;
   private readonly expression: LawExpression;
@@ -66,6 +67,7 @@ export class LawPart implements JunctionPart, Proof {
     const { sources } = this.expression;
     // A law of amperes adds to the row of plus; one of volts takes off its own row.
     const [added, taken] = branch < 0 ? [plus, minus] : [circuit.size, branch];
+    this.gaps = sources.map(({ from, less }) => [from, less]);
     const entries = sources.map(({ from, sign, less }) => {
       const [up, down] = sign > 0 ? [from, less] : [less, from];
       return {
@@ -196,15 +198,13 @@ export class LawPart implements JunctionPart, Proof {
   }
 
   /** Interval arithmetic over the ball. */
-  addSpread({ share }: State, radius: number, weights: Float64Array, spread: Float64Array): void {
+  addSpread({ share }: State, radius: number, widths: Float64Array, at: number, spread: Float64Array): void {
     const { expression, y, trial, slopes, plus, minus, branch } = this;
-    const { sources } = expression;
-    const weightOf = (k: number) => weights[sources[k]!.from]! + weights[sources[k]!.less]!;
-    for (let k = 0; k < y.length; k++) trial[k] = radius * weightOf(k) + 4 * UNIT * Math.abs(y[k]!);
+    for (let k = 0; k < y.length; k++) trial[k] = radius * widths[at + k]! + 4 * UNIT * Math.abs(y[k]!);
     let most = 0;
     for (let k = 0; k < y.length; k++) {
       const { low, high } = expression.slopeRange(k, y, trial);
-      most += share * weightOf(k) * Math.max(high - slopes[k]!, slopes[k]! - low);
+      most += share * widths[at + k]! * Math.max(high - slopes[k]!, slopes[k]! - low);
     }
     if (branch < 0) {
       spread[plus]! += most;

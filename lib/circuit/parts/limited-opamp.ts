@@ -1,6 +1,6 @@
 import { KNEE, limited, limitStep } from "@/lib/devices/limits";
 import { UNIT } from "@/lib/devices/rounding";
-import { FREE, figureOf, type JunctionPart, type Proof } from "../part";
+import { FREE, figureOf, type Gap, type JunctionPart, type Proof } from "../part";
 import { across, type State } from "../state";
 import type { PointValues } from "../values";
 import { OpampPart } from "./opamp";
@@ -11,6 +11,7 @@ import { OpampPart } from "./opamp";
  */
 export class LimitedOpampPart extends OpampPart implements JunctionPart, Proof {
   override readonly proof: Proof = this;
+  readonly gaps: readonly Gap[] = [[this.plus, this.minus]];
   private gain = 1;
   private limits = { low: null as number | null, high: null as number | null };
   /** Where the limits are taken as a straight line, V, and the law there. */
@@ -96,10 +97,10 @@ export class LimitedOpampPart extends OpampPart implements JunctionPart, Proof {
   }
 
   /** |d ln L'/ds| ≤ 1/κ, since L' is a product of two logistic functions of opposite directions. */
-  addSpread(_: State, radius: number, weights: Float64Array, spread: Float64Array): void {
+  addSpread(_: State, radius: number, widths: Float64Array, at: number, spread: Float64Array): void {
     const { branch, law, gain } = this;
-    const both = weights[this.plus]! + weights[this.minus]!;
-    const rise = Math.expm1((gain * radius * both) / KNEE) + 64 * UNIT * (1 + Math.abs(this.s) / KNEE);
-    spread[branch]! += law.slope * rise * both;
+    const width = widths[at]!;
+    const rise = Math.expm1((gain * radius * width) / KNEE) + 64 * UNIT * (1 + Math.abs(this.s) / KNEE);
+    spread[branch]! += law.slope * rise * width;
   }
 }

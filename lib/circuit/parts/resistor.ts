@@ -2,12 +2,13 @@ import { conductance } from "@/lib/devices/resistor";
 import { UNIT } from "@/lib/devices/rounding";
 import type { Element } from "@/lib/language/ast";
 import type { AssemblyCode } from "../assembly-code";
-import { type Bench, figureOf, moversOf, netAt, type Part, type Proof } from "../part";
+import { type Bench, figureOf, type Gap, moversOf, netAt, type Part, type Proof } from "../part";
 import { across, flow, type State } from "../state";
 import { type PointValues, TEMPERATURE } from "../values";
 
 export class ResistorPart implements Part, Proof {
   readonly element: Element;
+  readonly gaps: readonly Gap[];
   readonly movers: ReadonlySet<string>;
   private readonly left: number;
   private readonly right: number;
@@ -24,6 +25,7 @@ export class ResistorPart implements Part, Proof {
     const right = netAt(bench, "right");
     this.left = left;
     this.right = right;
+    this.gaps = [[left, right]];
     this.places = [
       pattern.place(left, left),
       pattern.place(left, right),
@@ -65,9 +67,9 @@ export class ResistorPart implements Part, Proof {
 
   addDoubt(): void {}
 
-  addSpread(_: State, __: number, weights: Float64Array, spread: Float64Array): void {
+  addSpread(_: State, __: number, widths: Float64Array, at: number, spread: Float64Array): void {
     if (this.g >= 0) return;
-    const most = -8 * UNIT * this.g * (weights[this.left]! + weights[this.right]!);
+    const most = -8 * UNIT * this.g * widths[at]!;
     spread[this.left]! += most;
     spread[this.right]! += most;
   }

@@ -9,6 +9,7 @@ import {
   type Bench,
   FREE,
   figureOf,
+  type Gap,
   type JunctionPart,
   moversOf,
   NEARLY_WHOLE,
@@ -23,6 +24,7 @@ import { writeTransistor } from "./transistor-code";
 /** An npn, or a pnp, which is the same with every voltage and current reversed. */
 export class TransistorPart implements JunctionPart, Proof {
   readonly proof: Proof = this;
+  readonly gaps: readonly Gap[];
   readonly element: Element;
   readonly movers: ReadonlySet<string>;
   private readonly model: Model;
@@ -53,6 +55,10 @@ export class TransistorPart implements JunctionPart, Proof {
     this.b = netAt(bench, "b");
     this.e = netAt(bench, "e");
     this.ground = circuit.size;
+    this.gaps = [
+      [this.b, this.e],
+      [this.b, this.c],
+    ];
     const nets = [this.c, this.b, this.e];
     this.places = nets.flatMap((row) => nets.map((column) => pattern.place(row, column)));
   }
@@ -168,10 +174,10 @@ export class TransistorPart implements JunctionPart, Proof {
     doubt[this.e]! += bounds.ic + bounds.ib;
   }
 
-  addSpread(_: State, radius: number, weights: Float64Array, spread: Float64Array): void {
+  addSpread(_: State, radius: number, widths: Float64Array, at: number, spread: Float64Array): void {
     const { c, b, e, bounds } = this;
-    const be = weights[b]! + weights[e]!;
-    const bc = weights[b]! + weights[c]!;
+    const be = widths[at]!;
+    const bc = widths[at + 1]!;
     bipolarSpread(this.at, this.vbe, this.vbc, radius * Math.max(be, bc), bounds);
     const intoC = bounds.icF * be + bounds.icR * bc;
     const intoB = bounds.ibF * be + bounds.ibR * bc;
