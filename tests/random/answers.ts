@@ -1,14 +1,12 @@
 import { readFileSync } from "node:fs";
-
-/** Circuits of the set, seeds 1 to this. */
-export const HOW_MANY = 1000;
+import type { RandomSet } from "./sets";
 
 /** Decimals of a volt to which the answers are kept; the narrowest bound is a thousand times as wide. */
 export const DECIMALS = 19;
 
 /** The voltages of a circuit's nets at 50 digits, cut to 19 decimals, in units of 1e-19 V and in the order of its nets. */
-export function readAnswers(): readonly (readonly bigint[])[] {
-  const lines = readFileSync("tests/reference/random-circuits.txt", "utf8").trimEnd().split("\n");
+export function readAnswers({ answers }: RandomSet): readonly (readonly bigint[])[] {
+  const lines = readFileSync(`tests/reference/${answers}`, "utf8").trimEnd().split("\n");
   return lines
     .filter((line) => !line.startsWith("#"))
     .map((line) => line.split(" ").map((word) => BigInt(word)));

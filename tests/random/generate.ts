@@ -14,16 +14,17 @@ export function randomCircuit(seed: number): RandomCircuit {
   return new Maker(seed).make();
 }
 
-class Maker {
-  private readonly stream: Stream;
-  private readonly elements: RandomElement[] = [];
-  private readonly models: Record<string, RandomModel> = {};
-  private readonly supplies: string[] = ["ground"];
+export class Maker {
+  protected readonly stream: Stream;
+  protected readonly elements: RandomElement[] = [];
+  protected readonly models: Record<string, RandomModel> = {};
+  protected readonly supplies: string[] = ["ground"];
   /** Nets that later stages may listen to. */
-  private readonly heard: string[] = [];
-  private junctions = 0;
+  protected readonly heard: string[] = [];
+  protected junctions = 0;
   private count = 0;
-  private bias = 0;
+  /** A: the most that an amplifier takes into an input. */
+  protected bias = 0;
 
   constructor(private readonly seed: number) {
     this.stream = new Stream(seed);
@@ -35,31 +36,38 @@ class Maker {
     this.addModels();
     this.addSupplies();
     const wanted = stream.whole(2, MOST_JUNCTIONS);
-    while (this.junctions < wanted) {
-      const left = wanted - this.junctions;
-      const stage = stream.next();
-      if (left >= 2 && stage < 0.5) this.addNetwork(left);
-      else if (left >= 2 && stage < 0.6) this.addLogStage();
-      else if (left >= 2 && stage < 0.7) this.addLimiter();
-      else if (left >= 4 && stage < 0.8) this.addMirror();
-      else if (left >= 4 && stage < 0.9) this.addPair();
-      else if (stage < 0.95) this.addFollower();
-      else this.addDiodes(left);
-    }
+    while (this.junctions < wanted) this.addStage(wanted - this.junctions);
     const nets = [...new Set(this.elements.flatMap(netsOf))].filter((net) => net !== "ground");
     return { seed: this.seed, kelvin, nets, models: this.models, elements: this.elements };
   }
 
-  private net(): string {
+  /** Adds a stage of at most `left` junctions. */
+  protected addStage(left: number): void {
+    const stage = this.stream.next();
+    if (left >= 2 && stage < 0.5) this.addNetwork(left);
+    else if (left >= 2 && stage < 0.6) this.addLogStage();
+    else if (left >= 2 && stage < 0.7) this.addLimiter();
+    else if (left >= 4 && stage < 0.8) this.addMirror();
+    else if (left >= 4 && stage < 0.9) this.addPair();
+    else if (stage < 0.95) this.addFollower();
+    else this.addDiodes(left);
+  }
+
+  /** The model that the next diode, transistor or amplifier follows. */
+  protected model(of: "diode" | "npn" | "pnp" | "opamp"): string {
+    return of === "diode" ? "d" : of === "opamp" ? "amp" : `q_${of}`;
+  }
+
+  protected net(): string {
     this.count += 1;
     return `n${this.count}`;
   }
 
-  private resistor(left: string, right: string, low: number, high: number): void {
+  protected resistor(left: string, right: string, low: number, high: number): void {
     this.elements.push({ kind: "resistor", left, right, ohms: this.stream.decades(low, high) });
   }
 
-  private addModels(): void {
+  protected addModels(): void {
     const { stream, models } = this;
     const junction = () => ({ Is: stream.decades(1e-18, 1e-9), n: 1, Eg: 1.12, x: 3 });
     models.d = {
@@ -95,12 +103,12 @@ class Maker {
   }
 
   /** Where a stage takes its input from: a supply, or an earlier stage behind an amplifier. */
-  private source(): string {
+  protected source(): string {
     const { stream } = this;
     if (this.heard.length === 0 || stream.chance(0.4)) return stream.pick(this.supplies.slice(1));
     const heard = stream.pick(this.heard);
     const out = this.net();
-    this.elements.push({ kind: "opamp", plus: heard, minus: out, out, model: "amp" });
+    this.elements.push({ kind: "opamp", plus: heard, minus: out, out, model: this.model("opamp") });
     return out;
   }
 
@@ -119,14 +127,14 @@ class Maker {
       if (left >= 2 && stream.chance(0.75)) {
         const c = stream.pick(all);
         const [b, e] = [this.net(), this.net()];
-        this.elements.push({ kind: "transistor", c, b, e, model: stream.pick(["q_npn", "q_pnp"]) });
+        this.elements.push({ kind: "transistor", c, b, e, model: this.model(stream.pick(["npn", "pnp"])) });
         this.resistor(b, other(c), 100, 1e5);
         this.resistor(e, other(c), 10, 1e4);
         left -= 2;
         this.junctions += 2;
       } else {
         const anode = stream.pick(inner);
-        this.elements.push({ kind: "diode", anode, cathode: other(anode), model: "d" });
+        this.elements.push({ kind: "diode", anode, cathode: other(anode), model: this.model("diode") });
         left -= 1;
         this.junctions += 1;
       }
@@ -141,8 +149,8 @@ class Maker {
     const least = 1e-10 + 4 * this.bias;
     this.elements.push(
       { kind: "current", left: "ground", right: sum, amperes: this.stream.decades(least, 3e-3) },
-      { kind: "transistor", c: sum, b: "ground", e: out, model: "q_npn" },
-      { kind: "opamp", plus: "ground", minus: sum, out, model: "amp" },
+      { kind: "transistor", c: sum, b: "ground", e: out, model: this.model("npn") },
+      { kind: "opamp", plus: "ground", minus: sum, out, model: this.model("opamp") },
     );
     this.resistor(sum, "ground", 1e8, 1e11);
     this.junctions += 2;
@@ -155,9 +163,9 @@ class Maker {
     this.resistor(this.source(), sum, 1e3, 1e6);
     this.resistor(sum, out, 1e4, 1e7);
     this.elements.push(
-      { kind: "diode", anode: sum, cathode: out, model: "d" },
-      { kind: "diode", anode: out, cathode: sum, model: "d" },
-      { kind: "opamp", plus: "ground", minus: sum, out, model: "amp" },
+      { kind: "diode", anode: sum, cathode: out, model: this.model("diode") },
+      { kind: "diode", anode: out, cathode: sum, model: this.model("diode") },
+      { kind: "opamp", plus: "ground", minus: sum, out, model: this.model("opamp") },
     );
     this.junctions += 2;
     this.heard.push(out);
@@ -170,8 +178,8 @@ class Maker {
     const supply = this.supplies[1]!;
     this.elements.push(
       { kind: "current", left: supply, right: input, amperes: stream.decades(1e-9, 3e-3) },
-      { kind: "transistor", c: input, b: input, e: "ground", model: "q_npn" },
-      { kind: "transistor", c: out, b: input, e, model: "q_npn" },
+      { kind: "transistor", c: input, b: input, e: "ground", model: this.model("npn") },
+      { kind: "transistor", c: out, b: input, e, model: this.model("npn") },
     );
     this.resistor(e, "ground", 1, 1e4);
     this.resistor(supply, out, 100, 1e6);
@@ -186,8 +194,8 @@ class Maker {
     const [c1, c2, b, e] = [this.net(), this.net(), this.net(), this.net()];
     const supply = this.supplies[1]!;
     this.elements.push(
-      { kind: "transistor", c: c1, b, e, model: "q_npn" },
-      { kind: "transistor", c: c2, b: "ground", e, model: "q_npn" },
+      { kind: "transistor", c: c1, b, e, model: this.model("npn") },
+      { kind: "transistor", c: c2, b: "ground", e, model: this.model("npn") },
       { kind: "current", left: e, right: "ground", amperes: stream.decades(1e-8, 3e-3) },
     );
     this.resistor(supply, c1, 100, 1e5);
@@ -203,8 +211,8 @@ class Maker {
   private addFollower(): void {
     const [drive, out] = [this.net(), this.net()];
     const plus = this.source();
-    this.elements.push({ kind: "diode", anode: drive, cathode: out, model: "d" });
-    this.elements.push({ kind: "opamp", plus, minus: out, out: drive, model: "amp" });
+    this.elements.push({ kind: "diode", anode: drive, cathode: out, model: this.model("diode") });
+    this.elements.push({ kind: "opamp", plus, minus: out, out: drive, model: this.model("opamp") });
     this.resistor(out, this.supplies.at(-1)!, 1e3, 1e6);
     this.resistor(drive, out, 1e5, 1e8);
     this.junctions += 1;
@@ -217,7 +225,7 @@ class Maker {
     this.resistor(this.source(), net, 100, 1e7);
     for (let k = this.stream.whole(1, Math.min(4, most)); k > 0; k--) {
       const cathode = k === 1 ? "ground" : this.net();
-      this.elements.push({ kind: "diode", anode: net, cathode, model: "d" });
+      this.elements.push({ kind: "diode", anode: net, cathode, model: this.model("diode") });
       this.resistor(net, "ground", 1e8, 1e12);
       this.heard.push(net);
       this.junctions += 1;
@@ -226,9 +234,10 @@ class Maker {
   }
 }
 
+const NO_NETS: ReadonlySet<string> = new Set(["kind", "model", "shape", "of"]);
+
 function netsOf(element: RandomElement): string[] {
-  const { kind: _, ...rest } = element;
-  return Object.entries(rest).flatMap(([key, value]) =>
-    key !== "model" && typeof value === "string" ? [value] : [],
+  return Object.entries(element).flatMap(([key, value]) =>
+    typeof value === "string" && !NO_NETS.has(key) ? [value] : [],
   );
 }

@@ -6,7 +6,7 @@ import { LinearSolver } from "@/lib/solver/linear";
 import type { Outcome } from "@/lib/solver/outcome";
 import { distance } from "./answers";
 import { textOf } from "./circuit";
-import { randomCircuit } from "./generate";
+import type { RandomSet } from "./sets";
 
 /** How the engine did on one random circuit from a cold start. */
 export interface Score {
@@ -18,8 +18,8 @@ export interface Score {
   readonly bound: number;
 }
 
-export function scoreOf(seed: number, answers: readonly bigint[]): Score {
-  const circuit = randomCircuit(seed);
+export function scoreOf({ circuitOf }: RandomSet, seed: number, answers: readonly bigint[]): Score {
+  const circuit = circuitOf(seed);
   const { job, diagnostics } = compile(textOf(circuit));
   if (job === null)
     throw new Error(`Circuit ${seed}: ${diagnostics.map(({ message }) => message).join(" ")}`);
@@ -40,11 +40,12 @@ export function quantile(values: readonly number[], part: number): number {
 
 /** A planted wrong answer: one net 1 nV off its solution. What is still proved of it (V, NaN for nothing), and how far it is off. */
 export function plantedAt(
+  { circuitOf }: RandomSet,
   seed: number,
   answers: readonly bigint[],
   k: number,
 ): { bound: number; error: number } {
-  const circuit = randomCircuit(seed);
+  const circuit = circuitOf(seed);
   const { job } = compile(textOf(circuit));
   const system = new System(job!.design, job!.circuit);
   new Ladder(system, false).solve(false);

@@ -1,17 +1,19 @@
 import { describe, expect, test } from "vitest";
-import { HOW_MANY, readAnswers } from "./answers";
+import { readAnswers } from "./answers";
 import { plantedAt, quantile, scoreOf } from "./measure";
+import { SETS, type SetName } from "./sets";
 
-/** The part of the set that every test run solves; `npx tsx tests/random/whole.ts` solves the whole. */
+/** The part of a set that every test run solves; `npx tsx tests/random/whole.ts NAME` solves the whole. */
 const PART = 150;
 
-describe("random circuits from a cold start", () => {
+describe.each(Object.keys(SETS) as SetName[])("random circuits of the %s set from a cold start", (name) => {
   // Reference: the same equations at 50 digits, written anew in tests/reference/random-circuits.py.
-  const answers = readAnswers();
-  const scores = answers.slice(0, PART).map((one, k) => scoreOf(k + 1, one));
+  const set = SETS[name];
+  const answers = readAnswers(set);
+  const scores = answers.slice(0, PART).map((one, k) => scoreOf(set, k + 1, one));
 
-  test("the set is whole", () => {
-    expect(answers).toHaveLength(HOW_MANY);
+  test("are as many as the set has", () => {
+    expect(answers).toHaveLength(set.howMany);
   });
 
   test("are all solved and all proved", () => {
@@ -31,7 +33,7 @@ describe("random circuits from a cold start", () => {
   });
 
   test("answers planted 1 nV off are refused, but where rounding alone may be as much", () => {
-    const planted = answers.slice(0, PART).map((one, k) => plantedAt(k + 1, one, 7 * k));
+    const planted = answers.slice(0, PART).map((one, k) => plantedAt(set, k + 1, one, 7 * k));
     expect(planted.filter(({ bound, error }) => !Number.isNaN(bound) && !(error <= bound))).toEqual([]);
     expect(planted.filter(({ bound }) => Number.isNaN(bound)).length).toBeGreaterThan(0.95 * PART);
   });

@@ -1,9 +1,11 @@
 import { RUNGS } from "@/lib/solver/outcome";
 import { readAnswers } from "./answers";
 import { quantile, scoreOf } from "./measure";
+import { SETS, type SetName } from "./sets";
 
-/** Solves all random circuits from a cold start and holds each against its 50-digit answer: `npx tsx tests/random/whole.ts`. */
-const scores = readAnswers().map((answers, k) => scoreOf(k + 1, answers));
+/** Solves a set from a cold start and holds each circuit against its 50-digit answer: `npx tsx tests/random/whole.ts plain`, or `full`. */
+const set = SETS[process.argv[2] as SetName];
+const scores = readAnswers(set).map((answers, k) => scoreOf(set, k + 1, answers));
 const solved = scores.filter(({ outcome }) => outcome.kind === "converged");
 const proved = solved.filter(({ bound }) => !Number.isNaN(bound));
 const iterations = solved.map(({ outcome }) => outcome.iterations);
@@ -17,7 +19,7 @@ console.log({
     p95: quantile(iterations, 0.95),
     most: Math.max(...iterations),
   },
-  proved: proved.length,
+  unproved: solved.filter(({ bound }) => Number.isNaN(bound)).map(({ seed }) => seed),
   bound: { median: quantile(bounds, 0.5), p95: quantile(bounds, 0.95), most: Math.max(...bounds) },
   violations: proved.filter(({ error, bound }) => !(error <= bound)).map(({ seed }) => seed),
   tightest: Math.min(...proved.map(({ error, bound }) => bound / error)),
