@@ -1,32 +1,38 @@
 import { OUTCOMES, type OutcomeKind } from "@/lib/solver/outcome";
 import { type DocumentFrame, frameOf, type RunMatter } from "./document";
-import type { ReadingDocument } from "./result";
 
 /**
  * The binary form of a run document, for readers of many numbers. Little-endian, in this order, each part beginning at a multiple
  * of 8 bytes: the text "swcolumn"; the length of the head in bytes, as Float64; the head, JSON in UTF-8, which is the run document
- * without its columns, with `points` a number and `values: null` for readings per point; then one Float64 a point for each trace,
- * each reading per point, and the bound (V), NaN where there is none; then one byte a point for the outcome, its index in
+ * without its columns, with `points` a number and the readings per point named in `read`; then one Float64 a point for each of
+ * `traces`, each of `read`, and the bound (V), NaN where there is none; then one byte a point for the outcome, its index in
  * `outcomes` of the head, 255 where not solved.
  */
 const MARK = "swcolumn";
 const NOT_SOLVED = 255;
 
-interface Head extends Omit<DocumentFrame, "readings"> {
+interface Head extends DocumentFrame {
   readonly points: number;
   readonly outcomes: readonly OutcomeKind[];
-  readonly traces: readonly { readonly name: string; readonly unit: string }[];
-  readonly readings: readonly (Omit<ReadingDocument, "values"> & {
-    readonly values: ReadingDocument["values"] | null;
-  })[];
+  readonly traces: readonly Named[];
+  /** Readings per point, which have a column; `readings` has the others. */
+  readonly read: readonly Named[];
+}
+
+interface Named {
+  readonly name: string;
+  readonly unit: string;
+}
+
+interface NamedColumn extends Named {
+  readonly values: Float64Array;
 }
 
 /** A run document whose columns are numbers of the machine, NaN where a point is unsolved. */
-export interface ColumnsDocument extends Omit<DocumentFrame, "readings"> {
-  readonly traces: readonly { readonly name: string; readonly unit: string; readonly values: Float64Array }[];
-  readonly readings: readonly (Omit<ReadingDocument, "values"> & {
-    readonly values: ReadingDocument["values"] | Float64Array;
-  })[];
+export interface ColumnsDocument extends DocumentFrame {
+  readonly traces: readonly NamedColumn[];
+  /** Readings per point; `readings` has those that are one number a sweep. */
+  readonly read: readonly NamedColumn[];
   readonly points: {
     readonly outcome: readonly (OutcomeKind | null)[];
     /** V. */
@@ -42,8 +48,9 @@ export function encodeColumns(matter: RunMatter): Uint8Array[] {
     ...frame,
     points: matter.outcome.length,
     outcomes: OUTCOMES,
-    traces: matter.plan.traces,
-    readings: frame.readings.map((one) => (one.per === "point" ? { ...one, values: null } : one)),
+    traces: matter.plan.traces.map(({ name, unit }) => ({ name, unit })),
+    read: ofPoints.map(({ name, unit }) => ({ name, unit })),
+    readings: frame.readings.filter(({ per }) => per === "sweep"),
   };
   const json = new TextEncoder().encode(JSON.stringify(head));
   const padded = new Uint8Array(8 * Math.ceil(json.length / 8)).fill(32);
@@ -81,12 +88,12 @@ export function decodeColumns(buffer: ArrayBuffer): ColumnsDocument {
     at += column.byteLength;
     return column;
   };
-  const { outcomes, points, traces, readings, ...frame } = head;
+  const { outcomes, points, traces, read, ...frame } = head;
   const shown = traces.map((trace) => ({ ...trace, values: next() }));
-  const read = readings.map((one) => ({ ...one, values: one.values ?? next() }));
+  const derived = read.map((one) => ({ ...one, values: next() }));
   const bound = next();
   const codes = new Uint8Array(buffer, at, points);
   const outcome = new Array<OutcomeKind | null>(points);
   for (let k = 0; k < points; k++) outcome[k] = outcomes[codes[k]!] ?? null;
-  return { ...frame, traces: shown, readings: read, points: { outcome, bound } };
+  return { ...frame, traces: shown, read: derived, points: { outcome, bound } };
 }

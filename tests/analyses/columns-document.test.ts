@@ -54,10 +54,12 @@ describe("the binary form of a run document", () => {
     const read = decodeColumns(bytes);
     const { points, traces, readings, ...rest } = toDocument(matter);
     expect(read).toMatchObject(rest);
+    expect(read.readings).toEqual(readings.filter(({ per }) => per === "sweep"));
     expect(read.traces.map(({ name, unit, values }) => ({ name, unit, values: listed(values) }))).toEqual(
       traces,
     );
-    expect(read.readings.map((one) => ({ ...one, values: listed(one.values) }))).toEqual(readings);
+    const perPoint = readings.filter(({ per }) => per === "point");
+    expect(read.read.map((one) => ({ ...one, per: "point", values: listed(one.values) }))).toEqual(perPoint);
     expect(read.points.outcome).toEqual(points.outcome);
     expect(listed(read.points.bound)).toEqual(points.bound);
   });

@@ -1,6 +1,7 @@
 import { afterEach, beforeEach, describe, expect, it, vi } from "vitest";
 import { DocumentFeed } from "@/app/(work)/[workspace]/runs/[id]/document-feed";
-import type { RunDocument } from "@/lib/analyses/result";
+import { type ColumnsDocument, encodeColumns } from "@/lib/analyses/columns-document";
+import { OUTCOMES, type OutcomeKind } from "@/lib/solver/outcome";
 
 interface Asked {
   readonly etag: string | null;
@@ -10,9 +11,22 @@ interface Asked {
 /** Requests that were made, each waiting to be answered. */
 let asked: Asked[];
 const listener = {
-  onDocument: vi.fn<(document: RunDocument) => void>(),
+  onDocument: vi.fn<(document: ColumnsDocument) => void>(),
   onProblem: vi.fn<(problem: string | null) => void>(),
 };
+
+/** A document of points with these outcomes and nothing else. */
+function columns(outcome: readonly (string | null)[]): Blob {
+  const column = outcome.map((one) => (one === null ? Number.NaN : OUTCOMES.indexOf(one as OutcomeKind)));
+  const none = new Float64Array(outcome.length);
+  const plan = { title: "", axes: [], draws: 0, points: outcome.length, traces: [], unknowns: [] };
+  const matter = { plan, design: null, text: "", traces: [], failures: [], diagnostics: [] };
+  const pieces = encodeColumns({
+    ...matter,
+    ...{ outcome: Float64Array.from(column), iterations: none, rung: none, bound: none },
+  });
+  return new Blob(pieces as BlobPart[]);
+}
 
 beforeEach(() => {
   vi.useFakeTimers();
@@ -21,8 +35,8 @@ beforeEach(() => {
   vi.stubGlobal("fetch", (_url: string, init: { headers: Record<string, string> }) => {
     return new Promise<Response>((resolve) => {
       const answer = async (status: number, outcome: readonly (string | null)[] = ["converged"]) => {
-        const body =
-          status === 304 ? null : JSON.stringify({ points: { outcome }, detail: "The database is away." });
+        const problem = JSON.stringify({ detail: "The database is away." });
+        const body = status === 304 ? null : status === 200 ? columns(outcome) : problem;
         resolve(new Response(body, { status, headers: { etag: `W/"${asked.length}"` } }));
         await vi.advanceTimersByTimeAsync(0);
       };

@@ -9,6 +9,7 @@ import { whyMissing } from "./failed-reasons";
 import { formatKnob, formatValue } from "./figures-in-words";
 import { downIn, STOREY_GAP } from "./nearest-line";
 import type { StoreyView } from "./storey-views";
+import type { Line } from "./storeys";
 
 interface Props {
   readonly set: CurveSet;
@@ -26,7 +27,9 @@ export function CursorMarks({ set, storeys, horizontal, x, width, cursor }: Prop
   const tops = storeys.map((_, i) =>
     storeys.slice(0, i).reduce((sum, { height }) => sum + height + STOREY_GAP, 0),
   );
-  const followed = storeys.flatMap(({ lines }) => lines.filter(({ family }) => family === cursor.family));
+  const followed = storeys.flatMap((storey) =>
+    storey.lines.filter(({ family }) => family === cursor.family).map((line) => ({ storey, line })),
+  );
   const label = set.families[cursor.family]?.label ?? "";
   const bound = boundAt(set, cursor);
   const right = left < width / 2;
@@ -61,29 +64,19 @@ export function CursorMarks({ set, storeys, horizontal, x, width, cursor }: Prop
           {formatKnob(set.axis, set.x[cursor.place]!)}
           {label !== "" && <span className="text-quiet">, {label}</span>}
         </p>
-        {followed.map((line) => (
-          <p key={line.key} className="flex justify-between gap-4 whitespace-nowrap">
-            <span className="text-quiet">{line.trace}</span>
-            <span className="figures text-xs">
-              {valueIn(line.values, cursor.place) === null
-                ? missing(set, cursor)
-                : formatValue(valueIn(line.values, cursor.place), line.unit)}
-            </span>
-          </p>
+        {followed.map(({ storey, line }) => (
+          <div key={line.key}>
+            <p className="flex justify-between gap-4 whitespace-nowrap">
+              <span className="text-quiet">{line.trace}</span>
+              <span className="figures text-xs">
+                {valueIn(line.values, cursor.place) === null
+                  ? missing(set, cursor)
+                  : formatValue(valueIn(line.values, cursor.place), line.unit)}
+              </span>
+            </p>
+            <DrawsHere storey={storey} line={line} place={cursor.place} />
+          </div>
         ))}
-        {storeys.flatMap(({ bands, unit }) =>
-          bands
-            .filter(({ key }) => followed.some((line) => line.key === key))
-            .map((band) => {
-              const [low, high] = [valueIn(band.low, cursor.place), valueIn(band.high, cursor.place)];
-              if (low === null || high === null) return null;
-              return (
-                <p key={band.key} className="figures whitespace-nowrap text-quiet text-xs">
-                  draws {formatQuantity(low, unit, 4)} to {formatQuantity(high, unit, 4)}
-                </p>
-              );
-            }),
-        )}
         {bound !== null && (
           <p className="figures whitespace-nowrap text-quiet text-xs">
             proved within {formatQuantity(bound, "V", 2)}
@@ -91,6 +84,37 @@ export function CursorMarks({ set, storeys, horizontal, x, width, cursor }: Prop
         )}
       </div>
     </div>
+  );
+}
+
+/** The band and the worst draw of a line at a place. */
+function DrawsHere({
+  storey: { bands, worst },
+  line: { key, unit },
+  place,
+}: {
+  readonly storey: StoreyView;
+  readonly line: Line;
+  readonly place: number;
+}) {
+  const band = bands.find((one) => one.key === key);
+  const low = band === undefined ? null : valueIn(band.low, place);
+  const high = band === undefined ? null : valueIn(band.high, place);
+  const own = worst.find((one) => one.key === `${key} worst`);
+  const value = own === undefined ? null : valueIn(own.values, place);
+  return (
+    <>
+      {low !== null && high !== null && (
+        <p className="figures whitespace-nowrap text-quiet text-xs">
+          {formatQuantity(low, unit, 4)} to {formatQuantity(high, unit, 4)}
+        </p>
+      )}
+      {value !== null && (
+        <p className="figures whitespace-nowrap text-quiet text-xs">
+          worst draw {formatQuantity(value, unit, 4)}
+        </p>
+      )}
+    </>
   );
 }
 

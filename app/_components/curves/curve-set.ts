@@ -64,9 +64,10 @@ export function curveSet(source: CurveSource): CurveSet | null {
 }
 
 /** A reading of the name of a trace stands for it, as a later line of the netlist could not. */
-function tracesOf({ traces, readings = [] }: CurveSource): CurveColumn[] {
+function tracesOf({ traces, readings = [], read = [] }: CurveSource): CurveColumn[] {
   const shown = new Set(traces.map(({ name }) => name));
-  const below = readings.filter(({ name, per }) => per === "point" && !shown.has(name));
+  const perPoint = [...readings.filter(({ per }) => per === "point"), ...read];
+  const below = perPoint.filter(({ name }) => !shown.has(name));
   return [
     ...traces.map((trace) => ({ ...trace, isReading: false })),
     ...below.map(({ name, unit, values }) => ({ name, unit, values, isReading: true })),

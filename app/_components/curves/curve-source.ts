@@ -38,6 +38,8 @@ export interface CurveSource {
   readonly draws?: number;
   /** Those per point are drawn below the traces. */
   readonly readings?: readonly (CurveTrace & { readonly per: "sweep" | "point" })[];
+  /** The same, where they come as columns by themselves. */
+  readonly read?: readonly CurveTrace[];
   readonly requirements?: readonly CurveRequirement[];
   readonly failures?: readonly Failure[];
   readonly branches?: readonly BranchesDocument[];

@@ -19,6 +19,7 @@ export function drawBehind(ctx: Context, drawing: StoreyDrawing, field: Field): 
   ctx.beginPath();
   ctx.rect(field.left, field.top, field.width, field.height);
   ctx.clip();
+  ctx.setLineDash([]);
   for (const band of drawing.bands) {
     ctx.fillStyle = inkOf(band.style, drawing.colours);
     ctx.globalAlpha = drawing.bands.length > 1 ? 0.1 : 0.16;
@@ -121,6 +122,7 @@ function drawGrid(ctx: Context, drawing: StoreyDrawing, field: Field): void {
 /** A ring on each point of a short line, and on those of a longer one that a line alone would not show. */
 export function drawMarks(ctx: Context, { lines, colours }: StoreyDrawing, field: Field): void {
   ctx.save();
+  ctx.setLineDash([]);
   ctx.fillStyle = colours["--paper"];
   ctx.lineWidth = 1.5 * devicePixelRatio;
   for (const line of lines) {

@@ -1,8 +1,8 @@
-import type { RunDocument } from "@/lib/analyses/result";
-import { fetchDocument } from "./fetch-run";
+import type { ColumnsDocument } from "@/lib/analyses/columns-document";
+import { fetchColumns } from "./fetch-run";
 
 interface Listener {
-  readonly onDocument: (document: RunDocument) => void;
+  readonly onDocument: (document: ColumnsDocument) => void;
   readonly onProblem: (problem: string | null) => void;
 }
 
@@ -58,7 +58,7 @@ export class DocumentFeed {
     this.#wanted = false;
     const began = performance.now();
     try {
-      const answer = await fetchDocument(this.id, this.etag);
+      const answer = await fetchColumns(this.id, this.etag);
       if (this.#closed) return;
       if (answer !== null) {
         this.etag = answer.etag;

@@ -1,3 +1,4 @@
+import { type ColumnsDocument, decodeColumns } from "@/lib/analyses/columns-document";
 import type { RunDocument } from "@/lib/analyses/result";
 import type { PointAccount, RunState } from "./run-shapes";
 
@@ -16,6 +17,18 @@ export async function fetchDocument(
   if (response.status === 304) return null;
   if (!response.ok) throw await refusal(response);
   return { document: await response.json(), etag: response.headers.get("etag") };
+}
+
+/** The same with its columns as numbers of the machine, which is many times as fast for a large run. */
+export async function fetchColumns(
+  id: string,
+  etag: string | null,
+): Promise<{ document: ColumnsDocument; etag: string | null } | null> {
+  const headers: Record<string, string> = etag === null ? {} : { "if-none-match": etag };
+  const response = await fetch(`/api/v1/runs/${id}/columns`, { headers, cache: "no-store" });
+  if (response.status === 304) return null;
+  if (!response.ok) throw await refusal(response);
+  return { document: decodeColumns(await response.arrayBuffer()), etag: response.headers.get("etag") };
 }
 
 export async function fetchSummary(id: string): Promise<RunState> {

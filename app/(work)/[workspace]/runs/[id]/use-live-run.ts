@@ -1,6 +1,7 @@
 "use client";
 
 import { useEffect, useRef, useState } from "react";
+import type { ColumnsDocument } from "@/lib/analyses/columns-document";
 import type { RunDocument } from "@/lib/analyses/result";
 import { DocumentFeed } from "./document-feed";
 import { fetchSummary } from "./fetch-run";
@@ -17,7 +18,7 @@ export interface Found {
 
 interface LiveRun {
   readonly run: RunState;
-  readonly document: RunDocument | null;
+  readonly document: RunDocument | ColumnsDocument | null;
   /** Why the curves could not be brought up to date; null while they are. */
   readonly problem: string | null;
   /** Whether it ended while the page was open and everything of it has arrived. */
@@ -33,7 +34,7 @@ interface LiveRun {
  */
 export function useLiveRun(first: RunState, found: Found | null): LiveRun {
   const [run, setRun] = useState(first);
-  const [document, setDocument] = useState(found?.document ?? null);
+  const [document, setDocument] = useState<RunDocument | ColumnsDocument | null>(found?.document ?? null);
   const [problem, setProblem] = useState<string | null>(null);
   const [finished, setFinished] = useState(false);
   // Only what the page began with: later properties of the server are not newer than what the stream brought.
