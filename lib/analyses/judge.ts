@@ -1,5 +1,6 @@
 import { readAll } from "./readings";
 import { requireAll } from "./requirements";
+import { judgeAtRest } from "./rest";
 import type { ReadingDocument, RequirementDocument, Verdict } from "./result";
 import { type Columns, type Contract, Rows } from "./rows";
 
@@ -19,7 +20,9 @@ export interface Judgement {
 export function judge(contract: Contract, columns: Columns): Judgement {
   const rows = new Rows(contract, columns);
   const readings = readAll(contract, rows);
-  const requirements = requireAll(contract, rows);
+  const followed = requireAll(contract, rows);
+  const isSeeking = contract.plan.seek !== undefined;
+  const requirements = isSeeking ? judgeAtRest(contract, columns, followed) : followed;
   return { readings, requirements, verdict: worstOf(requirements) };
 }
 

@@ -38,7 +38,16 @@ export interface RequirementDocument {
   readonly worst: {
     readonly draw: number;
     readonly at: readonly { readonly knob: string; readonly unit: string; readonly value: number }[];
+    /** The branch of that row on which it lies, counted from 0, where the sweep does not follow it. */
+    readonly branch?: number;
   } | null;
+  /**
+   * Where the text seeks several operating points, the above is over all stable ones that were found; this is what it comes to at those alone
+   * that the sweep follows.
+   */
+  readonly followed?: { readonly verdict: Verdict; readonly margin: number | null };
+  /** What a reader must know besides, in sentences: that it is broken where the sweep does not go, or that points are unknown. */
+  readonly remark?: string;
   /** The random draws in which it holds, where there are any. */
   readonly yield?: Yield;
   /** The share of the draws in which it must hold, 0 to 1; null: in every one. */

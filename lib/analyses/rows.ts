@@ -2,6 +2,7 @@ import { PointValues } from "@/lib/circuit/values";
 import type { Reduced, Typed, Window } from "@/lib/language/ast";
 import { evaluate, type Scope } from "@/lib/language/evaluate";
 import { isInWindow, placesWithin } from "@/lib/language/window";
+import type { BranchesDocument } from "./branches-document";
 import type { Job } from "./compile";
 import { drawOf, placeOnAxes } from "./plan";
 import { Course, reach, reduce } from "./reductions";
@@ -12,6 +13,8 @@ export type Contract = Pick<Job, "design" | "plan">;
 /** The columns of a run that a contract is judged on: one a trace, in the order of the plan, one value a point, NaN where there is none. */
 export interface Columns {
   readonly traces: readonly Float64Array[];
+  /** Where the text seeks several operating points: the branches, one document a row, null where a row is not in yet. */
+  readonly branches?: readonly (BranchesDocument | null)[] | null;
 }
 
 /** A reading over a whole run: one value a row, or one a point where it is a trace itself. NaN where it is not known. */

@@ -23,11 +23,16 @@ export function branchRows({ branches = [], axes, traces }: RunDocument): string
         [String(k + 1), ...outer].join(", "),
         ends.join(" to "),
         state,
-        values.length === 0 ? "" : range.map((value) => formatQuantity(value, unit)).join(" to "),
+        values.length === 0 ? "" : range.map((value) => formatQuantity(rounded(value), unit)).join(" to "),
       ];
     });
   });
   return [["branch", `over ${first?.knob ?? ""}`.trim(), "state", traces[0]?.name ?? ""], ...rows];
+}
+
+/** Below the floor of the acceptance test there is nothing but rounding. */
+function rounded(value: number): number {
+  return Math.abs(value) < 1e-18 ? 0 : value;
 }
 
 /** Where branches turn back, and whether one may be missing. */

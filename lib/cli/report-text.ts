@@ -32,6 +32,7 @@ export function reportText(
     ...section(paint, traces(document, curve)),
     ...section(paint, readings(document)),
     ...section(paint, requirements(document, paint)),
+    ...remarks(document),
     ...section(paint, budget),
     ...section(paint, branchRows(document)),
     ...section(paint, foldRows(document)),
@@ -123,4 +124,9 @@ function requirements({ requirements: judged }: RunDocument, paint: Paint): stri
     ["requirement", paint("faint", "verdict".padEnd(7)), "margin", "at its worst", "holds in"],
     ...rows,
   ];
+}
+
+/** What must be known of requirements besides their verdicts. */
+function remarks({ requirements: judged }: RunDocument): string[] {
+  return judged.flatMap(({ label, remark }) => (remark === undefined ? [] : [`  ${label}: ${remark}`]));
 }

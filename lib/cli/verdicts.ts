@@ -14,7 +14,9 @@ export function knobValue(knob: string, value: number, unit: string): string {
 export function worstPlace({ worst }: RequirementDocument): string {
   if (worst === null) return "";
   const at = worst.at.map(({ knob, unit, value }) => `${knob} = ${knobValue(knob, value, unit)}`);
-  return [...at, ...(worst.draw === 0 ? [] : [`draw ${worst.draw}`])].join(", ");
+  const draw = worst.draw === 0 ? [] : [`draw ${worst.draw}`];
+  const branch = worst.branch === undefined ? [] : [`branch ${worst.branch + 1}`];
+  return [...at, ...draw, ...branch].join(", ");
 }
 
 /** The yield with its interval of 95 % confidence; "" without draws. */
@@ -27,11 +29,16 @@ export function yieldText({ yield: found }: RequirementDocument): string {
 /** One sentence about a requirement that does not hold. */
 function complaint(line: RequirementDocument): string {
   if (line.verdict === "no data")
-    return `${line.label}: no data; a point or reading that it needs is not solved.`;
+    return withRemark(line, `${line.label}: no data; a point or reading that it needs is not solved.`);
   const margin = line.margin === null ? "" : ` by ${formatQuantity(Math.abs(line.margin), line.unit)}`;
   const place = worstPlace(line);
   const share = yieldText(line);
-  return `${line.label}: broken${margin}${place === "" ? "" : ` at ${place}`}${share === "" ? "" : `; holds in ${share}`}.`;
+  const more = `${place === "" ? "" : ` at ${place}`}${share === "" ? "" : `; holds in ${share}`}`;
+  return withRemark(line, `${line.label}: broken${margin}${more}.`);
+}
+
+function withRemark({ remark }: RequirementDocument, sentence: string): string {
+  return remark === undefined ? sentence : `${sentence} ${remark}`;
 }
 
 /** The requirements of a run that do not hold, each at its place in the text. */

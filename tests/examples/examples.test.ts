@@ -1,5 +1,6 @@
 import { readdirSync, readFileSync } from "node:fs";
 import { describe, expect, test } from "vitest";
+import { branchesDocument } from "@/lib/analyses/branches-document";
 import { compile } from "@/lib/analyses/compile";
 import { toDocument } from "@/lib/analyses/document";
 import type { RunDocument } from "@/lib/analyses/result";
@@ -32,7 +33,14 @@ function documentOf(name: string): RunDocument {
     residual: _residual,
     ...columns
   } = solveRange(job, 0, plan.points);
-  const document = toDocument({ plan, design, text, ...columns, diagnostics });
+  const document = toDocument({
+    plan,
+    design,
+    text,
+    ...columns,
+    branches: branchesDocument(job),
+    diagnostics,
+  });
   documents.set(name, document);
   return document;
 }

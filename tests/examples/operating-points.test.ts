@@ -3,14 +3,14 @@ import { describe, expect, test } from "vitest";
 import { type Branches, branchesOf } from "@/lib/analyses/branches";
 import { compile } from "@/lib/analyses/compile";
 
-function branchesIn(name: string): Branches {
+function branchesIn(name: string, from = 0): Branches {
   const { job } = compile(readFileSync(`examples/${name}.swn`, "utf8"));
-  return branchesOf(job!);
+  return branchesOf(job!, from);
 }
 
 describe("the examples with several operating points", () => {
   test("the bandgap reference has a zero state and a working one, and an unstable point between them", () => {
-    const { branches, folds, isComplete } = branchesIn("bandgap-start-up");
+    const { branches, folds, isComplete } = branchesIn("bandgap-start-up", 13);
     expect(folds).toEqual([]);
     expect(isComplete).toBe(true);
     const middle = branches.map(({ points }) => points[6]!).sort((a, b) => a.traces[0]! - b.traces[0]!);
@@ -18,6 +18,16 @@ describe("the examples with several operating points", () => {
     expect(middle[0]!.traces[0]!).toBeLessThan(1e-3);
     expect(middle[2]!.traces[0]!).toBeGreaterThan(1.17);
     for (const { points } of branches) expect(points).not.toContain(null);
+  });
+
+  test("with its start-up resistor the working state alone is left", () => {
+    const { branches, isComplete } = branchesIn("bandgap-start-up");
+    expect(isComplete).toBe(true);
+    expect(branches).toHaveLength(1);
+    for (const point of branches[0]!.points) {
+      expect(point).toMatchObject({ isStable: true, index: 1 });
+      expect(point!.traces[0]!).toBeGreaterThan(1.17);
+    }
   });
 
   test("the trigger has its thresholds at the folds, and three points between them", () => {
