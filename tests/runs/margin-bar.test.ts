@@ -1,6 +1,7 @@
 import { describe, expect, test } from "vitest";
 import { marginPlaces } from "@/app/_components/ui/margin-scale";
 import { limitsInWords, marginSentence, worstInWords } from "@/app/_components/ui/margin-words";
+import { onePrefix } from "@/app/_components/ui/one-prefix";
 import { allowedBands } from "@/lib/analyses/allowed-bands";
 import type { RequirementDocument } from "@/lib/analyses/result";
 
@@ -67,12 +68,24 @@ describe("places on a margin bar", () => {
   });
 });
 
+describe("values with one prefix", () => {
+  test.each([
+    [[0.995, 1.005], "V", 4, ["0.995", "1.005"], "V"],
+    [[-0.0005, 0.00064], "V", 3, ["−500", "640"], "µV"],
+    [[0.0009999996, 0], "V", 3, ["1", "0"], "mV"],
+    [[0, 0], "A", 3, ["0", "0"], "A"],
+    [[0.02, 1.5], "1", 3, ["0.02", "1.5"], ""],
+  ])("%o %s", (values, unit, digits, texts, shared) => {
+    expect(onePrefix(values, unit, digits)).toEqual({ texts, unit: shared });
+  });
+});
+
 describe("a requirement in words", () => {
   const plain = (text: string) => text.replaceAll("\u202f", " ");
 
   test("names verdict, worst value with its place, limits, margin and spread", () => {
     expect(plain(marginSentence(BEND))).toBe(
-      "log conformance is broken; worst value 640 µV at I_sample 10 nA, temperature 40 °C, draw 211; allowed within ±500 µV; missed by 140 µV; all values −100 µV to 640 µV, nominal 310 µV.",
+      "log conformance is broken; worst value 640 µV at I_sample 10 nA, temperature 40 °C, draw 211; allowed within ±500 µV; missed by 140 µV; all values −100 to 640 µV, nominal 310 µV.",
     );
   });
 
@@ -80,7 +93,7 @@ describe("a requirement in words", () => {
     [{ low: null, high: 0.002 }, "at most 2 mV"],
     [{ low: 4.9, high: null }, "at least 4.9 V"],
     [{ low: -0.01, high: 0.01 }, "within ±10 mV"],
-    [{ low: 0.99, high: 1.01 }, "990 mV to 1.01 V"],
+    [{ low: 0.99, high: 1.01 }, "0.99 to 1.01 V"],
     [{ low: null, high: null }, ""],
   ])("limits %o", (allowed, words) => {
     expect(plain(limitsInWords({ ...BEND, allowed }))).toBe(words);

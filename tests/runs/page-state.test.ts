@@ -12,6 +12,11 @@ const USUAL: PageState = {
   point: null,
   page: 1,
   failed: false,
+  only: null,
+  band: true,
+  worst: null,
+  subject: null,
+  setting: null,
 };
 
 const read = (text: string) => readPageState(new URLSearchParams(text));
@@ -25,7 +30,7 @@ describe("the address of a run's page", () => {
   it("gives back every state that it was written from", () => {
     const scale = fc.constantFrom("linear" as const, "logarithmic" as const);
     const count = fc.nat(1_000_000);
-    const state: fc.Arbitrary<PageState> = fc.record({
+    const state: fc.Arbitrary<Required<PageState>> = fc.record({
       traces: fc.option(fc.uniqueArray(fc.constantFrom("out", "S.Q.c.i", "lr.v - ls.v", "a,b"))),
       families: fc.option(fc.uniqueArray(fc.nat(90))),
       x: fc.option(scale),
@@ -42,6 +47,11 @@ describe("the address of a run's page", () => {
       point: fc.option(count),
       page: count.map((n) => n + 1),
       failed: fc.boolean(),
+      only: fc.constantFrom(null, { trace: "a,b" }, { family: 7 }),
+      band: fc.boolean(),
+      worst: fc.option(fc.constantFrom("", "log conformance", "y <= 4 V")),
+      subject: fc.option(fc.constantFrom("read:scale", "require:0")),
+      setting: fc.option(count),
     });
     fc.assert(
       fc.property(state, (one) => {

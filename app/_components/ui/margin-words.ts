@@ -1,6 +1,7 @@
-import { formatKnob, formatValue } from "@/app/_components/curves/figures-in-words";
+import { formatKnob } from "@/app/_components/curves/figures-in-words";
 import type { RequirementDocument } from "@/lib/analyses/result";
 import { formatAxis, formatQuantity } from "@/lib/units/quantity";
+import { spanInWords } from "./one-prefix";
 
 /** Significant digits of a value that stands beside its limits. */
 const DIGITS = 3;
@@ -11,8 +12,7 @@ export function limitsInWords({ allowed, unit }: RequirementDocument): string {
   const show = (value: number) => formatAxis(Number(value.toPrecision(6)), unit);
   if (low === null) return high === null ? "" : `at most ${show(high)}`;
   if (high === null) return `at least ${show(low)}`;
-  if (low === -high) return `within ±${show(high)}`;
-  return `${show(low)} to ${show(high)}`;
+  return low === -high ? `within ±${show(high)}` : spanInWords(low, high, unit, 6);
 }
 
 /** The worst value in short: as many digits as tell it from the limit that it is nearest to. */
@@ -50,15 +50,9 @@ export function marginSentence(requirement: RequirementDocument): string {
     parts.push(margin < 0 ? `missed by ${size}` : `margin ${size}`);
   }
   if (value.low !== null && value.high !== null && value.low !== value.high) {
-    parts.push(
-      `all values ${formatValueShort(value.low, unit)} to ${formatValueShort(value.high, unit)}, nominal ${
-        value.nominal === null ? "not known" : formatValueShort(value.nominal, unit)
-      }`,
-    );
+    const all = spanInWords(value.low, value.high, unit, DIGITS);
+    const nominal = value.nominal === null ? "not known" : formatQuantity(value.nominal, unit, DIGITS);
+    parts.push(`all values ${all}, nominal ${nominal}`);
   }
   return `${parts.join("; ")}.`;
-}
-
-function formatValueShort(value: number, unit: string): string {
-  return value === 0 ? formatValue(0, unit) : formatQuantity(value, unit, DIGITS);
 }

@@ -1,4 +1,4 @@
-import type { CurveView } from "@/app/_components/curves/curve-view";
+import type { CurveView, Isolated } from "@/app/_components/curves/curve-view";
 import type { Scale } from "@/app/_components/curves/scale";
 
 /** What the address of a run's page keeps: how the curves are looked at, which tab is open, which point is chosen. */
@@ -10,6 +10,9 @@ export interface PageState extends CurveView {
   readonly page: number;
   /** Whether that table shows failed points only. */
   readonly failed: boolean;
+  /** Whose spread is looked at (subjects.ts), and at which setting of the outer knobs; null for the usual ones. */
+  readonly subject: string | null;
+  readonly setting: number | null;
 }
 
 /** The state an address names; what is missing or makes no sense is left as it usually is. */
@@ -19,6 +22,7 @@ export function readPageState(search: URLSearchParams): PageState {
   const zoom = { from: numberIn(search, "from"), to: numberIn(search, "to") };
   const point = numberIn(search, "point");
   const page = numberIn(search, "page");
+  const setting = numberIn(search, "spread-at");
   return {
     traces: search.has("trace") ? search.getAll("trace").filter((name) => name !== "") : null,
     families: settings === "" ? [] : families,
@@ -30,6 +34,11 @@ export function readPageState(search: URLSearchParams): PageState {
     point: point !== null && isCount(point) ? point : null,
     page: page !== null && isCount(page) && page > 0 ? page : 1,
     failed: search.get("rows") === "failed",
+    only: isolatedOf(search),
+    band: search.get("band") !== "off",
+    worst: search.get("worst"),
+    subject: search.get("spread") || null,
+    setting: setting !== null && isCount(setting) ? setting : null,
   };
 }
 
@@ -49,11 +58,26 @@ export function writePageState(state: PageState): string {
   if (state.point !== null) search.set("point", String(state.point));
   if (state.page !== 1) search.set("page", String(state.page));
   if (state.failed) search.set("rows", "failed");
+  if (state.only != null) {
+    if ("trace" in state.only) search.set("only", state.only.trace);
+    else search.set("only-setting", String(state.only.family));
+  }
+  if (state.band === false) search.set("band", "off");
+  if (state.worst != null) search.set("worst", state.worst);
+  if (state.subject !== null) search.set("spread", state.subject);
+  if (state.setting !== null) search.set("spread-at", String(state.setting));
   const text = search.toString();
   return text === "" ? "" : `?${text}`;
 }
 
 const SHORT = { linear: "linear", logarithmic: "log" } as const;
+
+function isolatedOf(search: URLSearchParams): Isolated | null {
+  const trace = search.get("only");
+  if (trace) return { trace };
+  const family = numberIn(search, "only-setting");
+  return family !== null && isCount(family) ? { family } : null;
+}
 
 function scaleOf(text: string | null): Scale | null {
   return text === "log" ? "logarithmic" : text === "linear" ? "linear" : null;

@@ -5,6 +5,7 @@ import { can } from "@/lib/permissions/can";
 import { findVoltageSpan } from "@/lib/services/runs/find-voltage-span";
 import { getPoint } from "@/lib/services/runs/get-point";
 import { getRun } from "@/lib/services/runs/get-run";
+import { getRunContext } from "@/lib/services/runs/get-run-context";
 import { getRunDocument } from "@/lib/services/runs/get-run-document";
 import { waitForPoints } from "@/lib/services/runs/wait-for-points";
 import { answered } from "../../../answered";
@@ -52,10 +53,11 @@ export default async function RunPage({ params, searchParams }: Props) {
     for (const one of [value ?? []].flat()) search.append(name, one);
   }
   const state = readPageState(search);
-  const [found, point, span] = await Promise.all([
+  const [found, point, span, context] = await Promise.all([
     isSmall(run) ? getRunDocument(actor, id) : null,
     state.point === null || state.point >= run.points ? null : getPoint(actor, id, state.point),
     findVoltageSpan(actor, id),
+    getRunContext(actor, id),
   ]);
   return (
     <RunView
@@ -63,6 +65,7 @@ export default async function RunPage({ params, searchParams }: Props) {
       workspace={workspace}
       first={run}
       found={found && { document: found.document, etag: found.etag }}
+      context={context}
       point={point}
       span={span}
       search={search.toString()}

@@ -1,6 +1,7 @@
 import type { ReactNode } from "react";
 import { formatKnob, formatValue } from "@/app/_components/curves/figures-in-words";
 import { StateMark } from "@/app/_components/ui/state-mark";
+import { outcomeInWords } from "@/lib/analyses/reasons";
 import { formatQuantity } from "@/lib/units/quantity";
 import type { PointAccount } from "./run-shapes";
 
@@ -17,7 +18,7 @@ export function PointAccountView({ account }: { readonly account: PointAccount }
         >
           <div>
             <p className={outcome === null ? "font-semibold" : "font-semibold text-broken"}>
-              {outcome === null ? "Not solved" : `Failed: ${outcome}`}
+              {outcome === null ? "Not solved" : `Failed: ${outcomeInWords(outcome)}`}
             </p>
             <p className="text-quiet">{failure}</p>
           </div>
@@ -33,7 +34,7 @@ export function PointAccountView({ account }: { readonly account: PointAccount }
           <Row name="outcome">
             <span className="inline-flex items-baseline gap-1.5 text-holds">
               <StateMark shape="check" />
-              converged
+              {outcomeInWords(outcome)}
             </span>
           </Row>
         )}
@@ -97,7 +98,7 @@ function Row({ name, children }: { readonly name: string; readonly children: Rea
 }
 
 /** Two digits and a power of ten, for a size that is near nothing. */
-function Power({ value }: { readonly value: number }) {
+export function Power({ value }: { readonly value: number }) {
   if (value === 0) return "0";
   const [digits, exponent] = value.toExponential(1).split("e");
   return (

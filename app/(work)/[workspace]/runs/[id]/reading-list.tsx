@@ -1,79 +1,137 @@
-import { formatKnob, formatValue } from "@/app/_components/curves/figures-in-words";
+import { formatValue } from "@/app/_components/curves/figures-in-words";
 import { Cell, HeadCell, Table, TableFrame } from "@/app/_components/ui/table";
-import type { Budget } from "@/lib/analyses/budget";
 import type { AxisDocument, ReadingDocument } from "@/lib/analyses/result";
-import { Costs } from "./costs";
+import { LineLink } from "./requirement-list";
+import { settingsOf } from "./spread/subjects";
+import type { TextLinks } from "./text-links";
 
 interface Props {
   readonly readings: readonly ReadingDocument[];
   /** Of the run; the readings go over all but the first. */
   readonly axes: readonly AxisDocument[];
-  readonly budgets: readonly Budget[];
+  readonly links: TextLinks;
 }
 
-/** The readings of the nominal design, how far the draws spread them, and which parts cost each the most. */
-export function ReadingList({ readings, axes, budgets }: Props) {
+/** Settings that stand side by side as columns; more stand below each other. */
+const COLUMNS = 6;
+
+/** The readings of the nominal design at each setting, and how far the draws spread them. */
+export function ReadingList({ readings, axes, links }: Props) {
   const numbers = readings.filter(({ per }) => per === "sweep");
   if (numbers.length === 0) return null;
-  const settings = axes.slice(1).reduce((product, { values }) => product * values.length, 1);
-  const spread = numbers.some(({ values }) => values.length > settings);
+  const settings = settingsOf(axes);
+  const across = settings.length <= COLUMNS;
   return (
     <section aria-labelledby="readings">
       <h2 id="readings" className="caption">
         Readings
       </h2>
-      <TableFrame label="Readings" className="mt-1">
-        <Table aria-labelledby="readings">
-          <thead>
-            <tr>
-              <HeadCell>Reading</HeadCell>
-              <HeadCell figure>Nominal</HeadCell>
-              {spread && <HeadCell figure>Over the draws</HeadCell>}
-            </tr>
-          </thead>
-          <tbody>
-            {numbers.flatMap((reading) =>
-              Array.from({ length: settings }, (_, row) => (
-                // biome-ignore lint/suspicious/noArrayIndexKey: the settings of a run never change
-                <tr key={`${reading.name} ${row}`}>
-                  <Cell>
-                    {reading.name} <span className="text-quiet text-xs">{settingOf(axes, row)}</span>
-                    <Costs budget={budgets.find((one) => one.reading === reading.name && one.row === row)} />
-                  </Cell>
-                  <Cell figure>{formatValue(reading.values[row] ?? null, reading.unit)}</Cell>
-                  {spread && <Cell figure>{spreadOf(reading, settings, row)}</Cell>}
-                </tr>
-              )),
-            )}
-          </tbody>
-        </Table>
+      <TableFrame label="Readings" className="mt-1 max-h-112 overflow-y-auto">
+        {across ? (
+          <Across numbers={numbers} settings={settings} links={links} />
+        ) : (
+          <Down numbers={numbers} settings={settings} />
+        )}
       </TableFrame>
     </section>
   );
 }
 
-function settingOf(axes: readonly AxisDocument[], row: number): string {
-  let rest = row;
-  return axes
-    .slice(1)
-    .map((axis) => {
-      const value = axis.values[rest % axis.values.length]!;
-      rest = Math.floor(rest / axis.values.length);
-      return `${axis.knob} ${formatKnob(axis, value, 4)}`;
-    })
-    .join(", ");
+interface TableProps {
+  readonly numbers: readonly ReadingDocument[];
+  readonly settings: readonly string[];
+}
+
+/** A row a reading, a column a setting. */
+function Across({ numbers, settings, links }: TableProps & { readonly links: TextLinks }) {
+  return (
+    <Table aria-labelledby="readings">
+      <thead>
+        <tr>
+          <HeadCell>Reading</HeadCell>
+          {settings.map((words) => (
+            <HeadCell key={words} figure className="figures font-normal!">
+              {words === "" ? "Nominal" : words}
+            </HeadCell>
+          ))}
+        </tr>
+      </thead>
+      <tbody>
+        {numbers.map((reading) => (
+          <tr key={reading.name}>
+            <Cell className="break-words">
+              {reading.name}{" "}
+              <LineLink line={links.readingLines[reading.name]} links={links} label={reading.name} />
+            </Cell>
+            {settings.map((words, row) => (
+              <Cell key={words} figure>
+                {formatValue(reading.values[row] ?? null, reading.unit)}
+                <Spread reading={reading} settings={settings.length} row={row} />
+              </Cell>
+            ))}
+          </tr>
+        ))}
+      </tbody>
+    </Table>
+  );
+}
+
+/** A row a setting, a column a reading. */
+function Down({ numbers, settings }: TableProps) {
+  return (
+    <Table aria-labelledby="readings">
+      <thead>
+        <tr>
+          <HeadCell>Setting</HeadCell>
+          {numbers.map(({ name }) => (
+            <HeadCell key={name} figure>
+              {name}
+            </HeadCell>
+          ))}
+        </tr>
+      </thead>
+      <tbody>
+        {settings.map((words, row) => (
+          <tr key={words}>
+            <Cell className="figures">{words}</Cell>
+            {numbers.map((reading) => (
+              <Cell key={reading.name} figure>
+                {formatValue(reading.values[row] ?? null, reading.unit)}
+                <Spread reading={reading} settings={settings.length} row={row} />
+              </Cell>
+            ))}
+          </tr>
+        ))}
+      </tbody>
+    </Table>
+  );
+}
+
+interface SpreadProps {
+  readonly reading: ReadingDocument;
+  readonly settings: number;
+  readonly row: number;
 }
 
 /** The least and the most of a setting over the random draws; the first rows are the nominal design. */
-function spreadOf({ values, unit }: ReadingDocument, settings: number, row: number): string {
+function Spread({ reading: { values, unit }, settings, row }: SpreadProps) {
   const drawn: number[] = [];
+  let unknown = 0;
   for (let at = settings + row; at < values.length; at += settings) {
     const value = values[at];
-    if (value === null || value === undefined) return "no data";
-    drawn.push(value);
+    if (value === null || value === undefined) unknown++;
+    else drawn.push(value);
   }
-  if (drawn.length === 0) return "";
+  if (drawn.length === 0 && unknown === 0) return null;
+  if (drawn.length === 0) return <span className="block text-quiet text-xs">no draw has it</span>;
   const least = drawn.reduce((a, b) => Math.min(a, b));
   const most = drawn.reduce((a, b) => Math.max(a, b));
-  return `${formatValue(least, unit)} to ${formatValue(most, unit)}`;
+  return (
+    <span className="block text-quiet text-xs">
+      {formatValue(least, unit)}
+      <br />
+      <span className="sr-only">over the draws </span>to {formatValue(most, unit)}
+      {unknown > 0 && `, ${unknown} unknown`}
+    </span>
+  );
 }

@@ -1,37 +1,71 @@
-import { formatKnob } from "@/app/_components/curves/figures-in-words";
+import Link from "next/link";
+import { Button } from "@/app/_components/ui/button";
+import { formatCount } from "@/app/_components/ui/count";
+import { MarginBar } from "@/app/_components/ui/margin-bar";
+import { limitsInWords, marginSentence, placeInWords, worstInWords } from "@/app/_components/ui/margin-words";
 import { StateBadge } from "@/app/_components/ui/state-badge";
-import type { Budget } from "@/lib/analyses/budget";
 import type { RequirementDocument } from "@/lib/analyses/result";
 import { formatQuantity } from "@/lib/units/quantity";
-import { Costs } from "./costs";
+import type { TextLinks } from "./text-links";
 
 interface Props {
   readonly requirements: readonly RequirementDocument[];
-  /** Error budgets of what the requirements are about, by their labels. */
-  readonly causes: readonly Budget[];
+  readonly links: TextLinks;
+  /** Puts cursor and draw to the worst place of a requirement. */
+  readonly onPlace: (worst: NonNullable<RequirementDocument["worst"]>, label: string) => void;
 }
 
-/**
- * What the netlist requires and how it came out: verdict, margin, the worst place, the yield over the draws, and the parts whose
- * tolerances move it the most.
- */
-export function RequirementList({ requirements, causes }: Props) {
+/** A requirement of a text that seeks says more: what became of it on the solutions that the sweep does not follow. */
+type Remarked = RequirementDocument & { readonly remark?: string };
+
+const ORDER = { broken: 0, "no data": 1, holds: 2 } as const;
+
+/** What the netlist requires and how it came out, the broken first: verdict, margin bar, worst value with its place, yield. */
+export function RequirementList({ requirements, links, onPlace }: Props) {
   if (requirements.length === 0) return null;
+  const numbered = requirements.map((one, index) => ({ one: one as Remarked, index }));
+  numbered.sort((a, b) => ORDER[a.one.verdict] - ORDER[b.one.verdict] || a.index - b.index);
   return (
     <section aria-labelledby="requirements">
-      <h2 id="requirements" className="caption">
-        Requirements
-      </h2>
+      <Headline requirements={requirements} />
       <ul className="mt-2 border-t">
-        {requirements.map((one, index) => (
-          // biome-ignore lint/suspicious/noArrayIndexKey: two may have one label; the order never changes
-          <li key={index} className="grid gap-1 border-b py-2.5">
-            <div className="flex flex-wrap items-baseline justify-between gap-x-4">
-              <span className="min-w-0 break-words font-semibold text-sm">{one.label}</span>
+        {numbered.map(({ one, index }) => (
+          <li key={index} className="grid gap-1 border-b py-2.5" data-requirement={one.verdict}>
+            <p className="sr-only">{marginSentence(one)}</p>
+            <div
+              aria-hidden="true"
+              className="grid grid-cols-[minmax(0,1fr)_auto] items-center gap-x-3 gap-y-1 sm:grid-cols-[5rem_minmax(0,1fr)_minmax(5rem,8rem)_auto]"
+            >
               <StateBadge state={one.verdict} />
+              <span className="order-first min-w-0 break-words font-semibold text-sm sm:order-none">
+                {one.label}
+              </span>
+              <span className="col-span-2 sm:col-span-1">
+                <MarginBar requirement={one} decorative />
+              </span>
+              <span className="figures col-span-2 text-right leading-tight sm:col-span-1 sm:min-w-28">
+                {worstInWords(one)}
+                <span className="block text-quiet text-xs">{limitsInWords(one)}</span>
+              </span>
             </div>
-            <p className="text-quiet text-sm">{inWords(one)}</p>
-            <Costs budget={causes.find(({ reading }) => reading === one.label)} />
+            <p className="flex flex-wrap items-baseline gap-x-3 text-quiet text-xs sm:pl-[5.75rem]">
+              <Remainder one={one} />
+              {one.worst !== null && placeInWords(one) !== "" && (
+                <Button
+                  size="small"
+                  tone="quiet"
+                  className="figures min-h-6! px-1! font-normal! underline decoration-edge underline-offset-3"
+                  aria-label={`Show the worst place of ${one.label}: ${placeInWords(one)}`}
+                  onClick={() => onPlace(one.worst!, one.label)}
+                >
+                  {placeInWords(one)}
+                </Button>
+              )}
+              <LineLink line={links.requirementLines[index]} links={links} label={one.label} />
+            </p>
+            {one.remark !== undefined && (
+              <p className="border-nodata border-l-2 pl-2 text-xs sm:ml-[5.75rem]">{one.remark}</p>
+            )}
           </li>
         ))}
       </ul>
@@ -39,22 +73,69 @@ export function RequirementList({ requirements, causes }: Props) {
   );
 }
 
-function inWords({ margin, unit, worst, verdict, yield: share }: RequirementDocument): string {
+/** "One requirement is broken, 3 hold", in the colour of the worst. */
+function Headline({ requirements }: Pick<Props, "requirements">) {
+  const count = (verdict: RequirementDocument["verdict"]) =>
+    requirements.filter((one) => one.verdict === verdict).length;
+  const [broken, unknown, holds] = [count("broken"), count("no data"), count("holds")];
+  const held = holds === 0 ? "" : `${formatCount(holds)} ${holds === 1 ? "holds" : "hold"}`;
+  const [first, ink, rest] =
+    broken > 0
+      ? [countedAs(broken, "is broken", "are broken"), "text-broken", held]
+      : unknown > 0
+        ? [countedAs(unknown, "has no data", "have no data"), "text-nodata", held]
+        : [requirements.length === 1 ? "The requirement holds" : "All requirements hold", "text-holds", ""];
+  const between = broken > 0 && unknown > 0 ? `${formatCount(unknown)} without data` : "";
+  return (
+    <h2 id="requirements" className="text-base">
+      <span className={ink}>{first}</span>
+      <span className="font-normal text-quiet text-sm">
+        {[between, rest].filter(Boolean).map((words) => ` · ${words}`)}
+      </span>
+    </h2>
+  );
+}
+
+function countedAs(count: number, one: string, many: string): string {
+  return count === 1 ? `One requirement ${one}` : `${formatCount(count)} requirements ${many}`;
+}
+
+/** Margin and yield. */
+function Remainder({ one }: { readonly one: RequirementDocument }) {
+  const { margin, unit, verdict, yield: found, share } = one;
+  const percent = (part: number) => `${Number((100 * part).toFixed(1))}\u202f%`;
   const parts: string[] = [];
-  if (margin === null) {
-    parts.push(verdict === "no data" ? "A point that it needs is not solved" : "Without a margin");
-  } else if (margin < 0) parts.push(`Missed by ${formatQuantity(-margin, unit)}`);
-  else parts.push(`Margin ${formatQuantity(margin, unit)}`);
-  if (worst !== null) {
-    const at = worst.at.map((knob) => `${knob.knob} ${formatKnob(knob, knob.value, 4)}`);
-    if (worst.draw > 0) at.push(`draw ${worst.draw}`);
-    if (at.length > 0) parts.push(`worst at ${at.join(", ")}`);
-  }
-  if (share !== undefined) {
-    const percent = (part: number) => `${(100 * part).toFixed(1)} %`;
+  if (margin === null)
+    parts.push(verdict === "no data" ? "a point that it needs is not solved" : "without a margin");
+  else if (margin < 0) parts.push(`missed by ${formatQuantity(-margin, unit, 3)}`);
+  else parts.push(`margin ${formatQuantity(margin, unit, 3)}`);
+  if (found !== undefined) {
+    const needed = share == null ? "" : `, ${percent(share)} needed`;
     parts.push(
-      `holds in ${share.holds} of ${share.of} draws, so in ${percent(share.low)} to ${percent(share.high)} of parts (95 % confidence)`,
+      `${formatCount(found.holds)} of ${formatCount(found.of)} draws hold${needed}: ${percent(found.low)} to ${percent(found.high)} of parts (95\u202f% confidence)`,
     );
   }
-  return `${parts.join("; ")}.`;
+  return <span>{parts.join("; ")}</span>;
+}
+
+export function LineLink({
+  line,
+  links,
+  label,
+}: {
+  readonly line: number | undefined;
+  readonly links: TextLinks;
+  readonly label: string;
+}) {
+  if (line === undefined) return null;
+  return (
+    <Link
+      href={links.lineHref(line)}
+      prefetch={false}
+      aria-label={`Line ${line} of the netlist, where ${label} stands`}
+      className="figures inline-flex min-h-6 items-center text-xs underline decoration-edge underline-offset-3 hover:decoration-ink"
+    >
+      line {line}
+    </Link>
+  );
 }

@@ -9,6 +9,7 @@ import { PageHeader } from "@/app/_components/ui/page-header";
 import { formatSpan } from "@/app/_components/ui/span-of-time";
 import { cancel, runAgain } from "./fetch-run";
 import { isLive, type RunState } from "./run-shapes";
+import { StaleNotice } from "./stale-notice";
 
 interface Props {
   readonly workspace: string;
@@ -16,10 +17,15 @@ interface Props {
   readonly mayStart: boolean;
   readonly mayCancel: boolean;
   readonly onRun: (run: RunState) => void;
+  /** Solved points with a proof; null while that is not known. */
+  readonly proved: number | null;
+  /** Number of the netlist's newest revision. */
+  readonly latestRevision: number;
 }
 
 /** What was run, in one line, and what one can do about it. */
-export function RunHeader({ workspace, run, mayStart, mayCancel, onRun }: Props) {
+export function RunHeader(props: Props) {
+  const { workspace, run, mayStart, mayCancel, onRun, proved, latestRevision } = props;
   const router = useRouter();
   const [problem, setProblem] = useState<string | null>(null);
   const [starting, start] = useTransition();
@@ -36,13 +42,32 @@ export function RunHeader({ workspace, run, mayStart, mayCancel, onRun }: Props)
       );
     }
   };
+  const mayAgain = !isLive(run.status) && mayStart;
+  const againButton = (words: string) => (
+    <Button
+      busy={starting}
+      onClick={() =>
+        start(
+          attempt(async () => {
+            const { id } = await runAgain(run);
+            router.push(`/${workspace}/runs/${id}`);
+          }),
+        )
+      }
+    >
+      {starting ? "Queueing…" : words}
+    </Button>
+  );
   return (
     <>
       <PageHeader
         title={run.title}
-        remark={`run ${run.number}, revision ${run.revision}, ${sizeInWords(run)}`}
+        remark={`revision ${run.revision} · run ${run.number} · ${sizeInWords(run, proved)}`}
         actions={
           <>
+            <ButtonLink href={`/${workspace}/runs/compare?runs=${run.id}`} prefetch={false}>
+              Compare
+            </ButtonLink>
             {isLive(run.status) && mayCancel && (
               <Button
                 tone="danger"
@@ -52,26 +77,18 @@ export function RunHeader({ workspace, run, mayStart, mayCancel, onRun }: Props)
                 {cancelling ? "Cancelling…" : "Cancel run"}
               </Button>
             )}
-            {!isLive(run.status) && mayStart && (
-              <Button
-                busy={starting}
-                onClick={() =>
-                  start(
-                    attempt(async () => {
-                      const { id } = await runAgain(run);
-                      router.push(`/${workspace}/runs/${id}`);
-                    }),
-                  )
-                }
-              >
-                {starting ? "Queueing…" : "Run again"}
-              </Button>
-            )}
+            {mayAgain && againButton("Run again")}
             <ButtonLink href={`/${workspace}/netlists/${run.netlistId}`} prefetch={false}>
               Open netlist
             </ButtonLink>
           </>
         }
+      />
+      <StaleNotice
+        workspace={workspace}
+        run={run}
+        latestRevision={latestRevision}
+        again={mayAgain ? againButton("Queue it again") : null}
       />
       {problem !== null && (
         <div className="px-4 pt-4 md:px-6">
@@ -84,10 +101,28 @@ export function RunHeader({ workspace, run, mayStart, mayCancel, onRun }: Props)
   );
 }
 
-/** "4 × 301 points solved in 38 ms", the outer sweeps first. */
-function sizeInWords({ plan, points, status, startedAt, finishedAt }: RunState): string {
-  const factors = plan.axes.map(({ values }) => formatCount(values.length)).reverse();
-  const size = factors.length > 1 ? `${factors.join(" × ")} points` : counted(points, "point");
+/** "400 draws and nominal × 3 temperatures × 121 points, 145 563 solved and proved in 1.4 s", the outer sweeps first. */
+function sizeInWords(run: RunState, proved: number | null): string {
+  const { plan, points, status, startedAt, finishedAt, pointsDone, pointsFailed } = run;
+  const [first, ...outer] = plan.axes;
+  const factors = [
+    ...(plan.draws > 0 ? [`${counted(plan.draws, "draw")} and nominal`] : []),
+    ...outer.map(({ knob, values }) => settings(knob, values.length)).reverse(),
+    counted(first?.values.length ?? 1, "point"),
+  ];
+  const size = factors.length > 1 ? factors.join(" × ") : counted(points, "point");
+  const solved = pointsDone - pointsFailed;
   const took = status === "done" ? formatSpan(startedAt, finishedAt) : "";
-  return took === "" ? size : `${size} solved in ${took}`;
+  if (took === "") return size;
+  const how =
+    proved === null || solved === 0
+      ? "solved"
+      : proved === solved
+        ? "solved and proved"
+        : `solved, ${formatCount(proved)} proved,`;
+  return `${size}, ${formatCount(solved)} ${how} in ${took}`;
+}
+
+function settings(knob: string, count: number): string {
+  return knob === "temperature" ? counted(count, knob) : `${counted(count, "value")} of ${knob}`;
 }

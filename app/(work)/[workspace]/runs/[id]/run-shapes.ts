@@ -1,6 +1,7 @@
 import type { Plan } from "@/lib/analyses/plan";
 import type { Verdict } from "@/lib/analyses/result";
 import type { KeptJudgement } from "@/lib/analyses/verdict";
+import type { OutcomeKind } from "@/lib/solver/outcome";
 
 export type RunStatus = "queued" | "running" | "done" | "failed" | "cancelled";
 
@@ -33,6 +34,17 @@ export interface RunState extends Progress {
   /** Of the requirements; null before they are judged and where there are none. */
   readonly verdict: Verdict | null;
   readonly judgement: KeptJudgement | null;
+  /** Rows of the outer sweeps whose operating points are looked for; null where the text asks for one alone. */
+  readonly search?: { readonly rows: number; readonly rowsDone: number } | null;
+}
+
+/** Where a run's text says what (lines counted from 1), and what has come since. */
+export interface RunContext {
+  readonly latestRevision: number;
+  /** By part and parameter with a blank between. */
+  readonly toleranceLines: Readonly<Record<string, number>>;
+  readonly readingLines: Readonly<Record<string, number>>;
+  readonly requirementLines: readonly number[];
 }
 
 interface Figure {
@@ -45,7 +57,7 @@ interface Figure {
 export interface PointAccount {
   readonly point: number;
   readonly at: readonly { readonly knob: string; readonly unit: string; readonly value: number }[];
-  readonly outcome: string | null;
+  readonly outcome: OutcomeKind | null;
   readonly iterations: number | null;
   /** A. */
   readonly residual: number | null;

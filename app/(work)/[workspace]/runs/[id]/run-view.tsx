@@ -7,16 +7,16 @@ import { type CurveSource, curveSet } from "@/app/_components/curves/curve-set";
 import { NumberTable } from "@/app/_components/curves/number-table";
 import { Notice } from "@/app/_components/ui/notice";
 import { Tabs } from "@/app/_components/ui/tabs";
-import { Cautions, type VoltageSpan } from "./cautions";
+import { allowedBands } from "@/lib/analyses/allowed-bands";
+import type { VoltageSpan } from "./cautions";
 import { OperatingPoint } from "./operating-point";
 import { type PageState, readPageState, writePageState } from "./page-state";
-import { PointPanel } from "./point-panel";
-import { ReadingList } from "./reading-list";
-import { RequirementList } from "./requirement-list";
-import { RunFacts } from "./run-facts";
 import { RunHeader } from "./run-header";
-import { isLive, type PointAccount, type RunState } from "./run-shapes";
+import { onPlot, RunPanels } from "./run-panels";
+import { isLive, type PointAccount, type RunContext, type RunState } from "./run-shapes";
 import { RunStatusLine } from "./run-status-line";
+import { SpreadView } from "./spread/spread-view";
+import { textLinks } from "./text-links";
 import { type Found, useLiveRun } from "./use-live-run";
 
 /** A finished run is judged within this time, ms, unless it is large. */
@@ -26,6 +26,8 @@ interface Props {
   readonly workspace: string;
   readonly first: RunState;
   readonly found: Found | null;
+  /** Where its text says what, and what has come since. */
+  readonly context: RunContext;
   /** The account of the point that the address names. */
   readonly point: PointAccount | null;
   readonly span: VoltageSpan | null;
@@ -35,12 +37,13 @@ interface Props {
   readonly mayCancel: boolean;
 }
 
-/** A run: how far it is, its curves and numbers, one point in full, and what is known about the run itself. */
+/** A run: how far it is, its curves and numbers, what its tolerances do, and beside them what it came to. */
 export function RunView(props: Props) {
-  const { workspace, first, found, point, span, mayStart, mayCancel } = props;
+  const { workspace, first, found, context, point, span, mayStart, mayCancel } = props;
   const router = useRouter();
   const { run, document, problem, finished, behind, setRun } = useLiveRun(first, found);
   const [state, setState] = useState(() => readPageState(new URLSearchParams(props.search)));
+  const [cursor, setCursor] = useState<number | null>(null);
   const show = useCallback(
     (change: Partial<PageState>) => setState((before) => ({ ...before, ...change })),
     [],
@@ -64,7 +67,7 @@ export function RunView(props: Props) {
   }, [finished, judged, router]);
 
   const source = useMemo(
-    () =>
+    (): CurveSource =>
       document ?? {
         axes: run.plan.axes,
         traces: run.plan.traces.map((trace) => ({ ...trace, values: [] })),
@@ -74,11 +77,22 @@ export function RunView(props: Props) {
   );
   const set = useMemo(() => curveSet(source), [source]);
   const numbers = useMemo(() => withDraws(source, run.plan.draws), [source, run.plan.draws]);
+  const allowed = useMemo(() => (document === null ? [] : allowedBands(document)), [document]);
+  const proved = useMemo(() => provedIn(source), [source]);
+  const links = useMemo(() => textLinks(workspace, run, context), [workspace, run, context]);
   const chosen = state.point !== null && state.point < run.points ? state.point : set === null ? 0 : null;
 
   return (
     <>
-      <RunHeader workspace={workspace} run={run} mayStart={mayStart} mayCancel={mayCancel} onRun={setRun} />
+      <RunHeader
+        workspace={workspace}
+        run={run}
+        mayStart={mayStart}
+        mayCancel={mayCancel}
+        onRun={setRun}
+        proved={document === null ? null : proved}
+        latestRevision={context.latestRevision}
+      />
       <RunStatusLine run={run} behind={behind} />
       {problem !== null && (
         <div className="px-4 pt-4 md:px-6">
@@ -87,7 +101,7 @@ export function RunView(props: Props) {
           </Notice>
         </div>
       )}
-      <div className="grid grow grid-cols-[minmax(0,1fr)] lg:grid-cols-[minmax(0,8fr)_minmax(300px,5fr)] 2xl:grid-cols-[minmax(0,11fr)_minmax(300px,5fr)]">
+      <div className="grid grow grid-cols-[minmax(0,1fr)] lg:grid-cols-[minmax(0,8fr)_minmax(300px,5fr)] 2xl:grid-cols-[minmax(0,11fr)_minmax(300px,6fr)]">
         <div className="min-w-0 px-4 pt-2 pb-8 md:px-6">
           {set === null ? (
             <OperatingPoint source={source} />
@@ -106,9 +120,11 @@ export function RunView(props: Props) {
                       name={`Curves of ${run.title}, run ${run.number}`}
                       view={state}
                       onView={show}
-                      point={chosen}
+                      point={chosen === null ? null : onPlot(run, chosen)}
                       onPoint={(next) => show({ point: next })}
                       waiting={waitingFor(run, document !== null)}
+                      allowed={allowed}
+                      onCursor={setCursor}
                     />
                   ),
                 },
@@ -130,27 +146,36 @@ export function RunView(props: Props) {
               ]}
             />
           )}
+          {document !== null && (
+            <SpreadView
+              matter={{
+                axes: run.plan.axes,
+                readings: document.readings,
+                requirements: document.requirements,
+                budgets: first.judgement?.budgets ?? [],
+                causes: first.judgement?.causes ?? [],
+              }}
+              budgetsMissing={
+                first.judgement === null ? "to come" : first.judgement.budgets === null ? "too large" : null
+              }
+              links={links}
+              subject={state.subject}
+              setting={state.setting}
+              onSubject={(subject, setting) => show({ subject, setting })}
+            />
+          )}
         </div>
-        <div className="grid min-w-0 content-start gap-8 border-t px-4 py-6 md:px-6 lg:border-t-0 lg:border-l">
-          <PointPanel
-            run={run}
-            point={chosen}
-            first={point}
-            choosable={set !== null}
-            onPoint={(next) => show({ point: next })}
-          />
-          <RequirementList
-            requirements={document?.requirements ?? []}
-            causes={first.judgement?.causes ?? []}
-          />
-          <ReadingList
-            readings={document?.readings ?? []}
-            axes={run.plan.axes}
-            budgets={first.judgement?.budgets ?? []}
-          />
-          <RunFacts workspace={workspace} run={run} />
-          <Cautions span={span} />
-        </div>
+        <RunPanels
+          workspace={workspace}
+          run={run}
+          found={document}
+          links={links}
+          span={span}
+          chosen={chosen}
+          point={point}
+          cursor={cursor}
+          onShow={show}
+        />
       </div>
     </>
   );
@@ -161,6 +186,14 @@ function withDraws(source: CurveSource, draws: number): CurveSource {
   if (draws === 0) return source;
   const values = Array.from({ length: draws + 1 }, (_, draw) => draw);
   return { ...source, axes: [...source.axes, { knob: "draw", unit: "1", scale: "list", values }] };
+}
+
+/** Points with a proof. */
+function provedIn({ points }: CurveSource): number {
+  const { bound = [] } = points;
+  let proved = 0;
+  for (let k = 0; k < bound.length; k++) if (Number.isFinite(bound[k] ?? Number.NaN)) proved++;
+  return proved;
 }
 
 /** Why no curve can be there yet; null when what is there is all there is. */

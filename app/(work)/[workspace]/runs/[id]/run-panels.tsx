@@ -1,0 +1,92 @@
+import type { CurveSource } from "@/app/_components/curves/curve-source";
+import type { BranchesDocument } from "@/lib/analyses/branches-document";
+import { drawOf } from "@/lib/analyses/plan";
+import type { Failure, ReadingDocument, RequirementDocument } from "@/lib/analyses/result";
+import { BranchList } from "./branch-list";
+import { Cautions, type VoltageSpan } from "./cautions";
+import { CursorAccount } from "./cursor-account";
+import { FailedPoints } from "./failed-points";
+import type { PageState } from "./page-state";
+import { PointPanel } from "./point-panel";
+import { ReadingList } from "./reading-list";
+import { RequirementList } from "./requirement-list";
+import { RunFacts } from "./run-facts";
+import type { PointAccount, RunState } from "./run-shapes";
+import type { TextLinks } from "./text-links";
+
+interface Props {
+  readonly workspace: string;
+  readonly run: RunState;
+  readonly found: Found | null;
+  readonly links: TextLinks;
+  readonly span: VoltageSpan | null;
+  /** The chosen point, and its account where it came with the page. */
+  readonly chosen: number | null;
+  readonly point: PointAccount | null;
+  /** The point under the cursor of the plot. */
+  readonly cursor: number | null;
+  readonly onShow: (change: Partial<PageState>) => void;
+}
+
+/** What the panels take from the document of a run, in either form. */
+export interface Found {
+  readonly requirements: readonly RequirementDocument[];
+  readonly readings: readonly ReadingDocument[];
+  readonly failures: readonly Failure[];
+  readonly branches?: readonly BranchesDocument[];
+  readonly points: CurveSource["points"];
+}
+
+/** All that stands beside the curves: requirements, readings, the chosen point, operating points, failures, the run itself. */
+export function RunPanels({ workspace, run, found, links, span, chosen, point, cursor, onShow }: Props) {
+  const { plan } = run;
+  return (
+    <div className="grid min-w-0 content-start gap-8 border-t px-4 py-6 md:px-6 lg:border-t-0 lg:border-l">
+      <RequirementList
+        requirements={found?.requirements ?? []}
+        links={links}
+        onPlace={(worst, label) =>
+          onShow({ point: pointOf(run, worst), worst: worst.draw > 0 ? label : null, tab: "curves" })
+        }
+      />
+      <ReadingList readings={found?.readings ?? []} axes={plan.axes} links={links} />
+      {plan.axes.length > 0 && <CursorAccount run={run.id} cursor={cursor} />}
+      <PointPanel
+        run={run}
+        point={chosen}
+        first={point}
+        choosable={plan.axes.length > 0}
+        onPoint={(next) => onShow({ point: next })}
+      />
+      <BranchList branches={found?.branches ?? []} axes={plan.axes} search={run.search ?? null} />
+      <FailedPoints
+        failures={found?.failures ?? []}
+        axes={plan.axes}
+        draws={plan.draws}
+        ofOneDraw={plan.points / (plan.draws + 1)}
+        onPoint={(next) => onShow({ point: next })}
+        onAll={() => onShow({ tab: "numbers", failed: true, page: 1 })}
+      />
+      <RunFacts workspace={workspace} run={run} />
+      <Cautions span={span} />
+    </div>
+  );
+}
+
+/** The flat point of a worst place; the first of its sweep where it has no place on the first knob. */
+function pointOf({ plan }: RunState, { draw, at }: NonNullable<RequirementDocument["worst"]>): number {
+  const { axes, draws, points } = plan;
+  let stride = 1;
+  let point = 0;
+  for (const { knob, values } of axes) {
+    const asked = at.find((one) => one.knob === knob);
+    if (asked !== undefined) point += stride * Math.max(0, values.indexOf(asked.value));
+    stride *= values.length;
+  }
+  return draw * (points / (draws + 1)) + point;
+}
+
+/** Where a flat point stands, whatever its draw: the place on the plot, which shows the nominal design. */
+export function onPlot({ plan }: RunState, point: number): number {
+  return point - drawOf(plan, point) * (plan.points / (plan.draws + 1));
+}
