@@ -7,6 +7,7 @@ import type {
   Row,
   TooLarge,
 } from "./messages";
+import { valueAtPlace } from "./value-at-place";
 
 /** The side of the solving thread that a page needs; a `Worker` has it, and so has a stand-in of a test. */
 export interface SolvingThread {
@@ -108,6 +109,12 @@ export class Previewing {
     this.sendSoon();
   }
 
+  /** What a name of the text is worth where the preview is read, in words; null where nothing is known of it. */
+  readonly valueAt = (name: string): string | null => {
+    const { outline, figures } = this.preview;
+    return outline === null || figures === null ? null : valueAtPlace(outline, figures, name);
+  };
+
   /** Ends the thread. What was shown stays, and another text begins anew. */
   close(): void {
     this.thread?.terminate();
@@ -195,7 +202,8 @@ export class Previewing {
     );
     const place = placeOf(outline, turned);
     const moved = place !== this.preview.place || turned.size !== this.preview.turned.size;
-    this.tell({ outline, turned, place });
+    // The figures are counted in the order of the outline that they came with.
+    this.tell({ outline, turned, place, figures: null });
     if (moved) this.sendSoon();
   }
 

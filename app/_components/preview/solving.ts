@@ -184,8 +184,8 @@ export class PreviewSolving {
   private showFigures({ number, place }: PreviewQuestion): void {
     if (this.standing === null || place === this.shown) return;
     this.shown = place;
-    const { excerpt, result, places } = this.standing;
-    const index = places === null ? Math.min(place, result.outcome.length - 1) : nearest(places, place);
+    const { excerpt, result, places, length } = this.standing;
+    const index = places === null ? Math.min(place, length - 1) : nearest(places, place);
     const figures = { ...figuresAt(excerpt, result, index), place };
     this.bench.post({ kind: "figures", number, figures }, [figures.values.buffer as ArrayBuffer]);
   }

@@ -1,4 +1,4 @@
-import { formatKnob, formatValue, isAmbient } from "@/app/_components/curves/figures-in-words";
+import { formatKnob, isAmbient } from "@/app/_components/curves/figures-in-words";
 import { formatQuantity } from "@/lib/units/quantity";
 import type { Figures, Outline } from "./messages";
 
@@ -47,7 +47,7 @@ function valuesIn(all: readonly Figure[], { values }: Figures): string | null {
     .map(({ part, unit, owner, index }) => {
       const value = values[index]!;
       if (isAmbient({ knob: owner, unit })) return formatKnob({ knob: owner, unit }, value);
-      return part === "" ? formatValue(value, unit) : `${part} ${formatQuantity(value, unit)}`;
+      return `${part === "" ? "" : `${part} `}${formatQuantity(value, unit)}`;
     })
     .join(", ");
 }
