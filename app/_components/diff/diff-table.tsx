@@ -25,7 +25,7 @@ interface Props {
 export function DiffTable({ rows, shown, coloured, labels, form, onUnfold }: Props) {
   const isBeside = form === "beside";
   return (
-    <TableFrame label="Text, line by line" className="border bg-surface">
+    <TableFrame label="Text, line by line" className="relative border bg-surface">
       <table
         className={classNames(
           "w-full border-collapse font-(family-name:--font-figures) text-[0.8125rem] leading-6",

@@ -2,6 +2,7 @@
 
 import { Dialog as Radix } from "radix-ui";
 import { type ReactNode, useRef } from "react";
+import { classNames } from "./class-names";
 
 /**
  * A dialog over the page: focus stays inside, Escape closes it and gives focus back. `description` says in one sentence
@@ -12,6 +13,7 @@ export function Dialog({
   onOpenChange,
   title,
   description,
+  wide = false,
   children,
   actions,
 }: {
@@ -19,6 +21,8 @@ export function Dialog({
   readonly onOpenChange: (open: boolean) => void;
   readonly title: string;
   readonly description: ReactNode;
+  /** For texts side by side. */
+  readonly wide?: boolean;
   readonly children?: ReactNode;
   readonly actions: ReactNode;
 }) {
@@ -36,7 +40,10 @@ export function Dialog({
             event.preventDefault();
             if (before.current instanceof HTMLElement) before.current.focus();
           }}
-          className="fixed top-1/2 left-1/2 z-50 max-h-[calc(100dvh-32px)] w-[min(560px,calc(100vw-32px))] -translate-x-1/2 -translate-y-1/2 overflow-y-auto rounded-[2px] border border-edge bg-surface p-6 text-ink"
+          className={classNames(
+            wide ? "w-[min(1120px,calc(100vw-32px))]" : "w-[min(560px,calc(100vw-32px))]",
+            "fixed top-1/2 left-1/2 z-50 max-h-[calc(100dvh-32px)] -translate-x-1/2 -translate-y-1/2 overflow-y-auto rounded-[2px] border border-edge bg-surface p-6 text-ink",
+          )}
         >
           <Radix.Title className="font-semibold text-lg">{title}</Radix.Title>
           <Radix.Description className="mt-1 text-quiet text-sm">{description}</Radix.Description>

@@ -36,6 +36,7 @@ export default async function SheetPage({ params }: Props) {
       netlist={{ id, number, owner }}
       latest={{ title, text: text.replaceAll("\r\n", "\n"), revision, hash }}
       runs={runs}
+      writer={actor.userId}
       role={actor.role}
       mayQueue={can(actor, "run.start", { workspaceId: actor.workspaceId })}
     />

@@ -23,14 +23,16 @@ interface Props {
   readonly netlist: { readonly id: string; readonly number: number; readonly owner: string };
   readonly latest: Saved;
   readonly runs: RunLines;
+  /** Who reads or writes here; drafts are theirs alone. */
+  readonly writer: string;
   readonly role: Role;
   readonly mayQueue: boolean;
 }
 
 /** The sheet of a netlist: its text to write in, what is wrong with it, a preview of its curves, what a run would compute, and the runs so far. */
-export function Sheet({ workspace, netlist, latest, runs, role, mayQueue }: Props) {
-  const sheet = useSheet({ workspace, netlistId: netlist.id, latest, mayQueue });
-  const { editor, examined, text, saved } = sheet;
+export function Sheet({ workspace, netlist, latest, runs, writer, role, mayQueue }: Props) {
+  const sheet = useSheet({ workspace, netlistId: netlist.id, writer, latest, mayQueue });
+  const { editor, examined, text } = sheet;
   const previewing = usePreviewing(latest.text);
   const [tab, setTab] = useState<TabDoes>("indents");
   const problems = examined?.diagnostics ?? [];
@@ -100,7 +102,7 @@ export function Sheet({ workspace, netlist, latest, runs, role, mayQueue }: Prop
         tab={tab}
         readOnly={!mayQueue}
       />
-      <ConflictDialog sheet={sheet} base={saved.revision} />
+      <ConflictDialog sheet={sheet} />
     </div>
   );
 }

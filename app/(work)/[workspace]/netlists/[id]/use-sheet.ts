@@ -24,18 +24,19 @@ export interface Remark {
 interface Asked {
   readonly workspace: string;
   readonly netlistId: string;
+  readonly writer: string;
   readonly latest: Saved;
   readonly mayQueue: boolean;
 }
 
 /** The state of a sheet: the text, what it was written upon, what the checker says, and what saving and queueing came to. */
-export function useSheet({ workspace, netlistId, latest, mayQueue }: Asked) {
+export function useSheet({ workspace, netlistId, writer, latest, mayQueue }: Asked) {
   const router = useRouter();
   const editor = useRef<EditorHandle>(null);
   const [saved, setSaved] = useState(latest);
-  const { text, edited, settle } = useSettledText(editor, latest.text);
+  const { text, edited: soon, settle } = useSettledText(editor, latest.text);
   const { examined, broken } = useExamination(text);
-  const drafts = useDrafts(netlistId, text, saved, mayQueue);
+  const drafts = useDrafts({ netlistId, writer, text, saved, mayWrite: mayQueue });
   const [working, setWorking] = useState<"saving" | "queueing" | null>(null);
   const [leaving, leave] = useTransition();
   const busy = leaving ? "queueing" : working;
@@ -45,6 +46,11 @@ export function useSheet({ workspace, netlistId, latest, mayQueue }: Asked) {
   const changed = text !== saved.text;
   const errors = (examined?.diagnostics ?? []).filter(({ severity }) => severity === "error");
 
+  const edited = () => {
+    soon();
+    // Each key stroke is kept, not only what stands when the typing rests: a crash comes unasked.
+    if (editor.current !== null) drafts.typed(editor.current.text());
+  };
   const goTo = (problem: Diagnostic) => editor.current?.goTo(problem);
   const refuse = (title: string, detail: string) => setRemark({ tone: "broken", title, detail });
 
@@ -106,13 +112,39 @@ export function useSheet({ workspace, netlistId, latest, mayQueue }: Asked) {
     settle();
   };
 
-  const loadTheirs = () => {
+  /** The newest revision takes the place of the text, or `merged` upon it does. The text that stood here is set aside. */
+  const loadTheirs = (merged?: string) => {
     if (theirs === null) return;
     drafts.setAside(settle(), saved.revision);
     setSaved(theirs);
-    put(theirs.text);
+    put(merged ?? theirs.text);
     setTheirs(null);
     router.refresh();
+  };
+
+  /** Saves a merge upon the newest revision; false when it was not. What it leaves out of the text here is set aside. */
+  const saveMerged = async (merged: string, leavesOut: boolean): Promise<boolean> => {
+    if (theirs === null || busy !== null) return false;
+    setWorking("saving");
+    const message = `Merged with revision ${theirs.revision}`;
+    const answer = await ask<{ revision: number; hash: string }>(`/api/v1/netlists/${netlistId}/revisions`, {
+      base: theirs.revision,
+      text: merged,
+      message,
+    });
+    if (!answer.ok) {
+      if (answer.status !== 409) setTheirs(null);
+      await failed("The merge was not saved", answer);
+      return false;
+    }
+    setWorking(null);
+    if (leavesOut) drafts.setAside(settle(), saved.revision);
+    const { revision, hash } = answer.body;
+    setSaved({ ...theirs, text: merged, revision, hash });
+    put(merged);
+    setTheirs(null);
+    router.refresh();
+    return true;
   };
 
   const keepAsCopy = async () => {
@@ -147,6 +179,7 @@ export function useSheet({ workspace, netlistId, latest, mayQueue }: Asked) {
     saved,
     text,
     edited,
+    settle,
     examined,
     broken,
     errors,
@@ -157,6 +190,7 @@ export function useSheet({ workspace, netlistId, latest, mayQueue }: Asked) {
     theirs,
     closeConflict: () => setTheirs(null),
     loadTheirs,
+    saveMerged,
     keepAsCopy,
     aside: drafts.aside,
     unsafe: drafts.unsafe,

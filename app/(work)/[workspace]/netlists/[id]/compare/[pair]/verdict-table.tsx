@@ -29,7 +29,7 @@ export function VerdictTable({
   return (
     <>
       <p className="mb-1 text-sm">{turnsInWords(rows)}</p>
-      <TableFrame label="Verdicts">
+      <TableFrame label="Verdicts" className="relative">
         <Table>
           <caption className="sr-only">Verdicts of both revisions</caption>
           <thead>
