@@ -94,7 +94,7 @@ describe("account and summary", () => {
     const sentence = plain(summarise(set, storeysOf(set, usualChoice(set)), account));
     expect(sentence).toContain("Over V_x from −2 V to 2 V, at 2 settings of temperature:");
     expect(sentence).toContain("4 of 8 points are solved");
-    expect(sentence).toContain("4 failed (step too small) at V_x −2 V to −1 V, and nothing is drawn there");
+    expect(sentence).toContain("4 failed (came to a stand) at V_x −2 V to −1 V, and nothing is drawn there");
   });
 
   it("says which way a trace goes and how far", () => {

@@ -92,11 +92,11 @@ test("the main job: break a netlist, see where, mend it, queue it, watch it, see
   // The deep link shows the same numbers again.
   await page.getByRole("tab", { name: "Table of numbers" }).click();
   const table = page.getByRole("region", { name: "Numbers of all points" });
-  await table.getByText("converged").first().waitFor();
+  await table.getByText("solved", { exact: true }).first().waitFor();
   const numbers = await table.textContent();
   const address = page.url();
   await page.reload();
-  await table.getByText("converged").first().waitFor();
+  await table.getByText("solved", { exact: true }).first().waitFor();
   expect(page.url()).toBe(address);
   expect(await table.textContent()).toBe(numbers);
   await page.getByRole("tab", { name: "Curves" }).click();

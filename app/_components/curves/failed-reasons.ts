@@ -1,3 +1,4 @@
+import { outcomeInWords } from "@/lib/analyses/reasons";
 import type { Failure } from "@/lib/analyses/result";
 import type { OutcomeKind } from "@/lib/solver/outcome";
 import type { CurveSource } from "./curve-source";
@@ -7,7 +8,7 @@ const known = new WeakMap<readonly Failure[], ReadonlyMap<number, Failure>>();
 /** Nets and elements named in a reason; where there are more their number says so. */
 const NAMED = 4;
 
-/** Why there is no value at a point, in words: "not solved", "failed: step too small; out, S.A would not settle". */
+/** Why there is no value at a point, in words: "not solved", "failed: came to a stand; out, S.A would not settle". */
 export function whyMissing(source: CurveSource, point: number): string {
   const outcome = source.points.outcome[point] ?? null;
   if (outcome === null) return "not solved";
@@ -22,9 +23,10 @@ export function reasonOf(
   outcome: OutcomeKind,
 ): string {
   const unsettled = failures === undefined ? [] : (indexed(failures).get(point)?.unsettled ?? []);
-  if (unsettled.length === 0) return outcome;
+  const words = outcomeInWords(outcome);
+  if (unsettled.length === 0) return words;
   const more = unsettled.length > NAMED ? ` and ${unsettled.length - NAMED} more` : "";
-  return `${outcome}; ${unsettled.slice(0, NAMED).join(", ")}${more} would not settle`;
+  return `${words}; ${unsettled.slice(0, NAMED).join(", ")}${more} would not settle`;
 }
 
 function indexed(failures: readonly Failure[]): ReadonlyMap<number, Failure> {

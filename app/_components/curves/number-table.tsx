@@ -5,6 +5,7 @@ import { classNames } from "@/app/_components/ui/class-names";
 import { formatCount } from "@/app/_components/ui/count";
 import { Pager } from "@/app/_components/ui/pager";
 import { Cell, HeadCell, Table, TableFrame } from "@/app/_components/ui/table";
+import { outcomeInWords } from "@/lib/analyses/reasons";
 import { valueIn } from "./columns";
 import { type CurveSource, settingOf } from "./curve-set";
 import { whyMissing } from "./failed-reasons";
@@ -129,7 +130,7 @@ function Outcome({ outcome, why }: { readonly outcome: string | null; readonly w
     <Cell
       className={classNames("whitespace-nowrap py-1! align-middle!", failed ? "text-broken" : "text-quiet")}
     >
-      {outcome === "converged" ? outcome : why}
+      {outcome === "converged" ? outcomeInWords(outcome) : why}
     </Cell>
   );
 }

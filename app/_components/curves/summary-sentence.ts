@@ -1,4 +1,5 @@
 import { counted, formatCount } from "@/app/_components/ui/count";
+import { outcomeInWords } from "@/lib/analyses/reasons";
 import { formatQuantity } from "@/lib/units/quantity";
 import type { CurveSet } from "./curve-set";
 import { type Account, spansInWords } from "./failed-spans";
@@ -79,7 +80,7 @@ export function pointsInWords(set: CurveSet, account: Account): string {
   if (failed > 0) {
     const where = spansInWords(set, account.spans);
     parts.push(
-      `${formatCount(failed)} failed (${account.outcomes.join(", ")}) at ${where}, and nothing is drawn there`,
+      `${formatCount(failed)} failed (${account.outcomes.map(outcomeInWords).join(", ")}) at ${where}, and nothing is drawn there`,
     );
   }
   if (waiting > 0) parts.push(`${formatCount(waiting)} are not solved`);
