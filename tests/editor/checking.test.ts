@@ -56,3 +56,14 @@ test("a text that is asked for again while it is checked is checked once", () =>
   expect(heard).toEqual(["one"]);
   expect(questions).toHaveLength(1);
 });
+
+test("a text that was answered already is not asked about again", () => {
+  const { questions, thread, answer } = slowThread();
+  const checking = new Checking(thread, () => {});
+  checking.ask("");
+  answer(0);
+  checking.ask("show a.v");
+  answer(1);
+  checking.ask("show a.v");
+  expect(questions.map(({ text }) => text)).toEqual(["", "show a.v"]);
+});

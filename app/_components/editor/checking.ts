@@ -25,7 +25,8 @@ export class Checking {
   private number = 0;
   private working = false;
   private waiting: string | null = null;
-  private asked = "";
+  /** The text that was asked about last; null before the first. */
+  private asked: string | null = null;
 
   /** `answer` gets each examination that is still wanted, with the text it is of. */
   constructor(
@@ -37,7 +38,7 @@ export class Checking {
 
   ask(text: string): void {
     if (this.working) this.waiting = text;
-    else this.send(text);
+    else if (text !== this.asked) this.send(text);
   }
 
   private send(text: string): void {
@@ -53,6 +54,6 @@ export class Checking {
     const next = this.waiting;
     this.waiting = null;
     if (next !== null && next !== this.asked) this.send(next);
-    else this.answer(examination, this.asked);
+    else this.answer(examination, this.asked!);
   }
 }

@@ -1,6 +1,6 @@
 "use client";
 
-import { useEffect, useRef, useState } from "react";
+import { useCallback, useEffect, useRef, useState } from "react";
 import { Checking, type CheckThread } from "./checking";
 import type { Examination, PlanSummary } from "./examine";
 
@@ -13,12 +13,16 @@ export interface Examined extends Examination {
 
 /**
  * What the checker says of `text`, worked out in a thread of the browser. Until the first answer, and for a moment after each
- * change, the answer is of an earlier text: compare `text`. `broken` when the browser could not start the thread.
+ * change, the answer is of an earlier text: compare `text`. A text that is on its way to be `text` can be asked about before,
+ * with `ask`; `newest` has what is said of it. `broken` when the browser could not start the thread.
  */
 export function useExamination(text: string): {
   readonly examined: Examined | null;
+  readonly newest: Examined | null;
   readonly broken: boolean;
+  readonly ask: (text: string) => void;
 } {
+  const [newest, setNewest] = useState<Examined | null>(null);
   const [examined, setExamined] = useState<Examined | null>(null);
   const [broken, setBroken] = useState(false);
   const checking = useRef<Checking | null>(null);
@@ -28,7 +32,7 @@ export function useExamination(text: string): {
     thread.onerror = () => setBroken(true);
     checking.current = new Checking(thread as CheckThread, (examination, of) => {
       setBroken(false);
-      setExamined((before) => ({
+      setNewest((before) => ({
         ...examination,
         text: of,
         latestPlan: examination.plan ?? before?.latestPlan ?? null,
@@ -43,5 +47,7 @@ export function useExamination(text: string): {
   // Declared after the effect that starts the thread, so the first text is asked about too.
   useEffect(() => checking.current?.ask(text), [text]);
 
-  return { examined, broken };
+  if (newest !== examined && newest?.text === text) setExamined(newest);
+  const ask = useCallback((next: string) => checking.current?.ask(next), []);
+  return { examined, newest, broken, ask };
 }

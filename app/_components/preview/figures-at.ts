@@ -5,7 +5,7 @@ import { System } from "@/lib/circuit/system";
 import type { Element, Signal } from "@/lib/language/ast";
 import { Ladder } from "@/lib/solver/ladder";
 import type { Figures } from "./messages";
-import { figuresOf } from "./outline";
+import { figuresOf, knobsOf } from "./outline";
 
 /**
  * Every voltage, current and power of a circuit, every knob and let, at one place of a solved row. Solved anew from the unknowns kept,
@@ -37,7 +37,7 @@ export function figuresAt(
     ...design.elements.flatMap((element) =>
       figuresOf(element).map((figure) => read(signalOf(element, figure))),
     ),
-    ...design.knobs.map(({ name }) => system.values.knob(name)),
+    ...knobsOf(design).map(({ name }) => system.values.knob(name)),
     ...design.lets.map(({ name }) => system.values.let(name)),
   ];
   return { at, values: Float64Array.from(values) };

@@ -1,5 +1,5 @@
 import type { Job } from "@/lib/analyses/compile";
-import type { Element, ElementKind } from "@/lib/language/ast";
+import type { Design, Element, ElementKind, Knob } from "@/lib/language/ast";
 import { KINDS } from "@/lib/language/kinds";
 import { unitOf } from "@/lib/units/quantity";
 import type { KnobOutline, Outline } from "./messages";
@@ -15,7 +15,7 @@ export function outlineOf({ design, plan }: Job): Outline {
     title: plan.title,
     axes: plan.axes,
     traces: plan.traces,
-    knobs: design.knobs.map(
+    knobs: knobsOf(design).map(
       ({ name, value, range }): KnobOutline => ({
         name,
         unit: unitOf(value.dimension),
@@ -35,6 +35,11 @@ export function outlineOf({ design, plan }: Job): Outline {
     junctions: design.elements.reduce((sum, { kind }) => sum + (JUNCTIONS[kind] ?? 0), 0),
     seek: design.seek,
   };
+}
+
+/** The knobs in the order of the text; a temperature that it does not set comes last, as it would be written. */
+export function knobsOf({ knobs }: Pick<Design, "knobs">): readonly Knob[] {
+  return knobs.toSorted((a, b) => Number(a.to === 0) - Number(b.to === 0));
 }
 
 /** Voltage, current and power of an element with two pins, the currents into the pins of any other. */

@@ -43,7 +43,7 @@ function RequirementRow({ requirement }: { readonly requirement: RequirementDocu
   const { shape, ink } = MARKS[verdict];
   const limits = limitsInWords(requirement);
   return (
-    <li className="grid grid-cols-[minmax(0,1fr)_auto] items-center gap-x-3 gap-y-0.5 border-b py-1.5 sm:grid-cols-[minmax(0,9rem)_minmax(4rem,1fr)_minmax(0,auto)]">
+    <li className="grid grid-cols-[minmax(0,1fr)_auto] items-center gap-x-3 gap-y-0.5 border-b py-1.5 sm:grid-cols-[minmax(0,10rem)_minmax(4rem,1fr)_8.5rem]">
       <span className="flex min-w-0 items-baseline gap-2 text-sm">
         <span className={ink}>
           <StateMark shape={shape} />

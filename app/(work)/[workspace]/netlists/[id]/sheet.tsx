@@ -72,7 +72,7 @@ export function Sheet({ workspace, netlist, latest, runs, writer, role, mayQueue
               ref={editor}
               initial={latest.text}
               readOnly={!mayQueue}
-              problems={examined}
+              problems={sheet.newest}
               onEdit={edited}
               onQueue={() => void sheet.queue()}
               onSave={() => mayQueue && sheet.openSave(true)}

@@ -35,7 +35,7 @@ export function useSheet({ workspace, netlistId, writer, latest, mayQueue }: Ask
   const editor = useRef<EditorHandle>(null);
   const [saved, setSaved] = useState(latest);
   const { text, edited: soon, settle } = useSettledText(editor, latest.text);
-  const { examined, broken } = useExamination(text);
+  const { examined, newest, broken, ask: examine } = useExamination(text);
   const drafts = useDrafts({ netlistId, writer, text, saved, mayWrite: mayQueue });
   const [working, setWorking] = useState<"saving" | "queueing" | null>(null);
   const [leaving, leave] = useTransition();
@@ -49,7 +49,10 @@ export function useSheet({ workspace, netlistId, writer, latest, mayQueue }: Ask
   const edited = () => {
     soon();
     // Each key stroke is kept, not only what stands when the typing rests: a crash comes unasked.
-    if (editor.current !== null) drafts.typed(editor.current.text());
+    if (editor.current === null) return;
+    const now = editor.current.text();
+    drafts.typed(now);
+    examine(now);
   };
   const goTo = (problem: Diagnostic) => editor.current?.goTo(problem);
   const refuse = (title: string, detail: string) => setRemark({ tone: "broken", title, detail });
@@ -181,6 +184,7 @@ export function useSheet({ workspace, netlistId, writer, latest, mayQueue }: Ask
     edited,
     settle,
     examined,
+    newest,
     broken,
     errors,
     changed,
