@@ -1,17 +1,19 @@
 import { OUTCOMES, type OutcomeKind } from "@/lib/solver/outcome";
 import { type DocumentFrame, frameOf, type RunMatter } from "./document";
+import type { AxisDocument } from "./result";
 
 /**
  * The binary form of a run document, for readers of many numbers. Little-endian, in this order, each part beginning at a multiple
  * of 8 bytes: the text "swcolumn"; the length of the head in bytes, as Float64; the head, JSON in UTF-8, which is the run document
- * without its columns, with `points` a number and the readings per point named in `read`; then one Float64 a point for each of
- * `traces`, each of `read`, and the bound (V), NaN where there is none; then one byte a point for the outcome, its index in
- * `outcomes` of the head, 255 where not solved.
+ * without its columns, with `points` a number, a `count` in place of the values of each axis, and the readings per point named in
+ * `read`; then the values of each axis as Float64; then one Float64 a point for each of `traces`, each of `read`, and the bound
+ * (V), NaN where there is none; then one byte a point for the outcome, its index in `outcomes` of the head, 255 where not solved.
  */
 const MARK = "swcolumn";
 const NOT_SOLVED = 255;
 
-interface Head extends DocumentFrame {
+interface Head extends Omit<DocumentFrame, "axes"> {
+  readonly axes: readonly (Omit<AxisDocument, "values"> & { readonly count: number })[];
   readonly points: number;
   readonly outcomes: readonly OutcomeKind[];
   readonly traces: readonly Named[];
@@ -46,6 +48,7 @@ export function encodeColumns(matter: RunMatter): Uint8Array[] {
   const ofPoints = frame.readings.filter(({ per }) => per === "point");
   const head: Head = {
     ...frame,
+    axes: frame.axes.map(({ values, ...axis }) => ({ ...axis, count: values.length })),
     points: matter.outcome.length,
     outcomes: OUTCOMES,
     traces: matter.plan.traces.map(({ name, unit }) => ({ name, unit })),
@@ -56,6 +59,7 @@ export function encodeColumns(matter: RunMatter): Uint8Array[] {
   const padded = new Uint8Array(8 * Math.ceil(json.length / 8)).fill(32);
   padded.set(json);
   const columns = [
+    ...frame.axes.map(({ values }) => Float64Array.from(values)),
     ...matter.traces,
     ...ofPoints.map(({ values }) => Float64Array.from(values, (value) => value ?? Number.NaN)),
     matter.bound,
@@ -83,17 +87,18 @@ export function decodeColumns(buffer: ArrayBuffer): ColumnsDocument {
   const [length] = new Float64Array(buffer, 8, 1);
   const head: Head = JSON.parse(text.decode(new Uint8Array(buffer, 16, length!)));
   let at = 16 + 8 * Math.ceil(length! / 8);
-  const next = () => {
-    const column = new Float64Array(buffer, at, head.points);
+  const next = (count = head.points) => {
+    const column = new Float64Array(buffer, at, count);
     at += column.byteLength;
     return column;
   };
-  const { outcomes, points, traces, read, ...frame } = head;
+  const { outcomes, points, axes, traces, read, ...frame } = head;
+  const swept = axes.map(({ count, ...axis }) => ({ ...axis, values: [...next(count)] }));
   const shown = traces.map((trace) => ({ ...trace, values: next() }));
   const derived = read.map((one) => ({ ...one, values: next() }));
   const bound = next();
   const codes = new Uint8Array(buffer, at, points);
   const outcome = new Array<OutcomeKind | null>(points);
   for (let k = 0; k < points; k++) outcome[k] = outcomes[codes[k]!] ?? null;
-  return { ...frame, traces: shown, read: derived, points: { outcome, bound } };
+  return { ...frame, axes: swept, traces: shown, read: derived, points: { outcome, bound } };
 }

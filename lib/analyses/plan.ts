@@ -34,6 +34,25 @@ export function planOf(design: Design, circuit: Circuit): Plan {
   };
 }
 
+/** An axis with more values than this is long. */
+const LONG = 1000;
+
+/** The plan as a page needs it before the results: of the values of a long axis the first and the last, and how many there are. */
+export function outlineOf(plan: Plan): Plan {
+  const axes = plan.axes.map((axis) => {
+    const { values } = axis;
+    return values.length <= LONG
+      ? axis
+      : { ...axis, values: [values[0]!, values.at(-1)!], count: values.length };
+  });
+  return { ...plan, axes };
+}
+
+/** How many values an axis has, that of an outline too. */
+export function countOf({ values, count = values.length }: AxisDocument): number {
+  return count;
+}
+
 /** The place of a flat point on every axis, the first axis first. */
 export function placeOnAxes(plan: Plan, point: number): number[] {
   let rest = point;

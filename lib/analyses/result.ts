@@ -9,6 +9,8 @@ export interface AxisDocument {
   readonly unit: string;
   readonly scale: "logarithmic" | "linear" | "list";
   readonly values: readonly number[];
+  /** In the outline of a plan: how many values there are, where `values` has but the first and the last of them. */
+  readonly count?: number;
 }
 
 export interface TraceDocument {

@@ -2,6 +2,7 @@ import { describe, expect, it } from "vitest";
 import { decodeColumns, encodeColumns } from "@/lib/analyses/columns-document";
 import { compile } from "@/lib/analyses/compile";
 import { type RunMatter, toDocument } from "@/lib/analyses/document";
+import { countOf, outlineOf } from "@/lib/analyses/plan";
 import { OUTCOMES } from "@/lib/solver/outcome";
 
 const TEXT = `title "Columns (invented)"
@@ -69,7 +70,8 @@ describe("the binary form of a run document", () => {
     const length = view.getFloat64(8, true);
     const head = JSON.parse(new TextDecoder().decode(new Uint8Array(bytes, 16, length)));
     expect(head).toMatchObject({ points: 12, traces: [{ name: "y" }, { name: "i" }] });
-    const first = 16 + 8 * Math.ceil(length / 8);
+    // The four values of the axis come first.
+    const first = 16 + 8 * Math.ceil(length / 8) + 8 * 4;
     expect(view.getFloat64(first + 8 * 3, true)).toBe(0.1 + 3 / 3);
     // Two traces, one reading per point and the bounds come before the outcomes.
     expect(new Uint8Array(bytes, first + 4 * 8 * 12)[9]).toBe(255);
@@ -80,5 +82,17 @@ describe("the binary form of a run document", () => {
     expect(() => decodeColumns(new TextEncoder().encode('{"format":"sweepwright-run/1"}').buffer)).toThrow(
       RangeError,
     );
+  });
+});
+
+describe("the outline of a plan", () => {
+  const { plan } = madeUp();
+  const [axis] = plan.axes;
+  const long = { ...axis!, values: Array.from({ length: 5000 }, (_, i) => i / 7) };
+
+  it("has the ends of a long axis and how many values it has, and leaves a short one as it is", () => {
+    const outline = outlineOf({ ...plan, axes: [long, axis!] });
+    expect(outline.axes).toEqual([{ ...long, values: [0, 4999 / 7], count: 5000 }, axis]);
+    expect(outline.axes.map(countOf)).toEqual([5000, 4]);
   });
 });

@@ -147,7 +147,7 @@ export function CurveFigure(props: Props) {
             failed={account.spans}
             cursor={cursor}
             followed={followed}
-            chosen={point === null ? null : placeOfPoint(set, point)}
+            chosen={point === null || waiting !== null ? null : placeOfPoint(set, point)}
             describedBy={`${id}-keys`}
             empty={waiting ?? "No point is solved here"}
             onCursor={moveCursor}

@@ -19,13 +19,18 @@ export async function fetchDocument(
   return { document: await response.json(), etag: response.headers.get("etag") };
 }
 
+/** Where the columns of a run are. */
+export function columnsPath(id: string): string {
+  return `/api/v1/runs/${id}/columns`;
+}
+
 /** The same with its columns as numbers of the machine, which is many times as fast for a large run. */
 export async function fetchColumns(
   id: string,
   etag: string | null,
 ): Promise<{ document: ColumnsDocument; etag: string | null } | null> {
   const headers: Record<string, string> = etag === null ? {} : { "if-none-match": etag };
-  const response = await fetch(`/api/v1/runs/${id}/columns`, { headers, cache: "no-store" });
+  const response = await fetch(columnsPath(id), { headers });
   if (response.status === 304) return null;
   if (!response.ok) throw await refusal(response);
   return { document: decodeColumns(await response.arrayBuffer()), etag: response.headers.get("etag") };

@@ -1,5 +1,7 @@
 import type { Metadata } from "next";
 import { cache } from "react";
+import { preload } from "react-dom";
+import { outlineOf } from "@/lib/analyses/plan";
 import { actorFor } from "@/lib/auth/actor";
 import { can } from "@/lib/permissions/can";
 import { findVoltageSpan } from "@/lib/services/runs/find-voltage-span";
@@ -9,6 +11,7 @@ import { getRunContext } from "@/lib/services/runs/get-run-context";
 import { getRunDocument } from "@/lib/services/runs/get-run-document";
 import { waitForPoints } from "@/lib/services/runs/wait-for-points";
 import { answered } from "../../../answered";
+import { columnsPath } from "./fetch-run";
 import { readPageState } from "./page-state";
 import { isLive, type RunState } from "./run-shapes";
 import { RunView } from "./run-view";
@@ -53,6 +56,9 @@ export default async function RunPage({ params, searchParams }: Props) {
     for (const one of [value ?? []].flat()) search.append(name, one);
   }
   const state = readPageState(search);
+  // A large document sets out together with the page, not after it.
+  if (!isSmall(run) && run.pointsDone > 0)
+    preload(columnsPath(id), { as: "fetch", crossOrigin: "anonymous" });
   const [found, point, span, context] = await Promise.all([
     isSmall(run) ? getRunDocument(actor, id) : null,
     state.point === null || state.point >= run.points ? null : getPoint(actor, id, state.point),
@@ -63,7 +69,7 @@ export default async function RunPage({ params, searchParams }: Props) {
     <RunView
       key={run.id}
       workspace={workspace}
-      first={run}
+      first={isSmall(run) ? run : { ...run, plan: outlineOf(run.plan) }}
       found={found && { document: found.document, etag: found.etag }}
       context={context}
       point={point}

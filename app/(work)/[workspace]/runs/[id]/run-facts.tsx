@@ -4,6 +4,7 @@ import { formatKnob } from "@/app/_components/curves/figures-in-words";
 import { counted, formatCount } from "@/app/_components/ui/count";
 import { formatSpan } from "@/app/_components/ui/span-of-time";
 import { When } from "@/app/_components/ui/when";
+import { countOf } from "@/lib/analyses/plan";
 import type { AxisDocument } from "@/lib/analyses/result";
 import type { RunState } from "./run-shapes";
 
@@ -81,7 +82,7 @@ function Fact({ name, children }: { readonly name: string; readonly children: Re
 function sweepInWords(axis: AxisDocument): string {
   const { values, scale } = axis;
   const show = (value: number | undefined) => (value === undefined ? "" : formatKnob(axis, value));
-  if (scale === "list" && values.length <= 6) return values.map(show).join(", ");
+  if (scale === "list" && countOf(axis) <= 6) return values.map(show).join(", ");
   const how = scale === "logarithmic" ? ", in equal ratios" : "";
-  return `${show(values[0])} to ${show(values.at(-1))}, ${counted(values.length, "point")}${how}`;
+  return `${show(values[0])} to ${show(values.at(-1))}, ${counted(countOf(axis), "point")}${how}`;
 }

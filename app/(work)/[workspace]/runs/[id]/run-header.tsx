@@ -7,6 +7,7 @@ import { counted, formatCount } from "@/app/_components/ui/count";
 import { Notice } from "@/app/_components/ui/notice";
 import { PageHeader } from "@/app/_components/ui/page-header";
 import { formatSpan } from "@/app/_components/ui/span-of-time";
+import { countOf } from "@/lib/analyses/plan";
 import { cancel, runAgain } from "./fetch-run";
 import { isLive, type RunState } from "./run-shapes";
 import { StaleNotice } from "./stale-notice";
@@ -107,8 +108,8 @@ function sizeInWords(run: RunState, proved: number | null): string {
   const [first, ...outer] = plan.axes;
   const factors = [
     ...(plan.draws > 0 ? [`${counted(plan.draws, "draw")} and nominal`] : []),
-    ...outer.map(({ knob, values }) => settings(knob, values.length)).reverse(),
-    counted(first?.values.length ?? 1, "point"),
+    ...outer.map((axis) => settings(axis.knob, countOf(axis))).reverse(),
+    counted(first === undefined ? 1 : countOf(first), "point"),
   ];
   const size = factors.length > 1 ? factors.join(" × ") : counted(points, "point");
   const solved = pointsDone - pointsFailed;

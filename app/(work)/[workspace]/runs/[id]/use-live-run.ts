@@ -1,6 +1,6 @@
 "use client";
 
-import { useEffect, useRef, useState } from "react";
+import { useEffect, useMemo, useRef, useState } from "react";
 import type { ColumnsDocument } from "@/lib/analyses/columns-document";
 import type { RunDocument } from "@/lib/analyses/result";
 import { DocumentFeed } from "./document-feed";
@@ -93,5 +93,11 @@ export function useLiveRun(first: RunState, found: Found | null): LiveRun {
   }, []);
 
   const behind = !isLive(run.status) && !finished && (isLive(first.status) || document === null);
-  return { run, document, problem, finished, behind, setRun };
+  // The page of a large run begins with the outline of its plan; the document has all of it.
+  const axes = document?.axes;
+  const whole = useMemo(
+    () => (axes === undefined ? run : { ...run, plan: { ...run.plan, axes } }),
+    [run, axes],
+  );
+  return { run: whole, document, problem, finished, behind, setRun };
 }
