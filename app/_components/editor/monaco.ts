@@ -6,6 +6,7 @@ import "monaco-editor/features/codeEditor/register.js";
 import "monaco-editor/features/comment/register.js";
 import "monaco-editor/features/cursorUndo/register.js";
 import "monaco-editor/features/find/register.js";
+import "monaco-editor/features/folding/register.js";
 import "monaco-editor/features/format/register.js";
 import "monaco-editor/features/iPadShowKeyboard/register.js";
 import "monaco-editor/features/indentation/register.js";
@@ -16,9 +17,13 @@ import "monaco-editor/features/multicursor/register.js";
 import "monaco-editor/features/tokenization/register.js";
 import "monaco-editor/features/unusualLineTerminators/register.js";
 import "monaco-editor/features/wordOperations/register.js";
+// The list of completions alone: its feature would bring completions drawn within the line as well.
+import "monaco-editor/editor/contrib/suggest/browser/suggestController.js";
 import * as monaco from "monaco-editor/editor";
-import { format } from "@/lib/language/format";
+import { StandaloneServices } from "monaco-editor/editor/standalone/browser/standaloneServices.js";
+import { IStorageService } from "monaco-editor/platform/storage/common/storage.js";
 import { currentTheme, THEME, watchTheme } from "./monaco-theme";
+import { registerProviders } from "./providers";
 import { tokenizeLine } from "./token-lines";
 
 export const LANGUAGE = "netlist";
@@ -35,6 +40,8 @@ class Open implements monaco.languages.IState {
 }
 
 function setUp(): void {
+  // The list of completions shows what each is about from the start.
+  StandaloneServices.get(IStorageService).store("expandSuggestionDocs", true, 0, 0);
   self.MonacoEnvironment = {
     getWorker: () => new Worker(new URL("./editor.worker.ts", import.meta.url), { type: "module" }),
   };
@@ -62,11 +69,7 @@ function setUp(): void {
       };
     },
   });
-  monaco.languages.registerDocumentFormattingEditProvider(LANGUAGE, {
-    provideDocumentFormattingEdits: (model) => [
-      { range: model.getFullModelRange(), text: format(model.getValue()) },
-    ],
-  });
+  registerProviders(LANGUAGE);
   const paint = () => {
     monaco.editor.defineTheme(THEME, currentTheme());
     monaco.editor.setTheme(THEME);

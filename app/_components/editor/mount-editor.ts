@@ -1,34 +1,51 @@
-import type { Diagnostic } from "@/lib/language/diagnostic";
-import { format } from "@/lib/language/format";
-import type { EditorEvents, EditorHandle } from "./editor-handle";
+import { CursorPlaces } from "./cursor-places";
+import type { EditorEvents, EditorHandle, TextCommand } from "./editor-handle";
+import { addKeys, keepCursorInView } from "./editor-keys";
 import { EDITOR_OPTIONS } from "./editor-options";
-import { isApple } from "./keyboard";
+import { language } from "./language-thread";
 import { markersOf, rangeOf } from "./markers";
 import { LANGUAGE, monaco } from "./monaco";
+import { followPresses, goTo, goToDefinition, mendHere, rename, tellOf } from "./name-actions";
 import { FONT_FAMILY, FONT_SIZE } from "./palette";
-import { ProblemCard } from "./problem-card";
-import { offerFixes } from "./quick-fixes";
+import { PlaceCard } from "./place-card";
+import { type Marked, offerFixesOf, readModel } from "./providers";
+import type { Told } from "./questions";
 
-/** The problems of one text. */
-export interface Marked {
-  readonly text: string;
-  readonly diagnostics: readonly Diagnostic[];
+export interface MountedEvents extends EditorEvents {
+  /** Where the cursor rests, and what stands there. */
+  readonly onRest: (offset: number, told: Told | null) => void;
+  readonly onOutline: () => void;
+  readonly onPlaces: () => void;
+  /** The value of a name at the cursor's point of the preview, as it is shown; null where there is none. */
+  readonly valueAtCursor: (name: string) => string | null;
 }
 
 /** An editor that stands on the page. */
-export interface Mounted extends EditorHandle {
+export interface Mounted extends Omit<EditorHandle, "openOutline"> {
   /** Marks the problems of a text at their places. */
   mark(marked: Marked): void;
+  run(command: TextCommand): void;
+  focus(): void;
   dispose(): void;
 }
+
+/** Commands of the editor's own. */
+const BUILT_IN: Partial<Record<TextCommand, string>> = {
+  complete: "editor.action.triggerSuggest",
+  comment: "editor.action.commentLine",
+  "fold all": "editor.foldAll",
+  "unfold all": "editor.unfoldAll",
+  find: "actions.find",
+};
 
 /** Puts an editor into `place`. Waits for the fonts first: measured with another one, the cursor would stand beside the text. */
 export async function mountEditor(
   place: HTMLElement,
   { text, readOnly, label }: { readonly text: string; readonly readOnly: boolean; readonly label: string },
-  events: EditorEvents,
+  events: MountedEvents,
 ): Promise<Mounted> {
   await document.fonts.load(`${FONT_SIZE}px ${FONT_FAMILY}`);
+  const close = language.open();
   const model = monaco.editor.createModel(text.replaceAll("\r\n", "\n"), LANGUAGE);
   model.setEOL(monaco.editor.EndOfLineSequence.LF);
   const access = { model, readOnly, domReadOnly: readOnly, ariaLabel: label };
@@ -38,91 +55,72 @@ export async function mountEditor(
   const editor = monaco.editor.create(host, { ...EDITOR_OPTIONS, ...access });
 
   let marked: Marked = { text: "", diagnostics: [] };
-  const read = () => model.getValue(monaco.editor.EndOfLinePreference.LF);
+  const read = () => readModel(model);
   const current = () => (read() === marked.text ? marked : null);
+  offerFixesOf(model, readOnly ? () => null : current);
+  const tell = (offset: number) => tellOf(model, offset);
   const edit = (range: monaco.IRange, replacement: string) => {
     editor.pushUndoStop();
     editor.executeEdits("sheet", [{ range, text: replacement }]);
     editor.pushUndoStop();
   };
-  const handle: EditorHandle = {
-    text: read,
-    replace: (next) => edit(model.getFullModelRange(), next),
-    goTo: (span) => {
-      const range = rangeOf(read(), span);
-      editor.setSelection(range);
-      editor.revealRangeInCenterIfOutsideViewport(range);
-      editor.focus();
-    },
-    mend: (fix, of) => {
-      if (readOnly || read() !== of) return;
-      edit(rangeOf(of, fix), fix.text);
-      editor.focus();
-    },
-    format: () => {
-      const next = format(read());
-      if (next !== read()) edit(model.getFullModelRange(), next);
-    },
+  const mend: EditorHandle["mend"] = (fix, of) => {
+    if (readOnly || read() !== of) return;
+    edit(rangeOf(of, fix), fix.text);
+    editor.focus();
   };
-
-  const card = new ProblemCard(editor, current, readOnly ? null : handle.mend);
-  const fixes = readOnly ? null : offerFixes(model, current);
-  addKeys(editor, events);
+  const card = new PlaceCard(editor, {
+    marked: current,
+    mend: readOnly ? null : mend,
+    tell,
+    valueAtCursor: events.valueAtCursor,
+  });
+  const cursor = new CursorPlaces(editor, { tell, onRest: events.onRest });
+  const presses = followPresses(editor);
+  const format = () => void editor.getAction("editor.action.formatDocument")?.run();
+  const run = (command: TextCommand) => {
+    editor.focus();
+    if (command === "tell") void card.showAtCursor();
+    else if (command === "mend here") {
+      if (!mendHere(editor)) void card.showAtCursor("Nothing to mend here.");
+    } else if (command === "rename") void rename(editor);
+    else if (command === "definition") void goToDefinition(editor, model.getOffsetAt(editor.getPosition()!));
+    else editor.trigger("menu", BUILT_IN[command]!, {});
+  };
+  addKeys(editor, events, {
+    tell: () => run("tell"),
+    rename: readOnly ? null : () => run("rename"),
+    mend: readOnly ? null : () => run("mend here"),
+    definition: () => run("definition"),
+    format: readOnly ? null : format,
+    outline: events.onOutline,
+    places: events.onPlaces,
+  });
   keepCursorInView(editor);
   model.onDidChangeContent(() => events.onEdit());
+
   return {
-    ...handle,
+    text: read,
+    replace: (next) => edit(model.getFullModelRange(), next),
+    goTo: (span) => goTo(editor, span),
+    show: (span) => cursor.show(span),
+    mend,
+    format,
+    run,
+    focus: () => editor.focus(),
     mark: (next) => {
       marked = next;
       monaco.editor.setModelMarkers(model, "checker", markersOf(next.text, next.diagnostics));
       card.refresh();
     },
     dispose: () => {
-      fixes?.dispose();
+      presses.dispose();
+      cursor.dispose();
       card.dispose();
       editor.dispose();
       model.dispose();
       host.remove();
+      close();
     },
   };
-}
-
-function addKeys(editor: monaco.editor.IStandaloneCodeEditor, events: EditorEvents): void {
-  const { CtrlCmd, WinCtrl, Shift } = monaco.KeyMod;
-  const { Enter, KeyM, KeyS } = monaco.KeyCode;
-  const queue = { id: "queue-run", label: "Queue run", keybindings: [CtrlCmd | Enter], run: events.onQueue };
-  const save = {
-    id: "save-revision",
-    label: "Save revision",
-    keybindings: [CtrlCmd | KeyS],
-    run: events.onSave,
-  };
-  editor.addAction(queue);
-  editor.addAction(save);
-  let moves = false;
-  const turnTab = () => {
-    moves = !moves;
-    editor.updateOptions({ tabFocusMode: moves });
-    events.onTab(moves ? "moves on" : "indents");
-  };
-  // On Apple's keyboards ⌘ M puts the window away and Ctrl M ends a line.
-  const tabKey = isApple() ? WinCtrl | Shift | KeyM : CtrlCmd | KeyM;
-  editor.addAction({
-    id: "turn-tab",
-    label: "Let Tab move on or indent",
-    keybindings: [tabKey],
-    run: turnTab,
-  });
-}
-
-/** The list of problems that comes below takes room from the editor; the line one writes in must not go under it. */
-function keepCursorInView(editor: monaco.editor.IStandaloneCodeEditor): void {
-  let height = editor.getLayoutInfo().height;
-  editor.onDidLayoutChange((layout) => {
-    const position = editor.getPosition();
-    if (layout.height < height && position !== null && editor.hasTextFocus()) {
-      editor.revealPosition(position, monaco.editor.ScrollType.Immediate);
-    }
-    height = layout.height;
-  });
 }

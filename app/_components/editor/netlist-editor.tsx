@@ -4,10 +4,15 @@ import "./editor.css";
 import { type Ref, useEffect, useImperativeHandle, useRef, useState } from "react";
 import { format } from "@/lib/language/format";
 import type { EditorEvents, EditorHandle } from "./editor-handle";
+import { JumpList } from "./jump-list";
 import { mend } from "./markers";
-import type { Marked, Mounted } from "./mount-editor";
-import { FONT_FAMILY, FONT_SIZE, LINE_HEIGHT } from "./palette";
+import type { Mounted, MountedEvents } from "./mount-editor";
+import { PlainBox } from "./plain-box";
 import { PlainLines } from "./plain-lines";
+import type { Marked } from "./providers";
+import type { Told } from "./questions";
+import { type BarCommand, TextBar } from "./text-bar";
+import { useJumps } from "./use-jumps";
 
 interface Props extends EditorEvents {
   readonly ref: Ref<EditorHandle>;
@@ -16,6 +21,8 @@ interface Props extends EditorEvents {
   readonly readOnly: boolean;
   /** Problems to mark, and the text they are of. */
   readonly problems: Marked | null;
+  /** The value of a net, element, knob or value at the cursor's point of the preview; null where there is none. */
+  readonly valueAtCursor?: (name: string) => string | null;
 }
 
 const LABEL = "Netlist text";
@@ -24,28 +31,68 @@ const LABEL = "Netlist text";
  * The text of a netlist to write in. The server renders it as plain lines; the editor takes their place when it has arrived, and
  * a plain box does where it cannot be had.
  */
-export function NetlistEditor({ ref, initial, readOnly, problems, ...events }: Props) {
+export function NetlistEditor({
+  ref,
+  initial,
+  readOnly,
+  problems,
+  valueAtCursor = noValue,
+  ...events
+}: Props) {
   const place = useRef<HTMLDivElement>(null);
   const box = useRef<HTMLTextAreaElement>(null);
   const mounted = useRef<Mounted | null>(null);
-  const live = useRef(events);
   const [state, setState] = useState<"coming" | "here" | "missing">("coming");
+  const [told, setTold] = useState<Told | null>(null);
+  const jumps = useJumps();
 
+  const boxText = () => box.current?.value ?? initial;
+  const put = (text: string) => {
+    if (box.current === null) return;
+    box.current.value = text;
+    events.onEdit();
+  };
+  const plain: EditorHandle = {
+    text: boxText,
+    replace: put,
+    goTo: ({ from, to }) => {
+      box.current?.focus();
+      box.current?.setSelectionRange(from, to);
+    },
+    show: (span) => {
+      if (span !== null) box.current?.setSelectionRange(span.from, span.to);
+    },
+    mend: (fix, of) => {
+      if (boxText() === of) put(mend(of, fix));
+    },
+    format: () => put(format(boxText())),
+    openOutline: () => {},
+  };
+  const now = () => mounted.current ?? plain;
+  const openOutline = () => jumps.openOutline(now().text());
+  const live = useRef({ events, valueAtCursor, openOutline, jumps, told });
   useEffect(() => {
-    live.current = events;
+    live.current = { events, valueAtCursor, openOutline, jumps, told };
   });
 
   // biome-ignore lint/correctness/useExhaustiveDependencies: mounted once; a later text or right comes through the handle
   useEffect(() => {
     let gone = false;
-    const told: EditorEvents = {
-      onEdit: () => live.current.onEdit(),
-      onQueue: () => live.current.onQueue(),
-      onSave: () => live.current.onSave(),
-      onTab: (does) => live.current.onTab(does),
+    const on: MountedEvents = {
+      onEdit: () => live.current.events.onEdit(),
+      onQueue: () => live.current.events.onQueue(),
+      onSave: () => live.current.events.onSave(),
+      onTab: (does) => live.current.events.onTab(does),
+      onRest: (offset, what) => {
+        setTold(what);
+        live.current.events.onCursor?.(offset, what?.paths ?? []);
+      },
+      onOutline: () => live.current.openOutline(),
+      onPlaces: () => live.current.jumps.openPlaces(now().text(), live.current.told),
+      valueAtCursor: (name) => live.current.valueAtCursor(name),
     };
     import("./mount-editor")
-      .then(({ mountEditor }) => mountEditor(place.current!, { text: initial, readOnly, label: LABEL }, told))
+      .then(({ mountEditor }) => mountEditor(place.current!, { text: initial, readOnly, label: LABEL }, on))
       .then((editor) => {
         if (gone) return editor.dispose();
         mounted.current = editor;
@@ -55,7 +102,7 @@ export function NetlistEditor({ ref, initial, readOnly, problems, ...events }: P
         console.error("The editor could not be loaded; a plain box takes its place.", error);
         if (gone) return;
         setState("missing");
-        told.onTab("always moves on");
+        on.onTab("always moves on");
       });
     return () => {
       gone = true;
@@ -68,58 +115,59 @@ export function NetlistEditor({ ref, initial, readOnly, problems, ...events }: P
     if (state === "here" && problems !== null) mounted.current?.mark(problems);
   }, [problems, state]);
 
-  useImperativeHandle(ref, () => {
-    const boxText = () => box.current?.value ?? initial;
-    const put = (text: string) => {
-      if (box.current === null) return;
-      box.current.value = text;
-      live.current.onEdit();
-    };
-    const plain: EditorHandle = {
-      text: boxText,
-      replace: put,
-      goTo: ({ from, to }) => {
-        box.current?.focus();
-        box.current?.setSelectionRange(from, to);
-      },
-      mend: (fix, of) => {
-        if (boxText() === of) put(mend(of, fix));
-      },
-      format: () => put(format(boxText())),
-    };
-    const now = () => mounted.current ?? plain;
-    return {
-      text: () => now().text(),
-      replace: (text) => now().replace(text),
-      goTo: (span) => now().goTo(span),
-      mend: (fix, of) => now().mend(fix, of),
-      format: () => now().format(),
-    };
-  }, [initial]);
+  useImperativeHandle(ref, () => ({
+    text: () => now().text(),
+    replace: (text) => now().replace(text),
+    goTo: (span) => now().goTo(span),
+    show: (span) => now().show(span),
+    mend: (fix, of) => now().mend(fix, of),
+    format: () => now().format(),
+    openOutline,
+  }));
+
+  const run = (command: BarCommand) => {
+    if (command === "outline") openOutline();
+    else if (command === "places") jumps.openPlaces(now().text(), told);
+    else if (command === "format") now().format();
+    else mounted.current?.run(command);
+  };
+  const closeJumps = () => {
+    jumps.close();
+    if (mounted.current === null) box.current?.focus();
+    else mounted.current.focus();
+  };
 
   return (
-    <div className="relative h-full min-h-0 bg-surface">
-      <div ref={place} className="sheet-editor absolute inset-0" hidden={state === "missing"} />
-      {state === "coming" && <PlainLines text={initial} label={`${LABEL}, the editor is loading`} />}
-      {state === "missing" && (
-        <textarea
-          ref={box}
-          aria-label={LABEL}
-          defaultValue={initial}
-          readOnly={readOnly}
-          spellCheck={false}
-          onChange={() => live.current.onEdit()}
-          onKeyDown={(event) => {
-            if (!event.ctrlKey && !event.metaKey) return;
-            if (event.key === "Enter") live.current.onQueue();
-            else if (event.key === "s") live.current.onSave();
-            else return;
-            event.preventDefault();
-          }}
-          className="absolute inset-0 resize-none bg-surface p-3"
-          style={{ fontFamily: FONT_FAMILY, fontSize: FONT_SIZE, lineHeight: `${LINE_HEIGHT}px` }}
-        />
-      )}
+    <div className="flex h-full min-h-0 flex-col">
+      <TextBar
+        told={told}
+        value={told === null ? null : (told.paths.map(valueAtCursor).find((value) => value !== null) ?? null)}
+        readOnly={readOnly}
+        state={state}
+        onRun={run}
+      />
+      <div className="relative min-h-0 grow bg-surface">
+        <div ref={place} className="sheet-editor absolute inset-0" hidden={state === "missing"} />
+        {state === "coming" && <PlainLines text={initial} label={`${LABEL}, the editor is loading`} />}
+        {state === "missing" && (
+          <PlainBox ref={box} label={LABEL} initial={initial} readOnly={readOnly} events={events} />
+        )}
+        {jumps.jumps !== null && (
+          <JumpList
+            key={jumps.jumps.label}
+            {...jumps.jumps}
+            onClose={closeJumps}
+            onJump={(span) => {
+              jumps.close();
+              now().goTo(span);
+            }}
+          />
+        )}
+      </div>
     </div>
   );
+}
+
+function noValue(): null {
+  return null;
 }

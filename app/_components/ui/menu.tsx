@@ -12,10 +12,13 @@ const ITEM =
 export function Menu({
   trigger,
   align = "end",
+  onClosed,
   children,
 }: {
   readonly trigger: ReactNode;
   readonly align?: "start" | "end";
+  /** When it has closed; prevent the event's default to give the focus to something other than the trigger. */
+  readonly onClosed?: (event: Event) => void;
   readonly children: ReactNode;
 }) {
   return (
@@ -26,6 +29,7 @@ export function Menu({
           align={align}
           sideOffset={4}
           collisionPadding={8}
+          {...(onClosed === undefined ? {} : { onCloseAutoFocus: onClosed })}
           className="z-40 max-h-(--radix-dropdown-menu-content-available-height) min-w-52 max-w-80 overflow-y-auto rounded-[2px] border border-edge bg-surface p-1 text-ink"
         >
           {children}

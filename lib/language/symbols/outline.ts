@@ -11,6 +11,8 @@ export interface OutlineEntry extends Span {
     | "block"
     | "element"
     | "sweep"
+    | "draws"
+    | "shelf"
     | "trace"
     | "reading"
     | "requirement";
@@ -42,6 +44,11 @@ function entriesOf(statement: Statement, text: string): OutlineEntry[] {
         from: part.from,
         to: part.to,
       }));
+    case "use":
+      return [entry(statement.shelf.text, "shelf")];
+    case "draws":
+    case "seek":
+      return [entry(text.slice(from, to), "draws")];
     case "sweep":
       return [entry(statement.knob.text, "sweep")];
     case "show":

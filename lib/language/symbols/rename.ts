@@ -5,7 +5,7 @@ import { Report } from "../report";
 import { isKind } from "../scope";
 import type { Span } from "../span";
 import { CONSTANTS, quote, STATEMENT_WORDS } from "../token";
-import type { NamedSymbol, NameScope } from "./symbol";
+import type { NamedSymbol, NameScope, SymbolMeaning } from "./symbol";
 import { symbolsOf } from "./symbols";
 
 /** Put `text` over [from, to). */
@@ -53,15 +53,33 @@ function refusalOf(symbol: NamedSymbol, name: string): string | null {
   if (isWord || isKind(name) || name === "ground" || name === "temperature") {
     return `${quote(name)} is a word of the language.`;
   }
-  if (symbol.meaning === "group") return symbol.scope.groups.has(name) ? `${quote(name)} is taken.` : null;
-  return isTaken(symbol, name) ? `${quote(name)} is taken.` : null;
+  const taken = symbol.meaning === "group" ? symbol.scope.groups.get(name) : takenBy(symbol, name);
+  return taken === undefined ? null : `${quote(name)} is taken: it is ${ARTICLES[taken.meaning]} already.`;
 }
 
-/** Whether a name is in use where the symbol is seen, or stands in a scope around it. */
-function isTaken({ scope, meaning }: NamedSymbol, name: string): boolean {
-  const has = (one: NameScope) => one.names.has(name) || (meaning !== "net" && one.traces.has(name));
-  for (let around = scope.parent; around !== null; around = around.parent) if (has(around)) return true;
-  return [...scope.all()].some(has);
+const ARTICLES: Readonly<Record<SymbolMeaning, string>> = {
+  net: "a net",
+  port: "a net of a block",
+  element: "an element",
+  instance: "an instance of a block",
+  knob: "a knob",
+  let: "a value",
+  model: "a model",
+  block: "a block",
+  trace: "a trace",
+  reading: "a reading",
+  group: "a group",
+};
+
+/** What has a name where the symbol is seen, or in a scope around it. */
+function takenBy({ scope, meaning }: NamedSymbol, name: string): NamedSymbol | undefined {
+  const around: NameScope[] = [...scope.all()];
+  for (let one = scope.parent; one !== null; one = one.parent) around.push(one);
+  for (const one of around) {
+    const found = one.names.get(name) ?? (meaning === "net" ? undefined : one.traces.get(name));
+    if (found !== undefined) return found;
+  }
+  return undefined;
 }
 
 /** A text with edits made, which stand in its order and do not overlap. */
