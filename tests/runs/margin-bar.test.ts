@@ -99,14 +99,13 @@ describe("a requirement in words", () => {
     expect(plain(limitsInWords({ ...BEND, allowed }))).toBe(words);
   });
 
-  test("a worst value that a few digits would put on its limit gets more of them", () => {
-    const near = {
-      ...BEND,
-      allowed: { low: null, high: 0.0005 },
-      value: { ...BEND.value, worst: 0.00050003 },
-    };
-    expect(plain(worstInWords(near))).toBe("500.03 µV");
-    expect(plain(worstInWords({ ...near, value: { ...near.value, worst: 0.0005 } }))).toBe("500 µV");
+  test("a worst value has as many digits as tell how far it is from its limit", () => {
+    const at = (worst: number, margin: number) =>
+      plain(worstInWords({ ...BEND, margin, value: { ...BEND.value, worst } }));
+    expect(at(0.00050003, -3e-8)).toBe("500.030 µV");
+    expect(at(1.1805, 0.0074)).toBe("1.181 V");
+    expect(at(0.0005, 0)).toBe("500 µV");
+    expect(at(0, 1)).toBe("0 V");
   });
 
   test("without data it says so and no more", () => {

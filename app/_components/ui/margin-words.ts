@@ -15,16 +15,12 @@ export function limitsInWords({ allowed, unit }: RequirementDocument): string {
   return low === -high ? `within ±${show(high)}` : spanInWords(low, high, unit, 6);
 }
 
-/** The worst value in short: as many digits as tell it from the limit that it is nearest to. */
-export function worstInWords({ value, allowed, unit }: RequirementDocument): string {
-  const { worst } = value;
+/** The worst value in short: as many digits as tell it from the limit that it is nearest to, and how far from it. */
+export function worstInWords({ value: { worst }, margin, unit }: RequirementDocument): string {
   if (worst === null) return "no value";
-  const limits = [allowed.low, allowed.high].filter((limit) => limit !== null && limit !== worst);
-  const isTold = (digits: number) =>
-    limits.every((limit) => Number(worst.toPrecision(digits)) !== Number(limit!.toPrecision(digits)));
-  let digits = DIGITS;
-  while (digits < 9 && !isTold(digits)) digits++;
-  return formatQuantity(worst, unit, digits);
+  if (worst === 0 || margin === null || margin === 0) return formatQuantity(worst, unit, DIGITS);
+  const beyond = Math.ceil(Math.log10(Math.abs(worst) / Math.abs(margin)));
+  return formatQuantity(worst, unit, Math.min(9, Math.max(DIGITS, beyond + 1)));
 }
 
 /** "temperature 40 °C, draw 211"; empty where it is the same everywhere. */

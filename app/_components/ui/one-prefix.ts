@@ -10,6 +10,8 @@ export function onePrefix(
   values: readonly number[],
   unit: string,
   digits: number,
+  /** Zeros at the end stay, so that columns of figures line up. */
+  isFixed = false,
 ): { readonly texts: readonly string[]; readonly unit: string } {
   const largest = values.reduce((most, value) => Math.max(most, Math.abs(value)), 0);
   if (largest === 0) return { texts: values.map(() => "0"), unit: unit === "1" ? "" : unit };
@@ -24,7 +26,7 @@ export function onePrefix(
   }
   const whole = Math.floor(Math.log10(rounded / 10 ** power) + 1e-9) + 1;
   const decimals = Math.max(0, digits - whole);
-  const texts = values.map((value) => plain((value / 10 ** power).toFixed(decimals)));
+  const texts = values.map((value) => plain((value / 10 ** power).toFixed(decimals), isFixed));
   return { texts, unit: prefixed };
 }
 
@@ -34,8 +36,8 @@ export function spanInWords(low: number, high: number, unit: string, digits: num
   return `${texts[0]} to ${texts[1]}${shared === "" ? "" : NARROW}${shared}`;
 }
 
-/** Without zeros at the end that say nothing, and with a proper minus sign; no zero has a sign. */
-function plain(text: string): string {
-  const short = text.includes(".") ? text.replace(/\.?0+$/, "") : text;
+/** Without zeros at the end unless they are to stay, and with a proper minus sign; no zero has a sign. */
+function plain(text: string, isFixed: boolean): string {
+  const short = text.includes(".") && !isFixed ? text.replace(/\.?0+$/, "") : text;
   return short === "-0" ? "0" : short.replace("-", "\u2212");
 }

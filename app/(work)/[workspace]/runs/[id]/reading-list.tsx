@@ -1,4 +1,4 @@
-import { formatValue } from "@/app/_components/curves/figures-in-words";
+import { onePrefix } from "@/app/_components/ui/one-prefix";
 import { Cell, HeadCell, Table, TableFrame } from "@/app/_components/ui/table";
 import type { AxisDocument, ReadingDocument } from "@/lib/analyses/result";
 import { LineLink } from "./requirement-list";
@@ -65,7 +65,7 @@ function Across({ numbers, settings, links }: TableProps & { readonly links: Tex
             </Cell>
             {settings.map((words, row) => (
               <Cell key={words} figure>
-                {formatValue(reading.values[row] ?? null, reading.unit)}
+                {written(reading, settings.length)(reading.values[row])}
                 <Spread reading={reading} settings={settings.length} row={row} />
               </Cell>
             ))}
@@ -96,7 +96,7 @@ function Down({ numbers, settings }: TableProps) {
             <Cell className="figures">{words}</Cell>
             {numbers.map((reading) => (
               <Cell key={reading.name} figure>
-                {formatValue(reading.values[row] ?? null, reading.unit)}
+                {written(reading, settings.length)(reading.values[row])}
                 <Spread reading={reading} settings={settings.length} row={row} />
               </Cell>
             ))}
@@ -107,6 +107,17 @@ function Down({ numbers, settings }: TableProps) {
   );
 }
 
+/** Writes values of a reading with the prefix of its largest at any setting, so that they can be compared; six digits of that one. */
+function written({ values, unit }: ReadingDocument, settings: number) {
+  const known = values.slice(0, settings).filter((value) => value !== null);
+  const largest = known.reduce((most, value) => (Math.abs(value) > Math.abs(most) ? value : most), 0);
+  return (value: number | null | undefined) => {
+    if (value === null || value === undefined) return "no value";
+    const { texts, unit: shared } = onePrefix([value, largest], unit, 6, true);
+    return shared === "" ? texts[0]! : `${texts[0]}\u202f${shared}`;
+  };
+}
+
 interface SpreadProps {
   readonly reading: ReadingDocument;
   readonly settings: number;
@@ -114,7 +125,9 @@ interface SpreadProps {
 }
 
 /** The least and the most of a setting over the random draws; the first rows are the nominal design. */
-function Spread({ reading: { values, unit }, settings, row }: SpreadProps) {
+function Spread({ reading, settings, row }: SpreadProps) {
+  const { values } = reading;
+  const show = written(reading, settings);
   const drawn: number[] = [];
   let unknown = 0;
   for (let at = settings + row; at < values.length; at += settings) {
@@ -128,9 +141,9 @@ function Spread({ reading: { values, unit }, settings, row }: SpreadProps) {
   const most = drawn.reduce((a, b) => Math.max(a, b));
   return (
     <span className="block text-quiet text-xs">
-      {formatValue(least, unit)}
+      {show(least)}
       <br />
-      <span className="sr-only">over the draws </span>to {formatValue(most, unit)}
+      <span className="sr-only">over the draws </span>to {show(most)}
       {unknown > 0 && `, ${unknown} unknown`}
     </span>
   );

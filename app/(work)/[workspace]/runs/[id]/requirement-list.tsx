@@ -26,7 +26,7 @@ export function RequirementList({ requirements, links, onPlace }: Props) {
   const numbered = requirements.map((one, index) => ({ one: one as Remarked, index }));
   numbered.sort((a, b) => ORDER[a.one.verdict] - ORDER[b.one.verdict] || a.index - b.index);
   return (
-    <section aria-labelledby="requirements">
+    <section aria-labelledby="requirements" className="@container min-w-0">
       <Headline requirements={requirements} />
       <ul className="mt-2 border-t">
         {numbered.map(({ one, index }) => (
@@ -34,27 +34,27 @@ export function RequirementList({ requirements, links, onPlace }: Props) {
             <p className="sr-only">{marginSentence(one)}</p>
             <div
               aria-hidden="true"
-              className="grid grid-cols-[minmax(0,1fr)_auto] items-center gap-x-3 gap-y-1 sm:grid-cols-[5rem_minmax(0,1fr)_minmax(5rem,8rem)_auto]"
+              className="grid grid-cols-[minmax(0,1fr)_auto] items-center gap-x-3 gap-y-1 @lg:grid-cols-[4.5rem_minmax(0,1fr)_minmax(4rem,7rem)_7rem]"
             >
               <StateBadge state={one.verdict} />
-              <span className="order-first min-w-0 break-words font-semibold text-sm sm:order-none">
+              <span className="order-first min-w-0 break-words font-semibold text-sm @lg:order-none">
                 {one.label}
               </span>
-              <span className="col-span-2 sm:col-span-1">
+              <span className="min-w-0">
                 <MarginBar requirement={one} decorative />
               </span>
-              <span className="figures col-span-2 text-right leading-tight sm:col-span-1 sm:min-w-28">
+              <span className="figures min-w-24 text-right leading-tight @lg:min-w-0">
                 {worstInWords(one)}
                 <span className="block text-quiet text-xs">{limitsInWords(one)}</span>
               </span>
             </div>
-            <p className="flex flex-wrap items-baseline gap-x-3 text-quiet text-xs sm:pl-[5.75rem]">
+            <p className="flex flex-wrap items-baseline gap-x-3 text-quiet text-xs @lg:pl-[5.25rem]">
               <Remainder one={one} />
               {one.worst !== null && placeInWords(one) !== "" && (
                 <Button
                   size="small"
                   tone="quiet"
-                  className="figures min-h-6! px-1! font-normal! underline decoration-edge underline-offset-3"
+                  className="figures min-h-6! whitespace-normal! px-0! text-left! font-normal! underline decoration-edge underline-offset-3"
                   aria-label={`Show the worst place of ${one.label}: ${placeInWords(one)}`}
                   onClick={() => onPlace(one.worst!, one.label)}
                 >
@@ -64,7 +64,7 @@ export function RequirementList({ requirements, links, onPlace }: Props) {
               <LineLink line={links.requirementLines[index]} links={links} label={one.label} />
             </p>
             {one.remark !== undefined && (
-              <p className="border-nodata border-l-2 pl-2 text-xs sm:ml-[5.75rem]">{one.remark}</p>
+              <p className="border-nodata border-l-2 pl-2 text-xs @lg:ml-[5.25rem]">{one.remark}</p>
             )}
           </li>
         ))}
