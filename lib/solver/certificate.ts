@@ -18,8 +18,9 @@ const MOST_TRIES = 6;
 const WORN = 0.5;
 /** V. Where the sparse factors prove a wider radius, or none, the inverse is tried. */
 const CONTENT = 1e-11;
-/** Unknowns of a point for which an inverse, which is dense, is made. */
+/** Unknowns of a point for which an inverse, which is dense, is made where it may prove a narrower radius, or where nothing else proves any. */
 const MOST_DENSE = 300;
+const MOST_RESCUED = 1500;
 /** V. A wider radius must come from rounding: an answer that one more step would mend is refused. */
 const SUSPECT = 1e-10;
 /** How many times the part that rounding makes. */
@@ -98,11 +99,12 @@ export class Certificate {
   prove(): number {
     if (!this.canProve) return Number.NaN;
     this.gatherDoubt(1);
-    const sparse = this.searchSparsely();
-    if (sparse <= CONTENT || this.isVoltage.length > MOST_DENSE) return this.judged(sparse);
+    const sparse = this.judged(this.searchSparsely());
+    if (sparse <= CONTENT || this.isVoltage.length > (sparse > 0 ? MOST_DENSE : MOST_RESCUED)) return sparse;
+    this.gatherDoubt(1);
     this.bounds = this.inverse;
-    const dense = this.searchByInverse();
-    return this.judged(Number.isNaN(dense) || sparse < dense ? sparse : dense);
+    const dense = this.judged(this.searchByInverse());
+    return dense >= sparse || Number.isNaN(dense) ? sparse : dense;
   }
 
   private judged(radius: number): number {

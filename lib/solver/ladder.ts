@@ -16,7 +16,7 @@ import { shuntRamp } from "./shunt-ramp";
 import { unsettled } from "./unsettled";
 
 const WARM_STEPS = 12;
-const COLD_STEPS = 100;
+const COLD_STEPS = 50;
 const SEARCH_STEPS = 60;
 /** Singular points of a strand whose matrix is decomposed; each may cost as much as a hundred points. */
 const MOST_DIAGNOSES = 16;
@@ -35,15 +35,22 @@ export class Ladder {
   private readonly linear: LinearSolver;
   private readonly shape: SparseShape;
   private readonly certificate: Certificate;
+  private readonly reported: Rung | undefined;
   /** Points that failed since one was solved. */
   private failures = 0;
+  /** Where Newton's method gave up from a cold start: most of a circuit may stand right there, and only a part go to and fro. */
+  private readonly left: { readonly x: Float64Array; readonly low: Float64Array };
   /** Diagnoses that the present strand may still have. */
   private diagnoses = MOST_DIAGNOSES;
 
-  /** The pivots are chosen on a cold start at the point to which `system` is turned. Without `isProving` no bound is sought. */
+  /**
+   * The pivots are chosen on a cold start at the point to which `system` is turned. Without `isProving` no bound is sought. Some rungs
+   * may be left out.
+   */
   constructor(
     private readonly system: System,
     private readonly isProving = true,
+    private readonly rungs: readonly Rung[] = RUNGS,
   ) {
     const { pattern, state, circuit } = system;
     system.startCold();
@@ -62,6 +69,8 @@ export class Ladder {
       assemble: () => system.assemble(),
     };
     this.certificate = new Certificate(system, this.linear);
+    this.reported = rungs.includes(REPORTED) ? REPORTED : rungs.at(-1);
+    this.left = { x: new Float64Array(state.x.length), low: new Float64Array(state.x.length) };
   }
 
   /** Forgets what was solved before, so that the next point does not depend on it. */
@@ -78,7 +87,7 @@ export class Ladder {
     const { circuit, state } = system;
     let iterations = 0;
     let failed: Failed | null = null;
-    for (const rung of RUNGS) {
+    for (const rung of this.rungs) {
       if (rung === "warm start" && !isWarm) continue;
       if (DEAR.has(rung) && this.failures >= MOST_DEAR) continue;
       state.share = 1;
@@ -89,7 +98,7 @@ export class Ladder {
         const bound = this.isProving ? this.certificate.prove() : Number.NaN;
         return { kind, iterations, residual: largestResidual(circuit, state), bound, rung };
       }
-      if (rung !== REPORTED) continue;
+      if (rung !== this.reported) continue;
       const free = wasSingular && this.diagnoses-- > 0 ? freeUnknowns(this.shape, state.jacobian) : [];
       failed = { kind, rung, residual: largestResidual(circuit, state), unsettled: unsettled(bench, free) };
     }
@@ -97,9 +106,31 @@ export class Ladder {
     return { ...failed!, iterations };
   }
 
-  private standAtRest(): void {
-    this.system.state.x.fill(0);
-    this.system.state.low.fill(0);
+  /** Searches from where Newton's method gave up, and from rest where that leads nowhere. */
+  private searched(by: (bench: Bench, most: number) => Attempt): Attempt {
+    const { bench, left } = this;
+    const { x, low } = this.system.state;
+    x.set(left.x);
+    low.set(left.low);
+    const first = x.every((value) => value === 0) ? null : by(bench, SEARCH_STEPS);
+    if (first?.kind === "converged") return first;
+    x.fill(0);
+    low.fill(0);
+    const second = by(bench, SEARCH_STEPS);
+    return { ...second, iterations: (first?.iterations ?? 0) + second.iterations };
+  }
+
+  private newton(): Attempt {
+    const { system, left } = this;
+    system.startCold();
+    const attempt = newton(this.bench, false, COLD_STEPS);
+    const { x, low } = system.state;
+    const isNumber = x.every(Number.isFinite);
+    for (let j = 0; j < x.length; j++) {
+      left.x[j] = isNumber ? x[j]! : 0;
+      left.low[j] = isNumber ? low[j]! : 0;
+    }
+    return attempt;
   }
 
   private attempt(rung: Rung): Attempt {
@@ -108,14 +139,11 @@ export class Ladder {
         this.system.settle();
         return newton(this.bench, true, WARM_STEPS);
       case "newton":
-        this.system.startCold();
-        return newton(this.bench, false, COLD_STEPS);
+        return this.newton();
       case "line search":
-        this.standAtRest();
-        return lineSearch(this.bench, SEARCH_STEPS);
+        return this.searched(lineSearch);
       case "damped newton":
-        this.standAtRest();
-        return damped(this.bench, SEARCH_STEPS);
+        return this.searched(damped);
       case "pseudo-transient":
         return pseudoTransient(this.bench, new Aided(this.system));
       case "source ramp":

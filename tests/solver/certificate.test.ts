@@ -146,4 +146,39 @@ show p.v`;
     expect(boundOf(1.01 / conductance)).toBeLessThanOrEqual(1e-12);
     expect(boundOf(0.99 / conductance)).toBeLessThanOrEqual(1e-12);
   });
+
+  test("proves a follower of a net that rounding leaves open by far more than its own knee is wide", () => {
+    // 0.3 mA circulate in the lit diode, and what their rounding leaves meets 5 GΩ; times the gain it is volts.
+    const { bound } = solveRange(
+      jobOf(`model lit : diode { Is = 0.1 fA, n = 2, photocurrent = 0.3 mA, Rs = 100 Ω }
+model amp : opamp { gain = 1e7, out_low = -5 V, out_high = 5 V }
+ground -- R1 : resistor 5 GΩ -- x -- D1 : lit -- y -- R2 : resistor 30 GΩ -- ground
+A1 : amp { plus = x, minus = f, out = f }
+f -- R3 : resistor 10 kΩ -- ground
+show f.v`),
+      0,
+      1,
+    );
+    expect(bound[0]).toBeGreaterThan(1e-9);
+    expect(bound[0]).toBeLessThan(1e-6);
+  });
+
+  test.each([
+    ["max(a.v / 1 V, 1.5 * a.v / 1 V)", "0 A", 0],
+    ["abs(a.v / 1 V) + 3 * a.v / 1 V", "0 A", 0],
+    ["tanh(a.v / 1 mV)", "2 mA", 1],
+  ])(
+    "proves a law at its kink, and where its slope is beyond the range of numbers: %s",
+    (law, source, volts) => {
+      const { bound, unknowns } = solveRange(
+        jobOf(`ground -- I1 : current ${source} -- a -- R1 : resistor 1 kΩ -- ground
+L1 : law { plus = a, minus = ground, amps = 1 mA * (${law}) }
+show a.v`),
+        0,
+        1,
+      );
+      expect(bound[0]).toBeLessThanOrEqual(1e-12);
+      expect(Math.abs(unknowns[0]![0]! - volts)).toBeLessThanOrEqual(bound[0]!);
+    },
+  );
 });
