@@ -25,7 +25,7 @@ export function SheetRemarks({
             It was written here upon revision {aside.base} and last changed <When iso={aside.at} />.
           </p>
           <div className="mt-2 flex flex-wrap gap-2">
-            <Button size="small" onClick={sheet.takeBack}>
+            <Button size="small" onClick={() => void sheet.takeBack()}>
               Restore it
             </Button>
             <Button size="small" tone="quiet" onClick={sheet.dropAside}>

@@ -21,6 +21,10 @@ export interface Remark {
   readonly signedOut?: boolean;
 }
 
+/** How often a text is put into an editor that may still be loading, and ms between. */
+const TRIES = 100;
+const BETWEEN = 100;
+
 interface Asked {
   readonly workspace: string;
   readonly netlistId: string;
@@ -169,10 +173,17 @@ export function useSheet({ workspace, netlistId, writer, latest, mayQueue }: Ask
     });
   };
 
-  const takeBack = () => {
-    if (drafts.aside === null) return;
+  const takeBack = async () => {
+    const wanted = drafts.aside;
+    if (wanted === null) return;
     const before = settle();
-    put(drafts.aside.text);
+    // The editor may still be on its way; a text that it has not taken must not be forgotten.
+    for (let tries = 0; editor.current?.text() !== wanted.text; tries += 1) {
+      if (tries === TRIES)
+        return refuse("The text was not restored", "The editor has not arrived. Try again.");
+      if (tries > 0) await new Promise((resolve) => setTimeout(resolve, BETWEEN));
+      put(wanted.text);
+    }
     drafts.dropAside();
     if (before !== saved.text) drafts.setAside(before, saved.revision);
   };
