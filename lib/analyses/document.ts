@@ -6,6 +6,8 @@ import type { BranchesDocument } from "./branches-document";
 import { judge } from "./judge";
 import type { Plan } from "./plan";
 import type { Failure, RunDocument } from "./result";
+import type { PointRange } from "./strands";
+import { joined } from "./unstable";
 
 /** What a run has so far. Columns have one value a point of the plan, NaN where nothing is known yet. */
 export interface RunMatter {
@@ -22,6 +24,8 @@ export interface RunMatter {
   /** V; NaN where not proved. */
   readonly bound: Float64Array;
   readonly failures: readonly Failure[];
+  /** Points that are solved and not stable, in any order. */
+  readonly unstable?: readonly PointRange[];
   /** The branches, one document a row, null where a row is not in yet; null or absent where the text does not ask for several operating points. */
   readonly branches?: readonly (BranchesDocument | null)[] | null;
   readonly diagnostics: readonly Diagnostic[];
@@ -59,6 +63,7 @@ export function frameOf(matter: RunMatter): DocumentFrame {
   const solved = OUTCOMES.indexOf("converged");
   const solvedOrNot = outcome.includes(solved) ? "holds" : "no data";
   const starts = lineStarts(text);
+  const unstable = joined(matter.unstable ?? []);
   const judgement = matter.design === null ? null : judge({ design: matter.design, plan }, matter);
   return {
     format: "sweepwright-run/1",
@@ -70,6 +75,7 @@ export function frameOf(matter: RunMatter): DocumentFrame {
     requirements: judgement?.requirements ?? [],
     diagnostics: matter.diagnostics.map((one) => ({ ...one, ...placeOf(starts, one.from) })),
     failures: [...matter.failures].sort((a, b) => a.point - b.point),
+    ...(unstable.length > 0 ? { unstable } : {}),
     ...(matter.branches ? { branches: matter.branches.filter((row) => row !== null) } : {}),
   };
 }

@@ -3,6 +3,7 @@ import { requireAll } from "./requirements";
 import { judgeAtRest } from "./rest";
 import type { ReadingDocument, RequirementDocument, Verdict } from "./result";
 import { type Columns, type Contract, Rows } from "./rows";
+import { remarkUnstable } from "./unstable";
 
 /** What a contract came to. */
 export interface Judgement {
@@ -22,7 +23,9 @@ export function judge(contract: Contract, columns: Columns): Judgement {
   const readings = readAll(contract, rows);
   const followed = requireAll(contract, rows);
   const isSeeking = contract.plan.seek !== undefined;
-  const requirements = isSeeking ? judgeAtRest(contract, columns, followed) : followed;
+  const requirements = isSeeking
+    ? judgeAtRest(contract, columns, followed)
+    : remarkUnstable(contract, rows, columns.unstable ?? [], followed);
   return { readings, requirements, verdict: worstOf(requirements) };
 }
 

@@ -5,6 +5,7 @@ import { requireAll } from "./requirements";
 import type { RequirementDocument, Verdict } from "./result";
 import { type Columns, type Contract, Rows } from "./rows";
 import { type OtherColumns, stableColumns } from "./stable-columns";
+import { isTouched } from "./unstable";
 
 const FLOOR = 1e-18;
 const NOT_SOUGHT = "Judged at the operating points that the sweep follows; others are not looked for here.";
@@ -36,7 +37,7 @@ export function judgeAtRest(
     return merged(followed[k]!, judged[k]!, counting, {
       branches,
       within: branches.filter((_, row) => rows.isWithin(row, windows)),
-      isUnstable: stable.unstable.length > 0,
+      isUnstable: isTouched(stable.unstable, windows, rows),
     });
   });
 }

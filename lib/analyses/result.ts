@@ -1,6 +1,7 @@
 import type { Diagnostic } from "@/lib/language/diagnostic";
 import type { OutcomeKind, Rung } from "@/lib/solver/outcome";
 import type { BranchesDocument } from "./branches-document";
+import type { PointRange } from "./strands";
 import type { Yield } from "./yield";
 
 /** One axis of a run: the first sweep first. `values` in coherent SI units (temperature in K). */
@@ -110,6 +111,11 @@ export interface RunDocument {
   readonly requirements: readonly RequirementDocument[];
   readonly diagnostics: readonly (Diagnostic & { readonly line: number; readonly column: number })[];
   readonly failures: readonly Failure[];
+  /**
+   * Flat points [from, to) that are solved, and that the circuit would leave: an odd number of modes grows there. Absent where there are none.
+   * That a point is not among them does not prove it stable; the branches of a text that seeks say so.
+   */
+  readonly unstable?: readonly PointRange[];
   /** All operating points, where the text asks for several. */
   readonly branches?: readonly BranchesDocument[];
 }
@@ -132,4 +138,6 @@ export interface ShardResult {
   readonly bound: Float64Array;
   readonly rung: Float64Array;
   readonly failures: readonly Failure[];
+  /** Those of its points that the circuit would leave. */
+  readonly unstable: readonly PointRange[];
 }

@@ -6,6 +6,7 @@ import type { BranchesDocument } from "./branches-document";
 import type { Job } from "./compile";
 import { drawOf, placeOnAxes } from "./plan";
 import { Course, reach, reduce } from "./reductions";
+import type { PointRange } from "./strands";
 
 /** What a contract is judged by. */
 export type Contract = Pick<Job, "design" | "plan">;
@@ -15,6 +16,8 @@ export interface Columns {
   readonly traces: readonly Float64Array[];
   /** Where the text seeks several operating points: the branches, one document a row, null where a row is not in yet. */
   readonly branches?: readonly (BranchesDocument | null)[] | null;
+  /** Flat points that are solved and not stable. */
+  readonly unstable?: readonly PointRange[];
 }
 
 /** A reading over a whole run: one value a row, or one a point where it is a trace itself. NaN where it is not known. */

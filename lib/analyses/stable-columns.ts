@@ -1,6 +1,8 @@
 import type { BranchDocument, BranchesDocument } from "./branches-document";
 import { type Plan, rowLength } from "./plan";
 import type { Columns } from "./rows";
+import type { PointRange } from "./strands";
+import { withPoint } from "./unstable";
 
 /** The columns of other stable operating points than those that a sweep follows, and which branch each row takes (null: none of its own). */
 export interface OtherColumns extends Columns {
@@ -12,7 +14,7 @@ export interface StableColumns {
   /** What the sweep follows, with a stable operating point wherever that is not one and one is known. */
   readonly followed: Columns;
   /** Flat nominal points at which the sweep follows an operating point that is not stable. */
-  readonly unstable: readonly number[];
+  readonly unstable: readonly PointRange[];
   /** Nominal: each stable branch that the sweep leaves aside, as far as it reaches, and what is followed elsewhere. */
   readonly others: readonly OtherColumns[];
 }
@@ -25,7 +27,7 @@ export function stableColumns(
 ): StableColumns {
   const length = rowLength(plan);
   const followed = traces.map((trace) => trace.slice());
-  const unstable: number[] = [];
+  const unstable: PointRange[] = [];
   const aside: { row: number; branch: number; of: BranchDocument }[] = [];
   for (const [row, found] of branches.entries()) {
     const left = new Set<number>();
@@ -36,7 +38,7 @@ export function stableColumns(
       if (on === null) continue;
       const stable = here.filter(({ of }) => of.stable[place] === true);
       const rest = stable.includes(on) ? on : stable[0];
-      if (rest !== on) unstable.push(point);
+      if (rest !== on) withPoint(unstable, point);
       if (rest !== on && rest !== undefined) put(followed, point, rest.of, place);
       for (const one of stable) if (one !== rest) left.add(one.branch);
     }

@@ -3,6 +3,8 @@ import { evaluate, type Scope } from "@/lib/language/evaluate";
 import { OUTCOMES, type Outcome, RUNGS } from "@/lib/solver/outcome";
 import type { Job } from "./compile";
 import type { Failure, ShardResult } from "./result";
+import type { PointRange } from "./strands";
+import { withPoint } from "./unstable";
 import { scopeOf, stops } from "./walk";
 
 /** Points between two calls of `watch`. */
@@ -50,7 +52,7 @@ export function* solvePoints(
 }
 
 /** A shard as it fills. */
-type Filling = ShardResult & { readonly failures: Failure[] };
+type Filling = ShardResult & { readonly failures: Failure[]; readonly unstable: PointRange[] };
 
 function emptyShard({ plan }: Job, from: number, to: number): Filling {
   const column = () => new Float64Array(to - from).fill(Number.NaN);
@@ -65,6 +67,7 @@ function emptyShard({ plan }: Job, from: number, to: number): Filling {
     bound: column(),
     rung: column(),
     failures: [],
+    unstable: [],
   };
 }
 
@@ -85,6 +88,7 @@ function keep(
     into.failures.push({ point, outcome: outcome.kind, unsettled: outcome.unsettled });
     return;
   }
+  if (outcome.isUnstable) withPoint(into.unstable, point);
   into.bound[k] = outcome.bound;
   for (let j = 0; j < into.unknowns.length; j++) into.unknowns[j]![k] = state.x[j]!;
   for (let j = 0; j < into.traces.length; j++) into.traces[j]![k] = evaluate(design.shows[j]!.value, scope);

@@ -15,5 +15,6 @@ export function gather(plan: Plan, results: readonly ShardResult[]) {
     rung: column(({ rung }) => rung),
     bound: column(({ bound }) => bound),
     failures: results.flatMap(({ failures }) => failures),
+    unstable: results.flatMap(({ unstable }) => unstable),
   };
 }

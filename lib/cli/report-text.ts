@@ -28,6 +28,7 @@ export function reportText(
     paint("strong", title),
     `${paint(INK[document.verdict], document.verdict)}: ${account(document)}`,
     ...failures(document),
+    ...unstable(document),
     ...section(paint, axes(document)),
     ...section(paint, traces(document, curve)),
     ...section(paint, readings(document)),
@@ -54,6 +55,14 @@ function account({ points }: RunDocument): string {
       ? "none proved"
       : `${bounds.length === solved ? "all" : bounds.length} proved, within ${formatQuantity(Math.max(...bounds), "V", 2)} at most`;
   return `${share}, ${each.toFixed(1)} iterations a point, ${proof}`;
+}
+
+/** A sentence where the circuit would leave points that are solved. */
+function unstable({ unstable: ranges = [], branches }: RunDocument): string[] {
+  const count = ranges.reduce((sum, { from, to }) => sum + to - from, 0);
+  if (count === 0) return [];
+  const seek = branches === undefined ? "; `seek 3` looks for others" : "";
+  return [`  not stable at ${count} of the points: the circuit would leave them${seek}`];
 }
 
 function failures({ failures: failed, axes: swept }: RunDocument): string[] {

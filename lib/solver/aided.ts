@@ -1,6 +1,6 @@
 import type { System } from "@/lib/circuit/system";
 import type { SparseShape } from "./elimination";
-import { type Linear, LinearSolver } from "./linear";
+import { type Factors, type Linear, LinearSolver } from "./linear";
 import type { Bench } from "./newton";
 
 /**
@@ -59,6 +59,16 @@ export class Aided implements Linear {
 
   solveTransposed(right: Float64Array, solution: Float64Array): void {
     this.linear.solveTransposed(right, solution);
+  }
+
+  /** The factors of the last matrix that was solved, with the aid as it was then. */
+  get atHand(): Factors | null {
+    return this.linear.atHand;
+  }
+
+  /** Goes back to the pivots of the cold start. */
+  reset(): void {
+    this.linear.reset();
   }
 
   /** The aid's current at each net. */

@@ -18,7 +18,7 @@ export interface SparseShape {
  * row; then, for each row below, the place of its multiplier and the places it changes. `rowOf` and `columnOf` give the row and
  * column of each step's pivot; `rowPlaces`, `rowColumns` with `rowStarts` give the pivot rows, `belowPlaces`, `belowRows`
  * with `belowStarts` the multipliers, for the two substitutions. `anchors`: of each row, the place of its largest entry on the
- * sample. `changed`: the rows from which anything is subtracted. `operations` counts the multiplications of a factorisation and a solution.
+ * sample. `parity`: 1 where an even number of exchanges brings the pivots to the diagonal, −1 where an odd one does. `changed`: the rows from which anything is subtracted. `operations` counts the multiplications of a factorisation and a solution.
  */
 export interface Elimination {
   readonly places: number;
@@ -33,6 +33,7 @@ export interface Elimination {
   readonly belowPlaces: Int32Array;
   readonly belowRows: Int32Array;
   readonly anchors: Int32Array;
+  readonly parity: 1 | -1;
   readonly changed: Int32Array;
   /** Of each place, +1 or −1 where the elimination leaves it at that whatever the values are, or 0. */
   readonly constants: Int8Array;
@@ -86,10 +87,26 @@ export function eliminate(shape: SparseShape, sample: Float64Array): Elimination
     belowPlaces: Int32Array.from(steps.flatMap(({ below }) => below.map(([, entry]) => entry.place))),
     belowRows: Int32Array.from(steps.flatMap(({ below }) => below.map(([row]) => row))),
     anchors: anchorsOf(shape, sample),
+    parity: parityOf(steps),
     changed: changedBy(steps),
     constants: constantsOf(shape, sample, Int32Array.from(factor), matrix.places),
     operations,
   };
+}
+
+/** −1 to the count of even cycles of the permutation that takes the column of each pivot to its row. */
+function parityOf(steps: readonly Step[]): 1 | -1 {
+  const rowOf = new Int32Array(steps.length);
+  for (const { row, column } of steps) rowOf[column] = row;
+  const seen = new Uint8Array(steps.length);
+  let parity: 1 | -1 = 1;
+  for (let start = 0; start < steps.length; start++) {
+    for (let at = start, length = 0; seen[at] === 0; at = rowOf[at]!, length++) {
+      seen[at] = 1;
+      if (length > 0) parity = parity === 1 ? -1 : 1;
+    }
+  }
+  return parity;
 }
 
 function changedBy(steps: readonly Step[]): Int32Array {

@@ -6,6 +6,7 @@ import { damped } from "./damped";
 import { freeUnknowns } from "./dense";
 import type { SparseShape } from "./elimination";
 import { homotopy } from "./homotopy";
+import { IndexWatch } from "./index-watch";
 import { lineSearch } from "./line-search";
 import { LinearSolver } from "./linear";
 import { type Attempt, type Bench, newton } from "./newton";
@@ -36,6 +37,7 @@ export class Ladder {
   private readonly shape: SparseShape;
   private readonly certificate: Certificate;
   private readonly reported: Rung | undefined;
+  private readonly watch: IndexWatch | null;
   /** Points that failed since one was solved. */
   private failures = 0;
   /** Where Newton's method gave up from a cold start: most of a circuit may stand right there, and only a part go to and fro. */
@@ -44,8 +46,8 @@ export class Ladder {
   private diagnoses = MOST_DIAGNOSES;
 
   /**
-   * The pivots are chosen on a cold start at the point to which `system` is turned. Without `isProving` no bound is sought. Some rungs
-   * may be left out.
+   * The pivots are chosen on a cold start at the point to which `system` is turned. Without `isProving` no bound is sought, nor the
+   * index. Some rungs may be left out.
    */
   constructor(
     private readonly system: System,
@@ -71,12 +73,14 @@ export class Ladder {
     this.certificate = new Certificate(system, this.linear);
     this.reported = rungs.includes(REPORTED) ? REPORTED : rungs.at(-1);
     this.left = { x: new Float64Array(state.x.length), low: new Float64Array(state.x.length) };
+    this.watch = isProving ? new IndexWatch(system, this.linear) : null;
   }
 
   /** Forgets what was solved before, so that the next point does not depend on it. */
   reset(): void {
     this.linear.reset();
     this.certificate.reset();
+    this.watch?.reset();
     this.diagnoses = MOST_DIAGNOSES;
     this.failures = 0;
   }
@@ -96,7 +100,8 @@ export class Ladder {
       if (kind === "converged") {
         this.failures = 0;
         const bound = this.isProving ? this.certificate.prove() : Number.NaN;
-        return { kind, iterations, residual: largestResidual(circuit, state), bound, rung };
+        const isUnstable = this.watch?.isOdd() ?? false;
+        return { kind, iterations, residual: largestResidual(circuit, state), bound, rung, isUnstable };
       }
       if (rung !== this.reported) continue;
       const free = wasSingular && this.diagnoses-- > 0 ? freeUnknowns(this.shape, state.jacobian) : [];

@@ -23,6 +23,8 @@ export type Outcome =
       /** V within which a true solution is proved to lie of every reported voltage; NaN: not proved. */
       readonly bound: number;
       readonly rung: Rung;
+      /** An odd number of its modes grows, so that the circuit would leave the point. False does not prove that it stays. */
+      readonly isUnstable: boolean;
     }
   | {
       readonly kind: Exclude<OutcomeKind, "converged">;

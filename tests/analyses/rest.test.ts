@@ -1,10 +1,12 @@
 import { readFileSync } from "node:fs";
-import { describe, expect, test } from "vitest";
+import { describe, expect, test, vi } from "vitest";
 import { type BranchesDocument, branchesDocument, faultyRow } from "@/lib/analyses/branches-document";
 import { compile, type Job } from "@/lib/analyses/compile";
 import { type Judgement, judge } from "@/lib/analyses/judge";
 import { solveRange } from "@/lib/analyses/sweep";
 import { SEVERAL, textOf } from "../outside/several-solutions";
+
+vi.setConfig({ testTimeout: 60_000 });
 
 function jobOf(text: string): Job {
   const { job, diagnostics } = compile(text);

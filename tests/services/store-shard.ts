@@ -37,6 +37,7 @@ export async function storeShard(runId: string, index: number, plan: Plan, faile
     bound: solved(made.bound),
     rung: each(() => RUNGS.indexOf("newton")),
     failures,
+    unstable: [],
   };
   const answer = await completeShard(claimed.claim, storedForm(result));
   if (answer !== "stored") throw new Error(`Shard ${index} was ${answer}.`);

@@ -1,4 +1,4 @@
-import { describe, expect, test } from "vitest";
+import { describe, expect, test, vi } from "vitest";
 import { compile } from "@/lib/analyses/compile";
 import { System } from "@/lib/circuit/system";
 import { Aided } from "@/lib/solver/aided";
@@ -9,6 +9,8 @@ import { partner } from "@/lib/solver/partner";
 import { Seeker, seek } from "@/lib/solver/seek";
 import { tied } from "@/lib/solver/shunt-ramp";
 import { SEVERAL, textOf } from "../outside/several-solutions";
+
+vi.setConfig({ testTimeout: 60_000 });
 
 function systemOf(text: string): System {
   const { job, diagnostics } = compile(text);

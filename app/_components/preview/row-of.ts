@@ -16,7 +16,8 @@ interface Solved {
 /** A solved row with its contract judged, ready to be sent. What the contract says of other settings is named, not judged. */
 export function rowOf({ excerpt, result, stage, length, taken }: Solved): Row {
   const { design, plan, from } = excerpt;
-  const { readings, requirements } = judge({ design, plan }, result);
+  const unstable = result.unstable.map((one) => ({ from: one.from - from, to: one.to - from }));
+  const { readings, requirements } = judge({ design, plan }, { traces: result.traces, unstable });
   const elsewhere = elsewhereIn(excerpt);
   const { traces, outcome, rung, iterations, bound } = result;
   const swept = plan.axes.find(({ knob }, axis) => axis > 0 && knob === TEMPERATURE)?.values[0];

@@ -46,6 +46,7 @@ function result({ from, to }: Claim, add = 0): StoredShard {
     bound: column(),
     rung: column(),
     failures: [{ point: from, outcome: "iteration limit", unsettled: ["s"] }],
+    unstable: [],
   };
   return storedForm(invented);
 }
