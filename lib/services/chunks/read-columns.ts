@@ -5,8 +5,8 @@ import { shard } from "@/db/schema/shard";
 import { CHUNK_POINTS, decode } from "./codec";
 import { valueAt } from "./value-at";
 
-/** Columns of so many values are read one by one. */
-const LONG = 50_000;
+/** So many values are read by one question; a column that is longer by itself. */
+const AT_ONCE = 1_000_000;
 
 /**
  * The stored columns of a run, each of `points` values, NaN where a point is unsolved or its shard is not in yet. `names` picks
@@ -30,12 +30,15 @@ export async function readColumns(
     }
   };
   if (names === undefined) await read(database());
-  else if (points < LONG) await read(database(), inArray(chunk.column, [...names]));
+  else if (points * names.length <= AT_ONCE) await read(database(), inArray(chunk.column, [...names]));
   else {
-    // One after the other, so that they lie in memory once and nobody else waits long; of one moment, as a single question is.
+    // A few after the other, so that they lie in memory once and nobody else waits long; of one moment, as a single question is.
+    const few = Math.max(1, Math.floor(AT_ONCE / points));
     const moment = { isolationLevel: "repeatable read", accessMode: "read only" } as const;
     await database().transaction(async (tx) => {
-      for (const name of names) await read(tx, eq(chunk.column, name));
+      for (let i = 0; i < names.length; i += few) {
+        await read(tx, inArray(chunk.column, names.slice(i, i + few)));
+      }
     }, moment);
   }
   return columns;

@@ -43,7 +43,9 @@ export interface FoundDocument extends Found {
  * "too many" while other large ones are being read.
  */
 export async function getRunDocument(actor: Actor, id: string): Promise<FoundDocument> {
-  return found(actor, id, (matter) => ({ document: toDocument(matter) }));
+  return found(actor, id, [...POINT_COLUMNS, "iterations", "rung"], (matter) => ({
+    document: toDocument(matter),
+  }));
 }
 
 /** The same in its binary form, of the same version and limits: pieces of bytes, to be sent one after another. */
@@ -51,10 +53,18 @@ export async function getRunColumns(
   actor: Actor,
   id: string,
 ): Promise<Found & { readonly pieces: readonly Uint8Array[] }> {
-  return found(actor, id, (matter) => ({ pieces: encodeColumns(matter) }));
+  return found(actor, id, POINT_COLUMNS, (matter) => ({ pieces: encodeColumns(matter) }));
 }
 
-async function found<T>(actor: Actor, id: string, of: (matter: RunMatter) => T): Promise<Found & T> {
+/** What every form has of a point, beside the traces. */
+const POINT_COLUMNS = ["outcome", "bound"] as const;
+
+async function found<T>(
+  actor: Actor,
+  id: string,
+  names: readonly string[],
+  of: (matter: RunMatter) => T,
+): Promise<Found & T> {
   const db = database();
   const asked = await findRun(db, actor, id);
   authorize(actor, "run.read", asked);
@@ -67,7 +77,7 @@ async function found<T>(actor: Actor, id: string, of: (matter: RunMatter) => T):
   const numbers = asked.points * (plan.traces.length + 4);
   const release = roomFor(actor.userId, numbers);
   try {
-    const matter = await matterOf(asked, plan, text);
+    const matter = await matterOf(asked, plan, text, names);
     return { ...of(matter), etag: versionOf(asked), large: numbers >= LARGE, release };
   } catch (error) {
     release();
@@ -75,18 +85,26 @@ async function found<T>(actor: Actor, id: string, of: (matter: RunMatter) => T):
   }
 }
 
-async function matterOf(asked: RunRecord, plan: Plan, text: string): Promise<RunMatter> {
+/** `names` are the columns wanted beside the traces; others are left without a value. */
+async function matterOf(
+  asked: RunRecord,
+  plan: Plan,
+  text: string,
+  names: readonly string[],
+): Promise<RunMatter> {
   const traces = plan.traces.map((_, i) => traceColumn(i));
-  const [columns, shards] = await Promise.all([
-    readColumns(asked.id, asked.points, [...traces, "outcome", "iterations", "rung", "bound"]),
+  const reading = Promise.all([
+    readColumns(asked.id, asked.points, [...traces, ...names]),
     database()
       .select({ failures: shard.failures })
       .from(shard)
       .where(eq(shard.runId, asked.id))
       .orderBy(asc(shard.index)),
   ]);
-  const column = (name: string) => columns.get(name) ?? new Float64Array(asked.points).fill(Number.NaN);
+  // While the database looks for them.
   const { job, diagnostics } = compile(text);
+  const [columns, shards] = await reading;
+  const column = (name: string) => columns.get(name) ?? new Float64Array(asked.points).fill(Number.NaN);
   return {
     design: job?.design ?? null,
     plan: { ...plan, title: asked.title },
