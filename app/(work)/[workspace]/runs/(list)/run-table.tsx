@@ -17,17 +17,25 @@ export function RunTable({
   workspace,
   rows,
   stale,
+  chosen,
+  onChosen,
 }: {
   readonly workspace: string;
   readonly rows: readonly RunRow[];
   /** The rows are of an earlier state while the new ones are fetched. */
   readonly stale: boolean;
+  /** Ids of the runs chosen to be compared, in the order of choosing. */
+  readonly chosen: readonly string[];
+  readonly onChosen: (chosen: readonly string[]) => void;
 }) {
   return (
     <Table aria-busy={stale} className={classNames("table-fixed md:table-auto", stale && "opacity-60")}>
       <caption className="sr-only">Runs, the newest first</caption>
       <thead>
         <tr>
+          <HeadCell className="w-8">
+            <span className="sr-only">Compare</span>
+          </HeadCell>
           <HeadCell figure className={WIDE}>
             Run
           </HeadCell>
@@ -46,6 +54,19 @@ export function RunTable({
       <tbody>
         {rows.map((row) => (
           <tr key={row.id}>
+            <Cell className="py-1!">
+              <label className="flex size-7 items-center justify-center">
+                <input
+                  type="checkbox"
+                  aria-label={`Compare run ${row.number}`}
+                  checked={chosen.includes(row.id)}
+                  onChange={({ target }) =>
+                    onChosen(target.checked ? [...chosen, row.id] : chosen.filter((id) => id !== row.id))
+                  }
+                  className="size-3.5 accent-accent"
+                />
+              </label>
+            </Cell>
             <Cell figure className={classNames(WIDE, "w-12 text-quiet")}>
               {row.number}
             </Cell>

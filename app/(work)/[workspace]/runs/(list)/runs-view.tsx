@@ -1,13 +1,15 @@
 "use client";
 
 import { useSearchParams } from "next/navigation";
+import { useState } from "react";
 import { Button, ButtonLink } from "@/app/_components/ui/button";
-import { formatCount } from "@/app/_components/ui/count";
+import { counted, formatCount } from "@/app/_components/ui/count";
 import { SelectField } from "@/app/_components/ui/field";
 import { PageHeader } from "@/app/_components/ui/page-header";
 import { Pager } from "@/app/_components/ui/pager";
 import { SearchBox } from "@/app/_components/ui/search-box";
 import { EmptyState, FailedState } from "@/app/_components/ui/states";
+import { MOST } from "../compare/compare-shapes";
 import { type ListState, PAGE_SIZE, readListState, STATUSES, writeListState } from "./list-state";
 import { RunTable } from "./run-table";
 import { type Found, useRuns } from "./use-runs";
@@ -26,6 +28,7 @@ export function RunsView({
     const next = { ...state, page: 1, ...change };
     window.history.replaceState(null, "", writeListState(next) || window.location.pathname);
   };
+  const [chosen, setChosen] = useState<readonly string[]>([]);
   const total = data?.total ?? 0;
   const narrowed = state.query !== "" || state.status !== null;
   const remark = `${formatCount(total)} ${narrowed ? "found" : "in this workspace"}`;
@@ -49,6 +52,7 @@ export function RunsView({
             ))}
           </SelectField>
         </div>
+        {chosen.length > 0 && <Chosen workspace={workspace} chosen={chosen} onClear={() => setChosen([])} />}
         {error !== null && (
           <FailedState
             title="The list could not be brought up to date"
@@ -58,7 +62,13 @@ export function RunsView({
           </FailedState>
         )}
         {data !== undefined && total > 0 && (
-          <RunTable workspace={workspace} rows={data.rows} stale={isPlaceholderData} />
+          <RunTable
+            workspace={workspace}
+            rows={data.rows}
+            stale={isPlaceholderData}
+            chosen={chosen}
+            onChosen={setChosen}
+          />
         )}
         {total > PAGE_SIZE && (
           <Pager page={state.page} size={PAGE_SIZE} total={total} onPage={(page) => show({ page })} />
@@ -87,5 +97,40 @@ export function RunsView({
         )}
       </div>
     </>
+  );
+}
+
+/** The runs chosen, kept over pages and searches, and the way to compare them. */
+function Chosen({
+  workspace,
+  chosen,
+  onClear,
+}: {
+  readonly workspace: string;
+  readonly chosen: readonly string[];
+  readonly onClear: () => void;
+}) {
+  const tooMany = chosen.length > MOST;
+  return (
+    <div
+      role="status"
+      className="sticky top-0 z-10 flex flex-wrap items-center gap-x-3 gap-y-2 border-y bg-paper py-2"
+    >
+      <span className="text-sm">
+        {counted(chosen.length, "run")} chosen{tooMany && `; ${MOST} are compared at once at most`}
+      </span>
+      {!tooMany && (
+        <ButtonLink
+          size="small"
+          href={`/${workspace}/runs/compare?runs=${chosen.join(",")}`}
+          prefetch={false}
+        >
+          {chosen.length === 1 ? "Compare with…" : "Compare"}
+        </ButtonLink>
+      )}
+      <Button size="small" tone="quiet" onClick={onClear}>
+        Choose none
+      </Button>
+    </div>
   );
 }

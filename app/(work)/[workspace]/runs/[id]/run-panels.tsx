@@ -1,4 +1,3 @@
-import type { CurveSource } from "@/app/_components/curves/curve-source";
 import type { BranchesDocument } from "@/lib/analyses/branches-document";
 import { drawOf } from "@/lib/analyses/plan";
 import type { Failure, ReadingDocument, RequirementDocument } from "@/lib/analyses/result";
@@ -34,7 +33,6 @@ export interface Found {
   readonly readings: readonly ReadingDocument[];
   readonly failures: readonly Failure[];
   readonly branches?: readonly BranchesDocument[];
-  readonly points: CurveSource["points"];
 }
 
 /** All that stands beside the curves: requirements, readings, the chosen point, operating points, failures, the run itself. */

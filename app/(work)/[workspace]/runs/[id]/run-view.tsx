@@ -12,7 +12,7 @@ import type { VoltageSpan } from "./cautions";
 import { OperatingPoint } from "./operating-point";
 import { type PageState, readPageState, writePageState } from "./page-state";
 import { RunHeader } from "./run-header";
-import { onPlot, RunPanels } from "./run-panels";
+import { onPlot, type Found as RunFound, RunPanels } from "./run-panels";
 import { isLive, type PointAccount, type RunContext, type RunState } from "./run-shapes";
 import { RunStatusLine } from "./run-status-line";
 import { SpreadView } from "./spread/spread-view";
@@ -168,7 +168,7 @@ export function RunView(props: Props) {
         <RunPanels
           workspace={workspace}
           run={run}
-          found={document}
+          found={document ?? judgedAlready(first)}
           links={links}
           span={span}
           chosen={chosen}
@@ -179,6 +179,12 @@ export function RunView(props: Props) {
       </div>
     </>
   );
+}
+
+/** What was kept of a finished run's judgement, to be shown while its document is on the way; null where it lacks anything shown. */
+function judgedAlready({ judgement }: RunState): RunFound | null {
+  if (judgement === null || judgement.requirements.some(({ drawn }) => drawn === undefined)) return null;
+  return { requirements: judgement.requirements, readings: judgement.readings, failures: [] };
 }
 
 /** The draws as one more axis, for the table that lists every point. The curves are those of draw 0, the nominal design. */

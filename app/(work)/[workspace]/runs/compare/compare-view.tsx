@@ -1,0 +1,86 @@
+"use client";
+
+import { useRouter } from "next/navigation";
+import { useEffect, useState } from "react";
+import { counted } from "@/app/_components/ui/count";
+import { Notice } from "@/app/_components/ui/notice";
+import { PageHeader } from "@/app/_components/ui/page-header";
+import { EmptyState } from "@/app/_components/ui/states";
+import { ChosenRuns } from "./chosen-runs";
+import { type ComparedRun, MOST } from "./compare-shapes";
+import { readCompareState, writeCompareState } from "./compare-state";
+import { ComparedCurves } from "./compared-curves";
+import { ComparedReadings } from "./compared-readings";
+import { ComparedRequirements } from "./compared-requirements";
+import { RunPicker } from "./run-picker";
+import { TextDifferences } from "./text-differences";
+
+interface Props {
+  readonly workspace: string;
+  readonly runs: readonly ComparedRun[];
+  /** Runs that the address names and that there are not. */
+  readonly lost: number;
+  /** The search part of the address, without the runs. */
+  readonly search: string;
+}
+
+/** Runs side by side: curves laid over each other or subtracted, readings, requirements, and what their texts say differently. */
+export function CompareView({ workspace, runs, lost, search }: Props) {
+  const router = useRouter();
+  const [state, setState] = useState(() => readCompareState(new URLSearchParams(search)));
+  const ids = runs.map(({ run }) => run.id);
+  const address = writeCompareState(ids, state);
+  useEffect(() => {
+    if (address !== window.location.search)
+      window.history.replaceState(null, "", address || window.location.pathname);
+  }, [address]);
+  const choose = (next: readonly string[]) => {
+    // What was chosen of the curves before belongs to other settings now; how they are shown does not.
+    const kept = { ...state, families: null, point: null, origin: null, only: null };
+    router.replace(`/${workspace}/runs/compare${writeCompareState(next, kept)}`, { scroll: false });
+  };
+  return (
+    <>
+      <PageHeader
+        title="Compare runs"
+        remark={runs.length === 0 ? "None chosen" : counted(runs.length, "run")}
+      />
+      <div className="grid grow grid-cols-[minmax(0,1fr)] content-start gap-8 px-4 py-4 md:px-6">
+        {lost > 0 && (
+          <Notice tone="caution" title={`${counted(lost, "run")} of the address could not be found`}>
+            <p>It may have been removed, or belong to another workspace. The others are shown.</p>
+          </Notice>
+        )}
+        {runs.length > 0 && <ChosenRuns workspace={workspace} runs={runs} onRuns={choose} />}
+        {runs.length < MOST && (
+          <RunPicker
+            workspace={workspace}
+            chosen={ids}
+            netlistId={runs[0]?.run.netlistId ?? null}
+            open={runs.length < 2}
+            onAdd={(id) => choose([...ids, id])}
+          />
+        )}
+        {runs.length === 0 ? (
+          <EmptyState title="Choose the runs to compare">
+            <p>
+              Two or more, of one netlist or of several; or one alone, whose settings are then measured from
+              each other.
+            </p>
+          </EmptyState>
+        ) : (
+          <>
+            <ComparedCurves
+              runs={runs}
+              state={state}
+              onState={(change) => setState((before) => ({ ...before, ...change }))}
+            />
+            <ComparedRequirements runs={runs} />
+            <ComparedReadings runs={runs} />
+            <TextDifferences runs={runs} workspace={workspace} />
+          </>
+        )}
+      </div>
+    </>
+  );
+}
