@@ -1,196 +1,108 @@
-import { expm1, exponentials } from "@/lib/devices/exponential";
-import { compiled, type Warmth } from "./compiled";
-import type { State } from "./state";
-
-/** Statements and entries of generated code at most: each takes up to 40 bytes of the 60 kB beyond which V8 no longer optimises. */
-const MOST_STATEMENTS = 1500;
-
-/** One term of a sum that ends up in an array; without operator, the whole of it. */
-interface Sum {
-  readonly array: "r" | "s" | "j";
-  readonly index: number;
-  readonly operator: "+" | "-" | "";
-  readonly by: string;
-}
-
-/** An assembly as generated code. */
-export interface WrittenAssembly {
-  readonly run: () => void;
-  readonly warmth: Warmth;
-}
-
-type Maker = (
-  state: State,
-  constantSlopes: Float64Array,
-  objects: readonly object[],
-  exponents: Float64Array,
-  less: Float64Array,
-  whole: Float64Array,
-  together: typeof exponentials,
-  one: typeof expm1,
-) => () => void;
+import type { StraightCode } from "./code/straight";
+import type { Frame } from "./frame";
+import type { Table } from "./table";
 
 /**
- * The assembly of a system as straight code: every sum in a variable of its own, every place a number. Parts write themselves
- * into it, with the same operations in the same order as their `addTo`. Names in it are those of the program (no build may rename
- * properties); of the user's there is nothing, not even a number: figures are read from the parts.
+ * The assembly of a system, all junctions linearised at their actual voltages, as straight code over its frame. Parts write themselves into
+ * it, first what they ask of the exponentials, then the rest, with the same operations in the same order as the loops over their tables.
+ * Of the user's there is nothing in it, not even a number: figures are read from the frame, whose places have the letter z.
  */
 export class AssemblyCode {
-  private readonly lines: (string | Sum)[] = [];
-  private readonly objects: object[] = [];
-  private readonly voltages = new Set<number>();
-  private readonly early: string[] = [];
-  private exponents = 0;
-  private locals = 0;
+  private readonly begun = new Set<string>();
 
-  /** `ground` is the number of ground, one past the last unknown. */
-  constructor(private readonly ground: number) {}
+  constructor(
+    readonly code: StraightCode,
+    private readonly frame: Frame,
+  ) {}
 
-  /** The name of an object whose figures the code reads. */
-  object(object: object): string {
-    return `o${this.objects.push(object) - 1}`;
+  /** A figure of a row of a table. */
+  figure({ start, figuresEach }: Table, row: number, column: number): string {
+    return `z${start + row * figuresEach + column}`;
   }
 
-  add(statement: string): void {
-    if (!this.isFull) this.lines.push(statement);
+  /** Asks for the exponentials of an expression as number k. */
+  ask(k: number, expression: string): void {
+    this.code.set(`z${this.frame.starts.exponents + k}`, expression);
   }
 
-  /** A variable with the value of an expression. */
+  /** e^y − 1 and e^y of exponent k. */
+  exponentials(k: number): { less: string; whole: string } {
+    const { less, whole } = this.frame.starts;
+    return { less: `z${less + k}`, whole: `z${whole + k}` };
+  }
+
+  /** The exponent of the first transistor; that of diode k is k. */
+  get firstTransistor(): number {
+    return this.frame.tables.diodes.count;
+  }
+
   let(expression: string): string {
-    const name = `t${this.locals++}`;
-    this.add(`let ${name}=${expression};`);
-    return name;
+    return this.code.let(expression);
   }
 
-  /** A variable as of `let`, known before all exponentials are worked out. */
-  first(expression: string): string {
-    const name = `t${this.locals++}`;
-    if (!this.isFull) this.early.push(`const ${name}=${expression};`);
-    return name;
-  }
-
-  /**
-   * Variables with e^y − 1 and e^y, in the same bytes as `expm1` and, below −1, `exp`; above −1 the second is the first plus 1. All
-   * exponentials of a system are worked out together, so that y may hold nothing but what `first` gives.
-   */
-  exponentials(y: string): { less: string; whole: string } {
-    const k = this.exponents++;
-    if (!this.isFull) this.early.push(`Y[${k}]=${y};`);
-    return { less: this.let(`E[${k}]`), whole: this.let(`T[${k}]`) };
-  }
-
-  private get isFull(): boolean {
-    return this.lines.length > MOST_STATEMENTS;
+  set(name: string, expression: string): void {
+    this.code.set(name, expression);
   }
 
   /** As `across` of a state. */
   across(a: number, b: number): string {
-    const x = (i: number) => (i === this.ground ? "0" : `x${this.known(i)}`);
-    const low = (i: number) => (i === this.ground ? "0" : `l${this.known(i)}`);
-    return `(${x(a)}-${x(b)}+(${low(a)}-${low(b)}))`;
+    const { x, low } = this.frame.starts;
+    const { size } = this.frame;
+    if (b === size) return `(z${x + a}+z${low + a})`;
+    if (a === size) return `(0-z${x + b}+(0-z${low + b}))`;
+    return `(z${x + a}-z${x + b}+(z${low + a}-z${low + b}))`;
   }
 
   /** The two parts of an unknown, for a branch current. */
   unknown(i: number): string {
-    return `(x${this.known(i)}+l${i})`;
+    return `(${this.high(i)}+z${this.frame.starts.low + i})`;
   }
 
   high(i: number): string {
-    return i === this.ground ? "0" : `x${this.known(i)}`;
+    return i === this.frame.size ? "0" : `z${this.frame.starts.x + i}`;
   }
 
-  private known(i: number): number {
-    if (!this.voltages.has(i)) this.add(`const x${i}=x[${i}],l${i}=l[${i}];`);
-    this.voltages.add(i);
-    return i;
-  }
-
-  /** As `flow` of a state; `amperes` is the name of a variable. */
+  /** As `flow` of a state; `amperes` is a variable. */
   flow(a: number, b: number, amperes: string): void {
-    const size = this.let(`Math.abs(${amperes})`);
-    this.sum("r", a, "+", amperes);
-    this.sum("s", a, "+", size);
-    this.sum("r", b, "-", amperes);
-    this.sum("s", b, "+", size);
+    const size = this.let(`abs(${amperes})`);
+    this.leave(a, "+", amperes, size);
+    this.leave(b, "-", amperes, size);
   }
 
-  /** Adds to the scale of a row. */
-  widen(row: number, by: string): void {
-    this.sum("s", row, "+", by);
+  /** A current out of a net alone, with its magnitude or more. */
+  leave(net: number, operator: "+" | "-", amperes: string, size: string): void {
+    const { residual, scale } = this.frame.starts;
+    if (net === this.frame.size) return;
+    this.sum(`z${residual + net}`, "0", operator, amperes);
+    this.sum(`z${scale + net}`, "", "+", size);
   }
 
   /** The mismatch of a branch law, and the magnitudes that it sums. */
   law(row: number, mismatch: string, size: string): void {
-    this.sum("r", row, "", mismatch);
-    this.sum("s", row, "", size);
+    const { residual, scale } = this.frame.starts;
+    this.begun.add(`z${residual + row}`).add(`z${scale + row}`);
+    this.code.set(`z${residual + row}`, mismatch);
+    this.code.set(`z${scale + row}`, size);
   }
 
   /** Adds to the Jacobian. */
   slope(place: number, operator: "+" | "-", expression: string): void {
-    if (place !== 0) this.sum("j", place, operator, expression);
+    const { jacobian, constantSlopes } = this.frame.starts;
+    if (place !== 0) this.sum(`z${jacobian + place}`, `z${constantSlopes + place}`, operator, expression);
   }
 
-  private sum(array: Sum["array"], index: number, operator: Sum["operator"], by: string): void {
-    if (array !== "j" && index === this.ground) return;
-    if (!this.isFull) this.lines.push({ array, index, operator, by });
+  private sum(name: string, beginning: string, operator: "+" | "-", by: string): void {
+    const before = this.begun.has(name) ? name : beginning;
+    this.begun.add(name);
+    this.code.set(name, before === "" ? by : `${before}${operator}${by}`);
   }
 
-  /**
-   * The code as a function over a state whose Jacobian holds the constant slopes wherever none but them is added; null where it
-   * is too long, or none may be generated here.
-   */
-  compile(state: State, constantSlopes: Float64Array): WrittenAssembly | null {
-    if (this.lines.length + constantSlopes.length > MOST_STATEMENTS) return null;
-    const text = [
-      "const {x,low:l,residual:r,scale:s,jacobian:j}=state;",
-      ...this.objects.map((_, k) => `const o${k}=objects[${k}];`),
-      "return function assemble(){",
-      "const share=state.share;",
-      ...this.early,
-      this.exponents === 0 ? "" : `exponentials(Y,E,T,${this.exponents});`,
-      ...this.written(),
-      "};",
-    ].join("\n");
-    const found = compiled<Maker>("state,c,objects,Y,E,T,exponentials,expm1", text);
-    if (found === null) return null;
-    const array = () => new Float64Array(this.exponents);
-    const run = found.made(
-      state,
-      constantSlopes,
-      this.objects,
-      array(),
-      array(),
-      array(),
-      exponentials,
-      expm1,
-    );
-    return { run, warmth: found.warmth };
-  }
-
-  /** The lines with each sum in a variable from its first to its last term, so that few are alive at a time. */
-  private written(): string[] {
-    const remaining = new Map<string, number>();
-    const nameOf = ({ array, index }: Pick<Sum, "array" | "index">) => `${array}${index}`;
-    for (const line of this.lines) {
-      if (typeof line !== "string") remaining.set(nameOf(line), (remaining.get(nameOf(line)) ?? 0) + 1);
+  /** Rows to which no part adds anything are 0. */
+  end(): void {
+    const { residual, scale } = this.frame.starts;
+    for (let i = 0; i < this.frame.size; i++) {
+      for (const name of [`z${residual + i}`, `z${scale + i}`])
+        if (!this.begun.has(name)) this.code.set(name, "0");
     }
-    const begun = new Set<string>();
-    const lines = this.lines.map((line) => {
-      if (typeof line === "string") return line;
-      const { array, index, operator, by } = line;
-      const name = nameOf(line);
-      const before = begun.has(name) ? name : array === "j" ? `c[${index}]` : "0";
-      const value = operator === "" ? by : `${before}${operator}(${by})`;
-      const left = remaining.get(name)! - 1;
-      remaining.set(name, left);
-      if (left === 0) return `${array}[${index}]=${value};`;
-      if (begun.has(name)) return `${name}=${value};`;
-      begun.add(name);
-      return `let ${name}=${value};`;
-    });
-    for (let i = 0; i < this.ground; i++) {
-      for (const array of ["r", "s"]) if (!remaining.has(`${array}${i}`)) lines.push(`${array}[${i}]=0;`);
-    }
-    return lines;
   }
 }

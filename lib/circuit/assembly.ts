@@ -1,93 +1,112 @@
 import { exponentials } from "@/lib/devices/exponential";
-import { AssemblyCode, type WrittenAssembly } from "./assembly-code";
+import { AssemblyCode } from "./assembly-code";
+import { type Compiled, EXPONENTIALS } from "./code/machine";
+import type { StraightCode } from "./code/straight";
+import type { Frame } from "./frame";
 import type { Part } from "./part";
-import { CurrentPart } from "./parts/current";
-import { DiodePart } from "./parts/diode";
-import { OpampPart } from "./parts/opamp";
-import { ResistorPart } from "./parts/resistor";
-import { TransistorPart } from "./parts/transistor";
-import { VoltagePart } from "./parts/voltage";
-import type { State } from "./state";
+import { addCurrents } from "./parts/current";
+import { addDiodes, askDiodes, settleDiodes } from "./parts/diode-table";
+import { addGains } from "./parts/gain";
+import { addOpamps } from "./parts/opamp";
+import { addResistors } from "./parts/resistor";
+import { addTerminals } from "./parts/terminal";
+import { addTransistors, askTransistors, riseTransistors, settleTransistors } from "./parts/transistor-table";
+import { addVoltages } from "./parts/voltage";
 
-/** Assemblies before code is generated: a short sweep does not repay it. */
-const FIRST_LISTED = 2000;
+/** Statements of generated code at most; beyond, loops over tables are as fast, and ready at once. */
+const MOST_STRAIGHT = 8000;
 
 /**
- * Adds the parts of a system up, kind by kind: first those that can be written as straight code, then the others. Each kind has a
- * loop of its own, which the compiler makes fit for it. After a while the first become generated code, with the same bytes.
+ * Adds the parts of a system up: first the plain ones by loops over the tables of their kinds, then the others, one by one. For
+ * assemblies at rest the loops may be replaced by generated code with the same bytes.
  */
 export class Assembly {
-  private readonly resistors: ResistorPart[] = [];
-  private readonly voltages: VoltagePart[] = [];
-  private readonly currents: CurrentPart[] = [];
-  private readonly opamps: OpampPart[] = [];
-  private readonly diodes: DiodePart[] = [];
-  private readonly transistors: TransistorPart[] = [];
   private readonly others: readonly Part[];
-  /** Of the diodes: v/η, and what `exponentials` makes of it. */
-  private readonly exponents: readonly [Float64Array, Float64Array, Float64Array];
-  private code: AssemblyCode | null;
-  private written: WrittenAssembly | null = null;
-  private count = 0;
+  private written: Compiled | null = null;
 
   constructor(
     parts: readonly Part[],
-    private readonly state: State,
-    private readonly constantSlopes: Float64Array,
+    private readonly frame: Frame,
   ) {
-    const kinds: readonly { is: new (...words: never[]) => Part; into: Part[] }[] = [
-      { is: ResistorPart, into: this.resistors },
-      { is: VoltagePart, into: this.voltages },
-      { is: CurrentPart, into: this.currents },
-      { is: OpampPart, into: this.opamps },
-      { is: DiodePart, into: this.diodes },
-      { is: TransistorPart, into: this.transistors },
-    ];
-    this.code = new AssemblyCode(state.x.length - 1);
-    const taken = new Set<Part>();
-    for (const { is, into } of kinds) {
-      for (const part of parts) {
-        if (part.constructor !== is || part.write?.(this.code) !== true) continue;
-        into.push(part);
-        taken.add(part);
-      }
-    }
-    const array = () => new Float64Array(this.diodes.length);
-    this.exponents = [array(), array(), array()];
-    this.others = parts.filter((part) => !taken.has(part));
+    this.others = parts.filter((part) => part.isPlain !== true);
+  }
+
+  /** Whether there are parts that are not plain, which generated code cannot add. */
+  get hasOthers(): boolean {
+    return this.others.length > 0;
   }
 
   /** Residual, scale and Jacobian at the present unknowns and linearisation. */
   run(): void {
-    const { state, others } = this;
-    if (this.written?.warmth.isUsed() !== true) this.add();
-    else {
-      if (others.length > 0) state.jacobian.set(this.constantSlopes);
-      this.written.run();
+    this.addTables(false);
+    this.addOthers();
+  }
+
+  /** Linearises every plain junction at its actual voltage, as all others are already, and then as `run`. */
+  runAtRest(): void {
+    const { state, tables, constantSlopes } = this.frame;
+    if (this.written === null) {
+      settleDiodes(tables.diodes, state);
+      settleTransistors(tables.transistors, state);
+      this.addTables(true);
+    } else {
+      if (this.hasOthers) state.jacobian.set(constantSlopes);
+      this.written(state.share);
     }
-    for (let k = 0; k < others.length; k++) others[k]!.addTo(state);
-    if (++this.count === FIRST_LISTED) this.compile();
+    this.addOthers();
   }
 
-  /** Generates the code, where it is not too long and may be generated. */
-  private compile(): void {
-    this.written = this.code!.compile(this.state, this.constantSlopes);
-    this.code = null;
+  /** From now on plain parts at rest are added by code that `write` wrote. */
+  use(written: Compiled): void {
+    this.written = written;
   }
 
-  private add(): void {
-    const { state, resistors, voltages, currents, opamps, diodes, transistors } = this;
+  private addOthers(): void {
+    const { others, frame } = this;
+    for (let k = 0; k < others.length; k++) others[k]!.addTo(frame.state);
+  }
+
+  /** The exponentials of plain junctions. */
+  private work(): void {
+    const { tables, exponents, less, whole } = this.frame;
+    const { diodes, transistors } = tables;
+    askDiodes(diodes, exponents);
+    askTransistors(transistors, exponents, diodes.count);
+    exponentials(exponents, less, whole, exponents.length);
+    riseTransistors(transistors, whole, diodes.count);
+  }
+
+  private addTables(isSettled: boolean): void {
+    const { state, tables, less, whole, constantSlopes } = this.frame;
+    this.work();
     state.residual.fill(0);
     state.scale.fill(0);
-    state.jacobian.set(this.constantSlopes);
-    for (let k = 0; k < resistors.length; k++) resistors[k]!.addTo(state);
-    for (let k = 0; k < voltages.length; k++) voltages[k]!.addTo(state);
-    for (let k = 0; k < currents.length; k++) currents[k]!.addTo(state);
-    for (let k = 0; k < opamps.length; k++) opamps[k]!.addTo(state);
-    const [ys, less, whole] = this.exponents;
-    for (let k = 0; k < diodes.length; k++) diodes[k]!.ask(ys, k);
-    exponentials(ys, less, whole, diodes.length);
-    for (let k = 0; k < diodes.length; k++) diodes[k]!.addGiven(state, less, whole, k);
-    for (let k = 0; k < transistors.length; k++) transistors[k]!.addTo(state);
+    state.jacobian.set(constantSlopes);
+    const { resistors, voltages, currents, opamps, gains, terminals, diodes, transistors } = tables;
+    addResistors(resistors, 0, resistors.count, state);
+    addVoltages(voltages, 0, voltages.count, state);
+    addCurrents(currents, 0, currents.count, state);
+    addOpamps(opamps, 0, opamps.count, state);
+    addGains(gains, 0, gains.count, state);
+    addTerminals(terminals, 0, terminals.count, state);
+    addDiodes(diodes, 0, diodes.count, state, less, whole, isSettled);
+    addTransistors(transistors, 0, transistors.count, state, less, whole, diodes.count, isSettled);
+  }
+
+  /** Writes what `runAtRest` does with plain parts as straight code; false where it is too long. */
+  write(code: StraightCode): boolean {
+    const { tables } = this.frame;
+    const { resistors, voltages, currents, opamps, gains, terminals, diodes, transistors } = tables;
+    const writer = new AssemblyCode(code, this.frame);
+    for (const { owners } of [diodes, transistors]) for (const part of owners) part.writeAsk(writer);
+    code.call(EXPONENTIALS);
+    for (const { owners } of [resistors, voltages, currents, opamps, gains, terminals, diodes, transistors]) {
+      for (const part of owners) {
+        part.write(writer);
+        if (code.length > MOST_STRAIGHT) return false;
+      }
+    }
+    writer.end();
+    return true;
   }
 }

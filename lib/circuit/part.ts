@@ -1,7 +1,7 @@
 import type { Element, Model, NamedValue } from "@/lib/language/ast";
 import { KINDS } from "@/lib/language/kinds";
-import type { AssemblyCode } from "./assembly-code";
 import type { Circuit } from "./circuit";
+import type { Tables } from "./frame";
 import type { Pattern } from "./pattern";
 import type { State } from "./state";
 import type { PointValues } from "./values";
@@ -17,8 +17,8 @@ export interface Part {
   addConstantSlopes(jacobian: Float64Array): void;
   /** Adds its currents or mismatch to the residual and, where they depend on the unknowns, its slopes. */
   addTo(state: State): void;
-  /** Writes `addTo` as straight code, the same to the bit; false, with nothing written, where it is not so simple. */
-  write?(code: AssemblyCode): boolean;
+  /** A loop over the table of its kind adds it, and not `addTo`. */
+  readonly isPlain?: boolean;
   /** The current into a pin, A, at the present unknowns. */
   current(pin: string, state: State): number;
   /**
@@ -74,6 +74,7 @@ export interface Bench {
   readonly circuit: Circuit;
   readonly pattern: Pattern;
   readonly values: PointValues;
+  readonly tables: Tables;
 }
 
 /** The number of the voltage at a pin: that of its net, or of the inner end of what lies between. */

@@ -3,16 +3,18 @@
  *
  * The unknowns are the unevaluated sums x + low (Dekker, Numer. Math. 18, 1971): a net at 10 V is known to 2e-15 V in one number,
  * which through 1 Ω is 2 fA, more than the acceptance test lets pass where picoamperes flow.
+ *
+ * The arrays may be others from point to point, so hold the state and not them.
  */
 export interface State {
-  readonly x: Float64Array;
-  readonly low: Float64Array;
+  x: Float64Array;
+  low: Float64Array;
   /** F: the sum of the currents leaving each net (A), the mismatch of each branch law (V). */
-  readonly residual: Float64Array;
+  residual: Float64Array;
   /** The sum of the magnitudes that `residual` sums. */
-  readonly scale: Float64Array;
+  scale: Float64Array;
   /** Values of the Jacobian, places as in the pattern; read only, but for the assembly. */
-  readonly jacobian: Float64Array;
+  jacobian: Float64Array;
   /** The part of every source that acts; 1 but while sources are ramped. */
   share: number;
 }

@@ -2,9 +2,11 @@ import type { Design, Element, Signal } from "@/lib/language/ast";
 import { KINDS } from "@/lib/language/kinds";
 import { Assembly } from "./assembly";
 import type { Circuit } from "./circuit";
+import { Frame, Tables } from "./frame";
 import type { Bench, JunctionPart, Part } from "./part";
 import { CurrentPart } from "./parts/current";
 import { DiodePart } from "./parts/diode";
+import { followDiodes, settleDiodes } from "./parts/diode-table";
 import { GainPart } from "./parts/gain";
 import { LawPart } from "./parts/law";
 import { LimitedOpampPart } from "./parts/limited-opamp";
@@ -12,9 +14,10 @@ import { OpampPart } from "./parts/opamp";
 import { ResistorPart } from "./parts/resistor";
 import { TerminalPart } from "./parts/terminal";
 import { TransistorPart } from "./parts/transistor";
+import { followTransistors, settleTransistors } from "./parts/transistor-table";
 import { VoltagePart } from "./parts/voltage";
 import { Pattern } from "./pattern";
-import { across, newState, type State } from "./state";
+import { across, type State } from "./state";
 import { type Draw, PointValues } from "./values";
 
 /**
@@ -30,8 +33,10 @@ export class System {
   private readonly byName: ReadonlyMap<string, Part>;
   /** The parts that follow each knob. */
   private readonly followers = new Map<string, Part[]>();
-  private readonly constantSlopes: Float64Array;
-  private readonly assembly: Assembly;
+  readonly frame: Frame;
+  readonly assembly: Assembly;
+  /** Junctions that no table settles and follows. */
+  private readonly furtherJunctions: readonly JunctionPart[];
 
   constructor(
     design: Design,
@@ -41,22 +46,23 @@ export class System {
     this.pattern = new Pattern(circuit.size);
     const models = new Map(design.models.map((model) => [model.name, model]));
     const { pattern, values } = this;
+    const tables = new Tables();
     const modelOf = ({ model }: Element) => (model === null ? null : models.get(model)!);
     const named = new Map(design.elements.map((element) => [element.name, element]));
     const elements = design.elements.map((element) =>
-      partOf(element, { element, model: modelOf(element), circuit, pattern, values }, named),
+      partOf(element, { element, model: modelOf(element), circuit, pattern, values, tables }, named),
     );
     const terminals = [...circuit.terminals.values()].map(
       (terminal) =>
-        new TerminalPart({ model: modelOf(terminal.element), circuit, pattern, values }, terminal),
+        new TerminalPart({ model: modelOf(terminal.element), circuit, pattern, values, tables }, terminal),
     );
     this.parts = [...elements, ...terminals];
     this.junctions = this.parts.filter(isJunction);
     this.byName = new Map(elements.map((part) => [part.element.name, part]));
-    const places = this.pattern.rows.length;
-    this.state = newState(circuit.size, places);
-    this.constantSlopes = new Float64Array(places);
-    this.assembly = new Assembly(this.parts, this.state, this.constantSlopes);
+    this.furtherJunctions = this.junctions.filter((part) => part.isPlain !== true);
+    this.frame = new Frame(circuit.size, this.pattern.rows.length, tables);
+    this.state = this.frame.state;
+    this.assembly = new Assembly(this.parts, this.frame);
     for (const part of this.parts) {
       this.read(part);
       for (const knob of part.movers) {
@@ -90,14 +96,20 @@ export class System {
   }
 
   private gatherConstantSlopes(): void {
-    this.constantSlopes.fill(0);
-    for (const part of this.parts) part.addConstantSlopes(this.constantSlopes);
-    this.state.jacobian.set(this.constantSlopes);
+    const { constantSlopes } = this.frame;
+    constantSlopes.fill(0);
+    for (const part of this.parts) part.addConstantSlopes(constantSlopes);
+    this.state.jacobian.set(constantSlopes);
   }
 
   /** Residual, scale and Jacobian at the present unknowns and linearisation. */
   assemble(): void {
     this.assembly.run();
+  }
+
+  /** As `settle` and `assemble` with less work, where further junctions are at their actual voltages already. */
+  assembleAtRest(): void {
+    this.assembly.runAtRest();
   }
 
   /** All unknowns at 0, junctions where a cold start wants them. */
@@ -109,16 +121,27 @@ export class System {
 
   /** Linearises every junction at its actual voltage. */
   settle(): void {
-    const { junctions, state } = this;
-    for (let k = 0; k < junctions.length; k++) junctions[k]!.settle(state);
+    const { state, frame } = this;
+    settleDiodes(frame.tables.diodes, state);
+    settleTransistors(frame.tables.transistors, state);
+    this.settleFurther();
+  }
+
+  /** Those that `assembleAtRest` does not settle. */
+  settleFurther(): void {
+    const { furtherJunctions, state } = this;
+    for (let k = 0; k < furtherJunctions.length; k++) furtherJunctions[k]!.settle(state);
   }
 
   /** Takes junction steps towards the actual voltages; true where all linearisation voltages equal the actual ones. */
   follow(): boolean {
-    let exact = true;
-    const { junctions, state } = this;
-    for (let k = 0; k < junctions.length; k++) if (!junctions[k]!.follow(state)) exact = false;
-    return exact;
+    const { furtherJunctions, state, frame } = this;
+    let isExact = followDiodes(frame.tables.diodes, state);
+    if (!followTransistors(frame.tables.transistors, state)) isExact = false;
+    for (let k = 0; k < furtherJunctions.length; k++) {
+      if (!furtherJunctions[k]!.follow(state)) isExact = false;
+    }
+    return isExact;
   }
 
   /** The value of a signal at the present unknowns: V, A or W. An element's voltage is v_left − v_right. */

@@ -85,6 +85,20 @@ const POWERS = Float64Array.of(
 /** 2^k for k = −1075 … 1023, the first 0. */
 const SCALES = Float64Array.from({ length: 2099 }, (_, i) => 2 ** (i - 1075));
 
+/** What generated code needs to do the same. */
+export const EXPONENTIAL = {
+  stepHigh: STEP_HIGH,
+  stepLow: STEP_LOW,
+  inverseStep: INVERSE_STEP,
+  rounder: ROUNDER,
+  largest: LARGEST,
+  smallest: SMALLEST,
+  powers: POWERS,
+  scales: SCALES,
+  /** The place of 2^0 among the scales. */
+  zero: 1075,
+} as const;
+
 /** e^r − 1 − r for |r| ≤ ln2/64; its relative error to r is below 1e-18. */
 function beyondLinear(r: number): number {
   const square = r * r;

@@ -80,12 +80,13 @@ export class Aided implements Linear {
 
   /** A bench on which the aid helps: its currents go into every residual, its slopes into every Jacobian. */
   bench(step: Float64Array): Bench {
-    return { system: this.system, linear: this, step, assemble: () => this.assemble() };
+    return { system: this.system, linear: this, step, assemble: (isAtRest) => this.assemble(isAtRest) };
   }
 
-  assemble(): void {
+  assemble(isAtRest = false): void {
     const { system } = this;
-    system.assemble();
+    if (isAtRest) system.assembleAtRest();
+    else system.assemble();
     const { residual, scale } = system.state;
     for (let k = 0; k < this.aids.length; k++) {
       const amperes = this.conductance * this.pull(k);

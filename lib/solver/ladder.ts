@@ -14,6 +14,7 @@ import { type Outcome, RUNGS, type Rung } from "./outcome";
 import { pseudoTransient } from "./pseudo-transient";
 import { ramp } from "./ramp";
 import { shuntRamp } from "./shunt-ramp";
+import { Stepper } from "./stepper";
 import { unsettled } from "./unsettled";
 
 const WARM_STEPS = 12;
@@ -32,8 +33,9 @@ type Failed = Omit<Exclude<Outcome, { kind: "converged" }>, "iterations">;
 
 /** Solves a system point by point, each by the first rung of the ladder that leads to an accepted solution. */
 export class Ladder {
-  private readonly bench: Bench;
+  private bench: Bench;
   private readonly linear: LinearSolver;
+  private readonly stepper: Stepper;
   private readonly shape: SparseShape;
   private readonly certificate: Certificate;
   private readonly reported: Rung | undefined;
@@ -64,11 +66,13 @@ export class Ladder {
       units: pattern.units,
     };
     this.linear = new LinearSolver(this.shape, state.jacobian);
+    this.stepper = new Stepper(system, this.linear, this.shape);
     this.bench = {
       system,
       linear: this.linear,
-      step: new Float64Array(circuit.size),
-      assemble: () => system.assemble(),
+      step: this.stepper.step,
+      assemble: (isAtRest) => (isAtRest ? system.assembleAtRest() : system.assemble()),
+      solve: (isAtRest) => this.stepper.solve(isAtRest),
     };
     this.certificate = new Certificate(system, this.linear);
     this.reported = rungs.includes(REPORTED) ? REPORTED : rungs.at(-1);
@@ -87,6 +91,8 @@ export class Ladder {
 
   /** Solves the point to which the system is turned; with `isWarm` from the present unknowns first. */
   solve(isWarm: boolean): Outcome {
+    this.stepper.prepare();
+    if (this.bench.step !== this.stepper.step) this.bench = { ...this.bench, step: this.stepper.step };
     const { bench, system } = this;
     const { circuit, state } = system;
     let iterations = 0;

@@ -1,16 +1,15 @@
 import { backwardError } from "./backward-error";
 import { DenseFactors } from "./dense";
 import { type Elimination, eliminate, type SparseShape } from "./elimination";
-import type { Kernel } from "./kernel/kernel";
+import type { GeneratedStep } from "./kernel/generated";
+import { factorsOf, type Kernel } from "./kernel/kernel";
 import { ListedKernel } from "./kernel/listed";
-import { WrittenKernel } from "./kernel/written";
 
 /** A step whose backward error is larger asks for new pivots; one that keeps a large one with new pivots too is not to be had. */
 const GOOD_BACKWARD_ERROR = 1e-9;
 const WORST_BACKWARD_ERROR = 1e-3;
 
-/** Solutions before code is generated for the sample's pivots: a short sweep does not repay it. */
-const FIRST_LISTED = 2000;
+const NO_FACTORS = new Float64Array(0);
 
 /** What Newton's method asks of linear algebra: solve J·d = −F into `step`, then again with the same J. */
 export interface Linear {
@@ -29,19 +28,18 @@ export interface Factors {
 
 /**
  * Solves J·d = −F for one structure many times. Pivots are chosen once on a sample, and from then on a factorisation is a list
- * of multiplications over reused arrays, after a while as generated code; both give the same bytes. Pivots stay while the
- * backward error of each solution is small, and are chosen anew on the values at hand when it is not.
+ * of multiplications over reused arrays, or generated code; both give the same bytes. Pivots stay while the backward error of each
+ * solution is small, and are chosen anew on the values at hand when it is not.
  */
 export class LinearSolver implements Linear {
   private readonly first: Elimination | null;
-  private readonly firstListed: Kernel | null;
-  private firstWritten: WrittenKernel | null = null;
-  private solutions = 0;
+  private firstKernel: Kernel | null;
   private plan: Elimination | null = null;
   private kernel: Kernel | null = null;
   /** The dense factors of the last matrix, where no pivots of ours served. */
   private dense: DenseFactors | null = null;
-  private factors = new Float64Array(0);
+  private firstFactors: Float64Array;
+  private factors: Float64Array = NO_FACTORS;
   private readonly work: Float64Array;
 
   /** `sample` chooses the pivots with which every strand begins, so that results do not depend on what was solved before. */
@@ -50,21 +48,48 @@ export class LinearSolver implements Linear {
     sample: Float64Array,
   ) {
     this.first = eliminate(shape, sample);
-    this.firstListed = this.first === null ? null : new ListedKernel(shape, this.first);
+    this.firstKernel = this.first === null ? null : new ListedKernel(shape, this.first);
+    this.firstFactors = this.first === null ? NO_FACTORS : factorsOf(this.first);
     this.work = new Float64Array(2 * shape.size);
     this.reset();
   }
 
   /** Goes back to the pivots of the sample. */
   reset(): void {
-    this.use(this.first, this.firstListed);
+    this.use(this.first, this.firstKernel);
   }
 
   /** Factorises `jacobian` and solves for `step`. False where the matrix is singular or not finite. */
   solve(jacobian: Float64Array, residual: Float64Array, step: Float64Array): boolean {
     this.dense = null;
-    if (++this.solutions === FIRST_LISTED) this.write();
     if (this.attempt(jacobian, residual, step, GOOD_BACKWARD_ERROR)) return true;
+    return this.solveAnew(jacobian, residual, step);
+  }
+
+  /** As `solve` by generated code that assembles, too; only while the sample's pivots are in use. */
+  take(generated: GeneratedStep): boolean {
+    this.dense = null;
+    if (generated.take()) return true;
+    const { jacobian, residual } = generated.system.state;
+    if (this.errorOf(jacobian, residual, generated.step) <= GOOD_BACKWARD_ERROR) return true;
+    return this.solveAnew(jacobian, residual, generated.step);
+  }
+
+  /** From now on generated code serves the sample's pivots. */
+  adopt(generated: GeneratedStep): void {
+    const isInUse = this.plan === this.first;
+    this.firstKernel = generated;
+    this.firstFactors = generated.factors;
+    if (isInUse) this.reset();
+  }
+
+  /** The sample's elimination, where it is in use. */
+  get samplePlan(): Elimination | null {
+    return this.plan === this.first ? this.first : null;
+  }
+
+  /** With pivots chosen on the values at hand. */
+  private solveAnew(jacobian: Float64Array, residual: Float64Array, step: Float64Array): boolean {
     const plan = eliminate(this.shape, jacobian);
     this.use(plan, plan === null ? null : new ListedKernel(this.shape, plan));
     if (plan === null) return false;
@@ -88,37 +113,16 @@ export class LinearSolver implements Linear {
   /** Null where the last matrix was factorised densely or not at all. Pivots stand as their inverses only. */
   get atHand(): Factors | null {
     const { plan, factors } = this;
-    if (plan === null || this.dense !== null) return null;
-    // Generated code has constant factors in its text and does not keep them.
-    const { constants, pivots, places } = plan;
-    if (this.kernel === this.firstWritten) {
-      for (let place = 0; place < places; place++) {
-        if (constants[place] !== 0) factors[place] = constants[place]!;
-      }
-      for (let k = 0; k < pivots.length; k++) {
-        if (constants[pivots[k]!] !== 0) factors[places + k] = constants[pivots[k]!]!;
-      }
-    }
-    return { plan, values: factors };
+    return plan === null || this.dense !== null ? null : { plan, values: factors };
   }
 
   private use(plan: Elimination | null, kernel: Kernel | null): void {
     this.plan = plan;
     this.kernel = kernel;
-    const length = plan === null ? 0 : plan.places + this.shape.size;
-    if (length !== this.factors.length) this.factors = new Float64Array(length);
-  }
-
-  /** Generates code for the sample's pivots. */
-  private write(): void {
-    if (this.first !== null) this.firstWritten = WrittenKernel.of(this.shape, this.first);
+    this.factors = plan === this.first ? this.firstFactors : plan === null ? NO_FACTORS : factorsOf(plan);
   }
 
   private attempt(jacobian: Float64Array, residual: Float64Array, step: Float64Array, most: number): boolean {
-    const { firstWritten } = this;
-    if (firstWritten !== null && this.plan === this.first) {
-      this.kernel = firstWritten.warmth.isUsed() ? firstWritten : this.firstListed;
-    }
     if (this.kernel === null) return false;
     if (this.kernel.solve(jacobian, residual, step, this.factors)) return true;
     return this.errorOf(jacobian, residual, step) <= most;

@@ -23,8 +23,13 @@ export interface Bench {
   readonly system: System;
   readonly linear: Linear;
   readonly step: Float64Array;
-  /** Fills residual, scale and Jacobian at the present unknowns, with whatever aids are on. */
-  readonly assemble: () => void;
+  /**
+   * Fills residual, scale and Jacobian at the present unknowns, with whatever aids are on. At rest every junction is first linearised
+   * at its actual voltage.
+   */
+  readonly assemble: (isAtRest: boolean) => void;
+  /** Assembles and solves for the step, where the two are one; false where the matrix is singular or not finite. */
+  readonly solve?: (isAtRest: boolean) => boolean;
 }
 
 /**
@@ -33,12 +38,11 @@ export interface Bench {
  * as they were when it failed. At most `most` iterations.
  */
 export function newton(bench: Bench, exact: boolean, most: number): Attempt {
-  const { system, linear, step } = bench;
+  const { system, step } = bench;
   const { state, circuit } = system;
   let isExact = exact;
   for (let iterations = 1; iterations <= most; iterations++) {
-    bench.assemble();
-    if (!linear.solve(state.jacobian, state.residual, step)) {
+    if (!solved(bench, isExact)) {
       const areNumbers = state.residual.every(Number.isFinite) && state.jacobian.every(Number.isFinite);
       return { kind: areNumbers ? "singular" : "not finite", iterations, wasSingular: areNumbers };
     }
@@ -52,6 +56,13 @@ export function newton(bench: Bench, exact: boolean, most: number): Attempt {
     if (!isExact) tame(state);
   }
   return { kind: "iteration limit", iterations: most, wasSingular: false };
+}
+
+function solved(bench: Bench, isAtRest: boolean): boolean {
+  if (bench.solve !== undefined) return bench.solve(isAtRest);
+  const { state } = bench.system;
+  bench.assemble(isAtRest);
+  return bench.linear.solve(state.jacobian, state.residual, bench.step);
 }
 
 /**
@@ -73,8 +84,8 @@ export function polish({ system, linear, step, assemble }: Bench): number {
   for (let more = 0; ; more++) {
     const ends = more === POLISHING || isLast(circuit, state, step);
     advance(state, step);
-    system.settle();
-    assemble();
+    system.settleFurther();
+    assemble(true);
     if (ends) return balances(circuit.size, state) ? more : -1;
     linear.solveAgain(state.residual, step);
   }

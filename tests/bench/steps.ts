@@ -5,6 +5,7 @@ import { System } from "@/lib/circuit/system";
 import type { SparseShape } from "@/lib/solver/elimination";
 import { Ladder } from "@/lib/solver/ladder";
 import { LinearSolver } from "@/lib/solver/linear";
+import { Stepper } from "@/lib/solver/stepper";
 
 /** Points from which a step is taken in turn, so that no branch is learnt by heart. */
 const POINTS = 16;
@@ -17,9 +18,9 @@ export class Steps {
   readonly size: number;
   /** The points one after another. */
   readonly points: Float64Array;
-  readonly step: Float64Array;
   private readonly system: System;
   private readonly linear: LinearSolver;
+  private readonly stepper: Stepper;
   private readonly shape: SparseShape;
   private readonly each: readonly Float64Array[];
 
@@ -51,14 +52,20 @@ export class Steps {
     system.settle();
     system.assemble();
     this.linear = new LinearSolver(this.shape, state.jacobian);
-    this.step = new Float64Array(this.size);
+    this.stepper = new Stepper(system, this.linear, this.shape);
+  }
+
+  get step(): Float64Array {
+    return this.stepper.step;
   }
 
   /** One whole Newton step from point k: assembly, factors, solution, new unknowns. */
   take(k: number): void {
-    const { state } = this.arrive(k);
-    this.linear.solve(state.jacobian, state.residual, this.step);
-    advance(state, this.step);
+    const { system, stepper } = this;
+    stepper.prepare();
+    this.goTo(k);
+    stepper.solve(true);
+    advance(system.state, stepper.step);
   }
 
   /** The same with a dense pivoted LU of the package ml-matrix, built afresh. */
@@ -78,11 +85,13 @@ export class Steps {
 
   /** Assembly alone. */
   arrive(k: number): System {
-    const { system } = this;
-    system.state.x.set(this.each[k % POINTS]!);
-    system.settle();
-    system.assemble();
-    return system;
+    this.goTo(k);
+    this.system.assembleAtRest();
+    return this.system;
+  }
+
+  private goTo(k: number): void {
+    this.system.state.x.set(this.each[k % POINTS]!);
   }
 }
 

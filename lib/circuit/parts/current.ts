@@ -3,7 +3,15 @@ import type { Element } from "@/lib/language/ast";
 import type { AssemblyCode } from "../assembly-code";
 import { type Bench, moversOf, netAt, type Part } from "../part";
 import { flow, type State } from "../state";
+import type { Table } from "../table";
 import type { PointValues } from "../values";
+
+/** Adds the currents [from, to) of a table: left and right net, A. */
+export function addCurrents({ numbers, figures }: Table, from: number, to: number, state: State): void {
+  for (let k = from, n = 2 * from; k < to; k++, n += 2) {
+    flow(state, numbers[n]!, numbers[n + 1]!, drivenCurrent(figures[k]!, state.share));
+  }
+}
 
 export class CurrentPart implements Part {
   readonly element: Element;
@@ -11,33 +19,36 @@ export class CurrentPart implements Part {
   readonly movers: ReadonlySet<string>;
   private readonly left: number;
   private readonly right: number;
-  private amperes = 0;
+  readonly isPlain = true;
+  private readonly table: Table;
+  private readonly row: number;
 
   constructor(bench: Bench) {
     this.element = bench.element;
     this.movers = moversOf([bench.element.value!], bench.values);
     this.left = netAt(bench, "left");
     this.right = netAt(bench, "right");
+    this.table = bench.tables.currents;
+    this.row = bench.tables.currents.add(this, [this.left, this.right]);
   }
 
   read(values: PointValues): void {
-    this.amperes = values.of(this.element.value!);
+    this.table.figures[this.row] = values.of(this.element.value!);
   }
 
   /** None: its current does not depend on the unknowns. */
   addConstantSlopes(): void {}
 
   addTo(state: State): void {
-    flow(state, this.left, this.right, drivenCurrent(this.amperes, state.share));
+    addCurrents(this.table, this.row, this.row + 1, state);
   }
 
-  write(code: AssemblyCode): boolean {
-    code.flow(this.left, this.right, code.let(`${code.object(this)}.amperes*share`));
-    return true;
+  write(code: AssemblyCode): void {
+    code.flow(this.left, this.right, code.let(`${code.figure(this.table, this.row, 0)}*share`));
   }
 
   current(pin: string, state: State): number {
-    const i = drivenCurrent(this.amperes, state.share);
+    const i = drivenCurrent(this.table.figures[this.row]!, state.share);
     return pin === "left" ? i : -i;
   }
 }

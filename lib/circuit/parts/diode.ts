@@ -18,7 +18,11 @@ import {
   START_CURRENT,
 } from "../part";
 import { across, flow, type State } from "../state";
+import type { Table } from "../table";
 import { type PointValues, TEMPERATURE } from "../values";
+import { DIODE_FIGURES, ETA, G, I, IS, TabledLaw, V } from "./diode-table";
+
+const FURTHER_TERMS = ["Rs", "V_breakdown", "photocurrent"];
 
 /**
  * A diode. Light drives its photocurrent past the junction and through Rs: the junction with Rs stands at V + Rs·I_photo and carries
@@ -36,9 +40,11 @@ export class DiodePart implements JunctionPart, Proof {
   private at: DiodeAt = { Is: 0, eta: 1, Rs: 0, doubt: 0 };
   private reverse: BreakdownAt | null = null;
   private photocurrent = 0;
-  /** Voltage at which the junction with Rs is linearised, V, and its law there. */
-  private v = 0;
-  private readonly law: CurrentAndSlope = { i: 0, g: 0 };
+  /** Without further terms in its law. */
+  readonly isPlain: boolean;
+  private readonly table: Table;
+  private readonly row: number;
+  private readonly law: CurrentAndSlope;
   private readonly actual: CurrentAndSlope = { i: 0, g: 0 };
 
   constructor(bench: Bench) {
@@ -52,6 +58,20 @@ export class DiodePart implements JunctionPart, Proof {
     this.cathode = c;
     this.gaps = [[a, c]];
     this.places = [pattern.place(a, a), pattern.place(a, c), pattern.place(c, a), pattern.place(c, c)];
+    const { params } = this.model;
+    this.isPlain = !FURTHER_TERMS.some((name) => params.has(name));
+    this.table = this.isPlain ? bench.tables.diodes : bench.tables.furtherDiodes;
+    this.row = this.table.add(this, [a, c, ...this.places]);
+    this.law = new TabledLaw(this.table, this.row);
+  }
+
+  /** Voltage at which the junction with Rs is linearised, V. */
+  private get v(): number {
+    return this.table.figures[this.row * DIODE_FIGURES + V]!;
+  }
+
+  private set v(volts: number) {
+    this.table.figures[this.row * DIODE_FIGURES + V] = volts;
   }
 
   read(values: PointValues): void {
@@ -69,6 +89,7 @@ export class DiodePart implements JunctionPart, Proof {
     this.reverse =
       volts === null ? null : breakdownAt(this.at, figure("I_breakdown") ?? terms.Is, volts, eta);
     this.photocurrent = figure("photocurrent") ?? 0;
+    this.table.figures.set([this.at.Is, this.at.eta], this.row * DIODE_FIGURES);
   }
 
   start(): void {
@@ -104,19 +125,6 @@ export class DiodePart implements JunctionPart, Proof {
     this.stamp(state);
   }
 
-  /** The exponent of a plain junction, v/η, into ys[k]. */
-  ask(ys: Float64Array, k: number): void {
-    ys[k] = this.v / this.at.eta;
-  }
-
-  /** As `addTo` of a plain junction, with what `exponentials` gave for its exponent. */
-  addGiven(state: State, less: Float64Array, whole: Float64Array, k: number): void {
-    const { law, at } = this;
-    law.i = at.Is * less[k]!;
-    law.g = (at.Is / at.eta) * whole[k]!;
-    this.stamp(state);
-  }
-
   private stamp(state: State): void {
     const { anode, cathode, law, places } = this;
     flow(state, anode, cathode, law.i + law.g * (this.junction(state) - this.v));
@@ -128,24 +136,26 @@ export class DiodePart implements JunctionPart, Proof {
     jacobian[places[3]]! += law.g;
   }
 
-  write(code: AssemblyCode): boolean {
-    const { anode, cathode, places } = this;
-    const { params } = this.model;
-    if (["Rs", "V_breakdown", "photocurrent"].some((name) => params.has(name))) return false;
-    const self = code.object(this);
-    const v = code.first(`${self}.v`);
-    const at = code.first(`${self}.at`);
-    const law = code.let(`${self}.law`);
-    const { less, whole } = code.exponentials(`${v}/${at}.eta`);
-    const i = code.let(`${at}.Is*${less}`);
-    const g = code.let(`${at}.Is/${at}.eta*${whole}`);
-    code.add(`${law}.i=${i};${law}.g=${g};`);
-    code.flow(anode, cathode, code.let(`${i}+${g}*(${code.across(anode, cathode)}-${v})`));
+  /** Writes that a plain one is linearised at its actual voltage, and asks for its exponential. */
+  writeAsk(code: AssemblyCode): void {
+    const { anode, cathode, table, row } = this;
+    const v = code.figure(table, row, V);
+    code.set(v, code.across(anode, cathode));
+    code.ask(row, `${v}/${code.figure(table, row, ETA)}`);
+  }
+
+  write(code: AssemblyCode): void {
+    const { anode, cathode, places, table, row } = this;
+    const [Is, eta] = [code.figure(table, row, IS), code.figure(table, row, ETA)];
+    const [i, g] = [code.figure(table, row, I), code.figure(table, row, G)];
+    const { less, whole } = code.exponentials(row);
+    code.set(i, `${Is}*${less}`);
+    code.set(g, `${Is}/${eta}*${whole}`);
+    code.flow(anode, cathode, i);
     code.slope(places[0], "+", g);
     code.slope(places[1], "-", g);
     code.slope(places[2], "-", g);
     code.slope(places[3], "+", g);
-    return true;
   }
 
   /** The voltage over junction and Rs, V. */

@@ -1,8 +1,25 @@
 import { gainMismatch } from "@/lib/devices/gain";
 import type { Element } from "@/lib/language/ast";
+import type { AssemblyCode } from "../assembly-code";
 import { type Bench, figureOf, moversOf, netAt, type Part } from "../part";
 import { across, flow, type State } from "../state";
+import type { Table } from "../table";
 import type { PointValues } from "../values";
+
+/** Adds the gains [from, to) of a table: plus, minus and output net, number of the output's current, ratio. */
+export function addGains({ numbers, figures }: Table, from: number, to: number, state: State): void {
+  const { x, low, residual, scale } = state;
+  const ground = x.length - 1;
+  for (let k = from, n = 4 * from; k < to; k++, n += 4) {
+    const out = numbers[n + 2]!;
+    const branch = numbers[n + 3]!;
+    flow(state, out, ground, x[branch]! + low[branch]!);
+    const vout = across(state, out, ground);
+    const difference = across(state, numbers[n]!, numbers[n + 1]!);
+    residual[branch] = gainMismatch(vout, difference, figures[k]!);
+    scale[branch] = Math.abs(vout) + Math.abs(figures[k]! * difference);
+  }
+}
 
 export class GainPart implements Part {
   readonly element: Element;
@@ -15,7 +32,9 @@ export class GainPart implements Part {
   /** Number of the current into its output, and of its law. */
   private readonly branch: number;
   private readonly places: readonly [number, number, number, number];
-  private ratio = 0;
+  readonly isPlain = true;
+  private readonly table: Table;
+  private readonly row: number;
 
   constructor(bench: Bench) {
     const { element, circuit, pattern, values } = bench;
@@ -33,27 +52,32 @@ export class GainPart implements Part {
       pattern.place(branch, this.plus),
       pattern.place(branch, this.minus),
     ];
+    this.table = bench.tables.gains;
+    this.row = bench.tables.gains.add(this, [this.plus, this.minus, this.out, branch]);
   }
 
   read(values: PointValues): void {
-    this.ratio = figureOf(this.element, "ratio", values)!;
+    this.table.figures[this.row] = figureOf(this.element, "ratio", values)!;
   }
 
   addConstantSlopes(jacobian: Float64Array): void {
     const [intoOut, byOut, byPlus, byMinus] = this.places;
     jacobian[intoOut]! += 1;
     jacobian[byOut]! += 1;
-    jacobian[byPlus]! -= this.ratio;
-    jacobian[byMinus]! += this.ratio;
+    jacobian[byPlus]! -= this.table.figures[this.row]!;
+    jacobian[byMinus]! += this.table.figures[this.row]!;
   }
 
   addTo(state: State): void {
-    const { plus, minus, out, ground, branch, ratio } = this;
-    flow(state, out, ground, state.x[branch]! + state.low[branch]!);
-    const vout = across(state, out, ground);
-    const difference = across(state, plus, minus);
-    state.residual[branch] = gainMismatch(vout, difference, ratio);
-    state.scale[branch] = Math.abs(vout) + Math.abs(ratio * difference);
+    addGains(this.table, this.row, this.row + 1, state);
+  }
+
+  write(code: AssemblyCode): void {
+    const { plus, minus, out, ground, branch } = this;
+    code.flow(out, ground, code.let(code.unknown(branch)));
+    const vout = code.let(code.across(out, ground));
+    const asked = code.let(`${code.figure(this.table, this.row, 0)}*${code.across(plus, minus)}`);
+    code.law(branch, `${vout}-${asked}`, `abs(${vout})+abs(${asked})`);
   }
 
   current(pin: string, state: State): number {

@@ -79,10 +79,6 @@ export class LimitedOpampPart extends OpampPart implements JunctionPart, Proof {
     jacobian[byCurrent]! += weight * this.ohms;
   }
 
-  override write(): boolean {
-    return false;
-  }
-
   /** What the output would be without limits, V. */
   private asked(state: State): number {
     return this.gain * (across(state, this.plus, this.minus) + this.offset * state.share);

@@ -3,9 +3,36 @@ import type { Element, Model } from "@/lib/language/ast";
 import type { AssemblyCode } from "../assembly-code";
 import { type Bench, figureOf, moversOf, netAt, type Part, type Proof } from "../part";
 import { across, flow, type State } from "../state";
+import type { Table } from "../table";
 import { type PointValues, TEMPERATURE } from "../values";
 
-/** An amplifier without output limits. */
+/** A row's figures: offset (V), output resistance (Ω), 1/A, bias currents into plus and minus (A). */
+const [OFFSET, OHMS, INVERSE_GAIN, INTO_PLUS, INTO_MINUS] = [0, 1, 2, 3, 4] as const;
+
+/** Adds the amplifiers [from, to) of a table: plus, minus and output net, number of the output's current. */
+export function addOpamps({ numbers, figures }: Table, from: number, to: number, state: State): void {
+  const { x, low, residual, scale, share } = state;
+  const ground = x.length - 1;
+  for (let k = from, n = 4 * from, at = 5 * from; k < to; k++, n += 4, at += 5) {
+    const plus = numbers[n]!;
+    const minus = numbers[n + 1]!;
+    const out = numbers[n + 2]!;
+    const branch = numbers[n + 3]!;
+    flow(state, out, ground, x[branch]! + low[branch]!);
+    flow(state, plus, ground, figures[at + INTO_PLUS]! * share);
+    flow(state, minus, ground, figures[at + INTO_MINUS]! * share);
+    const difference = across(state, plus, minus);
+    const offset = figures[at + OFFSET]! * share;
+    const ohms = figures[at + OHMS]!;
+    const behind = across(state, out, ground) - ohms * x[branch]!;
+    const inverse = figures[at + INVERSE_GAIN]!;
+    const around = Math.abs(x[out]!) + ohms * Math.abs(x[branch]!);
+    residual[branch] = opampMismatch(difference, offset, behind, inverse);
+    scale[branch] = Math.abs(difference) + Math.abs(offset) + around * inverse;
+  }
+}
+
+/** An amplifier; without output limits a plain one. */
 export class OpampPart implements Part {
   readonly element: Element;
   readonly proof: "linear" | Proof = "linear";
@@ -19,6 +46,9 @@ export class OpampPart implements Part {
   protected readonly branch: number;
   /** Row of the output by current; its law by plus, minus, output voltage and output current. */
   protected readonly places: readonly [number, number, number, number, number];
+  /** Its row in the table of plain amplifiers; null with limits. */
+  private readonly row: number | null;
+  private readonly table: Table;
   protected offset = 0;
   /** Output resistance, Ω. */
   protected ohms = 0;
@@ -46,6 +76,9 @@ export class OpampPart implements Part {
       hasGain ? pattern.place(branch, this.out) : 0,
       hasGain && params.has("R_out") ? pattern.place(branch, branch) : 0,
     ];
+    this.table = bench.tables.opamps;
+    const isPlain = !params.has("out_low") && !params.has("out_high");
+    this.row = isPlain ? bench.tables.opamps.add(this, [this.plus, this.minus, this.out, branch]) : null;
   }
 
   read(values: PointValues): void {
@@ -58,6 +91,13 @@ export class OpampPart implements Part {
     this.ohms = figure("R_out") ?? 0;
     this.intoPlus = biasInto(1, bias, difference);
     this.intoMinus = biasInto(-1, bias, difference);
+    if (this.row === null) return;
+    const { offset, ohms, inverseGain, intoPlus, intoMinus } = this;
+    this.table.figures.set([offset, ohms, inverseGain, intoPlus, intoMinus], 5 * this.row);
+  }
+
+  get isPlain(): boolean {
+    return this.row !== null;
   }
 
   addConstantSlopes(jacobian: Float64Array): void {
@@ -70,38 +110,31 @@ export class OpampPart implements Part {
   }
 
   addTo(state: State): void {
-    this.addCurrents(state);
-    const { plus, minus, branch, inverseGain } = this;
-    const difference = across(state, plus, minus);
-    const offset = this.offset * state.share;
-    const behind = this.behind(state);
-    state.residual[branch] = opampMismatch(difference, offset, behind, inverseGain);
-    state.scale[branch] = Math.abs(difference) + Math.abs(offset) + this.around(state) * inverseGain;
+    if (this.row !== null) addOpamps(this.table, this.row, this.row + 1, state);
   }
 
-  write(code: AssemblyCode): boolean {
+  write(code: AssemblyCode): void {
     const { plus, minus, out, ground, branch } = this;
     const { params } = this.model;
-    const self = code.object(this);
+    const figure = (column: number) => code.figure(this.table, this.row!, column);
     code.flow(out, ground, code.let(code.unknown(branch)));
     if (params.has("bias") || params.has("bias_offset")) {
-      code.flow(plus, ground, code.let(`${self}.intoPlus*share`));
-      code.flow(minus, ground, code.let(`${self}.intoMinus*share`));
+      code.flow(plus, ground, code.let(`${figure(INTO_PLUS)}*share`));
+      code.flow(minus, ground, code.let(`${figure(INTO_MINUS)}*share`));
     }
     const difference = code.let(code.across(plus, minus));
-    const offset = code.let(`${self}.offset*share`);
+    const offset = code.let(`${figure(OFFSET)}*share`);
     const hasOhms = params.has("R_out");
-    const drop = hasOhms ? `-${self}.ohms*${code.high(branch)}` : "";
-    const around = hasOhms ? `+${self}.ohms*Math.abs(${code.high(branch)})` : "";
+    const drop = hasOhms ? `-${figure(OHMS)}*${code.high(branch)}` : "";
+    const around = hasOhms ? `+${figure(OHMS)}*abs(${code.high(branch)})` : "";
     const behind = code.let(code.across(out, ground) + drop);
-    const inverse = code.let(`${self}.inverseGain`);
-    const scale = `(Math.abs(${code.high(out)})${around})*${inverse}`;
+    const inverse = figure(INVERSE_GAIN);
+    const scale = `(abs(${code.high(out)})${around})*${inverse}`;
     code.law(
       branch,
       `${difference}+${offset}-${behind}*${inverse}`,
-      `Math.abs(${difference})+Math.abs(${offset})+${scale}`,
+      `abs(${difference})+abs(${offset})+${scale}`,
     );
-    return true;
   }
 
   /** Output and bias currents. */

@@ -3,18 +3,35 @@ import { UNIT } from "@/lib/devices/rounding";
 import type { Element } from "@/lib/language/ast";
 import type { AssemblyCode } from "../assembly-code";
 import { type Bench, figureOf, type Gap, moversOf, netAt, type Part, type Proof } from "../part";
-import { across, flow, type State } from "../state";
+import { across, type State } from "../state";
+import type { Table } from "../table";
 import { type PointValues, TEMPERATURE } from "../values";
+
+/** Adds the resistors [from, to) of a table: left and right net, conductance in S. */
+export function addResistors({ numbers, figures }: Table, from: number, to: number, state: State): void {
+  const { x, low, residual, scale } = state;
+  for (let k = from, n = 2 * from; k < to; k++, n += 2) {
+    const a = numbers[n]!;
+    const b = numbers[n + 1]!;
+    const i = figures[k]! * (x[a]! - x[b]! + (low[a]! - low[b]!));
+    const size = Math.abs(i);
+    residual[a]! += i;
+    residual[b]! -= i;
+    scale[a]! += size;
+    scale[b]! += size;
+  }
+}
 
 export class ResistorPart implements Part, Proof {
   readonly element: Element;
   readonly gaps: readonly Gap[];
   readonly movers: ReadonlySet<string>;
+  readonly isPlain = true;
   private readonly left: number;
   private readonly right: number;
   private readonly places: readonly [number, number, number, number];
-  /** Conductance, S. */
-  private g = 0;
+  private readonly table: Table;
+  private readonly row: number;
 
   constructor(bench: Bench) {
     const { element, pattern, values } = bench;
@@ -32,10 +49,17 @@ export class ResistorPart implements Part, Proof {
       pattern.place(right, left),
       pattern.place(right, right),
     ];
+    this.table = bench.tables.resistors;
+    this.row = bench.tables.resistors.add(this, [left, right]);
+  }
+
+  /** Conductance, S. */
+  private get g(): number {
+    return this.table.figures[this.row]!;
   }
 
   read(values: PointValues): void {
-    this.g = conductance(
+    this.table.figures[this.row] = conductance(
       values.of(this.element.value!),
       figureOf(this.element, "drift", values),
       values.kelvin,
@@ -44,20 +68,20 @@ export class ResistorPart implements Part, Proof {
 
   addConstantSlopes(jacobian: Float64Array): void {
     const [ll, lr, rl, rr] = this.places;
-    jacobian[ll]! += this.g;
-    jacobian[lr]! -= this.g;
-    jacobian[rl]! -= this.g;
-    jacobian[rr]! += this.g;
+    const { g } = this;
+    jacobian[ll]! += g;
+    jacobian[lr]! -= g;
+    jacobian[rl]! -= g;
+    jacobian[rr]! += g;
   }
 
   addTo(state: State): void {
-    flow(state, this.left, this.right, this.g * across(state, this.left, this.right));
+    addResistors(this.table, this.row, this.row + 1, state);
   }
 
-  write(code: AssemblyCode): boolean {
-    const i = code.let(`${code.object(this)}.g*${code.across(this.left, this.right)}`);
+  write(code: AssemblyCode): void {
+    const i = code.let(`${code.figure(this.table, this.row, 0)}*${code.across(this.left, this.right)}`);
     code.flow(this.left, this.right, i);
-    return true;
   }
 
   /** A conductance that is or may become negative can cancel others, whose rounding then stays. */

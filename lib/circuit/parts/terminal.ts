@@ -1,8 +1,26 @@
 import type { Element, Model } from "@/lib/language/ast";
+import type { AssemblyCode } from "../assembly-code";
 import type { Terminal } from "../circuit";
 import { type Bench, figureOf, moversOf, type Part } from "../part";
 import { across, flow, type State } from "../state";
+import type { Table } from "../table";
 import type { PointValues } from "../values";
+
+/** Adds the terminals [from, to) of a table: net, inner end, number of the current, Ω. */
+export function addTerminals({ numbers, figures }: Table, from: number, to: number, state: State): void {
+  const { x, low, residual, scale } = state;
+  for (let k = from, n = 3 * from; k < to; k++, n += 3) {
+    const net = numbers[n]!;
+    const inner = numbers[n + 1]!;
+    const branch = numbers[n + 2]!;
+    const i = x[branch]! + low[branch]!;
+    flow(state, net, inner, i);
+    const between = across(state, net, inner);
+    const drop = figures[k]! * i;
+    residual[branch] = between - drop;
+    scale[branch] = Math.abs(between) + Math.abs(drop);
+  }
+}
 
 /**
  * What lies between a net and a pin: v_net − v_pin − R·i = 0, with the current i as an unknown, so that R may be 0 Ω: at a point, or
@@ -15,9 +33,11 @@ export class TerminalPart implements Part {
   private readonly model: Model | null;
   private readonly terminal: Terminal;
   private readonly places: readonly [number, number, number, number, number];
-  private ohms = 0;
+  readonly isPlain = true;
+  private readonly table: Table;
+  private readonly row: number;
 
-  constructor({ pattern, values, model }: Omit<Bench, "element">, terminal: Terminal) {
+  constructor({ pattern, values, model, tables }: Omit<Bench, "element">, terminal: Terminal) {
     const { element, resistance, net, inner, branch } = terminal;
     this.element = element;
     this.model = model;
@@ -31,11 +51,13 @@ export class TerminalPart implements Part {
       pattern.placeOfOne(branch, inner),
       resistance === null ? 0 : pattern.place(branch, branch),
     ];
+    this.table = tables.terminals;
+    this.row = tables.terminals.add(this, [net, inner, branch]);
   }
 
   read(values: PointValues): void {
     const { resistance } = this.terminal;
-    this.ohms = resistance === null ? 0 : figureOf(this.model!, resistance, values)!;
+    this.table.figures[this.row] = resistance === null ? 0 : figureOf(this.model!, resistance, values)!;
   }
 
   addConstantSlopes(jacobian: Float64Array): void {
@@ -44,17 +66,20 @@ export class TerminalPart implements Part {
     jacobian[intoPin]! -= 1;
     jacobian[byNet]! += 1;
     jacobian[byPin]! -= 1;
-    jacobian[byCurrent]! -= this.ohms;
+    jacobian[byCurrent]! -= this.table.figures[this.row]!;
   }
 
   addTo(state: State): void {
+    addTerminals(this.table, this.row, this.row + 1, state);
+  }
+
+  write(code: AssemblyCode): void {
     const { net, inner, branch } = this.terminal;
-    const i = state.x[branch]! + state.low[branch]!;
-    flow(state, net, inner, i);
-    const between = across(state, net, inner);
-    const drop = this.ohms * i;
-    state.residual[branch] = between - drop;
-    state.scale[branch] = Math.abs(between) + Math.abs(drop);
+    const i = code.let(code.unknown(branch));
+    code.flow(net, inner, i);
+    const between = code.let(code.across(net, inner));
+    const drop = code.let(`${code.figure(this.table, this.row, 0)}*${i}`);
+    code.law(branch, `${between}-${drop}`, `abs(${between})+abs(${drop})`);
   }
 
   current(_: string, state: State): number {

@@ -17,9 +17,13 @@ import {
   type Proof,
   START_CURRENT,
 } from "../part";
-import { across, flow, type State } from "../state";
+import { across, type State } from "../state";
+import type { Table } from "../table";
 import { type PointValues, TEMPERATURE } from "../values";
-import { writeTransistor } from "./transistor-code";
+import { askTransistor, type TransistorRow, writeTransistor } from "./transistor-code";
+import { TRANSISTOR_FIGURES, VBC, VBE, VCE } from "./transistor-table";
+
+const FURTHER_TERMS = ["I_leak_e", "I_leak_c", "I_knee_f", "I_knee_r"];
 
 /** An npn, or a pnp, which is the same with every voltage and current reversed. */
 export class TransistorPart implements JunctionPart, Proof {
@@ -33,20 +37,19 @@ export class TransistorPart implements JunctionPart, Proof {
   private readonly c: number;
   private readonly b: number;
   private readonly e: number;
-  private readonly ground: number;
   /** Rows c, b, e by columns c, b, e. */
   private readonly places: readonly number[];
   private at: BipolarAt = NO_BIPOLAR;
-  /** Voltages at which it is linearised, V, and its law there. */
-  private vbe = 0;
-  private vbc = 0;
-  private vce = 0;
+  /** Without leakage and high injection. */
+  readonly isPlain: boolean;
+  private readonly table: Table;
+  private readonly row: number;
   private readonly law = { ic: 0, ib: 0, icF: 0, icR: 0, ibF: 0, ibR: 0 };
   private readonly actual = { ic: 0, ib: 0, icF: 0, icR: 0, ibF: 0, ibR: 0 };
   private readonly bounds = { ic: 0, ib: 0, icF: 0, icR: 0, ibF: 0, ibR: 0 };
 
   constructor(bench: Bench) {
-    const { element, circuit, pattern, values } = bench;
+    const { element, pattern, values } = bench;
     this.element = element;
     this.model = bench.model!;
     this.sign = element.kind === "npn" ? 1 : -1;
@@ -54,13 +57,37 @@ export class TransistorPart implements JunctionPart, Proof {
     this.c = netAt(bench, "c");
     this.b = netAt(bench, "b");
     this.e = netAt(bench, "e");
-    this.ground = circuit.size;
     this.gaps = [
       [this.b, this.e],
       [this.b, this.c],
     ];
     const nets = [this.c, this.b, this.e];
     this.places = nets.flatMap((row) => nets.map((column) => pattern.place(row, column)));
+    const { params } = this.model;
+    this.isPlain = !FURTHER_TERMS.some((name) => params.has(name));
+    this.table = this.isPlain ? bench.tables.transistors : bench.tables.furtherTransistors;
+    this.row = this.table.add(this, [...nets, this.sign, ...this.places]);
+  }
+
+  /** Voltages at which it is linearised, V. */
+  private get vbe(): number {
+    return this.table.figures[this.row * TRANSISTOR_FIGURES + VBE]!;
+  }
+
+  private get vbc(): number {
+    return this.table.figures[this.row * TRANSISTOR_FIGURES + VBC]!;
+  }
+
+  private get vce(): number {
+    return this.table.figures[this.row * TRANSISTOR_FIGURES + VCE]!;
+  }
+
+  private lineariseAt(vbe: number, vbc: number, vce: number): void {
+    const { figures } = this.table;
+    const at = this.row * TRANSISTOR_FIGURES;
+    figures[at + VBE] = vbe;
+    figures[at + VBC] = vbc;
+    figures[at + VCE] = vce;
   }
 
   read(values: PointValues): void {
@@ -84,18 +111,19 @@ export class TransistorPart implements JunctionPart, Proof {
       I_knee_r: figure("I_knee_r"),
     };
     this.at = bipolarAt(terms, values.kelvin);
+    const { Is, eta, forwardBase, reverseBase, forwardEarly, reverseEarly } = this.at;
+    const figures = [Is, eta, 1 / eta, forwardBase, reverseBase, forwardEarly, reverseEarly];
+    this.table.figures.set(figures, this.row * TRANSISTOR_FIGURES);
   }
 
   start(): void {
-    this.vbe = diodeVoltage(this.at, START_CURRENT);
-    this.vbc = 0;
-    this.vce = this.vbe;
+    const volts = diodeVoltage(this.at, START_CURRENT);
+    this.lineariseAt(volts, 0, volts);
   }
 
   settle(state: State): void {
-    this.vbe = this.sign * across(state, this.b, this.e);
-    this.vbc = this.sign * across(state, this.b, this.c);
-    this.vce = this.sign * across(state, this.c, this.e);
+    const { sign, c, b, e } = this;
+    this.lineariseAt(sign * across(state, b, e), sign * across(state, b, c), sign * across(state, c, e));
   }
 
   follow(state: State): boolean {
@@ -107,9 +135,7 @@ export class TransistorPart implements JunctionPart, Proof {
     const nextBc = this.stepped(vbc, this.vbc);
     const near = NEARLY_WHOLE * at.eta;
     if (Math.abs(nextBe - this.vbe) <= near && Math.abs(nextBc - this.vbc) <= near) return true;
-    this.vbe = nextBe;
-    this.vbc = nextBc;
-    this.vce = nextBe - nextBc;
+    this.lineariseAt(nextBe, nextBc, nextBe - nextBc);
     return false;
   }
 
@@ -129,24 +155,25 @@ export class TransistorPart implements JunctionPart, Proof {
   addConstantSlopes(): void {}
 
   addTo(state: State): void {
-    const { c, b, e, ground, sign, law, places } = this;
+    const { c, b, e, sign, law, places } = this;
     bipolarLaw(this.at, this.vbe, this.vbc, this.vce, law);
     const { icF, icR, ibF, ibR } = law;
     const be = sign * across(state, b, e) - this.vbe;
     const bc = sign * across(state, b, c) - this.vbc;
     const ic = sign * (law.ic + icF * be + icR * bc);
     const ib = sign * (law.ib + ibF * be + ibR * bc);
-    flow(state, c, ground, ic);
-    flow(state, b, ground, ib);
-    flow(state, e, ground, -ic - ib);
-    const { jacobian, scale } = state;
+    const ie = -ic - ib;
+    const { jacobian, residual, scale } = state;
+    residual[c]! += ic;
+    residual[b]! += ib;
+    residual[e]! += ie;
     // In saturation a pin's current is what two much larger ones leave over; the slopes tell how large these are.
     const { eta } = this.at;
     const intoC = eta * (Math.abs(icF) + Math.abs(icR));
     const intoB = eta * (Math.abs(ibF) + Math.abs(ibR));
-    scale[c]! += intoC;
-    scale[b]! += intoB;
-    scale[e]! += intoC + intoB;
+    scale[c]! += Math.abs(ic) + intoC;
+    scale[b]! += Math.abs(ib) + intoB;
+    scale[e]! += Math.abs(ie) + (intoC + intoB);
     jacobian[places[0]!]! -= icR;
     jacobian[places[1]!]! += icF + icR;
     jacobian[places[2]!]! -= icF;
@@ -158,12 +185,18 @@ export class TransistorPart implements JunctionPart, Proof {
     jacobian[places[8]!]! += icF + ibF;
   }
 
-  write(code: AssemblyCode): boolean {
-    const { params } = this.model;
-    if (["I_leak_e", "I_leak_c", "I_knee_f", "I_knee_r"].some((name) => params.has(name))) return false;
-    const { c, b, e, sign } = this;
-    writeTransistor(code, code.object(this), { c, b, e, sign, ground: this.ground, places: this.places });
-    return true;
+  /** Writes that a plain one is linearised at its actual voltages, and asks for its exponentials. */
+  writeAsk(code: AssemblyCode): void {
+    askTransistor(code, this.inTable);
+  }
+
+  write(code: AssemblyCode): void {
+    writeTransistor(code, this.inTable);
+  }
+
+  private get inTable(): TransistorRow {
+    const { c, b, e, sign, places, table, row } = this;
+    return { c, b, e, sign, places, table, row };
   }
 
   addDoubt(_: State, doubt: Float64Array): void {

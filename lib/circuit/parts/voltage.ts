@@ -3,7 +3,23 @@ import type { Element } from "@/lib/language/ast";
 import type { AssemblyCode } from "../assembly-code";
 import { type Bench, moversOf, netAt, type Part } from "../part";
 import { across, flow, type State } from "../state";
+import type { Table } from "../table";
 import type { PointValues } from "../values";
+
+/** Adds the voltages [from, to) of a table: left and right net, number of the current, V. */
+export function addVoltages({ numbers, figures }: Table, from: number, to: number, state: State): void {
+  const { x, low, residual, scale, share } = state;
+  for (let k = from, n = 3 * from; k < to; k++, n += 3) {
+    const left = numbers[n]!;
+    const right = numbers[n + 1]!;
+    const branch = numbers[n + 2]!;
+    flow(state, left, right, x[branch]! + low[branch]!);
+    const drop = across(state, left, right);
+    const volts = figures[k]! * share;
+    residual[branch] = voltageMismatch(drop, volts);
+    scale[branch] = Math.abs(drop) + Math.abs(volts);
+  }
+}
 
 export class VoltagePart implements Part {
   readonly element: Element;
@@ -13,8 +29,10 @@ export class VoltagePart implements Part {
   private readonly right: number;
   /** Number of its current, from left to right, and of its law. */
   private readonly branch: number;
+  readonly isPlain = true;
   private readonly places: readonly [number, number, number, number];
-  private volts = 0;
+  private readonly table: Table;
+  private readonly row: number;
 
   constructor(bench: Bench) {
     const { element, circuit, pattern, values } = bench;
@@ -30,10 +48,12 @@ export class VoltagePart implements Part {
       pattern.placeOfOne(branch, this.left),
       pattern.placeOfOne(branch, this.right),
     ];
+    this.table = bench.tables.voltages;
+    this.row = bench.tables.voltages.add(this, [this.left, this.right, branch]);
   }
 
   read(values: PointValues): void {
-    this.volts = values.of(this.element.value!);
+    this.table.figures[this.row] = values.of(this.element.value!);
   }
 
   addConstantSlopes(jacobian: Float64Array): void {
@@ -45,21 +65,15 @@ export class VoltagePart implements Part {
   }
 
   addTo(state: State): void {
-    const { left, right, branch } = this;
-    flow(state, left, right, state.x[branch]! + state.low[branch]!);
-    const drop = across(state, left, right);
-    const volts = this.volts * state.share;
-    state.residual[branch] = voltageMismatch(drop, volts);
-    state.scale[branch] = Math.abs(drop) + Math.abs(volts);
+    addVoltages(this.table, this.row, this.row + 1, state);
   }
 
-  write(code: AssemblyCode): boolean {
+  write(code: AssemblyCode): void {
     const { left, right, branch } = this;
     code.flow(left, right, code.let(code.unknown(branch)));
     const drop = code.let(code.across(left, right));
-    const volts = code.let(`${code.object(this)}.volts*share`);
-    code.law(branch, `-${drop}-${volts}`, `Math.abs(${drop})+Math.abs(${volts})`);
-    return true;
+    const volts = code.let(`${code.figure(this.table, this.row, 0)}*share`);
+    code.law(branch, `-${drop}-${volts}`, `abs(${drop})+abs(${volts})`);
   }
 
   current(pin: string, state: State): number {

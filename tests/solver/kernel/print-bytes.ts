@@ -2,7 +2,7 @@ import { createHash } from "node:crypto";
 import { readFileSync } from "node:fs";
 import { compile } from "@/lib/analyses/compile";
 import { solveRange } from "@/lib/analyses/sweep";
-import { mayCompile } from "@/lib/circuit/compiled";
+import { mayCompile } from "@/lib/circuit/code/machine";
 
 /** Prints whether code may be generated here, and a hash of the bytes that the first 1,200 points of a netlist file give. */
 const { job } = compile(readFileSync(process.argv[2]!, "utf8"));
