@@ -167,7 +167,10 @@ export class Expander {
     this.used.add(statement);
     this.rewriter.nodes += 1 + ports.length;
     const scope = new Scope(prefix, definition.scope);
-    for (const [i, { net }] of ports.entries()) scope.set(statement.ports[i]!.text, { name: net.text });
+    for (const [i, { port, net }] of ports.entries()) {
+      const through = [port.text, ...(net.through ?? [])];
+      scope.set(statement.ports[i]!.text, { name: net.text, through });
+    }
     scope.fill(statement.statements, isImported, () => {
       this.rewriter.nodes += 1;
     });

@@ -39,6 +39,12 @@ const MOST_SEARCHES = 20;
 /** Names of every file that mean the same inside its blocks. */
 const UNIVERSAL: ReadonlySet<string> = new Set(["ground", "temperature"]);
 
+/** A pin of an element. */
+export interface PinOf {
+  readonly element: string;
+  readonly pin: string;
+}
+
 interface Entry {
   readonly meaning: Meaning;
   readonly place: Span;
@@ -50,6 +56,8 @@ interface Entry {
 export class Names {
   private readonly entries = new Map<string, Entry>();
   private readonly mentioned = new Set<string>();
+  /** The pins inside an instance that its port leads to. */
+  private readonly fed = new Map<string, PinOf[]>();
   /** The nets that the nets of blocks are joined to. */
   private readonly joined = new Map<string, Word>();
   /** Set where a part of the file could not be told from another: unknown names are then not reported. */
@@ -122,6 +130,23 @@ export class Names {
     return at === 1 && net === undefined
       ? path
       : [net === undefined ? head : { ...head, text: net.text }, ...path.slice(at)];
+  }
+
+  /** Notes that a port of an instance leads to a pin inside. */
+  feed(port: string, pin: PinOf): void {
+    const pins = this.fed.get(port);
+    if (pins === undefined) this.fed.set(port, [pin]);
+    else pins.push(pin);
+  }
+
+  /** For `S.in.i`, the pins inside that the port leads to; null where a dotted name is not the current of a port. */
+  pinsBehind(path: readonly Word[]): readonly PinOf[] | null {
+    if (path.length < 3 || path.at(-1)!.text !== "i") return null;
+    const port = path
+      .slice(0, -1)
+      .map(({ text }) => text)
+      .join(".");
+    return this.meaningOf(port) === "port" ? (this.fed.get(port) ?? []) : null;
   }
 
   /** Notes that a net is named here. */

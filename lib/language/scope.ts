@@ -20,6 +20,8 @@ export interface ScopeEntry {
   readonly block: BlockDefinition | null;
   /** The kind that a model follows. */
   readonly kind: string | null;
+  /** For a port of a block: as in Word. */
+  readonly through?: readonly string[] | undefined;
 }
 
 const EVERYWHERE: ReadonlySet<string> = new Set([...CONSTANTS, "ground", "temperature"]);
@@ -47,7 +49,9 @@ export class Scope {
   /** The word with the name it has once blocks are taken apart; what is unknown belongs to this scope. */
   flat(word: Word): Word {
     if (word.text === "" || EVERYWHERE.has(word.text)) return word;
-    return this.named(word, this.find(word.text)?.name ?? this.prefix + word.text);
+    const entry = this.find(word.text);
+    const flat = this.named(word, entry?.name ?? this.prefix + word.text);
+    return entry?.through === undefined ? flat : { ...flat, through: entry.through };
   }
 
   /** The word of something declared here. */

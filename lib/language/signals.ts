@@ -1,7 +1,7 @@
 import { AMPERE, VOLT, WATT } from "@/lib/units/dimension";
 import type { Typed } from "./ast";
 import { KINDS } from "./kinds";
-import { Names, ownName } from "./names";
+import { Names, ownName, type PinOf } from "./names";
 import type { Report } from "./report";
 import type { Expression, Word } from "./syntax";
 import { quote } from "./token";
@@ -91,4 +91,13 @@ export function resolveSignal(
   }
   const dimension = { v: VOLT, i: AMPERE, p: WATT }[second.text];
   return { op: "signal", signal: { of: "element", element: head.text, quantity: second.text }, dimension };
+}
+
+/** `S.in.i`: the current into a net of a block is what flows into the pins that it leads to, each `kept` as its place wants it. */
+export function currentInto(pins: readonly PinOf[], kept: (signal: Typed) => Typed): Typed {
+  const currents = pins.map((pin) =>
+    kept({ op: "signal", signal: { of: "pin", ...pin }, dimension: AMPERE }),
+  );
+  if (currents.length === 0) return { op: "constant", value: 0, dimension: AMPERE };
+  return currents.reduce((left, right) => ({ op: "+", left, right, dimension: AMPERE }));
 }

@@ -7,6 +7,8 @@ export interface Word extends Span {
   readonly text: string;
   /** Where blocks were taken apart: what stands before its own name in `text`, such as `S.`. */
   readonly prefix?: string;
+  /** For a net inside a block that is one of its ports: the port, such as `S.in`, and those of blocks around that it leads through. */
+  readonly through?: readonly string[];
 }
 
 export type UnaryOperator = "-" | "+";

@@ -9,7 +9,7 @@ import { type Meaning, Names, ownName } from "./names";
 import { nearest } from "./nearest";
 import { isReductionName, REDUCTIONS } from "./reductions";
 import type { Report } from "./report";
-import { type PinsOf, resolveSignal } from "./signals";
+import { currentInto, type PinsOf, resolveSignal } from "./signals";
 import type { Span } from "./span";
 import type { Expression, Word } from "./syntax";
 import { quote } from "./token";
@@ -84,6 +84,9 @@ export class Typing {
   }
 
   private path(expression: Extract<Expression, { kind: "name" }>, place: Place): Judged | null {
+    const behind = this.names.pinsBehind(expression.path);
+    if (behind !== null && place.signals)
+      return plain(currentInto(behind, (signal) => place.contract?.kept(signal, expression) ?? signal));
     const path = this.names.settle(expression.path);
     if (path.length === 1) return this.name(path[0]!, place);
     const settled = { ...expression, path };

@@ -84,7 +84,7 @@ export class Wirer {
       this.add(
         part.name,
         { kind, model },
-        { [pins[0]!]: statement.nets[i]!.text, [pins[1]!]: statement.nets[i + 1]!.text },
+        { [pins[0]!]: statement.nets[i]!, [pins[1]!]: statement.nets[i + 1]! },
         {
           value: KINDS[kind].value === null ? null : part.value,
           tolerance: part.tolerance,
@@ -112,7 +112,7 @@ export class Wirer {
       this.wantModel(statement.of, kind);
       return;
     }
-    const pins: Record<string, string> = {};
+    const pins: Record<string, Word> = {};
     const settings: Setting[] = [];
     let value: Setting | null = null;
     const seen = new Set<string>();
@@ -143,16 +143,21 @@ export class Wirer {
   private add(
     name: Word,
     { kind, model }: Followed,
-    pins: Readonly<Record<string, string>>,
+    nets: Readonly<Record<string, Word>>,
     rest: Span & Pick<Wired, "value" | "tolerance" | "settings" | "isWhole">,
   ): void {
     if (this.names.meaningOf(name.text) !== "element" || this.names.placeOf(name.text).from !== name.from)
       return;
     this.names.setKind(name.text, kind);
+    const pins: Record<string, string> = {};
+    for (const [pin, net] of Object.entries(nets)) {
+      pins[pin] = net.text;
+      for (const port of net.through ?? []) this.names.feed(port, { element: name.text, pin });
+    }
     this.wired.push({ name, kind, model, pins, ...rest });
   }
 
-  private pin(setting: Setting, pins: Record<string, string>): void {
+  private pin(setting: Setting, pins: Record<string, Word>): void {
     const net = plainName(setting.value);
     if (net === null) {
       if (setting.value.kind === "hole") return;
@@ -179,7 +184,7 @@ export class Wirer {
       );
     }
     this.names.mentionNet(net);
-    pins[setting.name.text] = net.text;
+    pins[setting.name.text] = net;
   }
 
   private isNew(name: Word, seen: Set<string>): boolean {

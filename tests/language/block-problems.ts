@@ -51,7 +51,7 @@ export const BLOCK_PROBLEMS: readonly Problem[] = [
   { code: "NAM5", text: inBlock("Q : «rezistor» { left = a, right = ground }") },
   { code: "NAM6", text: within(`${stage}\nX : stage { in = in, out = ground, «RR» = 1 kΩ }`), says: "knob" },
   { code: "NAM7", text: within(`${stage}\nX : stage { in = in, out = ground }\nshow X.«y».v`), says: "`y`" },
-  { code: "NAM7", text: within(`${stage}\nX : stage { in = in, out = ground }\nshow «X.in.i»`) },
+  { code: "NAM7", text: within(`${stage}\nX : stage { in = in, out = ground }\nshow «X.in.p»`) },
   { code: "NAM8", text: within(`${stage}\nX : stage { in = in, out = ground, «out» = in }`) },
   { code: "NAM9", text: inBlock("let «k» = k + 1 V") },
   {
