@@ -1,5 +1,3 @@
-import { ROOM_TEMPERATURE } from "@/lib/units/constants";
-
 /**
  * Operational amplifier, vout = A·(v_plus + offset − v_minus) − R_out·i_out with bias currents into the inputs. The law is kept
  * divided by A, v_plus − v_minus + offset − (vout + R_out·i_out)/A = 0, so that the ideal amplifier, a nullor (Carlin, Proc. IEEE
@@ -16,9 +14,9 @@ export function opampMismatch(
   return difference + offset - behind * inverseGain;
 }
 
-/** The offset in V at `kelvin` K: `volts` at 25 °C and `drift` V/K from there, null for none. */
-export function offsetAt(volts: number, drift: number | null, kelvin: number): number {
-  return drift === null ? volts : volts + drift * (kelvin - ROOM_TEMPERATURE);
+/** The offset in V at `kelvin` K: `volts` at `T0` K and `drift` V/K from there, null for none. */
+export function offsetAt(volts: number, drift: number | null, T0: number, kelvin: number): number {
+  return drift === null ? volts : volts + drift * (kelvin - T0);
 }
 
 /** The bias current into the plus input (`side` 1) or the minus input (−1), A: half of `difference` is plus's share more. */

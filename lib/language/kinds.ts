@@ -239,14 +239,15 @@ export const KINDS: Readonly<Record<ElementKind, DeviceKind>> = {
         dimension: VOLT,
         unit: "V",
         absent: "0 V",
-        about: "input offset voltage at 25 °C, added to plus",
+        about: "input offset voltage at T0, added to plus",
       },
       offset_drift: {
         dimension: divide(VOLT, KELVIN),
         unit: "V/K",
         absent: "0 V/K",
-        about: "change of the offset with temperature from 25 °C",
+        about: "change of the offset with temperature from T0",
       },
+      T0: junctionTemperature.T0!,
       bias: { dimension: AMPERE, unit: "A", absent: "0 A", about: "mean current into the two inputs" },
       bias_offset: {
         dimension: AMPERE,

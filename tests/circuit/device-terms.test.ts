@@ -130,6 +130,17 @@ show plus = A1.plus.i, minus = A1.minus.i, out = o.v`) as { plus: number[]; minu
     expect(out[1]! - out[0]!).toBeCloseTo(1e-4, 12);
   });
 
+  test("the offset holds at the T0 of its model, and drifts from there", () => {
+    const { out } = solved(`model amp : opamp { gain = 1e9, offset = 1 mV, offset_drift = 2 µV/K, T0 = 45 °C }
+A1 : amp { plus = p, minus = o, out = o }
+p -- R1 : resistor 1 MΩ -- ground
+sweep temperature over 45 °C, 25 °C
+show out = o.v`) as { out: number[] };
+    // 1 mV at 45 °C, 2 µV/K · 20 K less at 25 °C, by hand; the gain leaves 1e-9 of it.
+    expect(out[0]!).toBeCloseTo(1e-3, 10);
+    expect(out[1]! - out[0]!).toBeCloseTo(-4e-5, 12);
+  });
+
   test("an output never passes its limits, and reaches them from either side", () => {
     const { "o.v": volts } = solved(`knob V = 0 V
 model amp : opamp { gain = 1e6, out_low = -3 V, out_high = 8 V }

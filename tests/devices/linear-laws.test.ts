@@ -28,11 +28,11 @@ test("an amplifier of gain A holds vout = A·(difference + offset); an ideal one
   expect(opampMismatch(-1e-4, 1e-4, 7, 0)).toBe(0);
 });
 
-test("an offset drifts from 25 °C, and without drift not at all", () => {
-  expect(offsetAt(1e-3, null, 400)).toBe(1e-3);
-  expect(offsetAt(1e-3, 5e-6, 298.15)).toBe(1e-3);
+test("an offset drifts from its temperature, and without drift not at all", () => {
+  expect(offsetAt(1e-3, null, 298.15, 400)).toBe(1e-3);
+  expect(offsetAt(1e-3, 5e-6, 310, 310)).toBe(1e-3);
   // 1 mV + 5 µV/K · 40 K = 1.2 mV, by hand.
-  expect(offsetAt(1e-3, 5e-6, 338.15)).toBeCloseTo(1.2e-3, 15);
+  expect(offsetAt(1e-3, 5e-6, 298.15, 338.15)).toBeCloseTo(1.2e-3, 15);
 });
 
 test("bias currents differ by their difference and have their mean", () => {

@@ -1,5 +1,6 @@
 import { biasInto, offsetAt, opampMismatch } from "@/lib/devices/opamp";
 import type { Element, Model } from "@/lib/language/ast";
+import { ROOM_TEMPERATURE } from "@/lib/units/constants";
 import type { AssemblyCode } from "../assembly-code";
 import { type Bench, figureOf, moversOf, netAt, type Part, type Proof } from "../part";
 import { across, flow, type State } from "../state";
@@ -87,7 +88,8 @@ export class OpampPart implements Part {
     const bias = figure("bias") ?? 0;
     const difference = figure("bias_offset") ?? 0;
     this.inverseGain = gain === null ? 0 : 1 / gain;
-    this.offset = offsetAt(figure("offset") ?? 0, figure("offset_drift"), values.kelvin);
+    const T0 = figure("T0") ?? ROOM_TEMPERATURE;
+    this.offset = offsetAt(figure("offset") ?? 0, figure("offset_drift"), T0, values.kelvin);
     this.ohms = figure("R_out") ?? 0;
     this.intoPlus = biasInto(1, bias, difference);
     this.intoMinus = biasInto(-1, bias, difference);
