@@ -1,5 +1,6 @@
 import type { Axis } from "./axes";
 import { acrossField, downField } from "./line-path";
+import { placeOf } from "./scale";
 import type { StoreyView } from "./storey-views";
 
 /** What a storey shows, in its corner, and what each shaded part of it is allowed by. */
@@ -12,7 +13,7 @@ export function StoreyNames({
   readonly horizontal: Axis;
   readonly width: number;
 }) {
-  const { axis, traces, isReading, allowed, height } = storey;
+  const { axis, traces, isReading, allowed, folds, height } = storey;
   const field = { horizontal: horizontal.range, vertical: axis.range, left: 0, top: 0, width, height };
   return (
     <div aria-hidden="true">
@@ -23,6 +24,26 @@ export function StoreyNames({
         </span>
         {isReading && <span className="ml-2 text-quiet">read at each point</span>}
       </p>
+      {folds.map(({ across, value, label }) => {
+        const left = acrossField(field, across);
+        const place = placeOf(axis.mapping, value);
+        const down = place === null ? null : downField(field, place);
+        if (down === null || left < 0 || left > width || down < 0 || down > height) return null;
+        return (
+          <span key={`${across} ${value}`} data-fold={label}>
+            <span
+              className="absolute size-2 -translate-x-1/2 -translate-y-1/2 rotate-45 border-2 border-ink bg-paper"
+              style={{ left, top: down }}
+            />
+            <span
+              className="figures absolute whitespace-nowrap bg-paper/80 px-1 text-xs leading-none"
+              style={{ left: left + 8, top: down < 24 ? down + 8 : down - 18 }}
+            >
+              fold {label}
+            </span>
+          </span>
+        );
+      })}
       {allowed.map((shade, i) => {
         const left = Math.max(0, acrossField(field, shade.from));
         const right = Math.min(width, acrossField(field, shade.to));

@@ -28,6 +28,7 @@ const FAINT = 0.25;
 /** Px. */
 const STROKE = { nominal: 1.75, worst: 1.25 };
 const WORST_DASH = [1.5, 2.5] as const;
+const UNSTABLE_DASH = [5, 4] as const;
 
 /** One storey: its lines on a canvas, every word over it as text. The table beside the plot says the same in numbers. */
 export const StoreyPlot = memo(function StoreyPlot(props: Props) {
@@ -77,11 +78,16 @@ interface Frame {
 }
 
 function drawingOf(storey: StoreyView, { horizontal, x, width, colours, followed }: Frame): StoreyDrawing {
-  const { axis, height, lines, worst, bands, allowed } = storey;
+  const { axis, height, lines, worst, bands, branches, allowed } = storey;
   const { mapping } = axis;
   const alpha = (family: number) => (followed === null || followed === family ? 1 : FAINT);
   return {
     lines: [
+      ...branches.map(({ x: own, values, isStable, style, family }) => ({
+        ...{ x: own, values, mapping, absent: null, alpha: alpha(family), marked: false },
+        stroke: isStable ? STROKE.nominal : STROKE.worst,
+        style: { ...style, dash: isStable ? [] : UNSTABLE_DASH },
+      })),
       ...worst.map(({ values, absent, style, family }) => ({
         ...{ x, values, mapping, absent, alpha: alpha(family), marked: false, stroke: STROKE.worst },
         style: { ...style, dash: WORST_DASH },

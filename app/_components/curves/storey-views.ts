@@ -1,9 +1,10 @@
 import type { AllowedBand } from "@/lib/analyses/allowed-bands";
 import { type Axis, labelsOf, placesOf, type Ruler } from "./axes";
+import { branchLines } from "./branch-lines";
 import { atLeast } from "./columns";
 import { type CurveSet, columnOf, outerIndices } from "./curve-set";
 import { type CurveView, drawnChoice } from "./curve-view";
-import { shownValue } from "./figures-in-words";
+import { formatKnob, shownValue } from "./figures-in-words";
 import type { LineStyle } from "./line-style";
 import { placesOfValues, valuesBetween, verticalRange } from "./range";
 import { fitOf, LINEAR, type Mapping, placeOf } from "./scale";
@@ -41,9 +42,27 @@ export interface BandView extends Band {
   readonly style: LineStyle;
 }
 
+/** A piece of a branch of operating points over its own places. */
+export interface BranchView {
+  readonly x: Float64Array;
+  readonly values: Float64Array;
+  readonly isStable: boolean;
+  readonly family: number;
+  readonly style: LineStyle;
+}
+
+/** Where branches turn back, in places, and the value of the knob there in words. */
+export interface FoldView {
+  readonly across: number;
+  readonly value: number;
+  readonly label: string;
+}
+
 export interface StoreyView extends Storey {
   readonly axis: Axis;
   readonly height: number;
+  readonly branches: readonly BranchView[];
+  readonly folds: readonly FoldView[];
   readonly bands: readonly BandView[];
   readonly worst: readonly Line[];
   readonly allowed: readonly Shade[];
@@ -72,12 +91,15 @@ export function storeyViews(
     const { lines } = storey;
     const bands = view.band === false ? [] : bandsOf(lines, beside);
     const worst = worstOf(set, lines, beside.worst);
+    const { branches, folds } = branchViews(set, lines, horizontal.mapping);
     const columns = [...lines, ...worst].map(({ values }) => values);
-    const all = valuesBetween(columns);
+    const beyond = valuesBetween(branches.map(({ values }) => values));
+    const all = widest(valuesBetween(columns), beyond);
     const fit = all === null ? fitOf(1, 0) : fitOf(all.low, all.high);
     const scale = view.y[storey.key] ?? usualScale(set, fit);
     const mapping: Mapping = scale === "logarithmic" && fit.fits ? { scale, sign: fit.sign } : LINEAR;
-    const seen = valuesBetween([...columns, ...bands.flatMap(({ low, high }) => [low, high])], from, to);
+    const edges = bands.flatMap(({ low, high }) => [low, high]);
+    const seen = widest(valuesBetween([...columns, ...edges], from, to), beyond);
     const own = beside.allowed.filter((band) => isShown(set, storey, band));
     const found =
       placesOfValues(withLimits(seen, own), mapping) ??
@@ -88,7 +110,7 @@ export function storeyViews(
     const ticks = found === null ? [] : ticksOf(range.from, range.to, mapping, Math.floor(height / 40));
     const axis = { mapping, range, ticks, labels: labelsOf(ticks, mapping, storey.unit, false), fit };
     const allowed = own.map((band) => shadeOf(set, band, horizontal.mapping, mapping));
-    return { ...storey, axis, height, bands, worst, allowed };
+    return { ...storey, axis, height, bands, worst, allowed, branches, folds };
   });
 }
 
@@ -109,6 +131,34 @@ function worstOf(set: CurveSet, lines: readonly Line[], draw: number | null): Li
   });
 }
 
+function branchViews(
+  set: CurveSet,
+  lines: readonly Line[],
+  across: Mapping,
+): Pick<StoreyView, "branches" | "folds"> {
+  const place = (value: number) => placeOf(across, shownValue(set.axis, value)) ?? Number.NaN;
+  const found = lines.map(({ trace, family, style }) => ({
+    family,
+    style,
+    ...(branchLines(set, trace, family) ?? { pieces: [], folds: [] }),
+  }));
+  return {
+    branches: found.flatMap(({ pieces, family, style }) =>
+      pieces.map((piece) => ({ ...piece, x: piece.x.map(place), family, style })),
+    ),
+    folds: found.flatMap(({ folds }) =>
+      folds.map(({ x, value }) => ({ across: place(x), value, label: formatKnob(set.axis, x, 4) })),
+    ),
+  };
+}
+
+type Span = { readonly low: number; readonly high: number } | null;
+
+function widest(a: Span, b: Span): Span {
+  if (a === null || b === null) return a ?? b;
+  return { low: Math.min(a.low, b.low), high: Math.max(a.high, b.high) };
+}
+
 /** Whether a band belongs to a trace of the storey and to one of the settings drawn in it. */
 function isShown(set: CurveSet, { lines }: Storey, { trace, at }: AllowedBand): boolean {
   return lines.some((line) => {
@@ -123,10 +173,7 @@ function isShown(set: CurveSet, { lines }: Storey, { trace, at }: AllowedBand): 
   });
 }
 
-function withLimits(
-  seen: { readonly low: number; readonly high: number } | null,
-  allowed: readonly AllowedBand[],
-): { readonly low: number; readonly high: number } | null {
+function withLimits(seen: Span, allowed: readonly AllowedBand[]): Span {
   if (seen === null) return null;
   let { low, high } = seen;
   const most = REACH * (seen.high - seen.low);

@@ -140,6 +140,8 @@ function bySize(set: CurveSet, traces: readonly CurveColumn[]): Group[] {
 function lineStyle(set: CurveSet, crowded: boolean, trace: number, family: number): LineStyle {
   const { length } = set.families;
   const own = set.source.styles?.[family];
+  // Dashes tell which branches are not stable.
+  if (set.source.branches !== undefined) return styleOf(crowded ? trace : family, 0);
   if (own !== undefined) return styleOf(crowded ? trace : own.colour, own.dash);
   if (length === 1) return styleInTurn(trace);
   if (length > FEW_STYLES) return styleInOrder(family, length, crowded ? trace : 0);

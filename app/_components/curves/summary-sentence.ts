@@ -20,7 +20,22 @@ export function summarise(set: CurveSet, storeys: readonly Storey[], account: Ac
   );
   if (set.source.traces.length === 0) return `No trace was kept. ${pointsInWords(set, account)}`;
   if (traces.length === 0) return `No trace is chosen. ${pointsInWords(set, account)}`;
-  return `Over ${over}${settings}: ${traces.join("; ")}. ${pointsInWords(set, account)}`;
+  return `Over ${over}${settings}: ${traces.join("; ")}. ${pointsInWords(set, account)}${branchesInWords(set)}`;
+}
+
+/** How many operating points were looked for and where branches of them turn back; at most four folds are spelt out. */
+function branchesInWords({ axis, source: { branches = [] } }: CurveSet): string {
+  if (branches.length === 0) return "";
+  const most = Math.max(...branches.map((row) => row.branches.length));
+  const folds = [
+    ...new Set(branches.flatMap((row) => row.folds.map(({ value }) => formatKnob(axis, value, 4)))),
+  ];
+  const where =
+    folds.slice(0, 4).join(", ") + (folds.length > 4 ? ` and ${folds.length - 4} more places` : "");
+  const turns = folds.length === 0 ? "none turns back" : `they turn back at ${axis.knob} ${where}`;
+  return most < 2
+    ? " There is one branch of operating points."
+    : ` There are ${most} branches of operating points; ${turns}.`;
 }
 
 function settingsDrawn(set: CurveSet, storeys: readonly Storey[]): string {
