@@ -15,7 +15,7 @@ import type { Netlist } from "@/lib/language/syntax";
 import type { Answer, Question, Questions, Told } from "./questions";
 
 /** Meanings of names whose value a solved point knows. */
-const SOLVED: ReadonlySet<string> = new Set(["net", "port", "element", "knob", "let"]);
+const SOLVED: ReadonlySet<string> = new Set(["net", "port", "element", "model", "knob", "let"]);
 
 /**
  * Answers questions about texts. Most questions are about the same text as the one before, so what was read of it is kept; each

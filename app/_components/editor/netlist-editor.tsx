@@ -139,13 +139,7 @@ export function NetlistEditor({
 
   return (
     <div className="flex h-full min-h-0 flex-col">
-      <TextBar
-        told={told}
-        value={told === null ? null : (told.paths.map(valueAtCursor).find((value) => value !== null) ?? null)}
-        readOnly={readOnly}
-        state={state}
-        onRun={run}
-      />
+      <TextBar told={told} readOnly={readOnly} state={state} onRun={run} />
       <div className="relative min-h-0 grow bg-surface">
         <div ref={place} className="sheet-editor absolute inset-0" hidden={state === "missing"} />
         {state === "coming" && <PlainLines text={initial} label={`${LABEL}, the editor is loading`} />}

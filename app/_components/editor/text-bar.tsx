@@ -32,7 +32,6 @@ const WRITING: readonly Entry[] = [
 interface Props {
   /** What the cursor stands on. */
   readonly told: Told | null;
-  readonly value: string | null;
   readonly readOnly: boolean;
   /** A plain box has the outline alone. */
   readonly state: "coming" | "here" | "missing";
@@ -40,7 +39,7 @@ interface Props {
 }
 
 /** Over the text: what the cursor stands on, the outline, and everything that keys do in the text, for those without them. */
-export function TextBar({ told, value, readOnly, state, onRun }: Props) {
+export function TextBar({ told, readOnly, state, onRun }: Props) {
   const pending = useRef<BarCommand | null>(null);
   const item = (entry: Entry) => (
     <BarItem
@@ -55,7 +54,6 @@ export function TextBar({ told, value, readOnly, state, onRun }: Props) {
     <div className="flex min-h-9 shrink-0 items-center gap-1 border-b bg-paper pr-2 pl-4 md:pl-6">
       <p className="figures min-w-0 grow truncate text-quiet text-xs">
         {told !== null && <MessageText message={told.lines[0] ?? ""} />}
-        {value !== null && <span className="ml-3 text-accent">{value}</span>}
       </p>
       <button
         type="button"

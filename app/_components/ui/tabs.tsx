@@ -28,7 +28,7 @@ export function Tabs({
           <Radix.Trigger
             key={tab.value}
             value={tab.value}
-            className="-mb-px min-h-9 whitespace-nowrap border-transparent border-b-2 text-quiet text-sm hover:text-ink data-[state=active]:border-accent data-[state=active]:font-semibold data-[state=active]:text-ink"
+            className="-mb-px min-h-9 whitespace-nowrap border-transparent border-b-2 text-quiet text-sm hover:text-ink data-[state=active]:border-accent data-[state=active]:font-semibold data-[state=active]:text-ink focus-visible:-outline-offset-2"
           >
             {tab.label}
           </Radix.Trigger>

@@ -15,6 +15,7 @@ import type { RunLines } from "./run-line";
 import type { Saved } from "./saved";
 import { SheetHeader } from "./sheet-header";
 import { SheetRemarks } from "./sheet-remarks";
+import { type CursorAt, SheetSide } from "./sheet-side";
 import { StatusLine } from "./status-line";
 import { useSheet } from "./use-sheet";
 
@@ -35,6 +36,7 @@ export function Sheet({ workspace, netlist, latest, runs, writer, role, mayQueue
   const { editor, examined, text } = sheet;
   const previewing = usePreviewing(latest.text);
   const [tab, setTab] = useState<TabDoes>("indents");
+  const [cursor, setCursor] = useState<CursorAt | null>(null);
   const problems = examined?.diagnostics ?? [];
 
   useEffect(() => {
@@ -77,6 +79,8 @@ export function Sheet({ workspace, netlist, latest, runs, writer, role, mayQueue
               onQueue={() => void sheet.queue()}
               onSave={() => mayQueue && sheet.openSave(true)}
               onTab={setTab}
+              onCursor={(offset, names) => setCursor({ offset, names })}
+              valueAtCursor={previewing.valueAt}
             />
           </div>
           {examined !== null && problems.length > 0 && (
@@ -89,10 +93,19 @@ export function Sheet({ workspace, netlist, latest, runs, writer, role, mayQueue
             />
           )}
         </div>
-        <div className="grid min-w-0 content-start gap-8 px-4 py-4 md:px-6 lg:h-0 lg:min-h-full lg:overflow-y-auto">
-          <PreviewPane previewing={previewing} onWrite={mayQueue ? write : undefined} />
-          <PlanView examined={examined} />
-          <LastRuns workspace={workspace} netlistId={netlist.id} title={latest.title} first={runs} />
+        <div className="min-w-0 px-4 py-2 md:px-6 lg:h-0 lg:min-h-full lg:overflow-y-auto">
+          <SheetSide
+            text={text}
+            cursor={cursor}
+            editor={editor}
+            preview={
+              <div className="grid min-w-0 content-start gap-8">
+                <PreviewPane previewing={previewing} onWrite={mayQueue ? write : undefined} />
+                <PlanView examined={examined} />
+                <LastRuns workspace={workspace} netlistId={netlist.id} title={latest.title} first={runs} />
+              </div>
+            }
+          />
         </div>
       </div>
       <StatusLine

@@ -1,0 +1,169 @@
+import { classNames } from "@/app/_components/ui/class-names";
+import type { Chip, Frame, Rail, Wire } from "./layout";
+import { FRAME_HEAD, OPENER, saidOf } from "./measures";
+
+/** Letters that lines may run behind. */
+const HALO = "stroke-surface [paint-order:stroke] [stroke-linejoin:round] [stroke-width:4px]";
+
+const OWN = (name: string) => name.slice(name.lastIndexOf(".") + 1);
+
+/** A box: its name, what it is, and the names of its pins at its edges. A block that can be opened has a second border. */
+export function ChipShape({
+  chip: { box, x, y, width, height, leftPins, rightPins },
+  isChosen,
+}: {
+  readonly chip: Chip;
+  readonly isChosen: boolean;
+}) {
+  const middle = x + leftPins + (width - leftPins - rightPins - (box.inside === null ? 0 : OPENER)) / 2;
+  return (
+    <g>
+      <rect
+        x={x}
+        y={y}
+        width={width}
+        height={height}
+        rx={2}
+        className={isChosen ? "fill-wash stroke-accent" : "fill-surface stroke-edge"}
+        strokeWidth={isChosen ? 2.5 : 1}
+      />
+      {box.inside !== null && (
+        <rect
+          x={x + 3}
+          y={y + 3}
+          width={width - 6}
+          height={height - 6}
+          rx={1}
+          className="fill-none stroke-rule"
+        />
+      )}
+      <text
+        x={middle}
+        y={y + height / 2 - 3}
+        textAnchor="middle"
+        className="fill-ink font-semibold text-[13px]"
+      >
+        {OWN(box.name)}
+      </text>
+      <text x={middle} y={y + height / 2 + 12} textAnchor="middle" className="fill-quiet text-[11.5px]">
+        {saidOf(box)}
+      </text>
+    </g>
+  );
+}
+
+/** A pin's line to its rail, with a dot where it is joined; a thick upright piece of the ground rail, or a ring where it is open. */
+export function WireShape({
+  wire: { pin, side, net, x, to, y },
+  isNamed,
+  isChosen,
+}: {
+  readonly wire: Wire;
+  readonly isNamed: boolean;
+  readonly isChosen: boolean;
+}) {
+  const inset = side === "left" ? x + 6 : x - 6;
+  const line = isChosen ? "stroke-accent" : "stroke-ink";
+  const fill = isChosen ? "fill-accent" : "fill-ink";
+  return (
+    <g>
+      <line x1={x} y1={y} x2={to} y2={y} className={line} strokeWidth={isChosen ? 2.25 : 1.1} />
+      {net === "ground" && <rect x={to - 2} y={y - 7} width={4} height={14} className={fill} />}
+      {net === null && (
+        <circle cx={to} cy={y} r={4} className="fill-surface stroke-broken" strokeWidth={1.5} />
+      )}
+      {net !== null && net !== "ground" && <circle cx={to} cy={y} r={isChosen ? 4 : 3} className={fill} />}
+      {isNamed && (
+        <text
+          x={inset}
+          y={y + 3.5}
+          textAnchor={side === "left" ? "start" : "end"}
+          className="fill-quiet text-[11.5px]"
+        >
+          {pin}
+        </text>
+      )}
+    </g>
+  );
+}
+
+/** The line of a net, under its name. */
+export function RailShape({
+  rail: { net, x, top, bottom },
+  isChosen,
+}: {
+  readonly rail: Rail;
+  readonly isChosen: boolean;
+}) {
+  return (
+    <g>
+      <line
+        x1={x}
+        y1={top}
+        x2={x}
+        y2={bottom}
+        className={isChosen ? "stroke-accent" : "stroke-ink"}
+        strokeWidth={isChosen ? 3 : 1.6}
+      />
+      <text
+        x={x}
+        y={top - 7}
+        textAnchor="middle"
+        className={classNames("text-[12px]", HALO, isChosen ? "fill-accent font-semibold" : "fill-ink")}
+      >
+        {OWN(net)}
+      </text>
+    </g>
+  );
+}
+
+/** The border round what stands inside an open block, with its name. */
+export function FrameShape({
+  frame: { box, x, y, width, height },
+  isChosen,
+}: {
+  readonly frame: Frame;
+  readonly isChosen: boolean;
+}) {
+  return (
+    <g>
+      <rect
+        x={x}
+        y={y}
+        width={width}
+        height={height}
+        rx={2}
+        className={classNames("fill-none", isChosen ? "stroke-accent" : "stroke-edge")}
+        strokeWidth={isChosen ? 2 : 1}
+        strokeDasharray="5 3"
+      />
+      <text x={x + 24} y={y + FRAME_HEAD / 2 + 4} className={classNames("fill-ink text-[12px]", HALO)}>
+        <tspan className="font-semibold">{OWN(box.name)}</tspan>
+        <tspan className="fill-quiet"> {box.of}</tspan>
+      </text>
+    </g>
+  );
+}
+
+/** What is pressed to open or close a block: a plus or a minus in a square. */
+export function OpenerShape({
+  x,
+  y,
+  isOpen,
+}: {
+  readonly x: number;
+  readonly y: number;
+  readonly isOpen: boolean;
+}) {
+  return (
+    <g>
+      <rect x={x - 12} y={y - 12} width={24} height={24} className="fill-transparent" />
+      <rect x={x - 7} y={y - 7} width={14} height={14} rx={2} className="fill-surface stroke-edge" />
+      <path
+        d={`M ${x - 4} ${y} H ${x + 4}${isOpen ? "" : ` M ${x} ${y - 4} V ${y + 4}`}`}
+        className="stroke-ink"
+        strokeWidth={1.5}
+      />
+    </g>
+  );
+}
