@@ -1,7 +1,7 @@
 import type { Proof } from "@/lib/circuit/part";
 import type { System } from "@/lib/circuit/system";
-import { UNIT } from "@/lib/devices/rounding";
 import { DenseFactors } from "./dense";
+import { Doubts } from "./doubts";
 import { Inverse } from "./inverse";
 import type { LinearSolver } from "./linear";
 import { TriangularBounds } from "./triangular";
@@ -57,10 +57,8 @@ export class Certificate {
   /** The weights are those of this point or of a neighbour. */
   private isWeighed = false;
   private readonly isVoltage: readonly boolean[];
-  /** Roundings in the sum of each row. */
-  private readonly roundings: Float64Array;
   private readonly weights: Float64Array;
-  private readonly doubt: Float64Array;
+  private readonly doubts: Doubts;
   private readonly spread: Float64Array;
   constructor(
     private readonly system: System,
@@ -76,12 +74,8 @@ export class Certificate {
     this.bounds = this.triangular;
     this.step = new Float64Array(size);
     this.isVoltage = circuit.unknowns.map(({ unit }) => unit === "V");
-    this.roundings = new Float64Array(size + 1).fill(16);
-    for (const { element } of parts) {
-      for (const net of Object.values(element.pins)) this.roundings[circuit.nets.get(net)!]! += 2;
-    }
     this.weights = new Float64Array(size + 1);
-    this.doubt = new Float64Array(size + 1);
+    this.doubts = new Doubts(system, this.parts);
     this.spread = new Float64Array(size + 1);
     this.reset();
   }
@@ -98,10 +92,10 @@ export class Certificate {
    */
   prove(): number {
     if (!this.canProve) return Number.NaN;
-    this.gatherDoubt(1);
+    this.doubts.gather(1);
     const sparse = this.judged(this.searchSparsely());
     if (sparse <= CONTENT || this.isVoltage.length > (sparse > 0 ? MOST_DENSE : MOST_RESCUED)) return sparse;
-    this.gatherDoubt(1);
+    this.doubts.gather(1);
     this.bounds = this.inverse;
     const dense = this.judged(this.searchByInverse());
     return dense >= sparse || Number.isNaN(dense) ? sparse : dense;
@@ -149,20 +143,9 @@ export class Certificate {
     for (let i = 1; i < this.isVoltage.length; i++)
       if (this.isVoltage[i] && error[i]! > error[worst]!) worst = i;
     const whole = error[worst]!;
-    this.gatherDoubt(0);
-    this.bounds.carry(this.doubt);
+    this.doubts.gather(0);
+    this.bounds.carry(this.doubts.values);
     return EXPLAINED * error[worst]! >= whole;
-  }
-
-  /** |F|·`residualShare` + δF: what is left over, the roundings of the sums, and those within the laws. */
-  private gatherDoubt(residualShare: 0 | 1): void {
-    const { doubt, roundings, parts } = this;
-    const { state } = this.system;
-    const { residual, scale } = state;
-    for (let i = 0; i < doubt.length; i++) {
-      doubt[i] = Math.abs(residual[i]!) * residualShare + roundings[i]! * UNIT * scale[i]!;
-    }
-    for (let k = 0; k < parts.length; k++) parts[k]!.addDoubt(state, doubt);
   }
 
   /** Once more with pivots chosen row by row, where sparse ones make a poor inverse. */
@@ -194,7 +177,7 @@ export class Certificate {
   private weigh(): void {
     const { weights, isVoltage, bounds } = this;
     const { pattern, state } = this.system;
-    bounds.carry(this.doubt);
+    bounds.carry(this.doubts.values);
     const { error } = bounds;
     const largest = error.reduce((most, one, i) => (isVoltage[i] && one > most ? one : most), 0);
     const scale = largest > LEAST_RADIUS && largest < Number.POSITIVE_INFINITY ? 1 / largest : 1;
@@ -251,7 +234,7 @@ export class Certificate {
       part.addSpread(state, ball, widths.values, at, spread);
       at += part.gaps.length;
     }
-    bounds.bound(state.jacobian, weights, this.roundings, this.doubt, spread);
+    bounds.bound(state.jacobian, weights, this.doubts.roundings, this.doubts.values, spread);
     const { left, error, change } = bounds;
     let radius = LEAST_RADIUS;
     let fits = true;
