@@ -102,8 +102,8 @@ describe("a requirement in words", () => {
   test("a worst value has as many digits as tell how far it is from its limit", () => {
     const at = (worst: number, margin: number) =>
       plain(worstInWords({ ...BEND, margin, value: { ...BEND.value, worst } }));
-    expect(at(0.00050003, -3e-8)).toBe("500.030 µV");
-    expect(at(1.1805, 0.0074)).toBe("1.181 V");
+    expect(at(0.00050003, -3e-8)).toBe("500.0300 µV");
+    expect(at(1.1805, 0.0074)).toBe("1.1805 V");
     expect(at(0.0005, 0)).toBe("500 µV");
     expect(at(0, 1)).toBe("0 V");
   });

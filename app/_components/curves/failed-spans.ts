@@ -25,9 +25,14 @@ export function accountOf(set: CurveSet, families: readonly number[]): Account {
   const spans: FailedSpan[] = [];
   let solved = 0;
   let failed = 0;
+  let absent = 0;
   for (let place = 0; place < set.x.length; place++) {
     let here = false;
     for (const family of families) {
+      if (set.source.absent?.[family]?.[set.order[place]!] === 1) {
+        absent++;
+        continue;
+      }
       const kind = outcome[pointAt(set, family, place)] ?? null;
       if (kind === "converged") solved++;
       else if (kind !== null) {
@@ -42,7 +47,7 @@ export function accountOf(set: CurveSet, families: readonly number[]): Account {
       spans[spans.length - 1] = { ...before, last: place };
     else spans.push({ first: place, last: place });
   }
-  const points = set.x.length * families.length;
+  const points = set.x.length * families.length - absent;
   return { points, solved, failed, waiting: points - solved - failed, spans, outcomes: [...outcomes] };
 }
 

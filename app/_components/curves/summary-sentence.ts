@@ -14,7 +14,7 @@ export function summarise(set: CurveSet, storeys: readonly Storey[], account: Ac
   const last = set.x.at(-1);
   if (first === undefined || last === undefined) return "The sweep has no points.";
   const over = `${set.axis.knob} from ${formatKnob(set.axis, first)} to ${formatKnob(set.axis, last)}`;
-  const settings = set.families.length > 1 ? `, at ${settingsDrawn(set, storeys)}` : "";
+  const settings = set.families.length > 1 ? `, ${settingsDrawn(set, storeys)}` : "";
   const traces = storeys.flatMap(({ traces, lines }) =>
     traces.map((name) => course(lines.filter((line) => line.trace === name))),
   );
@@ -41,8 +41,11 @@ function branchesInWords({ axis, source: { branches = [] } }: CurveSet): string 
 function settingsDrawn(set: CurveSet, storeys: readonly Storey[]): string {
   const drawn = new Set(storeys.flatMap(({ lines }) => lines.map(({ family }) => family))).size;
   const knobs = set.outer.map(({ knob }) => knob).join(" and ");
-  const all = counted(set.families.length, "setting");
-  return `${drawn === set.families.length ? all : `${formatCount(drawn)} of ${all}`} of ${knobs}`;
+  const isNamed = set.outer.some(({ names }) => names !== undefined);
+  if (isNamed && drawn === set.families.length) return counted(drawn, "curve");
+  const all = counted(set.families.length, isNamed ? "curve" : "setting");
+  if (isNamed) return `${formatCount(drawn)} of ${all}`;
+  return `at ${drawn === set.families.length ? all : `${formatCount(drawn)} of ${all}`} of ${knobs}`;
 }
 
 /** "out rises from −0.66 V to −0.60 V", or its lowest and highest value where the lines do not all go one way. */

@@ -20,7 +20,7 @@ export function worstInWords({ value: { worst }, margin, unit }: RequirementDocu
   if (worst === null) return "no value";
   if (worst === 0 || margin === null || margin === 0) return formatQuantity(worst, unit, DIGITS);
   const beyond = Math.ceil(Math.log10(Math.abs(worst) / Math.abs(margin)));
-  return formatQuantity(worst, unit, Math.min(9, Math.max(DIGITS, beyond + 1)));
+  return formatQuantity(worst, unit, Math.min(9, Math.max(DIGITS, beyond + 2)));
 }
 
 /** "temperature 40 °C, draw 211"; empty where it is the same everywhere. */

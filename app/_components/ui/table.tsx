@@ -6,15 +6,16 @@ export function Table({ className, ...rest }: ComponentProps<"table">) {
   return <table {...rest} className={classNames("w-full border-collapse text-left text-sm", className)} />;
 }
 
-/** Lets a wide table scroll sideways by itself, by keyboard too; `label` names the region. */
+/** Lets a wide table scroll sideways by itself, by keyboard too; `label` names the region. Words for the ear alone scroll with it. */
 export function TableFrame({
   label,
   className,
   ...rest
 }: Omit<ComponentProps<"section">, "aria-label"> & { readonly label: string }) {
+  const held = classNames("relative overflow-x-auto", className);
   return (
     // biome-ignore lint/a11y/noNoninteractiveTabindex: a region that scrolls must be reachable from the keyboard
-    <section {...rest} aria-label={label} tabIndex={0} className={classNames("overflow-x-auto", className)} />
+    <section {...rest} aria-label={label} tabIndex={0} className={held} />
   );
 }
 

@@ -34,21 +34,23 @@ export function RequirementList({ requirements, links, onPlace }: Props) {
             <p className="sr-only">{marginSentence(one)}</p>
             <div
               aria-hidden="true"
-              className="grid grid-cols-[minmax(0,1fr)_auto] items-center gap-x-3 gap-y-1 @lg:grid-cols-[4.5rem_minmax(0,1fr)_minmax(4rem,7rem)_7rem]"
+              className="grid grid-cols-[minmax(0,1fr)_auto] items-center gap-x-3 gap-y-1 @md:grid-cols-[4.5rem_minmax(0,1fr)_minmax(4rem,7rem)_7rem]"
             >
-              <StateBadge state={one.verdict} />
-              <span className="order-first min-w-0 break-words font-semibold text-sm @lg:order-none">
+              <span className="justify-self-end @md:justify-self-start">
+                <StateBadge state={one.verdict} />
+              </span>
+              <span className="order-first min-w-0 break-words font-semibold text-sm @md:order-none">
                 {one.label}
               </span>
               <span className="min-w-0">
                 <MarginBar requirement={one} decorative />
               </span>
-              <span className="figures min-w-24 text-right leading-tight @lg:min-w-0">
+              <span className="figures min-w-24 text-right leading-tight @md:min-w-0">
                 {worstInWords(one)}
                 <span className="block text-quiet text-xs">{limitsInWords(one)}</span>
               </span>
             </div>
-            <p className="flex flex-wrap items-baseline gap-x-3 text-quiet text-xs @lg:pl-[5.25rem]">
+            <p className="flex flex-wrap items-baseline gap-x-3 text-quiet text-xs @md:pl-[5.25rem]">
               <Remainder one={one} />
               {one.worst !== null && placeInWords(one) !== "" && (
                 <Button
@@ -64,7 +66,7 @@ export function RequirementList({ requirements, links, onPlace }: Props) {
               <LineLink line={links.requirementLines[index]} links={links} label={one.label} />
             </p>
             {one.remark !== undefined && (
-              <p className="border-nodata border-l-2 pl-2 text-xs @lg:ml-[5.25rem]">{one.remark}</p>
+              <p className="border-nodata border-l-2 pl-2 text-xs @md:ml-[5.25rem]">{one.remark}</p>
             )}
           </li>
         ))}

@@ -7,6 +7,7 @@ import { type CurveSource, curveSet } from "@/app/_components/curves/curve-set";
 import { NumberTable } from "@/app/_components/curves/number-table";
 import { Notice } from "@/app/_components/ui/notice";
 import { Tabs } from "@/app/_components/ui/tabs";
+import { useAddress } from "@/app/_components/ui/use-address";
 import { allowedBands } from "@/lib/analyses/allowed-bands";
 import type { VoltageSpan } from "./cautions";
 import { OperatingPoint } from "./operating-point";
@@ -49,12 +50,7 @@ export function RunView(props: Props) {
     [],
   );
 
-  useEffect(() => {
-    const search = writePageState(state);
-    if (search !== window.location.search) {
-      window.history.replaceState(null, "", search || window.location.pathname);
-    }
-  }, [state]);
+  useAddress(writePageState(state));
 
   // What only the server knows of a finished run: its extremes at once, its judgement a moment later.
   const judged = first.judgement !== null || first.error !== null;

@@ -1,11 +1,12 @@
 "use client";
 
 import { useRouter } from "next/navigation";
-import { useEffect, useState } from "react";
+import { useState } from "react";
 import { counted } from "@/app/_components/ui/count";
 import { Notice } from "@/app/_components/ui/notice";
 import { PageHeader } from "@/app/_components/ui/page-header";
 import { EmptyState } from "@/app/_components/ui/states";
+import { useAddress } from "@/app/_components/ui/use-address";
 import { ChosenRuns } from "./chosen-runs";
 import { type ComparedRun, MOST } from "./compare-shapes";
 import { readCompareState, writeCompareState } from "./compare-state";
@@ -29,11 +30,7 @@ export function CompareView({ workspace, runs, lost, search }: Props) {
   const router = useRouter();
   const [state, setState] = useState(() => readCompareState(new URLSearchParams(search)));
   const ids = runs.map(({ run }) => run.id);
-  const address = writeCompareState(ids, state);
-  useEffect(() => {
-    if (address !== window.location.search)
-      window.history.replaceState(null, "", address || window.location.pathname);
-  }, [address]);
+  useAddress(writeCompareState(ids, state));
   const choose = (next: readonly string[]) => {
     // What was chosen of the curves before belongs to other settings now; how they are shown does not.
     const kept = { ...state, families: null, point: null, origin: null, only: null };

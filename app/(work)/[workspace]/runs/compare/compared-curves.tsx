@@ -149,7 +149,7 @@ function Figure({
       )}
       {apart.length > 0 && (
         <div className="max-w-prose text-sm" data-apart={apart.length}>
-          <h3 className="caption">What cannot be compared</h3>
+          <h3 className="caption">What to bear in mind</h3>
           <ul className="mt-1 list-disc pl-5 text-quiet">
             {[...new Set(apart)].map((words) => (
               <li key={words}>{words}</li>

@@ -4,7 +4,7 @@ import type { ReadingDocument } from "@/lib/analyses/result";
 import { formatQuantity } from "@/lib/units/quantity";
 import { settingsOf } from "../[id]/spread/subjects";
 import { type ComparedRun, nameOf } from "./compare-shapes";
-import { sideBySide } from "./side-by-side";
+import { type SideBySide, sideBySide } from "./side-by-side";
 
 /** The nominal readings of all runs at each setting, and how far they lie from those of the first run. */
 export function ComparedReadings({ runs }: { readonly runs: readonly ComparedRun[] }) {
@@ -23,7 +23,7 @@ export function ComparedReadings({ runs }: { readonly runs: readonly ComparedRun
             <tr>
               <HeadCell>Reading</HeadCell>
               {runs.map((one) => (
-                <HeadCell key={one.letter} figure>
+                <HeadCell key={one.letter} figure className="min-w-36">
                   {nameOf(one, runs)}
                 </HeadCell>
               ))}
@@ -32,9 +32,8 @@ export function ComparedReadings({ runs }: { readonly runs: readonly ComparedRun
           <tbody>
             {rows.map(({ label, each }) => {
               const [first] = each;
-              const known = each.flatMap((one) =>
-                one?.value == null || one.unit !== each.find(Boolean)!.unit ? [] : [one.value],
-              );
+              const { name, unit } = each.find((one) => one !== null)!;
+              const known = valuesOf(rows, name, unit);
               return (
                 <tr key={label}>
                   <Cell className="min-w-32">{label}</Cell>
@@ -54,8 +53,16 @@ export function ComparedReadings({ runs }: { readonly runs: readonly ComparedRun
   );
 }
 
+/** All values of one reading, at every setting and in every run. */
+function valuesOf(rows: readonly SideBySide<Read>[], name: string, unit: string): number[] {
+  return rows.flatMap(({ each }) =>
+    each.flatMap((one) => (one?.value == null || one.name !== name || one.unit !== unit ? [] : [one.value])),
+  );
+}
+
 interface Read {
   readonly label: string;
+  readonly name: string;
   readonly unit: string;
   readonly value: number | null;
 }
@@ -65,6 +72,7 @@ function labelled(readings: readonly ReadingDocument[], settings: readonly strin
     .filter(({ per }) => per === "sweep")
     .flatMap(({ name, unit, values }) =>
       settings.map((setting, row) => ({
+        name,
         label: setting === "" ? name : `${name}, ${setting}`,
         unit,
         value: values[row] ?? null,

@@ -11,7 +11,8 @@ import { sideBySide } from "./side-by-side";
 export function ComparedRequirements({ runs }: { readonly runs: readonly ComparedRun[] }) {
   const rows = sideBySide(runs.map(({ run }) => run.judgement?.requirements ?? []));
   if (rows.length === 0) return null;
-  const turned = rows.filter(({ each }) => new Set(each.map((one) => one?.verdict ?? "")).size > 1).length;
+  const verdicts = rows.map(({ each }) => each.flatMap((one) => one?.verdict ?? []));
+  const turned = verdicts.filter((found) => new Set(found).size > 1).length;
   return (
     <section aria-labelledby="requirements">
       <h2 id="requirements" className="caption">

@@ -31,12 +31,14 @@ export function subtracted(runs: readonly Labelled[], origin: string | null): Co
   const problems: string[] = [];
   const notes: string[] = [];
   for (const { one, from } of differences) {
-    const made = difference(from, one);
+    const common = commonWith(from, one);
+    const made = difference(common.from, one);
     if ("problem" in made) problems.push(made.problem);
     else {
       const { note, ...source } = made.source;
-      // "At values that both have" goes without saying; what was taken between values does not.
-      if (note?.includes("between its neighbours")) notes.push(note);
+      // "At values that both have" goes without saying; what was left out or taken between values does not.
+      if (common.note !== null) notes.push(common.note);
+      else if (note?.includes("between its neighbours")) notes.push(note);
       found.push({ label: one.label, source });
     }
   }
@@ -49,6 +51,46 @@ export function subtracted(runs: readonly Labelled[], origin: string | null): Co
 /** Settings of a run's outer knobs in words; one empty text where it has none. */
 export function settingsIn(source: CurveSource): string[] {
   return curveSet(source)?.families.map(({ label }) => label) ?? [];
+}
+
+/** Values in common that are enough for a difference without reading between points. */
+const ENOUGH = 2;
+
+/** A run at those values of the first knob that the other swept too, where there are enough of them: nothing is then made up. */
+function commonWith(from: Labelled, other: Labelled): { from: Labelled; note: string | null } {
+  const { knob, values } = from.source.axes[0]!;
+  const theirs = new Set(other.source.axes[0]!.values);
+  const places = values.flatMap((value, place) => (theirs.has(value) ? [place] : []));
+  if (places.length === values.length || places.length < ENOUGH) return { from, note: null };
+  const left = values.length - places.length;
+  return {
+    from: { label: from.label, source: atPlaces(from.source, places) },
+    note: `Run ${other.label} was solved at ${places.length} of the ${values.length} values of ${knob} of run ${from.label}; the other ${left} ${left === 1 ? "is" : "are"} left out.`,
+  };
+}
+
+/** Places of the first axis alone, at every setting of the outer ones. */
+function atPlaces(source: CurveSource, places: readonly number[]): CurveSource {
+  const [axis, ...outer] = source.axes;
+  const length = axis!.values.length;
+  const settings = settingsIn(source).length;
+  const points = Array.from({ length: settings }, (_, setting) =>
+    places.map((place) => setting * length + place),
+  ).flat();
+  const cut = ({ name, unit, values }: CurveTrace): CurveTrace => {
+    const column = columnFrom(values);
+    return { name, unit, values: Float64Array.from(points, (point) => column[point] ?? Number.NaN) };
+  };
+  return {
+    axes: [{ ...axis!, values: places.map((place) => axis!.values[place]!) }, ...outer],
+    traces: source.traces.map(cut),
+    read: readIn(source).map(cut),
+    points: { outcome: points.map((point) => source.points.outcome[point] ?? null) },
+  };
+}
+
+function readIn(source: CurveSource): CurveTrace[] {
+  return curveSet(source)!.traces.filter(({ isReading }) => isReading);
 }
 
 /** Every setting of every run but the origin itself, to be measured from that setting of the first run. */
@@ -72,13 +114,12 @@ function settingOf({ label, source }: Labelled, family: number, setting: string)
     ...trace,
     values: columnFrom(trace.values).slice(family * length, (family + 1) * length),
   });
-  const read = curveSet(source)!.traces.filter(({ isReading }) => isReading);
   return {
     label: setting === "" ? label : `${label}, ${setting}`,
     source: {
       axes: [axis],
       traces: source.traces.map(cut),
-      read: read.map(({ name, unit, values }) => cut({ name, unit, values })),
+      read: readIn(source).map(({ name, unit, values }) => cut({ name, unit, values })),
       points: { outcome: source.points.outcome.slice(family * length, (family + 1) * length) },
     },
   };

@@ -1,4 +1,6 @@
 import Link from "next/link";
+import type { ReactNode } from "react";
+import { counted } from "@/app/_components/ui/count";
 import { ChangeList } from "../../netlists/[id]/change-list";
 import { type ComparedRun, nameOf } from "./compare-shapes";
 
@@ -38,10 +40,33 @@ export function TextDifferences({
             </p>
           )}
           {one.changes !== null && (
-            <ChangeList found={one.changes} names={[`Run ${first.letter}`, `Run ${one.letter}`]} />
+            <Folded
+              when={one.run.netlistId !== first.run.netlistId}
+              words={`Of different netlists: ${counted(one.changes.changes.length, "difference")}`}
+            >
+              <ChangeList found={one.changes} names={[`Run ${first.letter}`, `Run ${one.letter}`]} />
+            </Folded>
           )}
         </div>
       ))}
     </section>
+  );
+}
+
+function Folded({
+  when,
+  words,
+  children,
+}: {
+  readonly when: boolean;
+  readonly words: string;
+  readonly children: ReactNode;
+}) {
+  if (!when) return children;
+  return (
+    <details>
+      <summary className="min-h-6 w-fit text-sm">{words}</summary>
+      <div className="mt-1">{children}</div>
+    </details>
   );
 }
