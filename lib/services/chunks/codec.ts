@@ -29,9 +29,16 @@ export function encode(values: Float64Array): Uint8Array<ArrayBuffer> {
 
 /** The inverse of `encode`. Throws a RangeError when `data` is not a whole number of values. */
 export function decode(data: Uint8Array): Float64Array {
+  const values = new Float64Array(Math.floor(data.length / BYTES));
+  decodeInto(values, 0, data);
+  return values;
+}
+
+/** The same into a column, from its value `at` on. */
+export function decodeInto(column: Float64Array, at: number, data: Uint8Array): void {
   if (data.length % BYTES !== 0) throw new RangeError(`A chunk of ${data.length} bytes is not whole.`);
   const count = data.length / BYTES;
-  const plain = new Uint8Array(data.length);
+  const plain = new Uint8Array(column.buffer, column.byteOffset + BYTES * at, data.length);
   const [b, c, d, e, f, g, h] = [count, 2 * count, 3 * count, 4 * count, 5 * count, 6 * count, 7 * count];
   // All bytes of a value at once: written in order, this takes half the time of byte after byte.
   for (let i = 0, to = 0; i < count; i++, to += BYTES) {
@@ -44,9 +51,9 @@ export function decode(data: Uint8Array): Float64Array {
     plain[to + 6] = data[i + g]!;
     plain[to + 7] = data[i + h]!;
   }
-  if (littleEndian) return new Float64Array(plain.buffer);
-  const view = new DataView(plain.buffer);
-  return Float64Array.from({ length: count }, (_, i) => view.getFloat64(i * BYTES, true));
+  if (littleEndian) return;
+  const view = new DataView(plain.buffer, plain.byteOffset, plain.length);
+  for (let i = 0; i < count; i++) column[at + i] = view.getFloat64(i * BYTES, true);
 }
 
 function littleEndianBytes(values: Float64Array): Uint8Array {

@@ -2,11 +2,12 @@ import { and, eq, gt, inArray, lt, lte, type SQL } from "drizzle-orm";
 import { database, type Queryable } from "@/db/client";
 import { chunk } from "@/db/schema/chunk";
 import { shard } from "@/db/schema/shard";
-import { CHUNK_POINTS, decode } from "./codec";
+import { CHUNK_POINTS, decode, decodeInto } from "./codec";
+import { copyChunks, type FoundChunk } from "./copy-chunks";
 import { valueAt } from "./value-at";
 
-/** So many values are read by one question; a column that is longer by itself. */
-const AT_ONCE = 1_000_000;
+/** More values than this are copied rather than asked for. */
+const MANY = 100_000;
 
 /**
  * The stored columns of a run, each of `points` values, NaN where a point is unsolved or its shard is not in yet. `names` picks
@@ -19,28 +20,20 @@ export async function readColumns(
   names?: readonly string[],
 ): Promise<Map<string, Float64Array>> {
   const columns = new Map<string, Float64Array>();
-  const read = async (db: Queryable, ...conditions: (SQL | undefined)[]) => {
-    for (const { name, at, data } of await chunks(db, eq(chunk.runId, runId), ...conditions)) {
-      let values = columns.get(name);
-      if (values === undefined) {
-        values = new Float64Array(points).fill(Number.NaN);
-        columns.set(name, values);
-      }
-      values.set(decode(data), at);
+  const take = ({ name, at, data }: FoundChunk) => {
+    let values = columns.get(name);
+    if (values === undefined) {
+      values = new Float64Array(points).fill(Number.NaN);
+      columns.set(name, values);
     }
+    decodeInto(values, at, data);
   };
-  if (names === undefined) await read(database());
-  else if (points * names.length <= AT_ONCE) await read(database(), inArray(chunk.column, [...names]));
-  else {
-    // A few after the other, so that they lie in memory once and nobody else waits long; of one moment, as a single question is.
-    const few = Math.max(1, Math.floor(AT_ONCE / points));
-    const moment = { isolationLevel: "repeatable read", accessMode: "read only" } as const;
-    await database().transaction(async (tx) => {
-      for (let i = 0; i < names.length; i += few) {
-        await read(tx, inArray(chunk.column, names.slice(i, i + few)));
-      }
-    }, moment);
+  if (names !== undefined && points * names.length > MANY) {
+    await copyChunks(runId, names, take);
+    return columns;
   }
+  const which = names === undefined ? undefined : inArray(chunk.column, [...names]);
+  for (const found of await chunks(database(), eq(chunk.runId, runId), which)) take(found);
   return columns;
 }
 
