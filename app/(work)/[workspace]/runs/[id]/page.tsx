@@ -1,6 +1,5 @@
 import type { Metadata } from "next";
 import { cache } from "react";
-import { preload } from "react-dom";
 import { outlineOf } from "@/lib/analyses/plan";
 import { actorFor } from "@/lib/auth/actor";
 import { can } from "@/lib/permissions/can";
@@ -56,27 +55,29 @@ export default async function RunPage({ params, searchParams }: Props) {
     for (const one of [value ?? []].flat()) search.append(name, one);
   }
   const state = readPageState(search);
-  // A large document sets out together with the page, not after it.
-  if (!isSmall(run) && run.pointsDone > 0)
-    preload(columnsPath(id), { as: "fetch", crossOrigin: "anonymous" });
   const [found, point, span, context] = await Promise.all([
     isSmall(run) ? getRunDocument(actor, id) : null,
     state.point === null || state.point >= run.points ? null : getPoint(actor, id, state.point),
     findVoltageSpan(actor, id),
     getRunContext(actor, id),
   ]);
+  // A large document sets out together with the page, not after it.
+  const ahead = !isSmall(run) && run.pointsDone > 0;
   return (
-    <RunView
-      key={run.id}
-      workspace={workspace}
-      first={isSmall(run) ? run : { ...run, plan: outlineOf(run.plan) }}
-      found={found && { document: found.document, etag: found.etag }}
-      context={context}
-      point={point}
-      span={span}
-      search={search.toString()}
-      mayStart={can(actor, "run.start", { workspaceId: actor.workspaceId })}
-      mayCancel={can(actor, "run.cancel", { workspaceId: actor.workspaceId })}
-    />
+    <>
+      {ahead && <link rel="preload" as="fetch" href={columnsPath(id)} crossOrigin="anonymous" />}
+      <RunView
+        key={run.id}
+        workspace={workspace}
+        first={isSmall(run) ? run : { ...run, plan: outlineOf(run.plan) }}
+        found={found && { document: found.document, etag: found.etag }}
+        context={context}
+        point={point}
+        span={span}
+        search={search.toString()}
+        mayStart={can(actor, "run.start", { workspaceId: actor.workspaceId })}
+        mayCancel={can(actor, "run.cancel", { workspaceId: actor.workspaceId })}
+      />
+    </>
   );
 }
