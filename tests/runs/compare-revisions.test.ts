@@ -1,12 +1,10 @@
 import { describe, expect, test } from "vitest";
-import { curveSet } from "@/app/_components/curves/curve-set";
-import { bothCurves, onlyIn } from "@/app/(work)/[workspace]/netlists/[id]/compare/[pair]/both-curves";
 import { readPair } from "@/app/(work)/[workspace]/netlists/[id]/compare/[pair]/compare-shapes";
 import {
   turnsInWords,
   verdictChanges,
 } from "@/app/(work)/[workspace]/netlists/[id]/compare/[pair]/verdict-changes";
-import type { RequirementDocument, RunDocument, Verdict } from "@/lib/analyses/result";
+import type { RequirementDocument, Verdict } from "@/lib/analyses/result";
 
 const required = (label: string, verdict: Verdict) =>
   ({ label, verdict, margin: null, unit: "V", worst: null }) as unknown as RequirementDocument;
@@ -37,36 +35,6 @@ describe("verdicts of two runs", () => {
       [required("x", "broken"), required("x", "holds"), required("x", "holds")],
     );
     expect(twice.map(({ turn }) => turn)).toEqual(["worse", "new", "same"]);
-  });
-});
-
-describe("curves of two runs", () => {
-  const run = (values: readonly number[], traces: Record<string, readonly (number | null)[]>) =>
-    ({
-      axes: [{ knob: "I", unit: "A", scale: "list", values }],
-      draws: 1,
-      traces: Object.entries(traces).map(([name, column]) => ({ name, unit: "V", values: column })),
-      points: {
-        outcome: values.flatMap(() => ["converged", "converged"]),
-        bound: values.flatMap(() => [1e-12, 1e-12]),
-      },
-    }) as unknown as RunDocument;
-
-  test("stand over one axis with the revision as the last, the nominal design alone", () => {
-    const before = run([1, 2], { v: [10, 20, 90, 90], gone: [0, 0, 0, 0] });
-    const after = run([1, 2], { v: [11, null, 90, 90], come: [0, 0, 0, 0] });
-    const both = bothCurves({ revision: 3, document: before }, { revision: 5, document: after })!;
-    expect(both.traces.map(({ name, values }) => [name, [...values]])).toEqual([["v", [10, 20, 11, null]]]);
-    expect(curveSet(both)!.families.map(({ label }) => label)).toEqual(["revision 3", "revision 5"]);
-    expect(both.points.outcome.length).toBe(4);
-    expect([onlyIn(before, after), onlyIn(after, before)]).toEqual([["gone"], ["come"]]);
-  });
-
-  test("cannot stand over one axis where their sweeps differ", () => {
-    const before = run([1, 2], { v: [1, 2, 3, 4] });
-    expect(
-      bothCurves({ revision: 1, document: before }, { revision: 2, document: run([1, 3], {}) }),
-    ).toBeNull();
   });
 });
 

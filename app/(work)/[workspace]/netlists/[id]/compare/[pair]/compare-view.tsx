@@ -4,7 +4,11 @@ import { useCallback, useEffect, useState } from "react";
 import { type DiffForm, TextDiff } from "@/app/_components/diff/text-diff";
 import { PageHeader } from "@/app/_components/ui/page-header";
 import type { TextChanges } from "@/lib/language/changes/of-texts";
-import { type PageState, readPageState, writePageState } from "../../../../runs/[id]/page-state";
+import {
+  type CompareState,
+  readCompareState,
+  writeCompareState,
+} from "../../../../runs/compare/compare-state";
 import { ChangeList } from "../../change-list";
 import { CompareActions } from "./compare-actions";
 import type { Side } from "./compare-shapes";
@@ -27,11 +31,11 @@ interface Props {
 
 /** Two revisions: what changed in words, how the verdicts turned, the curves over one another, the text line by line. */
 export function CompareView({ workspace, netlist, before, after, changes, search, mayRun }: Props) {
-  const [state, setState] = useState(() => readPageState(new URLSearchParams(search)));
+  const [state, setState] = useState(() => readCompareState(new URLSearchParams(search)));
   const [form, setForm] = useState<DiffForm | null>(() => formIn(search));
-  const show = useCallback((change: Partial<PageState>) => setState((now) => ({ ...now, ...change })), []);
+  const show = useCallback((change: Partial<CompareState>) => setState((now) => ({ ...now, ...change })), []);
   useEffect(() => {
-    const curves = writePageState(state);
+    const curves = writeCompareState([], state);
     const text = form === null ? "" : `${curves === "" ? "?" : "&"}text=${form}`;
     if (curves + text !== window.location.search)
       window.history.replaceState(null, "", curves + text || window.location.pathname);
@@ -103,12 +107,11 @@ export function CompareView({ workspace, netlist, before, after, changes, search
             </h2>
             <div className="mt-3">
               <CurveSection
+                workspace={workspace}
                 before={{ revision: before.number, run: runs.old.id }}
                 after={{ revision: after.number, run: runs.now.id }}
-                view={state}
-                onView={show}
-                point={state.point}
-                onPoint={(point) => show({ point })}
+                state={state}
+                onState={show}
               />
             </div>
           </section>

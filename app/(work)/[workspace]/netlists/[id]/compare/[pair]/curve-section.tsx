@@ -1,107 +1,126 @@
 "use client";
 
-import { useQuery } from "@tanstack/react-query";
+import { useQueries } from "@tanstack/react-query";
+import Link from "next/link";
 import { useMemo } from "react";
 import { CurveFigure } from "@/app/_components/curves/curve-figure";
 import { curveSet } from "@/app/_components/curves/curve-set";
-import type { CurveView } from "@/app/_components/curves/curve-view";
+import type { CurveSource } from "@/app/_components/curves/curve-source";
+import { difference } from "@/app/_components/curves/difference";
+import { type Overlaid, overlay } from "@/app/_components/curves/overlay";
 import { FailedState, LoadingState } from "@/app/_components/ui/states";
-import type { RunDocument } from "@/lib/analyses/result";
-import { fetchDocument } from "../../../../runs/[id]/fetch-run";
-import { bothCurves, onlyIn } from "./both-curves";
+import { Tabs } from "@/app/_components/ui/tabs";
+import { fetchColumns } from "../../../../runs/[id]/fetch-run";
+import type { CompareState } from "../../../../runs/compare/compare-state";
 
 interface Props {
+  readonly workspace: string;
   readonly before: { readonly revision: number; readonly run: string };
   readonly after: { readonly revision: number; readonly run: string };
-  readonly view: CurveView;
-  readonly onView: (change: Partial<CurveView>) => void;
-  readonly point: number | null;
-  readonly onPoint: (point: number) => void;
+  readonly state: CompareState;
+  readonly onState: (change: Partial<CompareState>) => void;
 }
 
-/** The curves of both revisions over one ruler, or one figure under the other where their sweeps differ. */
-export function CurveSection({ before, after, ...figure }: Props) {
-  const old = useDocument(before.run);
-  const now = useDocument(after.run);
-  const both = useMemo(() => {
-    if (old.data === undefined || now.data === undefined) return null;
-    return bothCurves(
-      { revision: before.revision, document: old.data },
-      { revision: after.revision, document: now.data },
-    );
-  }, [old.data, now.data, before.revision, after.revision]);
-  const error = old.error ?? now.error;
+/** The curves of both revisions over one ruler, or what the later one has over the earlier. */
+export function CurveSection({ workspace, before, after, state, onState }: Props) {
+  const { data, error } = useQueries({
+    queries: [before.run, after.run].map((run) => ({
+      queryKey: ["run-columns", run],
+      queryFn: async () => (await fetchColumns(run, null))!.document,
+      staleTime: Number.POSITIVE_INFINITY,
+    })),
+    combine: (results) => ({
+      data: results.map((one) => one.data),
+      error: results.find((one) => one.error !== null)?.error ?? null,
+    }),
+  });
+  const [old, now] = data;
+  const shown = useMemo(() => {
+    if (old === undefined || now === undefined) return null;
+    const a = { label: `revision ${before.revision}`, source: old };
+    const b = { label: `revision ${after.revision}`, source: now };
+    return state.mode === "overlay" ? overlay([a, b]) : difference(a, b);
+  }, [old, now, before.revision, after.revision, state.mode]);
   if (error !== null)
     return (
       <FailedState title="The curves could not be fetched">
         <p>{error.message}</p>
       </FailedState>
     );
-  if (old.data === undefined || now.data === undefined)
-    return <LoadingState>Fetching the curves…</LoadingState>;
-  const name = `Curves of revisions ${before.revision} and ${after.revision}`;
-  if (both !== null) {
-    return (
-      <>
-        <CurveFigure set={curveSet(both)!} name={name} waiting={null} {...figure} />
-        <Apart documents={[old.data, now.data]} revisions={[before.revision, after.revision]} />
-      </>
-    );
-  }
-  if (old.data.axes.length === 0 || now.data.axes.length === 0)
-    return (
-      <p className="border-y py-3 text-quiet text-sm">
-        One of them sweeps nothing, so there are no two curves to lay over one another.
-      </p>
+  const content =
+    shown === null ? (
+      <LoadingState>Fetching the curves…</LoadingState>
+    ) : (
+      <Figure shown={shown} revisions={[before.revision, after.revision]} state={state} onState={onState} />
     );
   return (
-    <div className="grid gap-8">
-      <p className="text-sm">
-        The sweeps of the two differ, so their points do not stand at the same values: the curves stand one
-        under the other.
-      </p>
-      {[
-        { document: old.data, revision: before.revision },
-        { document: now.data, revision: after.revision },
-      ].map(({ document, revision }) => (
-        <div key={revision} className="grid gap-2">
-          <h3 className="font-semibold text-sm">Revision {revision}</h3>
-          <CurveFigure
-            set={curveSet(document)!}
-            name={`Curves of revision ${revision}`}
-            waiting={null}
-            {...figure}
-          />
-        </div>
-      ))}
-    </div>
+    <>
+      <Tabs
+        label="How the curves are compared"
+        value={state.mode}
+        onChange={(next) =>
+          onState({
+            mode: next === "difference" ? "difference" : "overlay",
+            ...{ traces: null, families: null, only: null, point: null },
+          })
+        }
+        tabs={[
+          { value: "overlay", label: "Laid over each other", content },
+          { value: "difference", label: "Difference", content },
+        ]}
+      />
+      {old !== undefined && now !== undefined && (
+        <p className="mt-3 text-quiet text-sm">
+          {apart(old, now, before.revision)}
+          {apart(now, old, after.revision)}
+          <Link
+            href={`/${workspace}/runs/compare?runs=${before.run},${after.run}`}
+            prefetch={false}
+            className="link inline-block min-h-6"
+          >
+            Compare these runs with others
+          </Link>
+        </p>
+      )}
+    </>
   );
 }
 
-/** What only one of the two shows. */
-function Apart({
-  documents: [old, now],
+function Figure({
+  shown,
   revisions,
-}: {
-  readonly documents: readonly [RunDocument, RunDocument];
+  state,
+  onState,
+}: Pick<Props, "state" | "onState"> & {
+  readonly shown: Overlaid;
   readonly revisions: readonly [number, number];
 }) {
-  const alone = [
-    { names: onlyIn(old, now), revision: revisions[0] },
-    { names: onlyIn(now, old), revision: revisions[1] },
-  ].filter(({ names }) => names.length > 0);
-  if (alone.length === 0) return null;
+  const set = useMemo(() => ("source" in shown ? curveSet(shown.source) : null), [shown]);
+  if ("problem" in shown || set === null) {
+    return (
+      <p className="border-y py-3 text-quiet text-sm">
+        {"problem" in shown ? shown.problem : "There is no curve to show."}
+      </p>
+    );
+  }
+  const what = state.mode === "overlay" ? "Curves" : "Difference";
   return (
-    <p className="mt-3 text-quiet text-sm">
-      {alone.map(({ names, revision }) => `Only revision ${revision} shows ${names.join(", ")}.`).join(" ")}
-    </p>
+    <CurveFigure
+      set={set}
+      name={`${what} of revisions ${revisions[0]} and ${revisions[1]}`}
+      view={state}
+      onView={onState}
+      point={state.point}
+      onPoint={(point) => onState({ point })}
+      waiting={null}
+    />
   );
 }
 
-function useDocument(run: string) {
-  return useQuery({
-    queryKey: ["run-document", run],
-    queryFn: async () => (await fetchDocument(run, null))!.document,
-    staleTime: Number.POSITIVE_INFINITY,
-  });
+/** What only one of the two shows, as a sentence with a blank behind it; empty where there is nothing. */
+function apart(these: CurveSource, those: CurveSource, revision: number): string {
+  const names = these.traces
+    .filter(({ name, unit }) => !those.traces.some((one) => one.name === name && one.unit === unit))
+    .map(({ name }) => name);
+  return names.length === 0 ? "" : `Only revision ${revision} shows ${names.join(", ")}. `;
 }

@@ -1,0 +1,377 @@
+import { type Browser, chromium, type Page } from "playwright-core";
+import { afterAll, beforeAll, expect, test } from "vitest";
+import {
+  expectAccessible,
+  expectNoSidewaysScroll,
+  launchBrowser,
+  openPage,
+  picture,
+  signIn,
+  type Who,
+  WORKSPACE,
+} from "./harness";
+import { converterText, makeNetlist, openSheet, PATIENT, post, save, typeAtEnd } from "./sheet-steps";
+
+let browser: Browser;
+beforeAll(async () => {
+  browser = await launchBrowser();
+});
+afterAll(() => browser?.close());
+
+/** A text with a requirement that holds with 10 kΩ and is broken with 20 kΩ: the load takes 24 µA to 69 µA of its voltage. */
+function loadedText(title: string, ohms = "10 kΩ"): string {
+  return `${converterText(title).replace("10 kΩ", ohms)}show i_load = R1.i\nrequire abs(i_load) >= 30 µA as "load"\n`;
+}
+
+const PATH = /\/netlists\/[0-9a-f-]{36}/;
+const base = (id: string) => `/${WORKSPACE}/netlists/${id}`;
+
+async function signedIn(who: Who): Promise<Page> {
+  const { page } = await openPage(browser);
+  await signIn(page, who);
+  return page;
+}
+
+async function addRevision(page: Page, id: string, upon: number, text: string, message?: string) {
+  const body = { base: upon, text, ...(message === undefined ? {} : { message }) };
+  expect((await post(page, `/api/v1/netlists/${id}/revisions`, body)).status()).toBe(201);
+}
+
+async function runRevision(page: Page, id: string, number: number): Promise<void> {
+  const answer = await post(page, "/api/v1/runs", { netlistId: id, base: number });
+  const { id: run } = await answer.json();
+  const judged = async () => {
+    const summary = await (await page.request.get(`/api/v1/runs/${run}/summary`)).json();
+    return summary.status === "done" && summary.judgement !== null;
+  };
+  await expect.poll(judged, { timeout: 60_000 }).toBe(true);
+}
+
+/** What stands in the editor; only for texts that fit its window. */
+async function shownText(page: Page): Promise<string> {
+  const lines = await page.locator(".view-line").allTextContents();
+  return lines.join("\n").replaceAll("\u00a0", " ");
+}
+
+const plain = (text: string | null) => (text ?? "").replaceAll("\u202f", " ");
+
+test("the history tells what changed in each revision; two of it are compared in words, verdicts, curves and lines", async () => {
+  const page = await signedIn("erik");
+  const id = await makeNetlist(page, loadedText("History"));
+  await addRevision(page, id, 1, loadedText("History", "20 kΩ"), "A lighter load");
+  await addRevision(page, id, 2, `# a note\n${loadedText("History", "20 kΩ")}`);
+  for (const number of [1, 2]) await runRevision(page, id, number);
+
+  await openSheet(page, id);
+  await page.getByRole("link", { name: "History" }).click();
+  await page.waitForURL(`**${base(id)}/revisions`);
+  await page.getByRole("link", { name: "Revision 1", exact: true }).waitFor();
+  const rows = page.getByRole("main").getByRole("listitem");
+  expect((await rows.allTextContents()).map(plain)).toEqual([
+    expect.stringMatching(/^Revision 3newest.*Comments or layout only.*never run$/),
+    expect.stringMatching(/^Revision 2A lighter loadR_load 20 kΩ instead of 10 kΩ.*brokenrun \d+$/),
+    expect.stringMatching(/^Revision 1The first text.*holdsrun \d+$/),
+  ]);
+  const compare = page.getByRole("button", { name: /^Compare/ });
+  expect(await compare.isDisabled()).toBe(true);
+  for (const number of [3, 1, 2]) await page.getByLabel(`Choose revision ${number} to compare`).check();
+  expect(await page.getByLabel("Choose revision 3 to compare").isChecked()).toBe(false);
+  await page.getByRole("button", { name: "Compare 1 with 2" }).click();
+  await page.waitForURL(`**${base(id)}/compare/1..2`);
+
+  const words = page.getByRole("region", { name: "What changed" });
+  expect(plain(await words.textContent())).toContain("R_load 10 kΩ became 20 kΩ");
+  const verdicts = page.getByRole("region", { name: /^Verdicts of/ });
+  await verdicts.getByText("1 turned for the worse.").waitFor();
+  expect(plain(await verdicts.getByRole("row").nth(1).textContent())).toMatch(
+    /^loadholdsmargin .*brokenmissed by .*worse$/,
+  );
+  const curves = page.getByRole("figure", { name: "Curves of revisions 1 and 2" });
+  await curves.waitFor();
+  expect(await curves.textContent()).toContain("revision 2");
+  await page.getByRole("tab", { name: "Difference" }).click();
+  await page.getByRole("figure", { name: "Difference of revisions 1 and 2" }).waitFor();
+  await page.waitForURL(/show=difference/);
+  await page.keyboard.press("Alt+ArrowDown");
+  await page.getByText("Change 1 of 1").waitFor();
+  const marked = await page.locator("mark").allTextContents();
+  expect(marked).toEqual(["10", "20"]);
+  await page.getByLabel("in one column").check();
+  await page.waitForURL(/text=inline/);
+  await page.reload();
+  expect(await page.getByLabel("in one column").isChecked()).toBe(true);
+});
+
+test("a revision never run, one that cannot run, and two that mean the same say so", async () => {
+  const page = await signedIn("erik");
+  const id = await makeNetlist(page, converterText("States"));
+  await addRevision(page, id, 1, `${converterText("States")}let late = 10k\n`);
+  await addRevision(page, id, 2, `# a note\n${converterText("States")}`);
+  await page.goto(`${base(id)}/compare/1..2`);
+  await page.getByText("Revision 1 was never run.").waitFor();
+  await page.getByText("Revision 2 has 1 error to mend before it can run.").waitFor();
+  await page.getByText("Revision 2 has 1 error, so only the lines can be compared").waitFor();
+  await page.goto(`${base(id)}/compare/1..3`);
+  await page.getByText("Only comments, layout or spelling differ; both mean the same.").waitFor();
+  await page.goto(`${base(id)}/compare/3..3`);
+  await page.getByText("The texts are the same to the letter.").waitFor();
+  await page.getByText("No line differs").waitFor();
+  await page.getByRole("button", { name: "Queue revision 3" }).first().click();
+  await page.waitForURL(/\/runs\/[0-9a-f-]{36}/);
+});
+
+test("an old revision is restored, which can be undone; its text is duplicated; each step stays in the history", async () => {
+  const page = await signedIn("erik");
+  const id = await makeNetlist(page, converterText("Restore"));
+  await addRevision(page, id, 1, converterText("Restore", 20));
+  await page.goto(`${base(id)}/revisions/1`);
+  const text = page.getByRole("region", { name: "Text of revision 1, to read only" });
+  expect(await text.textContent()).toContain("10 per decade");
+  await page.getByRole("button", { name: "Restore" }).click();
+  await page.getByText("Revision 3 has the text of revision 1 now").waitFor();
+  await expect.poll(() => page.getByRole("button", { name: "Restore" }).count(), PATIENT).toBe(0);
+  await page.getByRole("button", { name: "Undo" }).click();
+  await page.getByText("Undone: revision 4 has the text of revision 2").waitFor();
+  const { rows } = await (await page.request.get(`/api/v1/netlists/${id}/revisions`)).json();
+  expect(rows.map((row: { message: string | null }) => row.message)).toEqual([
+    "Restoring of revision 1 undone",
+    "Text of revision 1 restored",
+    null,
+    null,
+  ]);
+  await page.getByRole("button", { name: "Duplicate" }).click();
+  await page.getByRole("link", { name: "Open the copy" }).click();
+  await page.getByRole("heading", { name: "Copy of Restore", level: 1 }).waitFor();
+  expect(PATH.exec(page.url())![0]).not.toContain(id);
+});
+
+test("restoring from a page that is out of date is refused, and shows what was saved meanwhile", async () => {
+  const page = await signedIn("erik");
+  const id = await makeNetlist(page, converterText("Out of date"));
+  await addRevision(page, id, 1, converterText("Out of date", 20));
+  await page.goto(`${base(id)}/revisions/1`);
+  await addRevision(page, id, 2, converterText("Out of date", 30));
+  await page.getByRole("button", { name: "Restore" }).click();
+  await page.getByText("Revision 3 was saved meanwhile").waitFor();
+  await page.getByRole("link", { name: "See what changed" }).click();
+  await page.waitForURL(`**/compare/1..3`);
+});
+
+test("a viewer reads and compares, and is offered nothing that a viewer may not do", async () => {
+  const erik = await signedIn("erik");
+  const id = await makeNetlist(erik, converterText("To read"));
+  await addRevision(erik, id, 1, converterText("To read", 20));
+  const vera = await signedIn("vera");
+  await vera.goto(`${base(id)}/revisions/1`);
+  await vera.getByText("As viewer you read revisions and compare them.").waitFor();
+  for (const name of ["Restore", "Duplicate", "Queue run"])
+    expect(await vera.getByRole("button", { name }).count()).toBe(0);
+  await vera.getByRole("button", { name: "Compare with…" }).click();
+  await vera.getByRole("menuitem", { name: "Revision 2, the newest" }).click();
+  await vera.waitForURL("**/compare/1..2");
+  expect(await vera.getByRole("button", { name: /^Queue revision/ }).count()).toBe(0);
+});
+
+test("a message is proposed from what changed, and may be taken", async () => {
+  const page = await signedIn("erik");
+  const id = await makeNetlist(page, converterText("Message"));
+  await openSheet(page, id);
+  await typeAtEnd(page, "let late = 3 kΩ\n");
+  await page.getByText("draft on revision 1").waitFor();
+  await page.keyboard.press("Control+s");
+  await page.getByRole("button", { name: "Take this message" }).click();
+  expect(await page.getByLabel("What changed (optional)").inputValue()).toBe("late added");
+  await page.getByRole("button", { name: "Save", exact: true }).click();
+  await page.getByText(/^revision 2$/).waitFor();
+  const { message } = await (await page.request.get(`/api/v1/netlists/${id}/revisions/2`)).json();
+  expect(message).toBe("late added");
+});
+
+test("a stale save becomes a merge: what fits is taken, places that both changed are chosen by keyboard, the checker has the last word", async () => {
+  const text = converterText("Merge");
+  const mine = await signedIn("erik");
+  const id = await makeNetlist(mine, text);
+  await openSheet(mine, id);
+  const theirs = await signedIn("rosa");
+  await openSheet(theirs, id);
+  await typeAtEnd(theirs, "let shared = 2 V\n");
+  await save(theirs);
+  await theirs.getByText(/^revision 2$/).waitFor();
+  await typeAtEnd(mine, "let shared = 1 V\n");
+  await mine.keyboard.press("Control+Home");
+  await mine.keyboard.insertText("# my note\n");
+  await mine.getByText("draft on revision 1").waitFor();
+  await save(mine);
+  await mine.getByRole("dialog", { name: "Revision 2 was saved meanwhile" }).waitFor();
+  await mine.getByRole("button", { name: "Merge both" }).press("Enter");
+
+  const dialog = mine.getByRole("dialog", { name: "Merge your text with revision 2" });
+  await dialog.getByText("1 place left to choose").waitFor();
+  const saveMerge = dialog.getByRole("button", { name: "Save as revision 3" });
+  expect(await saveMerge.isDisabled()).toBe(true);
+  await dialog.getByRole("radio", { name: "Both, mine first" }).press("Space");
+  await dialog.getByText("The merge has 1 error").waitFor();
+  expect(await saveMerge.isDisabled()).toBe(true);
+  await dialog.getByRole("radio", { name: "Write it myself" }).press("Space");
+  await dialog.getByLabel("Lines of place 1").fill("let shared = 1 V\nlet other = 2 V");
+  await dialog.getByText("The checker finds no error in the merge").waitFor();
+  await expectAccessible(mine);
+  await picture(mine, "merge-1280-light");
+  await saveMerge.press("Enter");
+  await mine.getByText(/^revision 3$/).waitFor();
+  const merged = await (await mine.request.get(`/api/v1/netlists/${id}`)).json();
+  expect(merged.text).toBe(`# my note\n${text}let shared = 1 V\nlet other = 2 V\n`);
+  await mine.getByText("A text of yours is not in any revision").waitFor();
+});
+
+test("where the two changes fit together, the merge needs no choice; it may be put on the sheet instead", async () => {
+  const text = converterText("Fits");
+  const page = await signedIn("erik");
+  const id = await makeNetlist(page, text);
+  await openSheet(page, id);
+  await addRevision(page, id, 1, text.replace("10 kΩ", "47 kΩ"));
+  await typeAtEnd(page, "let mine = 1 V\n");
+  await page.getByText("draft on revision 1").waitFor();
+  await save(page);
+  await page.getByRole("button", { name: "Merge both" }).click();
+  await page.getByText("No place was changed by both.").waitFor();
+  await page.getByRole("button", { name: "Put it on the sheet" }).click();
+  await page.getByText("draft on revision 2").waitFor();
+  expect(await shownText(page)).toContain("47 kΩ");
+  expect(await shownText(page)).toContain("let mine = 1 V");
+});
+
+test("a browser that is killed the moment after a key stroke loses no letter", async () => {
+  const { mkdtempSync, rmSync } = await import("node:fs");
+  const folder = mkdtempSync("/tmp/sweepwright-profile-");
+  const start = async () => {
+    const context = await chromium.launchPersistentContext(folder, {
+      executablePath: process.env.CHROME_PATH || "/usr/bin/chromium",
+      args: ["--no-sandbox", "--disable-gpu", "--disable-quic", "--no-first-run"],
+      baseURL: process.env.E2E_URL!,
+      viewport: { width: 1280, height: 800 },
+    });
+    const page = await context.newPage();
+    page.setDefaultTimeout(20_000);
+    return { context, page };
+  };
+  const first = await start();
+  await signIn(first.page, "erik");
+  const id = await makeNetlist(first.page, converterText("Killed"));
+  await openSheet(first.page, id);
+  await typeAtEnd(first.page, "let precious = 1 V");
+  await first.page.keyboard.type("# last");
+  await first.page.evaluate(() => new Promise((resolve) => setTimeout(resolve, 100)));
+  await killBrowserOf(folder);
+  await first.context.close().catch(() => {});
+
+  const second = await start();
+  // A cookie of the session went with the browser.
+  await signIn(second.page, "erik");
+  await openSheet(second.page, id);
+  await second.page.getByText("A text of yours is not in any revision").waitFor();
+  await second.page.getByRole("button", { name: "Restore it" }).click();
+  await expect.poll(() => shownText(second.page), PATIENT).toContain("let precious = 1 V# last");
+  await second.context.close();
+  rmSync(folder, { recursive: true, force: true });
+});
+
+/** Ends every process of the browser that has this folder as its profile, without a word. */
+async function killBrowserOf(folder: string): Promise<void> {
+  const { execFileSync } = await import("node:child_process");
+  const list = execFileSync("ps", ["-eo", "pid,args"], { encoding: "utf8", maxBuffer: 2 ** 26 });
+  const own = list.split("\n").filter((line) => line.includes(`--user-data-dir=${folder}`));
+  expect(own.length).toBeGreaterThan(0);
+  for (const line of own) {
+    try {
+      process.kill(Number.parseInt(line, 10), "SIGKILL");
+    } catch {
+      // It has ended with its parent.
+    }
+  }
+}
+
+test("two tabs of one person do not overwrite each other's drafts, and a third finds what each left", async () => {
+  const page = await signedIn("erik");
+  const id = await makeNetlist(page, converterText("Two tabs"));
+  await openSheet(page, id);
+  const other = await page.context().newPage();
+  await openSheet(other, id);
+  await typeAtEnd(page, "let one = 1 V\n");
+  await page.getByText("draft on revision 1").waitFor();
+  await typeAtEnd(other, "let two = 2 V\n");
+  await other.getByText("draft on revision 1").waitFor();
+  const third = await page.context().newPage();
+  await openSheet(third, id);
+  await third.getByText(/^revision 1$/).waitFor();
+  expect(await third.getByText("A text of yours is not in any revision").count()).toBe(0);
+  await page.close();
+  await other.close();
+  await third.reload();
+  const restore = third.getByRole("button", { name: "Restore it" });
+  await restore.click();
+  await expect.poll(() => shownText(third), PATIENT).toContain("let two = 2 V");
+  await restore.click();
+  await expect.poll(() => shownText(third), PATIENT).toContain("let one = 1 V");
+});
+
+test("a browser that keeps nothing more says so while there is something to lose", async () => {
+  const page = await signedIn("erik");
+  const id = await makeNetlist(page, converterText("Full"));
+  await page.addInitScript(() => {
+    IDBObjectStore.prototype.put = () => {
+      throw new DOMException("no room left", "QuotaExceededError");
+    };
+  });
+  await openSheet(page, id);
+  await typeAtEnd(page, "let mine = 1 V\n");
+  await page.getByText("This browser keeps no draft").waitFor();
+  await save(page);
+  await page.getByText(/^revision 2$/).waitFor();
+  await expect.poll(() => page.getByText("This browser keeps no draft").count(), PATIENT).toBe(0);
+});
+
+test("history, revision and comparison are accessible and fit their window, light and dark, on a phone and on a wide screen", async () => {
+  const page = await signedIn("erik");
+  const id = await makeNetlist(page, loadedText("Look at revisions"));
+  await addRevision(page, id, 1, loadedText("Look at revisions", "20 kΩ"), "A lighter load");
+  for (const number of [1, 2]) await runRevision(page, id, number);
+  const storageState = await page.context().storageState();
+  for (const [width, height, colorScheme] of [
+    [360, 740, "light"],
+    [360, 740, "dark"],
+    [1024, 768, "dark"],
+    [1920, 1080, "light"],
+  ] as const) {
+    const view = await openPage(browser, { viewport: { width, height }, colorScheme, storageState });
+    for (const [name, path] of [
+      ["history", "revisions"],
+      ["revision", "revisions/2"],
+      ["compare", "compare/1..2"],
+    ] as const) {
+      await view.page.goto(`${base(id)}/${path}`);
+      if (name === "compare") await view.page.getByRole("figure").waitFor();
+      await expectAccessible(view.page);
+      await expectNoSidewaysScroll(view.page);
+      await picture(view.page, `${name}-${width}-${colorScheme}`);
+    }
+    expect(view.faults).toEqual([]);
+    await view.page.context().close();
+  }
+});
+
+test("there is no page of a revision or of a pair that does not exist", async () => {
+  const page = await signedIn("erik");
+  const id = await makeNetlist(page, converterText("Nothing there"));
+  const none = "00000000-0000-4000-8000-000000000000";
+  for (const path of [
+    `${base(id)}/revisions/2`,
+    `${base(id)}/revisions/one`,
+    `${base(id)}/compare/1..2`,
+    `${base(id)}/compare/1`,
+    `${base(none)}/revisions`,
+  ]) {
+    await page.goto(path);
+    await page.getByText(/^There is no such/).waitFor();
+  }
+});
