@@ -50,12 +50,17 @@ export function tokenize(text: string, report: Report): Token[] {
     at += length;
   };
   while (at < text.length) {
-    const blank = match(BLANK);
+    const first = text[at]!;
+    if (first === " ") {
+      at += 1;
+      continue;
+    }
+    const blank = first > " " && first < "\u0080" ? null : match(BLANK);
     if (blank !== null) {
       at += blank[0].length;
       continue;
     }
-    if (text[at] === "\n") {
+    if (first === "\n") {
       push("newline", 1, "\n");
       continue;
     }
@@ -67,18 +72,18 @@ export function tokenize(text: string, report: Report): Token[] {
         continue;
       }
     }
-    const comment = match(COMMENT);
+    const comment = first === "#" ? match(COMMENT) : null;
     if (comment !== null) {
       push("comment", comment[0].length, comment[0].trimEnd());
       continue;
     }
-    const slashed = match(SLASHED);
+    const slashed = first === "/" ? match(SLASHED) : null;
     if (slashed !== null) {
       reportComment(report, at, "//");
       push("comment", slashed[0].length, slashed[0].trimEnd());
       continue;
     }
-    const number = match(NUMBER);
+    const number = first === "." || (first >= "0" && first <= "9") ? match(NUMBER) : null;
     if (number !== null) {
       if (!Number.isFinite(Number(number[0]))) {
         const span = { from: at, to: at + number[0].length };
@@ -96,7 +101,7 @@ export function tokenize(text: string, report: Report): Token[] {
       push("word", word[0].length, word[0].replaceAll("\u2126", "Ω").replaceAll("\u03bc", "µ"));
       continue;
     }
-    const string = match(STRING);
+    const string = first === '"' ? match(STRING) : null;
     if (string !== null) {
       const closed = string[1] === '"';
       if (!closed) reportOpenText(report, at, string[0]);

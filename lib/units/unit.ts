@@ -37,6 +37,10 @@ export const PLAIN_UNITS: ReadonlyMap<string, number> = new Map([
   ["ppm", -6],
 ]);
 
+/** Spellings met so far; a long netlist has few of them, many times each. */
+const parsed = new Map<string, Unit | null>();
+const MOST_PARSED = 500;
+
 const SUPERSCRIPTS = "⁰¹²³⁴⁵⁶⁷⁸⁹";
 const FACTOR = /^([^⁰¹²³⁴⁵⁶⁷⁸⁹⁻]+)(⁻?)([⁰¹²³⁴⁵⁶⁷⁸⁹]?)$/u;
 
@@ -47,6 +51,16 @@ const FACTOR = /^([^⁰¹²³⁴⁵⁶⁷⁸⁹⁻]+)(⁻?)([⁰¹²³⁴⁵⁶�
  */
 export function parseUnit(text: string): Unit | null {
   if (text.length > 64) return null;
+  let unit = parsed.get(text);
+  if (unit === undefined) {
+    if (parsed.size >= MOST_PARSED) parsed.clear();
+    unit = parseAnew(text);
+    parsed.set(text, unit);
+  }
+  return unit;
+}
+
+function parseAnew(text: string): Unit | null {
   const canonical = canonicalSpelling(text);
   if (canonical === "°C") return { symbol: "°C", dimension: KELVIN, exponent: 0, scale: "celsius" };
   let dimension = PURE;
