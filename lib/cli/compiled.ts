@@ -1,5 +1,6 @@
 import { compile, type Job } from "@/lib/analyses/compile";
 import type { Diagnostic } from "@/lib/language/diagnostic";
+import { OWN } from "@/lib/language/limits";
 import { lineStarts, placeOf } from "@/lib/language/span";
 import type { Remark } from "./annotations";
 import type { Case } from "./junit";
@@ -16,7 +17,7 @@ export interface Compiled {
 export function compileSource(source: Source): Compiled {
   const shelf = new FolderShelf(source.folder);
   const library = (name: string) => shelf.find(name);
-  return { source, ...compile(source.text, { library }), shelf: shelf.texts };
+  return { source, ...compile(source.text, { library, size: OWN }), shelf: shelf.texts };
 }
 
 /** The diagnostics of a source, each with its place. */

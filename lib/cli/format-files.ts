@@ -1,4 +1,5 @@
 import { format } from "@/lib/language/format";
+import { OWN } from "@/lib/language/limits";
 import { FORMAT } from "./commands";
 import { EXIT, type ExitCode } from "./exit-codes";
 import { type Given, usage } from "./options";
@@ -16,10 +17,11 @@ export async function formatFiles(given: Given, world: World): Promise<ExitCode>
   }
   const sources = await readSources(given.files, world);
   const output = new Output(given, world);
-  const changed = sources.filter(({ text }) => format(text) !== text);
-  if (!isCheck && !isWrite) output.write(format(sources[0]!.text));
+  const formatted = (text: string) => format(text, OWN.text);
+  const changed = sources.filter(({ text }) => formatted(text) !== text);
+  if (!isCheck && !isWrite) output.write(formatted(sources[0]!.text));
   else for (const { name } of changed) output.write(`${name}\n`);
-  if (isWrite) for (const { name, text } of changed) writeFileOf(name, format(text), world);
+  if (isWrite) for (const { name, text } of changed) writeFileOf(name, formatted(text), world);
   output.end();
   return isCheck && changed.length > 0 ? EXIT.broken : EXIT.holds;
 }

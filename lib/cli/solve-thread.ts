@@ -2,6 +2,7 @@ import { parentPort } from "node:worker_threads";
 import { branchesRow } from "@/lib/analyses/branches-document";
 import { compile, type Job } from "@/lib/analyses/compile";
 import { solveRange } from "@/lib/analyses/sweep";
+import { OWN } from "@/lib/language/limits";
 import type { Netlist, Reply, Task } from "./thread-messages";
 
 const port = parentPort;
@@ -14,7 +15,7 @@ function jobOf({ text, shelf }: Netlist): Job {
   const netlist = JSON.stringify([text, shelf]);
   if (kept?.netlist === netlist) return kept.job;
   const library = (name: string) => (Object.hasOwn(shelf, name) ? shelf[name]! : null);
-  const { job } = compile(text, { library });
+  const { job } = compile(text, { library, size: OWN });
   if (job === null) throw new Error("The netlist has errors and cannot be solved.");
   kept = { netlist, job };
   return job;

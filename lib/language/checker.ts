@@ -11,12 +11,12 @@ import { tokenize } from "./lexer";
 import {
   count,
   LEAST_SHELF_TEXT,
-  MOST_ELEMENTS,
   MOST_POINTS,
   MOST_SHELF_TEXT,
-  MOST_TEXT,
   MOST_VALUES,
   MOST_WORD,
+  SHARED,
+  type Size,
 } from "./limits";
 import { declareAll, Names } from "./names";
 import { Nominal } from "./nominal";
@@ -43,10 +43,12 @@ export interface Checked {
 /** Where the texts are that `use` names; without it no shelf is at hand. */
 export interface CheckOptions {
   readonly library?: Library | null;
+  /** How large a circuit may be; SHARED where it is not said. */
+  readonly size?: Size;
 }
 
 /** Reads and checks a netlist text: everything but its wiring, which is checked on the design. Never throws; linear time. */
-export function check(text: string, { library = null }: CheckOptions = {}): Checked {
+export function check(text: string, { library = null, size = SHARED }: CheckOptions = {}): Checked {
   const shelves = new Map<string, Checked>();
   let left = MOST_SHELF_TEXT;
   const one = (own: string, active: readonly string[]): Checked | null => {
@@ -54,11 +56,11 @@ export function check(text: string, { library = null }: CheckOptions = {}): Chec
     if (left < 0) return null;
     const known = shelves.get(own);
     if (known !== undefined) return known;
-    const checked = checkText(own, active, library, one);
+    const checked = checkText(own, active, library, one, size);
     shelves.set(own, checked);
     return checked;
   };
-  return checkText(text, [], library, one);
+  return checkText(text, [], library, one, size);
 }
 
 /** As `check`, for a text that the shelves `active` are being fetched around. */
@@ -67,10 +69,11 @@ function checkText(
   active: readonly string[],
   library: Library | null,
   checkShelf: CheckShelf,
+  size: Size,
 ): Checked {
   const report = new Report();
-  if (text.length > MOST_TEXT) {
-    const message = `The text has ${count(text.length)} characters, and a netlist can have ${count(MOST_TEXT)} at most; split it.`;
+  if (text.length > size.text) {
+    const message = `The text has ${count(text.length)} characters, and a netlist can have ${count(size.text)} at most; split it.`;
     report.error("CAP1", { from: 0, to: text.length }, message);
     return { netlist: { statements: [] }, design: null, diagnostics: report.sorted() };
   }
@@ -79,15 +82,14 @@ function checkText(
   if (hasLongWords(tokens, report)) return { netlist, design: null, diagnostics: report.sorted() };
   const shelves = new Shelves(library, checkShelf, report);
   const imports = shelves.imports(netlist.statements, active);
-  const expansion = new Expander(report).file(netlist.statements, imports);
-  const design = checkExpansion(expansion, text, shelves.isComplete, report);
+  const expansion = new Expander(report, size.unfolded).file(netlist.statements, imports);
+  const design = checkExpansion(expansion, { source: text, isComplete: shelves.isComplete, size }, report);
   return { netlist, design: report.hasErrors ? null : design, diagnostics: report.sorted() };
 }
 
 function checkExpansion(
   { statements, trials, isWhole }: Expansion,
-  source: string,
-  isComplete: boolean,
+  { source, isComplete, size }: { source: string; isComplete: boolean; size: Size },
   report: Report,
 ): Design {
   const names = new Names(report, FUNCTION_NAMES);
@@ -140,7 +142,8 @@ function checkExpansion(
   const netPlaces = placesOf(names, own);
   const nets = [...netPlaces.keys()];
   const random = draws?.count ?? 0;
-  checkSize(isWhole ? elements : [], nets, { sweeps, random }, shows, report);
+  if (isWhole) checkElements(elements, size, report);
+  checkValueCount(isWhole ? elements : [], nets, { sweeps, random }, shows, report);
   checkDraws(statements, sweeps, random, report);
   if (shows.length === 0 && !report.hasErrors) {
     const span = { from: source.length, to: source.length };
@@ -200,18 +203,20 @@ function placesOf(names: Names, own: (named: { readonly name: string }) => boole
   return places;
 }
 
-function checkSize(
+function checkElements(elements: readonly Element[], { elements: most }: Size, report: Report): void {
+  const first = elements[most];
+  if (first === undefined) return;
+  const message = `The netlist has ${count(elements.length)} elements, and a circuit can have ${count(most)} at most.`;
+  report.error("CAP3", first, message);
+}
+
+function checkValueCount(
   elements: readonly Element[],
   nets: readonly string[],
   { sweeps, random }: { readonly sweeps: readonly Sweep[]; readonly random: number },
   shows: readonly Show[],
   report: Report,
 ): void {
-  const first = elements[MOST_ELEMENTS];
-  if (first !== undefined) {
-    const message = `The netlist has ${count(elements.length)} elements, and a circuit can have ${count(MOST_ELEMENTS)} at most.`;
-    report.error("CAP3", first, message);
-  }
   const points = sweeps.reduce((product, sweep) => product * sweep.values.length, random + 1);
   const branches = elements.filter(
     ({ kind, law }) => kind === "voltage" || kind === "opamp" || kind === "gain" || law?.quantity === "volts",

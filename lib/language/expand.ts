@@ -1,4 +1,4 @@
-import { count, MOST_UNFOLDED } from "./limits";
+import { count } from "./limits";
 import { Ports } from "./ports";
 import type { Report } from "./report";
 import { Rewriter } from "./rewrite";
@@ -66,7 +66,11 @@ export class Expander {
   /** The instance in the file that is being unfolded. */
   private outermost: Span | null = null;
 
-  constructor(private readonly report: Report) {
+  /** `most`: words and values that blocks may unfold to. */
+  constructor(
+    private readonly report: Report,
+    private readonly most: number,
+  ) {
     this.ports = new Ports(report);
   }
 
@@ -191,9 +195,9 @@ export class Expander {
 
   /** Whether the blocks have unfolded to more than is kept; reported once, where it happened. */
   private full(): boolean {
-    if (!this.isFull && this.rewriter.nodes > MOST_UNFOLDED) {
+    if (!this.isFull && this.rewriter.nodes > this.most) {
       this.isFull = true;
-      const message = `The blocks unfold to more than ${count(MOST_UNFOLDED)} words and values; use fewer instances.`;
+      const message = `The blocks unfold to more than ${count(this.most)} words and values; use fewer instances.`;
       this.report.error("CAP3", this.outermost ?? { from: 0, to: 0 }, message);
     }
     return this.isFull;

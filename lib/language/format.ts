@@ -2,7 +2,7 @@ import { alignRuns, type Line, plainLine, statementLine } from "./alignment";
 import { Cursor } from "./cursor";
 import { ExpressionParser } from "./expression-parser";
 import { tokenize } from "./lexer";
-import { MOST_TEXT } from "./limits";
+import { SHARED } from "./limits";
 import { LineOwners } from "./line-owners";
 import { parseTokens } from "./parser";
 import { Report } from "./report";
@@ -14,11 +14,12 @@ const INDENT = "  ";
 /**
  * The canonical form of a netlist: canonical spelling and spacing, at most one blank line between statements, `=`, `:` and `{`
  * aligned in runs of neighbouring lines, comments kept. Line breaks inside a statement stay where they are. A statement that
- * could not be read keeps its lines as they are, apart from blanks at their ends. Idempotent; the meaning is unchanged.
+ * could not be read keeps its lines as they are, apart from blanks at their ends, and so does a text of more than `most` UTF-16
+ * units. Idempotent; the meaning is unchanged.
  */
-export function format(text: string): string {
+export function format(text: string, most = SHARED.text): string {
   const source = text.split("\n");
-  if (text.length > MOST_TEXT) return finish(source.map((line) => line.trimEnd()));
+  if (text.length > most) return finish(source.map((line) => line.trimEnd()));
   const report = new Report();
   const tokens = tokenize(text, report);
   const { netlist, tight } = parseTokens(tokens, text.length, report);

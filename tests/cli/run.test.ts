@@ -46,6 +46,20 @@ describe("sweepwright run", { timeout: 60_000 }, () => {
     expect(new Set(answers.map(({ out }) => out)).size).toBe(1);
   });
 
+  test("solves and proves a circuit far larger than the service takes", async () => {
+    const sections = Array.from(
+      { length: 1500 },
+      (_, k) => `n${k} -- R${k} : resistor 10 Ω -- n${k + 1} -- D${k} : d -- ground\n`,
+    );
+    const input = `model d : diode { Is = 1 pA }\nground -- V1 : voltage 5 V -- n0\n${sections.join("")}show n1500.v, n1.v\n`;
+    const { code, out } = await shell(["run", "--json", "--quiet", "-"], { input });
+    expect(code).toBe(0);
+    const { points, traces, diagnostics } = documentsOf(out)[0]!;
+    expect(diagnostics).toEqual([]);
+    expect(points.bound[0]).toBeLessThanOrEqual(10e-12);
+    expect(traces[0]!.values[0]).toBeLessThan(traces[1]!.values[0]!);
+  });
+
   test("leaves with 3 and a document without data where a netlist has errors", async () => {
     const input = HOLDS.replace("resistor 1 kΩ -- out", "resistor 1 kV -- out");
     const { code, out } = await shell(["run", "--json", "-"], { input });

@@ -3,7 +3,7 @@ import { checkWiring } from "@/lib/circuit/wiring";
 import { CATALOGUE } from "@/lib/language/catalogue";
 import { check } from "@/lib/language/checker";
 import type { Diagnostic } from "@/lib/language/diagnostic";
-import { MOST_ELEMENTS, MOST_TEXT, MOST_WORD } from "@/lib/language/limits";
+import { MOST_TEXT, MOST_WORD, OWN, SHARED } from "@/lib/language/limits";
 import { WIRING_PROBLEMS } from "@/tests/circuit/problems";
 import { BLOCK_PROBLEMS } from "./block-problems";
 import { CONTRACT_PROBLEMS } from "./contract-problems";
@@ -58,13 +58,16 @@ describe("limits", () => {
     const text = `${"#".repeat(MOST_TEXT - 1)}\n`;
     expect(code(text)).toEqual(["PLN8"]);
     expect(code(`${text}\n`)).toEqual(["CAP1"]);
+    expect(check(`${text}\n`, { size: OWN }).diagnostics.map((one) => one.code)).toEqual(["PLN8"]);
   });
 
   test("CAP3: too many elements", () => {
     const line = (i: number): string => `ground -- R${i} : resistor 1 kΩ -- a\n`;
-    const most = Array.from({ length: MOST_ELEMENTS }, (_, i) => line(i)).join("");
+    const most = Array.from({ length: SHARED.elements }, (_, i) => line(i)).join("");
     expect(code(`${most}show a.v`)).toEqual([]);
-    expect(code(`${most}${line(MOST_ELEMENTS)}show a.v`)).toEqual(["CAP3"]);
+    const more = `${most}${line(SHARED.elements)}show a.v`;
+    expect(code(more)).toEqual(["CAP3"]);
+    expect(check(more, { size: OWN }).diagnostics).toEqual([]);
   });
 
   test("CAP5: too many values to keep", () => {
