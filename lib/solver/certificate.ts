@@ -60,6 +60,7 @@ export class Certificate {
   private readonly weights: Float64Array;
   private readonly doubts: Doubts;
   private readonly spread: Float64Array;
+
   constructor(
     private readonly system: System,
     private readonly linear: LinearSolver,
