@@ -2,76 +2,89 @@ import { describe, expect, test } from "vitest";
 import { compile } from "@/lib/analyses/compile";
 import { System } from "@/lib/circuit/system";
 import { isAccepted } from "@/lib/solver/acceptance";
-import { Aided } from "@/lib/solver/aided";
-import { damped } from "@/lib/solver/damped";
-import { homotopy } from "@/lib/solver/homotopy";
 import { Ladder } from "@/lib/solver/ladder";
-import { lineSearch } from "@/lib/solver/line-search";
 import { LinearSolver } from "@/lib/solver/linear";
-import { type Attempt, type Bench, newton } from "@/lib/solver/newton";
-import { pseudoTransient } from "@/lib/solver/pseudo-transient";
-import { ramp } from "@/lib/solver/ramp";
-import { shuntRamp } from "@/lib/solver/shunt-ramp";
+import { RUNGS, type Rung } from "@/lib/solver/outcome";
+import { textOf } from "../random/circuit";
+import { fullCircuit } from "../random/full";
 import { networkAt, textOfNetwork } from "../random/networks";
 
-type Climb = (bench: Bench) => Attempt;
+/**
+ * Circuits that need each rung: those before it fail. Found by solving 14,000 circuits of the full set and 12,000 networks, of which the
+ * first rung alone solves 97.6 % and 99.1 %. Beside each, the rungs that solve it by themselves from a cold start.
+ */
+const NEEDING: readonly (readonly [rung: Rung, text: string, alone: readonly Rung[]])[] = [
+  ["line search", networkOf(365), RUNGS.slice(2)],
+  ["damped newton", networkOf(2517), RUNGS.slice(3)],
+  ["damped newton", textOf(fullCircuit(2661)), ["damped newton", "shunt ramp", "homotopy"]],
+  ["pseudo-transient", networkOf(430), ["pseudo-transient", "shunt ramp", "homotopy"]],
+  ["pseudo-transient", networkOf(6324), ["pseudo-transient", "homotopy"]],
+  ["source ramp", textOf(fullCircuit(4727)), ["source ramp", "shunt ramp", "homotopy"]],
+  ["source ramp", textOf(fullCircuit(768)), ["source ramp", "shunt ramp"]],
+  ["shunt ramp", textOf(fullCircuit(333)), ["shunt ramp", "homotopy"]],
+  ["shunt ramp", textOf(fullCircuit(598)), ["shunt ramp"]],
+  ["homotopy", textOf(fullCircuit(11896)), ["homotopy"]],
+  ["homotopy", textOf(fullCircuit(4637)), ["homotopy"]],
+];
 
-/** Every rung of a cold start in its order, each by itself. */
-const CLIMBS: Readonly<Record<string, Climb>> = {
-  newton: (bench) => newton(bench, false, 100),
-  "line search": (bench) => lineSearch(atRest(bench), 60),
-  "damped newton": (bench) => damped(atRest(bench), 60),
-  "pseudo-transient": (bench) => pseudoTransient(bench, new Aided(bench.system)),
-  "source ramp": ramp,
-  "shunt ramp": (bench) => shuntRamp(bench, new Aided(bench.system)),
-  homotopy: (bench) => homotopy(bench, new Aided(bench.system)),
-};
-
-function atRest(bench: Bench): Bench {
-  bench.system.state.x.fill(0);
-  bench.system.state.low.fill(0);
-  return bench;
+function networkOf(index: number): string {
+  return textOfNetwork(networkAt(20, index));
 }
 
-function benchOf(text: string): Bench {
+function systemOf(text: string): System {
   const { job, diagnostics } = compile(text);
   if (job === null) throw new Error(diagnostics.map(({ message }) => message).join(" "));
-  const system = new System(job.design, job.circuit);
-  system.startCold();
+  return new System(job.design, job.circuit);
+}
+
+/** Whether the acceptance test holds where the system stands, with nothing but the system itself. */
+function isSolved(system: System): boolean {
+  const { state, circuit, pattern } = system;
+  system.settle();
   system.assemble();
-  const linear = new LinearSolver(system.pattern, system.state.jacobian);
-  return { system, linear, step: new Float64Array(job.circuit.size), assemble: () => system.assemble() };
+  const step = new Float64Array(circuit.size);
+  const linear = new LinearSolver(pattern, state.jacobian);
+  return (
+    state.share === 1 &&
+    linear.solve(state.jacobian, state.residual, step) &&
+    isAccepted(circuit, state, step)
+  );
 }
 
-/** The rungs that solve a text, each from a cold start of its own, and whether all they helped themselves with is off. */
-function climbedBy(text: string): string[] {
-  return Object.entries(CLIMBS).flatMap(([name, climb]) => {
-    const bench = benchOf(text);
-    if (climb(bench).kind !== "converged") return [];
-    const { system, linear, step } = bench;
-    const { state } = system;
-    expect(state.share, name).toBe(1);
-    system.settle();
-    system.assemble();
-    expect(linear.solve(state.jacobian, state.residual, step), name).toBe(true);
-    expect(isAccepted(system.circuit, state, step), name).toBe(true);
-    return [name];
+describe("the rungs of the ladder", { timeout: 60_000 }, () => {
+  test("are each needed by a circuit of the list, but for the first two", () => {
+    expect([...new Set(NEEDING.map(([rung]) => rung))]).toEqual(RUNGS.slice(2));
   });
-}
 
-describe("the rungs, each on random networks that need it", () => {
-  // Found among twelve thousand: places in the stream of seed 20, and the rungs that solve each of them.
-  test.each([
-    [365, ["line search", "damped newton", "pseudo-transient", "source ramp", "shunt ramp", "homotopy"]],
-    [2517, ["damped newton", "pseudo-transient", "source ramp", "shunt ramp", "homotopy"]],
-    [430, ["pseudo-transient", "shunt ramp", "homotopy"]],
-    [6324, ["pseudo-transient", "homotopy"]],
-  ])("network %i", (index, rungs) => {
-    const text = textOfNetwork(networkAt(20, index));
-    expect(climbedBy(text)).toEqual(rungs);
-    const { job } = compile(text);
-    const outcome = new Ladder(new System(job!.design, job!.circuit)).solve(false);
-    expect(outcome).toMatchObject({ kind: "converged", rung: rungs[0] });
-    if (outcome.kind === "converged") expect(outcome.bound).toBeLessThan(1e-10);
+  test.each(NEEDING)("%s solves a circuit on which all before it fail", (rung, text) => {
+    const before = RUNGS.slice(0, RUNGS.indexOf(rung));
+    expect(new Ladder(systemOf(text), false, before).solve(false).kind).not.toBe("converged");
+    const system = systemOf(text);
+    const outcome = new Ladder(system).solve(false);
+    expect(outcome).toMatchObject({ kind: "converged", rung });
+    if (outcome.kind === "converged") expect(outcome.bound).toBeLessThan(1e-8);
+    expect(isSolved(system)).toBe(true);
+  });
+
+  test.each(NEEDING)("%s, and which rungs solve the circuit by themselves", (_, text, alone) => {
+    const solving = RUNGS.filter((rung) => {
+      const system = systemOf(text);
+      return new Ladder(system, false, [rung]).solve(false).kind === "converged" && isSolved(system);
+    });
+    expect(solving).toEqual(alone);
+  });
+
+  test("a warm start solves from a neighbour, and hands on to Newton's method from a cold one", () => {
+    const text = `knob V = 1 V
+model d : diode { Is = 1 fA }
+ground -- V1 : voltage V -- in -- R1 : resistor 1 kΩ -- out -- D1 : d -- ground
+show out.v`;
+    const system = systemOf(text);
+    const ladder = new Ladder(system);
+    expect(ladder.solve(false)).toMatchObject({ kind: "converged", rung: "newton" });
+    system.turn("V", 1.01);
+    expect(ladder.solve(true)).toMatchObject({ kind: "converged", rung: "warm start" });
+    system.state.x.fill(1e300);
+    expect(ladder.solve(true)).toMatchObject({ kind: "converged", rung: "newton" });
   });
 });
