@@ -67,7 +67,7 @@ async function shownText(page: Page): Promise<string> {
 test("typing a value moves the curve, the reading and the margin; nothing of it is stored", async () => {
   const { page, faults, id } = await onSheet(ohmText("Typed value"));
   await pane(page)
-    .getByText(/^61 points at 25.°C, nominal · solved here in [\d.]+ ms, not stored$/u)
+    .getByText(/^61 points at 25.°C, nominal · solved here in [\d.]+.ms, not stored$/u)
     .waitFor();
   await expectReading(page, "10.0000 V");
   const curve = page.locator("[data-drawn]").first();
@@ -150,13 +150,13 @@ test("the setting of an outer sweep is chosen; the knob of the first says where 
 test("a text with errors keeps the last curves and says that they are of an earlier one", async () => {
   const { page } = await onSheet(ohmText("Errors"));
   await typeAtEnd(page, "let q = 10k\n");
-  await page.getByText("These curves are of the text before its errors").waitFor();
+  await pane(page).getByText("of the text before its errors").waitFor();
   await page.locator('[data-preview="stale"] canvas').first().waitFor();
   await page.getByText("preview of an earlier text").waitFor();
   await expectReading(page, "10.0000 V");
   await page.getByRole("button", { name: "Change to 10 kΩ" }).click();
   await solved(page);
-  expect(await page.getByText("These curves are of the text before its errors").count()).toBe(0);
+  expect(await pane(page).getByText("of the text before its errors").count()).toBe(0);
 });
 
 test("points that fail are marked where they are, and a sweep that is too long is shown in part", async () => {

@@ -8,6 +8,7 @@ import { KnobField } from "./knob-field";
 import { KnobRuler } from "./knob-ruler";
 import type { KnobScale } from "./knob-scale";
 import type { KnobOutline } from "./messages";
+import type { WrittenKnob } from "./write-knobs";
 
 interface Props {
   readonly knob: KnobOutline;
@@ -18,7 +19,7 @@ interface Props {
   readonly isTurned: boolean;
   readonly onTurn: (knob: string, value: number | null) => void;
   /** Puts its value into the text; absent where the text may not be changed. */
-  readonly onWrite?: ((knob: string) => void) | undefined;
+  readonly onWrite?: ((knobs: readonly WrittenKnob[]) => void) | undefined;
 }
 
 const NOTES = { first: "where values are read", outer: "setting shown" } as const;
@@ -74,7 +75,7 @@ export const KnobControl = memo(function KnobControl(props: Props) {
               tone="quiet"
               className="min-h-6 text-xs"
               aria-label={`Write ${name} = ${formatKnob(written, value)} into the text`}
-              onClick={stays(() => onWrite(name))}
+              onClick={stays(() => onWrite([{ ...written, value }]))}
             >
               Write
             </Button>

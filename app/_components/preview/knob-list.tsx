@@ -30,9 +30,10 @@ export function KnobList({ outline, turned, place, onTurn, onReset, onWrite }: P
     if (knob.sweep === "first") return axis?.values[place] ?? knob.value;
     return turned.get(knob.name) ?? (axis === undefined ? knob.value : nearestTo(axis.values, knob.value));
   };
+  const written = (knob: KnobOutline): WrittenKnob => {
+    return { knob: knob.name, unit: knob.unit, value: standing(knob) };
+  };
   const moved = outline.knobs.filter(({ name }) => turned.has(name));
-  const write = (knobs: readonly KnobOutline[]) =>
-    onWrite?.(knobs.map((knob) => ({ knob: knob.name, unit: knob.unit, value: standing(knob) })));
   return (
     <section aria-labelledby="preview-knobs">
       <h3 id="preview-knobs" className="caption">
@@ -48,7 +49,7 @@ export function KnobList({ outline, turned, place, onTurn, onReset, onWrite }: P
             value={standing(knob)}
             isTurned={turned.has(knob.name)}
             onTurn={onTurn}
-            onWrite={onWrite && (() => write([knob]))}
+            onWrite={onWrite}
           />
         ))}
       </ul>
@@ -56,13 +57,11 @@ export function KnobList({ outline, turned, place, onTurn, onReset, onWrite }: P
         <div className="flex flex-wrap items-center justify-between gap-x-4 gap-y-1 pt-2 text-sm">
           <p className="text-quiet">
             Turned:{" "}
-            {moved
-              .map((knob) => `${knob.name} ${formatKnob({ ...knob, knob: knob.name }, standing(knob))}`)
-              .join(", ")}
+            {moved.map((knob) => `${knob.name} ${formatKnob(written(knob), standing(knob))}`).join(", ")}
           </p>
           <div className="flex gap-2">
             {onWrite !== undefined && (
-              <Button size="small" onClick={() => write(moved)}>
+              <Button size="small" onClick={() => onWrite(moved.map(written))}>
                 Write all into the text
               </Button>
             )}

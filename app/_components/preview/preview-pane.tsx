@@ -1,7 +1,8 @@
 "use client";
 
-import { useCallback } from "react";
+import { memo, useCallback } from "react";
 import { classNames } from "@/app/_components/ui/class-names";
+import { ProgressLine } from "@/app/_components/ui/states";
 import { KnobList } from "./knob-list";
 import type { Outline, Row } from "./messages";
 import { PreviewCurves } from "./preview-curves";
@@ -9,9 +10,10 @@ import { PreviewRemark } from "./preview-remark";
 import type { Previewing } from "./previewing";
 import { ReadingRows } from "./reading-rows";
 import { RequirementBars } from "./requirement-bars";
-import { rowInWords } from "./row-words";
+import { countInWords, rowInWords } from "./row-words";
 import { SettingChoice } from "./setting-choice";
 import { SpokenPreview } from "./spoken-preview";
+import { useLate } from "./use-late";
 import { usePreview } from "./use-preview";
 import type { WrittenKnob } from "./write-knobs";
 
@@ -22,7 +24,7 @@ interface Props {
 }
 
 /** What a run of the text would show, solved in the browser as one types: one sweep, nominal, kept nowhere. */
-export function PreviewPane({ previewing, onWrite }: Props) {
+export const PreviewPane = memo(function PreviewPane({ previewing, onWrite }: Props) {
   const preview = usePreview(previewing, (all) => all);
   const { outline, row, isStale, state, turned, place } = preview;
   const turn = useCallback(
@@ -37,15 +39,18 @@ export function PreviewPane({ previewing, onWrite }: Props) {
     },
     [previewing, first],
   );
-  const isOld = isStale && state !== "solving";
+  const isOld = useLate(isStale && state !== "solving");
+  const isSlow = useLate(state === "solving");
+  const faded = isOld ? "opacity-60" : undefined;
   return (
     <section aria-labelledby="preview" className="grid min-w-0 gap-6">
       <div className="grid min-w-0 gap-2">
         <div className="flex min-h-7 flex-wrap items-center justify-between gap-x-6 gap-y-1">
           <h2 id="preview" className="caption">
             Preview{" "}
-            <span className={classNames("ml-2 font-normal", isOld && "line-through")}>
-              {row === null ? "" : rowInWords(row)}
+            <span className="ml-2 font-normal">
+              {row !== null && (isOld ? countInWords(row) : rowInWords(row))}
+              {isOld && <b className="text-nodata"> · of the text before its errors</b>}
             </span>
           </h2>
           {outline !== null && row !== null && outline.axes.length > 1 && (
@@ -61,24 +66,27 @@ export function PreviewPane({ previewing, onWrite }: Props) {
             </div>
           )}
         </div>
+        <div className="h-0.5" aria-hidden="true">
+          {isSlow && <ProgressLine />}
+        </div>
         <PreviewRemark preview={preview} />
         {row !== null && outline !== null && (
           <div
             data-preview={isStale ? "stale" : row.stage}
             aria-busy={state === "solving"}
-            className={classNames("min-w-0", isOld && "opacity-60")}
+            className={classNames("min-w-0", faded)}
           >
             <PreviewCurves outline={outline} row={row} place={place} onPlace={stand} />
           </div>
         )}
       </div>
       {row !== null && (row.requirements.length > 0 || row.elsewhere.length > 0) && (
-        <div className={classNames(isOld && "opacity-60")}>
+        <div className={faded}>
           <RequirementBars requirements={row.requirements} elsewhere={row.elsewhere} />
         </div>
       )}
       {row !== null && (
-        <div className={classNames("empty:hidden", isOld && "opacity-60")}>
+        <div className={classNames("empty:hidden", faded)}>
           <ReadingRows readings={row.readings} />
         </div>
       )}
@@ -89,13 +97,13 @@ export function PreviewPane({ previewing, onWrite }: Props) {
           place={place}
           onTurn={turn}
           onReset={reset}
-          onWrite={state === "wrong" ? undefined : onWrite}
+          onWrite={isOld ? undefined : onWrite}
         />
       )}
       <SpokenPreview preview={preview} />
     </section>
   );
-}
+});
 
 /** What an outer sweep is set to: what was asked for, else what the row stands at. */
 function settingOf(knob: string, turned: ReadonlyMap<string, number>, row: Row, { axes }: Outline): number {

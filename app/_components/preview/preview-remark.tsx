@@ -14,14 +14,13 @@ export function PreviewRemark({ preview }: { readonly preview: Preview }) {
       </Notice>
     );
   }
-  if (state === "wrong") {
-    const what = counted(errors, "error");
+  if (state === "wrong" && row === null) {
     return (
-      <Notice
-        tone="plain"
-        title={row === null ? "Nothing to preview yet" : "These curves are of the text before its errors"}
-      >
-        <p>The text has {what} to mend, listed below it; the curves follow again as soon as it has none.</p>
+      <Notice tone="plain" title="Nothing to preview yet">
+        <p>
+          The text has {counted(errors, "error")} to mend, listed below it; the curves come as soon as it has
+          none.
+        </p>
       </Notice>
     );
   }

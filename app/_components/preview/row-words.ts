@@ -49,16 +49,21 @@ export function settingInWords({ axes, temperature }: Row): string {
   return [...words, ...(swept ? [] : [formatKnob(ambient, temperature, 6)])].join(", ");
 }
 
-/** "121 points at 25 °C, nominal · solved here in 1.9 ms, not stored". */
-export function rowInWords(row: Row): string {
+/** "121 points at 25 °C, nominal". */
+export function countInWords(row: Row): string {
   const solved = row.axes[0]?.values.length ?? 1;
   const count =
     row.stage === "coarse"
       ? `${formatCount(solved)} of ${counted(row.length, "point")}`
       : counted(solved, "point");
   const setting = settingInWords(row);
-  const time = `${Number(row.taken.toPrecision(row.taken < 10 ? 2 : 3))} ms`;
-  return `${count}${setting === "" ? "" : ` at ${setting}`}, nominal · solved here in ${time}, not stored`;
+  return `${count}${setting === "" ? "" : ` at ${setting}`}, nominal`;
+}
+
+/** "121 points at 25 °C, nominal · solved here in 1.9 ms, not stored". */
+export function rowInWords(row: Row): string {
+  const time = `${Number(row.taken.toPrecision(row.taken < 10 ? 2 : 3))}\u202fms`;
+  return `${countInWords(row)} · solved here in ${time}, not stored`;
 }
 
 /** Why a sweep is not shown whole, and what to do. */

@@ -1,6 +1,6 @@
 "use client";
 
-import { useEffect, useState } from "react";
+import { useCallback, useEffect, useState } from "react";
 import type { TabDoes } from "@/app/_components/editor/editor-handle";
 import { NetlistEditor } from "@/app/_components/editor/netlist-editor";
 import { ProblemList } from "@/app/_components/editor/problem-list";
@@ -57,11 +57,14 @@ export function Sheet({ workspace, netlist, latest, runs, writer, role, mayQueue
     sheet.edited();
     if (editor.current !== null) previewing.setText(editor.current.text());
   };
-  const write = (knobs: readonly WrittenKnob[]) => {
-    const now = editor.current?.text() ?? text;
-    const change = writeKnobs(now, knobs);
-    if (change !== null) editor.current?.mend({ title: "Write the knobs", ...change }, now);
-  };
+  const write = useCallback(
+    (knobs: readonly WrittenKnob[]) => {
+      const now = editor.current?.text() ?? "";
+      const change = writeKnobs(now, knobs);
+      if (change !== null) editor.current?.mend({ title: "Write the knobs", ...change }, now);
+    },
+    [editor],
+  );
 
   return (
     <div className="flex grow flex-col">

@@ -4,6 +4,7 @@ import type { TabDoes } from "@/app/_components/editor/editor-handle";
 import type { Examined } from "@/app/_components/editor/use-examination";
 import type { Previewing } from "@/app/_components/preview/previewing";
 import { proofInWords } from "@/app/_components/preview/row-words";
+import { useLate } from "@/app/_components/preview/use-late";
 import { usePreview } from "@/app/_components/preview/use-preview";
 import { counted } from "@/app/_components/ui/count";
 import { useKeyNames } from "./use-key-names";
@@ -39,7 +40,7 @@ export function StatusLine({ examined, stale, previewing, tab, readOnly }: Props
 function CircuitSize({ previewing }: Pick<Props, "previewing">) {
   const outline = usePreview(previewing, (preview) => preview.outline);
   const row = usePreview(previewing, (preview) => preview.row);
-  const isOld = usePreview(previewing, (preview) => preview.isStale && preview.state !== "solving");
+  const isOld = useLate(usePreview(previewing, ({ isStale, state }) => isStale && state !== "solving"));
   if (outline === null) return null;
   return (
     <>
