@@ -1,4 +1,6 @@
 import { SEVERAL, textOf } from "../outside/several-solutions";
+import { textOf as textOfRandom } from "../random/circuit";
+import { fullCircuit } from "../random/full";
 
 const of = (id: string) => textOf(SEVERAL.find((record) => record.id === id)!);
 
@@ -105,4 +107,16 @@ show l1.v`,
   "law with an arc tangent, on which plain steps run away": `ground -- V1 : voltage 20 V -- in -- R1 : resistor 1 kΩ -- a
 L1 : law { plus = a, minus = ground, amps = 100 mA * atan((L1.v - 5 V) / 1 mV) }
 show a.v`,
+  "breakdown diodes at 100 nA, far below where they are specified": `model z : diode { Is = 3 fA, Rs = 10 Ω, V_breakdown = 5.6 V, I_breakdown = 5 mA, n_breakdown = 3 }
+ground -- V1 : voltage 20 V -- vcc -- R1 : resistor 100 MΩ -- a
+b -- D1 : z -- a
+ground -- D2 : z -- b
+a -- R2 : resistor 100 MΩ -- ground
+show a.v`,
+  "bounded laws that send Newton's method to and fro": textOfRandom(fullCircuit(173)),
+  "followers at their limits, with laws of powers and roots": textOfRandom(fullCircuit(208)),
+  "limited amplifiers before which all but ramps fail": textOfRandom(fullCircuit(768)),
+  "transistors at their knees before an amplifier's limit": textOfRandom(fullCircuit(107)),
+  "what a ramp of shunts alone solves": textOfRandom(fullCircuit(598)),
+  "what a path that turns back alone solves": textOfRandom(fullCircuit(4637)),
 };

@@ -22,7 +22,14 @@ const EXPECTED: Readonly<Record<string, readonly [string, number]>> = {
   "four transistors in a chain of gains, a million millionfold": ["newton", 8],
   "stabiliser of a breakdown diode and a full transistor": ["newton", 8],
   "multiplier cell of full transistors, saturated": ["newton", 10],
-  "law with an arc tangent, on which plain steps run away": ["line search", 127],
+  "law with an arc tangent, on which plain steps run away": ["line search", 60],
+  "breakdown diodes at 100 nA, far below where they are specified": ["newton", 14],
+  "bounded laws that send Newton's method to and fro": ["line search", 62],
+  "followers at their limits, with laws of powers and roots": ["line search", 67],
+  "limited amplifiers before which all but ramps fail": ["source ramp", 560],
+  "transistors at their knees before an amplifier's limit": ["source ramp", 452],
+  "what a ramp of shunts alone solves": ["shunt ramp", 919],
+  "what a path that turns back alone solves": ["homotopy", 2086],
 };
 
 describe("hard circuits from a cold start", () => {
