@@ -42,6 +42,15 @@ describe("what both changed is for the reader to choose", () => {
   });
 });
 
+test("texts of a quarter of a million lines are merged without aligning every line with every other", () => {
+  const base = "\n".repeat(250_000);
+  const theirs = `${"\n".repeat(125_000)}let b = 2 V\n${"\n".repeat(125_000)}`;
+  expect(mergedText(mergeTexts(`${base}let a = 1 V\n`, base, base), NOTHING)).toBe(`${base}let a = 1 V\n`);
+  const parts = mergeTexts(`let a = 1 V\n${base}`, base, theirs);
+  expect(conflictsIn(parts).length).toBe(1);
+  expect(mergedText(parts, new Map([[0, { take: "theirs" }]]))).toBe(theirs);
+});
+
 const TEXT = fc
   .array(fc.constantFrom("a", "b", "c", "d", "e"), { maxLength: 12 })
   .map((lines) => (lines.length === 0 ? "" : `${lines.join("\n")}\n`));

@@ -1,4 +1,4 @@
-import { and, desc, eq, sql } from "drizzle-orm";
+import { desc, eq, sql } from "drizzle-orm";
 import type { z } from "zod";
 import { database } from "@/db/client";
 import { revision } from "@/db/schema/revision";
@@ -9,7 +9,7 @@ import { readInput } from "../read-input";
 import { findNetlist } from "./find-netlist";
 import { type LastRun, lastRunOfRevision } from "./last-run";
 import { revisionsInput } from "./schemas";
-import { summaryOf } from "./summary-of";
+import { Summaries } from "./summaries";
 
 export interface RevisionRow {
   readonly number: number;
@@ -56,13 +56,14 @@ export async function listRevisions(
     .from(revision)
     .innerJoin(user, eq(user.id, revision.authorId))
     .leftJoinLateral(lastRun, sql`true`)
-    .where(and(eq(revision.netlistId, asked.id)))
+    .where(eq(revision.netlistId, asked.id))
     .orderBy(desc(revision.number))
     .limit(size + 1)
     .offset((page - 1) * size);
+  const summaries = new Summaries();
   const rows = found.slice(0, size).map(({ text, savedAt, ...row }, index) => {
     const before = found[index + 1];
-    const changes = before === undefined ? null : summaryOf(before, { text, hash: row.hash });
+    const changes = before === undefined ? null : summaries.of(before, { text, hash: row.hash });
     return { ...row, savedAt: savedAt.toISOString(), changes };
   });
   // Numbers have no gaps and nothing is ever taken away.

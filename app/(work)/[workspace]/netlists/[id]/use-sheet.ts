@@ -47,6 +47,8 @@ export function useSheet({ workspace, netlistId, writer, latest, mayQueue }: Ask
   const [remark, setRemark] = useState<Remark | null>(null);
   const [saving, openSave] = useState(false);
   const [theirs, setTheirs] = useState<Saved | null>(null);
+  /** The message that the reader gave when saving was refused. */
+  const wish = useRef("");
   const changed = text !== saved.text;
   const errors = (examined?.diagnostics ?? []).filter(({ severity }) => severity === "error");
 
@@ -92,6 +94,7 @@ export function useSheet({ workspace, netlistId, writer, latest, mayQueue }: Ask
 
   const save = async (message: string): Promise<void> => {
     if (!mayQueue || busy !== null) return;
+    wish.current = message;
     setRemark(null);
     setWorking("saving");
     const now = settle();
@@ -133,7 +136,11 @@ export function useSheet({ workspace, netlistId, writer, latest, mayQueue }: Ask
   const saveMerged = async (merged: string, leavesOut: boolean): Promise<boolean> => {
     if (theirs === null || busy !== null) return false;
     setWorking("saving");
-    const message = `Merged with revision ${theirs.revision}`;
+    const own = Array.from(wish.current).slice(0, 440).join("");
+    const message =
+      own === ""
+        ? `Merged with revision ${theirs.revision}`
+        : `${own} (merged with revision ${theirs.revision})`;
     const answer = await ask<{ revision: number; hash: string }>(`/api/v1/netlists/${netlistId}/revisions`, {
       base: theirs.revision,
       text: merged,
