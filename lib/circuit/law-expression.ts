@@ -5,7 +5,7 @@ import { evaluateInterval, type Interval, type IntervalScope } from "@/lib/langu
 import { KINDS } from "@/lib/language/kinds";
 import { signalName, signalsOf } from "@/lib/language/signals-of";
 import { branchAt, type Circuit } from "./circuit";
-import { nodesOf, pinCurrent, withoutPower } from "./law-signals";
+import { nodesOf, pinCurrent } from "./law-signals";
 import type { State } from "./state";
 import type { PointValues } from "./values";
 
@@ -47,7 +47,7 @@ export class LawExpression {
   private around: Float64Array = new Float64Array(0);
 
   constructor(law: Typed, circuit: Circuit, elements: ReadonlyMap<string, Element>, values: PointValues) {
-    this.value = withoutPower(law);
+    this.value = law;
     const signals = signalsOf(this.value);
     this.slopes = signals.map((signal) => differentiate(this.value, signal));
     this.sources = signals.map((signal) => sourceOf(signal, circuit, elements));

@@ -1,32 +1,11 @@
 import type { Design, Element, Signal, Typed } from "@/lib/language/ast";
 import { KINDS } from "@/lib/language/kinds";
 import { signalsOf } from "@/lib/language/signals-of";
-import { AMPERE, VOLT } from "@/lib/units/dimension";
 
 /** A current into a pin of an element. */
 export interface PinCurrent {
   readonly element: string;
   readonly pin: string;
-}
-
-/** A law with the power of elements written as voltage times current, so that no signal is left but these two. */
-export function withoutPower(typed: Typed): Typed {
-  if (typed.op === "signal") return powerless(typed, typed.signal);
-  if (typed.op === "negate") return { ...typed, operand: withoutPower(typed.operand) };
-  if (typed.op === "call") return { ...typed, args: typed.args.map(withoutPower) };
-  if ("left" in typed) return { ...typed, left: withoutPower(typed.left), right: withoutPower(typed.right) };
-  return typed;
-}
-
-function powerless(typed: Typed, signal: Signal): Typed {
-  if (signal.of !== "element" || signal.quantity !== "p") return typed;
-  const of = { of: "element", element: signal.element } as const;
-  return {
-    op: "*",
-    left: { op: "signal", signal: { ...of, quantity: "v" }, dimension: VOLT },
-    right: { op: "signal", signal: { ...of, quantity: "i" }, dimension: AMPERE },
-    dimension: typed.dimension,
-  };
 }
 
 /** Every expression within an expression, itself first. */
@@ -53,7 +32,7 @@ export function currentsRead(design: Design): readonly PinCurrent[] {
   const found = new Map<string, PinCurrent>();
   for (const { law } of design.elements) {
     if (law === null) continue;
-    for (const signal of signalsOf(withoutPower(law.value))) {
+    for (const signal of signalsOf(law.value)) {
       if (signal.of === "net") continue;
       const current = pinCurrent(signal, kinds.get(signal.element)!);
       if (current !== null) found.set(`${current.element}.${current.pin}`, current);
