@@ -1,10 +1,10 @@
 "use client";
 
-import { type KeyboardEvent, memo, type ReactNode, useEffect, useMemo, useRef, useState } from "react";
+import { type KeyboardEvent, type ReactNode, useEffect, useMemo, useRef, useState } from "react";
 import type { Connections } from "@/lib/language/symbols/connections";
 import { netsWithPins, sayBox, sayNet, standsFor } from "./chosen";
-import { type Layout, pinIsNamed } from "./layout";
-import { ChipShape, FrameShape, OpenerShape, RailShape, WireShape } from "./shapes";
+import { type Layout, pinIsNamed, type Wire } from "./layout";
+import { ChipShape, FrameShape, OpenerShape, PinName, RailShape, WiresShape } from "./shapes";
 import { type Direction, nextStop, type Stop, stopsOf } from "./stops";
 import { useDragging } from "./use-dragging";
 import { bringIntoView, pan } from "./view-moves";
@@ -86,7 +86,9 @@ export function DrawingView({ connections, layout, chosen, zoom, onChoose, onTur
     return (id: string) => byId.get(id);
   }, [stops]);
   const boxes = useMemo(() => new Map(layout.chips.map(({ box }) => [box.name, box])), [layout]);
-  const isMarked = (name: string) => chosen.includes(name);
+  const marked = new Set(chosen);
+  const isChosenWire = ({ box, net }: Wire) => marked.has(box) || (net !== null && marked.has(net));
+  const isMarked = (name: string) => marked.has(name);
 
   return (
     <div
@@ -142,14 +144,13 @@ export function DrawingView({ connections, layout, chosen, zoom, onChoose, onTur
           );
         })}
         <g className="pointer-events-none">
-          {layout.wires.map((wire) => (
-            <WireShape
-              key={`${wire.box} ${wire.pin}`}
-              wire={wire}
-              isNamed={pinIsNamed(wire, boxes.get(wire.box)!)}
-              isChosen={isMarked(wire.box) || (wire.net !== null && isMarked(wire.net))}
-            />
-          ))}
+          <WiresShape wires={layout.wires.filter((wire) => !isChosenWire(wire))} isChosen={false} />
+          <WiresShape wires={layout.wires.filter(isChosenWire)} isChosen />
+          {layout.wires.map((wire) =>
+            pinIsNamed(wire, boxes.get(wire.box)!) ? (
+              <PinName key={`${wire.box} ${wire.pin}`} wire={wire} />
+            ) : null,
+          )}
         </g>
       </svg>
     </div>
@@ -161,7 +162,7 @@ function middleOf(stop: Stop | undefined): { x: number; y: number } {
 }
 
 /** Something that can be pressed. */
-const Part = memo(function Part({
+function Part({
   stop,
   label,
   isHere,
@@ -196,4 +197,4 @@ const Part = memo(function Part({
       {children}
     </g>
   );
-});
+}

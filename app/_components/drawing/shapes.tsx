@@ -52,38 +52,56 @@ export function ChipShape({
   );
 }
 
-/** A pin's line to its rail, with a dot where it is joined; a thick upright piece of the ground rail, or a ring where it is open. */
-export function WireShape({
-  wire: { pin, side, net, x, to, y },
-  isNamed,
+/**
+ * Lines from pins to their rails, with a dot where they are joined; a thick upright piece of the ground rail, or a ring where a pin
+ * is open. Each sort is one path, since a large drawing has thousands.
+ */
+export function WiresShape({
+  wires,
   isChosen,
 }: {
-  readonly wire: Wire;
-  readonly isNamed: boolean;
+  readonly wires: readonly Wire[];
   readonly isChosen: boolean;
 }) {
-  const inset = side === "left" ? x + 6 : x - 6;
   const line = isChosen ? "stroke-accent" : "stroke-ink";
   const fill = isChosen ? "fill-accent" : "fill-ink";
+  const grounded = wires.filter(({ net }) => net === "ground");
+  const open = wires.filter(({ net }) => net === null);
+  const joined = wires.filter(({ net }) => net !== null && net !== "ground");
+  const dots = joined.map(({ to, y }) => ring(to, y, isChosen ? 4 : 3));
   return (
     <g>
-      <line x1={x} y1={y} x2={to} y2={y} className={line} strokeWidth={isChosen ? 2.25 : 1.1} />
-      {net === "ground" && <rect x={to - 2} y={y - 7} width={4} height={14} className={fill} />}
-      {net === null && (
-        <circle cx={to} cy={y} r={4} className="fill-surface stroke-broken" strokeWidth={1.5} />
-      )}
-      {net !== null && net !== "ground" && <circle cx={to} cy={y} r={isChosen ? 4 : 3} className={fill} />}
-      {isNamed && (
-        <text
-          x={inset}
-          y={y + 3.5}
-          textAnchor={side === "left" ? "start" : "end"}
-          className="fill-quiet text-[11.5px]"
-        >
-          {pin}
-        </text>
-      )}
+      <path
+        d={wires.map(({ x, to, y }) => `M${x} ${y}H${to}`).join("")}
+        className={line}
+        strokeWidth={isChosen ? 2.25 : 1.1}
+      />
+      <path d={grounded.map(({ to, y }) => `M${to - 2} ${y - 7}h4v14h-4z`).join("")} className={fill} />
+      <path d={dots.join("")} className={fill} />
+      <path
+        d={open.map(({ to, y }) => ring(to, y, 4)).join("")}
+        className="fill-surface stroke-broken"
+        strokeWidth={1.5}
+      />
     </g>
+  );
+}
+
+function ring(x: number, y: number, r: number): string {
+  return `M${x - r} ${y}a${r} ${r} 0 1 0 ${2 * r} 0a${r} ${r} 0 1 0 ${-2 * r} 0z`;
+}
+
+/** The name of a pin inside the edge of its chip. */
+export function PinName({ wire: { pin, side, x, y } }: { readonly wire: Wire }) {
+  return (
+    <text
+      x={side === "left" ? x + 6 : x - 6}
+      y={y + 3.5}
+      textAnchor={side === "left" ? "start" : "end"}
+      className="fill-quiet text-[11.5px]"
+    >
+      {pin}
+    </text>
   );
 }
 

@@ -8,6 +8,7 @@ export type TextCommand =
   | "mend here"
   | "rename"
   | "definition"
+  | "places"
   | "comment"
   | "fold all"
   | "unfold all"

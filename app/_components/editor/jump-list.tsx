@@ -147,7 +147,7 @@ function Row({
       style={{ paddingLeft: 12 + depth * 16 }}
     >
       <span className="min-w-0 truncate">
-        <span className="figures font-semibold">{name}</span>{" "}
+        <span className="figures mr-2 font-semibold">{name}</span>
         <span className="figures text-quiet text-xs">{says}</span>
       </span>
       <span className="text-quiet text-xs">line {line}</span>

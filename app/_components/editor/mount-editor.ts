@@ -15,7 +15,8 @@ export interface MountedEvents extends EditorEvents {
   /** Where the cursor rests, and what stands there. */
   readonly onRest: (offset: number, told: Told | null) => void;
   readonly onOutline: () => void;
-  readonly onPlaces: () => void;
+  /** The places of what stands at the cursor are asked for. */
+  readonly onPlaces: (told: Told | null) => void;
   /** The value of a name at the cursor's point of the preview, as it is shown; null where there is none. */
   readonly valueAtCursor: (name: string) => string | null;
 }
@@ -80,11 +81,13 @@ export async function mountEditor(
   const format = () => void editor.getAction("editor.action.formatDocument")?.run();
   const run = (command: TextCommand) => {
     editor.focus();
+    const at = () => model.getOffsetAt(editor.getPosition()!);
     if (command === "tell") void card.showAtCursor();
     else if (command === "mend here") {
       if (!mendHere(editor)) void card.showAtCursor("Nothing to mend here.");
     } else if (command === "rename") void rename(editor);
-    else if (command === "definition") void goToDefinition(editor, model.getOffsetAt(editor.getPosition()!));
+    else if (command === "definition") void goToDefinition(editor, at());
+    else if (command === "places") void tell(at()).then(events.onPlaces);
     else editor.trigger("menu", BUILT_IN[command]!, {});
   };
   addKeys(editor, events, {
@@ -94,7 +97,7 @@ export async function mountEditor(
     definition: () => run("definition"),
     format: readOnly ? null : format,
     outline: events.onOutline,
-    places: events.onPlaces,
+    places: () => run("places"),
   });
   keepCursorInView(editor);
   model.onDidChangeContent(() => events.onEdit());

@@ -70,9 +70,9 @@ export function NetlistEditor({
   };
   const now = () => mounted.current ?? plain;
   const openOutline = () => jumps.openOutline(now().text());
-  const live = useRef({ events, valueAtCursor, openOutline, jumps, told });
+  const live = useRef({ events, valueAtCursor, openOutline, jumps });
   useEffect(() => {
-    live.current = { events, valueAtCursor, openOutline, jumps, told };
+    live.current = { events, valueAtCursor, openOutline, jumps };
   });
 
   // biome-ignore lint/correctness/useExhaustiveDependencies: mounted once; a later text or right comes through the handle
@@ -88,7 +88,7 @@ export function NetlistEditor({
         live.current.events.onCursor?.(offset, what?.paths ?? []);
       },
       onOutline: () => live.current.openOutline(),
-      onPlaces: () => live.current.jumps.openPlaces(now().text(), live.current.told),
+      onPlaces: (what) => live.current.jumps.openPlaces(now().text(), what),
       valueAtCursor: (name) => live.current.valueAtCursor(name),
     };
     import("./mount-editor")
@@ -127,7 +127,6 @@ export function NetlistEditor({
 
   const run = (command: BarCommand) => {
     if (command === "outline") openOutline();
-    else if (command === "places") jumps.openPlaces(now().text(), told);
     else if (command === "format") now().format();
     else mounted.current?.run(command);
   };

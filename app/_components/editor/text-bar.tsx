@@ -9,7 +9,7 @@ import { MessageText } from "./message-text";
 import type { Told } from "./questions";
 
 /** What the menu of the text can do: a command of the editor, or a list that opens over it. */
-export type BarCommand = TextCommand | "outline" | "places" | "format";
+export type BarCommand = TextCommand | "outline" | "format";
 
 type Entry = readonly [command: BarCommand, label: string, keys: string];
 

@@ -33,6 +33,7 @@ export interface Completion {
     | "unit"
     | "function"
     | "constant"
+    | "new net"
     | SymbolMeaning;
   /** One line about it. */
   readonly about: string;
@@ -61,7 +62,17 @@ export function completeAt(
     .filter(({ text: one, spelled }) =>
       [one, spelled ?? one].some((way) => way.toLowerCase().startsWith(begun)),
     )
-    .map((offer) => ({ ...offer, from: standing.from, to: offset }));
+    .map((offer) => ({ ...offer, ...newNet(offer, scope, standing), from: standing.from, to: offset }));
+}
+
+/**
+ * The word that is being written is a net of its own as far as the text says. It stays in the list, so that `n1` can be written where
+ * there is an `n10`.
+ */
+function newNet({ text }: Offer, scope: NameScope, { from }: Standing): Pick<Offer, "what" | "about"> | null {
+  const symbol = scope.find(text);
+  const isNew = symbol?.meaning === "net" && symbol.places.length === 1 && symbol.places[0]!.from === from;
+  return isNew ? { what: "new net", about: "a net that is not named elsewhere yet" } : null;
 }
 
 function offers(standing: Standing, scope: NameScope): Offer[] {

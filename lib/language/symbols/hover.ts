@@ -5,9 +5,11 @@ import type { Design, Typed } from "../ast";
 import type { Checked } from "../checker";
 import { evaluate } from "../evaluate";
 import { isFunctionName } from "../functions";
+import { KINDS } from "../kinds";
 import { tokenize } from "../lexer";
 import { isReductionName, REDUCTIONS } from "../reductions";
 import { Report } from "../report";
+import { isKind } from "../scope";
 import type { Span } from "../span";
 import type { Token } from "../token";
 import { describeSymbol } from "./describe";
@@ -54,6 +56,7 @@ function sayWord({ kind, text }: Token, previous: Token | undefined): string | n
   if (previous?.text === "." && previous.kind === "symbol") {
     return Object.hasOwn(SIGNAL_MEANINGS, text) ? SIGNAL_MEANINGS[text as "v" | "i" | "p"] : null;
   }
+  if (isKind(text) && previous?.text === ":") return `${text}: ${KINDS[text].about}`;
   if (isFunctionName(text)) return FUNCTION_MEANINGS[text];
   if (isReductionName(text)) return REDUCTIONS[text].about;
   const known = [CONSTANT_MEANINGS, STATEMENT_MEANINGS, CLAUSE_MEANINGS].find((all) =>

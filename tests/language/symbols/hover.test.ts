@@ -37,6 +37,8 @@ describe("the text under the pointer", () => {
     ["a statement", place("sweep"), ["turns a knob over a range; the first sweep is the horizontal axis"]],
     ["a reduction", place("highest"), ["the highest value of a trace"]],
     ["a function", place("abs"), ["the size without its sign"]],
+    ["a kind", place("npn"), ["npn: NPN transistor (Ebers–Moll, Gummel–Poon)"]],
+    ["a kind on a path", place("current"), ["current: drives its value from left to right"]],
     [
       "a signal",
       place("ls.v", 0, 3),

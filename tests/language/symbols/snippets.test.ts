@@ -103,6 +103,15 @@ describe("what can follow a value", () => {
     );
   });
 
+  test("a net that is only being written stays in the list, and says that it is new", () => {
+    const text = `${TEXT}x -- R9 : resistor 1 Ω -- l`;
+    const found = completeAt(text, check(text), text.length);
+    expect(found.map((one) => [one.text, one.what])).toEqual([
+      ["ls", "net"],
+      ["l", "new net"],
+    ]);
+  });
+
   test("a unit is found by its spelling without Ω, µ and °", () => {
     expect(offered("let a = 3 kohm")).toEqual(["kΩ"]);
     expect(offered("let a = 3 uA")).toContain("µA");
