@@ -2,15 +2,17 @@ import { compile } from "@/lib/analyses/compile";
 import { solveRange } from "@/lib/analyses/sweep";
 import type { Expected, Traces } from "./case";
 
-/** Solves a netlist text through the whole engine. A diagnostic that is an error, or a point that fails, throws. */
+/** Solves a netlist text through the whole engine. A diagnostic that is an error, or a point that fails or is not proved, throws. */
 export function solveText(text: string): Traces {
   const { job, diagnostics } = compile(text);
   if (job === null) {
     const errors = diagnostics.filter(({ severity }) => severity === "error");
     throw new Error(errors.map(({ code, message }) => `${code} ${message}`).join("\n"));
   }
-  const { traces, failures } = solveRange(job, 0, job.plan.points);
+  const { traces, failures, bound } = solveRange(job, 0, job.plan.points);
   if (failures.length > 0) throw new Error(`These points failed: ${JSON.stringify(failures)}`);
+  const unproved = [...bound].flatMap((radius, point) => (radius > 0 ? [] : [point]));
+  if (unproved.length > 0) throw new Error(`These points are not proved: ${unproved.join(", ")}`);
   return new Map(job.plan.traces.map(({ name }, i) => [name, traces[i]!]));
 }
 
