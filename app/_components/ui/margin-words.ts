@@ -23,11 +23,13 @@ export function worstInWords({ value: { worst }, margin, unit }: RequirementDocu
   return formatQuantity(worst, unit, Math.min(9, Math.max(DIGITS, beyond + 2)));
 }
 
-/** "temperature 40 °C, draw 211"; empty where it is the same everywhere. */
+/** "temperature 40 °C, draw 211"; empty where it is the same everywhere. Branches are counted from 1, as their list counts them. */
 export function placeInWords({ worst }: RequirementDocument): string {
   if (worst === null) return "";
   const at = worst.at.map((knob) => `${knob.knob} ${formatKnob(knob, knob.value, 4)}`);
-  return [...at, ...(worst.draw > 0 ? [`draw ${worst.draw}`] : [])].join(", ");
+  if (worst.draw > 0) at.push(`draw ${worst.draw}`);
+  if (worst.branch !== undefined) at.push(`operating points of branch ${worst.branch + 1}`);
+  return at.join(", ");
 }
 
 /** What a margin bar shows, as a sentence for those who do not see it. */

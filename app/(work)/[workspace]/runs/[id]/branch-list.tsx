@@ -8,7 +8,7 @@ import type { AxisDocument } from "@/lib/analyses/result";
 import { formatQuantity } from "@/lib/units/quantity";
 
 interface Props {
-  readonly branches: readonly (BranchesDocument & { readonly fault?: string })[];
+  readonly branches: readonly BranchesDocument[];
   readonly axes: readonly AxisDocument[];
   /** How far the search is; null where the text asks for one operating point. */
   readonly search: { readonly rows: number; readonly rowsDone: number } | null;

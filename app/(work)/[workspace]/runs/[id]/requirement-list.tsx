@@ -15,15 +15,12 @@ interface Props {
   readonly onPlace: (worst: NonNullable<RequirementDocument["worst"]>, label: string) => void;
 }
 
-/** A requirement of a text that seeks says more: what became of it on the solutions that the sweep does not follow. */
-type Remarked = RequirementDocument & { readonly remark?: string };
-
 const ORDER = { broken: 0, "no data": 1, holds: 2 } as const;
 
 /** What the netlist requires and how it came out, the broken first: verdict, margin bar, worst value with its place, yield. */
 export function RequirementList({ requirements, links, onPlace }: Props) {
   if (requirements.length === 0) return null;
-  const numbered = requirements.map((one, index) => ({ one: one as Remarked, index }));
+  const numbered = requirements.map((one, index) => ({ one, index }));
   numbered.sort((a, b) => ORDER[a.one.verdict] - ORDER[b.one.verdict] || a.index - b.index);
   return (
     <section aria-labelledby="requirements" className="@container min-w-0">

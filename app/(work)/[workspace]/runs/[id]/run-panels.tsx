@@ -12,6 +12,7 @@ import { RequirementList } from "./requirement-list";
 import { RunFacts } from "./run-facts";
 import type { PointAccount, RunState } from "./run-shapes";
 import type { TextLinks } from "./text-links";
+import { UnstablePoints } from "./unstable-points";
 
 interface Props {
   readonly workspace: string;
@@ -33,11 +34,13 @@ export interface Found {
   readonly readings: readonly ReadingDocument[];
   readonly failures: readonly Failure[];
   readonly branches?: readonly BranchesDocument[];
+  readonly unstable?: readonly { readonly from: number; readonly to: number }[];
 }
 
 /** All that stands beside the curves: requirements, readings, the chosen point, operating points, failures, the run itself. */
 export function RunPanels({ workspace, run, found, links, span, chosen, point, cursor, onShow }: Props) {
   const { plan } = run;
+  const ofOneDraw = plan.points / (plan.draws + 1);
   return (
     <div className="grid min-w-0 content-start gap-8 border-t px-4 py-6 md:px-6 lg:border-t-0 lg:border-l">
       <RequirementList
@@ -57,11 +60,12 @@ export function RunPanels({ workspace, run, found, links, span, chosen, point, c
         onPoint={(next) => onShow({ point: next })}
       />
       <BranchList branches={found?.branches ?? []} axes={plan.axes} search={run.search ?? null} />
+      <UnstablePoints ranges={found?.unstable ?? []} axes={plan.axes} ofOneDraw={ofOneDraw} />
       <FailedPoints
         failures={found?.failures ?? []}
         axes={plan.axes}
         draws={plan.draws}
-        ofOneDraw={plan.points / (plan.draws + 1)}
+        ofOneDraw={ofOneDraw}
         onPoint={(next) => onShow({ point: next })}
         onAll={() => onShow({ tab: "numbers", failed: true, page: 1 })}
       />
