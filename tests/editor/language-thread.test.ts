@@ -10,6 +10,7 @@ function threads() {
     one.thread = {
       postMessage: (question) => one.asked.push(question),
       onmessage: null,
+      onerror: null,
       terminate: () => {
         one.ended = true;
       },
@@ -23,7 +24,7 @@ function threads() {
 describe("the thread of the language", () => {
   test("begins with the first question and answers each by its number, in whatever order", async () => {
     const { begun, start } = threads();
-    const language = new Language(start);
+    const language = new Language(start, start);
     language.open();
     expect(begun).toHaveLength(0);
     const first = language.ask("format", "a", {});
@@ -42,7 +43,7 @@ describe("the thread of the language", () => {
 
   test("ends when the last of those who opened it has closed it, and begins anew when it is asked again", () => {
     const { begun, start } = threads();
-    const language = new Language(start);
+    const language = new Language(start, start);
     const [one, other] = [language.open(), language.open()];
     void language.ask("folds", "", {});
     one();
@@ -53,5 +54,23 @@ describe("the thread of the language", () => {
     language.open();
     void language.ask("folds", "", {});
     expect(begun).toHaveLength(2);
+  });
+
+  test("where no thread can be started, or one is lost, what waits is answered otherwise", async () => {
+    const { begun, start } = threads();
+    const refused = new Language(() => {
+      throw new Error("No threads here.");
+    }, start);
+    const first = refused.ask("format", "a", {});
+    begun[0]!.thread.onmessage!({ data: { number: 1, gives: "A" } });
+    expect(await first).toBe("A");
+
+    const lost = new Language(start, start);
+    const second = lost.ask("format", "b", {});
+    begun[1]!.thread.onerror!("gone");
+    expect(begun[1]!.ended).toBe(true);
+    expect(begun[2]!.asked).toEqual(begun[1]!.asked);
+    begun[2]!.thread.onmessage!({ data: { number: 1, gives: "B" } });
+    expect(await second).toBe("B");
   });
 });
