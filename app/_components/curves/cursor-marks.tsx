@@ -20,6 +20,9 @@ interface Props {
   readonly cursor: Cursor;
 }
 
+/** Px that a box with values needs at least. */
+const NARROWEST = 132;
+
 /** The line of the cursor through all storeys, a ring on each line it crosses, and the values of the setting it follows. */
 export function CursorMarks({ set, storeys, horizontal, x, width, cursor }: Props) {
   const { from, to } = horizontal.range;
@@ -58,7 +61,11 @@ export function CursorMarks({ set, storeys, horizontal, x, width, cursor }: Prop
           "absolute border bg-surface px-2.5 py-1.5 text-xs",
           right ? "ml-2.5" : "-translate-x-full -ml-2.5",
         )}
-        style={{ left, top: Math.max(0, boxTop(storeys, cursor) - 8) }}
+        style={{
+          left,
+          top: Math.max(0, boxTop(storeys, cursor) - 8),
+          maxWidth: Math.max(NARROWEST, (right ? width - left : left) - 12),
+        }}
       >
         <p className="figures whitespace-nowrap text-xs">
           {formatKnob(set.axis, set.x[cursor.place]!)}
@@ -66,13 +73,15 @@ export function CursorMarks({ set, storeys, horizontal, x, width, cursor }: Prop
         </p>
         {followed.map(({ storey, line }) => (
           <div key={line.key}>
-            <p className="flex justify-between gap-4 whitespace-nowrap">
-              <span className="text-quiet">{line.trace}</span>
-              <span className="figures text-xs">
-                {valueIn(line.values, cursor.place) === null
-                  ? missing(set, cursor)
-                  : formatValue(valueIn(line.values, cursor.place), line.unit)}
-              </span>
+            <p className="flex justify-between gap-4">
+              <span className="whitespace-nowrap text-quiet">{line.trace}</span>
+              {valueIn(line.values, cursor.place) === null ? (
+                <span className="min-w-0 max-w-64 text-right text-xs">{missing(set, cursor)}</span>
+              ) : (
+                <span className="figures whitespace-nowrap text-xs">
+                  {formatValue(valueIn(line.values, cursor.place), line.unit)}
+                </span>
+              )}
             </p>
             <DrawsHere storey={storey} line={line} place={cursor.place} />
           </div>
@@ -106,7 +115,7 @@ function DrawsHere({
     <>
       {low !== null && high !== null && (
         <p className="figures whitespace-nowrap text-quiet text-xs">
-          {formatQuantity(low, unit, 4)} to {formatQuantity(high, unit, 4)}
+          draws {formatQuantity(low, unit, 4)} to {formatQuantity(high, unit, 4)}
         </p>
       )}
       {value !== null && (

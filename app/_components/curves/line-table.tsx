@@ -28,6 +28,8 @@ interface Props {
 
 /** Settings listed at once, beside those that are drawn. */
 const FEW_ROWS = 30;
+/** More settings than this are not drawn at a stroke. */
+const MOST_DRAWN = 250;
 
 /**
  * The lines of the plot: a column a trace, a row a setting, each with its switch, its sample, and its value at the cursor. What
@@ -50,6 +52,7 @@ export const LineTable = memo(function LineTable(props: Props) {
   const indices = set.families.map(({ index }) => index);
   const many = set.families.length > FEW_ROWS;
   const rows = many ? found(set.families, choice.families, wanted) : set.families;
+  const shown = wanted.trim() === "" ? indices : rows.map(({ index }) => index);
   const isOnly = (one: Isolated) => JSON.stringify(only) === JSON.stringify(one);
   const switchFor = (
     name: string,
@@ -83,14 +86,11 @@ export const LineTable = memo(function LineTable(props: Props) {
               />
             </label>
           )}
-          <Button
-            size="small"
-            onClick={() => onView({ families: many ? rows.map(({ index }) => index) : indices, only: null })}
-          >
-            {many && wanted.trim() !== ""
-              ? "Draw those found"
-              : `Draw all ${formatCount(many ? rows.length : indices.length)}`}
-          </Button>
+          {set.families.length > MOST_DRAWN && wanted.trim() === "" ? null : (
+            <Button size="small" onClick={() => onView({ families: shown, only: null })}>
+              {wanted.trim() === "" ? `Draw all ${formatCount(shown.length)}` : "Draw those found"}
+            </Button>
+          )}
           <Button size="small" tone="quiet" onClick={() => onView({ families: null, only: null })}>
             The usual ones
           </Button>
@@ -157,7 +157,7 @@ export const LineTable = memo(function LineTable(props: Props) {
                   const line = drawn.get(`${trace.name} ${index}`);
                   return (
                     <Cell key={trace.name} figure className="py-1!">
-                      <span className="flex min-h-6 items-center justify-end gap-2.5 text-xs">
+                      <span className="flex min-h-6 min-w-0 items-center justify-end gap-2.5 whitespace-normal text-xs">
                         {value(trace, index)}
                         {line !== undefined && <LineSample style={line.style} />}
                       </span>
