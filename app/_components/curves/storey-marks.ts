@@ -89,7 +89,7 @@ function lines(storey: StoreyView, { x, field, colours }: Frame): Mark[] {
       one({ x, values, mapping, absent }, { ...style, dash: [1.5, 2.5] }, 1.25),
     ),
   ];
-  for (const { values, absent, style } of storey.lines) {
+  for (const { values, absent, style } of storey.swept) {
     const course = { x, values, mapping, absent };
     marks.push(one(course, style, 1.75));
     const rings = markedPoints(course, field, FEW_POINTS).map(({ x: at, y }) => ring(at, y, 2.5));
@@ -126,8 +126,10 @@ function words(storey: StoreyView, { x, ruler, field, colours, labelled }: Frame
         stroke: colours["--ink"],
         width: 1.5,
       }),
-      text(at + 8, down - 6, `fold ${label}`, { face: "figures", fill: colours["--ink"] }),
     );
+    if (label === "") continue;
+    const y = down < field.top + 20 ? down + 18 : down - 6;
+    marks.push(text(at + 8, y, `fold ${label}`, { face: "figures", fill: colours["--ink"] }));
   }
   if (!labelled) return marks;
   for (const { line, at } of lineEnds(storey, ruler, x, null)) {

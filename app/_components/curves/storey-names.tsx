@@ -35,12 +35,14 @@ export function StoreyNames({
               className="absolute size-2 -translate-x-1/2 -translate-y-1/2 rotate-45 border-2 border-ink bg-paper"
               style={{ left, top: down }}
             />
-            <span
-              className="figures absolute whitespace-nowrap bg-paper/80 px-1 text-xs leading-none"
-              style={{ left: left + 8, top: down < 24 ? down + 8 : down - 18 }}
-            >
-              fold {label}
-            </span>
+            {label !== "" && (
+              <span
+                className="figures absolute whitespace-nowrap bg-paper/80 px-1 text-xs leading-none"
+                style={{ left: left + 8, top: down < 24 ? down + 8 : down - 18 }}
+              >
+                fold {label}
+              </span>
+            )}
           </span>
         );
       })}

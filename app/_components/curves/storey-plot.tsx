@@ -78,7 +78,7 @@ interface Frame {
 }
 
 function drawingOf(storey: StoreyView, { horizontal, x, width, colours, followed }: Frame): StoreyDrawing {
-  const { axis, height, lines, worst, bands, branches, allowed } = storey;
+  const { axis, height, swept, worst, bands, branches, allowed } = storey;
   const { mapping } = axis;
   const alpha = (family: number) => (followed === null || followed === family ? 1 : FAINT);
   return {
@@ -92,7 +92,7 @@ function drawingOf(storey: StoreyView, { horizontal, x, width, colours, followed
         ...{ x, values, mapping, absent, alpha: alpha(family), marked: false, stroke: STROKE.worst },
         style: { ...style, dash: WORST_DASH },
       })),
-      ...lines.map(({ values, absent, style, family }) => ({
+      ...swept.map(({ values, absent, style, family }) => ({
         ...{ x, values, mapping, absent, style, alpha: alpha(family), marked: true, stroke: STROKE.nominal },
       })),
     ],

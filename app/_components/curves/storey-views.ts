@@ -51,7 +51,7 @@ export interface BranchView {
   readonly style: LineStyle;
 }
 
-/** Where branches turn back, in places, and the value of the knob there in words. */
+/** Where branches turn back, in places, and the value of the knob there in words; empty where another fold of the storey says it. */
 export interface FoldView {
   readonly across: number;
   readonly value: number;
@@ -59,6 +59,8 @@ export interface FoldView {
 }
 
 export interface StoreyView extends Storey {
+  /** Those of its lines that are drawn as they were swept; others are drawn as branches. */
+  readonly swept: readonly Line[];
   readonly axis: Axis;
   readonly height: number;
   readonly branches: readonly BranchView[];
@@ -91,9 +93,9 @@ export function storeyViews(
     const { lines } = storey;
     const bands = view.band === false ? [] : bandsOf(lines, beside);
     const worst = worstOf(set, lines, beside.worst);
-    const { branches, folds } = branchViews(set, lines, horizontal.mapping);
+    const branched = branchViews(set, lines, horizontal.mapping);
     const columns = [...lines, ...worst].map(({ values }) => values);
-    const beyond = valuesBetween(branches.map(({ values }) => values));
+    const beyond = valuesBetween(branched.branches.map(({ values }) => values));
     const all = widest(valuesBetween(columns), beyond);
     const fit = all === null ? fitOf(1, 0) : fitOf(all.low, all.high);
     const scale = view.y[storey.key] ?? usualScale(set, fit);
@@ -110,7 +112,7 @@ export function storeyViews(
     const ticks = found === null ? [] : ticksOf(range.from, range.to, mapping, Math.floor(height / 40));
     const axis = { mapping, range, ticks, labels: labelsOf(ticks, mapping, storey.unit, false), fit };
     const allowed = own.map((band) => shadeOf(set, band, horizontal.mapping, mapping));
-    return { ...storey, axis, height, bands, worst, allowed, branches, folds };
+    return { ...storey, ...branched, axis, height, bands, worst, allowed };
   });
 }
 
@@ -131,23 +133,27 @@ function worstOf(set: CurveSet, lines: readonly Line[], draw: number | null): Li
   });
 }
 
+/** The branches take the place of the line as it was swept, which jumps from one to another where the first ends. */
 function branchViews(
   set: CurveSet,
   lines: readonly Line[],
   across: Mapping,
-): Pick<StoreyView, "branches" | "folds"> {
+): Pick<StoreyView, "swept" | "branches" | "folds"> {
   const place = (value: number) => placeOf(across, shownValue(set.axis, value)) ?? Number.NaN;
-  const found = lines.map(({ trace, family, style }) => ({
-    family,
-    style,
-    ...(branchLines(set, trace, family) ?? { pieces: [], folds: [] }),
-  }));
+  const found = lines.map((line) => ({ line, own: branchLines(set, line.trace, line.family) }));
+  const named = new Set<string>();
   return {
-    branches: found.flatMap(({ pieces, family, style }) =>
-      pieces.map((piece) => ({ ...piece, x: piece.x.map(place), family, style })),
+    swept: found.flatMap(({ line, own }) => ((own?.pieces.length ?? 0) === 0 ? [line] : [])),
+    branches: found.flatMap(({ line: { family, style }, own }) =>
+      (own?.pieces ?? []).map((piece) => ({ ...piece, x: piece.x.map(place), family, style })),
     ),
-    folds: found.flatMap(({ folds }) =>
-      folds.map(({ x, value }) => ({ across: place(x), value, label: formatKnob(set.axis, x, 4) })),
+    folds: found.flatMap(({ own }) =>
+      (own?.folds ?? []).map(({ x, value }) => {
+        const label = formatKnob(set.axis, x, 4);
+        const isNew = !named.has(label);
+        named.add(label);
+        return { across: place(x), value, label: isNew ? label : "" };
+      }),
     ),
   };
 }
