@@ -52,7 +52,13 @@ export const StoreyPlot = memo(function StoreyPlot(props: Props) {
   );
 
   return (
-    <div className="relative" style={{ height, width }}>
+    <div
+      className="relative"
+      style={{ height, width }}
+      data-bands={storey.bands.length}
+      data-worst={storey.worst.length}
+      data-allowed={storey.allowed.length}
+    >
       <div ref={host} aria-hidden="true" className="absolute inset-0" data-storey={storey.key} />
       <VerticalAxis axis={axis} height={height} />
       <StoreyNames storey={storey} horizontal={horizontal} width={width} />
