@@ -67,8 +67,9 @@ test("a pin, its net, a unit and a whole statement are completed from the keyboa
   await page.keyboard.press("Escape");
   await typeAtEnd(page, "\nlet C = 10 ko");
   await page.keyboard.press("Control+Space");
+  expect(await offered(page)).toEqual(["kΩ"]);
+  await page.keyboard.press("Enter");
   await expectText(page, "let C = 10 kΩ");
-  await page.keyboard.press("Escape");
   await typeAtEnd(page, "\n");
   await page.keyboard.type("swee");
   expect(await offered(page)).toEqual(["sweep"]);

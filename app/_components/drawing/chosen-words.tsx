@@ -20,7 +20,10 @@ export function ChosenWords({ connections, chosen, onChoose }: Props) {
     <NameButton key={label} name={name} label={label} isChosen={false} onChoose={onChoose} />
   );
   return (
-    <div aria-live="polite" className="max-h-28 overflow-y-auto border-t bg-paper px-3 py-1.5 text-sm">
+    <div
+      aria-live="polite"
+      className="max-h-28 shrink-0 overflow-y-auto border-t bg-paper px-3 py-1.5 text-sm"
+    >
       {told.length === 0 && (
         <p className="min-h-7 text-quiet">
           Choose an element or a net to see where the text says it; what the cursor stands on is marked here.

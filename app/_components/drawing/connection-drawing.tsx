@@ -12,10 +12,10 @@ import { DrawingView } from "./drawing-view";
 import { layOutConnections } from "./layout";
 
 /** Zooms that the buttons and keys step through. */
-const ZOOMS = [0.25, 0.35, 0.5, 0.7, 0.85, 1, 1.25, 1.5, 2, 3] as const;
-const USUAL = 5;
+const ZOOMS = [0.06, 0.1, 0.17, 0.25, 0.35, 0.5, 0.7, 0.85, 1, 1.25, 1.5, 2, 3] as const;
+const USUAL = 8;
 /** The smallest in which everything can be read without leaning forward: what a drawing that is too wide begins with. */
-const READABLE = 4;
+const READABLE = 7;
 
 interface Props {
   /** Null while the text is being read. */
@@ -68,7 +68,7 @@ export function ConnectionDrawing({ connections, chosen, onChoose }: Props) {
 
   return (
     <div className="flex h-full min-h-80 flex-col border">
-      <div className="flex flex-wrap items-center gap-1 border-b bg-paper px-2 py-1">
+      <div className="flex shrink-0 flex-wrap items-center gap-1 border-b bg-paper px-2 py-1">
         <Button size="small" tone="quiet" aria-pressed={isList} onClick={() => setIsList(!isList)}>
           {isList ? "Show drawing" : "Show as list"}
         </Button>
