@@ -42,7 +42,7 @@ export function RunPanels({ workspace, run, found, links, span, chosen, point, c
   const { plan } = run;
   const ofOneDraw = plan.points / (plan.draws + 1);
   return (
-    <div className="grid min-w-0 content-start gap-8 border-t px-4 py-6 md:px-6 lg:border-t-0 lg:border-l">
+    <div className="grid min-w-0 grid-cols-[minmax(0,1fr)] content-start gap-8 border-t px-4 py-6 md:px-6 lg:border-t-0 lg:border-l">
       <RequirementList
         requirements={found?.requirements ?? []}
         links={links}

@@ -90,10 +90,10 @@ function PartName({ part, links }: { readonly part: BudgetPart; readonly links: 
       href={links.lineHref(line)}
       prefetch={false}
       title={`Line ${line} of the netlist`}
+      aria-label={`${nameOf(part)}, line ${line} of the netlist`}
       className="inline-flex min-h-6 min-w-0 items-center underline decoration-edge underline-offset-3 hover:decoration-ink"
     >
       {name}
-      <span className="sr-only">, line {line} of the netlist</span>
     </Link>
   );
 }
