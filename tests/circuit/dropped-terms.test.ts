@@ -1,6 +1,7 @@
 import { describe, expect, test } from "vitest";
 import { compile } from "@/lib/analyses/compile";
 import { solveRange } from "@/lib/analyses/sweep";
+import { KINDS, MODEL_KINDS } from "@/lib/language/kinds";
 
 /** Currents over six decades, so that no term hides behind another (invented). */
 const SWEEP = "sweep I_in from 1 nA to 1 mA, 2 per decade\nsweep temperature over 25 °C, 60 °C\n";
@@ -31,6 +32,10 @@ const resistor = (more: string) => `knob I_in = 1 µA
 ground -- I1 : current I_in -- a -- R1 : resistor 7 kΩ${more} -- ground
 ${SWEEP}show a.v`;
 
+const zener = (more: string) => diode(`, V_breakdown = 0.3 V, I_breakdown = 1 µA${more}`);
+const leaky = (more: string) => transistor(`, I_leak_e = 1 pA, I_leak_c = 1 pA${more}`);
+const drifting = (more: string) => amplifier(`, offset_drift = 2 µV/K${more}`);
+
 function bytesOf(text: string): Uint8Array[] {
   const { job, diagnostics } = compile(text);
   if (job === null) throw new Error(diagnostics.map(({ message }) => message).join(" "));
@@ -39,16 +44,58 @@ function bytesOf(text: string): Uint8Array[] {
   return traces.map(({ buffer }) => new Uint8Array(buffer));
 }
 
+/** Values of every parameter that may be left out at which its term counts. */
+const TELLING: readonly (readonly [circuit: (more: string) => string, given: string])[] = [
+  [diode, "Rs = 100 Ω"],
+  [diode, "photocurrent = 1 nA"],
+  [diode, "Eg = 1.12 V"],
+  [diode, "x = 3"],
+  [diode, "Eg = 1.12 V, T0 = 35 °C"],
+  [zener, "n_breakdown = 2"],
+  [diode, "V_breakdown = 0.5 V"],
+  [transistor, "R_base = 1 kΩ"],
+  [transistor, "R_emitter = 10 Ω"],
+  [transistor, "R_collector = 10 Ω"],
+  [transistor, "I_knee_f = 1 mA"],
+  [transistor, "I_leak_e = 1 pA"],
+  [transistor, "I_knee_r = 1 nA"],
+  [transistor, "Va_f = 50 V"],
+  [transistor, "Va_r = 20 V"],
+  [transistor, "I_leak_c = 1 pA"],
+  [transistor, "beta_power = 1.5"],
+  [transistor, "Eg = 1.12 V"],
+  [transistor, "x = 3"],
+  [transistor, "n = 1.01"],
+  [transistor, "beta_power = 1.5, T0 = 35 °C"],
+  [leaky, "n_leak_e = 1.9"],
+  [leaky, "n_leak_c = 1.9"],
+  [amplifier, "offset_drift = 1 µV/K"],
+  [drifting, "T0 = 35 °C"],
+  [amplifier, "out_low = -1 mV"],
+  [amplifier, "bias_offset = 1 pA"],
+  [amplifier, "R_out = 100 Ω"],
+  [amplifier, "out_high = 5 V"],
+];
+
 describe("a term at its neutral limit is, byte for byte, the term left out", () => {
   test.each([
     [diode, "Rs = 0 Ω"],
     [diode, "photocurrent = 0 A"],
+    [diode, "Eg = 0 V"],
+    [diode, "x = 0"],
+    [diode, "T0 = 25 °C"],
+    [zener, "n_breakdown = 1"],
     [diode, "V_breakdown = 1e6 V, I_breakdown = 1 mA"],
     [transistor, "R_base = 0 Ω, R_emitter = 0 Ω, R_collector = 0 Ω"],
     [transistor, "I_knee_f = 1e300 A, I_knee_r = 1e300 A"],
     [transistor, "Va_f = 1e300 V, Va_r = 1e300 V"],
     [transistor, "I_leak_e = 1e-200 A, I_leak_c = 1e-200 A"],
+    [transistor, "beta_power = 0"],
+    [transistor, "Eg = 0 V, x = 0"],
+    [transistor, "T0 = 25 °C, n = 1"],
+    [leaky, "n_leak_e = 2, n_leak_c = 2"],
     [amplifier, "offset_drift = 0 V/K"],
+    [drifting, "T0 = 25 °C"],
     [amplifier, "bias_offset = 0 A"],
     [amplifier, "R_out = 0 Ω"],
     [
@@ -59,21 +106,20 @@ describe("a term at its neutral limit is, byte for byte, the term left out", () 
     expect(bytesOf(text(`, ${neutral}`))).toEqual(bytesOf(text("")));
   });
 
-  test.each([
-    [diode, "Rs = 100 Ω"],
-    [diode, "photocurrent = 1 nA"],
-    [diode, "V_breakdown = 0.5 V"],
-    [transistor, "R_base = 1 kΩ"],
-    [transistor, "R_emitter = 10 Ω"],
-    [transistor, "R_collector = 10 Ω"],
-    [transistor, "I_knee_f = 1 mA"],
-    [transistor, "I_leak_e = 1 pA"],
-    [amplifier, "offset_drift = 1 µV/K"],
-    [amplifier, "bias_offset = 1 pA"],
-    [amplifier, "R_out = 100 Ω"],
-    [amplifier, "out_high = 5 V"],
-  ])("and is not where it counts, %#: $1", (text, given) => {
+  test.each(TELLING)("and is not where it counts, %#: $1", (text, given) => {
     expect(bytesOf(text(`, ${given}`))).not.toEqual(bytesOf(text("")));
+  });
+
+  test("and every parameter of a model that may be left out is among them", () => {
+    const tried = new Set(
+      TELLING.flatMap(([, given]) => [...given.matchAll(/(\w+) =/g)].map(([, name]) => name)),
+    );
+    // What belongs to another term is given with it in the circuits above.
+    const within = ["beta_f", "beta_r", "I_breakdown", "gain", "offset", "bias"];
+    const optional = MODEL_KINDS.flatMap((kind) =>
+      Object.entries(KINDS[kind].parameters).flatMap(([name, { absent }]) => (absent === null ? [] : [name])),
+    );
+    expect(optional.filter((name) => !tried.has(name) && !within.includes(name))).toEqual([]);
   });
 
   test("a terminal resistance that a knob leads to 0 Ω and through it is solved there too", () => {
