@@ -11,6 +11,8 @@ import type { TextLinks } from "./text-links";
 interface Props {
   readonly requirements: readonly RequirementDocument[];
   readonly links: TextLinks;
+  /** The run is not whole: what is judged is what it has. */
+  readonly partly: "so far" | "of a part of the run" | null;
   /** Puts cursor and draw to the worst place of a requirement. */
   readonly onPlace: (worst: NonNullable<RequirementDocument["worst"]>, label: string) => void;
 }
@@ -18,13 +20,13 @@ interface Props {
 const ORDER = { broken: 0, "no data": 1, holds: 2 } as const;
 
 /** What the netlist requires and how it came out, the broken first: verdict, margin bar, worst value with its place, yield. */
-export function RequirementList({ requirements, links, onPlace }: Props) {
+export function RequirementList({ requirements, links, partly, onPlace }: Props) {
   if (requirements.length === 0) return null;
   const numbered = requirements.map((one, index) => ({ one, index }));
   numbered.sort((a, b) => ORDER[a.one.verdict] - ORDER[b.one.verdict] || a.index - b.index);
   return (
     <section aria-labelledby="requirements" className="@container min-w-0">
-      <Headline requirements={requirements} />
+      <Headline requirements={requirements} partly={partly} />
       <ul className="mt-2 border-t">
         {numbered.map(({ one, index }) => (
           <li key={index} className="grid gap-1 border-b py-2.5" data-requirement={one.verdict}>
@@ -73,7 +75,7 @@ export function RequirementList({ requirements, links, onPlace }: Props) {
 }
 
 /** "One requirement is broken, 3 hold", in the colour of the worst. */
-function Headline({ requirements }: Pick<Props, "requirements">) {
+function Headline({ requirements, partly }: Pick<Props, "requirements" | "partly">) {
   const count = (verdict: RequirementDocument["verdict"]) =>
     requirements.filter((one) => one.verdict === verdict).length;
   const [broken, unknown, holds] = [count("broken"), count("no data"), count("holds")];
@@ -89,7 +91,7 @@ function Headline({ requirements }: Pick<Props, "requirements">) {
     <h2 id="requirements" className="text-base">
       <span className={ink}>{first}</span>
       <span className="font-normal text-quiet text-sm">
-        {[between, rest].filter(Boolean).map((words) => ` · ${words}`)}
+        {[between, rest, partly].filter(Boolean).map((words) => ` · ${words}`)}
       </span>
     </h2>
   );
@@ -108,7 +110,9 @@ function Remainder({ one }: { readonly one: RequirementDocument }) {
     parts.push(verdict === "no data" ? "a point that it needs is not solved" : "without a margin");
   else if (margin < 0) parts.push(`missed by ${formatQuantity(-margin, unit, 3)}`);
   else parts.push(`margin ${formatQuantity(margin, unit, 3)}`);
-  if (found !== undefined) {
+  if (found !== undefined && verdict === "no data") {
+    parts.push(`known to hold in ${formatCount(found.holds)} of ${formatCount(found.of)} draws`);
+  } else if (found !== undefined) {
     const needed = share == null ? "" : `, ${percent(share)} needed`;
     parts.push(
       `${formatCount(found.holds)} of ${formatCount(found.of)} draws hold${needed}: ${percent(found.low)} to ${percent(found.high)} of parts (95\u202f% confidence)`,

@@ -10,7 +10,7 @@ import { PointPanel } from "./point-panel";
 import { ReadingList } from "./reading-list";
 import { RequirementList } from "./requirement-list";
 import { RunFacts } from "./run-facts";
-import type { PointAccount, RunState } from "./run-shapes";
+import { isLive, type PointAccount, type RunState } from "./run-shapes";
 import type { TextLinks } from "./text-links";
 import { UnstablePoints } from "./unstable-points";
 
@@ -46,6 +46,7 @@ export function RunPanels({ workspace, run, found, links, span, chosen, point, c
       <RequirementList
         requirements={found?.requirements ?? []}
         links={links}
+        partly={partly(run)}
         onPlace={(worst, label) =>
           onShow({ point: pointOf(run, worst), worst: worst.draw > 0 ? label : null, tab: "curves" })
         }
@@ -73,6 +74,11 @@ export function RunPanels({ workspace, run, found, links, span, chosen, point, c
       <Cautions span={span} />
     </div>
   );
+}
+
+function partly({ status, pointsDone, points }: RunState): "so far" | "of a part of the run" | null {
+  if (isLive(status)) return "so far";
+  return pointsDone < points ? "of a part of the run" : null;
 }
 
 /** The flat point of a worst place; the first of its sweep where it has no place on the first knob. */
