@@ -1,4 +1,4 @@
-import type { Browser, Page } from "playwright-core";
+import type { Browser, BrowserContextOptions, Page } from "playwright-core";
 import { afterAll, beforeAll, expect, test } from "vitest";
 import {
   expectAccessible,
@@ -12,8 +12,14 @@ import {
 import { editorOf, makeNetlist, openSheet, PATIENT, typeAtEnd, writeText } from "./sheet-steps";
 
 let browser: Browser;
+/** Erik is signed in once for all tests. */
+let signedIn: BrowserContextOptions;
 beforeAll(async () => {
   browser = await launchBrowser();
+  const { page } = await openPage(browser);
+  await signIn(page, "erik");
+  signedIn = { storageState: await page.context().storageState() };
+  await page.context().close();
 });
 afterAll(() => browser?.close());
 
@@ -37,8 +43,7 @@ require top <= 12 V as "limit"
 
 /** An engineer on the sheet of a netlist of their own, with its preview solved. */
 async function onSheet(text: string) {
-  const opened = await openPage(browser);
-  await signIn(opened.page, "erik");
+  const opened = await openPage(browser, signedIn);
   const id = await makeNetlist(opened.page, text);
   await openSheet(opened.page, id);
   await solved(opened.page);
@@ -220,24 +225,22 @@ test("the preview equals the queued run bit for bit", async () => {
 });
 
 test("the sheet with its preview is accessible and fits its window, light and dark", async () => {
-  const { page, id } = await onSheet(ohmText("Look"));
-  const storageState = await page.context().storageState();
+  const { page } = await onSheet(ohmText("Look"));
+  await knob(page, "R_load").focus();
+  await page.keyboard.press("ArrowRight");
+  await page.getByRole("button", { name: /^Write R_load/u }).waitFor();
   for (const [width, height] of [
     [360, 740],
     [1024, 768],
     [1920, 1080],
   ] as const) {
     for (const colorScheme of ["light", "dark"] as const) {
-      const view = await openPage(browser, { viewport: { width, height }, colorScheme, storageState });
-      await openSheet(view.page, id);
-      await solved(view.page);
-      await knob(view.page, "R_load").focus();
-      await view.page.keyboard.press("ArrowRight");
-      await view.page.getByRole("button", { name: /^Write R_load/u }).waitFor();
-      await expectAccessible(view.page);
-      await expectNoSidewaysScroll(view.page);
-      await picture(view.page, `preview-${width}-${colorScheme}`);
-      await view.page.context().close();
+      await page.setViewportSize({ width, height });
+      await page.emulateMedia({ colorScheme });
+      await solved(page);
+      await expectAccessible(page);
+      await expectNoSidewaysScroll(page);
+      await picture(page, `preview-${width}-${colorScheme}`);
     }
   }
 });
