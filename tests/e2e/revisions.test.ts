@@ -358,7 +358,7 @@ test("history, revision and comparison are accessible and fit their window, ligh
     expect(view.faults).toEqual([]);
     await view.page.context().close();
   }
-});
+}, 240_000);
 
 test("there is no page of a revision or of a pair that does not exist", async () => {
   const page = await signedIn("erik");

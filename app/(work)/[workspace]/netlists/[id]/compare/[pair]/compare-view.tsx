@@ -69,7 +69,7 @@ export function CompareView({ workspace, netlist, before, after, changes, search
           <div className="grid min-w-0 content-start gap-8">
             <section aria-labelledby="verdicts">
               <h2 id="verdicts" className="caption">
-                Verdicts
+                Verdicts{" "}
                 {runs !== null && (
                   <span className="ml-2 font-normal">
                     of run {runs.old.number} and run {runs.now.number}
@@ -102,8 +102,7 @@ export function CompareView({ workspace, netlist, before, after, changes, search
         {runs !== null && (
           <section aria-labelledby="curves" className="min-w-0">
             <h2 id="curves" className="caption">
-              Curves
-              <span className="ml-2 font-normal">nominal, of the latest finished run of each</span>
+              Curves <span className="ml-2 font-normal">nominal, of the latest finished run of each</span>
             </h2>
             <div className="mt-3">
               <CurveSection
