@@ -89,11 +89,11 @@ export interface Index {
 /** An eigenvalue of J⁻¹·D below this part of the largest is one of the 0 that algebraic rows give. */
 const ALGEBRAIC = 1e-9;
 
-/** `masses` are the entries of D, as row, column and value; without them no modes are looked at, and `isStable` is true. */
+/** `masses` are the entries of D, as row, column and value. */
 export function indexOf(
   shape: SparseShape,
   values: Float64Array,
-  masses: readonly { readonly row: number; readonly column: number; readonly mass: number }[] | null,
+  masses: readonly { readonly row: number; readonly column: number; readonly mass: number }[],
 ): Index | null {
   const scaled = scaledMatrix(shape, values);
   if (scaled === null) return null;
@@ -103,12 +103,17 @@ export function indexOf(
   const upper = factors.upperTriangularMatrix;
   let sign: 1 | -1 = permutationSign(factors.pivotPermutationVector);
   for (let i = 0; i < shape.size; i++) if (upper.get(i, i) < 0) sign = sign === 1 ? -1 : 1;
-  if (masses === null) return { sign, isStable: true };
   const mass = Matrix.zeros(shape.size, shape.size);
   for (const { row, column, mass: one } of masses) mass.set(row, column, one * scaled.scales[row]!);
-  const { realEigenvalues } = new EigenvalueDecomposition(factors.solve(mass));
+  return { sign, isStable: decays(factors.solve(mass).to2DArray()) };
+}
+
+/** Whether every eigenvalue of a matrix J⁻¹·D, but those of rounding, has a positive real part. */
+export function decays(matrix: number[][]): boolean {
+  if (matrix.length === 0) return true;
+  const { realEigenvalues } = new EigenvalueDecomposition(new Matrix(matrix));
   const largest = Math.max(...realEigenvalues.map(Math.abs));
-  return { sign, isStable: realEigenvalues.every((real) => real >= -ALGEBRAIC * largest) };
+  return realEigenvalues.every((real) => real >= -ALGEBRAIC * largest);
 }
 
 /** −1 to the count of its cycles of even length. */

@@ -41,22 +41,22 @@ export class IndexWatch {
     if (this.held === null) return false;
     const here = signOf(this.linear.atHand);
     if (here === 0 || here === this.sound) return false;
-    const sound = this.heldSign(this.held);
+    const sound = heldSign(this.system, this.held, this.step);
     if (sound === here) this.sound = here;
     return sound === -here;
   }
+}
 
-  private heldSign(held: Aided): Sign {
-    const { jacobian, residual } = this.system.state;
-    held.conductance = HELD;
-    const isSolved = held.solve(jacobian, residual, this.step);
-    held.conductance = 0;
-    return isSolved ? signOf(held.atHand) : 0;
-  }
+/** The sign of det J with every net held and amplifiers slow, at the Jacobian at hand; 0 where it is not had. */
+export function heldSign({ state }: System, held: Aided, step: Float64Array): Sign {
+  held.conductance = HELD;
+  const isSolved = held.solve(state.jacobian, state.residual, step);
+  held.conductance = 0;
+  return isSolved ? signOf(held.atHand) : 0;
 }
 
 /** The sign of a determinant by its factors: that of the pivots and of the order in which they were taken. 0 without factors. */
-function signOf(factors: Factors | null): Sign {
+export function signOf(factors: Factors | null): Sign {
   if (factors === null) return 0;
   const { plan, values } = factors;
   let sign: Sign = plan.parity;

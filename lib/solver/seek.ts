@@ -2,24 +2,19 @@ import type { System } from "@/lib/circuit/system";
 import { Aided } from "./aided";
 import { Certificate } from "./certificate";
 import { deflated } from "./deflation";
-import { type Index, indexOf } from "./dense";
-import type { SparseShape } from "./elimination";
 import { Ladder } from "./ladder";
 import { LinearSolver } from "./linear";
 import { type Bench, newton } from "./newton";
 import { partner } from "./partner";
 import { tied } from "./shunt-ramp";
+import { type Judged, Stability } from "./stability";
 
 /** One operating point of a circuit at one setting. */
-export interface OperatingPoint {
+export interface OperatingPoint extends Judged {
   /** In the order of the circuit's unknowns. */
   readonly x: Float64Array;
   /** V; NaN where not proved. */
   readonly bound: number;
-  /** Whether it would stay, with a capacitor of one size at every net and amplifiers that are slow beside them. */
-  readonly isStable: boolean;
-  /** Sign of det J against that of the circuit with every net held; 0 where J is singular. */
-  readonly index: 1 | 0 | -1;
 }
 
 export interface Sought {
@@ -41,11 +36,6 @@ const NEWTON_STEPS = 40;
 const BESIDE = 0.2;
 /** V: solutions that are closer, and not proved apart, are one. */
 const SAME = 1e-7;
-/** F at every net, beside 1 s of every amplifier. */
-const CAPACITANCE = 1e-6;
-/** S: holds every net, so that the sign of det J is that of a circuit with one solution. */
-const HELD = 1e6;
-
 /** Looks for up to `most` operating points at the setting to which the system is turned, by deflation and scattered starts. */
 export function seek(system: System, most: number): Sought {
   return new Seeker(system).seek(most);
@@ -54,7 +44,6 @@ export function seek(system: System, most: number): Sought {
 /** Looks for the operating points of a system, at one setting after another; what it finds depends on the setting alone. */
 export class Seeker {
   private readonly bench: Bench;
-  private readonly shape: SparseShape;
   private readonly linear: LinearSolver;
   private readonly aided: Aided;
   private readonly ladder: Ladder;
@@ -62,8 +51,7 @@ export class Seeker {
   private points: OperatingPoint[] = [];
   private readonly spent = { iterations: 0 };
   private readonly nets: number;
-  /** D of D·dx/dt = −F: F at the nets, s at the amplifiers. */
-  private readonly masses: { row: number; column: number; mass: number }[];
+  private readonly stability: Stability;
   private seed = 1;
   /** V: what scattered starts span; more where solutions do. */
   private low = -1;
@@ -73,12 +61,7 @@ export class Seeker {
     const { circuit, pattern, state } = system;
     this.aided = new Aided(system);
     this.ladder = new Ladder(system, false);
-    this.shape = {
-      size: circuit.size,
-      rows: Int32Array.from(pattern.rows),
-      columns: Int32Array.from(pattern.columns),
-    };
-    this.linear = new LinearSolver(this.shape, state.jacobian);
+    this.linear = new LinearSolver(pattern, state.jacobian);
     this.bench = {
       system,
       linear: this.linear,
@@ -86,9 +69,7 @@ export class Seeker {
       assemble: () => system.assemble(),
     };
     this.certificate = new Certificate(system, this.linear);
-    this.masses = this.aided.aids.map(({ row, column, sign }) => {
-      return { row, column, mass: sign > 0 ? CAPACITANCE : -1 };
-    });
+    this.stability = new Stability(system, this.linear, this.aided);
     this.nets = circuit.unknowns.filter(({ unit }) => unit === "V").length;
   }
 
@@ -120,7 +101,7 @@ export class Seeker {
     this.spent.iterations += attempt.iterations;
     if (attempt.kind !== "converged") return null;
     this.certificate.reset();
-    return { x: state.x.slice(0, -1), bound: this.certificate.prove(), ...this.judge() };
+    return { x: state.x.slice(0, -1), bound: this.certificate.prove(), ...this.stability.judge() };
   }
 
   /** Whether two points are one: within what is proved of both, or very close where nothing is. */
@@ -187,17 +168,6 @@ export class Seeker {
     }
     this.points.push(found);
     return true;
-  }
-
-  private judge(): Pick<OperatingPoint, "isStable" | "index"> {
-    const { aided, shape } = this;
-    const { state } = this.system;
-    const here = indexOf(shape, state.jacobian, this.masses);
-    aided.conductance = HELD;
-    const held: Index | null = indexOf(aided.shape, aided.aidedValues(state.jacobian), null);
-    aided.conductance = 0;
-    if (here === null || held === null) return { isStable: false, index: 0 };
-    return { isStable: here.isStable && here.sign === held.sign, index: here.sign === held.sign ? 1 : -1 };
   }
 
   private pick(): OperatingPoint | undefined {
