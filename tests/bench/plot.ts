@@ -36,12 +36,15 @@ function watch(): void {
     requestAnimationFrame(() => requestAnimationFrame(() => (state.shown ||= performance.now())));
   }).observe(document, { subtree: true, childList: true, attributeFilter: ["data-drawn"] });
   let before = 0;
-  const frame = (now: number) => {
-    if (state.watching && before > 0) state.frames.push(now - before);
-    before = state.watching ? now : 0;
-    requestAnimationFrame(frame);
+  // A method, since a bundler gives names to functions by a helper that the page does not have.
+  const clock = {
+    tick(now: number) {
+      if (state.watching && before > 0) state.frames.push(now - before);
+      before = state.watching ? now : 0;
+      requestAnimationFrame(clock.tick);
+    },
   };
-  requestAnimationFrame(frame);
+  requestAnimationFrame(clock.tick);
 }
 
 async function post<T>(page: Page, url: string, body: unknown): Promise<T> {
@@ -85,7 +88,10 @@ async function open(page: Page, path: string): Promise<number> {
 async function pan(page: Page): Promise<number[]> {
   for (let i = 0; i < 2; i++) await page.getByRole("button", { name: "Closer" }).click();
   await page.waitForTimeout(800);
-  const box = (await page.locator("[data-ruler]").boundingBox())!;
+  const ruler = page.locator("[data-ruler]");
+  await ruler.scrollIntoViewIfNeeded();
+  const box = (await ruler.boundingBox())!;
+  const before = await ruler.innerHTML();
   const at = { x: box.x + box.width / 2, y: box.y + 20 };
   await page.mouse.move(at.x, at.y);
   await page.mouse.down();
@@ -101,6 +107,7 @@ async function pan(page: Page): Promise<number[]> {
     window.plotBench!.watching = false;
     return window.plotBench!.frames;
   });
+  if ((await ruler.innerHTML()) === before) throw new Error("The view did not move with the ruler.");
   await page.mouse.up();
   return frames;
 }

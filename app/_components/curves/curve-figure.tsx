@@ -64,7 +64,7 @@ export function CurveFigure(props: Props) {
   const [cursor, setCursor] = useState<Cursor | null>(null);
   const [followed, setFollowed] = useState<number | null>(null);
   const spoken = useDeferredValue(cursor);
-  const narrow = brief || frameWidth < NARROW;
+  const narrow = brief ? "brief" : frameWidth < NARROW;
 
   const choice = useMemo(() => choiceOf(set, view), [set, view]);
   const drawn = useMemo(() => drawnChoice(set, view), [set, view]);
@@ -169,8 +169,8 @@ export function CurveFigure(props: Props) {
       {!brief && below}
       {brief && (
         <details data-print="never">
-          <summary className="inline-flex min-h-6 items-center text-quiet text-xs">
-            Axes, zoom, lines and numbers of these curves
+          <summary className="w-fit text-quiet text-xs leading-6">
+            Axes, zoom and numbers of these curves
           </summary>
           <div className="mt-2 grid gap-4">
             {controls}

@@ -43,7 +43,7 @@ function DrawsControl({ set, view, onView }: Omit<Props, "plot">) {
   const worst = worstDraws(set);
   const shown = shownWorst(set, view);
   return (
-    <div className="flex flex-wrap items-center gap-x-3 gap-y-2 text-xs">
+    <div className="flex min-w-0 flex-wrap items-center gap-x-3 gap-y-2 text-xs">
       <label className="inline-flex min-h-6 cursor-pointer items-center gap-2">
         <input
           type="checkbox"
@@ -54,12 +54,12 @@ function DrawsControl({ set, view, onView }: Omit<Props, "plot">) {
         band: 5 to 95{"\u202f"}% of the draws
       </label>
       {worst.length > 0 && (
-        <label className="inline-flex items-center gap-2">
+        <label className="flex min-w-0 flex-wrap items-center gap-x-2 gap-y-1">
           <span className="text-quiet">fine dots: worst draw of</span>
           <select
             value={shown?.label ?? ""}
             onChange={({ target }) => onView({ worst: target.value })}
-            className="min-h-6 max-w-56 rounded-[2px] border border-edge bg-surface px-1.5 text-ink"
+            className="min-h-6 min-w-0 max-w-full rounded-[2px] border border-edge bg-surface px-1.5 text-ink"
           >
             {worst.map(({ label, draw }, i) => (
               // biome-ignore lint/suspicious/noArrayIndexKey: two may have one label; the order never changes

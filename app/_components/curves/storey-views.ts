@@ -81,7 +81,7 @@ export function storeyViews(
   set: CurveSet,
   view: CurveView,
   horizontal: Ruler,
-  narrow: boolean,
+  narrow: boolean | "brief",
   beside: Beside = NOTHING_BESIDE,
   x: Float64Array = placesOf(set, horizontal.mapping),
 ): StoreyView[] {
@@ -203,7 +203,8 @@ function shadeOf(set: CurveSet, band: AllowedBand, across: Mapping, upward: Mapp
   };
 }
 
-function heightOf(storeys: number, index: number, narrow: boolean): number {
+function heightOf(storeys: number, index: number, narrow: boolean | "brief"): number {
+  if (narrow === "brief") return storeys === 1 ? 264 : index === 0 ? 200 : 112;
   if (storeys === 1) return narrow ? 280 : 368;
   if (index === 0) return narrow ? 220 : 272;
   return narrow ? 150 : 176;
