@@ -23,6 +23,10 @@ interface Props {
   readonly onWrite?: ((knobs: readonly WrittenKnob[]) => void) | undefined;
 }
 
+/** On a window that is high enough the curves stay in view while what is below them is scrolled: a knob is turned with the eye on them. */
+const STAYS =
+  "z-30 pb-1 has-[details[open]]:static [@media(min-width:64rem)_and_(min-height:52rem)]:sticky top-0";
+
 /** What a run of the text would show, solved in the browser as one types: one sweep, nominal, kept nowhere. */
 export const PreviewPane = memo(function PreviewPane({ previewing, onWrite }: Props) {
   const preview = usePreview(previewing, (all) => all);
@@ -44,7 +48,7 @@ export const PreviewPane = memo(function PreviewPane({ previewing, onWrite }: Pr
   const faded = isOld ? "opacity-60" : undefined;
   return (
     <section aria-labelledby="preview" className="grid min-w-0 gap-6">
-      <div className="grid min-w-0 gap-2">
+      <div className={classNames("grid min-w-0 gap-1 bg-paper", STAYS)}>
         <div className="flex min-h-7 flex-wrap items-center justify-between gap-x-6 gap-y-1">
           <h2 id="preview" className="caption">
             Preview{" "}
