@@ -1,10 +1,12 @@
 "use client";
 
+import dynamic from "next/dynamic";
 import { useState } from "react";
 import { Button } from "@/app/_components/ui/button";
 import { Dialog } from "@/app/_components/ui/dialog";
-import { MergeDialog } from "./merge-dialog";
 import type { SheetState } from "./use-sheet";
+
+const MergeDialog = dynamic(() => import("./merge-dialog").then((found) => found.MergeDialog));
 
 /** Somebody saved a revision meanwhile: nothing of either text is lost, whichever way the reader takes. */
 export function ConflictDialog({ sheet }: { readonly sheet: SheetState }) {
