@@ -101,6 +101,8 @@ describe("what the tolerances do", () => {
     expect(await spread.textContent()).toMatch(/R[12] R_sum, R[12] R_sum cost the same, and the most/);
     const line = budget.getByRole("link", { name: /R1 R_sum, line 3 of the netlist/ });
     expect(await line.getAttribute("href")).toMatch(/revisions\/1#L3$/);
+    const sheet = spread.getByRole("link", { name: /Go to R[12] R_sum in the sheet/ });
+    expect(await sheet.getAttribute("href")).toMatch(/netlists\/[0-9a-f-]+#L3$/);
     expect(await spread.textContent()).toMatch(/worst case, every tolerance at its end.+ to .+mV/);
   });
 

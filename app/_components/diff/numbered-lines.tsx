@@ -1,14 +1,18 @@
 import { linesOf } from "../editor/plain-lines";
 import { InkedLine } from "./inked-line";
 
-/** A text to read, in its colours, each line with its number. */
+/** A text to read, in its colours, each line with its number: the address of a page that shows one may end in #L12 for a line. */
 export function NumberedLines({ text, label }: { readonly text: string; readonly label: string }) {
   const lines = linesOf(text.endsWith("\n") ? text.slice(0, -1) : text);
   return (
     <section aria-label={label} className="border bg-surface">
       <ol className="py-2 font-(family-name:--font-figures) text-[0.8125rem] leading-6">
         {lines.map(({ at, number, pieces }) => (
-          <li key={at} className="grid min-h-6 grid-cols-[44px_minmax(0,1fr)] pr-3">
+          <li
+            key={at}
+            id={`L${number}`}
+            className="grid min-h-6 scroll-mt-24 grid-cols-[44px_minmax(0,1fr)] pr-3 target:bg-wash target:outline target:outline-accent"
+          >
             <span aria-hidden="true" className="select-none pr-3 text-right text-quiet">
               {number}
             </span>

@@ -17,6 +17,7 @@ import { SheetHeader } from "./sheet-header";
 import { SheetRemarks } from "./sheet-remarks";
 import { type CursorAt, SheetSide } from "./sheet-side";
 import { StatusLine } from "./status-line";
+import { useAskedLine } from "./use-asked-line";
 import { useSheet } from "./use-sheet";
 
 interface Props {
@@ -34,6 +35,7 @@ interface Props {
 export function Sheet({ workspace, netlist, latest, runs, writer, role, mayQueue }: Props) {
   const sheet = useSheet({ workspace, netlistId: netlist.id, writer, latest, mayQueue });
   const { editor, examined, text } = sheet;
+  useAskedLine(editor);
   const previewing = usePreviewing(latest.text);
   const [tab, setTab] = useState<TabDoes>("indents");
   const [cursor, setCursor] = useState<CursorAt | null>(null);

@@ -42,6 +42,7 @@ export function BudgetBars({ budget, links }: Props) {
         )}{" "}
         the standard deviation falls from {show(sigma)} to{" "}
         {show(sigma * Math.sqrt(1 - 0.75 * (1 + equal.length) * first.share))}.
+        <SheetLink part={first} links={links} />
       </p>
       <ol className="grid gap-1.5" aria-label="Parts by their share of the variance">
         {named.map((part) => (
@@ -78,6 +79,21 @@ export function BudgetBars({ budget, links }: Props) {
         <Sum name="worst case, every tolerance at its end">{spanInWords(low, high, unit, 5)}</Sum>
       </dl>
     </div>
+  );
+}
+
+/** The way to mend the part, where the sheet still has the text of the run. */
+function SheetLink({ part, links }: { readonly part: BudgetPart; readonly links: TextLinks }) {
+  const line = links.toleranceLines[`${part.part} ${part.parameter}`];
+  const href = line === undefined ? null : links.sheetHref(line);
+  if (href === null) return null;
+  return (
+    <>
+      {" "}
+      <Link className="link" href={href} prefetch={false}>
+        Go to {nameOf(part)} in the sheet
+      </Link>
+    </>
   );
 }
 
