@@ -1,17 +1,21 @@
 import { exponentials } from "@/lib/devices/exponential";
-import { AssemblyCode } from "./assembly-code";
+import type { LoopWriter } from "./code/loops";
 import { type Compiled, EXPONENTIALS } from "./code/machine";
 import type { StraightCode } from "./code/straight";
 import type { Frame } from "./frame";
 import type { Part } from "./part";
-import { addCurrents } from "./parts/current";
-import { addDiodes, askDiodes, settleDiodes } from "./parts/diode-table";
-import { addGains } from "./parts/gain";
-import { addOpamps } from "./parts/opamp";
-import { addResistors } from "./parts/resistor";
-import { addTerminals } from "./parts/terminal";
+import { addCurrents, writeCurrent } from "./parts/current";
+import { addDiodes, askDiode, askDiodes, settleDiodes, writeDiode } from "./parts/diode-table";
+import { addGains, writeGain } from "./parts/gain";
+import { addOpamps, writeOpamp } from "./parts/opamp";
+import { addResistors, writeResistor } from "./parts/resistor";
+import { addTerminals, writeTerminal } from "./parts/terminal";
+import { askTransistor, writeTransistor } from "./parts/transistor-code";
 import { addTransistors, askTransistors, riseTransistors, settleTransistors } from "./parts/transistor-table";
-import { addVoltages } from "./parts/voltage";
+import { addVoltages, writeVoltage } from "./parts/voltage";
+import type { RowWriter } from "./row-writer";
+import { StraightWriter } from "./straight-writer";
+import type { Table } from "./table";
 
 /** Statements of generated code at most; beyond, loops over tables are as fast, and ready at once. */
 const MOST_STRAIGHT = 8000;
@@ -95,18 +99,71 @@ export class Assembly {
 
   /** Writes what `runAtRest` does with plain parts as straight code; false where it is too long. */
   write(code: StraightCode): boolean {
-    const { tables } = this.frame;
-    const { resistors, voltages, currents, opamps, gains, terminals, diodes, transistors } = tables;
-    const writer = new AssemblyCode(code, this.frame);
-    for (const { owners } of [diodes, transistors]) for (const part of owners) part.writeAsk(writer);
+    const writer = new StraightWriter(code, this.frame);
+    const { kinds } = this;
+    for (const { table, exponent, each, ask } of kinds) {
+      for (let row = 0; ask !== null && row < table.count; row++) {
+        writer.turnTo(table, row, exponent + each * row);
+        ask(writer);
+      }
+    }
     code.call(EXPONENTIALS);
-    for (const { owners } of [resistors, voltages, currents, opamps, gains, terminals, diodes, transistors]) {
-      for (const part of owners) {
-        part.write(writer);
+    for (const { table, exponent, each, write } of kinds) {
+      for (let row = 0; row < table.count; row++) {
+        writer.turnTo(table, row, exponent + each * row);
+        write(writer, row);
         if (code.length > MOST_STRAIGHT) return false;
       }
     }
     writer.end();
     return true;
   }
+
+  /** Writes the same as loops. `integers`: the bytes at which the numbers of each kind's table begin. */
+  writeLoops(writer: LoopWriter, integers: readonly number[]): void {
+    for (const [k, { table, exponent, each, ask }] of this.kinds.entries()) {
+      if (ask !== null) writer.over(table, exponent, each, integers[k]!, ask);
+    }
+    writer.call(EXPONENTIALS);
+    writer.clear();
+    for (const [k, { table, exponent, each, write }] of this.kinds.entries()) {
+      writer.over(table, exponent, each, integers[k]!, (row) => write(row, null));
+    }
+  }
+
+  /** The kinds of plain parts in the order in which they are added. */
+  get kinds(): readonly Kind[] {
+    const { resistors, voltages, currents, opamps, gains, terminals, diodes, transistors } =
+      this.frame.tables;
+    const kind = (table: Table, write: Kind["write"]): Kind => ({
+      table,
+      exponent: 0,
+      each: 0,
+      ask: null,
+      write,
+    });
+    const opamp = (row: RowWriter, k: number | null): void => {
+      const owner = k === null ? null : opamps.owners[k]!;
+      writeOpamp(row, owner?.hasBias ?? true, owner?.hasOhms ?? true);
+    };
+    return [
+      kind(resistors, writeResistor),
+      kind(voltages, writeVoltage),
+      kind(currents, writeCurrent),
+      kind(opamps, opamp),
+      kind(gains, writeGain),
+      kind(terminals, writeTerminal),
+      { table: diodes, exponent: 0, each: 1, ask: askDiode, write: writeDiode },
+      { table: transistors, exponent: diodes.count, each: 2, ask: askTransistor, write: writeTransistor },
+    ];
+  }
+}
+
+/** A kind of plain parts: its table, its exponents, and what is written for a row; row null for all rows in a loop. */
+interface Kind {
+  readonly table: Table;
+  readonly exponent: number;
+  readonly each: number;
+  readonly ask: ((code: RowWriter) => void) | null;
+  readonly write: (code: RowWriter, row: number | null) => void;
 }

@@ -73,6 +73,7 @@ export class Ladder {
       step: this.stepper.step,
       assemble: (isAtRest) => (isAtRest ? system.assembleAtRest() : system.assemble()),
       solve: (isAtRest) => this.stepper.solve(isAtRest),
+      advance: () => this.stepper.advance(),
     };
     this.certificate = new Certificate(system, this.linear);
     this.reported = rungs.includes(REPORTED) ? REPORTED : rungs.at(-1);

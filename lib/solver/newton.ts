@@ -30,6 +30,8 @@ export interface Bench {
   readonly assemble: (isAtRest: boolean) => void;
   /** Assembles and solves for the step, where the two are one; false where the matrix is singular or not finite. */
   readonly solve?: (isAtRest: boolean) => boolean;
+  /** Adds the step to the unknowns, where that has a way of its own. */
+  readonly advance?: () => void;
 }
 
 /**
@@ -51,11 +53,16 @@ export function newton(bench: Bench, exact: boolean, most: number): Attempt {
       if (polished >= 0) {
         return { kind: "converged", iterations: iterations + polished, wasSingular: false };
       }
-    } else advance(state, step);
+    } else go(bench);
     isExact = system.follow();
     if (!isExact) tame(state);
   }
   return { kind: "iteration limit", iterations: most, wasSingular: false };
+}
+
+function go({ advance: ownAdvance, system, step }: Bench): void {
+  if (ownAdvance === undefined) advance(system.state, step);
+  else ownAdvance();
 }
 
 function solved(bench: Bench, isAtRest: boolean): boolean {
@@ -79,11 +86,12 @@ function tame({ x, low }: State): void {
  * Takes the accepted step, and more with the Jacobian at hand until one is so short that it is the last. Leaves the system assembled at the
  * unknowns. The count of further steps weighed, or −1 where the unknowns then fail the test that they passed.
  */
-export function polish({ system, linear, step, assemble }: Bench): number {
+export function polish(bench: Bench): number {
+  const { system, linear, step, assemble } = bench;
   const { state, circuit } = system;
   for (let more = 0; ; more++) {
     const ends = more === POLISHING || isLast(circuit, state, step);
-    advance(state, step);
+    go(bench);
     system.settleFurther();
     assemble(true);
     if (ends) return balances(circuit.size, state) ? more : -1;

@@ -80,6 +80,8 @@ export class Seeker {
     this.seed = 1;
     [this.low, this.high] = [-1, 1];
     this.ladder.reset();
+    this.linear.reset();
+    this.aided.reset();
     const outcome = this.ladder.solve(false);
     this.spent.iterations += outcome.iterations;
     if (outcome.kind === "converged") this.keep();

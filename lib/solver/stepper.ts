@@ -1,3 +1,4 @@
+import { advance } from "@/lib/circuit/state";
 import type { System } from "@/lib/circuit/system";
 import type { SparseShape } from "./elimination";
 import { GeneratedStep } from "./kernel/generated";
@@ -43,5 +44,11 @@ export class Stepper {
     else system.assemble();
     const { jacobian, residual } = system.state;
     return linear.solve(jacobian, residual, step);
+  }
+
+  /** Adds the step to the unknowns. */
+  advance(): void {
+    if (this.generated === null) advance(this.system.state, this.step);
+    else this.generated.advance();
   }
 }

@@ -61,11 +61,11 @@ export class Steps {
 
   /** One whole Newton step from point k: assembly, factors, solution, new unknowns. */
   take(k: number): void {
-    const { system, stepper } = this;
+    const { stepper } = this;
     stepper.prepare();
     this.goTo(k);
     stepper.solve(true);
-    advance(system.state, stepper.step);
+    stepper.advance();
   }
 
   /** The same with a dense pivoted LU of the package ml-matrix, built afresh. */

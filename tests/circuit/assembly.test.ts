@@ -13,14 +13,17 @@ function systemOf(text: string): System {
 }
 
 /** The same with generated code, and the linear solver that has it. */
-function generatedOf(text: string): { system: System; generated: GeneratedStep; linear: LinearSolver } {
+function generatedOf(
+  text: string,
+  isStraight: boolean,
+): { system: System; generated: GeneratedStep; linear: LinearSolver } {
   const system = systemOf(text);
   system.startCold();
   system.assemble();
   const { pattern, state } = system;
   const shape = { size: pattern.size, rows: pattern.rows, columns: pattern.columns, units: pattern.units };
   const linear = new LinearSolver(shape, state.jacobian);
-  const generated = GeneratedStep.of(system, shape, linear.samplePlan!);
+  const generated = GeneratedStep.of(system, shape, linear.samplePlan!, isStraight);
   if (generated === null) throw new Error("No code was generated.");
   linear.adopt(generated);
   return { system, generated, linear };
@@ -46,7 +49,11 @@ function move({ state }: System, turn: number): void {
 
 /** Compares generated code, loops that know that they are at rest, and loops that do not, then the steps. */
 function expectSameBytes(text: string, prepare: (system: System) => void = () => undefined): void {
-  const { system, generated, linear } = generatedOf(text);
+  for (const isStraight of [true, false]) compare(text, isStraight, prepare);
+}
+
+function compare(text: string, isStraight: boolean, prepare: (system: System) => void): void {
+  const { system, generated, linear } = generatedOf(text, isStraight);
   const listed = systemOf(text);
   const plain = systemOf(text);
   listed.startCold();
@@ -69,6 +76,9 @@ function expectSameBytes(text: string, prepare: (system: System) => void = () =>
     const isSolved = apart.solve(jacobian, residual, step);
     expect(linear.take(generated)).toBe(isSolved);
     expect(left(system)).toBe(left(plain));
+    if (isSolved) expect(bits(generated.step)).toBe(bits(step));
+    apart.solveAgain(residual, step);
+    linear.solveAgain(system.state.residual, generated.step);
     if (isSolved) expect(bits(generated.step)).toBe(bits(step));
     apart.reset();
     linear.reset();

@@ -27,7 +27,7 @@ const EXPECTED: Readonly<Record<string, readonly [string, number]>> = {
   "bounded laws that send Newton's method to and fro": ["line search", 62],
   "followers at their limits, with laws of powers and roots": ["line search", 67],
   "limited amplifiers before which all but ramps fail": ["source ramp", 560],
-  "transistors at their knees before an amplifier's limit": ["source ramp", 452],
+  "transistors at their knees before an amplifier's limit": ["newton", 13],
   "what a ramp of shunts alone solves": ["shunt ramp", 919],
   "what a path that turns back alone solves": ["homotopy", 2086],
 };

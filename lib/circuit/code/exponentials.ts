@@ -1,6 +1,20 @@
 import { EXPONENTIAL as E } from "@/lib/devices/exponential";
 import { bytesOf } from "./expression";
-import { EMPTY, type FunctionBody, get, integer, load, number, OPCODE, set, store, TRUNCATE } from "./module";
+import {
+  EMPTY,
+  type FunctionBody,
+  get,
+  INTEGER,
+  integer,
+  type Kind,
+  load,
+  NUMBER,
+  number,
+  OPCODE,
+  set,
+  store,
+  TRUNCATE,
+} from "./module";
 
 /** Where the exponents and what is made of them stand in the memory, and the tables of `lib/devices/exponential`; in numbers. */
 export interface ExponentialPlaces {
@@ -15,6 +29,7 @@ export interface ExponentialPlaces {
 /** Variables by name, the integers first: y the exponent, n, r, q as in `exponential.ts`, h and k high and low of the power, s its scale. */
 const [BYTE, INDEX] = [1, 2];
 const LOCALS = ["y", "n", "r", "q", "h", "k", "s", "m", "e"];
+const VARIABLES: readonly Kind[] = [INTEGER, INTEGER, ...LOCALS.map((): Kind => NUMBER)];
 const localOf = (name: string): number => 3 + LOCALS.indexOf(name[0]!);
 const give = (name: string, expression: string): number[] => [
   ...bytesOf(expression, localOf),
@@ -71,13 +86,12 @@ export function exponentialsBody(places: ExponentialPlaces): FunctionBody {
   return {
     name: "exponentials",
     bytes: places.count === 0 ? integer(1) : bytes,
-    integers: 2,
-    numbers: LOCALS.length,
+    variables: VARIABLES,
   };
 }
 
 /** e^y − 1 for |y| ≤ 40 or not a number. */
 export function expm1Body(places: Pick<ExponentialPlaces, "powers" | "scales">): FunctionBody {
   const bytes = [...get(0), ...set(localOf("y0")), ...powers(places), ...bytesOf("m0-1+e0", localOf)];
-  return { name: "expm1", bytes, integers: 2, numbers: LOCALS.length, givesNumber: true };
+  return { name: "expm1", bytes, variables: VARIABLES, givesNumber: true };
 }

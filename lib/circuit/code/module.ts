@@ -9,6 +9,7 @@ export const OPCODE = {
   drop: 0x1a,
   get: 0x20,
   set: 0x21,
+  loadInteger: 0x28,
   load: 0x2b,
   store: 0x39,
   integer: 0x41,
@@ -18,8 +19,12 @@ export const OPCODE = {
   lessOrEqual: 0x65,
   greaterOrEqual: 0x66,
   equal: 0x61,
+  integerEqual: 0x46,
+  integerNotEqual: 0x47,
   integerLess: 0x49,
+  integerLessSigned: 0x48,
   integerAdd: 0x6a,
+  integerSubtract: 0x6b,
   and: 0x71,
   shiftLeft: 0x74,
   shiftRight: 0x75,
@@ -35,21 +40,24 @@ export const OPCODE = {
 export const EMPTY = 0x40;
 /** From a number to the integer below, saturating. */
 export const TRUNCATE = [0xfc, 0x02] as const;
+/** Copies, and fills, a stretch of the memory: where to, from where or with which byte, how many bytes. */
+export const COPY = [0xfc, 0x0a, 0, 0] as const;
+export const FILL = [0xfc, 0x0b, 0] as const;
 
 /** Kinds of values, and of blocks that leave one. */
 export const NUMBER = 0x7c;
-const INTEGER = 0x7f;
+export const INTEGER = 0x7f;
+export type Kind = typeof NUMBER | typeof INTEGER;
 const BYTES_PER_PAGE = 65_536;
 
 /**
- * A function of one number that gives an integer, or a number: what it does, without its end, and the variables that it needs. The
- * first variable is the parameter; integers follow, then numbers.
+ * A function of one number that gives an integer, or a number: what it does, without its end, and the kinds of the variables that it
+ * needs. Variable 0 is the parameter.
  */
 export interface FunctionBody {
   readonly name: string;
   readonly bytes: readonly number[];
-  readonly integers: number;
-  readonly numbers: number;
+  readonly variables: readonly Kind[];
   readonly givesNumber?: boolean;
 }
 
@@ -82,6 +90,11 @@ export function number(value: number): number[] {
 /** Eight bytes on from the address on the stack. */
 export function load(byte: number): number[] {
   return [OPCODE.load, 3, ...unsigned(byte)];
+}
+
+/** The integer, four bytes, on from the address on the stack. */
+export function loadInteger(byte: number): number[] {
+  return [OPCODE.loadInteger, 2, ...unsigned(byte)];
 }
 
 export function store(byte: number): number[] {
@@ -121,8 +134,17 @@ export function pagesFor(bytes: number): number {
   return Math.ceil(bytes / BYTES_PER_PAGE);
 }
 
-function sized({ bytes, numbers, integers }: FunctionBody): Bytes {
-  const locals = [2, ...unsigned(integers), INTEGER, ...unsigned(numbers), NUMBER];
+function sized({ bytes, variables }: FunctionBody): Bytes {
+  const groups: [number, Kind][] = [];
+  for (const kind of variables) {
+    const last = groups.at(-1);
+    if (last?.[1] === kind) last[0] += 1;
+    else groups.push([1, kind]);
+  }
+  const locals = [
+    ...unsigned(groups.length),
+    ...groups.flatMap(([count, kind]) => [...unsigned(count), kind]),
+  ];
   return joined([unsigned(locals.length + bytes.length + 1), locals, bytes, [OPCODE.end]]);
 }
 

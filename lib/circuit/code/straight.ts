@@ -1,5 +1,17 @@
 import { bytesOf, variablesOf } from "./expression";
-import { type FunctionBody, get, integer, load, OPCODE, set, store, unsigned } from "./module";
+import {
+  type FunctionBody,
+  get,
+  INTEGER,
+  integer,
+  type Kind,
+  load,
+  NUMBER,
+  OPCODE,
+  set,
+  store,
+  unsigned,
+} from "./module";
 
 /** What a statement leaves in a variable; `name` null for a demand. */
 interface Statement {
@@ -109,7 +121,8 @@ class Compilation {
       else this.keep(name, k);
     }
     this.bytes.push(...get(MET));
-    return { name: this.name, bytes: this.bytes, integers: 1, numbers: this.numbers };
+    const variables: Kind[] = [INTEGER, ...Array.from({ length: this.numbers }, () => NUMBER as Kind)];
+    return { name: this.name, bytes: this.bytes, variables };
   }
 
   private bring(variable: string): void {

@@ -1,7 +1,7 @@
 import { drivenCurrent } from "@/lib/devices/current";
 import type { Element } from "@/lib/language/ast";
-import type { AssemblyCode } from "../assembly-code";
 import { type Bench, moversOf, netAt, type Part } from "../part";
+import type { RowWriter } from "../row-writer";
 import { flow, type State } from "../state";
 import type { Table } from "../table";
 import type { PointValues } from "../values";
@@ -11,6 +11,11 @@ export function addCurrents({ numbers, figures }: Table, from: number, to: numbe
   for (let k = from, n = 2 * from; k < to; k++, n += 2) {
     flow(state, numbers[n]!, numbers[n + 1]!, drivenCurrent(figures[k]!, state.share));
   }
+}
+
+/** Writes what the loop does with one row. */
+export function writeCurrent(code: RowWriter): void {
+  code.flow(0, 1, code.let(`${code.figure(0)}*share`));
 }
 
 export class CurrentPart implements Part {
@@ -41,10 +46,6 @@ export class CurrentPart implements Part {
 
   addTo(state: State): void {
     addCurrents(this.table, this.row, this.row + 1, state);
-  }
-
-  write(code: AssemblyCode): void {
-    code.flow(this.left, this.right, code.let(`${code.figure(this.table, this.row, 0)}*share`));
   }
 
   current(pin: string, state: State): number {

@@ -1,5 +1,6 @@
 import type { CurrentAndSlope } from "@/lib/devices/diode";
 import { FREE, type JunctionPart } from "../part";
+import type { RowWriter } from "../row-writer";
 import type { State } from "../state";
 import type { Table } from "../table";
 
@@ -73,9 +74,9 @@ export function addDiodes(
     scale[a]! += size;
     scale[c]! += size;
     jacobian[numbers[n + 2]!]! += g;
+    jacobian[numbers[n + 5]!]! += g;
     jacobian[numbers[n + 3]!]! -= g;
     jacobian[numbers[n + 4]!]! -= g;
-    jacobian[numbers[n + 5]!]! += g;
   }
 }
 
@@ -101,4 +102,21 @@ export function followDiodes(table: Table<JunctionPart>, state: State): boolean 
     else if (!owners[k]!.follow(state)) isExact = false;
   }
   return isExact;
+}
+
+/** Writes that a diode is linearised at its actual voltage, and asks for its exponential. */
+export function askDiode(code: RowWriter): void {
+  code.give(V, code.across(0, 1));
+  code.ask(0, `${code.figure(V)}/${code.figure(ETA)}`);
+}
+
+/** Writes what `addDiodes` does with one row at rest. */
+export function writeDiode(code: RowWriter): void {
+  code.give(I, `${code.figure(IS)}*${code.less(0)}`);
+  code.give(G, `${code.figure(IS)}/${code.figure(ETA)}*${code.whole(0)}`);
+  code.flow(0, 1, code.figure(I));
+  code.slope(2, "+", code.figure(G));
+  code.slope(5, "+", code.figure(G));
+  code.slope(3, "-", code.figure(G));
+  code.slope(4, "-", code.figure(G));
 }

@@ -4,7 +4,6 @@ import { breakdownDoubt, breakdownSpread, diodeDoubt, diodeSpread } from "@/lib/
 import { junctionStep } from "@/lib/devices/junction-step";
 import type { Element, Model } from "@/lib/language/ast";
 import { ROOM_TEMPERATURE, thermalVoltage } from "@/lib/units/constants";
-import type { AssemblyCode } from "../assembly-code";
 import {
   type Bench,
   FREE,
@@ -20,7 +19,7 @@ import {
 import { across, flow, type State } from "../state";
 import type { Table } from "../table";
 import { type PointValues, TEMPERATURE } from "../values";
-import { DIODE_FIGURES, ETA, G, I, IS, TabledLaw, V } from "./diode-table";
+import { DIODE_FIGURES, TabledLaw, V } from "./diode-table";
 
 const FURTHER_TERMS = ["Rs", "V_breakdown", "photocurrent"];
 
@@ -134,28 +133,6 @@ export class DiodePart implements JunctionPart, Proof {
     jacobian[places[1]]! -= law.g;
     jacobian[places[2]]! -= law.g;
     jacobian[places[3]]! += law.g;
-  }
-
-  /** Writes that a plain one is linearised at its actual voltage, and asks for its exponential. */
-  writeAsk(code: AssemblyCode): void {
-    const { anode, cathode, table, row } = this;
-    const v = code.figure(table, row, V);
-    code.set(v, code.across(anode, cathode));
-    code.ask(row, `${v}/${code.figure(table, row, ETA)}`);
-  }
-
-  write(code: AssemblyCode): void {
-    const { anode, cathode, places, table, row } = this;
-    const [Is, eta] = [code.figure(table, row, IS), code.figure(table, row, ETA)];
-    const [i, g] = [code.figure(table, row, I), code.figure(table, row, G)];
-    const { less, whole } = code.exponentials(row);
-    code.set(i, `${Is}*${less}`);
-    code.set(g, `${Is}/${eta}*${whole}`);
-    code.flow(anode, cathode, i);
-    code.slope(places[0], "+", g);
-    code.slope(places[1], "-", g);
-    code.slope(places[2], "-", g);
-    code.slope(places[3], "+", g);
   }
 
   /** The voltage over junction and Rs, V. */

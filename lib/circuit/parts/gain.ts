@@ -1,7 +1,7 @@
 import { gainMismatch } from "@/lib/devices/gain";
 import type { Element } from "@/lib/language/ast";
-import type { AssemblyCode } from "../assembly-code";
 import { type Bench, figureOf, moversOf, netAt, type Part } from "../part";
+import { GROUND, type RowWriter } from "../row-writer";
 import { across, flow, type State } from "../state";
 import type { Table } from "../table";
 import type { PointValues } from "../values";
@@ -21,6 +21,14 @@ export function addGains({ numbers, figures }: Table, from: number, to: number, 
   }
 }
 
+/** Writes what the loop does with one row. */
+export function writeGain(code: RowWriter): void {
+  code.flow(2, GROUND, code.let(code.unknown(3)));
+  const vout = code.let(code.across(2, GROUND));
+  const asked = code.let(`${code.figure(0)}*${code.across(0, 1)}`);
+  code.law(3, `${vout}-${asked}`, `abs(${vout})+abs(${asked})`);
+}
+
 export class GainPart implements Part {
   readonly element: Element;
   readonly proof = "linear";
@@ -28,7 +36,6 @@ export class GainPart implements Part {
   private readonly plus: number;
   private readonly minus: number;
   private readonly out: number;
-  private readonly ground: number;
   /** Number of the current into its output, and of its law. */
   private readonly branch: number;
   private readonly places: readonly [number, number, number, number];
@@ -44,7 +51,6 @@ export class GainPart implements Part {
     this.plus = netAt(bench, "plus");
     this.minus = netAt(bench, "minus");
     this.out = netAt(bench, "out");
-    this.ground = circuit.size;
     this.branch = branch;
     this.places = [
       pattern.place(this.out, branch),
@@ -70,14 +76,6 @@ export class GainPart implements Part {
 
   addTo(state: State): void {
     addGains(this.table, this.row, this.row + 1, state);
-  }
-
-  write(code: AssemblyCode): void {
-    const { plus, minus, out, ground, branch } = this;
-    code.flow(out, ground, code.let(code.unknown(branch)));
-    const vout = code.let(code.across(out, ground));
-    const asked = code.let(`${code.figure(this.table, this.row, 0)}*${code.across(plus, minus)}`);
-    code.law(branch, `${vout}-${asked}`, `abs(${vout})+abs(${asked})`);
   }
 
   current(pin: string, state: State): number {

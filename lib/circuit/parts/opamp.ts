@@ -1,8 +1,8 @@
 import { biasInto, offsetAt, opampMismatch } from "@/lib/devices/opamp";
 import type { Element, Model } from "@/lib/language/ast";
 import { ROOM_TEMPERATURE } from "@/lib/units/constants";
-import type { AssemblyCode } from "../assembly-code";
 import { type Bench, figureOf, moversOf, netAt, type Part, type Proof } from "../part";
+import { GROUND, type RowWriter } from "../row-writer";
 import { across, flow, type State } from "../state";
 import type { Table } from "../table";
 import { type PointValues, TEMPERATURE } from "../values";
@@ -31,6 +31,27 @@ export function addOpamps({ numbers, figures }: Table, from: number, to: number,
     residual[branch] = opampMismatch(difference, offset, behind, inverse);
     scale[branch] = Math.abs(difference) + Math.abs(offset) + around * inverse;
   }
+}
+
+/** Writes what the loop does with one row; terms that are 0 at every point may be left out. */
+export function writeOpamp(code: RowWriter, hasBias: boolean, hasOhms: boolean): void {
+  const figure = (column: number) => code.figure(column);
+  code.flow(2, GROUND, code.let(code.unknown(3)));
+  if (hasBias) {
+    code.flow(0, GROUND, code.let(`${figure(INTO_PLUS)}*share`));
+    code.flow(1, GROUND, code.let(`${figure(INTO_MINUS)}*share`));
+  }
+  const difference = code.let(code.across(0, 1));
+  const offset = code.let(`${figure(OFFSET)}*share`);
+  const drop = hasOhms ? `-${figure(OHMS)}*${code.high(3)}` : "";
+  const around = hasOhms ? `+${figure(OHMS)}*abs(${code.high(3)})` : "";
+  const behind = code.let(code.across(2, GROUND) + drop);
+  const inverse = figure(INVERSE_GAIN);
+  code.law(
+    3,
+    `${difference}+${offset}-${behind}*${inverse}`,
+    `abs(${difference})+abs(${offset})+(abs(${code.high(2)})${around})*${inverse}`,
+  );
 }
 
 /** An amplifier; without output limits a plain one. */
@@ -102,6 +123,14 @@ export class OpampPart implements Part {
     return this.row !== null;
   }
 
+  get hasBias(): boolean {
+    return this.model.params.has("bias") || this.model.params.has("bias_offset");
+  }
+
+  get hasOhms(): boolean {
+    return this.model.params.has("R_out");
+  }
+
   addConstantSlopes(jacobian: Float64Array): void {
     const [intoOut, byPlus, byMinus, byOut, byCurrent] = this.places;
     jacobian[intoOut]! += 1;
@@ -113,30 +142,6 @@ export class OpampPart implements Part {
 
   addTo(state: State): void {
     if (this.row !== null) addOpamps(this.table, this.row, this.row + 1, state);
-  }
-
-  write(code: AssemblyCode): void {
-    const { plus, minus, out, ground, branch } = this;
-    const { params } = this.model;
-    const figure = (column: number) => code.figure(this.table, this.row!, column);
-    code.flow(out, ground, code.let(code.unknown(branch)));
-    if (params.has("bias") || params.has("bias_offset")) {
-      code.flow(plus, ground, code.let(`${figure(INTO_PLUS)}*share`));
-      code.flow(minus, ground, code.let(`${figure(INTO_MINUS)}*share`));
-    }
-    const difference = code.let(code.across(plus, minus));
-    const offset = code.let(`${figure(OFFSET)}*share`);
-    const hasOhms = params.has("R_out");
-    const drop = hasOhms ? `-${figure(OHMS)}*${code.high(branch)}` : "";
-    const around = hasOhms ? `+${figure(OHMS)}*abs(${code.high(branch)})` : "";
-    const behind = code.let(code.across(out, ground) + drop);
-    const inverse = figure(INVERSE_GAIN);
-    const scale = `(abs(${code.high(out)})${around})*${inverse}`;
-    code.law(
-      branch,
-      `${difference}+${offset}-${behind}*${inverse}`,
-      `abs(${difference})+abs(${offset})+${scale}`,
-    );
   }
 
   /** Output and bias currents. */

@@ -1,8 +1,8 @@
 import { conductance } from "@/lib/devices/resistor";
 import { UNIT } from "@/lib/devices/rounding";
 import type { Element } from "@/lib/language/ast";
-import type { AssemblyCode } from "../assembly-code";
 import { type Bench, figureOf, type Gap, moversOf, netAt, type Part, type Proof } from "../part";
+import type { RowWriter } from "../row-writer";
 import { across, type State } from "../state";
 import type { Table } from "../table";
 import { type PointValues, TEMPERATURE } from "../values";
@@ -20,6 +20,11 @@ export function addResistors({ numbers, figures }: Table, from: number, to: numb
     scale[a]! += size;
     scale[b]! += size;
   }
+}
+
+/** Writes what the loop does with one row. */
+export function writeResistor(code: RowWriter): void {
+  code.flow(0, 1, code.let(`${code.figure(0)}*${code.across(0, 1)}`));
 }
 
 export class ResistorPart implements Part, Proof {
@@ -77,11 +82,6 @@ export class ResistorPart implements Part, Proof {
 
   addTo(state: State): void {
     addResistors(this.table, this.row, this.row + 1, state);
-  }
-
-  write(code: AssemblyCode): void {
-    const i = code.let(`${code.figure(this.table, this.row, 0)}*${code.across(this.left, this.right)}`);
-    code.flow(this.left, this.right, i);
   }
 
   /** A conductance that is or may become negative can cancel others, whose rounding then stays. */

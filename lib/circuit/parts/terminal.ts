@@ -1,7 +1,7 @@
 import type { Element, Model } from "@/lib/language/ast";
-import type { AssemblyCode } from "../assembly-code";
 import type { Terminal } from "../circuit";
 import { type Bench, figureOf, moversOf, type Part } from "../part";
+import type { RowWriter } from "../row-writer";
 import { across, flow, type State } from "../state";
 import type { Table } from "../table";
 import type { PointValues } from "../values";
@@ -20,6 +20,15 @@ export function addTerminals({ numbers, figures }: Table, from: number, to: numb
     residual[branch] = between - drop;
     scale[branch] = Math.abs(between) + Math.abs(drop);
   }
+}
+
+/** Writes what the loop does with one row. */
+export function writeTerminal(code: RowWriter): void {
+  const i = code.let(code.unknown(2));
+  code.flow(0, 1, i);
+  const between = code.let(code.across(0, 1));
+  const drop = code.let(`${code.figure(0)}*${i}`);
+  code.law(2, `${between}-${drop}`, `abs(${between})+abs(${drop})`);
 }
 
 /**
@@ -71,15 +80,6 @@ export class TerminalPart implements Part {
 
   addTo(state: State): void {
     addTerminals(this.table, this.row, this.row + 1, state);
-  }
-
-  write(code: AssemblyCode): void {
-    const { net, inner, branch } = this.terminal;
-    const i = code.let(code.unknown(branch));
-    code.flow(net, inner, i);
-    const between = code.let(code.across(net, inner));
-    const drop = code.let(`${code.figure(this.table, this.row, 0)}*${i}`);
-    code.law(branch, `${between}-${drop}`, `abs(${between})+abs(${drop})`);
   }
 
   current(_: string, state: State): number {

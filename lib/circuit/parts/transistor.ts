@@ -4,7 +4,6 @@ import { diodeVoltage } from "@/lib/devices/diode";
 import { junctionStep } from "@/lib/devices/junction-step";
 import type { Element, Model } from "@/lib/language/ast";
 import { ROOM_TEMPERATURE } from "@/lib/units/constants";
-import type { AssemblyCode } from "../assembly-code";
 import {
   type Bench,
   FREE,
@@ -20,7 +19,6 @@ import {
 import { across, type State } from "../state";
 import type { Table } from "../table";
 import { type PointValues, TEMPERATURE } from "../values";
-import { askTransistor, type TransistorRow, writeTransistor } from "./transistor-code";
 import { TRANSISTOR_FIGURES, VBC, VBE, VCE } from "./transistor-table";
 
 const FURTHER_TERMS = ["I_leak_e", "I_leak_c", "I_knee_f", "I_knee_r"];
@@ -181,22 +179,8 @@ export class TransistorPart implements JunctionPart, Proof {
     jacobian[places[4]!]! += ibF + ibR;
     jacobian[places[5]!]! -= ibF;
     jacobian[places[6]!]! += icR + ibR;
-    jacobian[places[7]!]! -= icF + icR + ibF + ibR;
+    jacobian[places[7]!]! -= icF + icR + (ibF + ibR);
     jacobian[places[8]!]! += icF + ibF;
-  }
-
-  /** Writes that a plain one is linearised at its actual voltages, and asks for its exponentials. */
-  writeAsk(code: AssemblyCode): void {
-    askTransistor(code, this.inTable);
-  }
-
-  write(code: AssemblyCode): void {
-    writeTransistor(code, this.inTable);
-  }
-
-  private get inTable(): TransistorRow {
-    const { c, b, e, sign, places, table, row } = this;
-    return { c, b, e, sign, places, table, row };
   }
 
   addDoubt(_: State, doubt: Float64Array): void {

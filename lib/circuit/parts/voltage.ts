@@ -1,7 +1,7 @@
 import { voltageMismatch } from "@/lib/devices/voltage";
 import type { Element } from "@/lib/language/ast";
-import type { AssemblyCode } from "../assembly-code";
 import { type Bench, moversOf, netAt, type Part } from "../part";
+import type { RowWriter } from "../row-writer";
 import { across, flow, type State } from "../state";
 import type { Table } from "../table";
 import type { PointValues } from "../values";
@@ -19,6 +19,14 @@ export function addVoltages({ numbers, figures }: Table, from: number, to: numbe
     residual[branch] = voltageMismatch(drop, volts);
     scale[branch] = Math.abs(drop) + Math.abs(volts);
   }
+}
+
+/** Writes what the loop does with one row. */
+export function writeVoltage(code: RowWriter): void {
+  code.flow(0, 1, code.let(code.unknown(2)));
+  const drop = code.let(code.across(0, 1));
+  const volts = code.let(`${code.figure(0)}*share`);
+  code.law(2, `-${drop}-${volts}`, `abs(${drop})+abs(${volts})`);
 }
 
 export class VoltagePart implements Part {
@@ -66,14 +74,6 @@ export class VoltagePart implements Part {
 
   addTo(state: State): void {
     addVoltages(this.table, this.row, this.row + 1, state);
-  }
-
-  write(code: AssemblyCode): void {
-    const { left, right, branch } = this;
-    code.flow(left, right, code.let(code.unknown(branch)));
-    const drop = code.let(code.across(left, right));
-    const volts = code.let(`${code.figure(this.table, this.row, 0)}*share`);
-    code.law(branch, `-${drop}-${volts}`, `abs(${drop})+abs(${volts})`);
   }
 
   current(pin: string, state: State): number {

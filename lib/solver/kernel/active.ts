@@ -37,7 +37,7 @@ export class ActiveMatrix {
       this.columns[column]!.add(row);
       this.largest[row] = Math.max(this.largest[row]!, Math.abs(value));
     }
-    for (let i = size - 1; i >= 0; i--) {
+    for (let i = 0; i < size; i++) {
       this.rowsByCount.put(i, this.rows[i]!.size);
       this.columnsByCount.put(i, this.columns[i]!.size);
     }

@@ -1,16 +1,19 @@
 /**
  * Items 0 … size − 1 sorted by a small count, as doubly linked lists over arrays: moving an item or finding those of one count
- * takes no search. Lists are in the order of insertion reversed, so that the same calls always give the same order.
+ * takes no search. Lists are in the order of insertion, so that of a long chain both ends are taken in turn, and the work on one need
+ * not wait for that on the other.
  */
 export class Buckets {
   /** First item of each count, −1 for none. */
   private readonly heads: Int32Array;
+  private readonly tails: Int32Array;
   private readonly following: Int32Array;
   private readonly preceding: Int32Array;
   private readonly counts: Int32Array;
 
   constructor(size: number) {
     this.heads = new Int32Array(size + 1).fill(-1);
+    this.tails = new Int32Array(size + 1).fill(-1);
     this.following = new Int32Array(size).fill(-1);
     this.preceding = new Int32Array(size).fill(-1);
     this.counts = new Int32Array(size).fill(-1);
@@ -29,11 +32,12 @@ export class Buckets {
   put(item: number, count: number): void {
     if (this.counts[item] === count) return;
     if (this.counts[item] !== -1) this.take(item);
-    const head = this.heads[count]!;
-    this.following[item] = head;
-    this.preceding[item] = -1;
-    if (head !== -1) this.preceding[head] = item;
-    this.heads[count] = item;
+    const tail = this.tails[count]!;
+    this.preceding[item] = tail;
+    this.following[item] = -1;
+    if (tail === -1) this.heads[count] = item;
+    else this.following[tail] = item;
+    this.tails[count] = item;
     this.counts[item] = count;
   }
 
@@ -42,7 +46,8 @@ export class Buckets {
     const after = this.following[item]!;
     if (before === -1) this.heads[this.counts[item]!] = after;
     else this.following[before] = after;
-    if (after !== -1) this.preceding[after] = before;
+    if (after === -1) this.tails[this.counts[item]!] = before;
+    else this.preceding[after] = before;
     this.counts[item] = -1;
   }
 }

@@ -1,48 +1,62 @@
-import { type Compiled, Machine, mayCompile } from "@/lib/circuit/code/machine";
+import { advanceLoop, writeAdvance } from "@/lib/circuit/code/advance";
+import { LoopWriter } from "@/lib/circuit/code/loops";
+import { type Code, type Compiled, FIRST_OWN, Machine, mayCompile } from "@/lib/circuit/code/machine";
+import { type FunctionBody, get, OPCODE } from "@/lib/circuit/code/module";
 import { type Home, StraightCode } from "@/lib/circuit/code/straight";
 import type { System } from "@/lib/circuit/system";
 import type { Elimination, SparseShape } from "../elimination";
 import { EliminationCode, eliminationHomes } from "./elimination-code";
 import { factorsOf, type Kernel } from "./kernel";
 import { ListedKernel } from "./listed";
+import { LoopedElimination } from "./looped";
 
-/** Multiplications and entries of generated code at most; beyond, the list of operations is as fast, and ready at once. */
+/** Multiplications and entries of straight code at most; beyond, loops are as fast, and compiled at once. */
 const MOST_OPERATIONS = 4000;
 
-interface Functions {
-  /** Assembly and solution in one, either alone, and a solution with the factors at hand. */
-  readonly step: Compiled;
-  readonly assemble: Compiled;
-  readonly solve: Compiled;
-  readonly again: Compiled;
+interface Codes<Of> {
+  readonly assemble: Of;
+  readonly solve: Of;
+  /** A solution with the factors at hand. */
+  readonly again: Of;
+  /** Assembly and solution in one. */
+  readonly step: Of;
+  /** Adds the step to the unknowns. */
+  readonly advance: Of;
+}
+
+/** Code with the integers that it reads. */
+interface Generated {
+  readonly codes: Codes<Code>;
+  readonly integers: Int32Array;
 }
 
 /**
- * A system's Newton step at rest as generated code: straight code for its assembly and its elimination, every number in a variable of its
- * own and every place a number, over one memory to which the system's frame moves. The same bytes as loops and lists give. Of the
- * user's there is nothing in the code: neither names nor values.
+ * A system's Newton step at rest as generated code over one memory to which the system's frame moves: straight code, every number in a
+ * variable of its own and every place a number, or loops for what is too long for that. The same bytes as loops over tables and lists give. Of
+ * the user's there is nothing in the code: neither names nor values.
  */
 export class GeneratedStep implements Kernel {
   /** Where the solution stands, and the factors. */
   readonly step: Float64Array;
   readonly factors: Float64Array;
   private readonly listed: ListedKernel;
-  private readonly functions: Functions;
+  private readonly functions: Codes<Compiled>;
 
   private constructor(
     readonly system: System,
     shape: SparseShape,
     plan: Elimination,
-    codes: Readonly<Record<keyof Functions, StraightCode>>,
+    { codes, integers }: Generated,
   ) {
     const { frame } = system;
     const { length } = frame.all;
     const factors = factorsOf(plan);
     const { exponents, less, whole } = frame.starts;
     const places = { count: frame.exponents.length, exponents, less, whole };
-    const machine = new Machine(length + factors.length + shape.size, places);
+    const machine = new Machine(length + factors.length + shape.size, places, integers.length);
+    machine.integers.set(integers);
     this.listed = new ListedKernel(shape, plan);
-    this.functions = machine.compile(codes);
+    this.functions = machine.compile({ ...codes });
     frame.moveTo(machine.numbers);
     this.factors = machine.numbers.subarray(length, length + factors.length);
     this.factors.set(factors);
@@ -50,27 +64,11 @@ export class GeneratedStep implements Kernel {
     system.assembly.use(this.functions.assemble);
   }
 
-  /** Null where it would be too long, or no code may be generated here. The system goes on in other arrays. */
-  static of(system: System, shape: SparseShape, plan: Elimination): GeneratedStep | null {
-    if (!mayCompile() || plan.operations + shape.rows.length > MOST_OPERATIONS) return null;
-    const { frame, assembly } = system;
-    const { jacobian, residual } = frame.starts;
-    const given = {
-      jacobian: (place: number) => `z${jacobian + place}`,
-      residual: (row: number) => `z${residual + row}`,
-    };
-    const z: Home = { start: 0, kept: Number.POSITIVE_INFINITY };
-    const factors = frame.all.length;
-    const homes = { z, ...eliminationHomes(plan, factors, factors + factorsOf(plan).length) };
-    const code = () => new StraightCode(homes);
-    const codes = { step: code(), assemble: code(), solve: code(), again: code() };
-    if (!assembly.write(codes.assemble)) return null;
-    assembly.write(codes.step);
-    const elimination = (into: StraightCode) => new EliminationCode(into, shape, plan, given);
-    elimination(codes.step).write();
-    elimination(codes.solve).write();
-    elimination(codes.again).writeAgain();
-    return new GeneratedStep(system, shape, plan, codes);
+  /** Null where no code may be generated. The system goes on in other arrays. */
+  static of(system: System, shape: SparseShape, plan: Elimination, isStraight = true): GeneratedStep | null {
+    if (!mayCompile()) return null;
+    const straight = isStraight ? straightOf(system, shape, plan) : null;
+    return new GeneratedStep(system, shape, plan, straight ?? loopedOf(system, shape, plan));
   }
 
   /** As `assembleAtRest` of the system and `solve` with what it leaves, into `step` and `factors`. */
@@ -79,6 +77,11 @@ export class GeneratedStep implements Kernel {
     if (!system.assembly.hasOthers) return functions.step(system.state.share) === 1;
     system.assembly.runAtRest();
     return functions.solve(1) === 1;
+  }
+
+  /** As `advance` of a state by `step`. */
+  advance(): void {
+    this.functions.advance(1);
   }
 
   solve(a: Float64Array, b: Float64Array, d: Float64Array, f: Float64Array): boolean {
@@ -105,4 +108,64 @@ export class GeneratedStep implements Kernel {
   private give(d: Float64Array): void {
     if (d !== this.step) d.set(this.step);
   }
+}
+
+/** Null where it would be too long. */
+function straightOf({ frame, assembly }: System, shape: SparseShape, plan: Elimination): Generated | null {
+  if (plan.operations + shape.rows.length > MOST_OPERATIONS) return null;
+  const { jacobian, residual } = frame.starts;
+  const given = {
+    jacobian: (place: number) => `z${jacobian + place}`,
+    residual: (row: number) => `z${residual + row}`,
+  };
+  const z: Home = { start: 0, kept: Number.POSITIVE_INFINITY };
+  const factors = frame.all.length;
+  const homes = { z, ...eliminationHomes(plan, factors, factors + factorsOf(plan).length) };
+  const code = () => new StraightCode(homes);
+  const codes = { assemble: code(), solve: code(), again: code(), step: code(), advance: code() };
+  if (!assembly.write(codes.assemble)) return null;
+  assembly.write(codes.step);
+  const elimination = (into: StraightCode) => new EliminationCode(into, shape, plan, given);
+  elimination(codes.step).write();
+  elimination(codes.solve).write();
+  elimination(codes.again).writeAgain();
+  writeAdvance(codes.advance, frame);
+  return { codes, integers: new Int32Array(0) };
+}
+
+function loopedOf({ frame, assembly }: System, shape: SparseShape, plan: Elimination): Generated {
+  const factors = frame.all.length;
+  const solution = factors + factorsOf(plan).length;
+  const tables = assembly.kinds.map(({ table }) => table);
+  const begins: number[] = [];
+  let lists = Machine.integersStart(solution + shape.size);
+  for (const { numbers } of tables) {
+    begins.push(lists);
+    lists += 4 * numbers.length;
+  }
+  const { jacobian, residual } = frame.starts;
+  const elimination = new LoopedElimination(shape, plan, { jacobian, residual, factors, solution, lists });
+  const writer = new LoopWriter(frame);
+  assembly.writeLoops(writer, begins);
+  const called = (number: number) => [...get(0), OPCODE.call, FIRST_OWN + number];
+  const step: FunctionBody = {
+    name: "step",
+    bytes: [...called(0), OPCODE.drop, ...called(1)],
+    variables: [],
+  };
+  const integers = tables.flatMap(({ numbers }) => Array.from(numbers, (value) => 8 * value));
+  return {
+    codes: {
+      assemble: coded(writer.compile("assemble")),
+      solve: coded(elimination.whole("solve")),
+      again: coded(elimination.again("again")),
+      step: coded(step),
+      advance: coded(advanceLoop(frame, solution)),
+    },
+    integers: Int32Array.from([...integers, ...elimination.list.numbers]),
+  };
+}
+
+function coded(body: FunctionBody): Code {
+  return { text: body.bytes.join(), compile: () => body };
 }
