@@ -36,7 +36,7 @@ export function RunsView({
     <>
       <PageHeader title="Runs" remark={<span aria-live="polite">{remark}</span>} />
       <div className="grid gap-4 px-4 py-4 md:px-6">
-        <div className="grid gap-3 sm:grid-cols-[minmax(0,28rem)_12rem]">
+        <div className="grid gap-3 sm:grid-cols-[minmax(0,28rem)_12rem_auto]">
           <SearchBox label="Search runs" value={state.query} onChange={(query) => show({ query })} />
           <SelectField
             label="State"
@@ -51,6 +51,7 @@ export function RunsView({
               <option key={status}>{status}</option>
             ))}
           </SelectField>
+          {total > 1 && <p className="self-center text-quiet text-xs">Tick runs to compare them.</p>}
         </div>
         {chosen.length > 0 && <Chosen workspace={workspace} chosen={chosen} onClear={() => setChosen([])} />}
         {error !== null && (
