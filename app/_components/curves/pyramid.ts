@@ -1,5 +1,7 @@
 /** Points that one entry of the lowest layer stands for; each layer above stands for as many of the layer below. */
 const BLOCK = 16;
+/** Fewer points than this are looked at one by one, which is then faster than to climb. */
+const FEW = 256;
 
 /** Where the lowest and the highest value of a part of a column stand. */
 export interface Ends {
@@ -21,7 +23,10 @@ const known = new WeakMap<Float64Array, readonly Layer[]>();
  * a million points can be asked about once a pixel in every frame.
  */
 export function endsIn(column: Float64Array, from = 0, to = column.length): Ends | null {
-  if (to - from <= 4 * BLOCK) return scan(column, from, to);
+  if (to - from <= FEW) {
+    const low = scan(column, from, to);
+    return low === -1 ? null : { low, high: scanned };
+  }
   let layers = known.get(column);
   if (layers === undefined) {
     layers = layersOf(column);
@@ -32,10 +37,28 @@ export function endsIn(column: Float64Array, from = 0, to = column.length): Ends
   return found.low === -1 ? null : found;
 }
 
-function scan(column: Float64Array, from: number, to: number): Ends | null {
-  const found = { low: -1, high: -1 };
-  for (let i = from; i < to; i++) take(column, found, i, i);
-  return found.low === -1 ? null : found;
+/** The index of the highest value that `scan` found, beside the lowest that it returns: two numbers without an object for them. */
+let scanned = -1;
+
+/** The index of the lowest of the values [from, to); −1 where none is finite. */
+function scan(column: Float64Array, from: number, to: number): number {
+  let low = -1;
+  let high = -1;
+  let least = Number.POSITIVE_INFINITY;
+  let most = Number.NEGATIVE_INFINITY;
+  for (let i = from; i < to; i++) {
+    const value = column[i]!;
+    if (value < least && value !== Number.NEGATIVE_INFINITY) {
+      least = value;
+      low = i;
+    }
+    if (value > most && value !== Number.POSITIVE_INFINITY) {
+      most = value;
+      high = i;
+    }
+  }
+  scanned = high;
+  return low;
 }
 
 /** Widens `found` by the values at two indices; NaN and infinite ones count for nothing. */
@@ -75,19 +98,22 @@ function climb(
 }
 
 function layersOf(column: Float64Array): Layer[] {
-  const layers: Layer[] = [];
-  for (let below = column.length; below > BLOCK; below = layers.at(-1)!.low.length) {
-    const count = Math.ceil(below / BLOCK);
-    const layer = { low: new Int32Array(count).fill(-1), high: new Int32Array(count).fill(-1) };
-    const under = layers.at(-1);
+  const lowest = layerOf(Math.ceil(column.length / BLOCK));
+  for (let block = 0; block < lowest.low.length; block++) {
+    lowest.low[block] = scan(column, block * BLOCK, Math.min(column.length, (block + 1) * BLOCK));
+    lowest.high[block] = scanned;
+  }
+  const layers = [lowest];
+  for (let under = lowest; under.low.length > BLOCK; under = layers.at(-1)!) {
+    const below = under.low.length;
+    const layer = layerOf(Math.ceil(below / BLOCK));
     const found = { low: -1, high: -1 };
-    for (let block = 0; block < count; block++) {
+    for (let block = 0; block < layer.low.length; block++) {
       found.low = -1;
       found.high = -1;
       const end = Math.min(below, (block + 1) * BLOCK);
       for (let i = block * BLOCK; i < end; i++) {
-        if (under === undefined) take(column, found, i, i);
-        else if (under.low[i]! !== -1) take(column, found, under.low[i]!, under.high[i]!);
+        if (under.low[i]! !== -1) take(column, found, under.low[i]!, under.high[i]!);
       }
       layer.low[block] = found.low;
       layer.high[block] = found.high;
@@ -95,4 +121,8 @@ function layersOf(column: Float64Array): Layer[] {
     layers.push(layer);
   }
   return layers;
+}
+
+function layerOf(count: number): Layer {
+  return { low: new Int32Array(count).fill(-1), high: new Int32Array(count).fill(-1) };
 }
