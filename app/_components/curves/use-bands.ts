@@ -50,7 +50,18 @@ export function useBands(
     return () => worker.terminate();
   }, [set, names, wanted]);
 
-  return found?.set === set && wanted ? found.bands : NONE;
+  return found !== null && wanted && isAlike(found.set, set) ? found.bands : NONE;
+}
+
+/** While more results of one run come in, the bands of a moment ago stand until there are new ones. */
+function isAlike(one: CurveSet, other: CurveSet): boolean {
+  return (
+    one === other ||
+    (one.draws === other.draws &&
+      one.x.length === other.x.length &&
+      one.families.length === other.families.length &&
+      one.axis.knob === other.axis.knob)
+  );
 }
 
 /** A setting's part of a flat column, in the order of `x`. */
