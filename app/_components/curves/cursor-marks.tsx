@@ -20,8 +20,8 @@ interface Props {
   readonly cursor: Cursor;
 }
 
-/** Px that a box with values needs at least. */
-const NARROWEST = 132;
+/** Px that a box with values needs beside the line. */
+const NEEDED = 210;
 
 /** The line of the cursor through all storeys, a ring on each line it crosses, and the values of the setting it follows. */
 export function CursorMarks({ set, storeys, horizontal, x, width, cursor }: Props) {
@@ -36,6 +36,8 @@ export function CursorMarks({ set, storeys, horizontal, x, width, cursor }: Prop
   const label = set.families[cursor.family]?.label ?? "";
   const bound = boundAt(set, cursor);
   const right = left < width / 2;
+  const room = right ? width - left : left;
+  const fits = room > NEEDED;
   return (
     <div aria-hidden="true" className="pointer-events-none">
       <div className="absolute top-0 h-full border-accent border-l" style={{ left }} />
@@ -59,12 +61,13 @@ export function CursorMarks({ set, storeys, horizontal, x, width, cursor }: Prop
       <div
         className={classNames(
           "absolute border bg-surface px-2.5 py-1.5 text-xs",
-          right ? "ml-2.5" : "-translate-x-full -ml-2.5",
+          fits && !right && "-translate-x-full",
         )}
         style={{
-          left,
+          // Without room on either side it lies over the line, at the edge of the plot.
+          ...(fits ? { left: left + (right ? 10 : -10) } : right ? { right: 0 } : { left: 0 }),
           top: Math.max(0, boxTop(storeys, cursor) - 8),
-          maxWidth: Math.max(NARROWEST, (right ? width - left : left) - 12),
+          maxWidth: fits ? room - 12 : width,
         }}
       >
         <p className="figures whitespace-nowrap text-xs">

@@ -75,6 +75,8 @@ export function storeysOf(set: CurveSet, choice: Choice): Storey[] {
     ...unitsOf(above).flatMap((traces) => bySize(set, traces)),
     ...unitsOf(below).map((traces) => ({ ...whole(traces), key: `${traces[0]!.unit} read` })),
   ];
+  // Of several sources laid over each other one may have a trace that another has not.
+  const exists = ({ values }: Line) => set.source.styles === undefined || valuesBetween([values]) !== null;
   const crowded = groups.some(({ traces }) => traces.length > 1);
   return groups.map(({ key, unit, traces }) => {
     const lines = traces.flatMap((trace) => {
@@ -90,7 +92,8 @@ export function storeysOf(set: CurveSet, choice: Choice): Storey[] {
         absent: set.source.absent?.[family.index] ?? null,
       }));
     });
-    return { key, unit, traces: traces.map(({ name }) => name), lines, isReading: traces[0]!.isReading };
+    const names = traces.map(({ name }) => name);
+    return { key, unit, traces: names, lines: lines.filter(exists), isReading: traces[0]!.isReading };
   });
 }
 
