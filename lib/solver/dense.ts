@@ -28,8 +28,10 @@ export function freeUnknowns(shape: SparseShape, values: Float64Array): number[]
 }
 
 /**
- * Dense factors with row interchanges, for a matrix whose sparse pivots all lose too many digits. This file alone knows ml-matrix,
- * which holds matrices at the edges and not in the inner loop.
+ * Dense factors with row interchanges, for a matrix whose sparse pivots all lose too many digits. The package ml-matrix holds matrices
+ * at the edges: here, for what a singular matrix leaves free, for stability, and for line fits. The first pivots of a structure
+ * are not chosen by it but by Markowitz's count on a sample (`eliminate`), with a test of each pivot: a dense LU says neither which
+ * entries stay empty nor in which order the fewest fill in, and its cost grows with the cube of the unknowns.
  */
 export class DenseFactors {
   private constructor(

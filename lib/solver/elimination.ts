@@ -49,8 +49,8 @@ interface Step {
 }
 
 /**
- * Chooses pivots on sample values by Markowitz's count (Management Science 3, 1957). Null where the sample is singular or not
- * finite. Cost grows with the entries and the fill-in; meant to run once a structure.
+ * The first pivoted factorisation of a structure: chooses pivots on sample values by Markowitz's count (Management Science 3, 1957).
+ * Null where the sample is singular or not finite. Cost grows with the entries and the fill-in; meant to run once a structure.
  */
 export function eliminate(shape: SparseShape, sample: Float64Array): Elimination | null {
   for (let k = 1; k < shape.rows.length; k++) if (!Number.isFinite(sample[k]!)) return null;

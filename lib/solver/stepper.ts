@@ -1,11 +1,12 @@
 import { advance } from "@/lib/circuit/state";
 import type { System } from "@/lib/circuit/system";
 import type { SparseShape } from "./elimination";
-import { GeneratedStep } from "./kernel/generated";
+import { GeneratedStep, isLong } from "./kernel/generated";
 import type { LinearSolver } from "./linear";
 
-/** Steps before code is generated: a short sweep does not repay it. */
-const FIRST_LISTED = 2000;
+/** Steps before straight code is generated: a short sweep does not repay it. Loops are soon made. */
+const BEFORE_STRAIGHT = 2000;
+const BEFORE_LOOPS = 20;
 
 /** Newton's step from the present unknowns: assembly and solution, after a while as generated code in one. */
 export class Stepper {
@@ -25,9 +26,9 @@ export class Stepper {
 
   /** Generates code when the time has come. The step and the arrays of the system's state are then others. */
   prepare(): void {
-    if (this.steps < FIRST_LISTED || this.isTried) return;
+    if (this.isTried || this.steps < BEFORE_LOOPS) return;
     const plan = this.linear.samplePlan;
-    if (plan === null) return;
+    if (plan === null || (this.steps < BEFORE_STRAIGHT && !isLong(this.shape, plan))) return;
     this.isTried = true;
     this.generated = GeneratedStep.of(this.system, this.shape, plan);
     if (this.generated === null) return;

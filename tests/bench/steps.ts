@@ -68,6 +68,13 @@ export class Steps {
     stepper.advance();
   }
 
+  /** The same by loops over tables and the list of operations. */
+  takeListed(k: number): void {
+    const { state } = this.arrive(k);
+    this.linear.solve(state.jacobian, state.residual, this.step);
+    advance(state, this.step);
+  }
+
   /** The same with a dense pivoted LU of the package ml-matrix, built afresh. */
   takeAfresh(k: number): void {
     const { state } = this.arrive(k);

@@ -56,7 +56,8 @@ export function addTransistors(
   for (let k = from; k < to; k++, n += TRANSISTOR_NUMBERS, at += TRANSISTOR_FIGURES, e += 2) {
     const Is = figures[at + IS]!;
     const perVolt = figures[at + PER_VOLT]!;
-    const [tf, tr] = [whole[e]!, whole[e + 1]!];
+    const tf = whole[e]!;
+    const tr = whole[e + 1]!;
     const vbe = figures[at + VBE]!;
     const vbc = figures[at + VBC]!;
     const forwardEarly = figures[at + EARLY_F]!;

@@ -110,9 +110,14 @@ export class GeneratedStep implements Kernel {
   }
 }
 
+/** Whether an elimination is too long for straight code. */
+export function isLong(shape: SparseShape, { operations }: Elimination): boolean {
+  return operations + shape.rows.length > MOST_OPERATIONS;
+}
+
 /** Null where it would be too long. */
 function straightOf({ frame, assembly }: System, shape: SparseShape, plan: Elimination): Generated | null {
-  if (plan.operations + shape.rows.length > MOST_OPERATIONS) return null;
+  if (isLong(shape, plan)) return null;
   const { jacobian, residual } = frame.starts;
   const given = {
     jacobian: (place: number) => `z${jacobian + place}`,
