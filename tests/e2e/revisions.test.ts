@@ -127,10 +127,12 @@ test("an old revision is restored, which can be undone; its text is duplicated; 
   await page.goto(`${base(id)}/revisions/1`);
   const text = page.getByRole("region", { name: "Text of revision 1, to read only" });
   expect(await text.textContent()).toContain("10 per decade");
-  await page.getByRole("button", { name: "Restore" }).click();
+  await page.getByRole("button", { name: "Restore" }).press("Enter");
   await page.getByText("Revision 3 has the text of revision 1 now").waitFor();
   await expect.poll(() => page.getByRole("button", { name: "Restore" }).count(), PATIENT).toBe(0);
-  await page.getByRole("button", { name: "Undo" }).click();
+  // The pressed button is gone; the focus went to the way back.
+  await expect.poll(() => page.evaluate(() => document.activeElement?.textContent), PATIENT).toBe("Undo");
+  await page.keyboard.press("Enter");
   await page.getByText("Undone: revision 4 has the text of revision 2").waitFor();
   const { rows } = await (await page.request.get(`/api/v1/netlists/${id}/revisions`)).json();
   expect(rows.map((row: { message: string | null }) => row.message)).toEqual([

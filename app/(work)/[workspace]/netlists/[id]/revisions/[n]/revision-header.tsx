@@ -1,6 +1,7 @@
 "use client";
 
 import Link from "next/link";
+import { useEffect, useRef } from "react";
 import { Button, ButtonLink } from "@/app/_components/ui/button";
 import { Menu, MenuLink } from "@/app/_components/ui/menu";
 import { Notice } from "@/app/_components/ui/notice";
@@ -30,6 +31,12 @@ export function RevisionHeader({ workspace, netlist, revision, mayWrite, mayRun,
   const isNewest = number === netlist.latest;
   const isLikeNewest = hash === netlist.latestHash;
   const { busy, remark } = deeds;
+  const answer = useRef<HTMLDivElement>(null);
+  // The button that was pressed may be gone by now, and the focus with it.
+  // biome-ignore lint/correctness/useExhaustiveDependencies: both are what makes buttons come and go
+  useEffect(() => {
+    if (document.activeElement === document.body) answer.current?.querySelector("button")?.focus();
+  }, [remark, isLikeNewest]);
   return (
     <>
       <PageHeader
@@ -84,7 +91,7 @@ export function RevisionHeader({ workspace, netlist, revision, mayWrite, mayRun,
         }
       />
       {remark !== null && (
-        <div className="px-4 pt-4 md:px-6" data-print="never">
+        <div ref={answer} className="px-4 pt-4 md:px-6" data-print="never">
           <Notice tone={remark.tone} title={remark.title} announce>
             <p>{remark.detail}</p>
             <div className="mt-2 flex flex-wrap gap-2">
@@ -94,7 +101,7 @@ export function RevisionHeader({ workspace, netlist, revision, mayWrite, mayRun,
                 </Button>
               )}
               {remark.link !== undefined && (
-                <Link href={remark.link.href} className="link min-h-7">
+                <Link href={remark.link.href} className="link inline-flex min-h-7 items-center">
                   {remark.link.label}
                 </Link>
               )}
