@@ -4,7 +4,6 @@ import { revision } from "@/db/schema/revision";
 import { run } from "@/db/schema/run";
 import { shard } from "@/db/schema/shard";
 import { encodeColumns } from "@/lib/analyses/columns-document";
-import { compile } from "@/lib/analyses/compile";
 import { type RunMatter, toDocument } from "@/lib/analyses/document";
 import type { Plan } from "@/lib/analyses/plan";
 import type { RunDocument } from "@/lib/analyses/result";
@@ -12,6 +11,7 @@ import type { Actor } from "@/lib/permissions/actor";
 import { authorize } from "@/lib/permissions/authorize";
 import { traceColumn } from "../chunks/columns";
 import { readColumns } from "../chunks/read-columns";
+import { compiled } from "./compiled";
 import { findRun, type RunRecord } from "./find-run";
 import { LARGE, roomFor } from "./large-documents";
 
@@ -102,7 +102,7 @@ async function matterOf(
       .orderBy(asc(shard.index)),
   ]);
   // While the database looks for them.
-  const { job, diagnostics } = compile(text);
+  const { job, diagnostics } = compiled(text);
   const [columns, shards] = await reading;
   const column = (name: string) => columns.get(name) ?? new Float64Array(asked.points).fill(Number.NaN);
   return {
