@@ -110,7 +110,7 @@ describe("getPoint", () => {
     await storeShard(id, 0, plan, [7]);
     const detail = await getPoint(actor, id, 7);
     expect(detail).toMatchObject({ outcome: "iteration limit", unsolved: ["s", "D1"] });
-    expect(detail.failure).toMatch(/limit of steps.*Farthest from settled: s, D1\.$/);
+    expect(detail.failure).toMatch(/came to no rest\. Farthest from settled: s, D1\.$/);
     expect([...detail.traces, ...detail.unknowns].map(({ value }) => value)).toEqual([null, null, null]);
   });
 
