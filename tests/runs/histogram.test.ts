@@ -21,6 +21,15 @@ describe("a histogram", () => {
     expect(outside).toBe(1);
   });
 
+  it("parts a value on a limit from those beyond it, at the ends too", () => {
+    const least = histogram([1, 2, 3], { low: null, high: 1 })!;
+    expect(least.bins.map(({ count, isOutside }) => [count, isOutside])[0]).toEqual([1, false]);
+    expect(least.outside).toBe(2);
+    const most = histogram([1, 2, 3], { low: 3, high: null })!;
+    expect(most.bins.map(({ count, isOutside }) => [count, isOutside]).at(-1)).toEqual([1, false]);
+    expect(most.outside).toBe(2);
+  });
+
   it("is one bin for values that are all the same, and nothing without values", () => {
     expect(histogram([3, 3, 3], NONE)!.bins).toEqual([
       { from: expect.closeTo(2.9985, 9), to: expect.closeTo(3.0015, 9), count: 3, isOutside: false },

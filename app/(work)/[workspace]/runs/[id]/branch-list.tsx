@@ -71,10 +71,10 @@ function Row({
         </span>
         <span>
           {row.fault ??
-            `${counted(row.branches.length, "branch").replace("branchs", "branches")}; ${
+            `${row.branches.length === 1 ? "1 branch" : `${formatCount(row.branches.length)} branches`}; ${
               row.complete
-                ? "the indices of the operating points add up at every value, so the count shows no sign that one is missing."
-                : "the indices do not add up: an operating point may be missing."
+                ? "their indices add up at every value, so none is known to be missing."
+                : "their indices do not add up, so an operating point is missing."
             }`}
         </span>
       </p>

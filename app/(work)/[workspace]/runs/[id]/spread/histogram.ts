@@ -65,14 +65,18 @@ function edges(least: number, most: number, { low, high }: Limits, n: number) {
     return { start: least - width / 2, width, count: 1 };
   }
   const wanted = Math.min(MANY, Math.max(FEW, Math.round(1.5 * Math.sqrt(n))));
-  const inside = [low, high].filter((one) => one !== null && one > least && one < most) as number[];
+  // A limit at an end counts where a value on it and one beyond it would share a bin.
+  const inside = [
+    ...(low !== null && low > least && low <= most ? [low] : []),
+    ...(high !== null && high >= least && high < most ? [high] : []),
+  ];
   const [edge, other] = inside;
   if (edge === undefined) return { start: least, width: length / wanted, count: wanted };
   let width = length / wanted;
   const apart = other === undefined ? 0 : other - edge;
   // Limits that lie closer together than bins can be narrow share one.
   if (apart > length / (2 * MANY)) width = apart / Math.ceil(apart / width);
-  const below = Math.ceil((edge - least) / width - 1e-9);
+  const below = Math.max(edge === high ? 1 : 0, Math.ceil((edge - least) / width - 1e-9));
   const start = edge - below * width;
   return { start, width, count: Math.max(below + 1, Math.ceil((most - start) / width - 1e-9)) };
 }

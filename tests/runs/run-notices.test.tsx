@@ -1,0 +1,107 @@
+import { renderToStaticMarkup } from "react-dom/server";
+import { describe, expect, it, test } from "vitest";
+import { FailedPoints } from "@/app/(work)/[workspace]/runs/[id]/failed-points";
+import { RequirementList } from "@/app/(work)/[workspace]/runs/[id]/requirement-list";
+import type { RunState } from "@/app/(work)/[workspace]/runs/[id]/run-shapes";
+import { StaleNotice } from "@/app/(work)/[workspace]/runs/[id]/stale-notice";
+import { UnstablePoints } from "@/app/(work)/[workspace]/runs/[id]/unstable-points";
+import type { RequirementDocument } from "@/lib/analyses/result";
+import { ENGINE_VERSION } from "@/lib/analyses/version";
+
+const AXES = [{ knob: "V_in", unit: "V", scale: "linear" as const, values: [1, 2, 3, 4] }];
+const text = (element: React.ReactElement) =>
+  renderToStaticMarkup(element)
+    .replace(/<[^>]+>/g, " ")
+    .replace(/[\u202f\s]+/g, " ");
+
+describe("a run that time has gone past", () => {
+  const run = { netlistId: "n", revision: 2, status: "done", engineVersion: ENGINE_VERSION } as RunState;
+  const notice = (change: Partial<RunState>, latestRevision: number) =>
+    text(
+      <StaleNotice workspace="w" run={{ ...run, ...change }} latestRevision={latestRevision} again="again" />,
+    );
+
+  it("says which engine solved it, and offers to queue it again", () => {
+    expect(notice({ engineVersion: "0" }, 2)).toMatch(
+      /Of an earlier engine Version 0 solved this run.* again/,
+    );
+  });
+
+  it("says that the netlist has moved on", () => {
+    expect(notice({}, 5)).toMatch(
+      /Of an earlier revision The netlist is at revision 5 now; this is revision 2\./,
+    );
+  });
+
+  it("says nothing while it is current, or under way", () => {
+    expect(notice({}, 2)).toBe("");
+    expect(notice({ status: "running" }, 5)).toBe("");
+  });
+});
+
+test("failed points stand by their reason, with places and draws to go to, the most first", () => {
+  const failures = [
+    { point: 0, outcome: "singular" as const, unsettled: [] },
+    { point: 2, outcome: "iteration limit" as const, unsettled: ["out", "Q1"] },
+    { point: 6, outcome: "iteration limit" as const, unsettled: ["out", "Q1"] },
+  ];
+  const none = () => {};
+  const words = text(
+    <FailedPoints failures={failures} axes={AXES} draws={1} ofOneDraw={4} onPoint={none} onAll={none} />,
+  );
+  expect(words).toMatch(
+    /3 failed points 2 did not settle\. Step after step.*Farthest from settled: out, Q1\. V_in 3 V V_in 3 V, draw 1 1 undetermined\..*V_in 1 V/,
+  );
+});
+
+test("unstable points are told by their range", () => {
+  const words = text(<UnstablePoints ranges={[{ from: 1, to: 3 }]} axes={AXES} ofOneDraw={4} />);
+  expect(words).toMatch(/2 unstable points Solved, but the circuit would leave them .*V_in 2 V to V_in 3 V/);
+  expect(renderToStaticMarkup(<UnstablePoints ranges={[]} axes={AXES} ofOneDraw={4} />)).toBe("");
+});
+
+describe("requirements of a run", () => {
+  const one: RequirementDocument = {
+    label: "zero",
+    verdict: "holds",
+    margin: 0.001,
+    unit: "V",
+    worst: { draw: 14, at: [] },
+    yield: { holds: 19, of: 20, low: 0.751, high: 0.999 },
+    share: 0.9,
+    allowed: { low: -0.012, high: 0.012 },
+    value: { nominal: 0.001, worst: 0.011, low: -0.02, high: 0.02 },
+    drawn: [0.001],
+    windows: [],
+    bounds: null,
+    reading: null,
+  };
+  const links = {
+    latestRevision: 1,
+    toleranceLines: {},
+    readingLines: {},
+    requirementLines: [48, 49],
+    lineHref: (line: number) => `#L${line}`,
+    sheetHref: () => null,
+  };
+  const list = (requirements: readonly RequirementDocument[], partly: "so far" | null = null) =>
+    text(<RequirementList requirements={requirements} links={links} partly={partly} onPlace={() => {}} />);
+
+  it("say how many draws hold beside how many must", () => {
+    expect(list([one])).toMatch(
+      /The requirement holds .*margin 1\.00 mV; 19 of 20 draws hold, 90 % needed: 75\.1 % to 99\.9 % of parts \(95 % confidence\) draw 14 line 48/,
+    );
+  });
+
+  it("claim no yield where points are missing, and say that they are judged so far", () => {
+    const unknown = { ...one, verdict: "no data" as const, margin: null, worst: null };
+    const words = list([one, unknown], "so far");
+    expect(words).toContain("One requirement has no data · 1 holds · so far");
+    expect(words).toContain("a point that it needs is not solved; known to hold in 19 of 20 draws");
+  });
+
+  it("carry what must be known besides", () => {
+    const remark = "Broken at another stable operating point.";
+    expect(list([{ ...one, remark }])).toContain(remark);
+  });
+});
