@@ -74,7 +74,7 @@ const TELLING: readonly (readonly [circuit: (more: string) => string, given: str
   [amplifier, "out_low = -1 mV"],
   [amplifier, "bias_offset = 1 pA"],
   [amplifier, "R_out = 100 Ω"],
-  [amplifier, "out_high = 5 V"],
+  [amplifier, "out_high = -1 mV"],
 ];
 
 describe("a term at its neutral limit is, byte for byte, the term left out", () => {
