@@ -1,7 +1,7 @@
 "use client";
 
 import { keepPreviousData, useQuery } from "@tanstack/react-query";
-import { useEffect, useState } from "react";
+import { type RefObject, useEffect, useState } from "react";
 import { formatCount } from "@/app/_components/ui/count";
 import { outcomeInWords } from "@/lib/analyses/reasons";
 import { formatQuantity } from "@/lib/units/quantity";
@@ -12,8 +12,15 @@ import { Power } from "./point-account";
 const REST = 100;
 
 /** The proof mark of the point under the cursor of the plot, and how it was solved: there before anything is chosen. */
-export function CursorAccount({ run, cursor }: { readonly run: string; readonly cursor: number | null }) {
-  const at = useSettled(cursor);
+export function CursorAccount({
+  run,
+  onCursor,
+}: {
+  readonly run: string;
+  /** Where the plot tells of its cursor. */
+  readonly onCursor: RefObject<(point: number | null) => void>;
+}) {
+  const at = useSettled(onCursor);
   const { data } = useQuery({
     queryKey: ["point", run, at],
     queryFn: () => fetchPoint(run, at ?? 0),
@@ -64,13 +71,19 @@ function Row({ name, children }: { readonly name: string; readonly children: Rea
   );
 }
 
-/** A value once it has rested; null at once. */
-function useSettled(value: number | null): number | null {
-  const [settled, setSettled] = useState(value);
+/** The last point on which the cursor has rested. */
+function useSettled(onCursor: RefObject<(point: number | null) => void>): number | null {
+  const [settled, setSettled] = useState<number | null>(null);
   useEffect(() => {
-    if (value === null) return;
-    const timer = setTimeout(() => setSettled(value), REST);
-    return () => clearTimeout(timer);
-  }, [value]);
+    let timer: ReturnType<typeof setTimeout> | undefined;
+    onCursor.current = (point) => {
+      clearTimeout(timer);
+      if (point !== null) timer = setTimeout(() => setSettled(point), REST);
+    };
+    return () => {
+      clearTimeout(timer);
+      onCursor.current = () => {};
+    };
+  }, [onCursor]);
   return settled;
 }

@@ -1,3 +1,4 @@
+import type { RefObject } from "react";
 import type { BranchesDocument } from "@/lib/analyses/branches-document";
 import { drawOf } from "@/lib/analyses/plan";
 import type { Failure, ReadingDocument, RequirementDocument } from "@/lib/analyses/result";
@@ -23,8 +24,8 @@ interface Props {
   /** The chosen point, and its account where it came with the page. */
   readonly chosen: number | null;
   readonly point: PointAccount | null;
-  /** The point under the cursor of the plot. */
-  readonly cursor: number | null;
+  /** Hears of the point under the cursor of the plot. */
+  readonly onCursor: RefObject<(point: number | null) => void>;
   readonly onShow: (change: Partial<PageState>) => void;
 }
 
@@ -38,7 +39,7 @@ export interface Found {
 }
 
 /** All that stands beside the curves: requirements, readings, the chosen point, operating points, failures, the run itself. */
-export function RunPanels({ workspace, run, found, links, span, chosen, point, cursor, onShow }: Props) {
+export function RunPanels({ workspace, run, found, links, span, chosen, point, onCursor, onShow }: Props) {
   const { plan } = run;
   const ofOneDraw = plan.points / (plan.draws + 1);
   return (
@@ -52,7 +53,7 @@ export function RunPanels({ workspace, run, found, links, span, chosen, point, c
         }
       />
       <ReadingList readings={found?.readings ?? []} axes={plan.axes} links={links} />
-      {plan.axes.length > 0 && <CursorAccount run={run.id} cursor={cursor} />}
+      {plan.axes.length > 0 && <CursorAccount run={run.id} onCursor={onCursor} />}
       <PointPanel
         run={run}
         point={chosen}

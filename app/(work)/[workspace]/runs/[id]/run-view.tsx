@@ -1,7 +1,7 @@
 "use client";
 
 import { useRouter } from "next/navigation";
-import { useCallback, useEffect, useMemo, useState } from "react";
+import { useCallback, useEffect, useMemo, useRef, useState } from "react";
 import { CurveFigure } from "@/app/_components/curves/curve-figure";
 import { type CurveSource, curveSet } from "@/app/_components/curves/curve-set";
 import { NumberTable } from "@/app/_components/curves/number-table";
@@ -44,7 +44,9 @@ export function RunView(props: Props) {
   const router = useRouter();
   const { run, document, problem, finished, behind, setRun } = useLiveRun(first, found);
   const [state, setState] = useState(() => readPageState(new URLSearchParams(props.search)));
-  const [cursor, setCursor] = useState<number | null>(null);
+  // The cursor moves with the pointer: what follows it listens for itself, and the page is not drawn anew.
+  const onCursor = useRef<(point: number | null) => void>(() => {});
+  const moved = useCallback((point: number | null) => onCursor.current(point), []);
   const show = useCallback(
     (change: Partial<PageState>) => setState((before) => ({ ...before, ...change })),
     [],
@@ -75,6 +77,18 @@ export function RunView(props: Props) {
   const numbers = useMemo(() => withDraws(source, run.plan.draws), [source, run.plan.draws]);
   const allowed = useMemo(() => (document === null ? [] : allowedBands(document)), [document]);
   const proved = useMemo(() => provedIn(source), [source]);
+  const { judgement } = first;
+  const matter = useMemo(
+    () =>
+      document && {
+        axes: run.plan.axes,
+        readings: document.readings,
+        requirements: document.requirements,
+        budgets: judgement?.budgets ?? [],
+        causes: judgement?.causes ?? [],
+      },
+    [document, run.plan.axes, judgement],
+  );
   const links = useMemo(() => textLinks(workspace, run, context), [workspace, run, context]);
   const chosen = state.point !== null && state.point < run.points ? state.point : set === null ? 0 : null;
 
@@ -120,7 +134,7 @@ export function RunView(props: Props) {
                       onPoint={(next) => show({ point: next })}
                       waiting={waitingFor(run, document !== null)}
                       allowed={allowed}
-                      onCursor={setCursor}
+                      onCursor={moved}
                     />
                   ),
                 },
@@ -142,17 +156,11 @@ export function RunView(props: Props) {
               ]}
             />
           )}
-          {document !== null && (
+          {matter !== null && (
             <SpreadView
-              matter={{
-                axes: run.plan.axes,
-                readings: document.readings,
-                requirements: document.requirements,
-                budgets: first.judgement?.budgets ?? [],
-                causes: first.judgement?.causes ?? [],
-              }}
+              matter={matter}
               budgetsMissing={
-                first.judgement === null ? "to come" : first.judgement.budgets === null ? "too large" : null
+                judgement === null ? "to come" : judgement.budgets === null ? "too large" : null
               }
               links={links}
               subject={state.subject}
@@ -169,7 +177,7 @@ export function RunView(props: Props) {
           span={span}
           chosen={chosen}
           point={point}
-          cursor={cursor}
+          onCursor={onCursor}
           onShow={show}
         />
       </div>

@@ -1,5 +1,6 @@
 "use client";
 
+import { useMemo } from "react";
 import { SelectField } from "@/app/_components/ui/field";
 import type { TextLinks } from "../text-links";
 import { BudgetBars } from "./budget-bars";
@@ -20,12 +21,16 @@ interface Props {
 
 /** How the tolerances spread one value: its distribution over the draws, and its error budget. */
 export function SpreadView({ matter, budgetsMissing, links, subject, setting, onSubject }: Props) {
-  const subjects = subjectsOf(matter);
+  const subjects = useMemo(() => subjectsOf(matter), [matter]);
   const chosen = subjects.find(({ key }) => key === subject) ?? subjects[0];
-  if (chosen === undefined) return null;
-  const at = setting !== null && setting < chosen.settings.length ? setting : 0;
-  const { nominal, drawn, limits, budget } = spreadOf(matter, chosen, at);
-  const found = histogram(drawn, limits);
+  const at = setting !== null && setting < (chosen?.settings.length ?? 0) ? setting : 0;
+  const looked = useMemo(() => {
+    if (chosen === undefined) return null;
+    const spread = spreadOf(matter, chosen, at);
+    return { ...spread, found: histogram(spread.drawn, spread.limits) };
+  }, [matter, chosen, at]);
+  if (chosen === undefined || looked === null) return null;
+  const { nominal, drawn, limits, budget, found } = looked;
   return (
     <section
       aria-labelledby="spread"
