@@ -13,10 +13,16 @@ import { type Throwaway, throwaway } from "./throwaway";
 
 const FOLDER = "tests/bench";
 
+/** What takes an hour is measured only when it is named. */
+const LONG: ReadonlySet<string> = new Set(["fuzz"]);
+
 let held: Hold | null = null;
 let cluster: Throwaway | null = null;
 
-/** Measures named by the words (all without any); a measure is a file of tests/bench that measures when it is run. */
+/**
+ * Measures named by the words; a measure is a file of tests/bench that measures when it is run. Without words all but the long
+ * ones, and those that drive a browser only where E2E_URL names a service.
+ */
 function chosen(words: readonly string[]): string[] {
   const all = readdirSync(FOLDER).filter((name) => name.endsWith(".ts"));
   const measures = all
@@ -27,7 +33,14 @@ function chosen(words: readonly string[]): string[] {
   if (unknown.length > 0) {
     throw new Complaint(`There is no measure called ${unknown.join(", ")}. There are: ${names.join(", ")}.`);
   }
-  return words.length === 0 ? names : names.filter((name) => words.includes(name));
+  if (words.length > 0) return names.filter((name) => words.includes(name));
+  const given = process.env.E2E_URL;
+  const short = names.filter((name) => !LONG.has(name));
+  const left = short.filter((name) => !given && drivesBrowser(name));
+  if (left.length > 0) {
+    console.error(`Left out: ${left.join(", ")}. Name one, or set E2E_URL to the address of a service.`);
+  }
+  return short.filter((name) => !left.includes(name));
 }
 
 /** Whether a measure drives the browser, and so needs a running service. */
@@ -68,8 +81,9 @@ onInterrupt(async () => {
 
 try {
   const words = process.argv.slice(2);
-  const options = words.filter((word) => word.startsWith("-"));
-  const names = chosen(words.filter((word) => !word.startsWith("-")));
+  const isOption = (word: string) => /^(-|\d)/.test(word);
+  const options = words.filter(isOption);
+  const names = chosen(words.filter((word) => !isOption(word)));
   const env = names.some(drivesBrowser) ? { E2E_URL: await service() } : {};
   const isJson = options.includes("--json");
   const figures: Record<string, unknown> = {};

@@ -141,8 +141,15 @@ function measure(): void {
     );
     const perSection = ladders.map(({ ours }, k) => ours / SECTIONS[k]!);
     all.ladderCostPerSectionOf10000To100 = perSection[3]! / perSection[1]!;
+    // 1 where the cost of a step is linear in the sections, 3 where it is cubic.
+    all.ladderCostExponent = 1 + Math.log(perSection[3]! / perSection[1]!) / Math.log(100);
     if (isJson) console.log(JSON.stringify(all));
-    else console.log(`a step a section, ns: ${perSection.map((each) => each.toFixed(1)).join(", ")}`);
+    else {
+      const each = perSection.map((nanoseconds) => nanoseconds.toFixed(1)).join(", ");
+      console.log(
+        `a step a section, ns: ${each}; cost goes with N to the ${all.ladderCostExponent.toFixed(2)}`,
+      );
+    }
   } finally {
     programs.remove();
   }

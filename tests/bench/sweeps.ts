@@ -15,12 +15,15 @@ interface Swept {
   readonly failed: number;
 }
 
+/** What is proved of a point: nothing, what a neighbour's weights help to, or all afresh at every point. */
+type Proving = "no" | "reused" | "full";
+
 /** Sweeps the first axis whole, each point from its neighbour by the predictor; the best of `times` runs. */
-function sweep(job: Job, isProving: boolean, times: number): Swept {
+function sweep(job: Job, proving: Proving, times: number): Swept {
   const { knob, values } = job.plan.axes[0]!;
   const system = new System(job.design, job.circuit);
   system.turn(knob, values[0]!);
-  const solver = new Ladder(system, isProving);
+  const solver = new Ladder(system, proving !== "no");
   const predictor = new Predictor(system.state);
   let least = Number.POSITIVE_INFINITY;
   let iterations = 0;
@@ -33,6 +36,7 @@ function sweep(job: Job, isProving: boolean, times: number): Swept {
     predictor.reset();
     for (const value of values) {
       system.turn(knob, value);
+      if (proving === "full") solver.reset();
       const outcome = solver.solve(predictor.predict());
       predictor.learn(outcome.kind === "converged");
       iterations += outcome.iterations;
@@ -64,19 +68,26 @@ function measure(): void {
     ladder10000: ladder(10_000),
   };
   for (const [name, job] of Object.entries(jobs)) {
-    const times = job.circuit.size > 1000 ? 2 : 40;
-    const bare = sweep(job, false, times);
-    const proved = sweep(job, true, times);
+    const times = job.circuit.size > 1000 ? 4 : 40;
+    const bare = sweep(job, "no", times);
+    const proved = sweep(job, "reused", times);
+    const afresh = sweep(job, "full", times);
+    // What a certificate adds to a point, as a part of what solving it takes.
+    const beside = ({ pointsPerSecond }: Swept) => bare.pointsPerSecond / pointsPerSecond - 1;
     Object.assign(all, {
       [`${name}PointsPerSecond`]: bare.pointsPerSecond,
       [`${name}MillisecondsPerPoint`]: 1000 / bare.pointsPerSecond,
       [`${name}IterationsPerPoint`]: bare.iterationsPerPoint,
       [`${name}FailedPoints`]: bare.failed,
+      [`${name}ProvedPointsPerSecond`]: proved.pointsPerSecond,
       [`${name}ProvedOfUnproved`]: proved.pointsPerSecond / bare.pointsPerSecond,
+      [`${name}CertificateReusedOfSolve`]: beside(proved),
+      [`${name}CertificateFullOfSolve`]: beside(afresh),
     });
     const parts = [
       `${name}: ${n(bare.pointsPerSecond)} points/s, ${n(bare.iterationsPerPoint)} steps a point, ${bare.failed} failed`,
       `proved ${n(proved.pointsPerSecond)} points/s`,
+      `a certificate takes ${n(beside(proved))} of the solve, afresh ${n(beside(afresh))}`,
     ];
     const script = theirs?.[name];
     if (script !== undefined) {
