@@ -97,6 +97,6 @@ function answerHere(): QuestionThread {
 
 /** The one of the page. */
 export const language = new Language(
-  () => new Worker(new URL("./language.worker.ts", import.meta.url), { type: "module" }) as QuestionThread,
+  () => new Worker(new URL("./text.worker.ts", import.meta.url), { type: "module" }) as QuestionThread,
   answerHere,
 );

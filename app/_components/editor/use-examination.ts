@@ -28,7 +28,7 @@ export function useExamination(text: string): {
   const checking = useRef<Checking | null>(null);
 
   useEffect(() => {
-    const thread = new Worker(new URL("./check.worker.ts", import.meta.url), { type: "module" });
+    const thread = new Worker(new URL("./text.worker.ts", import.meta.url), { type: "module" });
     thread.onerror = () => setBroken(true);
     checking.current = new Checking(thread as CheckThread, (examination, of) => {
       setBroken(false);

@@ -1,11 +1,15 @@
 "use client";
 
-import { type ReactNode, type RefObject, useEffect, useState } from "react";
-import { namesAt } from "@/app/_components/drawing/chosen";
-import { ConnectionDrawing } from "@/app/_components/drawing/connection-drawing";
-import { useConnections } from "@/app/_components/drawing/use-connections";
+import dynamic from "next/dynamic";
+import { type ReactNode, type RefObject, useState } from "react";
 import type { EditorHandle } from "@/app/_components/editor/editor-handle";
 import { Tabs } from "@/app/_components/ui/tabs";
+
+// Fetched when it is first looked at.
+const SheetConnections = dynamic(() => import("./sheet-connections").then((all) => all.SheetConnections), {
+  ssr: false,
+  loading: () => <p className="border-y py-3 text-quiet text-sm">The drawing is coming…</p>,
+});
 
 /** Where the cursor rests in the text, and the names that what stands there has in the circuit. */
 export interface CursorAt {
@@ -38,30 +42,5 @@ export function SheetSide({ preview, text, cursor, editor }: Props) {
         },
       ]}
     />
-  );
-}
-
-/** The drawing of the text's connections, linked both ways: what is chosen in it is shown in the text, and the cursor is marked in it. */
-function SheetConnections({ text, cursor, editor }: Omit<Props, "preview">) {
-  const connections = useConnections(text);
-  const [chosen, setChosen] = useState<readonly string[]>([]);
-  useEffect(() => {
-    if (connections !== null && cursor !== null) {
-      setChosen(namesAt(connections, cursor.offset, cursor.names));
-    }
-  }, [connections, cursor]);
-  // A mark in the text is of the drawing, and goes with it.
-  useEffect(() => () => editor.current?.show(null), [editor]);
-  return (
-    <section aria-label="Connections" className="h-[max(420px,calc(100dvh-300px))]">
-      <ConnectionDrawing
-        connections={connections}
-        chosen={chosen}
-        onChoose={(name, span) => {
-          setChosen([name]);
-          editor.current?.show(span);
-        }}
-      />
-    </section>
   );
 }
