@@ -1,12 +1,13 @@
 "use client";
 
 import { useRouter } from "next/navigation";
-import { useState } from "react";
+import { useEffect, useState } from "react";
 import { counted } from "@/app/_components/ui/count";
 import { Notice } from "@/app/_components/ui/notice";
 import { PageHeader } from "@/app/_components/ui/page-header";
 import { EmptyState } from "@/app/_components/ui/states";
 import { useAddress } from "@/app/_components/ui/use-address";
+import { isLive, type RunState } from "../[id]/run-shapes";
 import { ChosenRuns } from "./chosen-runs";
 import { type ComparedRun, MOST } from "./compare-shapes";
 import { readCompareState, writeCompareState } from "./compare-state";
@@ -15,6 +16,9 @@ import { ComparedReadings } from "./compared-readings";
 import { ComparedRequirements } from "./compared-requirements";
 import { RunPicker } from "./run-picker";
 import { TextDifferences } from "./text-differences";
+
+/** Ms between two looks at runs that are under way. */
+const REST = 2000;
 
 interface Props {
   readonly workspace: string;
@@ -31,6 +35,12 @@ export function CompareView({ workspace, runs, lost, search }: Props) {
   const [state, setState] = useState(() => readCompareState(new URLSearchParams(search)));
   const ids = runs.map(({ run }) => run.id);
   useAddress(writeCompareState(ids, state));
+  const isMoving = runs.some(({ run }) => isLive(run.status) || isUnjudged(run));
+  useEffect(() => {
+    if (!isMoving) return;
+    const timer = setInterval(() => router.refresh(), REST);
+    return () => clearInterval(timer);
+  }, [isMoving, router]);
   const choose = (next: readonly string[]) => {
     // What was chosen of the curves before belongs to other settings now; how they are shown does not.
     const kept = { ...state, families: null, point: null, origin: null, only: null };
@@ -80,4 +90,8 @@ export function CompareView({ workspace, runs, lost, search }: Props) {
       </div>
     </>
   );
+}
+
+function isUnjudged({ status, judgement, error }: RunState): boolean {
+  return status === "done" && judgement === null && error === null;
 }
