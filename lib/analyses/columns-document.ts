@@ -3,18 +3,19 @@ import { type DocumentFrame, frameOf, type RunMatter } from "./document";
 import type { AxisDocument } from "./result";
 
 /**
- * The binary form of a run document, for readers of many numbers. Little-endian, in this order, each part beginning at a multiple
- * of 8 bytes: the text "swcolumn"; the length of the head in bytes, as Float64; the head, JSON in UTF-8, which is the run document
- * without its columns, with `points` a number, a `count` in place of the values of each axis, and the readings per point named in
- * `read`; then the values of each axis as Float64; then one Float64 a point for each of `traces`, each of `read`, and the bound
- * (V), NaN where there is none; then one byte a point for the outcome, its index in `outcomes` of the head, 255 where not solved.
+ * The binary form of a run document, for readers of many numbers. Little-endian, each part beginning at a multiple of 8 bytes: the
+ * text "swcolumn"; columns of Float64; the head; the length of the head in bytes, as Float64. The head is JSON in UTF-8, filled up
+ * with spaces: the run document without its columns, with `points` a number, a `count` in place of the values of each axis, and
+ * `columns`, the names of the columns in the order in which they lie. A column has one value a point, NaN where there is none:
+ * "trace/k" of the k-th of `traces`, "read/k" of the k-th of `read`, "bound" (V), "outcome" (an index into `outcomes`); "axis/k"
+ * has the values of the k-th axis. What the head says of all columns comes after them, so that they can be sent as they are read.
  */
 const MARK = "swcolumn";
-const NOT_SOLVED = 255;
 
 interface Head extends Omit<DocumentFrame, "axes"> {
   readonly axes: readonly (Omit<AxisDocument, "values"> & { readonly count: number })[];
   readonly points: number;
+  readonly columns: readonly string[];
   readonly outcomes: readonly OutcomeKind[];
   readonly traces: readonly Named[];
   /** Readings per point, which have a column; `readings` has the others. */
@@ -42,63 +43,75 @@ export interface ColumnsDocument extends DocumentFrame {
   };
 }
 
-/** The bytes of what is known, as pieces to be sent one after another; columns are not copied. */
-export function encodeColumns(matter: RunMatter): Uint8Array[] {
+/** The bytes that the binary form begins with. */
+export function encodeMark(): Uint8Array {
+  return new TextEncoder().encode(MARK);
+}
+
+/** The bytes of a column where it lies. */
+export function encodeColumn({ buffer, byteOffset, byteLength }: Float64Array): Uint8Array {
+  return new Uint8Array(buffer as ArrayBuffer, byteOffset, byteLength);
+}
+
+/** What follows the columns of traces, bounds and outcomes that were sent, in pieces; `sent` are their names in that order. */
+export function encodeRest(matter: RunMatter, sent: readonly string[]): Uint8Array[] {
   const frame = frameOf(matter);
-  const ofPoints = frame.readings.filter(({ per }) => per === "point");
+  const read = frame.readings.filter(({ per }) => per === "point");
   const head: Head = {
     ...frame,
     axes: frame.axes.map(({ values, ...axis }) => ({ ...axis, count: values.length })),
     points: matter.outcome.length,
+    columns: [...sent, ...frame.axes.map((_, k) => `axis/${k}`), ...read.map((_, k) => `read/${k}`)],
     outcomes: OUTCOMES,
     traces: matter.plan.traces.map(({ name, unit }) => ({ name, unit })),
-    read: ofPoints.map(({ name, unit }) => ({ name, unit })),
+    read: read.map(({ name, unit }) => ({ name, unit })),
     readings: frame.readings.filter(({ per }) => per === "sweep"),
   };
   const json = new TextEncoder().encode(JSON.stringify(head));
   const padded = new Uint8Array(8 * Math.ceil(json.length / 8)).fill(32);
   padded.set(json);
-  const columns = [
-    ...frame.axes.map(({ values }) => Float64Array.from(values)),
-    ...matter.traces,
-    ...ofPoints.map(({ values }) => Float64Array.from(values, (value) => value ?? Number.NaN)),
-    matter.bound,
-  ];
-  const outcome = Uint8Array.from(matter.outcome, (index) => (Number.isNaN(index) ? NOT_SOLVED : index));
   return [
-    new TextEncoder().encode(MARK),
-    bytesOf(Float64Array.of(json.length)),
+    ...frame.axes.map(({ values }) => encodeColumn(Float64Array.from(values))),
+    ...read.map(({ values }) => encodeColumn(Float64Array.from(values, (value) => value ?? Number.NaN))),
     padded,
-    ...columns.map(bytesOf),
-    outcome,
+    encodeColumn(Float64Array.of(padded.length)),
   ];
 }
 
-function bytesOf({ buffer, byteOffset, byteLength }: Float64Array): Uint8Array {
-  return new Uint8Array(buffer as ArrayBuffer, byteOffset, byteLength);
+/** All of it, as pieces to be sent one after another; columns are not copied. */
+export function encodeColumns(matter: RunMatter): Uint8Array[] {
+  const names = [...matter.traces.map((_, k) => `trace/${k}`), "bound", "outcome"];
+  const columns = [...matter.traces, matter.bound, matter.outcome];
+  return [encodeMark(), ...columns.map(encodeColumn), ...encodeRest(matter, names)];
 }
 
-/** Reads the binary form; the columns lie in `buffer` itself. Throws a RangeError for bytes that are not of this form. */
+/** Reads the binary form; the columns lie in `buffer` itself. Throws a RangeError for bytes that are not of this form, or not all of it. */
 export function decodeColumns(buffer: ArrayBuffer): ColumnsDocument {
   const text = new TextDecoder();
-  if (buffer.byteLength < 16 || text.decode(new Uint8Array(buffer, 0, 8)) !== MARK) {
+  const isMarked = buffer.byteLength >= 16 && text.decode(new Uint8Array(buffer, 0, 8)) === MARK;
+  const [length] =
+    isMarked && buffer.byteLength % 8 === 0 ? new Float64Array(buffer, buffer.byteLength - 8, 1) : [];
+  if (length === undefined || !Number.isInteger(length) || length < 2 || length > buffer.byteLength - 16) {
     throw new RangeError("These bytes are not the columns of a run.");
   }
-  const [length] = new Float64Array(buffer, 8, 1);
-  const head: Head = JSON.parse(text.decode(new Uint8Array(buffer, 16, length!)));
-  let at = 16 + 8 * Math.ceil(length! / 8);
-  const next = (count = head.points) => {
-    const column = new Float64Array(buffer, at, count);
-    at += column.byteLength;
-    return column;
-  };
-  const { outcomes, points, axes, traces, read, ...frame } = head;
-  const swept = axes.map(({ count, ...axis }) => ({ ...axis, values: [...next(count)] }));
-  const shown = traces.map((trace) => ({ ...trace, values: next() }));
-  const derived = read.map((one) => ({ ...one, values: next() }));
-  const bound = next();
-  const codes = new Uint8Array(buffer, at, points);
+  const head: Head = JSON.parse(text.decode(new Uint8Array(buffer, buffer.byteLength - 8 - length, length)));
+  const { outcomes, points, columns, axes, traces, read, ...frame } = head;
+  const found = new Map<string, Float64Array>();
+  let at = 8;
+  for (const name of columns) {
+    const count = name.startsWith("axis/") ? axes[Number(name.slice(5))]!.count : points;
+    found.set(name, new Float64Array(buffer, at, count));
+    at += 8 * count;
+  }
+  const column = (name: string) => found.get(name) ?? new Float64Array(points).fill(Number.NaN);
+  const codes = column("outcome");
   const outcome = new Array<OutcomeKind | null>(points);
   for (let k = 0; k < points; k++) outcome[k] = outcomes[codes[k]!] ?? null;
-  return { ...frame, axes: swept, traces: shown, read: derived, points: { outcome, bound } };
+  return {
+    ...frame,
+    axes: axes.map(({ count: _, ...axis }, k) => ({ ...axis, values: [...column(`axis/${k}`)] })),
+    traces: traces.map((trace, k) => ({ ...trace, values: column(`trace/${k}`) })),
+    read: read.map((one, k) => ({ ...one, values: column(`read/${k}`) })),
+    points: { outcome, bound: column("bound") },
+  };
 }

@@ -65,20 +65,23 @@ describe("the binary form of a run document", () => {
     expect(listed(read.points.bound)).toEqual(points.bound);
   });
 
-  it("lays each column at a multiple of 8 bytes, little-endian, as its docstring says", () => {
+  it("lays each column at a multiple of 8 bytes, little-endian, and the head behind them, as its docstring says", () => {
     const view = new DataView(bytes);
-    const length = view.getFloat64(8, true);
-    const head = JSON.parse(new TextDecoder().decode(new Uint8Array(bytes, 16, length)));
-    expect(head).toMatchObject({ points: 12, traces: [{ name: "y" }, { name: "i" }] });
-    // The four values of the axis come first.
-    const first = 16 + 8 * Math.ceil(length / 8) + 8 * 4;
-    expect(view.getFloat64(first + 8 * 3, true)).toBe(0.1 + 3 / 3);
-    // Two traces, one reading per point and the bounds come before the outcomes.
-    expect(new Uint8Array(bytes, first + 4 * 8 * 12)[9]).toBe(255);
-    expect(bytes.byteLength).toBe(first + 4 * 8 * 12 + 12);
+    const end = bytes.byteLength - 8;
+    const length = view.getFloat64(end, true);
+    const head = JSON.parse(new TextDecoder().decode(new Uint8Array(bytes, end - length, length)));
+    expect(head).toMatchObject({
+      points: 12,
+      traces: [{ name: "y" }, { name: "i" }],
+      columns: ["trace/0", "trace/1", "bound", "outcome", "axis/0", "read/0"],
+    });
+    expect(view.getFloat64(8 + 8 * 3, true)).toBe(0.1 + 3 / 3);
+    expect(view.getFloat64(8 + 8 * (3 * 12 + 10), true)).toBe(OUTCOMES.indexOf("singular"));
+    expect(end - length).toBe(8 + 8 * (5 * 12 + 4));
   });
 
-  it("refuses other bytes", () => {
+  it("refuses other bytes, and a part of its own", () => {
+    expect(() => decodeColumns(bytes.slice(0, bytes.byteLength - 24))).toThrow(RangeError);
     expect(() => decodeColumns(new TextEncoder().encode('{"format":"sweepwright-run/1"}').buffer)).toThrow(
       RangeError,
     );

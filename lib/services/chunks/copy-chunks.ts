@@ -17,7 +17,7 @@ const HEAD = 19;
 
 /**
  * Columns of a run by PostgreSQL's binary copy: a question answers `bytea` as text of twice its length, which takes five times as
- * long for a million values. Each chunk is handed on as it arrives, in no certain order, all of one moment; it is valid during
+ * long for a million values. Each chunk is handed on as it arrives, column after column, all of one moment; it is valid during
  * that call only. `names` are those of columns, `runId` that of a run, neither from outside.
  */
 export async function copyChunks(
@@ -59,6 +59,7 @@ function statement(runId: string, names: readonly string[]): string {
     SELECT c.${c.column.name}, s.${s.from.name}, c.${c.index.name}, c.${c.data.name}
     FROM chunk c JOIN shard s ON s.${s.runId.name} = c.${c.runId.name} AND s.${s.index.name} = c.${c.shardIndex.name}
     WHERE c.${c.runId.name} = ${escapeLiteral(runId)} AND c.${c.column.name} IN (${quoted})
+    ORDER BY c.${c.column.name}
   ) TO STDOUT (FORMAT binary)`;
 }
 

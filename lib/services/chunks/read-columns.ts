@@ -12,12 +12,13 @@ const MANY = 100_000;
 /**
  * The stored columns of a run, each of `points` values, NaN where a point is unsolved or its shard is not in yet. `names` picks
  * columns ("trace/0", "outcome", …); without it all are read. A column of which nothing is stored yet is absent from the map.
- * Authorises nothing: for services that have done so.
+ * `onColumn` is told of each that has something stored, as soon as it is whole. Authorises nothing: for services that have done so.
  */
 export async function readColumns(
   runId: string,
   points: number,
   names?: readonly string[],
+  onColumn: (name: string, column: Float64Array) => void = () => undefined,
 ): Promise<Map<string, Float64Array>> {
   const columns = new Map<string, Float64Array>();
   const take = ({ name, at, data }: FoundChunk) => {
@@ -29,11 +30,18 @@ export async function readColumns(
     decodeInto(values, at, data);
   };
   if (names !== undefined && points * names.length > MANY) {
-    await copyChunks(runId, names, take);
+    let last: string | null = null;
+    await copyChunks(runId, names, (found) => {
+      if (last !== null && last !== found.name) onColumn(last, columns.get(last)!);
+      last = found.name;
+      take(found);
+    });
+    if (last !== null) onColumn(last, columns.get(last)!);
     return columns;
   }
   const which = names === undefined ? undefined : inArray(chunk.column, [...names]);
   for (const found of await chunks(database(), eq(chunk.runId, runId), which)) take(found);
+  for (const [name, column] of columns) onColumn(name, column);
   return columns;
 }
 

@@ -3,7 +3,6 @@ import { database } from "@/db/client";
 import { revision } from "@/db/schema/revision";
 import { run } from "@/db/schema/run";
 import { shard } from "@/db/schema/shard";
-import { encodeColumns } from "@/lib/analyses/columns-document";
 import { type RunMatter, toDocument } from "@/lib/analyses/document";
 import type { Plan } from "@/lib/analyses/plan";
 import type { RunDocument } from "@/lib/analyses/result";
@@ -43,28 +42,25 @@ export interface FoundDocument extends Found {
  * "too many" while other large ones are being read.
  */
 export async function getRunDocument(actor: Actor, id: string): Promise<FoundDocument> {
-  return found(actor, id, [...POINT_COLUMNS, "iterations", "rung"], (matter) => ({
-    document: toDocument(matter),
-  }));
+  const asked = await askedFor(actor, id);
+  const { etag, large, release } = asked;
+  try {
+    const matter = await matterOf(asked, ["outcome", "bound", "iterations", "rung"]);
+    return { document: toDocument(matter), etag, large, release };
+  } catch (error) {
+    release();
+    throw error;
+  }
 }
 
-/** The same in its binary form, of the same version and limits: pieces of bytes, to be sent one after another. */
-export async function getRunColumns(
-  actor: Actor,
-  id: string,
-): Promise<Found & { readonly pieces: readonly Uint8Array[] }> {
-  return found(actor, id, POINT_COLUMNS, (matter) => ({ pieces: encodeColumns(matter) }));
+/** A run that the actor may read, and room in this process for its numbers. */
+export interface Asked extends Found {
+  readonly run: RunRecord;
+  readonly plan: Plan;
+  readonly text: string;
 }
 
-/** What every form has of a point, beside the traces. */
-const POINT_COLUMNS = ["outcome", "bound"] as const;
-
-async function found<T>(
-  actor: Actor,
-  id: string,
-  names: readonly string[],
-  of: (matter: RunMatter) => T,
-): Promise<Found & T> {
+export async function askedFor(actor: Actor, id: string): Promise<Asked> {
   const db = database();
   const asked = await findRun(db, actor, id);
   authorize(actor, "run.read", asked);
@@ -76,25 +72,21 @@ async function found<T>(
   const { plan, text } = record!;
   const numbers = asked.points * (plan.traces.length + 4);
   const release = roomFor(actor.userId, numbers);
-  try {
-    const matter = await matterOf(asked, plan, text, names);
-    return { ...of(matter), etag: versionOf(asked), large: numbers >= LARGE, release };
-  } catch (error) {
-    release();
-    throw error;
-  }
+  return { run: asked, plan, text, etag: versionOf(asked), large: numbers >= LARGE, release };
 }
 
-/** `names` are the columns wanted beside the traces; others are left without a value. */
-async function matterOf(
-  asked: RunRecord,
-  plan: Plan,
-  text: string,
+/**
+ * What is known of a run. `names` are the columns wanted beside the traces; others are left without a value. `onColumn` is told of
+ * each column as soon as it is whole.
+ */
+export async function matterOf(
+  { run: asked, plan, text }: Asked,
   names: readonly string[],
+  onColumn?: (name: string, column: Float64Array) => void,
 ): Promise<RunMatter> {
   const traces = plan.traces.map((_, i) => traceColumn(i));
   const reading = Promise.all([
-    readColumns(asked.id, asked.points, [...traces, ...names]),
+    readColumns(asked.id, asked.points, [...traces, ...names], onColumn),
     database()
       .select({ failures: shard.failures })
       .from(shard)
