@@ -32,7 +32,7 @@ const EXPECTED: Readonly<Record<string, readonly [string, number]>> = {
   "what a path that turns back alone solves": ["homotopy", 2086],
 };
 
-describe("hard circuits from a cold start", () => {
+describe("hard circuits from a cold start", { timeout: 60_000 }, () => {
   test("are all listed", () => {
     expect(Object.keys(HARD)).toEqual(Object.keys(EXPECTED));
   });
