@@ -88,9 +88,9 @@ export async function picture(page: Page, name: string): Promise<string> {
   return path;
 }
 
-/** Fails with every breach of WCAG 2.1 A and AA that axe finds, each with its places. `leaveOut` names parts made by others. */
+/** Fails with every breach of WCAG 2.2 A and AA that axe finds, each with its places. `leaveOut` names parts made by others. */
 export async function expectAccessible(page: Page, leaveOut: readonly string[] = []): Promise<void> {
-  let axe = new AxeBuilder({ page }).withTags(["wcag2a", "wcag2aa", "wcag21a", "wcag21aa"]);
+  let axe = new AxeBuilder({ page }).withTags(["wcag2a", "wcag2aa", "wcag21a", "wcag21aa", "wcag22aa"]);
   for (const selector of leaveOut) axe = axe.exclude(selector);
   const { violations } = await axe.analyze();
   const breaches = violations.map(({ id, help, nodes }) => ({
