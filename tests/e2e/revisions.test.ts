@@ -99,7 +99,8 @@ test("the history tells what changed in each revision; two of it are compared in
   await page.getByLabel("in one column").check();
   await page.waitForURL(/text=inline/);
   await page.reload();
-  expect(await page.getByLabel("in one column").isChecked()).toBe(true);
+  await page.getByRole("figure", { name: "Difference of revisions 1 and 2" }).waitFor();
+  expect(await page.getByRole("radio", { name: "in one column" }).isChecked()).toBe(true);
 });
 
 test("a revision never run, one that cannot run, and two that mean the same say so", async () => {

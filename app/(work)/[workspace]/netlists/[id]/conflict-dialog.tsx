@@ -6,7 +6,10 @@ import { Button } from "@/app/_components/ui/button";
 import { Dialog } from "@/app/_components/ui/dialog";
 import type { SheetState } from "./use-sheet";
 
-const MergeDialog = dynamic(() => import("./merge-dialog").then((found) => found.MergeDialog));
+// With a placeholder of its own: without one the whole sheet, its text included, would be put away until it is here.
+const MergeDialog = dynamic(() => import("./merge-dialog").then((found) => found.MergeDialog), {
+  loading: () => null,
+});
 
 /** Somebody saved a revision meanwhile: nothing of either text is lost, whichever way the reader takes. */
 export function ConflictDialog({ sheet }: { readonly sheet: SheetState }) {

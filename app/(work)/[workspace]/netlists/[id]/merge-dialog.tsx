@@ -24,11 +24,8 @@ interface Props {
  * that both changed is chosen by the reader, and the checker reads the result before it can be saved.
  */
 export function MergeDialog({ sheet, theirs, onBack, onDone }: Props) {
-  const [mine] = useState(() => sheet.settle());
-  const parts = useMemo(
-    () => mergeTexts(mine, sheet.saved.text, theirs.text),
-    [mine, sheet.saved.text, theirs.text],
-  );
+  const { text: mine, saved } = sheet;
+  const parts = useMemo(() => mergeTexts(mine, saved.text, theirs.text), [mine, saved.text, theirs.text]);
   const conflicts = useMemo(() => conflictsIn(parts), [parts]);
   const [choices, setChoices] = useState<ReadonlyMap<number, Choice>>(new Map());
   const [form, setForm] = useState<"beside" | "inline" | null>("inline");

@@ -200,7 +200,6 @@ export function useSheet({ workspace, netlistId, writer, latest, mayQueue }: Ask
     saved,
     text,
     edited,
-    settle,
     examined,
     newest,
     broken,
