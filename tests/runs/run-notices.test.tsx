@@ -3,6 +3,7 @@ import { describe, expect, it, test } from "vitest";
 import { FailedPoints } from "@/app/(work)/[workspace]/runs/[id]/failed-points";
 import { RequirementList } from "@/app/(work)/[workspace]/runs/[id]/requirement-list";
 import type { RunState } from "@/app/(work)/[workspace]/runs/[id]/run-shapes";
+import { RunStatusLine } from "@/app/(work)/[workspace]/runs/[id]/run-status-line";
 import { StaleNotice } from "@/app/(work)/[workspace]/runs/[id]/stale-notice";
 import { UnstablePoints } from "@/app/(work)/[workspace]/runs/[id]/unstable-points";
 import type { RequirementDocument } from "@/lib/analyses/result";
@@ -37,6 +38,15 @@ describe("a run that time has gone past", () => {
     expect(notice({}, 2)).toBe("");
     expect(notice({ status: "running" }, 5)).toBe("");
   });
+});
+
+test("a run whose operating points are still sought says how far that is", () => {
+  const run = { status: "running", points: 26, pointsDone: 26, pointsFailed: 0, error: null } as RunState;
+  const words = text(<RunStatusLine run={{ ...run, search: { rows: 2, rowsDone: 1 } }} behind={false} />);
+  expect(words).toMatch(/All points are solved; operating points are still being sought: 1 of 2 settings/);
+  expect(text(<RunStatusLine run={{ ...run, pointsDone: 3 }} behind={false} />)).toMatch(
+    /Being solved: 3 of 26 points/,
+  );
 });
 
 test("failed points stand by their reason, with places and draws to go to, the most first", () => {

@@ -5,7 +5,7 @@ import { isLive, type RunState } from "./run-shapes";
 
 /** How far the run is, in words, and whether its curves are `behind` that: announced politely when it changes state, not at every point. */
 export function RunStatusLine({ run, behind }: { readonly run: RunState; readonly behind: boolean }) {
-  const { status, points, pointsDone } = run;
+  const { status, points, pointsDone, search } = run;
   return (
     <section aria-label="State of the run" className="grid border-b">
       <div className="flex flex-wrap items-baseline gap-x-4 gap-y-1 px-4 py-2.5 text-sm md:px-6">
@@ -20,7 +20,9 @@ export function RunStatusLine({ run, behind }: { readonly run: RunState; readonl
           {status === "running" && (
             <span className="figures" data-points-done={pointsDone}>
               {" "}
-              {formatCount(pointsDone)} of {counted(points, "point")}
+              {search && pointsDone === points
+                ? `${formatCount(search.rowsDone)} of ${counted(search.rows, "setting")}`
+                : `${formatCount(pointsDone)} of ${counted(points, "point")}`}
               {run.pointsFailed > 0 && `, ${formatCount(run.pointsFailed)} failed`}
             </span>
           )}
@@ -37,13 +39,15 @@ export function RunStatusLine({ run, behind }: { readonly run: RunState; readonl
 }
 
 /** The state in a sentence; while running it does not hold the count, which would be read out again and again. */
-function sentence({ status, points, pointsDone, pointsFailed, error }: RunState): string {
+function sentence({ status, points, pointsDone, pointsFailed, error, search }: RunState): string {
   const solved = pointsDone - pointsFailed;
   switch (status) {
     case "queued":
       return "Waiting for a worker. Curves appear here with the first points.";
     case "running":
-      return "Being solved:";
+      return search && pointsDone === points
+        ? "All points are solved; operating points are still being sought:"
+        : "Being solved:";
     case "failed":
       return `${error ?? "The run could not be computed."} ${kept(pointsDone)}`;
     case "cancelled":
