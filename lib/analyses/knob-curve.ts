@@ -1,6 +1,8 @@
 import type { System } from "@/lib/circuit/system";
 import type { Curved } from "@/lib/solver/curve";
 import type { SparseShape } from "@/lib/solver/elimination";
+import { log } from "@/lib/units/elementary";
+import { exp } from "@/lib/units/exponential";
 import type { AxisDocument } from "./result";
 
 /** Steps that a sweep of the whole axis takes at least. */
@@ -25,7 +27,7 @@ export class KnobCurve implements Curved {
     const { knob: _, values, scale } = axis;
     const [low, high] = [Math.min(...values), Math.max(...values)];
     this.isLogarithmic = scale === "logarithmic" && low > 0;
-    const span = this.isLogarithmic ? Math.log(high / low) : high - low;
+    const span = this.isLogarithmic ? log(high / low) : high - low;
     this.unit = span > 0 ? span / STEPS : 1;
     this.least = this.toParameter(low);
     this.most = this.toParameter(high);
@@ -34,11 +36,11 @@ export class KnobCurve implements Curved {
   }
 
   toParameter(value: number): number {
-    return (this.isLogarithmic ? Math.log(value) : value) / this.unit;
+    return (this.isLogarithmic ? log(value) : value) / this.unit;
   }
 
   toValue(parameter: number): number {
-    return this.isLogarithmic ? Math.exp(parameter * this.unit) : parameter * this.unit;
+    return this.isLogarithmic ? exp(parameter * this.unit) : parameter * this.unit;
   }
 
   turn(parameter: number): void {

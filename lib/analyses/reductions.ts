@@ -1,4 +1,5 @@
 import type { ReductionName } from "@/lib/language/ast";
+import { log10, power } from "@/lib/units/elementary";
 import { LineFit } from "./line";
 
 /** The first knob over the points that a reduction goes along. */
@@ -18,9 +19,7 @@ export class Course {
   fit(over: "decades" | "units"): LineFit {
     const known = this.fits.get(over);
     if (known !== undefined) return known;
-    const made = new LineFit(
-      over === "units" ? this.knob : this.knob.map((value) => Math.log10(Math.abs(value))),
-    );
+    const made = new LineFit(over === "units" ? this.knob : this.knob.map((value) => log10(Math.abs(value))));
     this.fits.set(over, made);
     return made;
   }
@@ -77,7 +76,7 @@ export function reach(ys: Float64Array, level: number, { knob, rising, isLogarit
     if (above > 0 === below > 0) continue;
     const share = below / (below - above);
     const [a, b] = [knob[before]!, knob[place]!];
-    return isLogarithmic ? a * (b / a) ** share : a + share * (b - a);
+    return isLogarithmic ? a * power(b / a, share) : a + share * (b - a);
   }
   return Number.NaN;
 }
@@ -92,7 +91,7 @@ function widestRun(holds: Float64Array, { knob, rising }: Course): number {
       continue;
     }
     from ??= knob[place]!;
-    widest = Math.max(widest, Math.abs(Math.log10(knob[place]! / from)));
+    widest = Math.max(widest, Math.abs(log10(knob[place]! / from)));
   }
   return widest;
 }

@@ -1,4 +1,4 @@
-import { exponentials } from "@/lib/devices/exponential";
+import { exponentials } from "@/lib/units/exponential";
 import type { LoopWriter } from "./code/loops";
 import { type Compiled, EXPONENTIALS } from "./code/machine";
 import type { StraightCode } from "./code/straight";

@@ -1,3 +1,4 @@
+import { exp, expm1 } from "@/lib/units/exponential";
 import type { BipolarAt, BipolarCurrents } from "./bipolar";
 import { exponentialDoubt, UNIT } from "./rounding";
 
@@ -10,8 +11,8 @@ type Bounds = BipolarCurrents;
  */
 export function bipolarDoubt(at: BipolarAt, vbe: number, vbc: number, out: Bounds): void {
   const { Is, eta, forwardBase, reverseBase, forwardEarly, reverseEarly, doubt } = at;
-  const forward = (Math.exp(vbe / eta) + 1) * (doubt + exponentialDoubt(vbe / eta));
-  const reverse = (Math.exp(vbc / eta) + 1) * (doubt + exponentialDoubt(vbc / eta));
+  const forward = (exp(vbe / eta) + 1) * (doubt + exponentialDoubt(vbe / eta));
+  const reverse = (exp(vbc / eta) + 1) * (doubt + exponentialDoubt(vbc / eta));
   const early = 1 + Math.abs(vbc) * forwardEarly + Math.abs(vbe) * reverseEarly;
   const leakE = leakDoubt(at.leakE, at.etaE, vbe, doubt);
   const leakC = leakDoubt(at.leakC, at.etaC, vbc, doubt);
@@ -20,7 +21,7 @@ export function bipolarDoubt(at: BipolarAt, vbe: number, vbc: number, out: Bound
   if (at.forwardKnee === 0 && at.reverseKnee === 0) return;
   const { factor, byEarly, byCharge } = chargeWithin(at, vbe, vbc, 0);
   const charge = Is * (at.forwardKnee * forward + at.reverseKnee * reverse);
-  const transport = Is * (Math.exp(vbe / eta) + Math.exp(vbc / eta));
+  const transport = Is * (exp(vbe / eta) + exp(vbc / eta));
   const change = 8 * UNIT * early * byEarly.high + charge * byCharge.high + 16 * UNIT * factor;
   out.ic = Is * (forward + reverse) * factor + transport * change + reverseBase * reverse + leakC;
 }
@@ -31,9 +32,9 @@ export function bipolarDoubt(at: BipolarAt, vbe: number, vbc: number, out: Bound
  */
 export function bipolarSpread(at: BipolarAt, vbe: number, vbc: number, delta: number, out: Bounds): void {
   const { Is, eta, forwardBase, reverseBase, forwardEarly, reverseEarly, doubt } = at;
-  const rise = Math.expm1(delta / eta);
-  const tf = Math.exp(vbe / eta);
-  const tr = Math.exp(vbc / eta);
+  const rise = expm1(delta / eta);
+  const tf = exp(vbe / eta);
+  const tr = exp(vbc / eta);
   const changeF = tf * (rise + doubt + 4 * exponentialDoubt(vbe / eta));
   const changeR = tr * (rise + doubt + 4 * exponentialDoubt(vbc / eta));
   const tilt = delta * (forwardEarly + reverseEarly);
@@ -59,12 +60,12 @@ export function bipolarSpread(at: BipolarAt, vbe: number, vbc: number, delta: nu
 }
 
 function leakDoubt(Is: number, eta: number, v: number, doubt: number): number {
-  return Is === 0 ? 0 : Is * (Math.exp(v / eta) + 1) * (doubt + exponentialDoubt(v / eta));
+  return Is === 0 ? 0 : Is * (exp(v / eta) + 1) * (doubt + exponentialDoubt(v / eta));
 }
 
 function leakSpread(Is: number, eta: number, v: number, delta: number, doubt: number): number {
   if (Is === 0) return 0;
-  return (Is / eta) * Math.exp(v / eta) * (Math.expm1(delta / eta) + doubt + 4 * exponentialDoubt(v / eta));
+  return (Is / eta) * exp(v / eta) * (expm1(delta / eta) + doubt + 4 * exponentialDoubt(v / eta));
 }
 
 /** The largest magnitude of a slope within a box, and the most by which it changes there. */
@@ -87,9 +88,8 @@ function chargeWithin(
   const early = Math.abs(1 - vbc * forwardEarly - vbe * reverseEarly);
   const room = delta * (forwardEarly + reverseEarly) + 8 * UNIT * (1 + early);
   const [least, most] = [Math.max(0, early - room), early + room];
-  const rise =
-    Math.exp(delta / eta) * (1 + 4 * exponentialDoubt(Math.max(Math.abs(vbe), Math.abs(vbc)) / eta));
-  const up = Is * (forwardKnee * Math.exp(vbe / eta) + reverseKnee * Math.exp(vbc / eta));
+  const rise = exp(delta / eta) * (1 + 4 * exponentialDoubt(Math.max(Math.abs(vbe), Math.abs(vbc)) / eta));
+  const up = Is * (forwardKnee * exp(vbe / eta) + reverseKnee * exp(vbc / eta));
   const off = Is * (forwardKnee + reverseKnee);
   const root = (a: number, q: number) => Math.sqrt(1 + 4 * a * a * q);
   // With q_2 below 0 a larger |a| makes r smaller, with q_2 above 0 larger.

@@ -1,6 +1,7 @@
 import { thermalVoltage } from "@/lib/units/constants";
+import { log, power } from "@/lib/units/elementary";
+import { exp, expm1 } from "@/lib/units/exponential";
 import type { DiodeAt } from "./diode";
-import { exp, expm1 } from "./exponential";
 import { UNIT } from "./rounding";
 import { type SaturationTerms, saturationCurrent, saturationDoubt } from "./saturation";
 
@@ -66,8 +67,8 @@ export function bipolarAt(terms: BipolarTerms, kelvin: number): BipolarAt {
   const leakC = { ...terms, Is: I_leak_c ?? 0, n: n_leak_c };
   const doubts = [terms, leakE, leakC].map((junction) => saturationDoubt(junction, kelvin));
   const hasRise = beta_power !== null && kelvin !== T0;
-  const rise = hasRise ? (kelvin / T0) ** beta_power : 1;
-  const riseDoubt = hasRise ? Math.abs(beta_power) * (1 + Math.abs(Math.log(kelvin / T0))) : 0;
+  const rise = hasRise ? power(kelvin / T0, beta_power) : 1;
+  const riseDoubt = hasRise ? Math.abs(beta_power) * (1 + Math.abs(log(kelvin / T0))) : 0;
   return {
     Is,
     eta: n * volts,

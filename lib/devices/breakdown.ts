@@ -1,5 +1,6 @@
+import { log } from "@/lib/units/elementary";
+import { exp, expm1 } from "@/lib/units/exponential";
 import { type CurrentAndSlope, type DiodeAt, diodeLaw, junctionOf } from "./diode";
-import { exp, expm1 } from "./exponential";
 import { junctionStep } from "./junction-step";
 import { wrightOmega } from "./wright-omega";
 
@@ -23,7 +24,7 @@ const MOST_STEPS = 60;
 
 /** `amperes` at `volts` V; `eta` is n·V_T of the breakdown. */
 export function breakdownAt({ Rs }: DiodeAt, amperes: number, volts: number, eta: number): BreakdownAt {
-  const origin = Math.min(0, eta * Math.log(amperes / SETTING_OUT) - volts);
+  const origin = Math.min(0, eta * log(amperes / SETTING_OUT) - volts);
   const Is = amperes * exp(-(origin + volts) / eta);
   return { amperes, volts, eta, mirror: { Is, eta, Rs, doubt: 0 }, origin };
 }
@@ -77,7 +78,7 @@ function beyond(at: DiodeAt, reverse: BreakdownAt, v: number, out: CurrentAndSlo
   const a = (amperes * Rs) / reverse.eta;
   let low = -volts;
   let high = past;
-  let t = past - reverse.eta * wrightOmega(past / reverse.eta + Math.log(a));
+  let t = past - reverse.eta * wrightOmega(past / reverse.eta + log(a));
   for (let step = 0; step < MOST_STEPS; step++) {
     if (!(t >= low && t <= high)) t = (low + high) / 2;
     const grown = exp(t / reverse.eta);

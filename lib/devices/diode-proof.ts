@@ -1,3 +1,5 @@
+import { log } from "@/lib/units/elementary";
+import { exp, expm1 } from "@/lib/units/exponential";
 import type { BreakdownAt } from "./breakdown";
 import type { CurrentAndSlope, DiodeAt } from "./diode";
 import { exponentialDoubt, UNIT } from "./rounding";
@@ -11,7 +13,7 @@ export function diodeDoubt(at: DiodeAt, v: number, { i, g }: CurrentAndSlope): n
   const size = Math.abs(i) + Is;
   if (Rs === 0) return size * (doubt + exponentialDoubt(v / eta));
   const a = (Is * Rs) / eta;
-  const argument = Math.abs(v) + eta * (a + Math.abs(Math.log(a)) + 8);
+  const argument = Math.abs(v) + eta * (a + Math.abs(log(a)) + 8);
   return 16 * UNIT * g * argument + size * (doubt + 32 * UNIT);
 }
 
@@ -20,7 +22,7 @@ export function diodeDoubt(at: DiodeAt, v: number, { i, g }: CurrentAndSlope): n
  * with series resistance, where it is 1/(n·V_T·(1 + w)²).
  */
 export function diodeSpread({ eta, doubt }: DiodeAt, v: number, g: number, delta: number): number {
-  return g * (Math.expm1(delta / eta) + doubt + 4 * exponentialDoubt(v / eta));
+  return g * (expm1(delta / eta) + doubt + 4 * exponentialDoubt(v / eta));
 }
 
 /** The most by which `breakdownLaw` may be off at `v` by rounding, A. */
@@ -31,7 +33,7 @@ export function breakdownDoubt(
   { i, g }: CurrentAndSlope,
 ): number {
   const { Is, eta, Rs, doubt } = at;
-  const size = Math.abs(i) + Is + reverse.amperes * Math.exp(-reverse.volts / reverse.eta);
+  const size = Math.abs(i) + Is + reverse.amperes * exp(-reverse.volts / reverse.eta);
   const argument = (Math.abs(v) + reverse.volts) / Math.min(eta, reverse.eta);
   if (Rs === 0) {
     const past = Math.abs(v + reverse.volts) / reverse.eta;
@@ -50,5 +52,5 @@ export function breakdownSpread(
 ): number {
   const eta = Math.min(at.eta, reverse.eta);
   const argument = (Math.abs(v) + reverse.volts) / eta;
-  return g * (Math.expm1(delta / eta) + at.doubt + 4 * exponentialDoubt(argument));
+  return g * (expm1(delta / eta) + at.doubt + 4 * exponentialDoubt(argument));
 }

@@ -1,5 +1,6 @@
 import { thermalVoltage } from "@/lib/units/constants";
-import { exp, expm1 } from "./exponential";
+import { log, log1p } from "@/lib/units/elementary";
+import { exp, expm1 } from "@/lib/units/exponential";
 import { type SaturationTerms, saturationCurrent, saturationDoubt } from "./saturation";
 import { wrightOmega } from "./wright-omega";
 
@@ -54,7 +55,7 @@ export function diodeLaw(at: DiodeAt, v: number, out: CurrentAndSlope): void {
 function withResistance({ Is, eta, Rs }: DiodeAt, v: number, out: CurrentAndSlope): void {
   const u = v / eta;
   const a = (Is * Rs) / eta;
-  const w = wrightOmega(u + a + Math.log(a));
+  const w = wrightOmega(u + a + log(a));
   if (w > 1 && w > 4 * a) {
     out.i = (eta * w) / Rs - Is;
     out.g = w / (1 + w) / Rs;
@@ -73,10 +74,10 @@ function withResistance({ Is, eta, Rs }: DiodeAt, v: number, out: CurrentAndSlop
 /** The junction voltage in V, V less the drop over Rs, good to a few roundings of V. */
 export function junctionOf({ Is, eta, Rs }: DiodeAt, v: number): number {
   const a = (Is * Rs) / eta;
-  return v + eta * (a - wrightOmega(v / eta + a + Math.log(a)));
+  return v + eta * (a - wrightOmega(v / eta + a + log(a)));
 }
 
 /** The voltage in V at which the diode carries `i` A: V = n·V_T·ln(1 + I/Is) + Rs·I. NaN below −Is. */
 export function diodeVoltage({ Is, eta, Rs }: DiodeAt, i: number): number {
-  return eta * Math.log1p(i / Is) + Rs * i;
+  return eta * log1p(i / Is) + Rs * i;
 }

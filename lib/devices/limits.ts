@@ -1,3 +1,6 @@
+import { log1p } from "@/lib/units/elementary";
+import { exp, expm1 } from "@/lib/units/exponential";
+
 /** The limits of an amplifier's output, V; one that is null is dropped exactly. */
 export interface LimitsAt {
   readonly low: number | null;
@@ -28,7 +31,7 @@ export function limited({ low, high }: LimitsAt, s: number, out: Limited): void 
   out.slope = 1;
   if (high !== null) out.slope *= logistic((high - s) / KNEE);
   if (low !== null) out.slope *= logistic((s - low) / KNEE);
-  if (high !== null && low !== null) out.slope *= -Math.expm1((low - high) / KNEE);
+  if (high !== null && low !== null) out.slope *= -expm1((low - high) / KNEE);
 }
 
 /**
@@ -45,11 +48,11 @@ export function limitStep({ low, high }: LimitsAt, s: number, target: number, ma
 }
 
 function softplus(y: number): number {
-  return y > 0 ? y + Math.log1p(Math.exp(-y)) : Math.log1p(Math.exp(y));
+  return y > 0 ? y + log1p(exp(-y)) : log1p(exp(y));
 }
 
 function logistic(y: number): number {
-  if (y > 0) return 1 / (1 + Math.exp(-y));
-  const e = Math.exp(y);
+  if (y > 0) return 1 / (1 + exp(-y));
+  const e = exp(y);
   return e / (1 + e);
 }

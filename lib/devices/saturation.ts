@@ -1,4 +1,6 @@
 import { thermalVoltage } from "@/lib/units/constants";
+import { log, power } from "@/lib/units/elementary";
+import { exp } from "@/lib/units/exponential";
 import { UNIT } from "./rounding";
 
 /** How a saturation current follows temperature. A term whose figure is null is dropped. */
@@ -23,15 +25,15 @@ export interface SaturationTerms {
 export function saturationCurrent({ Is, n, Eg, x, T0 }: SaturationTerms, kelvin: number): number {
   if (kelvin === T0) return Is;
   let current = Is;
-  if (x !== null) current *= (kelvin / T0) ** (x / n);
-  if (Eg !== null) current *= Math.exp((Eg / (n * thermalVoltage(T0))) * ((kelvin - T0) / kelvin));
+  if (x !== null) current *= power(kelvin / T0, x / n);
+  if (Eg !== null) current *= exp((Eg / (n * thermalVoltage(T0))) * ((kelvin - T0) / kelvin));
   return current;
 }
 
 /** Relative error of `saturationCurrent`, by the roundings in its base, exponents and product. */
 export function saturationDoubt({ n, Eg, x, T0 }: SaturationTerms, kelvin: number): number {
   if (kelvin === T0) return 0;
-  const power = x === null ? 0 : Math.abs(x / n) * (1 + Math.abs(Math.log(kelvin / T0)));
+  const power = x === null ? 0 : Math.abs(x / n) * (1 + Math.abs(log(kelvin / T0)));
   const exponent = Eg === null ? 0 : Math.abs((Eg / (n * thermalVoltage(T0))) * ((kelvin - T0) / kelvin));
   return UNIT * (4 * power + 12 * exponent + 12);
 }

@@ -1,3 +1,6 @@
+import { log } from "@/lib/units/elementary";
+import { exp } from "@/lib/units/exponential";
+
 /**
  * Wright omega function of a real z: the w > 0 with w + ln w = z. It is the Lambert W of e^z without the overflow of e^z, so z may
  * reach ±1e300. Relative error below 4 ulp; below −40 and above 1e10 the asymptotic start has every digit.
@@ -10,7 +13,7 @@ export function wrightOmega(z: number): number {
   let w = start(z);
   if (z < -40 || z > 1e10) return w;
   for (let step = 0; step < 2; step++) {
-    const residual = z - w - Math.log(w);
+    const residual = z - w - log(w);
     const above = 1 + w;
     const twice = 2 * above * (above + (2 / 3) * residual);
     w *= 1 + ((residual / above) * (twice - residual)) / (twice - 2 * residual);
@@ -20,7 +23,7 @@ export function wrightOmega(z: number): number {
 
 function start(z: number): number {
   if (z < -1) {
-    const e = Math.exp(z);
+    const e = exp(z);
     return z < -40 ? e : e * (1 - e * (1 - 1.5 * e));
   }
   if (z < 4) {
@@ -28,6 +31,6 @@ function start(z: number): number {
     const t = z - 1;
     return 1 + t * (0.5 + t * (1 / 16 - t / 192));
   }
-  const log = Math.log(z);
-  return z - log + log / z;
+  const first = log(z);
+  return z - first + first / z;
 }

@@ -1,3 +1,5 @@
+import { atan, log, log10, power, tanh } from "@/lib/units/elementary";
+import { exp } from "@/lib/units/exponential";
 import type { Reduced, Signal, Typed } from "./ast";
 
 /** Where an expression finds the values of the point being solved: coherent SI units, temperatures in K. */
@@ -52,7 +54,7 @@ function binary(op: "+" | "-" | "*" | "/" | "^" | "<=" | ">=" | "<" | ">", a: nu
     case "/":
       return a / b;
     case "^":
-      return a ** b;
+      return power(a, b);
     case "<=":
       return truth(a <= b, a, b);
     case ">=":
@@ -78,11 +80,11 @@ function call(typed: Extract<Typed, { op: "call" }>, scope: Scope): number {
   const x = evaluate(args[0]!, scope);
   switch (callee) {
     case "exp":
-      return Math.exp(x);
+      return exp(x);
     case "ln":
-      return Math.log(x);
+      return log(x);
     case "log10":
-      return Math.log10(x);
+      return log10(x);
     case "sqrt":
       return Math.sqrt(x);
     case "abs":
@@ -92,9 +94,9 @@ function call(typed: Extract<Typed, { op: "call" }>, scope: Scope): number {
     case "max":
       return extreme(args, x, scope, Math.max);
     case "tanh":
-      return Math.tanh(x);
+      return tanh(x);
     case "atan":
-      return Math.atan(x);
+      return atan(x);
   }
 }
 

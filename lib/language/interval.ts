@@ -1,3 +1,5 @@
+import { atan, log, log10, power as raised, tanh } from "@/lib/units/elementary";
+import { exp } from "@/lib/units/exponential";
 import type { Signal, Typed } from "./ast";
 
 /** All values from `low` to `high`. */
@@ -22,6 +24,8 @@ export interface IntervalScope {
 /** Relative widening of one operation, four units in the last place each way, and absolute, for underflow. */
 const WIDE = 2 ** -50;
 const TINY = Number.MIN_VALUE * 4;
+/** Powers are good to fewer digits, the fewer the larger they are. */
+const WIDE_POWER = 2 ** -44;
 /** k·T/q with rounded constants. */
 const WIDE_THERMAL = 2 ** -49;
 
@@ -72,8 +76,8 @@ function widened(low: number, high: number, by = WIDE): Interval {
   };
 }
 
-function hull(values: readonly number[]): Interval {
-  return widened(Math.min(...values), Math.max(...values));
+function hull(values: readonly number[], by = WIDE): Interval {
+  return widened(Math.min(...values), Math.max(...values), by);
 }
 
 function binary(
@@ -119,12 +123,13 @@ function power(a: Interval, b: Interval): Interval {
   if (b.low === b.high && Number.isInteger(b.low)) {
     const n = b.low;
     if (n < 0 && a.low <= 0 && a.high >= 0) return ANYTHING;
-    const ends = [a.low ** n, a.high ** n];
-    return hull(n % 2 === 0 && n > 0 && a.low < 0 && a.high > 0 ? [...ends, 0] : ends);
+    const ends = [raised(a.low, n), raised(a.high, n)];
+    return hull(n % 2 === 0 && n > 0 && a.low < 0 && a.high > 0 ? [...ends, 0] : ends, WIDE_POWER);
   }
   if (!(a.low > 0))
     return a.low === 0 && b.low > 0 ? { low: 0, high: power(point(a.high), b).high } : ANYTHING;
-  return hull([a.low ** b.low, a.low ** b.high, a.high ** b.low, a.high ** b.high]);
+  const ends = [raised(a.low, b.low), raised(a.low, b.high), raised(a.high, b.low), raised(a.high, b.high)];
+  return hull(ends, WIDE_POWER);
 }
 
 function call(typed: Extract<Typed, { op: "call" }>, scope: IntervalScope): Interval {
@@ -143,19 +148,19 @@ function call(typed: Extract<Typed, { op: "call" }>, scope: IntervalScope): Inte
       return { low: Math.min(one.low, other.low), high: Math.max(one.high, other.high) };
     }
     case "exp": {
-      const range = rising(Math.exp);
+      const range = rising(exp);
       return { low: Math.max(0, range.low), high: range.high };
     }
     case "ln":
-      return rising(Math.log, Number.MIN_VALUE);
+      return rising(log, Number.MIN_VALUE);
     case "log10":
-      return rising(Math.log10, Number.MIN_VALUE);
+      return rising(log10, Number.MIN_VALUE);
     case "sqrt":
       return rising(Math.sqrt, 0);
     case "tanh":
-      return rising(Math.tanh);
+      return rising(tanh);
     case "atan":
-      return rising(Math.atan);
+      return rising(atan);
     case "abs": {
       const [{ low, high }] = ranges() as [Interval];
       return low >= 0 ? { low, high } : { low: high <= 0 ? -high : 0, high: Math.max(-low, high) };

@@ -1,3 +1,5 @@
+import { log10, power } from "@/lib/units/elementary";
+
 /**
  * Values of sweeps. Both ends are always among them. Values are rounded to 15 significant digits, so that a grid point that
  * is a round number is the same double as its literal (10 nA is 1e-8, not 1.0000000000000002e-8).
@@ -10,13 +12,13 @@ export function countOf(total: number): number {
 
 /** a, then N values a decade from a on, then b; a and b of one sign and different, N whole and above 0. */
 export function decades(a: number, b: number, perDecade: number): number[] {
-  const total = Math.abs(Math.log10(b / a)) * perDecade;
+  const total = Math.abs(log10(b / a)) * perDecade;
   const sign = Math.abs(b) > Math.abs(a) ? 1 : -1;
   const values: number[] = [];
   const last = countOf(total) - 1;
   for (let k = 0; k < last; k++) {
     const whole = Math.floor(k / perDecade);
-    values.push(round(a * 10 ** (sign * whole) * 10 ** ((sign * (k - whole * perDecade)) / perDecade)));
+    values.push(round(a * power(10, sign * whole) * power(10, (sign * (k - whole * perDecade)) / perDecade)));
   }
   values.push(b);
   return values;

@@ -1,4 +1,5 @@
 import { KELVIN, PURE, sameDimension } from "@/lib/units/dimension";
+import { log10 } from "@/lib/units/elementary";
 import { unitOf } from "@/lib/units/quantity";
 import type { Agreement } from "./agreement";
 import type { Knob, Sweep } from "./ast";
@@ -127,7 +128,7 @@ export class SweepCheck {
         this.report.error("PLN3", span, message);
         return null;
       }
-      const points = countOf(Math.abs(Math.log10(stop / start)) * amount);
+      const points = countOf(Math.abs(log10(stop / start)) * amount);
       return this.bounded(statement, points) ? decades(start, stop, amount) : null;
     }
     if (range.spacing === "points") {

@@ -1,3 +1,4 @@
+import { power } from "@/lib/units/elementary";
 import type { Aided } from "./aided";
 import { Curve } from "./curve";
 import { type Attempt, type Bench, newton } from "./newton";
@@ -14,8 +15,8 @@ const START_STEPS = 60;
 const FINAL_STEPS = 25;
 const MOST_STEPS = 1500;
 const FADING: Fading = {
-  conductance: (parameter) => 10 ** -parameter,
-  slope: (parameter) => -Math.LN10 * 10 ** -parameter,
+  conductance: (parameter) => power(10, -parameter),
+  slope: (parameter) => -Math.LN10 * power(10, -parameter),
 };
 
 /**

@@ -1,3 +1,4 @@
+import { power } from "@/lib/units/elementary";
 import type { Aided } from "./aided";
 import { Curve } from "./curve";
 import type { Bench } from "./newton";
@@ -8,8 +9,8 @@ import { type Fading, TiedCurve } from "./tied-curve";
 const FAINT = 1e-12;
 const DECADES = 13;
 const FADING: Fading = {
-  conductance: (parameter) => FAINT * (10 ** parameter - 1),
-  slope: (parameter) => Math.LN10 * FAINT * 10 ** parameter,
+  conductance: (parameter) => FAINT * (power(10, parameter) - 1),
+  slope: (parameter) => Math.LN10 * FAINT * power(10, parameter),
 };
 const FIRST_STEP = 0.05;
 const LONGEST_STEP = 0.25;

@@ -1,6 +1,6 @@
 import { readFileSync } from "node:fs";
 import { describe, expect, test } from "vitest";
-import { exp, expm1 } from "@/lib/devices/exponential";
+import { exp, expm1 } from "@/lib/units/exponential";
 import { worst } from "./closeness";
 
 interface Row {

@@ -1,4 +1,4 @@
-"""Prints e**y and e**y - 1 at doubles y, to 40 digits, and on request the table of lib/devices/exponential.ts.
+"""Prints e**y and e**y - 1 at doubles y, to 40 digits, and on request the table of lib/units/exponential.ts.
 
 Run with Debian's python3-mpmath:
     python3 tests/reference/exponential.py > tests/reference/exponential.json

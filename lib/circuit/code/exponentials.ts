@@ -1,4 +1,4 @@
-import { EXPONENTIAL as E } from "@/lib/devices/exponential";
+import { EXPONENTIAL as E } from "@/lib/units/exponential";
 import { bytesOf } from "./expression";
 import {
   EMPTY,

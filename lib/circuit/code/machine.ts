@@ -1,4 +1,4 @@
-import { EXPONENTIAL } from "@/lib/devices/exponential";
+import { EXPONENTIAL } from "@/lib/units/exponential";
 import { type ExponentialPlaces, expm1Body, exponentialsBody } from "./exponentials";
 import { type FunctionBody, moduleOf, pagesFor } from "./module";
 

@@ -1,5 +1,6 @@
 import { KNEE, limited, limitStep } from "@/lib/devices/limits";
 import { UNIT } from "@/lib/devices/rounding";
+import { expm1 } from "@/lib/units/exponential";
 import { FREE, figureOf, type Gap, type JunctionPart, type Proof } from "../part";
 import { across, type State } from "../state";
 import type { PointValues } from "../values";
@@ -96,7 +97,7 @@ export class LimitedOpampPart extends OpampPart implements JunctionPart, Proof {
   addSpread(_: State, radius: number, widths: Float64Array, at: number, spread: Float64Array): void {
     const { branch, law, gain } = this;
     const width = widths[at]!;
-    const rise = Math.expm1((gain * radius * width) / KNEE) + 64 * UNIT * (1 + Math.abs(this.s) / KNEE);
+    const rise = expm1((gain * radius * width) / KNEE) + 64 * UNIT * (1 + Math.abs(this.s) / KNEE);
     spread[branch]! += law.slope * rise * width;
   }
 }

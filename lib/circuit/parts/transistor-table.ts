@@ -1,4 +1,4 @@
-import { expm1 } from "@/lib/devices/exponential";
+import { expm1 } from "@/lib/units/exponential";
 import { FREE, type JunctionPart } from "../part";
 import type { State } from "../state";
 import type { Table } from "../table";

@@ -4,6 +4,7 @@ import { diodeVoltage } from "@/lib/devices/diode";
 import { junctionStep } from "@/lib/devices/junction-step";
 import type { Element, Model } from "@/lib/language/ast";
 import { ROOM_TEMPERATURE } from "@/lib/units/constants";
+import { exp } from "@/lib/units/exponential";
 import {
   type Bench,
   FREE,
@@ -140,7 +141,7 @@ export class TransistorPart implements JunctionPart, Proof {
   /** The junction step of a pure exponential of the transistor's Is and n·V_T. */
   private stepped(v: number, target: number): number {
     const { Is, eta } = this.at;
-    const rise = Math.exp(v / eta);
+    const rise = exp(v / eta);
     return junctionStep(this.at, v, Is * (rise - 1), (Is / eta) * rise, target);
   }
 
