@@ -25,9 +25,9 @@ export class Judge {
     const store = (outcome: Parameters<typeof storeJudgement>[1]): Promise<Handled> =>
       persist(this.stopping, () => storeJudgement(runId, outcome)).then(() => "done");
     if (due.engineVersion !== ENGINE_VERSION) return store({ fault: sentences.engineChanged() });
-    const { text, traces, points } = due;
+    const { text, traces, branches, points } = due;
     const ended = await this.pool.solve(
-      { kind: "judge", text, traces, points },
+      { kind: "judge", text, traces, branches, points },
       this.stopping,
       () => undefined,
     );

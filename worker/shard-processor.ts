@@ -6,9 +6,11 @@ import { type Claim, claimShard } from "@/lib/services/shards/claim-shard";
 import { completeShard } from "@/lib/services/shards/complete-shard";
 import { failShard } from "@/lib/services/shards/fail-shard";
 import { releaseShard } from "@/lib/services/shards/release-shard";
+import type { GivenUp } from "@/lib/services/shards/sentences";
 import * as sentences from "@/lib/services/shards/sentences";
 import { Judge } from "./judge";
 import { LeaseKeeper } from "./lease-keeper";
+import type { Task } from "./messages";
 import { isPassing, persist } from "./retry";
 import type { Ended, Limits } from "./thread";
 import type { ThreadPool } from "./thread-pool";
@@ -62,7 +64,7 @@ export class ShardProcessor {
 
   async #compute(claim: Claim): Promise<Handled> {
     if (claim.engineVersion !== ENGINE_VERSION) return this.#fail(claim, sentences.engineChanged());
-    if (claim.attempt > MOST_ATTEMPTS) return this.#fail(claim, sentences.brokenOff(claim, MOST_ATTEMPTS));
+    if (claim.attempt > MOST_ATTEMPTS) return this.#giveUp(claim, "broken");
     const begun = claim.begun ? null : this.#begin(claim.runId);
     const ended = await this.#solve(claim);
     await begun;
@@ -81,9 +83,8 @@ export class ShardProcessor {
     const keeper = new LeaseKeeper(claim, this.settings.leaseSeconds, () => end.abort());
     this.#underWay.add(end);
     try {
-      const { text, from, to, points } = claim;
       const progress = (pointsDone: number) => keeper.progress(pointsDone);
-      return await this.pool.solve({ kind: "solve", text, from, to, points }, end.signal, progress);
+      return await this.pool.solve(taskOf(claim), end.signal, progress);
     } finally {
       this.#underWay.delete(end);
       keeper.close();
@@ -91,25 +92,31 @@ export class ShardProcessor {
   }
 
   async #settle(claim: Claim, ended: Ended): Promise<Handled> {
-    const { limits } = this.settings;
     switch (ended.kind) {
       case "solved":
+      case "sought":
         await persist(this.#stopping.signal, () => completeShard(claim, ended.result));
         return this.judge.run(claim.runId);
       case "judged":
         throw new Error("A shard was answered with a judgement.");
       case "out of time":
-        return this.#fail(claim, sentences.outOfTime(claim, limits.seconds));
       case "out of memory":
-        return this.#fail(claim, sentences.outOfMemory(claim, limits.memory));
+        return this.#giveUp(claim, ended.kind);
       case "broken":
         console.error(`Points ${claim.from} to ${claim.to} of run ${claim.runId} broke off. ${ended.reason}`);
-        if (claim.attempt >= MOST_ATTEMPTS)
-          return this.#fail(claim, sentences.brokenOff(claim, MOST_ATTEMPTS));
-        return this.#release(claim);
+        return claim.attempt >= MOST_ATTEMPTS ? this.#giveUp(claim, "broken") : this.#release(claim);
       case "aborted":
         return this.#stopping.signal.aborted ? this.#release(claim) : "done";
     }
+  }
+
+  /** Without a shard of its points a run has failed; one whose branches are not found keeps its points, and says so. */
+  async #giveUp(claim: Claim, why: GivenUp): Promise<Handled> {
+    const sentence = sentences.givenUp(claim, why, { ...this.settings.limits, attempts: MOST_ATTEMPTS });
+    if (claim.kind === "points") return this.#fail(claim, sentence);
+    const found = { complete: false, branches: 0, folds: 0, fault: sentence };
+    await persist(this.#stopping.signal, () => completeShard(claim, { found, columns: [] }));
+    return this.judge.run(claim.runId);
   }
 
   async #fail(claim: Claim, sentence: string): Promise<Handled> {
@@ -121,4 +128,9 @@ export class ShardProcessor {
     await releaseShard(claim);
     return { againIn: AGAIN_MS };
   }
+}
+
+function taskOf({ kind, text, from, to, points }: Claim): Task {
+  if (kind === "points") return { kind: "solve", text, from, to, points };
+  return { kind: "seek", text, row: from / (to - from), points };
 }

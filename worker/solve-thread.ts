@@ -1,7 +1,9 @@
 import { parentPort } from "node:worker_threads";
+import { branchesRow } from "@/lib/analyses/branches-document";
 import { compile, type Job } from "@/lib/analyses/compile";
 import { solveRange } from "@/lib/analyses/sweep";
 import { finalJudgement } from "@/lib/analyses/verdict";
+import { storedRow } from "@/lib/services/chunks/branch-columns";
 import { storedForm } from "@/lib/services/chunks/columns";
 import type { Reply, SolveTask, Task } from "./messages";
 import { WARM_UP } from "./warm-up";
@@ -33,6 +35,7 @@ function answer(task: Task, tell: (reply: Reply) => void): Reply {
       throw new Error(`Planned ${task.points} points, found ${job.plan.points}.`);
     }
     if (task.kind === "judge") return { kind: "judged", judgement: finalJudgement(job, task) };
+    if (task.kind === "seek") return { kind: "sought", result: storedRow(branchesRow(job, task.row)) };
     return solve(job, task, tell);
   } catch (error) {
     return {
@@ -55,7 +58,7 @@ function solve(job: Job, { from, to }: SolveTask, tell: (reply: Reply) => void):
 
 /** The memory behind the chunks, which is handed over and not copied. */
 function buffersOf(reply: Reply): ArrayBuffer[] {
-  if (reply.kind !== "solved") return [];
+  if (reply.kind !== "solved" && reply.kind !== "sought") return [];
   return reply.result.columns.flatMap(({ chunks }) => chunks.map(({ data }) => data.buffer));
 }
 

@@ -1,11 +1,13 @@
 import { type ResourceLimits, Worker } from "node:worker_threads";
 import type { KeptJudgement } from "@/lib/analyses/verdict";
+import type { StoredRow } from "@/lib/services/chunks/branch-columns";
 import type { StoredShard } from "@/lib/services/chunks/columns";
 import type { Reply, Task } from "./messages";
 
 /** How a task ended. */
 export type Ended =
   | { readonly kind: "solved"; readonly result: StoredShard }
+  | { readonly kind: "sought"; readonly result: StoredRow }
   | { readonly kind: "judged"; readonly judgement: KeptJudgement }
   | { readonly kind: "aborted" }
   | { readonly kind: "out of time" }
@@ -30,7 +32,7 @@ function spawn(resourceLimits: ResourceLimits): Worker {
   return new Worker(program, { eval: true, execArgv: [], resourceLimits });
 }
 
-/** One computing thread. It takes one task at a time; after anything but "solved", "judged" or "broken" it is gone. */
+/** One computing thread. It takes one task at a time; after anything but "solved", "sought", "judged" or "broken" it is gone. */
 export class Thread {
   readonly #worker: Worker;
   /** Settles once the thread has warmed up; rejects when it cannot start. */

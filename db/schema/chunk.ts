@@ -4,7 +4,7 @@ import { shard } from "./shard";
 
 /**
  * At most 4096 neighbouring values of one column of one shard. `column` is "trace/0", "unknown/0", …, "outcome",
- * "iterations", "residual" or "rung". `data` is byte-shuffled little-endian Float64, compressed by PostgreSQL with lz4.
+ * "iterations", "residual" or "rung", or for branches one of branch-columns.ts. `data` is byte-shuffled little-endian Float64, compressed by PostgreSQL with lz4.
  * `minimum` and `maximum` are over the numbers among the values, null where there is none.
  */
 export const chunk = pgTable(

@@ -3,12 +3,20 @@ import { run } from "./run";
 
 export const eventKind = pgEnum("event_kind", ["progress", "status"]);
 
+/** Sweeps of the first knob in which several operating points are looked for, and how many of them are done. */
+export interface SearchProgress {
+  readonly rows: number;
+  readonly rowsDone: number;
+}
+
 /** The state of a run just after the event. */
 export interface EventData {
   readonly status: "queued" | "running" | "done" | "failed" | "cancelled";
   readonly points: number;
   readonly pointsDone: number;
   readonly pointsFailed: number;
+  /** How far the search for several operating points is; absent where the text does not ask for them. */
+  readonly search?: SearchProgress;
 }
 
 /** What happened to a run, numbered from 1 without gaps, so that a reader can go on where it stopped. */

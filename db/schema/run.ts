@@ -52,6 +52,9 @@ export const run = pgTable(
     pointsDone: integer("points_done").notNull().default(0),
     pointsFailed: integer("points_failed").notNull().default(0),
     shardsLeft: integer("shards_left").notNull(),
+    /** Sweeps of the first knob in which several operating points are looked for; 0 where the text does not ask for them. */
+    rowsSought: integer("rows_sought").notNull().default(0),
+    rowsDone: integer("rows_done").notNull().default(0),
     /** Sequence of the newest event; raised with each one added. */
     lastEvent: integer("last_event").notNull().default(0),
     queuedAt: timestamp("queued_at", { withTimezone: true }).notNull().defaultNow(),

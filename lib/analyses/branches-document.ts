@@ -50,11 +50,6 @@ export function branchesRow(job: Job, row: number): BranchesDocument {
   };
 }
 
-/** A row in which nothing could be looked for. */
-export function faultyRow(plan: Plan, row: number, fault: string): BranchesDocument {
-  return { at: placeOfRow(plan, row), complete: false, branches: [], folds: [], fault };
-}
-
 /** The values of the outer knobs in a row. */
 export function placeOfRow(plan: Plan, row: number): BranchesDocument["at"] {
   const place = placeOnAxes(plan, row * rowLength(plan));

@@ -1,6 +1,6 @@
 import { readFileSync } from "node:fs";
 import { describe, expect, test, vi } from "vitest";
-import { type BranchesDocument, branchesDocument, faultyRow } from "@/lib/analyses/branches-document";
+import { type BranchesDocument, branchesDocument } from "@/lib/analyses/branches-document";
 import { compile, type Job } from "@/lib/analyses/compile";
 import { type Judgement, judge } from "@/lib/analyses/judge";
 import { solveRange } from "@/lib/analyses/sweep";
@@ -112,7 +112,7 @@ describe("a reduction over a branch", () => {
 describe("what is not known", () => {
   const fault = "Looking for the operating points took too long.";
   const without = (row: number) => (rows: readonly BranchesDocument[]) =>
-    rows.map((one, k) => (k === row ? faultyRow(jobOf(example).plan, row, fault) : one));
+    rows.map((one, k) => (k === row ? { ...one, complete: false, branches: [], folds: [], fault } : one));
 
   test("is no data where a row that is looked at could not be sought, with the reason", () => {
     const { verdict, requirements } = judged(example, without(0));

@@ -11,7 +11,7 @@ export const STATEMENT_MEANINGS: Readonly<Record<string, string>> = {
   block: "a reusable part with its own nets; its knobs are its parameters",
   sweep: "turns a knob over a range; the first sweep is the horizontal axis",
   draws: "tolerance draws, repeatable from the seed",
-  seek: "looks for several operating points at each setting",
+  seek: "looks for several operating points at each setting; what is required must hold at every stable one",
   show: "traces to keep and to plot",
   read: "a number per sweep of the first knob",
   require: "what must hold, at every point and in every draw unless it says otherwise",

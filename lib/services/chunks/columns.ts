@@ -1,4 +1,5 @@
 import type { Failure, ShardResult } from "@/lib/analyses/result";
+import type { PointRange } from "@/lib/analyses/strands";
 import { OUTCOMES } from "@/lib/solver/outcome";
 import { type Chunk, cut } from "./codec";
 
@@ -14,6 +15,8 @@ export interface StoredShard {
   readonly columns: readonly { readonly column: string; readonly chunks: readonly Chunk[] }[];
   readonly pointsFailed: number;
   readonly failures: readonly Failure[];
+  /** Flat points that are solved and not stable. */
+  readonly unstable: readonly PointRange[];
 }
 
 /** Cuts every column of `result` into chunks of at most 4096 points. */
@@ -28,5 +31,6 @@ export function storedForm(result: ShardResult): StoredShard {
     columns: named.map(([column, values]) => ({ column, chunks: cut(values) })),
     pointsFailed: result.outcome.reduce((sum, outcome) => (outcome === converged ? sum : sum + 1), 0),
     failures: result.failures,
+    unstable: result.unstable,
   };
 }

@@ -76,6 +76,6 @@ async function chunks(db: Queryable, ...conditions: (SQL | undefined)[]) {
     .select({ name: chunk.column, from: shard.from, index: chunk.index, data: chunk.data })
     .from(chunk)
     .innerJoin(shard, and(eq(shard.runId, chunk.runId), eq(shard.index, chunk.shardIndex)))
-    .where(and(...conditions));
+    .where(and(eq(shard.kind, "points"), ...conditions));
   return rows.map(({ name, from, index, data }) => ({ name, at: from + index * CHUNK_POINTS, data }));
 }

@@ -30,10 +30,13 @@ export async function appendEvent(
       points: run.points,
       pointsDone: run.pointsDone,
       pointsFailed: run.pointsFailed,
+      rows: run.rowsSought,
+      rowsDone: run.rowsDone,
       underWay,
     });
   if (row === undefined) return undefined;
-  const { sequence, underWay: more, ...state } = row;
+  const { sequence, underWay: more, rows, rowsDone, ...counts } = row;
+  const state: EventData = rows === 0 ? counts : { ...counts, search: { rows, rowsDone } };
   const live = state.status === "running" || state.status === "queued";
   const data: EventData = live
     ? { ...state, pointsDone: Math.min(state.points, state.pointsDone + more) }

@@ -3,7 +3,7 @@ import type { Queryable } from "@/db/client";
 import { run } from "@/db/schema/run";
 import { shard } from "@/db/schema/shard";
 import { workspace } from "@/db/schema/workspace";
-import type { Plan } from "@/lib/analyses/plan";
+import { type Plan, rowLength, soughtRows } from "@/lib/analyses/plan";
 import { shardsOf } from "@/lib/analyses/strands";
 import { ENGINE_VERSION } from "@/lib/analyses/version";
 import type { Actor } from "@/lib/permissions/actor";
@@ -30,7 +30,15 @@ export async function addRun(
   revisionNumber: number,
   plan: Plan,
 ): Promise<AddedRun> {
-  const shards = shardsOf(plan);
+  const points = shardsOf(plan);
+  const rows = soughtRows(plan);
+  const length = rowLength(plan);
+  const shards = [
+    ...points.map((range) => ({ kind: "points" as const, ...range })),
+    ...Array.from({ length: rows }, (_, row) => {
+      return { kind: "branches" as const, from: row * length, to: (row + 1) * length };
+    }),
+  ];
   const [taken] = await tx
     .update(workspace)
     .set({ lastRunNumber: sql`${workspace.lastRunNumber} + 1` })
@@ -48,12 +56,13 @@ export async function addRun(
       preview: previewOf(plan),
       points: plan.points,
       shardsLeft: shards.length,
+      rowsSought: rows,
       requestedBy: actor.userId,
       engineVersion: ENGINE_VERSION,
     })
     .returning({ id: run.id, number: run.number });
   const { id, number } = made!;
-  await tx.insert(shard).values(shards.map(({ from, to }, index) => ({ runId: id, index, from, to })));
+  await tx.insert(shard).values(shards.map((one, index) => ({ runId: id, index, ...one })));
   await appendEvent(tx, id, "status");
   return { id, number, shards: shards.length };
 }

@@ -31,6 +31,8 @@ export interface PointDetail {
   /** A true solution lies within so many volts of this one; null without a proof. */
   readonly bound: number | null;
   readonly rung: Rung | null;
+  /** The circuit would leave it: an odd number of its modes grows. False does not prove that it stays. */
+  readonly isUnstable: boolean;
   readonly unknowns: readonly Figure[];
   readonly traces: readonly Figure[];
   /** Nets and elements that would not settle, the worst first. */
@@ -54,9 +56,11 @@ export async function getPoint(actor: Actor, id: string, point: number): Promise
   const { plan } = planned!;
   const values = await readPoint(asked.id, point);
   const [holder] = await db
-    .select({ failures: shard.failures })
+    .select({ failures: shard.failures, unstable: shard.unstable })
     .from(shard)
-    .where(and(eq(shard.runId, asked.id), lte(shard.from, point), gt(shard.to, point)));
+    .where(
+      and(eq(shard.runId, asked.id), eq(shard.kind, "points"), lte(shard.from, point), gt(shard.to, point)),
+    );
   const figure = (column: string): number | null => {
     const value = values?.get(column);
     return value === undefined || Number.isNaN(value) ? null : value;
@@ -79,6 +83,7 @@ export async function getPoint(actor: Actor, id: string, point: number): Promise
     residual: figure("residual"),
     bound: figure("bound"),
     rung: RUNGS[figure("rung") ?? -1] ?? null,
+    isUnstable: holder?.unstable.some(({ from, to }) => point >= from && point < to) ?? false,
     unknowns: plan.unknowns.map((one, i) => ({ ...one, value: figure(unknownColumn(i)) })),
     traces: plan.traces.map((one, i) => ({ ...one, value: figure(traceColumn(i)) })),
     unsolved: unsettled,

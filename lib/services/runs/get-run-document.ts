@@ -8,14 +8,16 @@ import type { Plan } from "@/lib/analyses/plan";
 import type { RunDocument } from "@/lib/analyses/result";
 import type { Actor } from "@/lib/permissions/actor";
 import { authorize } from "@/lib/permissions/authorize";
+import { numbersIn } from "../chunks/branch-columns";
 import { traceColumn } from "../chunks/columns";
+import { foundRows, readBranches } from "../chunks/read-branches";
 import { readColumns } from "../chunks/read-columns";
 import { compiled } from "./compiled";
 import { findRun, type RunRecord } from "./find-run";
 import { LARGE, roomFor } from "./large-documents";
 
 /** Names the form of the document; raised with every change of it, so that readers drop what they kept. */
-const FORM = "2";
+const FORM = "3";
 
 /** The version of a run's document, as an entity tag: it changes with every event of the run. */
 export async function getRunVersion(actor: Actor, id: string): Promise<string> {
@@ -70,7 +72,11 @@ export async function askedFor(actor: Actor, id: string): Promise<Asked> {
     .innerJoin(revision, and(eq(revision.netlistId, run.netlistId), eq(revision.number, run.revisionNumber)))
     .where(eq(run.id, asked.id));
   const { plan, text } = record!;
-  const numbers = asked.points * (plan.traces.length + 4);
+  const rows = [...(await foundRows(asked.id, plan)).values()];
+  const numbers = rows.reduce(
+    (sum, row) => sum + numbersIn(plan, row),
+    asked.points * (plan.traces.length + 4),
+  );
   const release = roomFor(actor.userId, numbers);
   return { run: asked, plan, text, etag: versionOf(asked), large: numbers >= LARGE, release };
 }
@@ -88,14 +94,15 @@ export async function matterOf(
   const reading = Promise.all([
     readColumns(asked.id, asked.points, [...traces, ...names], onColumn),
     database()
-      .select({ failures: shard.failures })
+      .select({ failures: shard.failures, unstable: shard.unstable })
       .from(shard)
-      .where(eq(shard.runId, asked.id))
+      .where(and(eq(shard.runId, asked.id), eq(shard.kind, "points")))
       .orderBy(asc(shard.index)),
+    readBranches(asked.id, plan),
   ]);
   // While the database looks for them.
   const { job, diagnostics } = compiled(text);
-  const [columns, shards] = await reading;
+  const [columns, shards, branches] = await reading;
   const column = (name: string) => columns.get(name) ?? new Float64Array(asked.points).fill(Number.NaN);
   return {
     design: job?.design ?? null,
@@ -107,6 +114,8 @@ export async function matterOf(
     rung: column("rung"),
     bound: column("bound"),
     failures: shards.flatMap(({ failures }) => failures),
+    unstable: shards.flatMap(({ unstable }) => unstable),
+    branches,
     diagnostics,
   };
 }

@@ -1,3 +1,4 @@
+import type { SearchProgress } from "@/db/schema/event";
 import { netlist } from "@/db/schema/netlist";
 import { revision } from "@/db/schema/revision";
 import { run } from "@/db/schema/run";
@@ -19,6 +20,8 @@ export interface RunRow {
   readonly points: number;
   readonly pointsDone: number;
   readonly pointsFailed: number;
+  /** How far the search for several operating points is; null where the text does not ask for them. */
+  readonly search: SearchProgress | null;
   readonly queuedAt: string;
   readonly startedAt: string | null;
   readonly finishedAt: string | null;
@@ -45,6 +48,8 @@ export const RUN_COLUMNS = {
   points: run.points,
   pointsDone: run.pointsDone,
   pointsFailed: run.pointsFailed,
+  rowsSought: run.rowsSought,
+  rowsDone: run.rowsDone,
   queuedAt: run.queuedAt,
   startedAt: run.startedAt,
   finishedAt: run.finishedAt,
@@ -55,16 +60,19 @@ export const RUN_COLUMNS = {
   lastEvent: run.lastEvent,
 };
 
-type Selected = Omit<RunRow, "queuedAt" | "startedAt" | "finishedAt"> & {
+type Selected = Omit<RunRow, "search" | "queuedAt" | "startedAt" | "finishedAt"> & {
+  readonly rowsSought: number;
+  readonly rowsDone: number;
   readonly queuedAt: Date;
   readonly startedAt: Date | null;
   readonly finishedAt: Date | null;
 };
 
 /** A selected row with its times as strings. */
-export function rowOf<R extends Selected>(row: R) {
+export function rowOf<R extends Selected>({ rowsSought, rowsDone, ...row }: R) {
   return {
     ...row,
+    search: rowsSought === 0 ? null : { rows: rowsSought, rowsDone },
     queuedAt: row.queuedAt.toISOString(),
     startedAt: row.startedAt?.toISOString() ?? null,
     finishedAt: row.finishedAt?.toISOString() ?? null,

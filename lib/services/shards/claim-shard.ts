@@ -11,6 +11,8 @@ export interface Claim {
   readonly index: number;
   /** Counts claims of this shard from 1: the newest alone is heard. */
   readonly attempt: number;
+  /** Whether the points are to be solved, or their branches to be looked for. */
+  readonly kind: "points" | "branches";
   /** The flat points [from, to) of the run. */
   readonly from: number;
   readonly to: number;
@@ -66,6 +68,7 @@ export async function claimShard(input: {
     )
     .returning({
       attempt: shard.attempt,
+      kind: shard.kind,
       from: shard.from,
       to: shard.to,
       points: run.points,

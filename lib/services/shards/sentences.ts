@@ -10,16 +10,36 @@ function range({ from, to }: Points): string {
   return to - from === 1 ? `point ${count(to)}` : `points ${count(from + 1)} to ${count(to)}`;
 }
 
-export function outOfTime(points: Points, seconds: number): string {
-  return `Solving ${range(points)} took longer than the limit of ${count(seconds)} s. Make the circuit smaller and queue it again.`;
-}
+export type GivenUp = "out of time" | "out of memory" | "broken";
 
-export function outOfMemory(points: Points, memory: number): string {
-  return `Solving ${range(points)} took more memory than the limit of ${count(memory)} MiB. Make the circuit smaller and queue it again.`;
-}
-
-export function brokenOff(points: Points, attempts: number): string {
-  return `The solver broke off ${attempts} times at ${range(points)}. This is a fault of the service, not of the netlist: report it to whoever runs it.`;
+/** Why a shard was given up, of points or of branches. */
+export function givenUp(
+  { kind, ...points }: Points & Pick<Claim, "kind">,
+  why: GivenUp,
+  {
+    seconds,
+    memory,
+    attempts,
+  }: { readonly seconds: number; readonly memory: number; readonly attempts: number },
+): string {
+  const work = kind === "points" ? `Solving ${range(points)}` : "Looking for the operating points";
+  const mend =
+    kind === "points"
+      ? "Make the circuit smaller and queue it again."
+      : "None is known here; sweep fewer points or make the circuit smaller.";
+  switch (why) {
+    case "out of time":
+      return `${work} took longer than the limit of ${count(seconds)} s. ${mend}`;
+    case "out of memory":
+      return `${work} took more memory than the limit of ${count(memory)} MiB. ${mend}`;
+    case "broken": {
+      const what =
+        kind === "points"
+          ? `at ${range(points)}`
+          : "looking for the operating points, so that none is known here";
+      return `The solver broke off ${attempts} times ${what}. This is a fault of the service, not of the netlist: report it to whoever runs it.`;
+    }
+  }
 }
 
 export function engineChanged(): string {

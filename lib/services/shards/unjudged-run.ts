@@ -2,8 +2,10 @@ import { and, eq, isNull } from "drizzle-orm";
 import { database } from "@/db/client";
 import { revision } from "@/db/schema/revision";
 import { run } from "@/db/schema/run";
+import type { BranchesDocument } from "@/lib/analyses/branches-document";
 import type { Plan } from "@/lib/analyses/plan";
 import { traceColumn } from "../chunks/columns";
+import { readBranches } from "../chunks/read-branches";
 import { readColumns } from "../chunks/read-columns";
 
 /** A finished run whose requirements nobody has judged yet, with all it takes to judge them. */
@@ -14,6 +16,8 @@ export interface UnjudgedRun {
   readonly engineVersion: string;
   /** One column a trace, in the order of the plan. */
   readonly traces: readonly Float64Array[];
+  /** Its branches, one document a row; null where the text does not ask for several operating points. */
+  readonly branches: readonly (BranchesDocument | null)[] | null;
 }
 
 /** The run of that id with its traces; null unless all its points are stored and it is not judged. */
@@ -28,7 +32,8 @@ export async function unjudgedRun(runId: string): Promise<UnjudgedRun | null> {
     .where(eq(run.id, runId));
   const { plan, points, engineVersion, text } = row!;
   const traces = await tracesOf(runId, plan, points);
-  return { runId, text, points, engineVersion, traces };
+  const branches = await readBranches(runId, plan);
+  return { runId, text, points, engineVersion, traces, branches };
 }
 
 /** What tells a run that is done and not judged. */

@@ -48,3 +48,37 @@ export function largeText(): string {
   }
   return `${ladderText(2)}${sums.join("\n")}\n`;
 }
+
+/** A trigger of two transistors (invented) with three operating points between its thresholds, at so many temperatures. */
+export function sought(temperatures: number, points = 41): string {
+  const outer = Array.from({ length: temperatures }, (_, k) => `${290 + 10 * k} K`).join(", ");
+  return `title "Trigger"
+knob V_in = 2 V
+model small : npn { Is = 1 fA, beta_f = 100, beta_r = 1 }
+ground -- VS : voltage 5 V -- supply
+ground -- VI : voltage V_in -- in
+supply -- RC1 : resistor 4.7 kΩ -- c1
+supply -- RC2 : resistor 1 kΩ -- c2
+c1 -- R1 : resistor 10 kΩ -- b2 -- R2 : resistor 20 kΩ -- ground
+e -- RE : resistor 1 kΩ -- ground
+Q1 : small { c = c1, b = in, e = e }
+Q2 : small { c = c2, b = b2, e = e }
+sweep V_in from 0 V to 4 V, ${points} points
+sweep temperature over ${outer}
+seek 5
+show out = c2.v, e.v
+require out <= 5.1 V as "below the supply"
+`;
+}
+
+/** A follower whose inputs are exchanged (invented): every point is solved, and the circuit would leave it. 901 points in several strands. */
+export const EXCHANGED = `title "Exchanged"
+knob V_in = 1 V
+model amp : opamp { gain = 1e5 }
+ground -- VS : voltage V_in -- in
+A1 : amp { plus = out, minus = in, out = out }
+out -- RL : resistor 1 kΩ -- ground
+sweep V_in from 0.1 V to 1 V, 901 points
+show out = out.v
+require out <= 2 V
+`;
