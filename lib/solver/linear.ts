@@ -24,6 +24,8 @@ export interface Linear {
 export interface Factors {
   readonly plan: Elimination;
   readonly values: Float64Array;
+  /** The code that made them, where such did. */
+  readonly generated: GeneratedStep | null;
 }
 
 /**
@@ -34,6 +36,7 @@ export interface Factors {
 export class LinearSolver implements Linear {
   private readonly first: Elimination | null;
   private firstKernel: Kernel | null;
+  private generated: GeneratedStep | null = null;
   private plan: Elimination | null = null;
   private kernel: Kernel | null = null;
   /** The dense factors of the last matrix, where no pivots of ours served. */
@@ -79,6 +82,7 @@ export class LinearSolver implements Linear {
   adopt(generated: GeneratedStep): void {
     const isInUse = this.plan === this.first;
     this.firstKernel = generated;
+    this.generated = generated;
     this.firstFactors = generated.factors;
     if (isInUse) this.reset();
   }
@@ -113,7 +117,8 @@ export class LinearSolver implements Linear {
   /** Null where the last matrix was factorised densely or not at all. Pivots stand as their inverses only. */
   get atHand(): Factors | null {
     const { plan, factors } = this;
-    return plan === null || this.dense !== null ? null : { plan, values: factors };
+    if (plan === null || this.dense !== null) return null;
+    return { plan, values: factors, generated: plan === this.first ? this.generated : null };
   }
 
   private use(plan: Elimination | null, kernel: Kernel | null): void {

@@ -15,6 +15,13 @@ export class TriangularBounds {
   /** |(L·U)⁻¹|·(|L·U − J|·w, spread and the rounding of J). */
   readonly change: Float64Array;
   private factors: Factors | null = null;
+  /** Magnitudes of the factors in the order of the substitutions: above the pivots, below them, and of the inverse pivots. */
+  private above = new Float64Array(0);
+  private below = new Float64Array(0);
+  private inverses = new Float64Array(0);
+  /** `error` is that of the factors and the doubt at hand. */
+  private isCarried = false;
+  private isPrepared = false;
   private readonly work: Float64Array;
   private readonly sums: Float64Array;
   private readonly row: Float64Array;
@@ -36,16 +43,38 @@ export class TriangularBounds {
 
   /** Takes the factors of the Jacobian that is to be judged. */
   use(factors: Factors): void {
+    if (this.factors?.plan !== factors.plan) {
+      this.above = new Float64Array(factors.plan.rowPlaces.length);
+      this.below = new Float64Array(factors.plan.belowPlaces.length);
+      this.inverses = new Float64Array(this.work.length);
+    }
     this.factors = factors;
+    this.isCarried = false;
+    this.isPrepared = false;
+  }
+
+  /** Gathers the magnitudes of the factors, where they are needed. */
+  private prepare(): void {
+    if (this.isPrepared) return;
+    this.isPrepared = true;
+    const { above, below, inverses } = this;
+    const { plan, values } = this.factors!;
+    const { rowPlaces, belowPlaces, places } = plan;
+    for (let s = 0; s < above.length; s++) above[s] = Math.abs(values[rowPlaces[s]!]!);
+    for (let s = 0; s < below.length; s++) below[s] = Math.abs(values[belowPlaces[s]!]!);
+    for (let k = 0; k < inverses.length; k++) inverses[k] = Math.abs(values[places + k]!);
   }
 
   carry(doubt: Float64Array): void {
+    this.prepare();
     this.apply(doubt, this.error);
+    this.isCarried = true;
   }
 
   /** Nothing is kept from weights to weights. */
   reweigh(): void {}
 
+  /** With the doubt that was carried last, or where none was, the one given. */
   bound(
     jacobian: Float64Array,
     weights: Float64Array,
@@ -54,7 +83,10 @@ export class TriangularBounds {
     spread: Float64Array,
   ): void {
     const { sums, row, rows, columns } = this;
-    this.apply(doubt, this.error);
+    const generated = this.factors!.generated;
+    if (generated?.bound(weights, roundings, doubt, spread, this.error, this.change) === true) return;
+    this.prepare();
+    if (!this.isCarried) this.carry(doubt);
     this.residue(weights, row);
     sums.fill(0);
     for (let k = 1; k < jacobian.length; k++) {
@@ -66,24 +98,21 @@ export class TriangularBounds {
 
   /** `into` = M(U)⁻¹·M(L)⁻¹·`right` for a right side without negative entries. */
   private apply(right: Float64Array, into: Float64Array): void {
-    const { work } = this;
-    const { plan, values } = this.factors!;
-    const { rowOf, columnOf, rowStarts, rowPlaces, rowColumns, places } = plan;
-    const { belowStarts, belowPlaces, belowRows } = plan;
+    const { work, above, below, inverses } = this;
+    const { rowOf, columnOf, rowStarts, rowColumns, belowStarts, belowRows } = this.factors!.plan;
     const size = work.length;
     for (let i = 0; i < size; i++) work[i] = right[i]!;
+    let s = 0;
     for (let k = 0; k < size; k++) {
       const known = work[rowOf[k]!]!;
-      const end = belowStarts[k + 1]!;
-      for (let s = belowStarts[k]!; s < end; s++)
-        work[belowRows[s]!]! += Math.abs(values[belowPlaces[s]!]!) * known;
+      for (const end = belowStarts[k + 1]!; s < end; s++) work[belowRows[s]!]! += below[s]! * known;
     }
-    for (let k = size - 1; k >= 0; k--) {
+    for (let k = size - 1, end = above.length; k >= 0; k--) {
       let sum = work[rowOf[k]!]!;
-      const end = rowStarts[k + 1]!;
-      for (let s = rowStarts[k]!; s < end; s++)
-        sum += Math.abs(values[rowPlaces[s]!]!) * into[rowColumns[s]!]!;
-      into[columnOf[k]!] = sum * Math.abs(values[places + k]!);
+      const start = rowStarts[k]!;
+      for (let a = start; a < end; a++) sum += above[a]! * into[rowColumns[a]!]!;
+      end = start;
+      into[columnOf[k]!] = sum * inverses[k]!;
     }
   }
 
@@ -92,23 +121,21 @@ export class TriangularBounds {
    * so that what it misses J by is at most (steps + 2) roundings of |L|·|U| (Higham, theorem 9.3, with the inverse pivots' own).
    */
   private residue(weights: Float64Array, into: Float64Array): void {
-    const { work } = this;
-    const { plan, values } = this.factors!;
-    const { rowOf, columnOf, places, rowStarts, rowPlaces, rowColumns, belowStarts, belowPlaces, belowRows } =
-      plan;
+    const { work, above, below, inverses } = this;
+    const { rowOf, columnOf, rowStarts, rowColumns, belowStarts, belowRows } = this.factors!.plan;
     const size = work.length;
     into.fill(0);
     work.fill(4);
+    let a = 0;
+    let b = 0;
     for (let k = 0; k < size; k++) {
       const row = rowOf[k]!;
-      let sum = weights[columnOf[k]!]! / Math.abs(values[places + k]!);
-      for (let s = rowStarts[k]!; s < rowStarts[k + 1]!; s++) {
-        sum += Math.abs(values[rowPlaces[s]!]!) * weights[rowColumns[s]!]!;
-      }
+      let sum = weights[columnOf[k]!]! / inverses[k]!;
+      for (const end = rowStarts[k + 1]!; a < end; a++) sum += above[a]! * weights[rowColumns[a]!]!;
       into[row] = (into[row]! + sum) * work[row]! * UNIT;
-      for (let s = belowStarts[k]!; s < belowStarts[k + 1]!; s++) {
-        into[belowRows[s]!]! += Math.abs(values[belowPlaces[s]!]!) * sum;
-        work[belowRows[s]!]! += 2;
+      for (const end = belowStarts[k + 1]!; b < end; b++) {
+        into[belowRows[b]!]! += below[b]! * sum;
+        work[belowRows[b]!]! += 2;
       }
     }
   }

@@ -4,6 +4,7 @@ import { compile } from "@/lib/analyses/compile";
 import { System } from "@/lib/circuit/system";
 import { GeneratedStep } from "@/lib/solver/kernel/generated";
 import { LinearSolver } from "@/lib/solver/linear";
+import { TriangularBounds } from "@/lib/solver/triangular";
 
 /** A system that has just begun. */
 function systemOf(text: string): System {
@@ -77,12 +78,27 @@ function compare(text: string, isStraight: boolean, prepare: (system: System) =>
     expect(linear.take(generated)).toBe(isSolved);
     expect(left(system)).toBe(left(plain));
     if (isSolved) expect(bits(generated.step)).toBe(bits(step));
+    if (isSolved) expectSameBounds(linear, system);
     apart.solveAgain(residual, step);
     linear.solveAgain(system.state.residual, generated.step);
     if (isSolved) expect(bits(generated.step)).toBe(bits(step));
     apart.reset();
     linear.reset();
   }
+}
+
+/** Compares the bounds by generated code with those without. */
+function expectSameBounds(linear: LinearSolver, { pattern, state }: System): void {
+  const factors = linear.atHand!;
+  const wave = (by: number) =>
+    Float64Array.from({ length: pattern.size + 1 }, (_, i) => Math.exp(Math.sin(by * i + by) - 20));
+  const [left, right] = [factors, { ...factors, generated: null }].map((each) => {
+    const bounds = new TriangularBounds(pattern);
+    bounds.use(each);
+    bounds.bound(state.jacobian, wave(1), wave(2), wave(3), wave(4));
+    return bits(bounds.error) + bits(bounds.change);
+  });
+  expect(left).toBe(right);
 }
 
 function bits(array: Float64Array): string {

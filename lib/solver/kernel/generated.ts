@@ -5,6 +5,7 @@ import { type FunctionBody, get, OPCODE } from "@/lib/circuit/code/module";
 import { type Home, StraightCode } from "@/lib/circuit/code/straight";
 import type { System } from "@/lib/circuit/system";
 import type { Elimination, SparseShape } from "../elimination";
+import { BOUND_ARRAYS, BoundsCode, boundHomes } from "./bounds-code";
 import { EliminationCode, eliminationHomes } from "./elimination-code";
 import { factorsOf, type Kernel } from "./kernel";
 import { ListedKernel } from "./listed";
@@ -22,6 +23,8 @@ interface Codes<Of> {
   readonly step: Of;
   /** Adds the step to the unknowns. */
   readonly advance: Of;
+  /** What `TriangularBounds` makes of the factors at hand; in straight code only. */
+  readonly bound: Of | null;
 }
 
 /** Code with the integers that it reads. */
@@ -41,6 +44,8 @@ export class GeneratedStep implements Kernel {
   readonly factors: Float64Array;
   private readonly listed: ListedKernel;
   private readonly functions: Codes<Compiled>;
+  /** Views of the arrays of BOUND_ARRAYS. */
+  private readonly bounds: readonly Float64Array[];
 
   private constructor(
     readonly system: System,
@@ -53,14 +58,22 @@ export class GeneratedStep implements Kernel {
     const factors = factorsOf(plan);
     const { exponents, less, whole } = frame.starts;
     const places = { count: frame.exponents.length, exponents, less, whole };
-    const machine = new Machine(length + factors.length + shape.size, places, integers.length);
+    const boundsAt = length + factors.length + shape.size;
+    const bounds = BOUND_ARRAYS.length * (shape.size + 1);
+    const machine = new Machine(boundsAt + bounds, places, integers.length);
     machine.integers.set(integers);
     this.listed = new ListedKernel(shape, plan);
-    this.functions = machine.compile({ ...codes });
+    const { bound, ...always } = codes;
+    this.functions =
+      bound === null ? { ...machine.compile(always), bound } : machine.compile({ ...always, bound });
     frame.moveTo(machine.numbers);
     this.factors = machine.numbers.subarray(length, length + factors.length);
     this.factors.set(factors);
     this.step = machine.numbers.subarray(length + factors.length, length + factors.length + shape.size);
+    this.bounds = BOUND_ARRAYS.map((_, k) => {
+      const start = boundsAt + k * (shape.size + 1);
+      return machine.numbers.subarray(start, start + shape.size);
+    });
     system.assembly.use(this.functions.assemble);
   }
 
@@ -82,6 +95,32 @@ export class GeneratedStep implements Kernel {
   /** As `advance` of a state by `step`. */
   advance(): void {
     this.functions.advance(1);
+  }
+
+  /** As `bound` of `TriangularBounds` for the system's Jacobian and the factors at hand; false, with nothing done, where there is no such code. */
+  bound(
+    weights: Float64Array,
+    roundings: Float64Array,
+    doubt: Float64Array,
+    spread: Float64Array,
+    error: Float64Array,
+    change: Float64Array,
+  ): boolean {
+    const { bound } = this.functions;
+    if (bound === null) return false;
+    const [w, n, u, s, e, c] = this.bounds as Six<Float64Array>;
+    for (let i = 0; i < w.length; i++) {
+      w[i] = weights[i]!;
+      n[i] = roundings[i]!;
+      u[i] = doubt[i]!;
+      s[i] = spread[i]!;
+    }
+    bound(1);
+    for (let i = 0; i < e.length; i++) {
+      error[i] = e[i]!;
+      change[i] = c[i]!;
+    }
+    return true;
   }
 
   solve(a: Float64Array, b: Float64Array, d: Float64Array, f: Float64Array): boolean {
@@ -110,6 +149,8 @@ export class GeneratedStep implements Kernel {
   }
 }
 
+type Six<T> = readonly [T, T, T, T, T, T];
+
 /** Whether an elimination is too long for straight code. */
 export function isLong(shape: SparseShape, { operations }: Elimination): boolean {
   return operations + shape.rows.length > MOST_OPERATIONS;
@@ -125,9 +166,21 @@ function straightOf({ frame, assembly }: System, shape: SparseShape, plan: Elimi
   };
   const z: Home = { start: 0, kept: Number.POSITIVE_INFINITY };
   const factors = frame.all.length;
-  const homes = { z, ...eliminationHomes(plan, factors, factors + factorsOf(plan).length) };
+  const solution = factors + factorsOf(plan).length;
+  const homes = {
+    z,
+    ...eliminationHomes(plan, factors, solution),
+    ...boundHomes(shape.size, solution + shape.size),
+  };
   const code = () => new StraightCode(homes);
-  const codes = { assemble: code(), solve: code(), again: code(), step: code(), advance: code() };
+  const codes = {
+    assemble: code(),
+    solve: code(),
+    again: code(),
+    step: code(),
+    advance: code(),
+    bound: code(),
+  };
   if (!assembly.write(codes.assemble)) return null;
   assembly.write(codes.step);
   const elimination = (into: StraightCode) => new EliminationCode(into, shape, plan, given);
@@ -135,6 +188,7 @@ function straightOf({ frame, assembly }: System, shape: SparseShape, plan: Elimi
   elimination(codes.solve).write();
   elimination(codes.again).writeAgain();
   writeAdvance(codes.advance, frame);
+  new BoundsCode(codes.bound, shape, plan, given.jacobian).write();
   return { codes, integers: new Int32Array(0) };
 }
 
@@ -143,7 +197,7 @@ function loopedOf({ frame, assembly }: System, shape: SparseShape, plan: Elimina
   const solution = factors + factorsOf(plan).length;
   const tables = assembly.kinds.map(({ table }) => table);
   const begins: number[] = [];
-  let lists = Machine.integersStart(solution + shape.size);
+  let lists = Machine.integersStart(solution + shape.size + BOUND_ARRAYS.length * (shape.size + 1));
   for (const { numbers } of tables) {
     begins.push(lists);
     lists += 4 * numbers.length;
@@ -166,6 +220,7 @@ function loopedOf({ frame, assembly }: System, shape: SparseShape, plan: Elimina
       again: coded(elimination.again("again")),
       step: coded(step),
       advance: coded(advanceLoop(frame, solution)),
+      bound: null,
     },
     integers: Int32Array.from([...integers, ...elimination.list.numbers]),
   };
