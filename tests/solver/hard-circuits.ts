@@ -116,7 +116,7 @@ show a.v`,
   "bounded laws that send Newton's method to and fro": textOfRandom(fullCircuit(173)),
   "followers at their limits, with laws of powers and roots": textOfRandom(fullCircuit(208)),
   "limited amplifiers before which all but ramps fail": textOfRandom(fullCircuit(768)),
-  "transistors at their knees before an amplifier's limit": textOfRandom(fullCircuit(107)),
+  "full transistors before limited amplifiers and bounded laws": textOfRandom(fullCircuit(464)),
   "what a ramp of shunts alone solves": textOfRandom(fullCircuit(598)),
   "what a path that turns back alone solves": textOfRandom(fullCircuit(4637)),
 };
