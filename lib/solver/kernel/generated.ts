@@ -77,11 +77,17 @@ export class GeneratedStep implements Kernel {
     system.assembly.use(this.functions.assemble);
   }
 
-  /** Null where no code may be generated. The system goes on in other arrays. */
+  /** Null where no code may be generated, or memory is short. The system goes on in other arrays. */
   static of(system: System, shape: SparseShape, plan: Elimination, isStraight = true): GeneratedStep | null {
     if (!mayCompile()) return null;
     const straight = isStraight ? straightOf(system, shape, plan) : null;
-    return new GeneratedStep(system, shape, plan, straight ?? loopedOf(system, shape, plan));
+    try {
+      return new GeneratedStep(system, shape, plan, straight ?? loopedOf(system, shape, plan));
+    } catch (error) {
+      // Where there is no room for a memory, loops over tables and lists serve.
+      if (error instanceof RangeError) return null;
+      throw error;
+    }
   }
 
   /** As `assembleAtRest` of the system and `solve` with what it leaves, into `step` and `factors`. */
