@@ -60,7 +60,7 @@ class Reading {
   /** What could be read; nothing of a text that is too long for a netlist. */
   get netlist(): Netlist {
     const isRead = this.text.length <= MOST_TEXT;
-    this.parsed ??= isRead ? parse(this.text).netlist : { statements: [] };
+    this.parsed ??= this.examined?.netlist ?? (isRead ? parse(this.text).netlist : { statements: [] });
     return this.parsed;
   }
 
@@ -75,7 +75,7 @@ class Reading {
   }
 }
 
-function tell({ text, netlist, symbols, checked }: Reading, offset: number): Told | null {
+function tell({ text, checked, netlist, symbols }: Reading, offset: number): Told | null {
   const hover = hoverAt(text, { netlist, design: checked.design }, offset, symbols);
   if (hover === null) return null;
   const symbol = symbols.at(offset)?.symbol;

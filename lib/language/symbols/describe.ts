@@ -2,7 +2,7 @@ import { KINDS } from "../kinds";
 import { isKind } from "../scope";
 import type { Statement } from "../syntax";
 import { insideOf, portsOf } from "./declare";
-import type { NamedSymbol } from "./symbol";
+import type { NamedSymbol, NameScope } from "./symbol";
 
 /** Elements named for a net at most. */
 const MOST_NAMED = 8;
@@ -78,27 +78,45 @@ function shown({ statement, name, scope }: NamedSymbol): string {
 }
 
 function netLine({ name, scope, places }: NamedSymbol): string {
-  const statements = [...scope.names.values()].flatMap(({ statement }) =>
-    statement === null ? [] : [statement],
-  );
-  const wired = new Set<string>();
-  for (const statement of [...new Set(statements)].sort((a, b) => a.from - b.from))
-    for (const one of wiredTo(statement, name)) wired.add(one);
-  const named = [...wired];
+  const named = wiringOf(scope).get(name) ?? [];
   const list = named.slice(0, MOST_NAMED).join(", ") + (named.length > MOST_NAMED ? " and more" : "");
   return named.length === 0 ? `net ${name}, named ${places.length} times` : `net ${name}, wired to ${list}`;
 }
 
-function wiredTo(statement: Statement, net: string): string[] {
+/** What each net of a scope is wired to, in the order of the text; found once for all nets, since lists of completions tell of all. */
+const wirings = new WeakMap<NameScope, ReadonlyMap<string, readonly string[]>>();
+
+function wiringOf(scope: NameScope): ReadonlyMap<string, readonly string[]> {
+  const known = wirings.get(scope);
+  if (known !== undefined) return known;
+  const statements = [...scope.names.values()].flatMap(({ statement }) =>
+    statement === null ? [] : [statement],
+  );
+  const wiring = new Map<string, string[]>();
+  for (const statement of [...new Set(statements)].sort((a, b) => a.from - b.from)) {
+    for (const [net, end] of wiresOf(statement)) {
+      const ends = wiring.get(net);
+      if (ends === undefined) wiring.set(net, [end]);
+      else if (!ends.includes(end)) ends.push(end);
+    }
+  }
+  wirings.set(scope, wiring);
+  return wiring;
+}
+
+/** The nets that a statement names, each with the element or pin that it is wired to there. */
+function wiresOf(statement: Statement): (readonly [net: string, end: string])[] {
   if (statement.kind === "path") {
     return statement.parts.flatMap(({ name }, k) =>
-      statement.nets[k]?.text === net || statement.nets[k + 1]?.text === net ? [name.text] : [],
+      [statement.nets[k], statement.nets[k + 1]].flatMap((net) =>
+        net === undefined ? [] : [[net.text, name.text] as const],
+      ),
     );
   }
   if (statement.kind !== "device") return [];
   return statement.settings.flatMap(({ name, value }) =>
-    value.kind === "name" && value.path.length === 1 && value.path[0]!.text === net
-      ? [`${statement.name.text}.${name.text}`]
+    value.kind === "name" && value.path.length === 1
+      ? [[value.path[0]!.text, `${statement.name.text}.${name.text}`] as const]
       : [],
   );
 }
