@@ -8,6 +8,8 @@ const WARM_UP = 10;
 /** Ms between two key strokes: those of a quick typist. */
 const APART = 150;
 const FRAMES = 120;
+/** The beginning of the line whose value is typed at; a digit follows it. */
+const TURNED = "let R_gain = ";
 
 declare global {
   interface Window {
@@ -160,21 +162,12 @@ async function open(page: Page, text: string): Promise<void> {
   await page.goto(`/${WORKSPACE}/netlists/${id}`);
   await (await editorOf(page)).focus();
   await page.locator('[data-preview="whole"]').waitFor();
-  // In front of the value of R_gain, where each digit makes another value of it.
+  // Behind the first digit of R_gain, where each further one makes another value of it.
+  const line = text.split("\n").findIndex((one) => one.startsWith(TURNED));
   await page.keyboard.press("Control+Home");
-  for (let line = 0; line < 20 && !(await currentLine(page)).includes("R_gain ="); line++)
-    await page.keyboard.press("ArrowDown");
+  for (let k = 0; k < line; k++) await page.keyboard.press("ArrowDown");
   await page.keyboard.press("Home");
-  for (let k = 0; k < "let R_gain = 1".length; k++) await page.keyboard.press("ArrowRight");
-}
-
-async function currentLine(page: Page): Promise<string> {
-  return page.evaluate(() => {
-    const cursor = document.querySelector(".cursors-layer .cursor")?.getBoundingClientRect();
-    const lines = [...document.querySelectorAll(".view-line")];
-    const line = lines.find((one) => Math.abs(one.getBoundingClientRect().top - (cursor?.top ?? -1)) < 8);
-    return (line?.textContent ?? "").replaceAll("\u00a0", " ");
-  });
+  for (let k = 0; k <= TURNED.length; k++) await page.keyboard.press("ArrowRight");
 }
 
 /** Types a digit and takes it away again, in turn; ms from each key to what is waited for. */
