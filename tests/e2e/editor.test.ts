@@ -106,9 +106,8 @@ test("a fix is put in from the keyboard, and where there is none the editor says
   await expectChecked(page, "1 error");
   await pressWord(page, "R_laod");
   await page.keyboard.press("Control+.");
-  await page.getByText("Change to R_load").last().waitFor();
-  await page.keyboard.press("Enter");
   await expectText(page, "R1 : resistor R_load");
+  await page.getByRole("status").filter({ hasText: "Change to R_load" }).first().waitFor();
   await pressWord(page, "knob");
   await page.keyboard.press("Control+.");
   await page.locator(".place-card").waitFor();

@@ -84,7 +84,9 @@ export async function mountEditor(
     const at = () => model.getOffsetAt(editor.getPosition()!);
     if (command === "tell") void card.showAtCursor();
     else if (command === "mend here") {
-      if (!mendHere(editor)) void card.showAtCursor("Nothing to mend here.");
+      const done = mendHere(editor);
+      if (done === null) void card.showAtCursor("Nothing to mend here.");
+      else card.say(done);
     } else if (command === "rename") void rename(editor);
     else if (command === "definition") void goToDefinition(editor, at());
     else if (command === "places") void tell(at()).then(events.onPlaces);

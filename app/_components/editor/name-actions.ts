@@ -61,12 +61,15 @@ export async function rename(editor: monaco.editor.IStandaloneCodeEditor): Promi
   });
 }
 
-/** Offers the fixes at the cursor; false where there is none. */
-export function mendHere(editor: monaco.editor.IStandaloneCodeEditor): boolean {
+/** Puts the first fix at the cursor in and says what it did; null where there is none. Undo takes it back. */
+export function mendHere(editor: monaco.editor.IStandaloneCodeEditor): string | null {
   const selection = editor.getSelection();
-  if (selection === null || fixesAt(editor.getModel()!, selection).length === 0) return false;
-  editor.trigger("menu", "editor.action.quickFix", {});
-  return true;
+  const fix = selection === null ? undefined : fixesAt(editor.getModel()!, selection)[0];
+  if (fix === undefined) return null;
+  editor.pushUndoStop();
+  editor.executeEdits("fix", [fix.edit]);
+  editor.pushUndoStop();
+  return fix.title;
 }
 
 /** Follows a name to its declaration when it is pressed with Ctrl or ⌘ held. */

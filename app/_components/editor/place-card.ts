@@ -92,6 +92,11 @@ export class PlaceCard implements editor.IContentWidget {
     this.owner.layoutContentWidget(this);
   }
 
+  /** Has something spoken that the text shows. */
+  say(words: string): void {
+    this.spoken.textContent = words;
+  }
+
   dispose(): void {
     clearTimeout(this.timer);
     for (const listener of this.listeners) listener.dispose();

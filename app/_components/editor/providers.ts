@@ -60,18 +60,23 @@ function provideCodeActions(
   model: monaco.editor.ITextModel,
   range: monaco.Range,
 ): monaco.languages.CodeActionList {
-  return { actions: fixesAt(model, range), dispose: () => {} };
+  const actions = fixesAt(model, range).map(({ title, edit }) => {
+    const edits = [{ resource: model.uri, versionId: model.getVersionId(), textEdit: edit }];
+    return { title, kind: "quickfix", isPreferred: true, edit: { edits } };
+  });
+  return { actions, dispose: () => {} };
 }
 
-/** The fixes of the problems that a range touches. */
-export function fixesAt(model: monaco.editor.ITextModel, range: monaco.Range): monaco.languages.CodeAction[] {
+/** The fixes of the problems that a range touches, in the order of the text. */
+export function fixesAt(
+  model: monaco.editor.ITextModel,
+  range: monaco.Range,
+): { readonly title: string; readonly edit: { readonly range: monaco.IRange; readonly text: string } }[] {
   const { text, diagnostics } = marks.get(model)?.() ?? { text: "", diagnostics: [] };
   return diagnostics.flatMap((one) => {
     const touched = monaco.Range.areIntersectingOrTouching(rangeOf(text, one), range);
     if (one.fix === undefined || !touched) return [];
-    const textEdit = { range: rangeOf(text, one.fix), text: one.fix.text };
-    const edits = [{ resource: model.uri, versionId: model.getVersionId(), textEdit }];
-    return [{ title: one.fix.title, kind: "quickfix", isPreferred: true, edit: { edits } }];
+    return [{ title: one.fix.title, edit: { range: rangeOf(text, one.fix), text: one.fix.text } }];
   });
 }
 
