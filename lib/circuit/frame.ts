@@ -8,7 +8,7 @@ import type { TerminalPart } from "./parts/terminal";
 import type { TransistorPart } from "./parts/transistor";
 import { TRANSISTOR_FIGURES, TRANSISTOR_NUMBERS } from "./parts/transistor-table";
 import type { VoltagePart } from "./parts/voltage";
-import type { State } from "./state";
+import { newState, type State } from "./state";
 import { Table } from "./table";
 
 /** Tables of the parts that loops and generated code add up, and of the junctions whose laws have further terms. */
@@ -68,8 +68,10 @@ export class Frame {
     const others = [places, junctions, junctions, junctions];
     this.lengths = [...vectors, ...others, ...tables.all.map(({ length }) => length)];
     this.all = new Float64Array(this.lengths.reduce((sum, length) => sum + length, 0));
-    const [x, low, residual, scale, jacobian, constantSlopes, exponents, less, whole] = this.parts();
-    this.state = { x: x!, low: low!, residual: residual!, scale: scale!, jacobian: jacobian!, share: 1 };
+    const parts = this.parts();
+    let next = 0;
+    this.state = newState(size, places, () => parts[next++]!);
+    const [x, low, residual, scale, jacobian, constantSlopes, exponents, less, whole] = parts;
     const start = (part: Float64Array | undefined) => part!.byteOffset / part!.BYTES_PER_ELEMENT;
     this.starts = {
       x: start(x),

@@ -19,14 +19,19 @@ export interface State {
   share: number;
 }
 
-export function newState(size: number, places: number): State {
-  const vector = () => new Float64Array(size + 1);
+/** A state at rest, whose arrays `take` gives, all 0, in the order of the fields. */
+export function newState(
+  size: number,
+  places: number,
+  take: (length: number) => Float64Array = (length) => new Float64Array(length),
+): State {
+  const vector = () => take(size + 1);
   return {
     x: vector(),
     low: vector(),
     residual: vector(),
     scale: vector(),
-    jacobian: new Float64Array(places),
+    jacobian: take(places),
     share: 1,
   };
 }

@@ -68,7 +68,7 @@ function measure(): void {
     ladder10000: ladder(10_000),
   };
   for (const [name, job] of Object.entries(jobs)) {
-    const times = job.circuit.size > 1000 ? 4 : 40;
+    const times = job.circuit.size > 1000 ? 10 : 40;
     const bare = sweep(job, "no", times);
     const proved = sweep(job, "reused", times);
     const afresh = sweep(job, "full", times);

@@ -8,10 +8,7 @@ const SINGLE = 6;
 export class ListedKernel implements Kernel {
   private readonly work: Float64Array;
   private readonly growth: Float64Array;
-  /**
-   * Steps [from, to) in turn of singles, and of others: ends of stretches, the first of others. The steps of a chain go without inner
-   * loops.
-   */
+  /** Where stretches of steps end, in turn of others and of singles, which go without inner loops; the first is of others. */
   private readonly ends: Int32Array;
   /** Of each step where its operations begin. */
   private readonly begins: Int32Array;
