@@ -168,6 +168,24 @@ describe("the cursor and the address", () => {
   });
 });
 
+describe("several operating points", () => {
+  it("are listed as branches with their stability, proof and folds", async () => {
+    const search = new URLSearchParams({
+      workspace: WORKSPACE,
+      query: "Trigger of two transistors",
+      status: "done",
+    });
+    const { rows } = await (await page.request.get(`/api/v1/runs?${search}&page=1&size=1`)).json();
+    await page.goto(`/${WORKSPACE}/runs/${rows[0].id}`);
+    const list = page.locator("[data-branches]");
+    await list.getByText(/3 branches; their indices add up at every value/).waitFor();
+    const branches = await list.getByRole("table").getByRole("row").allTextContents();
+    expect(branches.filter((row) => /unstable: the circuit leaves it.*V$/.test(row))).toHaveLength(1);
+    expect(branches.filter((row) => /(?<!un)stable: the circuit stays there.*V$/.test(row))).toHaveLength(2);
+    expect(await list.textContent()).toMatch(/2 folds, where branches turn back: V_in .+; V_in /);
+  });
+});
+
 describe("a run that is behind its netlist", () => {
   it("says that the netlist has moved on, and leads to what has changed", async () => {
     const netlist = await queue(page, HEAD.replace("Head with wide parts", "Head that moves on"));
