@@ -33,7 +33,7 @@ export function ConnectionDrawing({ connections, chosen, onChoose }: Props) {
   const [isList, setIsList] = useState(false);
   const rows = connections?.rows ?? [];
   const begun = useRef(0);
-  const [took, setTook] = useState<number | null>(null);
+  const [took, setTook] = useState<{ readonly of: object; readonly ms: number } | null>(null);
   const layout = useMemo(() => {
     begun.current = performance.now();
     return layOutConnections(connections?.rows ?? [], open);
@@ -51,7 +51,7 @@ export function ConnectionDrawing({ connections, chosen, onChoose }: Props) {
     if (isDrawn) setZoom(Math.max(fitting(), READABLE));
   }, [isDrawn]);
   // biome-ignore lint/correctness/useExhaustiveDependencies: measured each time the layout is drawn
-  useEffect(() => setTook(performance.now() - begun.current), [layout]);
+  useEffect(() => setTook({ of: layout, ms: performance.now() - begun.current }), [layout]);
 
   if (connections === null) return <p className="border-y py-3 text-quiet text-sm">Reading the text…</p>;
   if (rows.length === 0) {
@@ -116,7 +116,7 @@ export function ConnectionDrawing({ connections, chosen, onChoose }: Props) {
         )}
         <p className="figures ml-auto text-quiet text-xs">
           {counted(boxes.length - blocks.length, "element")}, {counted(connections.nets.size, "net")}
-          {took !== null && `, drawn in ${took < 10 ? took.toFixed(1) : Math.round(took)} ms`}
+          {took?.of === layout && `, drawn in ${took.ms < 10 ? took.ms.toFixed(1) : Math.round(took.ms)} ms`}
         </p>
       </div>
       <div ref={body} className="min-h-0 grow">
