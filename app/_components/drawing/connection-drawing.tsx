@@ -50,7 +50,6 @@ export function ConnectionDrawing({ connections, chosen, onChoose }: Props) {
   useEffect(() => {
     if (isDrawn) setZoom(Math.max(fitting(), READABLE));
   }, [isDrawn]);
-  // biome-ignore lint/correctness/useExhaustiveDependencies: measured each time the layout is drawn
   useEffect(() => setTook({ of: layout, ms: performance.now() - begun.current }), [layout]);
 
   if (connections === null) return <p className="border-y py-3 text-quiet text-sm">Reading the text…</p>;
