@@ -8,11 +8,14 @@ function printed(netlist: string, ...flags: string[]): string[] {
 }
 
 describe("where code may not be generated", () => {
-  test("a sweep gives the same bytes", { timeout: 60_000 }, () => {
+  test("a sweep gives the same bytes", { timeout: 120_000 }, () => {
     const netlist = "examples/one-quadrant-multiplier.swn";
-    const [may, bytes] = printed(netlist);
-    const [mayNot, listed] = printed(netlist, "--jitless");
+    const [may, steps, bytes] = printed(netlist);
+    const [mayNot, listedSteps, listed] = printed(netlist, "--jitless");
     expect([may, mayNot]).toEqual(["true", "false"]);
+    // Code is generated after 2,000 steps.
+    expect(Number(steps)).toBeGreaterThan(3000);
+    expect(listedSteps).toBe(steps);
     expect(listed).toBe(bytes);
   });
 });
