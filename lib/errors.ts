@@ -4,6 +4,7 @@ export type ErrorCode =
   | "signed out"
   | "not allowed"
   | "not found"
+  | "not acceptable"
   | "conflict"
   | "too large"
   | "too many"

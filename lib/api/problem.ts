@@ -6,6 +6,7 @@ const STATUS: Readonly<Record<ErrorCode, number>> = {
   "signed out": 401,
   "not allowed": 403,
   "not found": 404,
+  "not acceptable": 406,
   conflict: 409,
   "too large": 413,
   "too many": 429,

@@ -163,7 +163,7 @@ describe("a finished run", () => {
     const address = await runOf("Reversed input");
     const csv = await (await page.request.get(`${address}/points.csv`)).text();
     const lines = csv.trimEnd().split("\r\n");
-    expect(lines[0]).toBe("point,V_in [V],out [V],outcome");
+    expect(lines[0]).toBe("point,V_in [V],out [V],outcome,bound [V]");
     expect(lines).toHaveLength(52);
     expect(lines[1]).toMatch(/^0,-0\.5,,(?!converged)/);
     const link = page.getByRole("link", { name: "Run document as JSON" });

@@ -20,8 +20,14 @@ const BLOCKS: readonly PointBlock[] = [
     from: 0,
     traces: [Float64Array.of(Number.NaN, 0.1 + 0.2, 1e-20), Float64Array.of(Number.NaN, 1, 2)],
     outcome: ["singular", "converged", "converged"],
+    bound: Float64Array.of(Number.NaN, 2.5e-16, Number.NaN),
   },
-  { from: 3, traces: [Float64Array.of(Number.NaN), Float64Array.of(Number.NaN)], outcome: [null] },
+  {
+    from: 3,
+    traces: [Float64Array.of(Number.NaN), Float64Array.of(Number.NaN)],
+    outcome: [null],
+    bound: Float64Array.of(Number.NaN),
+  },
 ];
 const linesOf = (plan: Parameters<typeof csvHead>[0]) =>
   [csvHead(plan), ...BLOCKS.map((block) => csvLines(plan, block))].join("").split("\r\n");
@@ -30,15 +36,15 @@ describe("points as comma-separated values", () => {
   const lines = linesOf(PLAN);
 
   it("have a head with units, quoted where it must be (RFC 4180), and never a formula", () => {
-    expect(lines[0]).toBe(`point,V_in [V],temperature [K],"a ""quoted"", one [V]",'=ratio,outcome`);
+    expect(lines[0]).toBe(`point,V_in [V],temperature [K],"a ""quoted"", one [V]",'=ratio,outcome,bound [V]`);
   });
 
   it("have a line a point, the first axis fastest, with every digit and empty where unsolved", () => {
     expect(lines.slice(1)).toEqual([
-      "0,-0.5,283.15,,,singular",
-      "1,0.1,283.15,0.30000000000000004,1,converged",
-      "2,-0.5,298.15,1e-20,2,converged",
-      "3,0.1,298.15,,,not solved",
+      "0,-0.5,283.15,,,singular,",
+      "1,0.1,283.15,0.30000000000000004,1,converged,2.5e-16",
+      "2,-0.5,298.15,1e-20,2,converged,",
+      "3,0.1,298.15,,,not solved,",
       "",
     ]);
   });

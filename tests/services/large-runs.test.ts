@@ -78,7 +78,13 @@ describe("points as comma-separated values", () => {
     const { axes, traces, points } = document;
     expect(lines).toEqual(
       points.outcome.map((outcome, k) =>
-        [k, axes[0]!.values[k], traces[0]!.values[k] ?? "", outcome ?? "not solved"].join(","),
+        [
+          k,
+          axes[0]!.values[k],
+          traces[0]!.values[k] ?? "",
+          outcome ?? "not solved",
+          points.bound[k] ?? "",
+        ].join(","),
       ),
     );
     expect(new Set(points.outcome)).toEqual(new Set(["converged", "iteration limit", null]));

@@ -17,6 +17,8 @@ export interface PointBlock {
   readonly traces: readonly Float64Array[];
   /** Null where a point is not solved yet. */
   readonly outcome: readonly (OutcomeKind | null)[];
+  /** V; NaN where a point is not solved or not proved. */
+  readonly bound: Float64Array;
 }
 
 /**
@@ -36,11 +38,16 @@ export async function getPointBlocks(
 async function* blocksOf({ id, points, plan }: RunSummary): AsyncGenerator<PointBlock, void> {
   const traces = plan.traces.map((_, i) => traceColumn(i));
   for (let from = 0; from < points; from += BLOCK) {
-    const columns = await readRange(id, { from, to: Math.min(points, from + BLOCK) }, [...traces, "outcome"]);
+    const columns = await readRange(id, { from, to: Math.min(points, from + BLOCK) }, [
+      ...traces,
+      "outcome",
+      "bound",
+    ]);
     yield {
       from,
       traces: traces.map((name) => columns.get(name)!),
       outcome: Array.from(columns.get("outcome")!, (index) => OUTCOMES[index] ?? null),
+      bound: columns.get("bound")!,
     };
   }
 }

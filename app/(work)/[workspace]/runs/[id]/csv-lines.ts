@@ -12,24 +12,32 @@ export function csvHead({ axes, draws, traces }: Planned): string {
     ...axes.map(({ knob, unit }) => headed(knob, unit)),
     ...traces.map(({ name, unit }) => headed(name, unit)),
     "outcome",
+    headed("bound", "V"),
   ];
   return `${heads.map(quoted).join(",")}\r\n`;
 }
 
 /**
- * A line a point of `block`. Values are in coherent SI units with every digit they have; an unsolved value is empty. Draw 0 is
- * the nominal design.
+ * A line a point of `block`. Values are in coherent SI units with every digit they have; an unsolved value is empty, and so is
+ * the bound of a point without a proof. Draw 0 is the nominal design.
  */
-export function csvLines({ axes, draws, points }: Planned, { from, traces, outcome }: PointBlock): string {
+export function csvLines(
+  { axes, draws, points }: Planned,
+  { from, traces, outcome, bound }: PointBlock,
+): string {
   const ofOneDraw = points / (draws + 1);
   let lines = "";
   for (let i = 0; i < outcome.length; i++) {
     const k = from + i;
     const setting = settingOf(axes, k).map(({ value }) => value);
-    const values = traces.map((column) => (Number.isFinite(column[i]) ? column[i] : ""));
-    lines += `${[k, ...(draws > 0 ? [Math.floor(k / ofOneDraw)] : []), ...setting, ...values, outcome[i] ?? "not solved"].join(",")}\r\n`;
+    const values = traces.map((column) => written(column[i]));
+    lines += `${[k, ...(draws > 0 ? [Math.floor(k / ofOneDraw)] : []), ...setting, ...values, outcome[i] ?? "not solved", written(bound[i])].join(",")}\r\n`;
   }
   return lines;
+}
+
+function written(value: number | undefined): number | string {
+  return value !== undefined && Number.isFinite(value) ? value : "";
 }
 
 function headed(name: string, unit: string): string {
