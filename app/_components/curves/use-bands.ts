@@ -4,6 +4,7 @@ import { useEffect, useState } from "react";
 import type { BandAnswer, BandQuestion } from "./band-worker";
 import { columnFrom } from "./columns";
 import type { CurveSet } from "./curve-set";
+import { ordered } from "./figure-bands";
 import type { Band } from "./storey-views";
 
 const NONE: ReadonlyMap<string, Band> = new Map();
@@ -62,11 +63,4 @@ function isAlike(one: CurveSet, other: CurveSet): boolean {
       one.families.length === other.families.length &&
       one.axis.knob === other.axis.knob)
   );
-}
-
-/** A setting's part of a flat column, in the order of `x`. */
-function ordered({ order, isAscending, x }: CurveSet, flat: Float64Array, family: number): Float64Array {
-  const from = family * x.length;
-  if (isAscending) return flat.subarray(from, from + x.length);
-  return Float64Array.from(order, (index) => flat[from + index]!);
 }

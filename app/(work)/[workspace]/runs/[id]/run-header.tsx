@@ -8,6 +8,7 @@ import { Notice } from "@/app/_components/ui/notice";
 import { PageHeader } from "@/app/_components/ui/page-header";
 import { formatSpan } from "@/app/_components/ui/span-of-time";
 import { countOf } from "@/lib/analyses/plan";
+import { ExportMenu, type SeenFigure } from "./export-menu";
 import { cancel, runAgain } from "./fetch-run";
 import { isLive, type RunState } from "./run-shapes";
 import { StaleNotice } from "./stale-notice";
@@ -22,11 +23,13 @@ interface Props {
   readonly proved: number | null;
   /** Number of the netlist's newest revision. */
   readonly latestRevision: number;
+  /** The plot as it is seen; null while there is none. */
+  readonly figure: SeenFigure | null;
 }
 
 /** What was run, in one line, and what one can do about it. */
 export function RunHeader(props: Props) {
-  const { workspace, run, mayStart, mayCancel, onRun, proved, latestRevision } = props;
+  const { workspace, run, mayStart, mayCancel, onRun, proved, latestRevision, figure } = props;
   const router = useRouter();
   const [problem, setProblem] = useState<string | null>(null);
   const [starting, start] = useTransition();
@@ -69,6 +72,10 @@ export function RunHeader(props: Props) {
             <ButtonLink href={`/${workspace}/runs/compare?runs=${run.id}`} prefetch={false}>
               Compare
             </ButtonLink>
+            <ButtonLink href={`/${workspace}/runs/${run.id}/report`} prefetch={false}>
+              Report
+            </ButtonLink>
+            <ExportMenu workspace={workspace} run={run} figure={figure} attempt={attempt} />
             {isLive(run.status) && mayCancel && (
               <Button
                 tone="danger"

@@ -102,6 +102,7 @@ export function RunView(props: Props) {
         onRun={setRun}
         proved={document === null ? null : proved}
         latestRevision={context.latestRevision}
+        figure={set === null || document === null ? null : { set, view: state, allowed }}
       />
       <RunStatusLine run={run} behind={behind} />
       {problem !== null && (

@@ -1,0 +1,74 @@
+import { formatKnob } from "@/app/_components/curves/figures-in-words";
+import { Cell, HeadCell, Table } from "@/app/_components/ui/table";
+import type { Budget } from "@/lib/analyses/budget";
+import type { KeptJudgement } from "@/lib/analyses/verdict";
+import { formatQuantity } from "@/lib/units/quantity";
+
+/** Budgets that are printed, and parts of each. */
+const BUDGETS = 12;
+const PARTS = 8;
+
+/** What the tolerances cost, the costliest part first: of what each requirement is about, then of the readings. */
+export function ReportBudgets({ judgement }: { readonly judgement: KeptJudgement | null }) {
+  const { causes, budgets } = judgement ?? { causes: null, budgets: null };
+  const all = [...named("require", causes), ...named("read", budgets)];
+  const isTooLarge = judgement !== null && budgets === null;
+  if (all.length === 0 && !isTooLarge) return null;
+  return (
+    <section aria-labelledby="report-budgets" className="grid gap-4">
+      <h2 id="report-budgets">Error budgets</h2>
+      <p className="text-sm">
+        To first order about the nominal design: how far each toleranced value moves the result, and its share
+        of the variance.
+      </p>
+      {isTooLarge && <p>This run is too large for an error budget.</p>}
+      {all.slice(0, BUDGETS).map(({ key, budget }) => (
+        <BudgetTable key={key} budget={budget} />
+      ))}
+      {all.length > BUDGETS && <p>{all.length - BUDGETS} more budgets stand on the page of the run.</p>}
+    </section>
+  );
+}
+
+/** Those that have parts, each with a key of its own. */
+function named(kind: string, budgets: readonly Budget[] | null) {
+  return (budgets ?? [])
+    .map((budget, place) => ({ key: `${kind} ${place}`, budget }))
+    .filter(({ budget }) => budget.parts.length > 0);
+}
+
+function BudgetTable({ budget }: { readonly budget: Budget }) {
+  const { reading, unit, at, nominal, sigma, parts } = budget;
+  const place = at.map((one) => `${one.knob} ${formatKnob(one, one.value, 4)}`).join(", ");
+  const rest = parts.length - PARTS;
+  return (
+    <section data-whole aria-label={`Error budget of ${reading}`}>
+      <Table>
+        <caption>
+          {reading}
+          {place !== "" && ` at ${place}`}: nominal {formatQuantity(nominal, unit, 4)}, standard deviation{" "}
+          {formatQuantity(sigma, unit, 3)}
+          {rest > 0 && `; ${rest} smaller parts left out`}
+        </caption>
+        <thead>
+          <tr>
+            <HeadCell>Part</HeadCell>
+            <HeadCell figure>Change at its tolerance</HeadCell>
+            <HeadCell figure>Share</HeadCell>
+          </tr>
+        </thead>
+        <tbody>
+          {parts.slice(0, PARTS).map(({ part, parameter, effect, share }) => (
+            <tr key={`${part} ${parameter}`}>
+              <th scope="row" className="border-b py-1 pr-4 text-left font-normal">
+                {[part, parameter].filter(Boolean).join(" ")}
+              </th>
+              <Cell figure>{formatQuantity(effect, unit, 3)}</Cell>
+              <Cell figure>{`${(100 * share).toFixed(1)}\u202f%`}</Cell>
+            </tr>
+          ))}
+        </tbody>
+      </Table>
+    </section>
+  );
+}
