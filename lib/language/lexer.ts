@@ -11,7 +11,7 @@ const SEMICOLON = /^;+$/u;
 const SOMETHING = /;+[^\S\n]*[^\s]/uy;
 const NUMBER = /(?:\d+(?:\.\d+)?|\.\d+)(?:[eE][+-]?\d+)?/uy;
 const WORD = /[\p{L}_][\p{L}0-9_]*/uy;
-const STRING = /"(?:[^"\\\n]|\\[^\n])*("?)/uy;
+const STRING = /"(?:[^"\\\n]|\\[^\n]?)*("?)/uy;
 const UNIT_FACTOR = /(?:[\p{L}_][\p{L}0-9_]*|°C|℃|%)(?:⁻?[⁰¹²³⁴⁵⁶⁷⁸⁹])?/uy;
 const STRAY = /[^\s\p{L}0-9_#"+\-*/^=<>(){},:.±≤≥−×·]+/uy;
 

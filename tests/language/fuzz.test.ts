@@ -27,6 +27,8 @@ test("random and mutated texts are answered soundly, and some of them are right"
 test.each([
   "a block without braces before a comment\nblock .5current\n#",
   "let a = 1 V\nblock stage(in, out) {\n  let x = 1 V\n}Xe out. 1 V\n}\nrequire out.v ",
+  '" \\ ',
+  '"\\ \nnet -- ',
 ])("a text whose form was once not kept: %j", (text) => {
   expect(complaintOf(text)).toBeNull();
 });
