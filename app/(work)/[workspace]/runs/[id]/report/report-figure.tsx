@@ -31,7 +31,7 @@ export function ReportFigure({ run, document }: { readonly run: RunState; readon
     width: WIDTH,
   });
   return (
-    <section aria-labelledby="report-curves" className="grid gap-3">
+    <section aria-labelledby="report-curves" data-whole className="grid gap-3">
       <h2 id="report-curves">Curves</h2>
       <figure>
         {/* biome-ignore lint/security/noDangerouslySetInnerHtml: sceneSvg escapes every text that it sets */}
