@@ -139,11 +139,12 @@ test("a long run shows how far it is, and is cancelled while it computes", async
     .getByRole("status")
     .filter({ hasText: /^Cancelled when .* of 300.001 points were in\./ });
   await ended.waitFor();
+  await page.waitForFunction(() => !document.body.textContent?.includes("Fetching the rest of the curves"));
   const said = await ended.textContent();
   expect(await page.getByRole("button", { name: "Cancel run" }).count()).toBe(0);
   await page.reload();
   await ended.waitFor();
-  expect(await ended.textContent()).toBe(said);
+  await page.getByText(said ?? "", { exact: true }).waitFor();
   expect(faults).toEqual([]);
 
   // The sheet lists it with its state.

@@ -33,10 +33,11 @@ async function runOf(title: string): Promise<string> {
     query: title,
     status: "done",
     page: "1",
-    size: "20",
+    size: "100",
   });
   const { rows } = await (await page.request.get(`/api/v1/runs?${search}`)).json();
-  const found = rows.find((row: { title: string }) => row.title === title);
+  // The newest comes first; other tests may have queued changed texts of the same title since.
+  const found = rows.findLast((row: { title: string }) => row.title === title);
   return `/${WORKSPACE}/runs/${found.id}`;
 }
 
