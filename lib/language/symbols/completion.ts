@@ -166,6 +166,8 @@ function members(before: readonly string[], scope: NameScope): Offer[] {
     what: "pin",
     about: SIGNAL_MEANINGS[name],
   });
+  const isPin = symbol?.meaning === "port" && at > start + 2;
+  if (isPin) return [signal("v"), signal("i")];
   if (symbol?.meaning === "net" || symbol?.meaning === "port") return [signal("v")];
   if (symbol?.meaning !== "element") return [];
   if (at < before.length) return [signal("i")];

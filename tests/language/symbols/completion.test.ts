@@ -35,6 +35,8 @@ describe("what can be written", () => {
     ["after a dot behind its pin", "show S.Q.c.|", ["i"]],
     ["after a dot behind a resistor", "show RL.|", ["v", "i", "p"]],
     ["after a dot behind an instance", "show S.|", ["in", "out", "R", "Q", "RE", "A", "x"]],
+    ["after a dot behind a net of an instance", "show S.in.|", ["v", "i"]],
+    ["after a dot behind a net inside a block", "show S.x.|", ["v"]],
     ["as the knob of a window", "read a = highest(ls) for |", ["I_in", "temperature"]],
     ["after a value of a requirement", "require top w|", ["within"]],
     ["in a comment", "# s|", []],
