@@ -125,7 +125,7 @@ describe("two runs", () => {
   it("stand side by side in verdicts, readings and what their texts say", async () => {
     await page.goto(address(first, second));
     const verdicts = page.getByRole("table", { name: /Requirements/ });
-    await page.getByText(", one verdict differs").waitFor();
+    await page.locator("#content").getByText(", one verdict differs").waitFor();
     expect(await verdicts.getByRole("row").nth(1).textContent()).toMatch(/holds.*broken/);
     const readings = page.getByRole("table", { name: /Readings/ });
     expect(await readings.getByRole("row").count()).toBe(4);
@@ -143,7 +143,10 @@ describe("two runs", () => {
     const { rows } = await other.json();
     await page.goto(address(first, rows[0].id));
     await page.getByText("Run B sweeps I_in and run A V_in, so they have no ruler in common.").waitFor();
-    await page.getByText(/Of different netlists: \d+ differences/).waitFor();
+    await page
+      .locator("#content")
+      .getByText(/Of different netlists: \d+ differences/)
+      .waitFor();
   });
 });
 

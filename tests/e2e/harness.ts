@@ -43,6 +43,23 @@ export interface Opened {
   readonly faults: string[];
 }
 
+/** Lets an opened page put what was streamed to it in its place: until then its words stand there twice, once hidden. */
+function awaitStreamed(page: Page): void {
+  const streamed = page.locator('div[hidden][id^="S:"]').first();
+  const goto = page.goto.bind(page);
+  page.goto = async (url, options) => {
+    const response = await goto(url, options);
+    await streamed.waitFor({ state: "detached" });
+    return response;
+  };
+  const reload = page.reload.bind(page);
+  page.reload = async (options) => {
+    const response = await reload(options);
+    await streamed.waitFor({ state: "detached" });
+    return response;
+  };
+}
+
 /** A page with cookies of its own. `options.colorScheme` and `options.viewport` choose how it looks. */
 export async function openPage(browser: Browser, options: BrowserContextOptions = {}): Promise<Opened> {
   const context = await browser.newContext({
@@ -52,6 +69,7 @@ export async function openPage(browser: Browser, options: BrowserContextOptions 
   });
   const page = await context.newPage();
   page.setDefaultTimeout(20_000);
+  awaitStreamed(page);
   const faults: string[] = [];
   page.on("pageerror", (error) => faults.push(error.message));
   page.on("console", (message) => {

@@ -116,8 +116,16 @@ describe("the table of netlists", () => {
       transfer.items.add(new File([content], "dropped.swn", { type: "text/plain" }));
       return transfer;
     }, text("Dropped on the page"));
-    await page.getByRole("searchbox").dispatchEvent("dragover", { dataTransfer: dropped });
-    await page.getByText("Drop .swn files to add them").waitFor();
+    // Nothing answers a file held over the page until its program has started.
+    await expect
+      .poll(
+        async () => {
+          await page.getByRole("searchbox").dispatchEvent("dragover", { dataTransfer: dropped });
+          return page.getByText("Drop .swn files to add them").isVisible();
+        },
+        { timeout: 20_000 },
+      )
+      .toBe(true);
     await page.getByRole("searchbox").dispatchEvent("drop", { dataTransfer: dropped });
     await page.getByText("1 of 1 added").waitFor();
     await page.getByRole("link", { name: "Dropped on the page" }).waitFor();
