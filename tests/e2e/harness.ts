@@ -43,19 +43,23 @@ export interface Opened {
   readonly faults: string[];
 }
 
-/** Lets an opened page put what was streamed to it in its place: until then its words stand there twice, once hidden. */
+/**
+ * Lets an opened page put what was streamed to it in its place: until then its words stand there twice, once hidden. A page that
+ * is not found keeps the hidden part of what it would have been.
+ */
 function awaitStreamed(page: Page): void {
   const streamed = page.locator('div[hidden][id^="S:"]').first();
+  const settled = () => streamed.waitFor({ state: "detached", timeout: 2000 }).catch(() => undefined);
   const goto = page.goto.bind(page);
   page.goto = async (url, options) => {
     const response = await goto(url, options);
-    await streamed.waitFor({ state: "detached" });
+    await settled();
     return response;
   };
   const reload = page.reload.bind(page);
   page.reload = async (options) => {
     const response = await reload(options);
-    await streamed.waitFor({ state: "detached" });
+    await settled();
     return response;
   };
 }
