@@ -28,7 +28,7 @@ export function damped(bench: Bench, most: number): Attempt {
     system.assemble();
     if (!linear.solve(state.jacobian, state.residual, step)) {
       const isNumber = state.residual.every(Number.isFinite);
-      return { kind: isNumber ? "singular" : "not finite", iterations, wasSingular: isNumber };
+      return { kind: isNumber ? "undetermined" : "out of bounds", iterations, wasSingular: isNumber };
     }
     if (isAccepted(circuit, state, step)) {
       const polished = polish(bench);
@@ -56,10 +56,10 @@ export function damped(bench: Bench, most: number): Attempt {
       state.x.set(x);
       state.low.set(low);
       part = Math.max(CLAMP * part, Math.min(0.5 * part, Number.isNaN(trusted) ? 0 : trusted));
-      if (part < LEAST) return { kind: "step too small", iterations, wasSingular: false };
+      if (part < LEAST) return { kind: "came to a stand", iterations, wasSingular: false };
     }
   }
-  return { kind: "iteration limit", iterations: most, wasSingular: false };
+  return { kind: "did not settle", iterations: most, wasSingular: false };
 }
 
 /** The length of a step over the voltages, each in units of the voltage it starts from. */

@@ -37,7 +37,7 @@ export function homotopy(bench: Bench, aided: Aided): Attempt {
   while (spent() < MOST_STEPS) {
     const gone = curve.stride(length);
     if (gone === 0 || curve.parameter < -FIRST - 1) {
-      return { kind: "step too small", iterations: spent(), wasSingular: false };
+      return { kind: "came to a stand", iterations: spent(), wasSingular: false };
     }
     length = Math.min(LONGEST_STEP, gone * GROWTH);
     if (curve.parameter < -LAST) continue;
@@ -45,5 +45,5 @@ export function homotopy(bench: Bench, aided: Aided): Attempt {
     const last = newton(bench, true, FINAL_STEPS);
     return { ...last, iterations: spent() + last.iterations };
   }
-  return { kind: "iteration limit", iterations: spent(), wasSingular: false };
+  return { kind: "did not settle", iterations: spent(), wasSingular: false };
 }

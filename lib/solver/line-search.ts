@@ -25,7 +25,7 @@ export function lineSearch(bench: Bench, most: number): Attempt {
   for (let iterations = 1; iterations <= most; iterations++) {
     if (!linear.solve(state.jacobian, state.residual, step)) {
       const isNumber = state.residual.every(Number.isFinite);
-      return { kind: isNumber ? "singular" : "not finite", iterations, wasSingular: isNumber };
+      return { kind: isNumber ? "undetermined" : "out of bounds", iterations, wasSingular: isNumber };
     }
     if (isAccepted(circuit, state, step)) {
       const polished = polish(bench);
@@ -47,12 +47,12 @@ export function lineSearch(bench: Bench, most: number): Attempt {
       // The parabola through both merits and the slope −2·before at the beginning.
       const shrink = Number.isFinite(after) ? before / (after + before) : 0;
       const next = part * Math.min(0.5, Math.max(CLAMP, shrink));
-      if (next < LEAST) return { kind: "step too small", iterations, wasSingular: false };
+      if (next < LEAST) return { kind: "came to a stand", iterations, wasSingular: false };
       for (let j = 0; j < step.length; j++) step[j]! *= next / part;
       part = next;
     }
   }
-  return { kind: "iteration limit", iterations: most, wasSingular: false };
+  return { kind: "did not settle", iterations: most, wasSingular: false };
 }
 
 /** What each row sums, and what the whole step would change in it; a row that does neither weighs nothing. */

@@ -46,7 +46,7 @@ export function newton(bench: Bench, exact: boolean, most: number): Attempt {
   for (let iterations = 1; iterations <= most; iterations++) {
     if (!solved(bench, isExact)) {
       const areNumbers = state.residual.every(Number.isFinite) && state.jacobian.every(Number.isFinite);
-      return { kind: areNumbers ? "singular" : "not finite", iterations, wasSingular: areNumbers };
+      return { kind: areNumbers ? "undetermined" : "out of bounds", iterations, wasSingular: areNumbers };
     }
     if (isExact && isAccepted(circuit, state, step)) {
       const polished = polish(bench);
@@ -57,7 +57,7 @@ export function newton(bench: Bench, exact: boolean, most: number): Attempt {
     isExact = system.follow();
     if (!isExact) tame(state);
   }
-  return { kind: "iteration limit", iterations: most, wasSingular: false };
+  return { kind: "did not settle", iterations: most, wasSingular: false };
 }
 
 function go({ advance: ownAdvance, system, step }: Bench): void {

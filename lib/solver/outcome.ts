@@ -11,7 +11,13 @@ export const RUNGS = [
 ] as const;
 export type Rung = (typeof RUNGS)[number];
 
-export const OUTCOMES = ["converged", "iteration limit", "step too small", "singular", "not finite"] as const;
+export const OUTCOMES = [
+  "converged",
+  "did not settle",
+  "came to a stand",
+  "undetermined",
+  "out of bounds",
+] as const;
 export type OutcomeKind = (typeof OUTCOMES)[number];
 
 /** What became of one point. `iterations` counts every linear system solved over all rungs tried; `residual` is the largest |F_i|, A. */

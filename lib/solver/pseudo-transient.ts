@@ -35,7 +35,7 @@ export function pseudoTransient(bench: Bench, aided: Aided): Attempt {
     aided.assemble();
     if (!aided.solve(state.jacobian, state.residual, step)) {
       const isNumber = state.residual.every(Number.isFinite);
-      return { kind: isNumber ? "singular" : "not finite", iterations, wasSingular: isNumber };
+      return { kind: isNumber ? "undetermined" : "out of bounds", iterations, wasSingular: isNumber };
     }
     let farthest = 0;
     for (let j = 0; j < nets; j++) farthest = Math.max(farthest, Math.abs(step[j]!));
@@ -54,5 +54,5 @@ export function pseudoTransient(bench: Bench, aided: Aided): Attempt {
     const last = newton(bench, true, FINAL_STEPS);
     return { ...last, iterations: iterations + last.iterations };
   }
-  return { kind: "iteration limit", iterations: MOST_STEPS, wasSingular: false };
+  return { kind: "did not settle", iterations: MOST_STEPS, wasSingular: false };
 }

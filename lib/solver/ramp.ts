@@ -39,7 +39,7 @@ export function ramp(bench: Bench): Attempt {
     if (reached === 0 && attempt.iterations === 1) return { ...attempt, iterations };
     rise /= RETREAT;
     if (rise < LEAST_RISE || iterations > MOST_STEPS) {
-      const kind = rise < LEAST_RISE ? "step too small" : "iteration limit";
+      const kind = rise < LEAST_RISE ? "came to a stand" : "did not settle";
       return { kind, iterations, wasSingular: attempt.wasSingular };
     }
     state.x.set(x);

@@ -48,9 +48,10 @@ export function tied(bench: Bench, aided: Aided): Attempt {
     }
     if (!isWarm) return { ...attempt, iterations };
     part = Math.sqrt(part);
-    if (part > SMALLEST_FALL) return { kind: "step too small", iterations, wasSingular: attempt.wasSingular };
+    if (part > SMALLEST_FALL)
+      return { kind: "came to a stand", iterations, wasSingular: attempt.wasSingular };
     state.x.set(x);
     state.low.set(low);
   }
-  return { kind: "iteration limit", iterations, wasSingular: false };
+  return { kind: "did not settle", iterations, wasSingular: false };
 }

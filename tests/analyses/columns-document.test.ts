@@ -26,11 +26,13 @@ function madeUp(): RunMatter {
   return {
     ...{ plan, design, text: TEXT, diagnostics },
     traces: [column((k) => (lost(k) ? Number.NaN : 0.1 + k / 3)), column((k) => (lost(k) ? Number.NaN : -k))],
-    outcome: column((k) => (k === 9 ? Number.NaN : OUTCOMES.indexOf(k === 10 ? "singular" : "converged"))),
+    outcome: column((k) =>
+      k === 9 ? Number.NaN : OUTCOMES.indexOf(k === 10 ? "undetermined" : "converged"),
+    ),
     iterations: column(() => 3),
     rung: column(() => 0),
     bound: column((k) => (k < 4 ? 1e-12 * k : Number.NaN)),
-    failures: [{ point: 10, outcome: "singular", unsettled: ["in"] }],
+    failures: [{ point: 10, outcome: "undetermined", unsettled: ["in"] }],
   };
 }
 
@@ -76,7 +78,7 @@ describe("the binary form of a run document", () => {
       columns: ["trace/0", "trace/1", "bound", "outcome", "axis/0", "read/0"],
     });
     expect(view.getFloat64(8 + 8 * 3, true)).toBe(0.1 + 3 / 3);
-    expect(view.getFloat64(8 + 8 * (3 * 12 + 10), true)).toBe(OUTCOMES.indexOf("singular"));
+    expect(view.getFloat64(8 + 8 * (3 * 12 + 10), true)).toBe(OUTCOMES.indexOf("undetermined"));
     expect(end - length).toBe(8 + 8 * (5 * 12 + 4));
   });
 

@@ -41,11 +41,11 @@ describe("the run document", () => {
 
   test("says null where a point failed, and why", () => {
     expect(document.traces[0]!.values[0]).toBeNull();
-    expect(document.points.outcome[0]).toBe("step too small");
+    expect(document.points.outcome[0]).toBe("came to a stand");
     expect(document.points.rung[0]).toBe("source ramp");
     expect(document.failures[0]).toEqual({
       point: 0,
-      outcome: "step too small",
+      outcome: "came to a stand",
       unsettled: ["out", "sum", "Q1"],
     });
     expect(document.traces[0]!.values.at(-1)).toBe(matter.traces[0]!.at(-1));

@@ -123,7 +123,7 @@ describe("a reversed input", () => {
     expect(reversed).toHaveLength(10);
     expect(result.failures.map(({ point }) => point)).toEqual(reversed);
     for (const { point, outcome, unsettled } of result.failures) {
-      expect(outcome).toBe("step too small");
+      expect(outcome).toBe("came to a stand");
       expect(unsettled).toEqual(["out", "sum", "Q1"]);
       expect(OUTCOMES[result.outcome[point]!]).toBe(outcome);
       for (const column of [...result.traces, ...result.unknowns]) expect(column[point]).toBeNaN();

@@ -12,7 +12,7 @@ export function madeUpSource(x: readonly number[], y: readonly number[]): CurveS
       { name: "product", unit: "V", values: points.map(({ a, b }) => (a > 0 ? a * b : null)) },
       { name: "ratio", unit: "1", values: points.map(({ a, b }) => (a > 0 ? a / b : null)) },
     ],
-    points: { outcome: points.map(({ a }) => (a > 0 ? "converged" : "step too small")) },
+    points: { outcome: points.map(({ a }) => (a > 0 ? "converged" : "came to a stand")) },
   };
 }
 

@@ -61,7 +61,9 @@ describe("keys that move the view", () => {
 describe("why a point has no value", () => {
   const source = {
     ...madeUpSource([-1, 1], [300]),
-    failures: [{ point: 0, outcome: "step too small" as const, unsettled: ["out", "sum", "A1", "D1", "D2"] }],
+    failures: [
+      { point: 0, outcome: "came to a stand" as const, unsettled: ["out", "sum", "A1", "D1", "D2"] },
+    ],
   };
 
   it("is how it failed and what would not settle, as far as there is room", () => {

@@ -19,7 +19,7 @@ function run(
       ...(temperatures.length > 0 ? [outer] : []),
     ],
     traces: [{ name: trace, unit: "V", values }],
-    points: { outcome: values.map((value) => (value === null ? "singular" : "converged")) },
+    points: { outcome: values.map((value) => (value === null ? "undetermined" : "converged")) },
   };
 }
 

@@ -19,7 +19,7 @@ const BLOCKS: readonly PointBlock[] = [
   {
     from: 0,
     traces: [Float64Array.of(Number.NaN, 0.1 + 0.2, 1e-20), Float64Array.of(Number.NaN, 1, 2)],
-    outcome: ["singular", "converged", "converged"],
+    outcome: ["undetermined", "converged", "converged"],
     bound: Float64Array.of(Number.NaN, 2.5e-16, Number.NaN),
   },
   {
@@ -41,7 +41,7 @@ describe("points as comma-separated values", () => {
 
   it("have a line a point, the first axis fastest, with every digit and empty where unsolved", () => {
     expect(lines.slice(1)).toEqual([
-      "0,-0.5,283.15,,,singular,",
+      "0,-0.5,283.15,,,undetermined,",
       "1,0.1,283.15,0.30000000000000004,1,converged,2.5e-16",
       "2,-0.5,298.15,1e-20,2,converged,",
       "3,0.1,298.15,,,not solved,",

@@ -51,9 +51,9 @@ test("a run whose operating points are still sought says how far that is", () =>
 
 test("failed points stand by their reason, with places and draws to go to, the most first", () => {
   const failures = [
-    { point: 0, outcome: "singular" as const, unsettled: [] },
-    { point: 2, outcome: "iteration limit" as const, unsettled: ["out", "Q1"] },
-    { point: 6, outcome: "iteration limit" as const, unsettled: ["out", "Q1"] },
+    { point: 0, outcome: "undetermined" as const, unsettled: [] },
+    { point: 2, outcome: "did not settle" as const, unsettled: ["out", "Q1"] },
+    { point: 6, outcome: "did not settle" as const, unsettled: ["out", "Q1"] },
   ];
   const none = () => {};
   const words = text(

@@ -87,7 +87,7 @@ describe("points as comma-separated values", () => {
         ].join(","),
       ),
     );
-    expect(new Set(points.outcome)).toEqual(new Set(["converged", "iteration limit", null]));
+    expect(new Set(points.outcome)).toEqual(new Set(["converged", "did not settle", null]));
   });
 
   it("are nobody's of another workspace", async () => {

@@ -60,8 +60,8 @@ describe("getRunDocument", () => {
     expect(document.points.iterations).toEqual(
       Array.from({ length: 3000 }, (_, point) => made.iterations(point)),
     );
-    expect(document.points.outcome.slice(2998)).toEqual(["converged", "iteration limit"]);
-    expect(document.failures).toEqual([{ point: 2999, outcome: "iteration limit", unsettled: ["s", "D1"] }]);
+    expect(document.points.outcome.slice(2998)).toEqual(["converged", "did not settle"]);
+    expect(document.failures).toEqual([{ point: 2999, outcome: "did not settle", unsettled: ["s", "D1"] }]);
     expect(new Set([before.etag, partial.etag, etag]).size).toBe(3);
     expect(await getRunVersion(actor, id)).toBe(etag);
   });
@@ -109,7 +109,7 @@ describe("getPoint", () => {
     const { actor, id, plan } = await makeGrid();
     await storeShard(id, 0, plan, [7]);
     const detail = await getPoint(actor, id, 7);
-    expect(detail).toMatchObject({ outcome: "iteration limit", unsolved: ["s", "D1"] });
+    expect(detail).toMatchObject({ outcome: "did not settle", unsolved: ["s", "D1"] });
     expect(detail.failure).toMatch(/came to no rest\. Farthest from settled: s, D1\.$/);
     expect([...detail.traces, ...detail.unknowns].map(({ value }) => value)).toEqual([null, null, null]);
   });

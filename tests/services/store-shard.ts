@@ -14,7 +14,7 @@ export const made = {
   bound: (point: number) => 1e-12 * (point + 1),
 };
 
-/** Claims a shard and stores made-up figures for it; the points in `failed` are unsolved with "iteration limit". */
+/** Claims a shard and stores made-up figures for it; the points in `failed` are unsolved with "did not settle". */
 export async function storeShard(runId: string, index: number, plan: Plan, failed: readonly number[] = []) {
   const claimed = await claimShard({ runId, index, worker: "a test", leaseSeconds: 60 });
   if (claimed.kind !== "claimed") throw new Error(`Shard ${index} cannot be claimed: ${claimed.kind}.`);
@@ -25,13 +25,13 @@ export async function storeShard(runId: string, index: number, plan: Plan, faile
     each((point) => (failed.includes(point) ? Number.NaN : value(point)));
   const failures: Failure[] = failed
     .filter((point) => point >= from && point < to)
-    .map((point) => ({ point, outcome: "iteration limit", unsettled: ["s", "D1"] }));
+    .map((point) => ({ point, outcome: "did not settle", unsettled: ["s", "D1"] }));
   const result: ShardResult = {
     from,
     to,
     traces: plan.traces.map((_, i) => solved((point) => made.trace(i, point))),
     unknowns: plan.unknowns.map((_, i) => solved((point) => made.unknown(i, point))),
-    outcome: each((point) => OUTCOMES.indexOf(failed.includes(point) ? "iteration limit" : "converged")),
+    outcome: each((point) => OUTCOMES.indexOf(failed.includes(point) ? "did not settle" : "converged")),
     iterations: each(made.iterations),
     residual: each(made.residual),
     bound: solved(made.bound),

@@ -45,7 +45,7 @@ function result({ from, to }: Claim, add = 0): StoredShard {
     residual: column(),
     bound: column(),
     rung: column(),
-    failures: [{ point: from, outcome: "iteration limit", unsettled: ["s"] }],
+    failures: [{ point: from, outcome: "did not settle", unsettled: ["s"] }],
     unstable: [],
   };
   return storedForm(invented);
