@@ -23,6 +23,8 @@ interface Props extends EditorEvents {
   readonly problems: Marked | null;
   /** The value of a net, element, knob or value at the cursor's point of the preview; null where there is none. */
   readonly valueAtCursor?: (name: string) => string | null;
+  /** Once what can be written in stands there: the editor, or the box in its place. */
+  readonly onArrive?: () => void;
 }
 
 const LABEL = "Netlist text";
@@ -37,6 +39,7 @@ export function NetlistEditor({
   readOnly,
   problems,
   valueAtCursor = noValue,
+  onArrive,
   ...events
 }: Props) {
   const place = useRef<HTMLDivElement>(null);
@@ -114,6 +117,11 @@ export function NetlistEditor({
   useEffect(() => {
     if (state === "here" && problems !== null) mounted.current?.mark(problems);
   }, [problems, state]);
+
+  // biome-ignore lint/correctness/useExhaustiveDependencies: told once, whoever listens by then
+  useEffect(() => {
+    if (state !== "coming") onArrive?.();
+  }, [state]);
 
   useImperativeHandle(ref, () => ({
     text: () => now().text(),

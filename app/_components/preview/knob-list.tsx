@@ -1,7 +1,7 @@
 "use client";
 
 import "./knob.css";
-import { useMemo } from "react";
+import { useId, useMemo } from "react";
 import { formatKnob } from "@/app/_components/curves/figures-in-words";
 import { Button } from "@/app/_components/ui/button";
 import { KnobControl } from "./knob-control";
@@ -21,6 +21,7 @@ interface Props {
 
 /** Every knob of the file as a control that moves the preview, and nothing but the preview until it is written into the text. */
 export function KnobList({ outline, turned, place, onTurn, onReset, onWrite }: Props) {
+  const heading = useId();
   const scales = useMemo(
     () => new Map(outline.knobs.map((knob) => [knob, knobScale(knob, outline)])),
     [outline],
@@ -35,8 +36,8 @@ export function KnobList({ outline, turned, place, onTurn, onReset, onWrite }: P
   };
   const moved = outline.knobs.filter(({ name }) => turned.has(name));
   return (
-    <section aria-labelledby="preview-knobs">
-      <h3 id="preview-knobs" className="caption">
+    <section aria-labelledby={heading}>
+      <h3 id={heading} className="caption">
         Knobs{" "}
         <span className="ml-2 font-normal">move the preview alone until they are written into the text</span>
       </h3>

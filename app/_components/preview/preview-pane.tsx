@@ -1,6 +1,6 @@
 "use client";
 
-import { memo, useCallback } from "react";
+import { memo, useCallback, useId } from "react";
 import { classNames } from "@/app/_components/ui/class-names";
 import { ProgressLine } from "@/app/_components/ui/states";
 import { KnobList } from "./knob-list";
@@ -21,6 +21,8 @@ interface Props {
   readonly previewing: Previewing;
   /** Puts values of knobs into the text; absent where it may not be changed. */
   readonly onWrite?: ((knobs: readonly WrittenKnob[]) => void) | undefined;
+  /** Leaves the knobs out: for a few lines of text that are there to be read. */
+  readonly isBrief?: boolean;
 }
 
 /** On a window that is high enough the curves stay in view while what is below them is scrolled: a knob is turned with the eye on them. */
@@ -28,7 +30,8 @@ const STAYS =
   "z-30 pb-1 has-[details[open]]:static [@media(min-width:64rem)_and_(min-height:52rem)]:sticky top-0";
 
 /** What a run of the text would show, solved in the browser as one types: one sweep, nominal, kept nowhere. */
-export const PreviewPane = memo(function PreviewPane({ previewing, onWrite }: Props) {
+export const PreviewPane = memo(function PreviewPane({ previewing, onWrite, isBrief = false }: Props) {
+  const heading = useId();
   const preview = usePreview(previewing, (all) => all);
   const { outline, row, isStale, state, turned, place } = preview;
   const turn = useCallback(
@@ -47,10 +50,10 @@ export const PreviewPane = memo(function PreviewPane({ previewing, onWrite }: Pr
   const isSlow = useLate(state === "solving");
   const faded = isOld ? "opacity-60" : undefined;
   return (
-    <section aria-labelledby="preview" className="grid min-w-0 gap-6">
+    <section aria-labelledby={heading} className="grid min-w-0 gap-6">
       <div className={classNames("grid min-w-0 gap-1 bg-paper", STAYS)}>
         <div className="flex min-h-7 flex-wrap items-center justify-between gap-x-6 gap-y-1">
-          <h2 id="preview" className="caption">
+          <h2 id={heading} className="caption">
             Preview{" "}
             <span className="ml-2 font-normal">
               {row !== null && (isOld ? countInWords(row) : rowInWords(row))}
@@ -94,7 +97,7 @@ export const PreviewPane = memo(function PreviewPane({ previewing, onWrite }: Pr
           <ReadingRows readings={row.readings} />
         </div>
       )}
-      {outline !== null && (
+      {outline !== null && !isBrief && (
         <KnobList
           outline={outline}
           turned={turned}

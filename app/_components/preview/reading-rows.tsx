@@ -1,4 +1,4 @@
-import { memo } from "react";
+import { memo, useId } from "react";
 import { formatValue } from "@/app/_components/curves/figures-in-words";
 import type { ReadingDocument } from "@/lib/analyses/result";
 
@@ -8,11 +8,12 @@ export const ReadingRows = memo(function ReadingRows({
 }: {
   readonly readings: readonly ReadingDocument[];
 }) {
+  const heading = useId();
   const numbers = readings.filter(({ per }) => per === "sweep");
   if (numbers.length === 0) return null;
   return (
-    <section aria-labelledby="preview-readings">
-      <h3 id="preview-readings" className="caption">
+    <section aria-labelledby={heading}>
+      <h3 id={heading} className="caption">
         Readings
       </h3>
       <dl className="mt-2 grid border-t text-sm sm:grid-cols-2 sm:gap-x-6">

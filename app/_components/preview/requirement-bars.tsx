@@ -1,4 +1,4 @@
-import { memo } from "react";
+import { memo, useId } from "react";
 import { MarginBar } from "@/app/_components/ui/margin-bar";
 import { limitsInWords, marginSentence, worstInWords } from "@/app/_components/ui/margin-words";
 import { type MarkShape, StateMark } from "@/app/_components/ui/state-mark";
@@ -18,9 +18,11 @@ export const RequirementBars = memo(function RequirementBars({
   readonly requirements: readonly RequirementDocument[];
   readonly elsewhere: readonly string[];
 }) {
+  // A page may show several previews, so no heading has a name of its own.
+  const heading = useId();
   return (
-    <section aria-labelledby="preview-requirements">
-      <h3 id="preview-requirements" className="caption">
+    <section aria-labelledby={heading}>
+      <h3 id={heading} className="caption">
         Requirements <span className="ml-2 font-normal">judged on the preview</span>
       </h3>
       {requirements.length > 0 && (

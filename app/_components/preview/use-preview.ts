@@ -8,8 +8,11 @@ function openThread(): SolvingThread {
   return thread as SolvingThread;
 }
 
-/** The preview of a sheet that begins with `text`; later texts are told to it as they are typed. */
-export function usePreviewing(text: string): Previewing {
+/**
+ * The preview of a sheet that begins with `text`; later texts are told to it as they are typed. Nothing is solved, and no thread
+ * started, before `isSeen`.
+ */
+export function usePreviewing(text: string, isSeen = true): Previewing {
   const [previewing] = useState(
     () =>
       new Previewing(
@@ -20,9 +23,10 @@ export function usePreviewing(text: string): Previewing {
   );
   // biome-ignore lint/correctness/useExhaustiveDependencies: begins once, with the text the visit began with
   useEffect(() => {
+    if (!isSeen) return;
     previewing.setText(text);
     return () => previewing.close();
-  }, [previewing]);
+  }, [previewing, isSeen]);
   return previewing;
 }
 
