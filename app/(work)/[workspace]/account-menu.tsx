@@ -2,6 +2,7 @@
 
 import { signOut } from "next-auth/react";
 import { useState } from "react";
+import { useDeeds } from "@/app/_components/palette/deed-registry";
 import { Menu, MenuChoice, MenuItem, MenuLabel, MenuLink, MenuSeparator } from "@/app/_components/ui/menu";
 import { THEME_COOKIE, type Theme } from "@/app/_components/ui/theme";
 
@@ -43,6 +44,26 @@ export function AccountMenu({
     .join("")
     .toUpperCase();
   const others = workspaces.filter(({ slug }) => slug !== workspace);
+  const choose = (next: Theme) => {
+    setTheme(next);
+    keepTheme(next);
+  };
+  const leave = () => void signOut({ callbackUrl: "/sign-in" });
+  useDeeds("self", [
+    ...THEMES.filter(({ value }) => value !== theme).map(({ value, label }) => ({
+      id: `theme ${value}`,
+      words: value === "system" ? "Theme as the system" : `${label} theme`,
+      also: "theme colours appearance light dark",
+      does: () => choose(value),
+    })),
+    ...others.map(({ slug, name: other }) => ({
+      id: `workspace ${slug}`,
+      words: `Workspace ${other}`,
+      also: "switch team",
+      does: `/${slug}`,
+    })),
+    { id: "leave", words: "Sign out", also: "log off leave", does: leave },
+  ]);
   return (
     <Menu
       trigger={
@@ -73,16 +94,9 @@ export function AccountMenu({
       )}
       <MenuSeparator />
       <MenuLabel>Theme</MenuLabel>
-      <MenuChoice
-        value={theme}
-        options={THEMES}
-        onChange={(next) => {
-          setTheme(next);
-          keepTheme(next);
-        }}
-      />
+      <MenuChoice value={theme} options={THEMES} onChange={choose} />
       <MenuSeparator />
-      <MenuItem onSelect={() => signOut({ callbackUrl: "/sign-in" })}>Sign out</MenuItem>
+      <MenuItem onSelect={leave}>Sign out</MenuItem>
     </Menu>
   );
 }

@@ -2,15 +2,14 @@ import Link from "next/link";
 import type { ComponentProps } from "react";
 import { classNames } from "./class-names";
 
-/** `primary` once a page at most; `quiet` inside rows and bars; `danger` for what cannot be undone. */
-export type ButtonTone = "primary" | "plain" | "quiet" | "danger";
+/** `primary` once a page at most; `quiet` inside rows and bars. There is no tone for what cannot be undone: nothing is offered that cannot. */
+export type ButtonTone = "primary" | "plain" | "quiet";
 export type ButtonSize = "regular" | "small";
 
 const TONES: Record<ButtonTone, string> = {
   primary: "border-ink bg-ink text-paper hover:opacity-90",
   plain: "border-rule bg-surface text-ink hover:border-edge",
   quiet: "border-transparent bg-transparent text-ink hover:bg-wash",
-  danger: "border-broken bg-surface text-broken hover:bg-wash",
 };
 
 const SIZES: Record<ButtonSize, string> = {

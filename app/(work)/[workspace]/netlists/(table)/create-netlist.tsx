@@ -2,6 +2,7 @@
 
 import { useRouter } from "next/navigation";
 import { type FormEvent, useState, useTransition } from "react";
+import { useDeeds } from "@/app/_components/palette/deed-registry";
 import { Button } from "@/app/_components/ui/button";
 import { Dialog } from "@/app/_components/ui/dialog";
 import { Field } from "@/app/_components/ui/field";
@@ -13,6 +14,8 @@ export function CreateNetlist({ workspace }: { readonly workspace: string }) {
   const [open, setOpen] = useState(false);
   const [problem, setProblem] = useState<string>();
   const [making, start] = useTransition();
+
+  useDeeds("here", [{ id: "new", words: "New netlist", also: "make create add", does: () => setOpen(true) }]);
 
   const submit = (event: FormEvent<HTMLFormElement>) => {
     event.preventDefault();

@@ -3,6 +3,7 @@
 import dynamic from "next/dynamic";
 import { type ReactNode, type RefObject, useState } from "react";
 import type { EditorHandle } from "@/app/_components/editor/editor-handle";
+import { useDeeds } from "@/app/_components/palette/deed-registry";
 import { Tabs } from "@/app/_components/ui/tabs";
 
 // Fetched when it is first looked at.
@@ -28,6 +29,20 @@ interface Props {
 /** Beside the text: what it would give, or what it connects. */
 export function SheetSide({ preview, text, cursor, editor }: Props) {
   const [tab, setTab] = useState("preview");
+  useDeeds(
+    "here",
+    [
+      tab === "preview"
+        ? {
+            id: "connections",
+            words: "Show the connections",
+            also: "drawing nets parts",
+            does: () => setTab("connections"),
+          }
+        : { id: "preview", words: "Show the preview", also: "curves knobs", does: () => setTab("preview") },
+    ],
+    1,
+  );
   return (
     <Tabs
       label="Beside the text"

@@ -19,6 +19,7 @@ import { type CursorAt, SheetSide } from "./sheet-side";
 import { StatusLine } from "./status-line";
 import { useAskedLine } from "./use-asked-line";
 import { useSheet } from "./use-sheet";
+import { useSheetDeeds } from "./use-sheet-deeds";
 
 interface Props {
   readonly workspace: string;
@@ -36,6 +37,7 @@ export function Sheet({ workspace, netlist, latest, runs, writer, role, mayQueue
   const sheet = useSheet({ workspace, netlistId: netlist.id, writer, latest, mayQueue });
   const { editor, examined, text } = sheet;
   useAskedLine(editor);
+  useSheetDeeds(sheet, mayQueue);
   const previewing = usePreviewing(latest.text);
   const [tab, setTab] = useState<TabDoes>("indents");
   const [cursor, setCursor] = useState<CursorAt | null>(null);

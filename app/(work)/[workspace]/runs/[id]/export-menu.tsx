@@ -4,6 +4,7 @@ import type { CurveSet } from "@/app/_components/curves/curve-set";
 import { type CurveView, drawnChoice } from "@/app/_components/curves/curve-view";
 import { figurePng, figureSvg } from "@/app/_components/curves/export-figure";
 import { figureBands } from "@/app/_components/curves/figure-bands";
+import { useDeeds } from "@/app/_components/palette/deed-registry";
 import { Button } from "@/app/_components/ui/button";
 import { Menu, MenuItem, MenuLabel, MenuSeparator } from "@/app/_components/ui/menu";
 import type { AllowedBand } from "@/lib/analyses/allowed-bands";
@@ -48,35 +49,47 @@ export function ExportMenu({ workspace, run, figure, attempt }: Props) {
         ? new Map()
         : figureBands(figure!.set, drawnChoice(figure!.set, figure!.view).traces),
   });
+  const files = numbers.map(({ words, from, extension }) => ({
+    words,
+    save: () => saveFrom(from, fileName(run, extension)),
+  }));
+  const drawings = THEMES.map((theme) => ({
+    words: `Drawing as SVG, ${theme}`,
+    save: attempt(async () => {
+      const type = "image/svg+xml;charset=utf-8";
+      saveBlob(new Blob([figureSvg(request(theme))], { type }), fileName(run, "svg"));
+    }),
+  }));
+  const pictures = THEMES.map((theme) => ({
+    words: `Picture as PNG, ${theme}`,
+    save: attempt(async () => saveBlob(await figurePng(request(theme)), fileName(run, "png"))),
+  }));
+  const plots = figure === null ? [] : [...drawings, ...pictures];
+  useDeeds(
+    "here",
+    [...files, ...plots].map(({ words, save }) => ({
+      id: `export ${words}`,
+      words: `Export ${words.charAt(0).toLowerCase()}${words.slice(1)}`,
+      also: "download save file numbers plot",
+      does: () => void save(),
+    })),
+    2,
+  );
   return (
     <Menu trigger={<Button>Export</Button>}>
       <MenuLabel>Numbers</MenuLabel>
-      {numbers.map(({ words, from, extension }) => (
-        <MenuItem key={extension} onSelect={() => saveFrom(from, fileName(run, extension))}>
+      {files.map(({ words, save }) => (
+        <MenuItem key={words} onSelect={save}>
           {words}
         </MenuItem>
       ))}
-      {figure !== null && (
+      {plots.length > 0 && (
         <>
           <MenuSeparator />
           <MenuLabel>The plot as it is seen</MenuLabel>
-          {THEMES.map((theme) => (
-            <MenuItem
-              key={`svg ${theme}`}
-              onSelect={attempt(async () => {
-                const type = "image/svg+xml;charset=utf-8";
-                saveBlob(new Blob([figureSvg(request(theme))], { type }), fileName(run, "svg"));
-              })}
-            >
-              Drawing as SVG, {theme}
-            </MenuItem>
-          ))}
-          {THEMES.map((theme) => (
-            <MenuItem
-              key={`png ${theme}`}
-              onSelect={attempt(async () => saveBlob(await figurePng(request(theme)), fileName(run, "png")))}
-            >
-              Picture as PNG, {theme}
+          {plots.map(({ words, save }) => (
+            <MenuItem key={words} onSelect={save}>
+              {words}
             </MenuItem>
           ))}
         </>

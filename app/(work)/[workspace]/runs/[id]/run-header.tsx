@@ -1,7 +1,8 @@
 "use client";
 
 import { useRouter } from "next/navigation";
-import { useState, useTransition } from "react";
+import { type Ref, useEffect, useRef, useState, useTransition } from "react";
+import { useDeeds } from "@/app/_components/palette/deed-registry";
 import { Button, ButtonLink } from "@/app/_components/ui/button";
 import { counted, formatCount } from "@/app/_components/ui/count";
 import { Notice } from "@/app/_components/ui/notice";
@@ -47,21 +48,46 @@ export function RunHeader(props: Props) {
     }
   };
   const mayAgain = !isLive(run.status) && mayStart;
-  const againButton = (words: string) => (
-    <Button
-      busy={starting}
-      onClick={() =>
-        start(
-          attempt(async () => {
-            const { id } = await runAgain(run);
-            router.push(`/${workspace}/runs/${id}`);
-          }),
-        )
-      }
-    >
+  const again = () =>
+    start(
+      attempt(async () => {
+        const { id } = await runAgain(run);
+        router.push(`/${workspace}/runs/${id}`);
+      }),
+    );
+  const againPlace = useRef<HTMLButtonElement>(null);
+  const hadLife = useRef(isLive(run.status));
+  useEffect(() => {
+    const ended = hadLife.current && !isLive(run.status);
+    hadLife.current = isLive(run.status);
+    // The button that cancelled it is gone, and the focus with it: the one that takes that back stands in its place.
+    if (ended && document.activeElement === document.body) againPlace.current?.focus();
+  }, [run.status]);
+  const againButton = (words: string, ref?: Ref<HTMLButtonElement>) => (
+    <Button ref={ref} busy={starting} onClick={again}>
       {starting ? "Queueing…" : words}
     </Button>
   );
+  const mayStop = isLive(run.status) && mayCancel;
+  const halt = () => stop(attempt(async () => onRun(await cancel(run.id))));
+  const paths = {
+    compare: `/${workspace}/runs/compare?runs=${run.id}`,
+    report: `/${workspace}/runs/${run.id}/report`,
+    netlist: `/${workspace}/netlists/${run.netlistId}`,
+  };
+  useDeeds("here", [
+    { id: "compare", words: "Compare with another run", also: "difference overlay", does: paths.compare },
+    { id: "report", words: "Report to print", also: "pdf paper export", does: paths.report },
+    ...(mayStop ? [{ id: "cancel", words: "Cancel run", also: "stop abort", does: halt }] : []),
+    ...(mayAgain ? [{ id: "again", words: "Run again", also: "queue once more repeat", does: again }] : []),
+    { id: "netlist", words: "Open netlist", also: "sheet text edit", does: paths.netlist },
+    {
+      id: "revision",
+      words: `Revision ${run.revision} of the netlist`,
+      also: "text",
+      does: `${paths.netlist}/revisions/${run.revision}`,
+    },
+  ]);
   return (
     <>
       <PageHeader
@@ -69,24 +95,20 @@ export function RunHeader(props: Props) {
         remark={`revision ${run.revision} · run ${run.number} · ${sizeInWords(run, proved)}`}
         actions={
           <>
-            <ButtonLink href={`/${workspace}/runs/compare?runs=${run.id}`} prefetch={false}>
+            <ButtonLink href={paths.compare} prefetch={false}>
               Compare
             </ButtonLink>
-            <ButtonLink href={`/${workspace}/runs/${run.id}/report`} prefetch={false}>
+            <ButtonLink href={paths.report} prefetch={false}>
               Report
             </ButtonLink>
             <ExportMenu workspace={workspace} run={run} figure={figure} attempt={attempt} />
-            {isLive(run.status) && mayCancel && (
-              <Button
-                tone="danger"
-                busy={cancelling}
-                onClick={() => stop(attempt(async () => onRun(await cancel(run.id))))}
-              >
+            {mayStop && (
+              <Button busy={cancelling} onClick={halt}>
                 {cancelling ? "Cancelling…" : "Cancel run"}
               </Button>
             )}
-            {mayAgain && againButton("Run again")}
-            <ButtonLink href={`/${workspace}/netlists/${run.netlistId}`} prefetch={false}>
+            {mayAgain && againButton("Run again", againPlace)}
+            <ButtonLink href={paths.netlist} prefetch={false}>
               Open netlist
             </ButtonLink>
           </>

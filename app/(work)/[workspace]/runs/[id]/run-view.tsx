@@ -19,6 +19,7 @@ import { RunStatusLine } from "./run-status-line";
 import { SpreadView } from "./spread/spread-view";
 import { textLinks } from "./text-links";
 import { type Found, useLiveRun } from "./use-live-run";
+import { useViewDeeds } from "./use-view-deeds";
 
 /** A finished run is judged within this time, ms, unless it is large. */
 const JUDGED = 1500;
@@ -74,6 +75,7 @@ export function RunView(props: Props) {
     [document, run.plan],
   );
   const set = useMemo(() => curveSet(source), [source]);
+  useViewDeeds(set, state, show);
   const numbers = useMemo(() => withDraws(source, run.plan.draws), [source, run.plan.draws]);
   const allowed = useMemo(() => (document === null ? [] : allowedBands(document)), [document]);
   const proved = useMemo(() => provedIn(source), [source]);

@@ -2,6 +2,7 @@
 
 import { useRouter } from "next/navigation";
 import { useEffect, useState } from "react";
+import { useDeeds } from "@/app/_components/palette/deed-registry";
 import { counted } from "@/app/_components/ui/count";
 import { Notice } from "@/app/_components/ui/notice";
 import { PageHeader } from "@/app/_components/ui/page-header";
@@ -46,6 +47,28 @@ export function CompareView({ workspace, runs, lost, search }: Props) {
     const kept = { ...state, families: null, point: null, origin: null, only: null };
     router.replace(`/${workspace}/runs/compare${writeCompareState(next, kept)}`, { scroll: false });
   };
+  useDeeds(
+    "here",
+    runs.length === 0
+      ? []
+      : (["overlay", "difference"] as const)
+          .filter((mode) => mode !== state.mode)
+          .map((mode) => ({
+            id: mode,
+            words:
+              mode === "overlay" ? "Lay the curves over each other" : "Show the difference of the curves",
+            also: "overlay difference subtract",
+            does: () =>
+              setState((before) => ({
+                ...before,
+                mode,
+                traces: null,
+                families: null,
+                only: null,
+                point: null,
+              })),
+          })),
+  );
   return (
     <>
       <PageHeader

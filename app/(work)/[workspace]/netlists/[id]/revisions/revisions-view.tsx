@@ -3,6 +3,7 @@
 import { useQuery } from "@tanstack/react-query";
 import { useRouter } from "next/navigation";
 import { useState } from "react";
+import { useDeeds } from "@/app/_components/palette/deed-registry";
 import { Button, ButtonLink } from "@/app/_components/ui/button";
 import { counted } from "@/app/_components/ui/count";
 import { Notice } from "@/app/_components/ui/notice";
@@ -42,6 +43,20 @@ export function RevisionsView({ workspace, netlist, page, first }: Props) {
     setChosen((before) =>
       isChosen ? [...before.slice(-1), number] : before.filter((other) => other !== number),
     );
+
+  useDeeds("here", [
+    { id: "sheet", words: "Open sheet", also: "netlist text edit", does: base },
+    ...(data.total > 1
+      ? [
+          {
+            id: "compare",
+            words: `Compare the newest two, ${data.total - 1} with ${data.total}`,
+            also: "difference changes",
+            does: `${base}/compare/${data.total - 1}..${data.total}`,
+          },
+        ]
+      : []),
+  ]);
 
   return (
     <>

@@ -1,6 +1,7 @@
 "use client";
 
 import { useRouter } from "next/navigation";
+import { useDeeds } from "@/app/_components/palette/deed-registry";
 import { Button, ButtonLink } from "@/app/_components/ui/button";
 import { SelectField } from "@/app/_components/ui/field";
 
@@ -15,6 +16,11 @@ export function CompareActions({ workspace, netlist, pair: [before, after] }: Pr
   const router = useRouter();
   const base = `/${workspace}/netlists/${netlist.id}`;
   const go = (a: number, b: number) => router.push(`${base}/compare/${a}..${b}`);
+  useDeeds("here", [
+    { id: "exchange", words: "Exchange the two revisions", also: "swap", does: () => go(after, before) },
+    { id: "history", words: "History", also: "revisions", does: `${base}/revisions` },
+    { id: "sheet", words: "Open sheet", also: "netlist text edit", does: base },
+  ]);
   const all = Array.from({ length: netlist.latest }, (_, k) => netlist.latest - k);
   const options = all.map((number) => (
     <option key={number} value={number}>

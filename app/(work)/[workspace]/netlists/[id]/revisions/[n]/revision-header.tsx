@@ -2,6 +2,7 @@
 
 import Link from "next/link";
 import { useEffect, useRef } from "react";
+import { useDeeds } from "@/app/_components/palette/deed-registry";
 import { Button, ButtonLink } from "@/app/_components/ui/button";
 import { Menu, MenuLink } from "@/app/_components/ui/menu";
 import { Notice } from "@/app/_components/ui/notice";
@@ -37,6 +38,43 @@ export function RevisionHeader({ workspace, netlist, revision, mayWrite, mayRun,
   useEffect(() => {
     if (document.activeElement === document.body) answer.current?.querySelector("button")?.focus();
   }, [remark, isLikeNewest]);
+  useDeeds("here", [
+    { id: "sheet", words: "Open sheet", also: "netlist text edit", does: base },
+    { id: "history", words: "History", also: "revisions", does: `${base}/revisions` },
+    ...(mayWrite
+      ? [
+          {
+            id: "duplicate",
+            words: "Duplicate",
+            also: "copy new netlist",
+            does: () => void deeds.duplicate(),
+          },
+        ]
+      : []),
+    ...(mayWrite && !isLikeNewest
+      ? [
+          {
+            id: "restore",
+            words: `Restore revision ${number}`,
+            also: "back",
+            does: () => void deeds.restore(),
+          },
+        ]
+      : []),
+    ...(mayRun
+      ? [{ id: "queue", words: "Queue run", also: "start solve sweep", does: () => void deeds.queue() }]
+      : []),
+    ...(isNewest
+      ? []
+      : [
+          {
+            id: "compare",
+            words: `Compare with the newest, revision ${netlist.latest}`,
+            also: "difference changes",
+            does: `${base}/compare/${number}..${netlist.latest}`,
+          },
+        ]),
+  ]);
   return (
     <>
       <PageHeader
