@@ -1,9 +1,9 @@
 import { ButtonLink } from "@/app/_components/ui/button";
 import { Wordmark } from "@/app/_components/ui/logo";
+import { NetlistText } from "@/app/_components/ui/netlist-text";
 import { currentUser } from "@/lib/auth/actor";
 import { LANDING_NETLIST } from "./landing-curve";
 import { LandingPlot } from "./landing-plot";
-import { NetlistText } from "./netlist-text";
 
 const POINTS = [
   {

@@ -4,6 +4,7 @@ import type { ReactNode } from "react";
 import { ButtonLink } from "@/app/_components/ui/button";
 import { Wordmark } from "@/app/_components/ui/logo";
 import { currentUser } from "@/lib/auth/actor";
+import "./docs.css";
 import { DocsNavigation } from "./_parts/docs-navigation";
 
 export const metadata: Metadata = {

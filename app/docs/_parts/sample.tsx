@@ -1,0 +1,34 @@
+import { NetlistText } from "@/app/_components/ui/netlist-text";
+import { StateBadge } from "@/app/_components/ui/state-badge";
+import { solved } from "./solved";
+
+/** A whole netlist of a page, and beneath it what it reads and whether it holds, solved as the page is made. */
+export function Sample({ text }: { readonly text: string }) {
+  const answer = solved(text);
+  const hasAnswer = answer !== null && answer.readings.length + answer.requirements.length > 0;
+  return (
+    <div className="mt-3 max-w-3xl">
+      <NetlistText text={text.trim()} />
+      {hasAnswer && (
+        <dl className="flex flex-wrap gap-x-6 gap-y-1 border-y py-1.5 text-sm">
+          {answer.readings.map(({ name, value }) => (
+            <div key={name} className="flex gap-2">
+              <dt className="text-quiet">
+                <code>{name}</code>
+              </dt>
+              <dd className="figures">{value}</dd>
+            </div>
+          ))}
+          {answer.requirements.map(({ label, verdict, margin }) => (
+            <div key={label} className="flex gap-2">
+              <dt className="text-quiet">{label}</dt>
+              <dd>
+                <StateBadge state={verdict} /> <span className="text-quiet">margin {margin}</span>
+              </dd>
+            </div>
+          ))}
+        </dl>
+      )}
+    </div>
+  );
+}
