@@ -14,6 +14,7 @@ export interface NetlistDetail extends NetlistRow {
   readonly text: string;
   /** SHA-256 of the canonical text. */
   readonly hash: string;
+  readonly isArchived: boolean;
 }
 
 /** Throws "not found" for a netlist that is not in the actor's workspace. */
@@ -46,5 +47,5 @@ export async function getNetlist(actor: Actor, id: string): Promise<NetlistDetai
     .innerJoin(revision, and(eq(revision.netlistId, netlist.id), eq(revision.number, netlist.latestRevision)))
     .leftJoinLateral(lastRun, sql`true`)
     .where(eq(netlist.id, asked.id));
-  return { ...row!, updatedAt: row!.updatedAt.toISOString() };
+  return { ...row!, updatedAt: row!.updatedAt.toISOString(), isArchived: asked.archivedAt !== null };
 }

@@ -1,4 +1,4 @@
-import { and, asc, count, desc, eq, isNull, type SQL, sql } from "drizzle-orm";
+import { and, asc, count, desc, eq, isNotNull, isNull, type SQL, sql } from "drizzle-orm";
 import type { z } from "zod";
 import { netlist } from "@/db/schema/netlist";
 import { revision } from "@/db/schema/revision";
@@ -23,7 +23,7 @@ export interface NetlistRow {
 }
 
 /**
- * One page of the netlists of the actor's workspace, without archived ones. A search looks at titles, owners and the text of
+ * One page of the netlists of the actor's workspace: those in use, or the archived ones. A search looks at titles, owners and the text of
  * the newest revision. Sorted by status, those that never ran come last either way.
  */
 export async function listNetlists(
@@ -31,7 +31,7 @@ export async function listNetlists(
   input: z.input<typeof listInput>,
 ): Promise<{ rows: NetlistRow[]; total: number }> {
   authorize(actor, "netlist.read", { workspaceId: actor.workspaceId });
-  const { query, sort, direction, page, size } = readInput(listInput, input);
+  const { query, which, sort, direction, page, size } = readInput(listInput, input);
   const [rows, total] = await searching(actor, query, async (db) => {
     const lastRun = lastRunOf(db);
     const keys: Record<typeof sort, SQL> = {
@@ -43,7 +43,7 @@ export async function listNetlists(
     const order = direction === "ascending" ? asc : desc;
     const matches = and(
       eq(netlist.workspaceId, actor.workspaceId),
-      isNull(netlist.archivedAt),
+      which === "archived" ? isNotNull(netlist.archivedAt) : isNull(netlist.archivedAt),
       containsWords(query, [netlist.title, user.name, revision.text]),
     );
     const isNewest = and(eq(revision.netlistId, netlist.id), eq(revision.number, netlist.latestRevision));

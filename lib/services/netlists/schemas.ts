@@ -22,6 +22,7 @@ export const searchQuery = z
 
 export const listInput = z.object({
   query: searchQuery,
+  which: z.enum(["in use", "archived"]).default("in use"),
   sort: z.enum(["title", "updated", "owner", "status"]).default("updated"),
   direction: z.enum(["ascending", "descending"]).default("descending"),
   ...paging,

@@ -8,6 +8,7 @@ import {
   useTable,
 } from "@tanstack/react-table";
 import Link from "next/link";
+import { Button } from "@/app/_components/ui/button";
 import { classNames } from "@/app/_components/ui/class-names";
 import { StateBadge, shownState } from "@/app/_components/ui/state-badge";
 import { Cell, HeadCell, Table } from "@/app/_components/ui/table";
@@ -42,10 +43,12 @@ interface Props {
   /** The rows are of an earlier state while the new ones are fetched. */
   readonly stale: boolean;
   readonly onSort: (sort: SortKey, direction: ListState["direction"]) => void;
+  /** Takes a netlist out of the list, or puts it back; null for those who may not. */
+  readonly move: { readonly words: string; readonly onMove: (row: NetlistRow) => void } | null;
 }
 
 /** The table itself. The server sorts and pages; the table here only knows which order it shows. */
-export function NetlistTable({ workspace, rows, sort, direction, stale, onSort }: Props) {
+export function NetlistTable({ workspace, rows, sort, direction, stale, onSort, move }: Props) {
   const sorting: SortingState = [{ id: sort, desc: direction === "descending" }];
   const table = useTable({
     features,
@@ -86,19 +89,24 @@ export function NetlistTable({ workspace, rows, sort, direction, stale, onSort }
                 </HeadCell>
               );
             })}
+            {move !== null && (
+              <HeadCell className={WIDE}>
+                <span className="sr-only">What can be done</span>
+              </HeadCell>
+            )}
           </tr>
         ))}
       </thead>
       <tbody>
         {table.getRowModel().rows.map(({ id, original }) => (
-          <Row key={id} workspace={workspace} row={original} />
+          <Row key={id} workspace={workspace} row={original} move={move} />
         ))}
       </tbody>
     </Table>
   );
 }
 
-function Row({ workspace, row }: { readonly workspace: string; readonly row: NetlistRow }) {
+function Row({ workspace, row, move }: { readonly row: NetlistRow } & Pick<Props, "workspace" | "move">) {
   const { lastRun } = row;
   return (
     <tr>
@@ -136,6 +144,18 @@ function Row({ workspace, row }: { readonly workspace: string; readonly row: Net
           </Link>
         )}
       </Cell>
+      {move !== null && (
+        <Cell className={classNames(WIDE, "py-1! text-right")}>
+          <Button
+            size="small"
+            tone="quiet"
+            aria-label={`${move.words} ${row.title}`}
+            onClick={() => move.onMove(row)}
+          >
+            {move.words}
+          </Button>
+        </Cell>
+      )}
     </tr>
   );
 }

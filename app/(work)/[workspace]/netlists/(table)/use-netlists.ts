@@ -30,6 +30,7 @@ async function fetchNetlists(workspace: string, state: ListState): Promise<Found
   const search = new URLSearchParams({
     workspace,
     query: state.query,
+    which: state.which,
     sort: state.sort,
     direction: state.direction,
     page: String(state.page),

@@ -5,6 +5,7 @@ import { can } from "@/lib/permissions/can";
 import { getNetlist } from "@/lib/services/netlists/get-netlist";
 import { listRuns } from "@/lib/services/runs/list-runs";
 import { answered } from "../../../answered";
+import { ArchivedNotice } from "./archived-notice";
 import { RUNS_SHOWN } from "./run-line";
 import { Sheet } from "./sheet";
 
@@ -28,17 +29,21 @@ export default async function SheetPage({ params }: Props) {
   const { workspace, id } = await params;
   const { actor, netlist } = await load(workspace, id);
   const runs = await listRuns(actor, { netlistId: id, page: 1, size: RUNS_SHOWN });
-  const { number, title, text, revision, hash, owner } = netlist;
+  const { number, title, text, revision, hash, owner, isArchived } = netlist;
+  const mayWrite = can(actor, "netlist.write", { workspaceId: actor.workspaceId });
   return (
-    <Sheet
-      key={id}
-      workspace={workspace}
-      netlist={{ id, number, owner }}
-      latest={{ title, text: text.replaceAll("\r\n", "\n"), revision, hash }}
-      runs={runs}
-      writer={actor.userId}
-      role={actor.role}
-      mayQueue={can(actor, "run.start", { workspaceId: actor.workspaceId })}
-    />
+    <>
+      <ArchivedNotice key={`archived ${id}`} netlistId={id} isArchived={isArchived} mayWrite={mayWrite} />
+      <Sheet
+        key={id}
+        workspace={workspace}
+        netlist={{ id, number, owner }}
+        latest={{ title, text: text.replaceAll("\r\n", "\n"), revision, hash }}
+        runs={runs}
+        writer={actor.userId}
+        role={actor.role}
+        mayQueue={can(actor, "run.start", { workspaceId: actor.workspaceId })}
+      />
+    </>
   );
 }
