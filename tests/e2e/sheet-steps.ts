@@ -38,9 +38,13 @@ export async function makeNetlist(page: Page, text: string): Promise<string> {
   return (await answer.json()).id;
 }
 
-/** The editor of the sheet, when it has arrived. */
+/** The editor of the sheet, when it has arrived: with the first sign of a hand, once the page listens for one. */
 export async function editorOf(page: Page): Promise<Locator> {
   const box = page.getByRole("textbox", { name: "Netlist text" });
+  await page.waitForFunction(() => {
+    if (document.querySelector(".sheet-editor .monaco-editor, textarea") !== null) return true;
+    return window.dispatchEvent(new Event("pointermove")) && false;
+  });
   await box.waitFor();
   return box;
 }

@@ -1,9 +1,10 @@
 "use client";
 
 import "./editor.css";
-import { type Ref, useEffect, useImperativeHandle, useRef, useState } from "react";
+import { type Ref, type RefObject, useEffect, useImperativeHandle, useRef, useState } from "react";
 import { format } from "@/lib/language/format";
 import type { EditorEvents, EditorHandle } from "./editor-handle";
+import { atFirstSign } from "./first-sign";
 import { JumpList } from "./jump-list";
 import { mend } from "./markers";
 import type { Mounted, MountedEvents } from "./mount-editor";
@@ -25,6 +26,8 @@ interface Props extends EditorEvents {
   readonly valueAtCursor?: (name: string) => string | null;
   /** Once what can be written in stands there: the editor, or the box in its place. */
   readonly onArrive?: () => void;
+  /** Whether the editor comes with the first sign that somebody is at the page; else it comes at once. */
+  readonly isPatient?: boolean;
 }
 
 const LABEL = "Netlist text";
@@ -40,6 +43,7 @@ export function NetlistEditor({
   problems,
   valueAtCursor = noValue,
   onArrive,
+  isPatient = false,
   ...events
 }: Props) {
   const place = useRef<HTMLDivElement>(null);
@@ -48,29 +52,10 @@ export function NetlistEditor({
   const [state, setState] = useState<"coming" | "here" | "missing">("coming");
   const [told, setTold] = useState<Told | null>(null);
   const jumps = useJumps();
+  /** What was asked of the editor while it was on its way. */
+  const waiting = useRef<((editor: EditorHandle) => void)[]>([]);
 
-  const boxText = () => box.current?.value ?? initial;
-  const put = (text: string) => {
-    if (box.current === null) return;
-    box.current.value = text;
-    events.onEdit();
-  };
-  const plain: EditorHandle = {
-    text: boxText,
-    replace: put,
-    goTo: ({ from, to }) => {
-      box.current?.focus();
-      box.current?.setSelectionRange(from, to);
-    },
-    show: (span) => {
-      if (span !== null) box.current?.setSelectionRange(span.from, span.to);
-    },
-    mend: (fix, of) => {
-      if (boxText() === of) put(mend(of, fix));
-    },
-    format: () => put(format(boxText())),
-    openOutline: () => {},
-  };
+  const plain = plainHandle(box, initial, events, (act) => waiting.current.push(act));
   const now = () => mounted.current ?? plain;
   const openOutline = () => jumps.openOutline(now().text());
   const live = useRef({ events, valueAtCursor, openOutline, jumps });
@@ -94,21 +79,26 @@ export function NetlistEditor({
       onPlaces: (what) => live.current.jumps.openPlaces(now().text(), what),
       valueAtCursor: (name) => live.current.valueAtCursor(name),
     };
-    import("./mount-editor")
-      .then(({ mountEditor }) => mountEditor(place.current!, { text: initial, readOnly, label: LABEL }, on))
-      .then((editor) => {
-        if (gone) return editor.dispose();
-        mounted.current = editor;
-        setState("here");
-      })
-      .catch((error: unknown) => {
-        console.error("The editor could not be loaded; a plain box takes its place.", error);
-        if (gone) return;
-        setState("missing");
-        on.onTab("always moves on");
-      });
+    const fetchEditor = () =>
+      import("./mount-editor")
+        .then(({ mountEditor }) => mountEditor(place.current!, { text: initial, readOnly, label: LABEL }, on))
+        .then((editor) => {
+          if (gone) return editor.dispose();
+          mounted.current = editor;
+          setState("here");
+        })
+        .catch((error: unknown) => {
+          console.error("The editor could not be loaded; a plain box takes its place.", error);
+          if (gone) return;
+          setState("missing");
+          on.onTab("always moves on");
+        });
+    const begin = () => void fetchEditor();
+    const callOff = isPatient ? atFirstSign(begin) : undefined;
+    if (!isPatient) begin();
     return () => {
       gone = true;
+      callOff?.();
       mounted.current?.dispose();
       mounted.current = null;
     };
@@ -120,7 +110,9 @@ export function NetlistEditor({
 
   // biome-ignore lint/correctness/useExhaustiveDependencies: told once, whoever listens by then
   useEffect(() => {
-    if (state !== "coming") onArrive?.();
+    if (state === "coming") return;
+    for (const act of waiting.current.splice(0)) act({ ...now(), openOutline });
+    onArrive?.();
   }, [state]);
 
   useImperativeHandle(ref, () => ({
@@ -149,7 +141,13 @@ export function NetlistEditor({
       <TextBar told={told} readOnly={readOnly} state={state} onRun={run} />
       <div className="relative min-h-0 grow bg-surface">
         <div ref={place} className="sheet-editor absolute inset-0" hidden={state === "missing"} />
-        {state === "coming" && <PlainLines text={initial} label={`${LABEL}, the editor is loading`} />}
+        {state === "coming" && (
+          <PlainLines
+            text={initial}
+            label={`${LABEL}, the editor is loading`}
+            onPress={(offset) => plain.goTo({ from: offset, to: offset })}
+          />
+        )}
         {state === "missing" && (
           <PlainBox ref={box} label={LABEL} initial={initial} readOnly={readOnly} events={events} />
         )}
@@ -167,6 +165,40 @@ export function NetlistEditor({
       </div>
     </div>
   );
+}
+
+/** The plain box in the editor's place; while neither is there, what is asked waits for whichever comes. */
+function plainHandle(
+  box: RefObject<HTMLTextAreaElement | null>,
+  initial: string,
+  { onEdit }: Pick<EditorEvents, "onEdit">,
+  later: (act: (editor: EditorHandle) => void) => void,
+): EditorHandle {
+  const text = () => box.current?.value ?? initial;
+  const put = (next: string) => {
+    if (box.current === null) return later((editor) => editor.replace(next));
+    box.current.value = next;
+    onEdit();
+  };
+  return {
+    text,
+    replace: put,
+    goTo: (span) => {
+      if (box.current === null) return later((editor) => editor.goTo(span));
+      box.current.focus();
+      box.current.setSelectionRange(span.from, span.to);
+    },
+    show: (span) => {
+      if (box.current === null) return later((editor) => editor.show(span));
+      if (span !== null) box.current.setSelectionRange(span.from, span.to);
+    },
+    mend: (fix, of) => {
+      if (box.current === null) return later((editor) => editor.mend(fix, of));
+      if (text() === of) put(mend(of, fix));
+    },
+    format: () => put(format(text())),
+    openOutline: () => {},
+  };
 }
 
 function noValue(): null {

@@ -10,20 +10,30 @@ export interface Piece {
   readonly ink: string | undefined;
 }
 
+interface Props {
+  readonly text: string;
+  readonly label: string;
+  /** Hears of the offset at which the text was pressed, or its beginning when a key was. */
+  readonly onPress?: (offset: number) => void;
+}
+
 /** The netlist as numbered lines, rendered by the server too, so that it can be read before the editor has arrived. */
-export function PlainLines({ text, label }: { readonly text: string; readonly label: string }) {
+export function PlainLines({ text, label, onPress }: Props) {
   const metrics = { fontSize: FONT_SIZE, lineHeight: `${LINE_HEIGHT}px` };
   return (
     <section
       aria-label={label}
       // biome-ignore lint/a11y/noNoninteractiveTabindex: text that scrolls must be reachable from the keyboard
       tabIndex={0}
+      onClick={(event) => onPress?.(offsetUnder(event.clientX, event.clientY))}
+      onKeyDown={(event) => event.key === "Enter" && onPress?.(0)}
       className="absolute inset-0 overflow-auto bg-surface pt-2"
     >
       <ol className="font-(family-name:--font-figures)" style={metrics}>
         {linesOf(text).map((line) => (
           <li
             key={line.at}
+            data-at={line.at}
             className="sheet-line grid grid-cols-[48px_minmax(0,1fr)]"
             style={{ minHeight: LINE_HEIGHT }}
           >
@@ -45,6 +55,20 @@ export function PlainLines({ text, label }: { readonly text: string; readonly la
       </ol>
     </section>
   );
+}
+
+/** Offset in the text of the character under a point of the window: the end of its line where the point lies beside it. */
+function offsetUnder(x: number, y: number): number {
+  const line = document.elementFromPoint(x, y)?.closest<HTMLElement>("[data-at]");
+  const code = line?.querySelector("code");
+  if (line == null || code == null) return 0;
+  const at = Number(line.dataset.at);
+  const caret = document.caretRangeFromPoint?.(x, y);
+  if (caret == null || !code.contains(caret.startContainer)) return at + (code.textContent?.length ?? 0);
+  const before = document.createRange();
+  before.setStart(code, 0);
+  before.setEnd(caret.startContainer, caret.startOffset);
+  return at + before.toString().length;
 }
 
 /** The lines of a text with their coloured pieces; `at` is the offset at which a line or piece begins. */

@@ -81,6 +81,7 @@ export function Sheet({ workspace, netlist, latest, runs, writer, role, mayQueue
               ref={editor}
               initial={latest.text}
               readOnly={!mayQueue}
+              isPatient
               problems={sheet.newest}
               onEdit={edited}
               onQueue={() => void sheet.queue()}
