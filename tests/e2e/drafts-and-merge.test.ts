@@ -4,7 +4,16 @@ import { tmpdir } from "node:os";
 import { join } from "node:path";
 import { type Browser, chromium, type Page } from "playwright-core";
 import { afterAll, beforeAll, expect, test } from "vitest";
-import { baseUrl, expectAccessible, launchBrowser, openPage, picture, signIn, type Who } from "./harness";
+import {
+  baseUrl,
+  expectAccessible,
+  expectNoSidewaysScroll,
+  launchBrowser,
+  openPage,
+  picture,
+  signIn,
+  type Who,
+} from "./harness";
 import { converterText, makeNetlist, openSheet, PATIENT, post, save, typeAtEnd } from "./sheet-steps";
 
 let browser: Browser;
@@ -185,4 +194,32 @@ test("a browser that keeps nothing more says so while there is something to lose
   await save(page);
   await page.getByText(/^revision 2$/).waitFor();
   await expect.poll(() => page.getByText("This browser keeps no draft").count(), PATIENT).toBe(0);
+});
+
+test("the unsaved draft has an address: compared with its revision while it is typed, and gone when it is saved", async () => {
+  const page = await signedIn("erik");
+  const id = await makeNetlist(page, converterText("Draft beside its revision"));
+  await openSheet(page, id);
+  const compared = await page.context().newPage();
+  await compared.goto(`${new URL(page.url()).pathname}/compare/1..draft`);
+  await compared.getByText("This browser keeps no draft of this netlist").waitFor();
+  await expectAccessible(compared);
+  await page.bringToFront();
+  await typeAtEnd(page, "let late = 3 kΩ\n");
+  const [opened] = await Promise.all([
+    page.context().waitForEvent("page"),
+    page.getByRole("link", { name: /what the draft changes/ }).click(),
+  ]);
+  await opened.getByText("Your draft", { exact: true }).first().waitFor();
+  expect(new URL(opened.url()).pathname).toMatch(/\/compare\/1\.\.draft$/);
+  await opened.getByRole("definition").filter({ hasText: "late added" }).waitFor();
+  expect(await opened.getByText("let late = 3 kΩ").count()).toBe(1);
+  await expectAccessible(opened);
+  await opened.setViewportSize({ width: 360, height: 800 });
+  await expectNoSidewaysScroll(opened);
+  await picture(opened, "draft-compared-360");
+  await page.bringToFront();
+  await save(page);
+  await opened.reload();
+  await opened.getByText("This browser keeps no draft of this netlist").waitFor();
 });

@@ -1,5 +1,10 @@
 import { expect, test } from "vitest";
-import { type DraftStore, Drafts, type KeptDraft } from "@/app/(work)/[workspace]/netlists/[id]/drafts";
+import {
+  type DraftStore,
+  Drafts,
+  type KeptDraft,
+  newestDraft,
+} from "@/app/(work)/[workspace]/netlists/[id]/drafts";
 
 const NOON = new Date("2026-03-04T12:00:00Z");
 const NOBODY: ReadonlySet<string> = new Set();
@@ -143,4 +148,19 @@ test("a full store is told, and again when it takes something", async () => {
   full.clear();
   await full.settled();
   expect(told).toEqual([false, true]);
+});
+
+test("the newest draft of a writer is found whatever tab writes it, with how many others there are", async () => {
+  const shelf = store();
+  expect(await newestDraft(shelf, "n", "erik")).toBeNull();
+  await kept(shelf, "1", "older", 2, NOON);
+  await kept(shelf, "2", "newest", 3, new Date(NOON.getTime() + 1000));
+  await kept(shelf, "3", "older", 2, NOON);
+  const rosas = drafts(shelf, "4", { writer: "rosa" });
+  rosas.keep("rosa's", 3, new Date(NOON.getTime() + 2000));
+  await rosas.settled();
+  expect(await newestDraft(shelf, "n", "erik")).toMatchObject({
+    draft: { text: "newest", base: 3 },
+    others: 1,
+  });
 });

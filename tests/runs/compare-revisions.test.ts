@@ -41,6 +41,9 @@ describe("verdicts of two runs", () => {
 test.each([
   ["3..5", [3, 5]],
   ["12..1", [12, 1]],
+  ["3..draft", [3, "draft"]],
+  ["draft..3", null],
+  ["3..drafts", null],
   ["3..", null],
   ["0..2", null],
   ["3...5", null],

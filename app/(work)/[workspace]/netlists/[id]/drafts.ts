@@ -22,6 +22,25 @@ export interface DraftStore {
   remove(id: string): Promise<void>;
 }
 
+/** The draft that was typed last, and how many more of the same writer are kept. */
+export interface NewestDraft {
+  readonly draft: Draft;
+  readonly others: number;
+}
+
+/** The newest draft of `writer` on a netlist, being written or set aside; null where there is none. Fails where the store does. */
+export async function newestDraft(
+  store: Pick<DraftStore, "all">,
+  netlist: string,
+  writer: string,
+): Promise<NewestDraft | null> {
+  const own = (await store.all(netlist))
+    .filter((one) => one.writer === writer)
+    .sort((a, b) => b.at.localeCompare(a.at));
+  const [draft] = own;
+  return draft === undefined ? null : { draft, others: new Set(own.map(({ text }) => text)).size - 1 };
+}
+
 /** Texts set aside that are kept of a netlist; older ones go. */
 const MOST_ASIDE = 20;
 

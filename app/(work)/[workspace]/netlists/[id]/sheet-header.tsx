@@ -33,6 +33,19 @@ export function SheetHeader({ sheet, title, netlist, role, mayQueue }: Props) {
         {shortHash(saved.hash)}
       </code>
       , netlist {netlist.number}, {netlist.owner}
+      {changed && (
+        <>
+          {", "}
+          <a
+            href={`${path}/compare/${saved.revision}..draft`}
+            target="_blank"
+            rel="noopener"
+            className="link"
+          >
+            what the draft changes <span className="sr-only">(opens a tab of its own)</span>
+          </a>
+        </>
+      )}
     </>
   );
   const blocked = errors.length > 0;

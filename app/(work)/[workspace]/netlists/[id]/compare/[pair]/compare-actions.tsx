@@ -44,9 +44,10 @@ export function CompareActions({ workspace, netlist, pair: [before, after] }: Pr
         label="After"
         labelHidden
         value={after}
-        onChange={(event) => go(before, Number(event.target.value))}
+        onChange={(event) => router.push(`${base}/compare/${before}..${event.target.value}`)}
       >
         {options}
+        <option value="draft">Your draft</option>
       </SelectField>
       <ButtonLink href={`${base}/revisions`}>History</ButtonLink>
       <ButtonLink href={base}>Open sheet</ButtonLink>

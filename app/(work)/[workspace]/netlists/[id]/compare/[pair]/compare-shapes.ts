@@ -1,3 +1,4 @@
+import type { DiffForm } from "@/app/_components/diff/text-diff";
 import type { AxisDocument, ReadingDocument, RequirementDocument, Verdict } from "@/lib/analyses/result";
 
 /** A finished run of a revision, as far as it is compared without its curves. */
@@ -37,8 +38,17 @@ export interface Side {
   readonly run: ComparedRun | null;
 }
 
-/** The two revisions that `3..5` names; null for anything else. */
-export function readPair(text: string): readonly [number, number] | null {
-  const [, a, b] = /^([1-9]\d{0,8})\.\.([1-9]\d{0,8})$/.exec(text) ?? [];
-  return a === undefined || b === undefined ? null : [Number(a), Number(b)];
+/** What an address compares: two revisions, or one with the unsaved draft that this browser keeps. */
+export type Pair = readonly [before: number, after: number | "draft"];
+
+/** The pair that `3..5` or `3..draft` names; null for anything else. */
+export function readPair(text: string): Pair | null {
+  const [, a, b] = /^([1-9]\d{0,8})\.\.([1-9]\d{0,8}|draft)$/.exec(text) ?? [];
+  return a === undefined || b === undefined ? null : [Number(a), b === "draft" ? b : Number(b)];
+}
+
+/** How the texts stand, as the search part of an address asks for; null where it asks for nothing. */
+export function formIn(search: string): DiffForm | null {
+  const asked = new URLSearchParams(search).get("text");
+  return asked === "inline" || asked === "beside" ? asked : null;
 }

@@ -11,7 +11,7 @@ import {
 } from "../../../../runs/compare/compare-state";
 import { ChangeList } from "../../change-list";
 import { CompareActions } from "./compare-actions";
-import type { Side } from "./compare-shapes";
+import { formIn, type Side } from "./compare-shapes";
 import { CurveSection } from "./curve-section";
 import { ReadingTable } from "./reading-table";
 import { RunLack } from "./run-lack";
@@ -131,9 +131,4 @@ export function CompareView({ workspace, netlist, before, after, changes, search
       </div>
     </>
   );
-}
-
-function formIn(search: string): DiffForm | null {
-  const asked = new URLSearchParams(search).get("text");
-  return asked === "inline" || asked === "beside" ? asked : null;
 }

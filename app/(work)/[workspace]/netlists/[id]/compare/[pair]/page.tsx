@@ -12,6 +12,7 @@ import { listRuns } from "@/lib/services/runs/list-runs";
 import { answered } from "../../../../../answered";
 import { readPair, type Side } from "./compare-shapes";
 import { CompareView } from "./compare-view";
+import { DraftView } from "./draft-view";
 
 interface Props {
   readonly params: Promise<{ readonly workspace: string; readonly id: string; readonly pair: string }>;
@@ -24,8 +25,12 @@ const load = cache(async (workspace: string, id: string, pair: string) => {
   const path = `/${workspace}/netlists/${id}/compare/${pair}`;
   const actor = await answered(actorFor(workspace), path);
   const netlist = await answered(getNetlist(actor, id), path);
-  const sides = await answered(Promise.all(numbers.map((number) => sideOf(actor, id, number))), path);
-  return { actor, netlist, before: sides[0]!, after: sides[1]! };
+  const [first, second] = numbers;
+  const [before, after] = await answered(
+    Promise.all([sideOf(actor, id, first), second === "draft" ? null : sideOf(actor, id, second)]),
+    path,
+  );
+  return { actor, netlist, before, after };
 });
 
 /** A revision with its newest run, and its newest finished one, which has the curves. */
@@ -56,7 +61,11 @@ async function sideOf(actor: Actor, netlistId: string, number: number): Promise<
 export async function generateMetadata({ params }: Props): Promise<Metadata> {
   const { workspace, id, pair } = await params;
   const { netlist, before, after } = await load(workspace, id, pair);
-  return { title: `${netlist.title}, revisions ${before.number} and ${after.number}` };
+  const what =
+    after === null
+      ? `revision ${before.number} and your draft`
+      : `revisions ${before.number} and ${after.number}`;
+  return { title: `${netlist.title}, ${what}` };
 }
 
 export default async function ComparePage({ params, searchParams }: Props) {
@@ -66,11 +75,23 @@ export default async function ComparePage({ params, searchParams }: Props) {
   for (const [name, value] of Object.entries(await searchParams)) {
     for (const one of [value ?? []].flat()) search.append(name, one);
   }
+  const shown = { id, title: netlist.title, latest: netlist.revision };
+  if (after === null)
+    return (
+      <DraftView
+        key={before.number}
+        workspace={workspace}
+        netlist={shown}
+        before={before}
+        writer={actor.userId}
+        search={search.toString()}
+      />
+    );
   return (
     <CompareView
       key={`${before.number} ${after.number}`}
       workspace={workspace}
-      netlist={{ id, title: netlist.title, latest: netlist.revision }}
+      netlist={shown}
       before={before}
       after={after}
       changes={changesOfTexts(before.text, after.text)}
