@@ -6,6 +6,9 @@ export type ErrorCode =
   | "not found"
   | "not acceptable"
   | "conflict"
+  | "precondition failed"
+  | "precondition required"
+  | "key reused"
   | "too large"
   | "too many"
   | "unavailable";

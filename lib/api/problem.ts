@@ -8,7 +8,10 @@ const STATUS: Readonly<Record<ErrorCode, number>> = {
   "not found": 404,
   "not acceptable": 406,
   conflict: 409,
+  "precondition failed": 412,
   "too large": 413,
+  "key reused": 422,
+  "precondition required": 428,
   "too many": 429,
   unavailable: 503,
 };

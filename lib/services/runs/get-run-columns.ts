@@ -47,7 +47,7 @@ export async function getRunColumns(
   actor: Actor,
   id: string,
 ): Promise<Found & { readonly pieces: AsyncIterable<Uint8Array> }> {
-  const asked = await askedFor(actor, id);
+  const asked = await askedFor(actor, id, "columns");
   const pieces = new Pieces();
   const sent: string[] = [];
   pieces.add(encodeMark());

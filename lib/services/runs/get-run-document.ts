@@ -19,11 +19,14 @@ import { LARGE, roomFor } from "./large-documents";
 /** Names the form of the document; raised with every change of it, so that readers drop what they kept. */
 const FORM = "3";
 
-/** The version of a run's document, as an entity tag: it changes with every event of the run. */
-export async function getRunVersion(actor: Actor, id: string): Promise<string> {
+/** A form in which a run's document is sent; each has a tag of its own, since one is no answer to who has the other. */
+export type RunForm = "document" | "columns";
+
+/** The version of a run's document in that form, as an entity tag: it changes with every event of the run. */
+export async function getRunVersion(actor: Actor, id: string, form: RunForm = "document"): Promise<string> {
   const asked = await findRun(database(), actor, id);
   authorize(actor, "run.read", asked);
-  return versionOf(asked);
+  return versionOf(asked, form);
 }
 
 export interface Found {
@@ -36,6 +39,8 @@ export interface Found {
 
 export interface FoundDocument extends Found {
   readonly document: RunDocument;
+  /** The tag that the columns of the same version have. */
+  readonly columnsEtag: string;
 }
 
 /**
@@ -44,11 +49,17 @@ export interface FoundDocument extends Found {
  * "too many" while other large ones are being read.
  */
 export async function getRunDocument(actor: Actor, id: string): Promise<FoundDocument> {
-  const asked = await askedFor(actor, id);
+  const asked = await askedFor(actor, id, "document");
   const { etag, large, release } = asked;
   try {
     const matter = await matterOf(asked, ["outcome", "bound", "iterations", "rung"]);
-    return { document: toDocument(matter), etag, large, release };
+    return {
+      document: toDocument(matter),
+      etag,
+      columnsEtag: versionOf(asked.run, "columns"),
+      large,
+      release,
+    };
   } catch (error) {
     release();
     throw error;
@@ -62,7 +73,7 @@ export interface Asked extends Found {
   readonly text: string;
 }
 
-export async function askedFor(actor: Actor, id: string): Promise<Asked> {
+export async function askedFor(actor: Actor, id: string, form: RunForm): Promise<Asked> {
   const db = database();
   const asked = await findRun(db, actor, id);
   authorize(actor, "run.read", asked);
@@ -78,7 +89,7 @@ export async function askedFor(actor: Actor, id: string): Promise<Asked> {
     asked.points * (plan.traces.length + 4),
   );
   const release = roomFor(actor.userId, numbers);
-  return { run: asked, plan, text, etag: versionOf(asked), large: numbers >= LARGE, release };
+  return { run: asked, plan, text, etag: versionOf(asked, form), large: numbers >= LARGE, release };
 }
 
 /**
@@ -120,6 +131,6 @@ export async function matterOf(
   };
 }
 
-function versionOf({ id, lastEvent }: RunRecord): string {
-  return `W/"${FORM}-${id}-${lastEvent}"`;
+function versionOf({ id, lastEvent }: RunRecord, form: RunForm): string {
+  return `W/"${FORM}-${id}-${lastEvent}${form === "document" ? "" : `-${form}`}"`;
 }

@@ -1,5 +1,6 @@
 import { readJson } from "@/lib/api/body";
-import { json, route } from "@/lib/api/route";
+import { once } from "@/lib/api/once";
+import { route } from "@/lib/api/route";
 import { workspaceIn } from "@/lib/api/workspace-slug";
 import { actorFor } from "@/lib/auth/actor";
 import { createNetlist } from "@/lib/services/netlists/create-netlist";
@@ -14,10 +15,12 @@ export const GET = route(async (request) => {
   return listNetlists(actor, readInput(listInput, asked));
 });
 
-/** POST `{ workspace, title?, text }` → 201 `{ id }`. */
+/** POST `{ workspace, title?, text }` → 201 `{ id }`. With an Idempotency-Key, it is made once. */
 export const POST = route(async (request) => {
   const { workspace, ...wish } = await readJson(request);
   const actor = await actorFor(workspaceIn(workspace), request);
-  const made = await createNetlist(actor, readInput(createInput, wish));
-  return json(made, { status: 201, headers: { location: `/api/v1/netlists/${made.id}` } });
+  const work = async () => ({ status: 201, body: await createNetlist(actor, readInput(createInput, wish)) });
+  return once(request, actor, { workspace, ...wish }, work, (made) => ({
+    location: `/api/v1/netlists/${made.id}`,
+  }));
 });

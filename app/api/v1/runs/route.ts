@@ -1,5 +1,6 @@
 import { readJson } from "@/lib/api/body";
-import { json, route } from "@/lib/api/route";
+import { once } from "@/lib/api/once";
+import { route } from "@/lib/api/route";
 import { workspaceIn } from "@/lib/api/workspace-slug";
 import { actorFor, actorForNetlist } from "@/lib/auth/actor";
 import { readInput } from "@/lib/services/read-input";
@@ -14,9 +15,13 @@ export const GET = route(async (request) => {
   return listRuns(actor, readInput(listInput, asked));
 });
 
-/** POST `{ netlistId, base, text? }` → 201 `{ id, number }`; 400 with `diagnostics` when the text has errors. */
+/**
+ * POST `{ netlistId, base, text? }` → 201 `{ id, number }`; 400 with `diagnostics` when the text has errors. With an Idempotency-Key, it
+ * is queued once.
+ */
 export const POST = route(async (request) => {
   const wish = readInput(startInput, await readJson(request));
-  const made = await startRun(await actorForNetlist(wish.netlistId, request), wish);
-  return json(made, { status: 201, headers: { location: `/api/v1/runs/${made.id}` } });
+  const actor = await actorForNetlist(wish.netlistId, request);
+  const work = async () => ({ status: 201, body: await startRun(actor, wish) });
+  return once(request, actor, wish, work, (made) => ({ location: `/api/v1/runs/${made.id}` }));
 });

@@ -70,7 +70,7 @@ export default async function RunPage({ params, searchParams }: Props) {
         key={run.id}
         workspace={workspace}
         first={isSmall(run) ? run : { ...run, plan: outlineOf(run.plan) }}
-        found={found && { document: found.document, etag: found.etag }}
+        found={found && { document: found.document, etag: found.columnsEtag }}
         context={context}
         point={point}
         span={span}

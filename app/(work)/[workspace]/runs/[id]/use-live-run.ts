@@ -10,7 +10,7 @@ import { isLive, type Progress, type RunState } from "./run-shapes";
 /** Ms between two looks at the summary while the stream of events does not answer. */
 const POLL = 1000;
 
-/** The document that came with the page, and its version. */
+/** The document that came with the page, and the tag of columns of its version. */
 export interface Found {
   readonly document: RunDocument;
   readonly etag: string;

@@ -6,7 +6,7 @@ import { getRunVersion } from "@/lib/services/runs/get-run-document";
 
 /** The run document in its binary form (lib/analyses/columns-document.ts), or 304 to a reader that has it already. */
 export async function columnsAnswer(request: Request, actor: Actor, id: string): Promise<Response> {
-  const version = await getRunVersion(actor, id);
+  const version = await getRunVersion(actor, id, "columns");
   if (alreadyHas(request, version)) return notModified(version);
   const { pieces, etag, release } = await getRunColumns(actor, id);
   const headers = {

@@ -1,6 +1,9 @@
 import { readJson } from "@/lib/api/body";
-import { json, route } from "@/lib/api/route";
+import { once } from "@/lib/api/once";
+import { baseOf, revisionTag } from "@/lib/api/precondition";
+import { route } from "@/lib/api/route";
 import { actorForNetlist } from "@/lib/auth/actor";
+import { getNetlist } from "@/lib/services/netlists/get-netlist";
 import { listRevisions } from "@/lib/services/netlists/list-revisions";
 import { saveRevision } from "@/lib/services/netlists/save-revision";
 import { revisionsInput, saveInput } from "@/lib/services/netlists/schemas";
@@ -13,10 +16,19 @@ export const GET = route<{ id: string }>(async (request, { id }) => {
   return listRevisions(actor, readInput(revisionsInput, { ...asked, netlistId: id }));
 });
 
-/** POST `{ base, text, message? }` → 201 `{ revision, hash, changed: true }`, or 200 when the text was the newest one already. */
+/**
+ * POST `{ base?, text, message? }` → 201 `{ revision, hash, changed: true }`, or 200 when the text was the newest one already. The
+ * revision it was written upon stands in `base` (409 when it is no longer the newest) or in If-Match (412); without either 428. With
+ * an Idempotency-Key, the same request again gets the same answer.
+ */
 export const POST = route<{ id: string }>(async (request, { id }) => {
   const actor = await actorForNetlist(id, request);
-  const wish = readInput(saveInput, { ...(await readJson(request)), netlistId: id });
-  const saved = await saveRevision(actor, wish);
-  return json(saved, { status: saved.changed ? 201 : 200 });
+  const wish = await readJson(request);
+  const work = async () => {
+    const { revision } = await getNetlist(actor, id);
+    const base = baseOf(request, { id, latest: revision }, wish.base);
+    const saved = await saveRevision(actor, readInput(saveInput, { ...wish, base, netlistId: id }));
+    return { status: saved.changed ? 201 : 200, body: saved };
+  };
+  return once(request, actor, wish, work, (saved) => ({ etag: revisionTag(id, saved.revision) }));
 });
