@@ -1,5 +1,6 @@
 import { NetlistText } from "@/app/_components/ui/netlist-text";
 import { StateBadge } from "@/app/_components/ui/state-badge";
+import { format } from "@/lib/language/format";
 import { solved } from "./solved";
 
 /** A whole netlist of a page, and beneath it what it reads and whether it holds, solved as the page is made. */
@@ -7,8 +8,8 @@ export function Sample({ text }: { readonly text: string }) {
   const answer = solved(text);
   const hasAnswer = answer !== null && answer.readings.length + answer.requirements.length > 0;
   return (
-    <div className="mt-3 max-w-3xl">
-      <NetlistText text={text.trim()} />
+    <div className="mt-3">
+      <NetlistText text={format(text).trimEnd()} />
       {hasAnswer && (
         <dl className="flex flex-wrap gap-x-6 gap-y-1 border-y py-1.5 text-sm">
           {answer.readings.map(({ name, value }) => (
