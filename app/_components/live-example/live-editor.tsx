@@ -35,6 +35,7 @@ export function LiveEditor({ live, onRun = nothing }: Props) {
           onQueue={onRun}
           onSave={nothing}
           onTab={setTab}
+          onCursor={(offset, names) => live.rest({ offset, names })}
           valueAtCursor={previewing.valueAt}
         />
       </div>

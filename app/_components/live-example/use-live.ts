@@ -1,6 +1,7 @@
 "use client";
 
 import { type RefObject, useCallback, useEffect, useRef, useState } from "react";
+import type { CursorAt } from "@/app/_components/drawing/text-connections";
 import type { EditorHandle } from "@/app/_components/editor/editor-handle";
 import type { Previewing } from "@/app/_components/preview/previewing";
 import { usePreviewing } from "@/app/_components/preview/use-preview";
@@ -22,6 +23,9 @@ export interface Live {
   readonly aside: string | null;
   readonly putBack: () => void;
   readonly takeAgain: () => void;
+  /** Where the cursor of the editor rests; null before there is one. */
+  readonly cursor: CursorAt | null;
+  readonly rest: (cursor: CursorAt) => void;
   /** For the editor: after each change, and once it is there. */
   readonly edited: () => void;
   readonly arrived: () => void;
@@ -34,6 +38,7 @@ export function useLive(original: string, isSeen: boolean, keeping?: Keeping): L
   const waiting = useRef<((handle: EditorHandle) => void)[]>([]);
   const [text, setText] = useState(original);
   const [isEditing, setEditing] = useState(false);
+  const [cursor, rest] = useState<CursorAt | null>(null);
   const [aside, setAside] = useState<string | null>(null);
   const previewing = usePreviewing(text, isSeen);
 
@@ -98,6 +103,6 @@ export function useLive(original: string, isSeen: boolean, keeping?: Keeping): L
 
   return {
     ...{ original, text, isEditing, editor, previewing, begin, change, aside, putBack, takeAgain },
-    ...{ edited, arrived },
+    ...{ cursor, rest, edited, arrived },
   };
 }

@@ -3,6 +3,7 @@ import { MarginBar } from "@/app/_components/ui/margin-bar";
 import { limitsInWords, marginSentence, worstInWords } from "@/app/_components/ui/margin-words";
 import { type MarkShape, StateMark } from "@/app/_components/ui/state-mark";
 import type { RequirementDocument, Verdict } from "@/lib/analyses/result";
+import { yieldInWords } from "./row-words";
 
 const MARKS: Record<Verdict, { readonly shape: MarkShape; readonly ink: string }> = {
   holds: { shape: "check", ink: "text-holds" },
@@ -10,20 +11,25 @@ const MARKS: Record<Verdict, { readonly shape: MarkShape; readonly ink: string }
   "no data": { shape: "diamond", ink: "text-nodata" },
 };
 
+const NONE: readonly string[] = [];
+
 /** Requirements as the preview sees them: nominal, at one setting. Those of other settings are named only. */
 export const RequirementBars = memo(function RequirementBars({
   requirements,
-  elsewhere,
+  elsewhere = NONE,
+  remark = "judged on the preview",
 }: {
   readonly requirements: readonly RequirementDocument[];
-  readonly elsewhere: readonly string[];
+  readonly elsewhere?: readonly string[];
+  /** What they were judged on. */
+  readonly remark?: string;
 }) {
   // A page may show several previews, so no heading has a name of its own.
   const heading = useId();
   return (
     <section aria-labelledby={heading}>
       <h3 id={heading} className="caption">
-        Requirements <span className="ml-2 font-normal">judged on the preview</span>
+        Requirements <span className="ml-2 font-normal">{remark}</span>
       </h3>
       {requirements.length > 0 && (
         <ul className="mt-2 border-t">
@@ -53,6 +59,9 @@ function RequirementRow({ requirement }: { readonly requirement: RequirementDocu
         <span className="min-w-0 break-words">
           {label}
           <span className={verdict === "holds" ? "sr-only" : `ml-1.5 text-xs ${ink}`}> {verdict}</span>
+          {requirement.yield !== undefined && (
+            <span className="block text-quiet text-xs">{yieldInWords(requirement.yield)}</span>
+          )}
         </span>
         <span className="sr-only">{marginSentence(requirement)}</span>
       </span>

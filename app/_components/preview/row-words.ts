@@ -1,5 +1,6 @@
 import { formatKnob, isAmbient } from "@/app/_components/curves/figures-in-words";
 import { counted, formatCount } from "@/app/_components/ui/count";
+import type { Yield } from "@/lib/analyses/yield";
 import { OUTCOMES } from "@/lib/solver/outcome";
 import { formatQuantity } from "@/lib/units/quantity";
 import type { Row, TooLarge } from "./messages";
@@ -38,6 +39,11 @@ export function proofInWords(row: Row): string {
   if (left === 0 && failed === 0) return ["all points proved", ...width].join(", ");
   if (left === 0) return [...failures, ...(proved === 0 ? [] : ["all others proved", ...width])].join(", ");
   return [...failures, `${formatCount(left)} not proved`, ...width].join(", ");
+}
+
+/** "187 of 200 draws hold". */
+export function yieldInWords({ holds, of }: Yield): string {
+  return `${formatCount(holds)} of ${counted(of, "draw")} ${holds === 1 ? "holds" : "hold"}`;
 }
 
 /** The setting at which a row stands, the temperature last: "V_y 1 V, 25 °C". */

@@ -2,21 +2,19 @@
 
 import dynamic from "next/dynamic";
 import { type ReactNode, type RefObject, useState } from "react";
+import type { CursorAt } from "@/app/_components/drawing/text-connections";
 import type { EditorHandle } from "@/app/_components/editor/editor-handle";
 import { useDeeds } from "@/app/_components/palette/deed-registry";
 import { Tabs } from "@/app/_components/ui/tabs";
 
 // Fetched when it is first looked at.
-const SheetConnections = dynamic(() => import("./sheet-connections").then((all) => all.SheetConnections), {
-  ssr: false,
-  loading: () => <p className="border-y py-3 text-quiet text-sm">The drawing is coming…</p>,
-});
-
-/** Where the cursor rests in the text, and the names that what stands there has in the circuit. */
-export interface CursorAt {
-  readonly offset: number;
-  readonly names: readonly string[];
-}
+const TextConnections = dynamic(
+  () => import("@/app/_components/drawing/text-connections").then((all) => all.TextConnections),
+  {
+    ssr: false,
+    loading: () => <p className="border-y py-3 text-quiet text-sm">The drawing is coming…</p>,
+  },
+);
 
 interface Props {
   /** What stands under the first tab. */
@@ -53,7 +51,7 @@ export function SheetSide({ preview, text, cursor, editor }: Props) {
         {
           value: "connections",
           label: "Connections",
-          content: <SheetConnections text={text} cursor={cursor} editor={editor} />,
+          content: <TextConnections text={text} cursor={cursor} editor={editor} />,
         },
       ]}
     />

@@ -1,6 +1,7 @@
 "use client";
 
 import { useCallback, useEffect, useState } from "react";
+import type { CursorAt } from "@/app/_components/drawing/text-connections";
 import type { TabDoes } from "@/app/_components/editor/editor-handle";
 import { NetlistEditor } from "@/app/_components/editor/netlist-editor";
 import { ProblemList } from "@/app/_components/editor/problem-list";
@@ -15,7 +16,7 @@ import type { RunLines } from "./run-line";
 import type { Saved } from "./saved";
 import { SheetHeader } from "./sheet-header";
 import { SheetRemarks } from "./sheet-remarks";
-import { type CursorAt, SheetSide } from "./sheet-side";
+import { SheetSide } from "./sheet-side";
 import { StatusLine } from "./status-line";
 import { useAskedLine } from "./use-asked-line";
 import { useSheet } from "./use-sheet";

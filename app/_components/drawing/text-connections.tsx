@@ -1,11 +1,16 @@
 "use client";
 
 import { type RefObject, useEffect, useState } from "react";
-import { namesAt } from "@/app/_components/drawing/chosen";
-import { ConnectionDrawing } from "@/app/_components/drawing/connection-drawing";
-import { useConnections } from "@/app/_components/drawing/use-connections";
 import type { EditorHandle } from "@/app/_components/editor/editor-handle";
-import type { CursorAt } from "./sheet-side";
+import { namesAt } from "./chosen";
+import { ConnectionDrawing } from "./connection-drawing";
+import { useConnections } from "./use-connections";
+
+/** Where the cursor rests in the text, and the names that what stands there has in the circuit. */
+export interface CursorAt {
+  readonly offset: number;
+  readonly names: readonly string[];
+}
 
 interface Props {
   readonly text: string;
@@ -14,7 +19,7 @@ interface Props {
 }
 
 /** The drawing of the text's connections, linked both ways: what is chosen in it is shown in the text, and the cursor is marked in it. */
-export function SheetConnections({ text, cursor, editor }: Props) {
+export function TextConnections({ text, cursor, editor }: Props) {
   const connections = useConnections(text);
   const [chosen, setChosen] = useState<readonly string[]>([]);
   useEffect(() => {
