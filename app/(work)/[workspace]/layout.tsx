@@ -14,6 +14,7 @@ import { listWorkspaces } from "@/lib/services/workspaces/list-workspaces";
 import { answered } from "../answered";
 import { AccountMenu } from "./account-menu";
 import { Navigation } from "./navigation";
+import { NewsWatch } from "./news-watch";
 
 /** What "Find or do…" offers to read. */
 const READING = [
@@ -37,6 +38,7 @@ export default async function WorkspaceLayout({ children, params }: Props) {
     <Providers>
       <PaletteProvider workspace={workspace}>
         <PlaceDeeds workspace={workspace} reading={READING} />
+        <NewsWatch workspace={workspace} />
         <div className="flex min-h-dvh flex-col">
           <a
             href="#content"

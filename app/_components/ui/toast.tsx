@@ -1,5 +1,6 @@
 "use client";
 
+import Link from "next/link";
 import { Toast as Radix } from "radix-ui";
 import { createContext, type ReactNode, useCallback, useContext, useState } from "react";
 import { classNames } from "./class-names";
@@ -9,11 +10,13 @@ export interface ToastMessage {
   readonly title: string;
   readonly detail?: string;
   readonly tone?: "holds" | "broken";
+  /** Where it happened. */
+  readonly open?: { readonly href: string; readonly words: string };
 }
 
 const ToastContext = createContext<((message: ToastMessage) => void) | null>(null);
 
-/** `notify(message)`: says in the corner that something was done, or could not be. Never the only place for an error. */
+/** `notify(message)`: says in the corner what happened elsewhere. What readers do themselves is answered where they did it. */
 export function useToast(): (message: ToastMessage) => void {
   const notify = useContext(ToastContext);
   if (notify === null) throw new Error("useToast needs a ToastProvider above it.");
@@ -31,7 +34,7 @@ export function ToastProvider({ children }: { readonly children: ReactNode }) {
     <ToastContext.Provider value={notify}>
       <Radix.Provider duration={8000} swipeDirection="right">
         {children}
-        {messages.map(({ id, title, detail, tone }) => (
+        {messages.map(({ id, title, detail, tone, open }) => (
           <Radix.Root
             key={id}
             onOpenChange={(open) => !open && drop(id)}
@@ -48,6 +51,13 @@ export function ToastProvider({ children }: { readonly children: ReactNode }) {
             <div className="min-w-0 grow">
               <Radix.Title className="font-semibold">{title}</Radix.Title>
               {detail !== undefined && <Radix.Description className="text-quiet">{detail}</Radix.Description>}
+              {open !== undefined && (
+                <Radix.Action asChild altText={open.words}>
+                  <Link href={open.href} prefetch={false} className="link inline-flex min-h-6 items-center">
+                    {open.words}
+                  </Link>
+                </Radix.Action>
+              )}
             </div>
             <Radix.Close className="-my-0.5 min-h-6 min-w-6 rounded-[2px] px-1 text-quiet hover:text-ink">
               Close
