@@ -43,7 +43,7 @@ export function ConflictDialog({ sheet }: { readonly sheet: SheetState }) {
       open
       onOpenChange={(open) => !open && close()}
       title={`Revision ${theirs.revision} was saved meanwhile`}
-      description={`Your text was written upon revision ${saved.revision}, so it was not saved over the newer one. Both texts are kept, whichever way you take.`}
+      description={`Your text was written upon revision ${saved.revision} and is not saved over the newer one. Both texts are kept, whichever way you take.`}
       actions={
         <>
           <Button onClick={close}>Go on with mine</Button>

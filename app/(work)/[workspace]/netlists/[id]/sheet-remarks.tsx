@@ -1,9 +1,11 @@
 "use client";
 
 import Link from "next/link";
+import { useEffect, useRef } from "react";
 import { Button } from "@/app/_components/ui/button";
 import { Notice } from "@/app/_components/ui/notice";
 import { When } from "@/app/_components/ui/when";
+import { NewerNotice } from "./newer-notice";
 import type { SheetState } from "./use-sheet";
 
 /** What stands between the header and the text when there is something to say; nothing otherwise. */
@@ -17,8 +19,14 @@ export function SheetRemarks({
   readonly netlistId: string;
 }) {
   const { aside, remark, unsafe, broken, changed, saved } = sheet;
+  const undo = useRef<HTMLButtonElement>(null);
+  useEffect(() => {
+    // The button that was pressed is gone, and the focus with it: the way back stands in its place.
+    if (remark?.undo !== undefined && document.activeElement === document.body) undo.current?.focus();
+  }, [remark]);
   return (
     <div className="grid gap-2 border-b px-4 py-3 empty:hidden md:px-6" data-print="never">
+      <NewerNotice sheet={sheet} workspace={workspace} netlistId={netlistId} />
       {aside !== null && (
         <Notice tone="caution" title="A text of yours is not in any revision" announce>
           <p>
@@ -38,6 +46,11 @@ export function SheetRemarks({
         <Notice tone={remark.tone} title={remark.title} announce>
           <p>{remark.detail}</p>
           <div className="mt-2 flex flex-wrap gap-2">
+            {remark.undo !== undefined && (
+              <Button ref={undo} size="small" onClick={remark.undo}>
+                Undo
+              </Button>
+            )}
             {remark.made !== undefined && (
               <Link href={`/${workspace}/netlists/${remark.made}`} className="link min-h-7">
                 Open your copy

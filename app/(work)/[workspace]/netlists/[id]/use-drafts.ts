@@ -55,8 +55,8 @@ export function useDrafts({ netlistId, writer, text, saved, mayWrite }: Asked) {
     const { text: kept, revision } = latest.current;
     if (now !== kept) drafts.current?.keep(now, revision, new Date());
   }, []);
-  const setAside = useCallback((old: string, base: number) => {
-    show(drafts.current?.setAside(old, base, new Date()) ?? null);
+  const setAside = useCallback((old: string, base: number, at = new Date()) => {
+    show(drafts.current?.setAside(old, base, at) ?? null);
   }, []);
   const dropAside = useCallback(() => show(drafts.current?.dropAside() ?? null), []);
   const forget = useCallback(() => drafts.current?.clear(), []);

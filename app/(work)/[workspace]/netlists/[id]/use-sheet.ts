@@ -19,6 +19,8 @@ export interface Remark {
   readonly made?: string;
   /** Nobody is signed in any more; the text waits as a draft. */
   readonly signedOut?: boolean;
+  /** Takes back what the remark tells of. */
+  readonly undo?: () => void;
 }
 
 /** How often a text is put into an editor that may still be loading, and ms between. */
@@ -161,6 +163,32 @@ export function useSheet({ workspace, netlistId, writer, latest, mayQueue }: Ask
     return true;
   };
 
+  /** The newest revision instead of the one the text stands upon, where nothing was written; else the choice of a stale save. */
+  const takeNewest = async () => {
+    const newest = await fetchLatest();
+    if (newest === null)
+      return refuse("The newer revision did not come", "The service did not answer. Try again.");
+    if (settle() !== saved.text) return setTheirs(newest);
+    setSaved(newest);
+    put(newest.text);
+    router.refresh();
+  };
+
+  const dropAside = () => {
+    const gone = drafts.aside;
+    if (gone === null) return;
+    drafts.dropAside();
+    setRemark({
+      tone: "plain",
+      title: "The text was dropped",
+      detail: `It was written upon revision ${gone.base}.`,
+      undo: () => {
+        drafts.setAside(gone.text, gone.base, new Date(gone.at));
+        setRemark(null);
+      },
+    });
+  };
+
   const keepAsCopy = async () => {
     if (theirs === null) return;
     const answer = await ask<{ id: string }>("/api/v1/netlists", { workspace, text: settle() });
@@ -216,7 +244,8 @@ export function useSheet({ workspace, netlistId, writer, latest, mayQueue }: Ask
     aside: drafts.aside,
     unsafe: drafts.unsafe,
     takeBack,
-    dropAside: drafts.dropAside,
+    dropAside,
+    takeNewest,
     goTo,
     saving,
     openSave,
