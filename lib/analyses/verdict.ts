@@ -1,6 +1,7 @@
 import { allBudgets, type Budget } from "./budget";
 import type { Job } from "./compile";
 import { judge } from "./judge";
+import { type PowerPeak, powerPeak } from "./power-peak";
 import type { ReadingDocument, RequirementDocument, Verdict } from "./result";
 import type { Columns } from "./rows";
 
@@ -14,6 +15,8 @@ export interface KeptJudgement {
   readonly budgets: readonly Budget[] | null;
   /** Error budgets of what the requirements are about, where each is worst in the nominal design; likewise. */
   readonly causes: readonly Budget[] | null;
+  /** The part that takes in most power; absent in a judgement made before this was kept. */
+  readonly power?: PowerPeak | null;
 }
 
 /** Judges a finished run and works out the error budgets of its readings and requirements. Without requirements the verdict is null. */
@@ -22,5 +25,5 @@ export function finalJudgement(job: Job, columns: Columns): KeptJudgement {
   const numbers = readings.filter(({ per }) => per === "sweep");
   const all = allBudgets(job);
   const [budgets, causes] = [all?.readings ?? null, all?.requirements ?? null];
-  return { verdict, requirements, readings: numbers, budgets, causes };
+  return { verdict, requirements, readings: numbers, budgets, causes, power: powerPeak(job) };
 }

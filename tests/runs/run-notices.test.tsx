@@ -1,5 +1,6 @@
 import { renderToStaticMarkup } from "react-dom/server";
 import { describe, expect, it, test } from "vitest";
+import { Cautions } from "@/app/(work)/[workspace]/runs/[id]/cautions";
 import { FailedPoints } from "@/app/(work)/[workspace]/runs/[id]/failed-points";
 import { RequirementList } from "@/app/(work)/[workspace]/runs/[id]/requirement-list";
 import type { RunState } from "@/app/(work)/[workspace]/runs/[id]/run-shapes";
@@ -99,7 +100,7 @@ describe("requirements of a run", () => {
 
   it("say how many draws hold beside how many must", () => {
     expect(list([one])).toMatch(
-      /The requirement holds .*margin 1\.00 mV; 19 of 20 draws hold, 90 % needed: 75\.1 % to 99\.9 % of parts \(95 % confidence\) draw 14 line 48/,
+      /The requirement holds .*margin 1\.00 mV; 19 of 20 draws hold, 90 % needed: 75\.1 % to 99\.9 % of boards \(95 % confidence\) draw 14 line 48/,
     );
   });
 
@@ -113,5 +114,30 @@ describe("requirements of a run", () => {
   it("carry what must be known besides", () => {
     const remark = "Broken at another stable operating point.";
     expect(list([{ ...one, remark }])).toContain(remark);
+  });
+});
+
+describe("cautions", () => {
+  const low = { net: "a.v", volts: -5 };
+  const hot = { element: "R1", watts: 2.88, at: [{ knob: "V_in", unit: "V", value: -12 }] };
+  const words = (volts: number, power: typeof hot | null, draws = 0) =>
+    text(<Cautions span={{ low, high: { net: "b.v", volts } }} power={power} draws={draws} />);
+
+  it("say that dangerous voltages and heat are for local codes and a licensed engineer to judge", () => {
+    const both = words(70, hot);
+    expect(both).toMatch(
+      /Hazardous voltage .*75\.00 V apart.*more than 60 V DC\. Follow local codes and have a licensed/,
+    );
+    expect(both).toMatch(
+      /Heat R1 takes in 2\.88 W at V_in −12 V .*250 mW.*stated power\. Follow local codes/,
+    );
+    expect(both.match(/no proof of safety/g)).toHaveLength(3);
+  });
+
+  it("warn of nothing where nothing is high, and say what was looked at", () => {
+    const calm = words(10, { ...hot, watts: 0.2 });
+    expect(calm).not.toMatch(/Hazardous|Heat/);
+    expect(calm).toMatch(/in the netlist, at nominal values\./);
+    expect(words(10, null, 40)).toMatch(/at nominal values and in 40 random draws of the tolerances/);
   });
 });

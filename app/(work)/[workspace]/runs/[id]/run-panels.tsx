@@ -38,12 +38,15 @@ export interface Found {
   readonly unstable?: readonly { readonly from: number; readonly to: number }[];
 }
 
-/** All that stands beside the curves: requirements, readings, the chosen point, operating points, failures, the run itself. */
-export function RunPanels({ workspace, run, found, links, span, chosen, point, onCursor, onShow }: Props) {
-  const { plan } = run;
-  const ofOneDraw = plan.points / (plan.draws + 1);
+/** What the netlist requires, and whether it holds: the first thing of a run, on a telephone too. */
+export function RunVerdicts({
+  run,
+  found,
+  links,
+  onShow,
+}: Pick<Props, "run" | "found" | "links" | "onShow">) {
   return (
-    <div className="grid min-w-0 grid-cols-[minmax(0,1fr)] content-start gap-8 border-t px-4 py-6 md:px-6 lg:border-t-0 lg:border-l">
+    <div className="min-w-0 px-4 pt-6 md:px-6 lg:col-start-2 lg:border-l">
       <RequirementList
         requirements={found?.requirements ?? []}
         links={links}
@@ -52,6 +55,16 @@ export function RunPanels({ workspace, run, found, links, span, chosen, point, o
           onShow({ point: pointOf(run, worst), worst: worst.draw > 0 ? label : null, tab: "curves" })
         }
       />
+    </div>
+  );
+}
+
+/** All that stands beside the curves below the verdicts: readings, the chosen point, operating points, failures, the run itself. */
+export function RunPanels({ workspace, run, found, links, span, chosen, point, onCursor, onShow }: Props) {
+  const { plan } = run;
+  const ofOneDraw = plan.points / (plan.draws + 1);
+  return (
+    <div className="grid min-w-0 grid-cols-[minmax(0,1fr)] content-start gap-8 border-t px-4 py-6 md:px-6 lg:col-start-2 lg:border-t-0 lg:border-l lg:pt-8">
       <ReadingList readings={found?.readings ?? []} axes={plan.axes} links={links} />
       {plan.axes.length > 0 && <CursorAccount run={run.id} onCursor={onCursor} />}
       <PointPanel
@@ -72,7 +85,7 @@ export function RunPanels({ workspace, run, found, links, span, chosen, point, o
         onAll={() => onShow({ tab: "numbers", failed: true, page: 1 })}
       />
       <RunFacts workspace={workspace} run={run} />
-      <Cautions span={span} />
+      <Cautions span={span} power={run.judgement?.power ?? null} draws={plan.draws} />
     </div>
   );
 }

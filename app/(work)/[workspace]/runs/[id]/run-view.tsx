@@ -13,7 +13,7 @@ import type { VoltageSpan } from "./cautions";
 import { OperatingPoint } from "./operating-point";
 import { type PageState, readPageState, writePageState } from "./page-state";
 import { RunHeader } from "./run-header";
-import { onPlot, type Found as RunFound, RunPanels } from "./run-panels";
+import { onPlot, type Found as RunFound, RunPanels, RunVerdicts } from "./run-panels";
 import { isLive, type PointAccount, type RunContext, type RunState } from "./run-shapes";
 import { RunStatusLine } from "./run-status-line";
 import { SpreadView } from "./spread/spread-view";
@@ -92,6 +92,7 @@ export function RunView(props: Props) {
     [document, run.plan.axes, judgement],
   );
   const links = useMemo(() => textLinks(workspace, run, context), [workspace, run, context]);
+  const panels = document ?? judgedAlready(first);
   const chosen = state.point !== null && state.point < run.points ? state.point : set === null ? 0 : null;
 
   return (
@@ -114,8 +115,9 @@ export function RunView(props: Props) {
           </Notice>
         </div>
       )}
-      <div className="grid grow grid-cols-[minmax(0,1fr)] lg:grid-cols-[minmax(0,8fr)_minmax(300px,5fr)] 2xl:grid-cols-[minmax(0,11fr)_minmax(300px,6fr)]">
-        <div className="min-w-0 px-4 pt-2 pb-8 md:px-6">
+      <div className="grid grow grid-cols-[minmax(0,1fr)] lg:grid-rows-[auto_1fr] lg:grid-cols-[minmax(0,8fr)_minmax(300px,5fr)] 2xl:grid-cols-[minmax(0,11fr)_minmax(300px,6fr)]">
+        <RunVerdicts run={run} found={panels} links={links} onShow={show} />
+        <div className="min-w-0 px-4 pt-2 pb-8 md:px-6 lg:col-start-1 lg:row-span-2 lg:row-start-1">
           {set === null ? (
             <OperatingPoint source={source} />
           ) : (
@@ -175,7 +177,7 @@ export function RunView(props: Props) {
         <RunPanels
           workspace={workspace}
           run={run}
-          found={document ?? judgedAlready(first)}
+          found={panels}
           links={links}
           span={span}
           chosen={chosen}

@@ -54,7 +54,7 @@ export function ReportView({ run, document, text, savedBy, savedAt, span }: Prop
         ofOneDraw={plan.points / (plan.draws + 1)}
       />
       <ReportFailures failures={document.failures} axes={plan.axes} />
-      <Cautions span={span} />
+      <Cautions span={span} power={run.judgement?.power ?? null} draws={plan.draws} />
       <section aria-labelledby="report-circuit" className="grid gap-3">
         <h2 id="report-circuit">Circuit, sweeps and requirements as written</h2>
         <ol className="figures list-decimal pl-10 text-xs marker:text-quiet">
