@@ -5,8 +5,8 @@ import { expect } from "vitest";
 import { DEMO_PEOPLE } from "@/db/demo-people";
 
 /** Debian's browser; CHROME_PATH names another one. */
-const BROWSER = process.env.CHROME_PATH || "/usr/bin/chromium";
-const FLAGS = [
+export const BROWSER = process.env.CHROME_PATH || "/usr/bin/chromium";
+export const FLAGS = [
   "--no-sandbox",
   "--disable-gpu",
   "--disable-quic",

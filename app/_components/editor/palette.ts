@@ -12,4 +12,5 @@ export const TOKEN_INKS: Partial<Record<TokenClass, string>> = {
 /** Metrics that the editor and the text shown before it share, in CSS pixels, so that nothing moves when it arrives. */
 export const LINE_HEIGHT = 24;
 export const FONT_SIZE = 13.5;
-export const FONT_FAMILY = '"Spline Sans Mono Variable", "DejaVu Sans Mono", Menlo, Consolas, monospace';
+export const FONT_FAMILY =
+  '"Spline Sans Mono Variable", "Figures Stand-in", "DejaVu Sans Mono", Menlo, Consolas, monospace';

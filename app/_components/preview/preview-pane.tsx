@@ -29,6 +29,10 @@ interface Props {
 const STAYS =
   "z-30 pb-1 has-[details[open]]:static [@media(min-width:64rem)_and_(min-height:52rem)]:sticky top-0";
 
+/** Before the first curves the room that they will take is kept, so that what stands below is not pushed about. */
+const BRIEF_ROOM = "min-h-[432px]";
+const ROOM = "min-h-[432px] lg:min-h-[calc(100dvh-200px)]";
+
 /** What a run of the text would show, solved in the browser as one types: one sweep, nominal, kept nowhere. */
 export const PreviewPane = memo(function PreviewPane({ previewing, onWrite, isBrief = false }: Props) {
   const heading = useId();
@@ -48,9 +52,13 @@ export const PreviewPane = memo(function PreviewPane({ previewing, onWrite, isBr
   );
   const isOld = useLate(isStale && state !== "solving");
   const isSlow = useLate(state === "solving");
+  const isFirst = row === null && state === "solving";
   const faded = isOld ? "opacity-60" : undefined;
   return (
-    <section aria-labelledby={heading} className="grid min-w-0 gap-6">
+    <section
+      aria-labelledby={heading}
+      className={classNames("grid min-w-0 content-start gap-6", isFirst && (isBrief ? BRIEF_ROOM : ROOM))}
+    >
       <div className={classNames("grid min-w-0 gap-1 bg-paper", STAYS)}>
         <div className="flex min-h-7 flex-wrap items-center justify-between gap-x-6 gap-y-1">
           <h2 id={heading} className="caption">
@@ -97,7 +105,7 @@ export const PreviewPane = memo(function PreviewPane({ previewing, onWrite, isBr
           <ReadingRows readings={row.readings} />
         </div>
       )}
-      {outline !== null && !isBrief && (
+      {outline !== null && !isFirst && !isBrief && (
         <KnobList
           outline={outline}
           turned={turned}
