@@ -12,7 +12,7 @@ const POINTS = [
   },
   {
     title: "Every point is accounted for",
-    text: "A queued worker solves each point of the sweep and keeps its outcome, its iterations and its residual. A point that would not settle is shown with the nets at fault, and never drawn over.",
+    text: "A queued worker solves each point of the sweep and keeps its outcome, its iterations and its residual. A point that would not settle is shown with the nets farthest from settled, and never drawn over.",
   },
   {
     title: "The curve stays with the revision",

@@ -61,7 +61,7 @@ export function toDocument(matter: RunMatter): RunDocument {
 export function frameOf(matter: RunMatter): DocumentFrame {
   const { plan, text, outcome } = matter;
   const solved = OUTCOMES.indexOf("converged");
-  const solvedOrNot = outcome.includes(solved) ? "holds" : "no data";
+  const solvedOrNot = outcome.every((kind) => kind === solved) ? "holds" : "no data";
   const starts = lineStarts(text);
   const unstable = joined(matter.unstable ?? []);
   const judgement = matter.design === null ? null : judge({ design: matter.design, plan }, matter);

@@ -26,7 +26,7 @@ export function reportText(
   const title = document.title === "" ? file : `${document.title} (${file})`;
   return [
     paint("strong", title),
-    `${paint(INK[document.verdict], document.verdict)}: ${account(document)}`,
+    `${paint(INK[document.verdict], verdict(document))}: ${account(document)}`,
     ...failures(document),
     ...unstable(document),
     ...section(paint, axes(document)),
@@ -44,16 +44,22 @@ export function reportText(
     .join("");
 }
 
+/** Where nothing is required, nothing holds either: it is only solved or not. */
+function verdict({ verdict: judged, requirements: required }: RunDocument): string {
+  return required.length === 0 ? "nothing is required" : judged;
+}
+
 function account({ points }: RunDocument): string {
   const all = points.outcome.length;
   const solved = points.outcome.filter((outcome) => outcome === "converged").length;
   const share = solved === all ? `${all} points solved` : `${solved} of ${all} points solved`;
   const each = points.iterations.reduce((sum, count) => sum + count, 0) / Math.max(1, all);
   const bounds = points.bound.filter((bound) => bound !== null);
+  const allProved = solved === all ? "all" : "each of these";
   const proof =
     bounds.length === 0
       ? "none proved"
-      : `${bounds.length === solved ? "all" : bounds.length} proved, within ${formatQuantity(Math.max(...bounds), "V", 2)} at most`;
+      : `${bounds.length === solved ? allProved : bounds.length} proved, within ${formatQuantity(Math.max(...bounds), "V", 2)} at most`;
   return `${share}, ${each.toFixed(1)} iterations a point, ${proof}`;
 }
 

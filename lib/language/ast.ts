@@ -104,7 +104,7 @@ export interface Element extends Span {
   readonly model: string | null;
   readonly params: ReadonlyMap<string, NamedValue>;
   /**
-   * Of a law alone: v(plus) − v(minus) in V, or the current from plus to minus through the element in A, as an expression
+   * Of a law alone: the voltage of plus above minus in V, or the current from plus to minus through the element in A, as an expression
    * that may use signals.
    */
   readonly law: { readonly quantity: "volts" | "amps"; readonly value: Typed } | null;

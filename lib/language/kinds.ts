@@ -172,7 +172,7 @@ export const KINDS: Readonly<Record<ElementKind, DeviceKind>> = {
         about: "change with temperature from 25 °C",
       },
     },
-    about: "resistor; current flows from left to right",
+    about: "resistor; its current counts from left to right",
   },
   voltage: {
     pins: ["left", "right"],
@@ -278,7 +278,12 @@ export const KINDS: Readonly<Record<ElementKind, DeviceKind>> = {
     follows: "parameters",
     value: null,
     parameters: {
-      ratio: { dimension: PURE, unit: "1", absent: null, about: "v(out) over v(plus) − v(minus)" },
+      ratio: {
+        dimension: PURE,
+        unit: "1",
+        absent: null,
+        about: "voltage of out over the voltage of plus above minus",
+      },
     },
     about: "linear block: drives out to ratio times the difference of its inputs, which take no current",
   },

@@ -16,6 +16,8 @@ import { PLAIN_UNITS, UNITS } from "./unit";
 
 const NARROW = "\u202f";
 const MINUS = "\u2212";
+/** Atto is the smallest prefix that is shown: below, a power of ten says more than a prefix that nobody uses. */
+const SMALLEST = -18;
 
 /** Preferred names of the dimensions that circuits meet; the first that fits is used. */
 const COHERENT: readonly (readonly [string, Dimension])[] = [
@@ -100,7 +102,7 @@ function compose(value: number, unit: string, spell: (x: number) => string, digi
 }
 
 function clamp(step: number, highest: number): number {
-  return Math.min(highest, Math.max(-30, step));
+  return Math.min(highest, Math.max(SMALLEST, step));
 }
 
 function shift(x: number, step: number): number {

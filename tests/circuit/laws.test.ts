@@ -18,7 +18,7 @@ show d.v, i = R1.i`;
       for (const [k, value] of values.entries()) close(law[name]![k]!, value);
   });
 
-  test("of volts holds v(plus) − v(minus), and its current runs from plus to minus through it", () => {
+  test("of volts holds the voltage of plus above minus, and its current runs from plus to minus through it", () => {
     const {
       "a.v": a,
       "L1.v": v,

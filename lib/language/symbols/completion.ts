@@ -211,7 +211,7 @@ function lawSettings(of: string, given: readonly string[]): Offer[] {
     {
       text: "volts",
       what: "parameter",
-      about: "v(plus) − v(minus) as an expression, in V",
+      about: "the voltage of plus above minus as an expression, in V",
       snippet: "volts = ",
     },
     {

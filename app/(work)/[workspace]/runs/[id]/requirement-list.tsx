@@ -115,7 +115,7 @@ function Remainder({ one }: { readonly one: RequirementDocument }) {
   } else if (found !== undefined) {
     const needed = share == null ? "" : `, ${percent(share)} needed`;
     parts.push(
-      `${formatCount(found.holds)} of ${formatCount(found.of)} draws hold${needed}: ${percent(found.low)} to ${percent(found.high)} of parts (95\u202f% confidence)`,
+      `${formatCount(found.holds)} of ${formatCount(found.of)} draws hold${needed}: ${percent(found.low)} to ${percent(found.high)} of boards (95\u202f% confidence)`,
     );
   }
   return <span>{parts.join("; ")}</span>;
