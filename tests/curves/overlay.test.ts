@@ -52,18 +52,28 @@ describe("several sources on one figure", () => {
     expect(lines[0]!.style).not.toEqual(lines[1]!.style);
   });
 
-  it("tell settings by colour and sources by dashes", () => {
-    const { lines } = made(
+  const many = (count: number) => Array.from({ length: count }, (_, k) => 283.15 + k);
+  const two = (settings: readonly number[]) =>
+    made(
       overlay([
-        { label: "a", source: run(decades, 1, [283.15, 298.15]) },
-        { label: "b", source: run(decades, 2, [283.15, 298.15]) },
+        { label: "a", source: run(decades, 1, settings) },
+        { label: "b", source: run(decades, 2, settings) },
       ]),
-    );
-    const [a10, a25, b10, b25] = lines.map(({ style }) => style);
+    ).lines.map(({ style }) => style);
+
+  it("tell settings by colour, and every curve by dashes of its own", () => {
+    const styles = two(many(3));
+    const [a10, a11, , b10] = styles;
     expect(a10!.colour).toBe(b10!.colour);
-    expect(a10!.colour).not.toBe(a25!.colour);
-    expect(a10!.dash).toEqual(a25!.dash);
-    expect(b25!.dash).not.toEqual(a25!.dash);
+    expect(a10!.colour).not.toBe(a11!.colour);
+    expect(a10!.dash).toEqual([]);
+    expect(new Set(styles.map(({ dash }) => JSON.stringify(dash))).size).toBe(6);
+  });
+
+  it("tell sources by dashes where there are more curves than patterns", () => {
+    const styles = two(many(4));
+    expect(styles[0]!.dash).toEqual(styles[3]!.dash);
+    expect(styles[4]!.dash).not.toEqual(styles[3]!.dash);
   });
 
   it("say why they cannot lie on one ruler", () => {

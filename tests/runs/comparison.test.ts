@@ -2,6 +2,7 @@ import { describe, expect, it } from "vitest";
 import type { CurveSource } from "@/app/_components/curves/curve-source";
 import { readRuns } from "@/app/(work)/[workspace]/runs/compare/compare-shapes";
 import { readCompareState, writeCompareState } from "@/app/(work)/[workspace]/runs/compare/compare-state";
+import { movedInWords } from "@/app/(work)/[workspace]/runs/compare/compared-readings";
 import { laidOver, settingsIn, subtracted } from "@/app/(work)/[workspace]/runs/compare/comparison";
 import { sideBySide } from "@/app/(work)/[workspace]/runs/compare/side-by-side";
 
@@ -156,4 +157,17 @@ describe("the address of a comparison", () => {
     expect(readCompareState(new URLSearchParams(written))).toEqual(state);
     expect(writeCompareState([], readCompareState(new URLSearchParams()))).toBe("");
   });
+});
+
+it.each([
+  [1, 1.024, "+24.0 mV, +2.4 %"],
+  [-60e-3, -57e-3, "+3.00 mV, −5.0 %"],
+  [2, 1, "−1.00 V, −50 %"],
+  [1, 1.0000123, "+12.3 µV, +0.001 %"],
+  [1, 1.000001, "+1.00 µV"],
+  [0, 1, "+1.00 V"],
+  [1e-9, 1, "+1.00 V"],
+  [3, 3, "the same"],
+])("a value that was %d and is %d V moved by %s", (from, to, words) => {
+  expect(movedInWords(from, to, "V").replaceAll("\u202f", " ")).toBe(words);
 });

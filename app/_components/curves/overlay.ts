@@ -1,6 +1,7 @@
 import { columnFrom } from "./columns";
 import { curveSet } from "./curve-set";
 import type { CurveAxis, CurveSource, CurveTrace } from "./curve-source";
+import { FEW_STYLES } from "./line-style";
 
 /** A source among others on one figure, and what tells it from them: "revision 12", "R_out 10 kΩ". */
 export interface Labelled {
@@ -101,19 +102,25 @@ function allOf(
   return [...found.values()];
 }
 
-/** Settings of the same label have one colour, sources one pattern of dashes; a single setting each, both tell the source. */
+/**
+ * Settings of the same label have one colour. Each curve has dashes of its own as long as there are patterns for all, so that no two are
+ * told apart by colour alone; of more curves, those of one source share a pattern and labels tell the settings.
+ */
 function partsOf(sources: readonly Labelled[]): Part[] {
-  const settings = [
-    ...new Set(sources.flatMap(({ source }) => curveSet(source)!.families.map(({ label }) => label))),
-  ];
-  return sources.flatMap(({ label, source }, dash) =>
-    curveSet(source)!.families.map((family) => ({
-      source,
-      family: family.index,
-      label: family.label === "" ? label : `${label}, ${family.label}`,
-      style: { colour: settings.length === 1 ? dash : settings.indexOf(family.label), dash },
-    })),
+  const found = sources.flatMap(({ label, source }, of) =>
+    curveSet(source)!.families.map((family) => ({ label, source, of, family })),
   );
+  const settings = [...new Set(found.map(({ family }) => family.label))];
+  const isFew = found.length <= FEW_STYLES;
+  return found.map(({ label, source, of, family }, k) => ({
+    source,
+    family: family.index,
+    label: family.label === "" ? label : `${label}, ${family.label}`,
+    style: {
+      colour: settings.length === 1 ? of : settings.indexOf(family.label),
+      dash: isFew ? k : of,
+    },
+  }));
 }
 
 function lackOf(length: number, places: readonly number[]): Uint8Array {

@@ -9,8 +9,9 @@ import { PageHeader } from "@/app/_components/ui/page-header";
 import { EmptyState } from "@/app/_components/ui/states";
 import { useAddress } from "@/app/_components/ui/use-address";
 import { isLive, type RunState } from "../[id]/run-shapes";
+import { settingsOf } from "../[id]/spread/subjects";
 import { ChosenRuns } from "./chosen-runs";
-import { type ComparedRun, MOST } from "./compare-shapes";
+import { type ComparedRun, MOST, nameOf } from "./compare-shapes";
 import { readCompareState, writeCompareState } from "./compare-state";
 import { ComparedCurves } from "./compared-curves";
 import { ComparedReadings } from "./compared-readings";
@@ -106,7 +107,13 @@ export function CompareView({ workspace, runs, lost, search }: Props) {
               onState={(change) => setState((before) => ({ ...before, ...change }))}
             />
             <ComparedRequirements runs={runs} />
-            <ComparedReadings runs={runs} />
+            <ComparedReadings
+              runs={runs.map((one) => ({
+                head: nameOf(one, runs),
+                readings: one.run.judgement?.readings ?? [],
+                settings: settingsOf(one.run.plan.axes),
+              }))}
+            />
             <TextDifferences runs={runs} workspace={workspace} />
           </>
         )}

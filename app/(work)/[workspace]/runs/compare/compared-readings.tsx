@@ -2,15 +2,20 @@ import { onePrefix } from "@/app/_components/ui/one-prefix";
 import { Cell, HeadCell, Table, TableFrame } from "@/app/_components/ui/table";
 import type { ReadingDocument } from "@/lib/analyses/result";
 import { formatQuantity } from "@/lib/units/quantity";
-import { settingsOf } from "../[id]/spread/subjects";
-import { type ComparedRun, nameOf } from "./compare-shapes";
 import { type SideBySide, sideBySide } from "./side-by-side";
 
-/** The nominal readings of all runs at each setting, and how far they lie from those of the first run. */
-export function ComparedReadings({ runs }: { readonly runs: readonly ComparedRun[] }) {
-  const rows = sideBySide(
-    runs.map(({ run }) => labelled(run.judgement?.readings ?? [], settingsOf(run.plan.axes))),
-  );
+/** A run as its readings are compared. */
+export interface ReadRun {
+  /** What stands over its column. */
+  readonly head: string;
+  readonly readings: readonly ReadingDocument[];
+  /** Its settings in words, in the order in which readings are kept; one empty text where it has none. */
+  readonly settings: readonly string[];
+}
+
+/** The nominal readings of all runs at each setting, and how far they lie from those of the first run, as they are and in relation. */
+export function ComparedReadings({ runs }: { readonly runs: readonly ReadRun[] }) {
+  const rows = sideBySide(runs.map(({ readings, settings }) => labelled(readings, settings)));
   if (rows.length === 0) return null;
   return (
     <section aria-labelledby="readings">
@@ -23,8 +28,8 @@ export function ComparedReadings({ runs }: { readonly runs: readonly ComparedRun
             <tr>
               <HeadCell>Reading</HeadCell>
               {runs.map((one) => (
-                <HeadCell key={one.letter} figure className="min-w-36">
-                  {nameOf(one, runs)}
+                <HeadCell key={one.head} figure className="min-w-36">
+                  {one.head}
                 </HeadCell>
               ))}
             </tr>
@@ -38,7 +43,7 @@ export function ComparedReadings({ runs }: { readonly runs: readonly ComparedRun
                 <tr key={label}>
                   <Cell className="min-w-32">{label}</Cell>
                   {each.map((one, k) => (
-                    <Cell key={runs[k]!.letter} figure>
+                    <Cell key={runs[k]!.head} figure>
                       {one === null ? <span className="text-quiet">not read</span> : written(one, known)}
                       {k > 0 && <Moved from={first ?? null} to={one} />}
                     </Cell>
@@ -91,11 +96,18 @@ function written({ value, unit }: Read, all: readonly number[]): string {
 function Moved({ from, to }: { readonly from: Read | null; readonly to: Read | null }) {
   if (from?.value == null || to?.value == null) return null;
   if (from.unit !== to.unit) return <span className="block text-quiet text-xs">in another unit</span>;
-  const by = to.value - from.value;
-  const sign = by < 0 ? "\u2212" : "+";
-  return (
-    <span className="block text-quiet text-xs">
-      {by === 0 ? "the same" : `${sign}${formatQuantity(Math.abs(by), to.unit, 3)}`}
-    </span>
-  );
+  return <span className="block text-quiet text-xs">{movedInWords(from.value, to.value, to.unit)}</span>;
+}
+
+/** "+1.20 mV, +2.4 %": as it is and in relation to the first; the first alone where that is 0 or a part of a relation too small to say. */
+export function movedInWords(from: number, to: number, unit: string): string {
+  const by = to - from;
+  if (by === 0) return "the same";
+  const signed = (text: string) => `${by < 0 ? "\u2212" : "+"}${text}`;
+  const moved = signed(formatQuantity(Math.abs(by), unit, 3));
+  const percent = Math.abs((100 * by) / from);
+  if (!Number.isFinite(percent) || percent < 0.0005 || percent >= 1000) return moved;
+  const digits = Math.max(0, Math.min(3, 1 - Math.floor(Math.log10(percent))));
+  const relation = `${percent.toFixed(digits)}\u202f%`;
+  return `${moved}, ${by / from < 0 ? "\u2212" : "+"}${relation}`;
 }

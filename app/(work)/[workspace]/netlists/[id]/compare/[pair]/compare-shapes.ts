@@ -1,5 +1,5 @@
 import type { DiffForm } from "@/app/_components/diff/text-diff";
-import type { AxisDocument, ReadingDocument, RequirementDocument, Verdict } from "@/lib/analyses/result";
+import type { ReadingDocument, RequirementDocument, Verdict } from "@/lib/analyses/result";
 
 /** A finished run of a revision, as far as it is compared without its curves. */
 export interface ComparedRun {
@@ -11,9 +11,8 @@ export interface ComparedRun {
   readonly requirements: readonly RequirementDocument[];
   /** Those with one value a sweep. */
   readonly readings: readonly ReadingDocument[];
-  /** The outer sweeps. */
-  readonly axes: readonly AxisDocument[];
-  readonly draws: number;
+  /** The settings of the outer sweeps in words, in the order in which readings are kept. */
+  readonly settings: readonly string[];
 }
 
 /** One of the two revisions. */

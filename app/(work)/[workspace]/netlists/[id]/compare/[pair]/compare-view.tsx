@@ -9,11 +9,11 @@ import {
   readCompareState,
   writeCompareState,
 } from "../../../../runs/compare/compare-state";
+import { ComparedReadings } from "../../../../runs/compare/compared-readings";
 import { ChangeList } from "../../change-list";
 import { CompareActions } from "./compare-actions";
 import { formIn, type Side } from "./compare-shapes";
 import { CurveSection } from "./curve-section";
-import { ReadingTable } from "./reading-table";
 import { RunLack } from "./run-lack";
 import { SideFacts } from "./side-facts";
 import { VerdictTable } from "./verdict-table";
@@ -96,7 +96,15 @@ export function CompareView({ workspace, netlist, before, after, changes, search
                 )}
               </div>
             </section>
-            {runs !== null && <ReadingTable before={runs.old} after={runs.now} labels={labels} />}
+            {runs !== null && (
+              <ComparedReadings
+                runs={[runs.old, runs.now].map(({ readings, settings }, side) => ({
+                  head: labels[side]!,
+                  readings,
+                  settings,
+                }))}
+              />
+            )}
           </div>
         </div>
         {runs !== null && (

@@ -10,6 +10,7 @@ import { getRevision } from "@/lib/services/netlists/get-revision";
 import { getRun } from "@/lib/services/runs/get-run";
 import { listRuns } from "@/lib/services/runs/list-runs";
 import { answered } from "../../../../../answered";
+import { settingsOf } from "../../../../runs/[id]/spread/subjects";
 import { readPair, type Side } from "./compare-shapes";
 import { CompareView } from "./compare-view";
 import { DraftView } from "./draft-view";
@@ -52,8 +53,7 @@ async function sideOf(actor: Actor, netlistId: string, number: number): Promise<
       isJudged: run.judgement !== null,
       requirements: run.judgement?.requirements ?? [],
       readings: run.judgement?.readings ?? [],
-      axes: run.plan.axes.slice(1),
-      draws: run.plan.draws,
+      settings: settingsOf(run.plan.axes),
     },
   };
 }
