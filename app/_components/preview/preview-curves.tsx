@@ -1,12 +1,13 @@
 "use client";
 
-import { memo, useMemo, useState } from "react";
+import { memo, useContext, useMemo, useState } from "react";
 import { CurveFigure } from "@/app/_components/curves/curve-figure";
 import { type CurveSource, curveSet } from "@/app/_components/curves/curve-set";
 import { type CurveView, USUAL_VIEW } from "@/app/_components/curves/curve-view";
 import { formatValue } from "@/app/_components/curves/figures-in-words";
 import { allowedBands } from "@/lib/analyses/allowed-bands";
 import { OUTCOMES } from "@/lib/solver/outcome";
+import { KeptView } from "./kept-view";
 import type { Outline, Row } from "./messages";
 
 interface Props {
@@ -19,7 +20,8 @@ interface Props {
 
 /** The curves of a previewed row; for a netlist that sweeps nothing, its one operating point. */
 export const PreviewCurves = memo(function PreviewCurves({ outline, row, place, onPlace }: Props) {
-  const [view, setView] = useState<CurveView>(USUAL_VIEW);
+  const kept = useContext(KeptView);
+  const [own, setOwn] = useState<CurveView>(USUAL_VIEW);
   const source = useMemo(() => sourceOf(row), [row]);
   const set = useMemo(() => curveSet(source), [source]);
   const allowed = useMemo(() => allowedBands(row), [row]);
@@ -30,8 +32,8 @@ export const PreviewCurves = memo(function PreviewCurves({ outline, row, place, 
     <CurveFigure
       set={set}
       name="Curves of the preview"
-      view={view}
-      onView={(change) => setView((before) => ({ ...before, ...change }))}
+      view={kept?.view ?? own}
+      onView={kept?.onView ?? ((change) => setOwn((before) => ({ ...before, ...change })))}
       point={nearestIn(solved, whole[place] ?? solved[0]!)}
       onPoint={(point) => onPlace(nearestIn(whole, solved[point]!))}
       waiting={null}

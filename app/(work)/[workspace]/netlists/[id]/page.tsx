@@ -11,6 +11,7 @@ import { Sheet } from "./sheet";
 
 interface Props {
   readonly params: Promise<{ readonly workspace: string; readonly id: string }>;
+  readonly searchParams: Promise<Record<string, string | string[] | undefined>>;
 }
 
 // Both the title of the page and the page ask for it; once a request is enough.
@@ -25,9 +26,13 @@ export async function generateMetadata({ params }: Props): Promise<Metadata> {
   return { title: (await load(workspace, id)).netlist.title };
 }
 
-export default async function SheetPage({ params }: Props) {
+export default async function SheetPage({ params, searchParams }: Props) {
   const { workspace, id } = await params;
   const { actor, netlist } = await load(workspace, id);
+  const search = new URLSearchParams();
+  for (const [name, value] of Object.entries(await searchParams)) {
+    for (const one of [value ?? []].flat()) search.append(name, one);
+  }
   const runs = await listRuns(actor, { netlistId: id, page: 1, size: RUNS_SHOWN });
   const { number, title, text, revision, hash, owner, isArchived } = netlist;
   const mayWrite = can(actor, "netlist.write", { workspaceId: actor.workspaceId });
@@ -42,6 +47,7 @@ export default async function SheetPage({ params }: Props) {
         runs={runs}
         writer={actor.userId}
         role={actor.role}
+        search={search.toString()}
         mayQueue={can(actor, "run.start", { workspaceId: actor.workspaceId })}
       />
     </>

@@ -1,7 +1,7 @@
 "use client";
 
 import dynamic from "next/dynamic";
-import { type ReactNode, type RefObject, useState } from "react";
+import type { ReactNode, RefObject } from "react";
 import type { CursorAt } from "@/app/_components/drawing/text-connections";
 import type { EditorHandle } from "@/app/_components/editor/editor-handle";
 import { useDeeds } from "@/app/_components/palette/deed-registry";
@@ -19,33 +19,35 @@ const TextConnections = dynamic(
 interface Props {
   /** What stands under the first tab. */
   readonly preview: ReactNode;
+  /** Which tab is open. */
+  readonly side: "preview" | "connections";
+  readonly onSide: (side: string) => void;
   readonly text: string;
   readonly cursor: CursorAt | null;
   readonly editor: RefObject<EditorHandle | null>;
 }
 
 /** Beside the text: what it would give, or what it connects. */
-export function SheetSide({ preview, text, cursor, editor }: Props) {
-  const [tab, setTab] = useState("preview");
+export function SheetSide({ preview, side, onSide, text, cursor, editor }: Props) {
   useDeeds(
     "here",
     [
-      tab === "preview"
+      side === "preview"
         ? {
             id: "connections",
             words: "Show the connections",
             also: "drawing nets parts",
-            does: () => setTab("connections"),
+            does: () => onSide("connections"),
           }
-        : { id: "preview", words: "Show the preview", also: "curves knobs", does: () => setTab("preview") },
+        : { id: "preview", words: "Show the preview", also: "curves knobs", does: () => onSide("preview") },
     ],
     1,
   );
   return (
     <Tabs
       label="Beside the text"
-      value={tab}
-      onChange={setTab}
+      value={side}
+      onChange={onSide}
       tabs={[
         { value: "preview", label: "Preview", content: preview },
         {

@@ -1,10 +1,11 @@
 "use client";
 
-import { useCallback, useEffect, useState } from "react";
+import { useCallback, useEffect, useMemo, useState } from "react";
 import type { CursorAt } from "@/app/_components/drawing/text-connections";
 import type { TabDoes } from "@/app/_components/editor/editor-handle";
 import { NetlistEditor } from "@/app/_components/editor/netlist-editor";
 import { ProblemList } from "@/app/_components/editor/problem-list";
+import { KeptView } from "@/app/_components/preview/kept-view";
 import { PreviewPane } from "@/app/_components/preview/preview-pane";
 import { usePreviewing } from "@/app/_components/preview/use-preview";
 import { type WrittenKnob, writeKnobs } from "@/app/_components/preview/write-knobs";
@@ -21,6 +22,7 @@ import { StatusLine } from "./status-line";
 import { useAskedLine } from "./use-asked-line";
 import { useSheet } from "./use-sheet";
 import { useSheetDeeds } from "./use-sheet-deeds";
+import { KeepSheetAddress, useSheetView } from "./use-sheet-view";
 
 interface Props {
   readonly workspace: string;
@@ -31,16 +33,20 @@ interface Props {
   readonly writer: string;
   readonly role: Role;
   readonly mayQueue: boolean;
+  /** The search part of the address the page was asked for with. */
+  readonly search: string;
 }
 
 /** The sheet of a netlist: its text to write in, what is wrong with it, a preview of its curves, what a run would compute, and the runs so far. */
-export function Sheet({ workspace, netlist, latest, runs, writer, role, mayQueue }: Props) {
+export function Sheet({ workspace, netlist, latest, runs, writer, role, mayQueue, search }: Props) {
   const sheet = useSheet({ workspace, netlistId: netlist.id, writer, latest, mayQueue });
   const { editor, examined, text } = sheet;
   useAskedLine(editor);
   useSheetDeeds(sheet, mayQueue);
   const previewing = usePreviewing(latest.text);
   const [tab, setTab] = useState<TabDoes>("indents");
+  const { side, view, asked, onView, onSide } = useSheetView(search);
+  const kept = useMemo(() => ({ view, onView }), [view, onView]);
   const [cursor, setCursor] = useState<CursorAt | null>(null);
   const problems = examined?.diagnostics ?? [];
 
@@ -107,9 +113,13 @@ export function Sheet({ workspace, netlist, latest, runs, writer, role, mayQueue
             text={text}
             cursor={cursor}
             editor={editor}
+            side={side}
+            onSide={onSide}
             preview={
               <div className="grid min-w-0 content-start gap-8">
-                <PreviewPane previewing={previewing} onWrite={mayQueue ? write : undefined} />
+                <KeptView value={kept}>
+                  <PreviewPane previewing={previewing} onWrite={mayQueue ? write : undefined} />
+                </KeptView>
                 <PlanView examined={examined} />
                 <LastRuns workspace={workspace} netlistId={netlist.id} title={latest.title} first={runs} />
               </div>
@@ -124,6 +134,7 @@ export function Sheet({ workspace, netlist, latest, runs, writer, role, mayQueue
         tab={tab}
         readOnly={!mayQueue}
       />
+      <KeepSheetAddress side={side} view={view} asked={asked} previewing={previewing} />
       <ConflictDialog sheet={sheet} />
     </div>
   );
