@@ -6,7 +6,7 @@ export type Term =
   | { readonly kind: "fraction"; readonly top: Term; readonly bottom: Term }
   | { readonly kind: "root" | "brackets"; readonly of: Term };
 
-const NAME = /[\p{L}]+/uy;
+const NAME = /(?:(?!Σ)\p{L})+/uy;
 const NUMBER = /\d+(?:\.\d+)?/uy;
 const WORDS = /"([^"]*)"/uy;
 

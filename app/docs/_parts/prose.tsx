@@ -9,9 +9,12 @@ const MARKED = /(`[^`]*`|\$[^$]*\$|\b(?:TXT|FRM|NAM|UNI|WIR|PLN|CON|CAP)\d+\b)/u
  * code of a diagnostic leads to it.
  */
 export function Prose({ children }: { readonly children: string }) {
-  return children
-    .split(MARKED)
-    .map((piece, k) => <Piece key={`${k} ${piece}`} text={piece} isMarked={k % 2 === 1} />);
+  return (
+    children
+      .split(MARKED)
+      // biome-ignore lint/suspicious/noArrayIndexKey: the pieces of a sentence never change their order
+      .map((piece, k) => <Piece key={`${k} ${piece}`} text={piece} isMarked={k % 2 === 1} />)
+  );
 }
 
 function Piece({ text, isMarked }: { readonly text: string; readonly isMarked: boolean }) {

@@ -3,13 +3,16 @@ import { StateBadge } from "@/app/_components/ui/state-badge";
 import { format } from "@/lib/language/format";
 import { solved } from "./solved";
 
-/** A whole netlist of a page, and beneath it what it reads and whether it holds, solved as the page is made. */
-export function Sample({ text }: { readonly text: string }) {
+/**
+ * A whole netlist of a page, or the part of it that is `shown`, and beneath it what it reads and whether it holds, solved as the page
+ * is made.
+ */
+export function Sample({ text, shown = text }: { readonly text: string; readonly shown?: string }) {
   const answer = solved(text);
   const hasAnswer = answer !== null && answer.readings.length + answer.requirements.length > 0;
   return (
     <div className="mt-3">
-      <NetlistText text={format(text).trimEnd()} />
+      <NetlistText text={format(shown).trimEnd()} />
       {hasAnswer && (
         <dl className="flex flex-wrap gap-x-6 gap-y-1 border-y py-1.5 text-sm">
           {answer.readings.map(({ name, value }) => (
