@@ -1,4 +1,5 @@
 import type { OutcomeKind } from "@/lib/solver/outcome";
+import { formatQuantity } from "@/lib/units/quantity";
 
 /** Why a point has no value, for people. */
 const WHY: Readonly<Record<Exclude<OutcomeKind, "converged">, string>> = {
@@ -18,4 +19,10 @@ export function reasonOf(outcome: OutcomeKind, unsettled: readonly string[]): st
   if (outcome === "converged") return null;
   const why = WHY[outcome];
   return unsettled.length === 0 ? why : `${why} Farthest from settled: ${unsettled.join(", ")}.`;
+}
+
+/** "1 965, source ramp": the linear systems solved for a point and the rung at which it was left. */
+export function effortInWords(iterations: number, rung: string | null): string {
+  const count = formatQuantity(iterations, "1", Math.max(1, String(iterations).length));
+  return rung === null ? count : `${count}, ${rung.replace("newton", "Newton")}`;
 }

@@ -3,7 +3,7 @@
 import { keepPreviousData, useQuery } from "@tanstack/react-query";
 import { type RefObject, useEffect, useState } from "react";
 import { formatCount } from "@/app/_components/ui/count";
-import { outcomeInWords } from "@/lib/analyses/reasons";
+import { effortInWords, outcomeInWords } from "@/lib/analyses/reasons";
 import { formatQuantity } from "@/lib/units/quantity";
 import { fetchPoint } from "./fetch-run";
 import { Power } from "./point-account";
@@ -47,7 +47,7 @@ export function CursorAccount({
                 : formatQuantity(found.bound, "V", 2)}
         </Row>
         <Row name="iterations">
-          {found?.iterations != null && `${found.iterations}${found.rung === null ? "" : `, ${found.rung}`}`}
+          {found?.iterations != null && effortInWords(found.iterations, found.rung)}
         </Row>
         <Row name="largest residual">
           {found?.residual != null && (

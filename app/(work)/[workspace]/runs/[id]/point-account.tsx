@@ -1,7 +1,7 @@
 import type { ReactNode } from "react";
 import { formatKnob, formatValue } from "@/app/_components/curves/figures-in-words";
 import { StateMark } from "@/app/_components/ui/state-mark";
-import { outcomeInWords } from "@/lib/analyses/reasons";
+import { effortInWords, outcomeInWords } from "@/lib/analyses/reasons";
 import { formatQuantity } from "@/lib/units/quantity";
 import type { PointAccount } from "./run-shapes";
 
@@ -41,9 +41,7 @@ export function PointAccountView({ account }: { readonly account: PointAccount }
         {solved && (
           <Row name="proved within">{bound === null ? "not proved" : formatQuantity(bound, "V", 2)}</Row>
         )}
-        {iterations !== null && (
-          <Row name="iterations">{rung === null ? iterations : `${iterations}, ${rung}`}</Row>
-        )}
+        {iterations !== null && <Row name="iterations">{effortInWords(iterations, rung)}</Row>}
         {residual !== null && (
           <Row name="largest residual">
             <Power value={residual} />
