@@ -1,6 +1,7 @@
 import { describe, expect, it } from "vitest";
 import { DeedRegistry } from "@/app/_components/palette/deed-registry";
 import { answering, type Deed, rank } from "@/app/_components/palette/deeds";
+import { without } from "@/app/_components/palette/use-found";
 
 const deed = (id: string, words: string, more: Partial<Deed> = {}): Deed => ({
   id,
@@ -40,6 +41,17 @@ describe("what answers to a query", () => {
 
   it("reads the narrow space of a quantity as a space", () => {
     expect(rank(deed("t", "Hide trace at 25\u202f°C"), "25 °c")).toBe(1);
+  });
+});
+
+describe("what the service is asked", () => {
+  it.each([
+    ["run 348", "348"],
+    ["Runs of ratio", "of ratio"],
+    ["running", "running"],
+    ["run", ""],
+  ])("leaves the kind of thing out of %s", (query, asked) => {
+    expect(without("run", query)).toBe(asked);
   });
 });
 

@@ -52,8 +52,8 @@ export function useFound(workspace: string, query: string): Found {
     queryFn: async ({ signal }): Promise<Answer> => {
       const size = asked === "" ? NEWEST : MOST;
       const [netlists, runs] = await Promise.all([
-        look<NetlistFound>("netlists", workspace, asked, size, signal),
-        look<RunFound>("runs", workspace, asked, size, signal),
+        look<NetlistFound>("netlists", workspace, without("netlist", asked), size, signal),
+        look<RunFound>("runs", workspace, without("run", asked), size, signal),
       ]);
       return { query: asked, netlists, runs };
     },
@@ -93,6 +93,14 @@ function entriesOf({ netlists, runs }: Answer, workspace: string, left: string):
       left,
     ),
   ];
+}
+
+/** "run 348" means the run of that number: what says which kind is meant is not looked for in titles. */
+export function without(kind: string, query: string): string {
+  return query
+    .split(/\s+/)
+    .filter((word) => word.toLowerCase() !== kind && word.toLowerCase() !== `${kind}s`)
+    .join(" ");
 }
 
 async function look<T>(
