@@ -38,7 +38,7 @@ describe("a figure as SVG", () => {
   it("draws each line once, in its colour and dashes, inside its storey", () => {
     const lines = svg.match(/<path[^>]*stroke-width="1.75"[^>]*>/g)!;
     expect(lines).toHaveLength(4);
-    expect(lines.every((line) => /clip-path="url\(#part-\d\)"/.test(line))).toBe(true);
+    expect(lines.every((line) => /clip-path="url\(#figure-part-\d\)"/.test(line))).toBe(true);
     expect(new Set(lines.map((line) => / stroke="(#\w+)"/.exec(line)![1])).size).toBe(2);
   });
 

@@ -6,6 +6,7 @@ import {
   launchBrowser,
   openPage,
   signIn,
+  signInAfresh,
   WORKSPACE,
 } from "./harness";
 
@@ -46,7 +47,7 @@ describe("signing in", () => {
 
   it("ends the session for good by signing out", async () => {
     const { page } = await openPage(browser);
-    await signIn(page, "rosa");
+    await signInAfresh(page, "rosa");
     const cookies = await page.context().cookies();
     await page.getByRole("button", { name: "Account of Rosa Reviewer" }).click();
     await page.getByText("reviewer in this workspace").waitFor();

@@ -1,6 +1,12 @@
-import { mkdirSync } from "node:fs";
+import { mkdirSync, readFileSync, writeFileSync } from "node:fs";
 import { AxeBuilder } from "@axe-core/playwright";
-import { type Browser, type BrowserContextOptions, chromium, type Page } from "playwright-core";
+import {
+  type Browser,
+  type BrowserContext,
+  type BrowserContextOptions,
+  chromium,
+  type Page,
+} from "playwright-core";
 import { expect } from "vitest";
 import { DEMO_PEOPLE } from "@/db/demo-people";
 
@@ -82,8 +88,39 @@ export async function openPage(browser: Browser, options: BrowserContextOptions 
   return { page, faults };
 }
 
-/** Signs in by the form and waits for the workspace's home. */
+/** Sessions that the files share, by service and person: a form sent once does for all of them. Git does not see it. */
+const SESSIONS = ".test/sessions.json";
+const COOKIE = /sweepwright-session/;
+
+type Cookies = Awaited<ReturnType<BrowserContext["cookies"]>>;
+
+/** Sessions kept by earlier files; none where they cannot be read. */
+function keptSessions(): Record<string, Cookies> {
+  try {
+    return JSON.parse(readFileSync(SESSIONS, "utf8"));
+  } catch {
+    return {};
+  }
+}
+
+/** Signs in, by the session of an earlier file where it still lives, and waits for the workspace's home. */
 export async function signIn(page: Page, who: Who): Promise<void> {
+  const key = `${baseUrl()} ${who}`;
+  const kept = keptSessions()[key];
+  if (kept !== undefined) {
+    await page.context().addCookies(kept);
+    await page.goto(`/${WORKSPACE}`);
+    if (new URL(page.url()).pathname === `/${WORKSPACE}`) return;
+    await page.context().clearCookies({ name: COOKIE });
+  }
+  await signInAfresh(page, who);
+  const cookies = (await page.context().cookies()).filter(({ name }) => COOKIE.test(name));
+  mkdirSync(".test", { recursive: true });
+  writeFileSync(SESSIONS, JSON.stringify({ ...keptSessions(), [key]: cookies }));
+}
+
+/** Signs in by the form, for a session of its own, and waits for the workspace's home. */
+export async function signInAfresh(page: Page, who: Who): Promise<void> {
   await page.goto("/sign-in");
   await fillSignIn(page, who);
   await page.waitForURL(`**/${WORKSPACE}`);

@@ -1,19 +1,22 @@
 import { type Box, FACES, type PathMark, type Scene, type TextMark } from "./scene";
 
-/** A scene as the text of an SVG file. Fonts are named, not carried along: where they are missing, others of the same kind serve. */
-export function sceneSvg(scene: Scene): string {
+/**
+ * A scene as the text of an SVG file. Fonts are named, not carried along: where they are missing, others of the same kind serve. `id`
+ * begins the names inside it, which must differ where several stand on one page.
+ */
+export function sceneSvg(scene: Scene, id = "figure"): string {
   const clips = new Map<string, Box>();
   const body = scene.marks
-    .map((mark) => (mark.kind === "text" ? textSvg(mark) : pathSvg(mark, clips)))
+    .map((mark) => (mark.kind === "text" ? textSvg(mark) : pathSvg(mark, clips, id)))
     .join("\n");
   const { width, height, title, description, background } = scene;
   const defined = [...clips].map(
-    ([id, box]) =>
-      `<clipPath id="${id}"><rect x="${box.left}" y="${box.top}" width="${box.width}" height="${box.height}"/></clipPath>`,
+    ([name, box]) =>
+      `<clipPath id="${name}"><rect x="${box.left}" y="${box.top}" width="${box.width}" height="${box.height}"/></clipPath>`,
   );
-  return `<svg xmlns="http://www.w3.org/2000/svg" width="${width}" height="${height}" viewBox="0 0 ${width} ${height}" role="img" aria-labelledby="figure-title figure-description">
-<title id="figure-title">${escaped(title)}</title>
-<desc id="figure-description">${escaped(description)}</desc>
+  return `<svg xmlns="http://www.w3.org/2000/svg" width="${width}" height="${height}" viewBox="0 0 ${width} ${height}" role="img" aria-labelledby="${id}-title ${id}-description">
+<title id="${id}-title">${escaped(title)}</title>
+<desc id="${id}-description">${escaped(description)}</desc>
 <defs>${defined.join("")}</defs>
 <rect width="${width}" height="${height}" fill="${background}"/>
 ${body}
@@ -26,13 +29,13 @@ function textSvg({ x, y, text, size, face, bold, fill, anchor }: TextMark): stri
   return `<text x="${short(x)}" y="${short(y)}" font-family="${FACES[face]}" font-size="${size}"${weight} fill="${fill}" text-anchor="${anchor}">${escaped(text)}</text>`;
 }
 
-function pathSvg(mark: PathMark, clips: Map<string, Box>): string {
+function pathSvg(mark: PathMark, clips: Map<string, Box>, id: string): string {
   const d = mark.stretches
     .map(
       (points) => `M${points.map(([x, y]) => `${short(x)} ${short(y)}`).join("L")}${mark.closed ? "Z" : ""}`,
     )
     .join("");
-  const clip = mark.clip === null ? "" : ` clip-path="url(#${clipOf(mark.clip, clips)})"`;
+  const clip = mark.clip === null ? "" : ` clip-path="url(#${clipOf(mark.clip, clips, id)})"`;
   const dash = mark.dash.length === 0 ? "" : ` stroke-dasharray="${mark.dash.join(" ")}"`;
   const stroke =
     mark.stroke === null
@@ -42,11 +45,11 @@ function pathSvg(mark: PathMark, clips: Map<string, Box>): string {
   return `<path d="${d}" fill="${mark.fill ?? "none"}"${stroke}${alpha}${clip}/>`;
 }
 
-function clipOf(box: Box, clips: Map<string, Box>): string {
-  for (const [id, known] of clips) if (JSON.stringify(known) === JSON.stringify(box)) return id;
-  const id = `part-${clips.size + 1}`;
-  clips.set(id, box);
-  return id;
+function clipOf(box: Box, clips: Map<string, Box>, id: string): string {
+  for (const [name, known] of clips) if (JSON.stringify(known) === JSON.stringify(box)) return name;
+  const name = `${id}-part-${clips.size + 1}`;
+  clips.set(name, box);
+  return name;
 }
 
 /** Hundredths of a px. */

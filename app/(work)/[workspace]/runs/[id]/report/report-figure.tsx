@@ -11,16 +11,23 @@ import { sourceLine } from "../source-line";
 
 /** Px; on a sheet of A4 or Letter the smallest letters are then 8 points high. */
 const WIDTH = 720;
-const COLOURS = { ...THEMES.light, "--paper": "#FFFFFF" };
+/** On paper and on a light screen; on a dark one. */
+const COLOURS = { light: { ...THEMES.light, "--paper": "#FFFFFF" }, dark: THEMES.dark } as const;
 
-/** The curves of a run on white paper, with their summary in words; nothing for a run without a sweep. */
-export function ReportFigure({ run, document }: { readonly run: RunState; readonly document: RunDocument }) {
+/** The curves of a run as they are printed: drawings, and what they show in words. */
+export interface DrawnFigure {
+  readonly light: string;
+  readonly dark: string;
+  readonly description: string;
+}
+
+/** Draws the curves of a run; null for a run without a sweep. Reads every point, and keeps none. */
+export function drawFigure(run: RunState, document: RunDocument): DrawnFigure | null {
   const set = curveSet(document);
   if (set === null) return null;
-  const scene = figureScene({
+  const request = {
     set,
     view: USUAL_VIEW,
-    colours: COLOURS,
     title: run.title,
     source: sourceLine(run),
     allowed: allowedBands(document),
@@ -29,14 +36,31 @@ export function ReportFigure({ run, document }: { readonly run: RunState; readon
       set.traces.map(({ name }) => name),
     ),
     width: WIDTH,
-  });
+  };
+  const light = figureScene({ ...request, colours: COLOURS.light });
+  const dark = figureScene({ ...request, colours: COLOURS.dark });
+  return {
+    light: sceneSvg(light, "figure"),
+    dark: sceneSvg(dark, "figure-dark"),
+    description: light.description,
+  };
+}
+
+/** The curves on white paper, on a dark screen in its colours, with their summary in words. */
+export function ReportFigure({ figure }: { readonly figure: DrawnFigure }) {
   return (
     <section aria-labelledby="report-curves" data-whole className="grid gap-3">
       <h2 id="report-curves">Curves</h2>
       <figure>
-        {/* biome-ignore lint/security/noDangerouslySetInnerHtml: sceneSvg escapes every text that it sets */}
-        <div dangerouslySetInnerHTML={{ __html: sceneSvg(scene) }} />
-        <figcaption className="mt-2 text-sm">{scene.description}</figcaption>
+        {(["light", "dark"] as const).map((theme) => (
+          <div
+            key={theme}
+            data-figure={theme}
+            // biome-ignore lint/security/noDangerouslySetInnerHtml: sceneSvg escapes every text that it sets
+            dangerouslySetInnerHTML={{ __html: figure[theme] }}
+          />
+        ))}
+        <figcaption className="mt-2 text-sm">{figure.description}</figcaption>
       </figure>
     </section>
   );

@@ -7,13 +7,15 @@ import { UnstablePoints } from "../unstable-points";
 import { ReportBudgets } from "./report-budgets";
 import { ReportFacts } from "./report-facts";
 import { ReportFailures } from "./report-failures";
-import { ReportFigure } from "./report-figure";
+import { type DrawnFigure, ReportFigure } from "./report-figure";
 import { ReportReadings } from "./report-readings";
 import { ReportRequirements } from "./report-requirements";
 
 interface Props {
   readonly run: RunState;
-  readonly document: RunDocument;
+  readonly document: Pick<RunDocument, "requirements" | "readings" | "branches" | "unstable" | "failures">;
+  /** Null for a run without a sweep. */
+  readonly figure: DrawnFigure | null;
   /** Of the revision that was run. */
   readonly text: string;
   readonly savedBy: string;
@@ -22,7 +24,7 @@ interface Props {
 }
 
 /** Everything that a run came to, on sheets. */
-export function ReportView({ run, document, text, savedBy, savedAt, span }: Props) {
+export function ReportView({ run, document, figure, text, savedBy, savedAt, span }: Props) {
   const { plan } = run;
   const missing = incompleteness(run);
   return (
@@ -44,7 +46,7 @@ export function ReportView({ run, document, text, savedBy, savedAt, span }: Prop
         <h2 id="report-requirements">Requirements</h2>
         <ReportRequirements requirements={document.requirements} />
       </section>
-      <ReportFigure run={run} document={document} />
+      {figure !== null && <ReportFigure figure={figure} />}
       <ReportReadings readings={document.readings} axes={plan.axes} draws={plan.draws} />
       <ReportBudgets judgement={run.judgement} />
       <BranchList branches={document.branches ?? []} axes={plan.axes} search={run.search ?? null} />
