@@ -8,7 +8,7 @@ knob I_in = 1 µA                     # what the sweep turns
 model junction : diode { Is = 2 fA, n = 1.05 }
 model amp : opamp { }                # an ideal amplifier
 
-# A current into the summing net leaves through the junction: its voltage is the logarithm.
+# A current into the summing net leaves through the junction: out falls by 62 mV with every decade.
 ground -- IS : current I_in -- s
 s -- D1 : junction -- out
 A1 : amp { plus = ground, minus = s, out = out }
