@@ -2,7 +2,7 @@
 
 import { useQuery } from "@tanstack/react-query";
 import Link from "next/link";
-import { ButtonLink } from "@/app/_components/ui/button";
+import { Button, ButtonLink } from "@/app/_components/ui/button";
 import { formatCount } from "@/app/_components/ui/count";
 import { StateBadge, shownState } from "@/app/_components/ui/state-badge";
 import { ProgressLine } from "@/app/_components/ui/states";
@@ -21,7 +21,7 @@ interface Props {
 
 /** The latest runs of this netlist with their state; looked up every two seconds while one of them moves. */
 export function LastRuns({ workspace, netlistId, revision, title, first }: Props) {
-  const { data, error } = useQuery({
+  const { data, error, refetch } = useQuery({
     queryKey: ["runs", workspace, netlistId, revision ?? "all"],
     initialData: first,
     queryFn: async () => {
@@ -50,7 +50,12 @@ export function LastRuns({ workspace, netlistId, revision, title, first }: Props
         )}
       </div>
       {error !== null && (
-        <p className="mt-2 text-broken text-sm">This list may be out of date. {error.message}</p>
+        <p role="alert" className="mt-2 text-broken text-sm">
+          This list may be out of date. {error.message}{" "}
+          <Button size="small" onClick={() => refetch()}>
+            Try again
+          </Button>
+        </p>
       )}
       {data.rows.length === 0 ? (
         <p className="mt-2 border-y py-3 text-quiet text-sm">

@@ -1,9 +1,5 @@
-import { LoadingState } from "@/app/_components/ui/states";
+import { PageLoading } from "@/app/_components/ui/page-loading";
 
 export default function Loading() {
-  return (
-    <div className="px-4 md:px-6">
-      <LoadingState>Opening the netlist…</LoadingState>
-    </div>
-  );
+  return <PageLoading words="Opening the netlist…" />;
 }

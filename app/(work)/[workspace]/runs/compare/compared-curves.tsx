@@ -4,6 +4,7 @@ import { useQueries } from "@tanstack/react-query";
 import { useMemo } from "react";
 import { CurveFigure } from "@/app/_components/curves/curve-figure";
 import { type CurveSource, curveSet } from "@/app/_components/curves/curve-set";
+import { Button } from "@/app/_components/ui/button";
 import { SelectField } from "@/app/_components/ui/field";
 import { FailedState, LoadingState } from "@/app/_components/ui/states";
 import { Tabs } from "@/app/_components/ui/tabs";
@@ -33,9 +34,10 @@ export function ComparedCurves({ runs, state, onState }: Props) {
     combine: (results) => ({
       data: results.map(({ data }) => data),
       error: results.find(({ error }) => error !== null)?.error ?? null,
+      again: () => results.filter(({ error }) => error !== null).forEach(({ refetch }) => void refetch()),
     }),
   });
-  const { data, error } = documents;
+  const { data, error, again } = documents;
   const layers = useMemo(
     () =>
       runs.flatMap(({ letter }, k) => {
@@ -55,7 +57,10 @@ export function ComparedCurves({ runs, state, onState }: Props) {
   );
   if (error !== null)
     return (
-      <FailedState title="The curves could not be fetched">
+      <FailedState
+        title="The curves could not be fetched"
+        action={<Button onClick={again}>Try again</Button>}
+      >
         <p>{error.message}</p>
       </FailedState>
     );

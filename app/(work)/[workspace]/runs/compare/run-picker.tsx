@@ -6,7 +6,7 @@ import { Button } from "@/app/_components/ui/button";
 import { counted } from "@/app/_components/ui/count";
 import { SearchBox } from "@/app/_components/ui/search-box";
 import { StateBadge, shownState } from "@/app/_components/ui/state-badge";
-import { FailedState } from "@/app/_components/ui/states";
+import { FailedState, LoadingState } from "@/app/_components/ui/states";
 import { When } from "@/app/_components/ui/when";
 import type { Found } from "../(list)/use-runs";
 
@@ -27,7 +27,7 @@ export function RunPicker({ workspace, chosen, netlistId, open, onAdd }: Props) 
   const [query, setQuery] = useState("");
   const [everywhere, setEverywhere] = useState(false);
   const own = netlistId !== null && query === "" && !everywhere;
-  const { data, error } = useQuery({
+  const { data, error, isPending, refetch } = useQuery({
     queryKey: ["runs to compare", workspace, own ? netlistId : null, query],
     queryFn: () => fetchRuns(workspace, query, own ? netlistId : null),
     placeholderData: keepPreviousData,
@@ -54,7 +54,10 @@ export function RunPicker({ workspace, chosen, netlistId, open, onAdd }: Props) 
           )}
         </div>
         {error !== null && (
-          <FailedState title="The runs could not be listed">
+          <FailedState
+            title="The runs could not be listed"
+            action={<Button onClick={() => refetch()}>Try again</Button>}
+          >
             <p>{error.message}</p>
           </FailedState>
         )}
@@ -65,6 +68,7 @@ export function RunPicker({ workspace, chosen, netlistId, open, onAdd }: Props) 
               : "No run matches."}
           </p>
         )}
+        {isPending && <LoadingState>Looking for runs…</LoadingState>}
         <ul aria-label="Runs to add" className="grid gap-x-8 lg:grid-cols-2">
           {rows.map((row) => (
             <li key={row.id} className="flex items-baseline gap-3 border-b py-1.5 text-sm">

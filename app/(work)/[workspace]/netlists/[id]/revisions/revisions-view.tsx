@@ -25,7 +25,7 @@ export function RevisionsView({ workspace, netlist, page, first }: Props) {
   const router = useRouter();
   const base = `/${workspace}/netlists/${netlist.id}`;
   const [chosen, setChosen] = useState<readonly number[]>([]);
-  const { data, error } = useQuery({
+  const { data, error, refetch } = useQuery({
     queryKey: ["revisions", netlist.id, page],
     initialData: first,
     queryFn: async () => {
@@ -69,6 +69,9 @@ export function RevisionsView({ workspace, netlist, page, first }: Props) {
         {error !== null && (
           <Notice tone="caution" title="This list may be out of date" announce>
             <p>{error.message}</p>
+            <Button size="small" className="mt-2" onClick={() => refetch()}>
+              Try again
+            </Button>
           </Notice>
         )}
         {data.total > 1 ? (

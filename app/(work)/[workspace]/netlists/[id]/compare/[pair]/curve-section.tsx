@@ -8,6 +8,7 @@ import { curveSet } from "@/app/_components/curves/curve-set";
 import type { CurveSource } from "@/app/_components/curves/curve-source";
 import { difference } from "@/app/_components/curves/difference";
 import { type Overlaid, overlay } from "@/app/_components/curves/overlay";
+import { Button } from "@/app/_components/ui/button";
 import { FailedState, LoadingState } from "@/app/_components/ui/states";
 import { Tabs } from "@/app/_components/ui/tabs";
 import { fetchColumns } from "../../../../runs/[id]/fetch-run";
@@ -23,7 +24,7 @@ interface Props {
 
 /** The curves of both revisions over one ruler, or what the later one has over the earlier. */
 export function CurveSection({ workspace, before, after, state, onState }: Props) {
-  const { data, error } = useQueries({
+  const { data, error, again } = useQueries({
     queries: [before.run, after.run].map((run) => ({
       queryKey: ["run-columns", run],
       queryFn: async () => (await fetchColumns(run, null))!.document,
@@ -32,6 +33,7 @@ export function CurveSection({ workspace, before, after, state, onState }: Props
     combine: (results) => ({
       data: results.map((one) => one.data),
       error: results.find((one) => one.error !== null)?.error ?? null,
+      again: () => results.filter((one) => one.error !== null).forEach((one) => void one.refetch()),
     }),
   });
   const [old, now] = data;
@@ -43,7 +45,10 @@ export function CurveSection({ workspace, before, after, state, onState }: Props
   }, [old, now, before.revision, after.revision, state.mode]);
   if (error !== null)
     return (
-      <FailedState title="The curves could not be fetched">
+      <FailedState
+        title="The curves could not be fetched"
+        action={<Button onClick={again}>Try again</Button>}
+      >
         <p>{error.message}</p>
       </FailedState>
     );
