@@ -18,7 +18,7 @@ const ADAM = "adam.admin@northbench.example";
 
 /** The first draft. Invented, as everything in the demo. */
 const DRAFT = `# Northbench Instruments (invented): the turbidity head, from its first draft to the one that holds. All of it is made up.
-# Scattered light against straight light, as a logarithm: half a volt a decade, whatever the lamp and the room do.
+# Scattered light against transmitted light, as a logarithm: half a volt a decade, whatever the lamp and the room do.
 
 title "Turbidity head (invented)"
 
@@ -33,7 +33,7 @@ ground -- IS : current I_scatter -- s
 QS : array { c = s, b = ground, e = ls }
 AS : amp   { plus = ground, minus = s, out = ls }
 
-# the straight light, for now a fixed voltage
+# the transmitted light, for now a fixed voltage
 ground -- VF : voltage -557 mV -- lr
 
 # the difference
@@ -67,19 +67,19 @@ require bend between -10 mV and 10 mV                                           
 export const STORY: readonly Chapter[] = [
   {
     by: ERIK,
-    message: "First draft of the turbidity head: a fixed voltage in place of the straight light (invented)",
+    message: "First draft of the turbidity head: a fixed voltage in place of the transmitted light (invented)",
     changes: [["", DRAFT]],
     breaks: ["zero", "scale"],
   },
   {
     by: ERIK,
-    message: "A log stage for the straight light: the drift of the zero drops out",
+    message: "A log stage for the transmitted light: the drift of the zero drops out",
     changes: [
-      ["let  R_sum     =", "let  I_straight = 1 µA\nlet  R_sum     ="],
+      ["let  R_sum     =", "let  I_direct  = 1 µA\nlet  R_sum     ="],
       [
-        "# the straight light, for now a fixed voltage\nground -- VF : voltage -557 mV -- lr\n",
-        `# log stage of the straight light
-ground -- IR : current I_straight -- r
+        "# the transmitted light, for now a fixed voltage\nground -- VF : voltage -557 mV -- lr\n",
+        `# log stage of the transmitted light
+ground -- IR : current I_direct -- r
 QR : array { c = r, b = ground, e = lr }
 AR : amp   { plus = ground, minus = r, out = lr }
 `,
