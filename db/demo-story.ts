@@ -67,7 +67,8 @@ require bend between -10 mV and 10 mV                                           
 export const STORY: readonly Chapter[] = [
   {
     by: ERIK,
-    message: "First draft of the turbidity head: a fixed voltage in place of the transmitted light (invented)",
+    message:
+      "First draft of the turbidity head: a fixed voltage in place of the transmitted light (invented)",
     changes: [["", DRAFT]],
     breaks: ["zero", "scale"],
   },
