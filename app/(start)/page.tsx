@@ -48,6 +48,12 @@ export default async function StartPage() {
             multipliers and root extractors, over decades of signal and over temperature. The team sees one
             curve, one revision and one account of every point.
           </p>
+          <p className="mt-6 flex flex-wrap gap-3">
+            <ButtonLink href="/docs/tour">Take the five-minute tour</ButtonLink>
+            <ButtonLink href="/docs/examples" tone="quiet">
+              See the examples
+            </ButtonLink>
+          </p>
         </div>
         <div className="grid gap-x-10 gap-y-8 border-t py-8 lg:grid-cols-[minmax(0,5fr)_minmax(0,7fr)]">
           <section aria-labelledby="netlist" className="min-w-0">

@@ -13,7 +13,7 @@ export const DOCS_GROUPS: readonly { readonly title: string; readonly pages: rea
       {
         href: "/docs/tour",
         label: "First tour",
-        about: "Five minutes, from an empty sheet to a requirement that holds.",
+        about: "Five minutes and seven steps, done on a live sheet that sees what you do.",
       },
       {
         href: "/docs/examples",

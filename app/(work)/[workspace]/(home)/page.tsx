@@ -35,12 +35,18 @@ export default async function HomePage({ params }: Props) {
           <EmptyState
             title="This workspace is empty"
             action={
-              <ButtonLink tone="primary" href={`${path}/netlists`}>
-                Go to netlists
-              </ButtonLink>
+              <div className="flex flex-wrap gap-3">
+                <ButtonLink tone="primary" href={`${path}/netlists`}>
+                  Go to netlists
+                </ButtonLink>
+                <ButtonLink href="/docs/tour">Take the five-minute tour</ButtonLink>
+              </div>
             }
           >
-            <p>Make a netlist or upload .swn files; what needs attention will then stand here.</p>
+            <p>
+              Make a netlist or upload .swn files; what needs attention will then stand here. The tour makes a
+              first one with you.
+            </p>
           </EmptyState>
         </div>
       ) : (
