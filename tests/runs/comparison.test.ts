@@ -168,6 +168,8 @@ it.each([
   [0, 1, "+1.00 V"],
   [1e-9, 1, "+1.00 V"],
   [3, 3, "the same"],
+  [0.5, 0.5 + 1.1e-16, "the same"],
+  [0, 0, "the same"],
 ])("a value that was %d and is %d V moved by %s", (from, to, words) => {
   expect(movedInWords(from, to, "V").replaceAll("\u202f", " ")).toBe(words);
 });

@@ -11,7 +11,8 @@ export interface LineStyle {
 }
 
 const COLOURS = ["--trace-1", "--trace-2", "--trace-3", "--trace-4", "--trace-5", "--trace-6"] as const;
-const DASHES = [[], [2, 3], [7, 4], [11, 3, 2, 3], [4, 2], [14, 5]] as const;
+/** Each is told from the others in 14 px, the length of a sample beside a name. */
+const DASHES = [[], [2, 3], [7, 4], [9, 2, 1, 2], [4, 2], [3, 2, 1, 2, 1, 2]] as const;
 /** From cold to warm; each keeps 3:1 against the paper of both themes, and so does what lies between. */
 const GRADE = ["--trace-1", "--trace-4", "--trace-2"] as const;
 

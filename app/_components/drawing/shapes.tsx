@@ -7,23 +7,32 @@ const HALO = "stroke-surface [paint-order:stroke] [stroke-linejoin:round] [strok
 
 const OWN = (name: string) => name.slice(name.lastIndexOf(".") + 1);
 
-/** A box: its name, what it is, and the names of its pins at its edges. A block that can be opened has a second border. */
-export function ChipShape({
-  chip: { box, x, y, width, height, leftPins, rightPins },
-  isChosen,
-}: {
-  readonly chip: Chip;
+interface Choosable {
+  /** The reader has chosen it. */
   readonly isChosen: boolean;
+}
+
+/** The border of a place on the drawing. */
+function Border({
+  place: { x, y, width, height },
+  ...look
+}: {
+  readonly place: Pick<Frame, "x" | "y" | "width" | "height">;
+  readonly className: string;
+  readonly strokeWidth: number;
+  readonly strokeDasharray?: string;
 }) {
+  return <rect x={x} y={y} width={width} height={height} rx={2} {...look} />;
+}
+
+/** A box: its name, what it is, and the names of its pins at its edges. A block that can be opened has a second border. */
+export function ChipShape({ chip, isChosen }: Choosable & { readonly chip: Chip }) {
+  const { box, x, y, width, height, leftPins, rightPins } = chip;
   const middle = x + leftPins + (width - leftPins - rightPins - (box.inside === null ? 0 : OPENER)) / 2;
   return (
     <g>
-      <rect
-        x={x}
-        y={y}
-        width={width}
-        height={height}
-        rx={2}
+      <Border
+        place={chip}
         className={isChosen ? "fill-wash stroke-accent" : "fill-surface stroke-edge"}
         strokeWidth={isChosen ? 2.5 : 1}
       />
@@ -56,13 +65,7 @@ export function ChipShape({
  * Lines from pins to their rails, with a dot where they are joined; a thick upright piece of the ground rail, or a ring where a pin
  * is open. Each sort is one path, since a large drawing has thousands.
  */
-export function WiresShape({
-  wires,
-  isChosen,
-}: {
-  readonly wires: readonly Wire[];
-  readonly isChosen: boolean;
-}) {
+export function WiresShape({ wires, isChosen }: Choosable & { readonly wires: readonly Wire[] }) {
   const line = isChosen ? "stroke-accent" : "stroke-ink";
   const fill = isChosen ? "fill-accent" : "fill-ink";
   const grounded = wires.filter(({ net }) => net === "ground");
@@ -106,13 +109,7 @@ export function PinName({ wire: { pin, side, x, y } }: { readonly wire: Wire }) 
 }
 
 /** The line of a net, under its name. */
-export function RailShape({
-  rail: { net, x, top, bottom },
-  isChosen,
-}: {
-  readonly rail: Rail;
-  readonly isChosen: boolean;
-}) {
+export function RailShape({ rail: { net, x, top, bottom }, isChosen }: Choosable & { readonly rail: Rail }) {
   return (
     <g>
       <line
@@ -136,21 +133,12 @@ export function RailShape({
 }
 
 /** The border round what stands inside an open block, with its name. */
-export function FrameShape({
-  frame: { box, x, y, width, height },
-  isChosen,
-}: {
-  readonly frame: Frame;
-  readonly isChosen: boolean;
-}) {
+export function FrameShape({ frame, isChosen }: Choosable & { readonly frame: Frame }) {
+  const { box, x, y } = frame;
   return (
     <g>
-      <rect
-        x={x}
-        y={y}
-        width={width}
-        height={height}
-        rx={2}
+      <Border
+        place={frame}
         className={classNames("fill-none", isChosen ? "stroke-accent" : "stroke-edge")}
         strokeWidth={isChosen ? 2 : 1}
         strokeDasharray="5 3"

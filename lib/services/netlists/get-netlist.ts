@@ -6,7 +6,7 @@ import { user } from "@/db/schema/user";
 import type { Actor } from "@/lib/permissions/actor";
 import { authorize } from "@/lib/permissions/authorize";
 import { findNetlist } from "./find-netlist";
-import { lastRunOf } from "./last-run";
+import { lastRunOf, netlistColumns } from "./last-run";
 import type { NetlistRow } from "./list-netlists";
 
 /** A netlist with the text of its newest revision. */
@@ -24,24 +24,7 @@ export async function getNetlist(actor: Actor, id: string): Promise<NetlistDetai
   authorize(actor, "netlist.read", asked);
   const lastRun = lastRunOf(db);
   const [row] = await db
-    .select({
-      id: netlist.id,
-      number: netlist.number,
-      title: netlist.title,
-      owner: user.name,
-      updatedAt: netlist.updatedAt,
-      revision: revision.number,
-      text: revision.text,
-      hash: revision.hash,
-      lastRun: {
-        id: lastRun.id,
-        number: lastRun.number,
-        status: lastRun.status,
-        verdict: lastRun.verdict,
-        points: lastRun.points,
-        pointsFailed: lastRun.pointsFailed,
-      },
-    })
+    .select({ ...netlistColumns(lastRun), text: revision.text, hash: revision.hash })
     .from(netlist)
     .innerJoin(user, eq(user.id, netlist.createdBy))
     .innerJoin(revision, and(eq(revision.netlistId, netlist.id), eq(revision.number, netlist.latestRevision)))

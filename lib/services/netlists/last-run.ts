@@ -3,6 +3,7 @@ import type { Queryable } from "@/db/client";
 import { netlist } from "@/db/schema/netlist";
 import { revision } from "@/db/schema/revision";
 import { run } from "@/db/schema/run";
+import { user } from "@/db/schema/user";
 import type { Verdict } from "@/lib/analyses/result";
 
 /** The newest run of a netlist, as lists show it. */
@@ -40,4 +41,23 @@ function newest(db: Queryable, ofRow: SQL | undefined) {
     .orderBy(desc(run.number))
     .limit(1)
     .as("last_run");
+}
+
+/** What is selected of a last run, which may be missing. */
+export function shownRun(lastRun: ReturnType<typeof newest>) {
+  const { id, number, status, verdict, points, pointsFailed } = lastRun;
+  return { id, number, status, verdict, points, pointsFailed };
+}
+
+/** What every query of netlists selects; it joins the owner and, at its side, `lastRun`. */
+export function netlistColumns(lastRun: ReturnType<typeof newest>) {
+  return {
+    id: netlist.id,
+    number: netlist.number,
+    title: netlist.title,
+    owner: user.name,
+    updatedAt: netlist.updatedAt,
+    revision: netlist.latestRevision,
+    lastRun: shownRun(lastRun),
+  };
 }

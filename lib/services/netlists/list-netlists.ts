@@ -6,7 +6,7 @@ import { user } from "@/db/schema/user";
 import type { Actor } from "@/lib/permissions/actor";
 import { authorize } from "@/lib/permissions/authorize";
 import { readInput } from "../read-input";
-import { type LastRun, lastRunOf } from "./last-run";
+import { type LastRun, lastRunOf, netlistColumns } from "./last-run";
 import { listInput } from "./schemas";
 import { containsWords, searching } from "./search";
 
@@ -48,22 +48,7 @@ export async function listNetlists(
     );
     const isNewest = and(eq(revision.netlistId, netlist.id), eq(revision.number, netlist.latestRevision));
     const found = await db
-      .select({
-        id: netlist.id,
-        number: netlist.number,
-        title: netlist.title,
-        owner: user.name,
-        updatedAt: netlist.updatedAt,
-        revision: netlist.latestRevision,
-        lastRun: {
-          id: lastRun.id,
-          number: lastRun.number,
-          status: lastRun.status,
-          verdict: lastRun.verdict,
-          points: lastRun.points,
-          pointsFailed: lastRun.pointsFailed,
-        },
-      })
+      .select(netlistColumns(lastRun))
       .from(netlist)
       .innerJoin(user, eq(user.id, netlist.createdBy))
       .innerJoin(revision, isNewest)

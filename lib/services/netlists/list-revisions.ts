@@ -7,7 +7,7 @@ import type { Actor } from "@/lib/permissions/actor";
 import { authorize } from "@/lib/permissions/authorize";
 import { readInput } from "../read-input";
 import { findNetlist } from "./find-netlist";
-import { type LastRun, lastRunOfRevision } from "./last-run";
+import { type LastRun, lastRunOfRevision, shownRun } from "./last-run";
 import { revisionsInput } from "./schemas";
 import { Summaries } from "./summaries";
 
@@ -44,14 +44,7 @@ export async function listRevisions(
       author: user.name,
       savedAt: revision.createdAt,
       text: revision.text,
-      lastRun: {
-        id: lastRun.id,
-        number: lastRun.number,
-        status: lastRun.status,
-        verdict: lastRun.verdict,
-        points: lastRun.points,
-        pointsFailed: lastRun.pointsFailed,
-      },
+      lastRun: shownRun(lastRun),
     })
     .from(revision)
     .innerJoin(user, eq(user.id, revision.authorId))

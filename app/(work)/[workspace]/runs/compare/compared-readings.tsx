@@ -102,7 +102,8 @@ function Moved({ from, to }: { readonly from: Read | null; readonly to: Read | n
 /** "+1.20 mV, +2.4 %": as it is and in relation to the first; the first alone where that is 0 or a part of a relation too small to say. */
 export function movedInWords(from: number, to: number, unit: string): string {
   const by = to - from;
-  if (by === 0) return "the same";
+  // Closer than the digits that rounding leaves is no movement.
+  if (Math.abs(by) <= 1e-11 * Math.abs(from)) return "the same";
   const signed = (text: string) => `${by < 0 ? "\u2212" : "+"}${text}`;
   const moved = signed(formatQuantity(Math.abs(by), unit, 3));
   const percent = Math.abs((100 * by) / from);

@@ -1,4 +1,5 @@
 import { formatKnob } from "@/app/_components/curves/figures-in-words";
+import { counted } from "@/app/_components/ui/count";
 import { Cell, HeadCell, Table } from "@/app/_components/ui/table";
 import type { Budget } from "@/lib/analyses/budget";
 import type { KeptJudgement } from "@/lib/analyses/verdict";
@@ -7,6 +8,8 @@ import { formatQuantity } from "@/lib/units/quantity";
 /** Budgets that are printed, and parts of each. */
 const BUDGETS = 12;
 const PARTS = 8;
+/** Share of the variance below which a part is left out: it would be printed as nothing. */
+const NOTHING = 0.0005;
 
 /** What the tolerances cost, the costliest part first: of what each requirement is about, then of the readings. */
 export function ReportBudgets({ judgement }: { readonly judgement: KeptJudgement | null }) {
@@ -38,9 +41,10 @@ function named(kind: string, budgets: readonly Budget[] | null) {
 }
 
 function BudgetTable({ budget }: { readonly budget: Budget }) {
-  const { reading, unit, at, nominal, sigma, parts } = budget;
+  const { reading, unit, at, nominal, sigma } = budget;
+  const parts = budget.parts.filter(({ share }) => share >= NOTHING).slice(0, PARTS);
   const place = at.map((one) => `${one.knob} ${formatKnob(one, one.value, 4)}`).join(", ");
-  const rest = parts.length - PARTS;
+  const rest = budget.parts.length - parts.length;
   return (
     <section data-whole aria-label={`Error budget of ${reading}`}>
       <Table>
@@ -48,7 +52,7 @@ function BudgetTable({ budget }: { readonly budget: Budget }) {
           {reading}
           {place !== "" && ` at ${place}`}: nominal {formatQuantity(nominal, unit, 4)}, standard deviation{" "}
           {formatQuantity(sigma, unit, 3)}
-          {rest > 0 && `; ${rest} smaller parts left out`}
+          {rest > 0 && `; ${counted(rest, "smaller part")} left out`}
         </caption>
         <thead>
           <tr>
@@ -58,7 +62,7 @@ function BudgetTable({ budget }: { readonly budget: Budget }) {
           </tr>
         </thead>
         <tbody>
-          {parts.slice(0, PARTS).map(({ part, parameter, effect, share }) => (
+          {parts.map(({ part, parameter, effect, share }) => (
             <tr key={`${part} ${parameter}`}>
               <th scope="row" className="border-b py-1 pr-4 text-left font-normal">
                 {[part, parameter].filter(Boolean).join(" ")}
