@@ -1,7 +1,8 @@
 import { randomUUID } from "node:crypto";
 import { AppError, type ErrorCode } from "@/lib/errors";
 
-const STATUS: Readonly<Record<ErrorCode, number>> = {
+/** The HTTP status of each error. */
+export const STATUS: Readonly<Record<ErrorCode, number>> = {
   invalid: 400,
   "signed out": 401,
   "not allowed": 403,
