@@ -18,6 +18,7 @@ import { type Beside, storeyViews } from "./storey-views";
 import { storeysOf } from "./storeys";
 import { summarise } from "./summary-sentence";
 import { useBands } from "./use-bands";
+import { useCurveDeeds } from "./use-curve-deeds";
 import { useZoom } from "./use-zoom";
 import { valuesOf } from "./view-range";
 import { shownWorst } from "./worst-draw";
@@ -66,6 +67,7 @@ export function CurveFigure(props: Props) {
   const spoken = useDeferredValue(cursor);
   const narrow = brief ? "brief" : frameWidth < NARROW;
 
+  useCurveDeeds(set, view, onView);
   const choice = useMemo(() => choiceOf(set, view), [set, view]);
   const drawn = useMemo(() => drawnChoice(set, view), [set, view]);
   const lines = useMemo(() => storeysOf(set, drawn), [set, drawn]);
