@@ -42,7 +42,7 @@ export const CLAUSE_MEANINGS: Readonly<Record<string, string>> = {
 export const FUNCTION_MEANINGS: Readonly<Record<FunctionName, string>> = {
   exp: "the exponential of a pure number",
   ln: "the natural logarithm of a pure number",
-  log10: "the decadic logarithm of a pure number",
+  log10: "the logarithm of a pure number to the base 10",
   sqrt: "the square root",
   abs: "the size without its sign",
   min: "the lowest of two or more values",
@@ -63,5 +63,5 @@ export const CONSTANT_MEANINGS: Readonly<Record<string, string>> = {
 export const SIGNAL_MEANINGS: Readonly<Record<"v" | "i" | "p", string>> = {
   v: "voltage: of a net to ground, of an element the left net less the right one, so that of a `voltage` element is minus its value",
   i: "current: through an element from left to right, or into a pin",
-  p: "power that an element takes up",
+  p: "power that an element absorbs; below zero where it delivers",
 };
