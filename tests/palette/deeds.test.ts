@@ -39,6 +39,12 @@ describe("what answers to a query", () => {
     expect(found("queue revision")).toEqual([]);
   });
 
+  it("is one of very many only when it is asked for", () => {
+    const one = deed("example", "Example: log ratio head", { onlyAsked: true });
+    expect(answering("reading", [one], "")).toEqual([]);
+    expect(answering("reading", [one], "ratio")).toHaveLength(1);
+  });
+
   it("reads the narrow space of a quantity as a space", () => {
     expect(rank(deed("t", "Hide trace at 25\u202f°C"), "25 °c")).toBe(1);
   });

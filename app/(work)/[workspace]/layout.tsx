@@ -8,6 +8,7 @@ import { Logo } from "@/app/_components/ui/logo";
 import { Providers } from "@/app/_components/ui/providers";
 import { THEME_COOKIE, themeOf } from "@/app/_components/ui/theme";
 import { DOCS_GROUPS } from "@/app/docs/_parts/pages";
+import { GROUPS } from "@/app/docs/examples/groups";
 import { actorFor } from "@/lib/auth/actor";
 import { requestedPath } from "@/lib/auth/requested-path";
 import { listWorkspaces } from "@/lib/services/workspaces/list-workspaces";
@@ -21,6 +22,14 @@ const READING = [
   { href: "/docs", title: "Reference", also: "documentation help" },
   ...DOCS_GROUPS.flatMap(({ title, pages }) =>
     pages.map(({ href, label, about }) => ({ href, title: label, also: `reference ${title} ${about}` })),
+  ),
+  ...GROUPS.flatMap(({ title, names }) =>
+    names.map((name) => ({
+      href: `/docs/examples/${name}`,
+      title: `Example: ${name.replaceAll("-", " ")}`,
+      also: title,
+      onlyAsked: true,
+    })),
   ),
 ];
 

@@ -21,6 +21,8 @@ export interface Deed {
   readonly note?: string;
   /** Other words that find it. */
   readonly also?: string;
+  /** Left out while nothing is typed: one of very many. */
+  readonly onlyAsked?: boolean;
   /** Keys that do the same, by their names on a usual keyboard. */
   readonly keys?: string;
   /** Does it, or the page to open. */
@@ -40,9 +42,9 @@ const NO_MATCH = Number.POSITIVE_INFINITY;
  * How well a deed answers to what was typed: 0 where its words begin with it, 1 where each typed word begins a word of them, 2
  * where each occurs in them, 3 where another word had to help; infinite where it does not answer.
  */
-export function rank({ words, note = "", also = "" }: Deed, query: string): number {
+export function rank({ words, note = "", also = "", onlyAsked }: Deed, query: string): number {
   const typed = plain(query);
-  if (typed === "") return 0;
+  if (typed === "") return onlyAsked ? NO_MATCH : 0;
   const own = plain(words);
   if (own.startsWith(typed)) return 0;
   const parts = typed.split(" ");

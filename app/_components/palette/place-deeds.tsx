@@ -10,6 +10,7 @@ export interface ReadingPage {
   readonly href: string;
   readonly title: string;
   readonly also?: string;
+  readonly onlyAsked?: boolean;
 }
 
 /** Offers what every page offers: the other pages, the reference, the keys. Draws nothing. */
@@ -48,6 +49,6 @@ export function PlaceDeeds({
   return null;
 }
 
-function readingDeed({ href, title, also }: ReadingPage): Deed {
-  return { id: href, words: title, ...(also === undefined ? {} : { also }), does: href };
+function readingDeed({ href, title, ...rest }: ReadingPage): Deed {
+  return { id: href, words: title, ...rest, does: href };
 }
