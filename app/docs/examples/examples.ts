@@ -1,4 +1,4 @@
-import { readdir, readFile } from "node:fs/promises";
+import { readFile } from "node:fs/promises";
 import { join } from "node:path";
 import { counted } from "@/app/_components/ui/count";
 import { compile } from "@/lib/analyses/compile";
@@ -41,13 +41,6 @@ export function planInWords({ elements, points, draws, requirements, seek }: Exa
   if (requirements > 0) parts.push(counted(requirements, "requirement"));
   if (seek !== null) parts.push(`up to ${seek} operating points each`);
   return parts.join(", ");
-}
-
-/** Names of the files that no group has; empty while the groups are whole. */
-export async function ungrouped(): Promise<string[]> {
-  const files = await readdir(/* turbopackIgnore: true */ FOLDER);
-  const names = files.filter((file) => file.endsWith(".swn")).map((file) => file.slice(0, -4));
-  return names.filter((name) => !GROUPS.some((group) => group.names.includes(name))).sort();
 }
 
 function read(name: string, text: string): Example {

@@ -1,14 +1,14 @@
 import type { SparklineData } from "@/app/_components/ui/sparkline";
 import { compile } from "@/lib/analyses/compile";
-import { rowLength } from "@/lib/analyses/plan";
-import { solveRange } from "@/lib/analyses/sweep";
+import { coarsePlaces, excerptOf, thinned } from "@/lib/analyses/excerpt";
+import { solvePoints } from "@/lib/analyses/sweep";
 import type { Example } from "./examples";
 
-/** Points of a sketch, at most. */
-const MOST = 64;
+/** Points of a sketch, about. */
+const PLACES = 40;
 const known = new Map<string, SparklineData | null>();
 
-/** The first trace of an example over its first sweep, nominal, in small; solved once a process. */
+/** The first trace of an example over its first sweep, nominal, at the usual settings, in small; solved once a process. */
 export function sketchOf({ name, text }: Pick<Example, "name" | "text">): SparklineData | null {
   if (!known.has(name)) known.set(name, solve(text));
   return known.get(name) ?? null;
@@ -16,20 +16,21 @@ export function sketchOf({ name, text }: Pick<Example, "name" | "text">): Sparkl
 
 function solve(text: string): SparklineData | null {
   const { job } = compile(text);
-  const axis = job?.plan.axes[0];
-  if (job === null || axis === undefined) return null;
-  const values = solveRange(job, 0, rowLength(job.plan)).traces[0] ?? new Float64Array();
+  if (job === null || job.plan.axes.length === 0) return null;
+  const row = excerptOf(job, new Map());
+  const thin = thinned(row, coarsePlaces(row, PLACES));
+  // A sketch proves nothing, so the proof of each point is left out.
+  const steps = solvePoints(thin.job, thin.from, thin.to, false);
+  let step = steps.next();
+  while (step.done !== true) step = steps.next();
+  const values = step.value.traces[0] ?? new Float64Array();
+  const axis = thin.plan.axes[0]!;
   const isRatio = axis.scale === "logarithmic";
   const along = axis.values.map((value) => (isRatio ? Math.log10(value) : value));
-  const first = along[0]!;
-  const width = along.at(-1)! - first;
-  const step = Math.max(1, Math.ceil(along.length / MOST));
-  const places = along.flatMap((_, index) =>
-    index % step === 0 || index === along.length - 1 ? [index] : [],
-  );
+  const width = along.at(-1)! - along[0]!;
   return {
-    x: places.map((index) => (along[index]! - first) / width),
-    y: places.map((index) => (Number.isFinite(values[index]) ? values[index]! : null)),
+    x: along.map((value) => (value - along[0]!) / width),
+    y: along.map((_, index) => (Number.isFinite(values[index]) ? values[index]! : null)),
     decades: isRatio ? Math.abs(width) : 0,
   };
 }
