@@ -1,3 +1,4 @@
+import { EXIT } from "./exit-codes";
 import type { Command, Option } from "./options";
 
 const HELP: Option = { name: "help", takes: null, about: "say this" };
@@ -67,16 +68,18 @@ export const FORMAT: Command = {
 
 export const COMMANDS: readonly Command[] = [CHECK, RUN, FORMAT];
 
-const FILES =
+/** What a command takes; for the help and the reference. */
+export const FILES =
   'FILE is a netlist; `-` is standard input. `use "NAME"` brings in NAME.swn from the folder of the file.';
-const CODES = [
-  "0  everything holds",
-  "1  a requirement broke or has no data; a file is not canonical",
-  "2  the command was not understood, or a file is not there",
-  "3  a netlist has an error",
-  "4  a file may not be read or written",
-  "5  the engine broke down, or the time was up",
-  "130  interrupted",
+/** What the program leaves with; for the help and the reference. */
+export const CODES: readonly (readonly [code: number, means: string])[] = [
+  [EXIT.holds, "everything holds"],
+  [EXIT.broken, "a requirement broke or has no data; a file is not canonical"],
+  [EXIT.usage, "the command was not understood, or a file is not there"],
+  [EXIT.netlist, "a netlist has an error"],
+  [EXIT.notAllowed, "a file may not be read or written"],
+  [EXIT.service, "the engine broke down, or the time was up"],
+  [EXIT.interrupted, "interrupted"],
 ];
 
 /** The help of the program as a whole. */
@@ -89,7 +92,7 @@ export function overview(): string {
     ...COMMANDS.map(({ name, about }) => `  ${name.padEnd(8)}${about}`),
     "",
     "`sweepwright COMMAND --help` says more. It leaves with",
-    ...CODES.map((line) => `  ${line}`),
+    ...CODES.map(([code, means]) => `  ${code}  ${means}`),
     "",
   ].join("\n");
 }
