@@ -3,11 +3,13 @@
 import { Button } from "@/app/_components/ui/button";
 import { Dialog } from "@/app/_components/ui/dialog";
 import { KEY_LISTS } from "./key-lists";
+import { keepQuestionKey, useQuestionKey } from "./question-key";
 import { useShownKeys } from "./shown-keys";
 
 /** Every key of the program, by where it works. */
 export function KeyDialog({ open, onOpenChange }: { open: boolean; onOpenChange: (open: boolean) => void }) {
   const keys = useShownKeys();
+  const isOn = useQuestionKey();
   return (
     <Dialog
       open={open}
@@ -34,6 +36,15 @@ export function KeyDialog({ open, onOpenChange }: { open: boolean; onOpenChange:
           </section>
         ))}
       </div>
+      <label className="inline-flex min-h-7 items-center gap-2 text-sm">
+        <input
+          type="checkbox"
+          checked={isOn}
+          onChange={({ target }) => keepQuestionKey(target.checked)}
+          className="size-3.5 accent-accent"
+        />
+        A question mark alone opens this list; without it, “Find or do…” does
+      </label>
     </Dialog>
   );
 }

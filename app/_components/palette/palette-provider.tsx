@@ -6,6 +6,7 @@ import { createContext, type ReactNode, useEffect, useRef, useState } from "reac
 import { isApple } from "@/app/_components/editor/keyboard";
 import { DeedContext, DeedRegistry } from "./deed-registry";
 import type { Entry } from "./deeds";
+import { isQuestionKeyOn } from "./question-key";
 
 // No page waits for either; the first comes as soon as the page rests, since what is typed after its key is meant for it.
 const loadPalette = () => import("./palette-dialog").then((found) => found.PaletteDialog);
@@ -87,7 +88,7 @@ export function PaletteProvider({
 function askedBy(event: KeyboardEvent): Shown | null {
   const command = isApple() ? event.metaKey && !event.ctrlKey : event.ctrlKey && !event.metaKey;
   if (command && !event.shiftKey && event.key.toLowerCase() === "k") return "find";
-  if (event.key !== "?" || event.ctrlKey || event.metaKey) return null;
+  if (event.key !== "?" || event.ctrlKey || event.metaKey || !isQuestionKeyOn()) return null;
   const takesText =
     event.target instanceof Element &&
     event.target.closest("input, textarea, select, [contenteditable], [role=textbox], [role=menu]") !== null;
