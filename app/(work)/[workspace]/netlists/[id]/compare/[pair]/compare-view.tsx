@@ -1,7 +1,7 @@
 "use client";
 
 import { useCallback, useEffect, useState } from "react";
-import { type DiffForm, TextDiff } from "@/app/_components/diff/text-diff";
+import type { DiffForm } from "@/app/_components/diff/text-diff";
 import { PageHeader } from "@/app/_components/ui/page-header";
 import type { TextChanges } from "@/lib/language/changes/of-texts";
 import {
@@ -16,6 +16,7 @@ import { formIn, type Side } from "./compare-shapes";
 import { CurveSection } from "./curve-section";
 import { RunLack } from "./run-lack";
 import { SideFacts } from "./side-facts";
+import { TextSection } from "./text-section";
 import { VerdictTable } from "./verdict-table";
 
 interface Props {
@@ -123,19 +124,7 @@ export function CompareView({ workspace, netlist, before, after, changes, search
             </div>
           </section>
         )}
-        <section aria-labelledby="text" className="min-w-0">
-          <h2 id="text" className="caption">
-            Text
-          </h2>
-          <div className="mt-2">
-            <TextDiff
-              before={{ text: before.text, label: labels[0] }}
-              after={{ text: after.text, label: labels[1] }}
-              form={form}
-              onForm={setForm}
-            />
-          </div>
-        </section>
+        <TextSection texts={[before.text, after.text]} labels={labels} form={form} onForm={setForm} />
       </div>
     </>
   );

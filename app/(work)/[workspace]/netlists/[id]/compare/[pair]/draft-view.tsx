@@ -2,7 +2,7 @@
 
 import { useRouter } from "next/navigation";
 import { useEffect, useMemo, useState } from "react";
-import { type DiffForm, TextDiff } from "@/app/_components/diff/text-diff";
+import type { DiffForm } from "@/app/_components/diff/text-diff";
 import { ButtonLink } from "@/app/_components/ui/button";
 import { SelectField } from "@/app/_components/ui/field";
 import { PageHeader } from "@/app/_components/ui/page-header";
@@ -13,6 +13,7 @@ import { ChangeList } from "../../change-list";
 import type { Draft } from "../../drafts";
 import { formIn, type Side } from "./compare-shapes";
 import { SideFacts } from "./side-facts";
+import { TextSection } from "./text-section";
 import { useNewestDraft } from "./use-newest-draft";
 
 interface Props {
@@ -149,19 +150,7 @@ function Compared({
             A draft has no run. Queue it from the sheet, and its verdicts and curves can be compared too.
           </p>
         </section>
-        <section aria-labelledby="text" className="min-w-0">
-          <h2 id="text" className="caption">
-            Text
-          </h2>
-          <div className="mt-2">
-            <TextDiff
-              before={{ text: before.text, label: labels[0] }}
-              after={{ text: draft.text, label: labels[1] }}
-              form={form}
-              onForm={setForm}
-            />
-          </div>
-        </section>
+        <TextSection texts={[before.text, draft.text]} labels={labels} form={form} onForm={setForm} />
       </div>
     </>
   );
