@@ -1,3 +1,4 @@
+import Link from "next/link";
 import { ButtonLink } from "@/app/_components/ui/button";
 import { Wordmark } from "@/app/_components/ui/logo";
 import { NetlistText } from "@/app/_components/ui/netlist-text";
@@ -36,7 +37,12 @@ export default async function StartPage() {
     <div className="mx-auto max-w-7xl px-4 md:px-6">
       <header className="flex h-14 items-center justify-between">
         <Wordmark />
-        {enter}
+        <div className="flex items-center gap-4">
+          <Link href="/docs" className="inline-flex min-h-8 items-center text-quiet text-sm hover:text-ink">
+            Reference
+          </Link>
+          {enter}
+        </div>
       </header>
       <main>
         <div className="border-t py-10 md:py-16">

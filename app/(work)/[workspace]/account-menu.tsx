@@ -96,6 +96,7 @@ export function AccountMenu({
       <MenuLabel>Theme</MenuLabel>
       <MenuChoice value={theme} options={THEMES} onChange={choose} />
       <MenuSeparator />
+      <MenuLink href="/docs">Reference</MenuLink>
       <MenuItem onSelect={leave}>Sign out</MenuItem>
     </Menu>
   );

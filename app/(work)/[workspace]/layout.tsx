@@ -67,6 +67,12 @@ export default async function WorkspaceLayout({ children, params }: Props) {
             <Navigation workspace={workspace} />
             <div className="ml-auto flex items-center gap-3">
               <PaletteButton />
+              <Link
+                href="/docs"
+                className="hidden min-h-8 items-center text-quiet text-sm hover:text-ink md:inline-flex"
+              >
+                Reference
+              </Link>
               <span className="hidden text-quiet text-sm lg:inline">
                 {workspaces.find(({ slug }) => slug === workspace)?.name}
               </span>
