@@ -22,8 +22,9 @@ interface Props {
 export function LiveBox({ text, title, hasKnobs, children }: Props) {
   const place = useRef<HTMLElement>(null);
   const heading = useId();
-  const isSeen = useInView(place);
-  const live = useLive(text, isSeen);
+  const { isNear, wasNear } = useInView(place);
+  // A page may hold dozens of these: one that is scrolled far away ends its thread, and solves anew when it comes back.
+  const live = useLive(text, isNear);
   const lines = Math.min(LINES.most, Math.max(LINES.fewest, text.trimEnd().split("\n").length + 1));
   return (
     <section
@@ -46,7 +47,7 @@ export function LiveBox({ text, title, hasKnobs, children }: Props) {
           <LiveText live={live}>{children}</LiveText>
         </div>
         <div className="min-w-0 px-4 py-2">
-          <LivePreview live={live} isSeen={isSeen} isBrief={!hasKnobs} />
+          <LivePreview live={live} isSeen={wasNear} isBrief={!hasKnobs} />
         </div>
       </div>
     </section>

@@ -2,20 +2,26 @@
 
 import { type RefObject, useEffect, useState } from "react";
 
-/** Px below and above the window within which something counts as seen: it is to be ready when one comes to it. */
+/** Px below and above the window within which something counts as near: it is to be ready when one comes to it. */
 const AHEAD = "300px";
 
-/** True once an element has been near the window. */
-export function useInView(place: RefObject<Element | null>): boolean {
-  const [isSeen, setSeen] = useState(false);
+/** Whether an element is near the window, and whether it ever was. */
+export function useInView(place: RefObject<Element | null>): {
+  readonly isNear: boolean;
+  readonly wasNear: boolean;
+} {
+  const [view, setView] = useState({ isNear: false, wasNear: false });
   useEffect(() => {
-    if (isSeen || place.current === null) return;
+    if (place.current === null) return;
     const watch = new IntersectionObserver(
-      (entries) => entries.some((entry) => entry.isIntersecting) && setSeen(true),
+      (entries) => {
+        const isNear = entries.at(-1)?.isIntersecting ?? false;
+        setView((before) => ({ isNear, wasNear: before.wasNear || isNear }));
+      },
       { rootMargin: `${AHEAD} 0px` },
     );
     watch.observe(place.current);
     return () => watch.disconnect();
-  }, [isSeen, place]);
-  return isSeen;
+  }, [place]);
+  return view;
 }
