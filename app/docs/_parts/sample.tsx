@@ -36,3 +36,8 @@ export function Sample({ text, shown = text }: { readonly text: string; readonly
     </div>
   );
 }
+
+/** The title that a netlist gives itself. */
+export function titleOf(text: string): string {
+  return /^title "([^"]*)"/.exec(text)?.[1] ?? "A netlist";
+}

@@ -1,8 +1,13 @@
 import type { ReactNode } from "react";
+import { LiveExample } from "@/app/_components/live-example/live-example";
+import { format } from "@/lib/language/format";
 import { Entry, Points, Text } from "../_parts/docs-page";
 import { Prose } from "../_parts/prose";
-import { Sample } from "../_parts/sample";
+import { Sample, titleOf } from "../_parts/sample";
 import type { StatementText } from "./statements";
+
+/** Statements whose example is tried out rather than read. */
+const LIVE: ReadonlySet<string> = new Set(["statement.sweep", "statement.require"]);
 
 /** A statement: its forms, what it says, what it asks, and a whole netlist that uses it. */
 export function StatementEntry({
@@ -21,7 +26,12 @@ export function StatementEntry({
         <Prose>{says}</Prose>
       </Text>
       <Points items={rules.map((rule) => <Prose key={rule}>{rule}</Prose>)} />
-      {sample !== null && <Sample text={sample} />}
+      {sample !== null &&
+        (LIVE.has(id) ? (
+          <LiveExample text={format(sample)} title={titleOf(sample)} />
+        ) : (
+          <Sample text={sample} />
+        ))}
     </Entry>
   );
 }

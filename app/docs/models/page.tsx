@@ -1,18 +1,23 @@
 import type { Metadata } from "next";
+import { LiveExample } from "@/app/_components/live-example/live-example";
 import type { ElementKind } from "@/lib/language/ast";
+import { format } from "@/lib/language/format";
 import { KINDS } from "@/lib/language/kinds";
 import { ROOM_TEMPERATURE, thermalVoltage } from "@/lib/units/constants";
 import { formatQuantity } from "@/lib/units/quantity";
 import { DocsPage, Points, Section, Text } from "../_parts/docs-page";
 import { Formula } from "../_parts/math";
 import { Prose } from "../_parts/prose";
-import { Sample } from "../_parts/sample";
+import { Sample, titleOf } from "../_parts/sample";
 import { MODELS, TEMPERATURE } from "./equations";
 import { ParameterTable } from "./parameter-table";
 
 export const metadata: Metadata = { title: "Models" };
 
 const ORDER = Object.keys(KINDS) as ElementKind[];
+
+/** Kinds whose example is tried out rather than read. */
+const LIVE: ReadonlySet<ElementKind> = new Set<ElementKind>(["diode", "npn", "opamp"]);
 
 const OUTLINE = [
   { id: "temperature", label: "Temperature" },
@@ -86,7 +91,11 @@ function Model({ kind }: { readonly kind: ElementKind }) {
       ))}
       <ParameterTable kind={kind} />
       {remarks.length > 0 && <Points items={remarks.map((text) => <Prose key={text}>{text}</Prose>)} />}
-      <Sample text={sample} />
+      {LIVE.has(kind) ? (
+        <LiveExample text={format(sample)} title={titleOf(sample)} hasKnobs />
+      ) : (
+        <Sample text={sample} />
+      )}
       {sources.length > 0 && (
         <p className="mt-2 text-quiet text-sm">Sources: {sources.map(({ cites }) => cites).join("; ")}.</p>
       )}

@@ -1,10 +1,12 @@
 import type { Metadata } from "next";
+import { LiveExample } from "@/app/_components/live-example/live-example";
+import { format } from "@/lib/language/format";
 import { REDUCTIONS } from "@/lib/language/reductions";
 import { DocsPage, Entry, Points, Section, Text } from "../_parts/docs-page";
 import { FilterField } from "../_parts/filter-field";
 import { Formula } from "../_parts/math";
 import { Prose } from "../_parts/prose";
-import { Sample } from "../_parts/sample";
+import { Sample, titleOf } from "../_parts/sample";
 import { Forms } from "../language/statement-entry";
 import { CONTRACT_SAMPLE, Judging, Points as PointAccount, Statistics } from "./judging";
 import { REDUCTION_TEXTS, readingNetlist } from "./reductions";
@@ -49,7 +51,7 @@ export default function ReadingsPage() {
             }
           </Prose>
         </Text>
-        <Sample text={readingNetlist("")} />
+        <LiveExample text={format(readingNetlist(""))} title="The sweep of the examples" />
         {NAMES.map((name) => (
           <Reduction key={name} name={name} />
         ))}
@@ -86,7 +88,7 @@ export default function ReadingsPage() {
             </Text>
           </Entry>
         ))}
-        <Sample text={CONTRACT_SAMPLE} />
+        <LiveExample text={format(CONTRACT_SAMPLE)} title={titleOf(CONTRACT_SAMPLE)} />
       </Section>
       <Judging />
       <Statistics />
