@@ -1,7 +1,6 @@
 "use client";
 
 import { useContext } from "react";
-import { Keys } from "@/app/_components/ui/button";
 import { ShowContext } from "./palette-provider";
 import { useShownKeys } from "./shown-keys";
 
@@ -20,7 +19,9 @@ export function PaletteButton() {
       <span>
         Find<span className="hidden md:inline"> or do…</span>
       </span>
-      <Keys>{keys("Ctrl K")}</Keys>
+      <span aria-hidden="true" className="figures hidden text-xs md:inline">
+        {keys("Ctrl K")}
+      </span>
     </button>
   );
 }
