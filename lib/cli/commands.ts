@@ -74,7 +74,10 @@ export const FILES =
 /** What the program leaves with; for the help and the reference. */
 export const CODES: readonly (readonly [code: number, means: string])[] = [
   [EXIT.holds, "everything holds"],
-  [EXIT.broken, "a requirement broke or has no data; a file is not canonical"],
+  [
+    EXIT.broken,
+    "a requirement broke or has no data, or points failed and nothing is required; a file is not canonical",
+  ],
   [EXIT.usage, "the command was not understood, or a file is not there"],
   [EXIT.netlist, "a netlist has an error"],
   [EXIT.notAllowed, "a file may not be read or written"],

@@ -78,6 +78,15 @@ describe("sweepwright run", { timeout: 60_000 }, () => {
     expect(err).toMatch(/^-: 11 points in/u);
   });
 
+  test("calls nothing held where nothing is required, and leaves with 1 where points failed", async () => {
+    const solved = await shell(["run", "--quiet", "-"], { input: divider("") });
+    expect([solved.code, solved.out.includes("nothing is required: 11 points solved")]).toEqual([0, true]);
+    const { code, out } = await shell(["run", "--quiet", "examples/reversed-input.swn"]);
+    expect(code).toBe(1);
+    expect(out).toMatch(/nothing is required: 41 of 51 points solved, .* each of these proved/);
+    expect(out).toMatch(/not solved at V_in = −500\smV: came to a stand; unsettled: /u);
+  });
+
   test("tells what costs a requirement the most, also one that need not hold in every draw", async () => {
     const input = divider('require out within 0.5 V ± 1 % at V_in = 1 V in 90 % of draws as "half"')
       .replace("R1 : resistor 1 kΩ", "R1 : resistor 1 kΩ ± 1 %")

@@ -129,7 +129,7 @@ describe("cautions", () => {
       /Hazardous voltage .*75\.00 V apart.*more than 60 V DC\. Follow local codes and have a licensed/,
     );
     expect(both).toMatch(
-      /Heat R1 takes in 2\.88 W at V_in −12 V .*250 mW.*stated power\. Follow local codes/,
+      /Heat R1 dissipates 2\.88 W at V_in −12 V .*250 mW.*stated power\. Follow local codes/,
     );
     expect(both.match(/no proof of safety/g)).toHaveLength(3);
   });

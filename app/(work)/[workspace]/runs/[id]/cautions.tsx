@@ -19,7 +19,7 @@ const ADVICE =
 
 interface Props {
   readonly span: VoltageSpan | null;
-  /** The part that takes in most power, once that is known. */
+  /** The part that dissipates most, once that is known. */
   readonly power: PowerPeak | null;
   /** Random draws of the run beside the nominal design. */
   readonly draws: number;
@@ -42,7 +42,7 @@ export function Cautions({ span, power, draws }: Props) {
       {power !== null && power.watts > HOT && (
         <Notice tone="caution" title="Heat">
           <p>
-            {power.element} takes in {formatQuantity(power.watts, "W", 3)}
+            {power.element} dissipates {formatQuantity(power.watts, "W", 3)}
             {placeOf(power)} in the nominal design, more than the {formatQuantity(HOT, "W", 3)} that an
             ordinary small part stands; no model here knows how hot it becomes. Check it, and every other
             part, against its stated power. {ADVICE}
