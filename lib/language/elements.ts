@@ -73,7 +73,16 @@ export class ElementCheck {
   element(wired: Wired): Element {
     const { kind, model, pins, name, isWhole, from, to } = wired;
     const { follows, parameters } = KINDS[kind];
-    const owner = { text: `the ${kind} ${quote(name.text)}`, model, name, isWhole, pins: KINDS[kind].pins };
+    const owner = {
+      // Words for a message that is seldom needed are put together when it is.
+      get text() {
+        return `the ${kind} ${quote(name.text)}`;
+      },
+      model,
+      name,
+      isWhole,
+      pins: KINDS[kind].pins,
+    };
     const law = follows === "law" ? this.laws.of(wired) : null;
     const settings = follows === "law" ? this.laws.others(wired.settings) : wired.settings;
     const params = this.parameters.of(settings, model === null ? parameters : {}, owner);
@@ -91,15 +100,21 @@ export class ElementCheck {
       this.report.error("FRM3", wired.name, message);
       return null;
     }
-    const what = `The value of the ${wired.kind} ${quote(name)}`;
-    const typed = this.quantities.fitting(wired.value, { ...shape, what });
+    const want = {
+      dimension: shape.dimension,
+      unit: shape.unit,
+      get what() {
+        return `The value of the ${wired.kind} ${quote(name)}`;
+      },
+    };
+    const typed = this.quantities.fitting(wired.value, want);
     if (typed === null) return null;
     const number = this.nominal.of(typed);
     if (this.quantities.finite(number, wired.value) && wired.kind === "resistor" && number <= 0) {
       this.report.error(
         "UNI8",
         wired.value,
-        `${what} must be above 0 Ω; to join two nets give them one name.`,
+        `${want.what} must be above 0 Ω; to join two nets give them one name.`,
       );
     }
     const tolerance = this.quantities.tolerance(wired.tolerance, typed);

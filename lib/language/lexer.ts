@@ -15,6 +15,11 @@ const STRING = /"(?:[^"\\\n]|\\[^\n]?)*("?)/uy;
 const UNIT_FACTOR = /(?:[\p{L}_][\p{L}0-9_]*|°C|℃|%)(?:⁻?[⁰¹²³⁴⁵⁶⁷⁸⁹])?/uy;
 const STRAY = /[^\s\p{L}0-9_#"+\-*/^=<>(){},:.±≤≥−×·]+/uy;
 
+/** The symbols by the character that they begin with, the longest first. */
+const SYMBOLS_FROM: ReadonlyMap<string, readonly (readonly [string, string])[]> = new Map(
+  SYMBOLS.map(([first]) => [first[0]!, SYMBOLS.filter(([spelling]) => spelling[0] === first[0])]),
+);
+
 /** Characters that a keyboard or a word processor puts for one of ours. */
 const LOOK_ALIKE: ReadonlyMap<string, string> = new Map([
   ["–", "-"],
@@ -93,10 +98,16 @@ export function tokenize(text: string, report: Report): Token[] {
           `${quote(number[0])} is beyond the largest number that can be kept, about 1.8e308.`,
         );
       }
-      push("number", number[0].length, number[0].toLowerCase().replace(/^\./u, "0."));
+      const digits = number[0].toLowerCase();
+      push("number", digits.length, first === "." ? `0${digits}` : digits);
       continue;
     }
-    const word = match(WORD);
+    const plain = plainWordEnd(text, at);
+    if (plain > at) {
+      push("word", plain - at, text.slice(at, plain));
+      continue;
+    }
+    const word = plain === at ? null : match(WORD);
     if (word !== null) {
       push("word", word[0].length, word[0].replaceAll("\u2126", "Ω").replaceAll("\u03bc", "µ"));
       continue;
@@ -108,7 +119,7 @@ export function tokenize(text: string, report: Report): Token[] {
       push(closed ? "string" : "unknown", string[0].length, string[0]);
       continue;
     }
-    const symbol = SYMBOLS.find(([spelling]) => text.startsWith(spelling, at));
+    const symbol = SYMBOLS_FROM.get(first)?.find(([spelling]) => text.startsWith(spelling, at));
     if (symbol !== undefined) {
       push("symbol", symbol[0].length, symbol[1]);
       continue;
@@ -119,6 +130,21 @@ export function tokenize(text: string, report: Report): Token[] {
     push("unknown", stray.length, stray);
   }
   return tokens;
+}
+
+/**
+ * Where the word of plain letters, digits and underscores that begins at `at` ends, as almost all words are: `at` where a plain character
+ * begins none, −1 where a letter beyond ASCII has to be looked at.
+ */
+function plainWordEnd(text: string, at: number): number {
+  let end = at;
+  for (; end < text.length; end++) {
+    const code = text.charCodeAt(end);
+    if (code >= 128) return -1;
+    const isLetter = (code >= 97 && code <= 122) || (code >= 65 && code <= 90) || code === 95;
+    if (!isLetter && (end === at || code < 48 || code > 57)) break;
+  }
+  return end;
 }
 
 /** The unit that begins at `at`, just after a number: a symbol, then more of them joined by `/` or `·` without spaces. */

@@ -30,6 +30,8 @@ export class Nominal {
 
   /** Coherent SI value; NaN for an expression with signals. */
   of(typed: Typed): number {
+    // As most values are, in a long text thousands of them.
+    if (typed.op === "constant") return typed.value;
     return evaluate(typed, {
       knob: (name) => this.values.get(name) ?? Number.NaN,
       let: (name) => this.values.get(name) ?? Number.NaN,

@@ -40,6 +40,7 @@ export class Parameters {
     owner: Owner,
   ): Map<string, NamedValue> {
     const params = new Map<string, NamedValue>();
+    if (settings.length === 0 && Object.keys(known).length === 0) return params;
     const seen = new Set<string>();
     for (const { name, value, tolerance, from, to } of settings) {
       if (name.text === "") continue;
@@ -110,7 +111,7 @@ export class Parameters {
   private checkTogether(
     settings: readonly Setting[],
     known: Readonly<Record<string, ParameterKind>>,
-    { text, name, isWhole }: Owner,
+    owner: Owner,
   ): void {
     const given = new Map(settings.map((setting) => [setting.name.text, setting.name]));
     for (const [key, { needs }] of Object.entries(known)) {
@@ -120,9 +121,10 @@ export class Parameters {
       this.report.error("FRM14", word, message);
     }
     const missing = Object.keys(known).find((key) => known[key]!.absent === null && !given.has(key));
-    if (missing === undefined || !isWhole) return;
+    if (missing === undefined || !owner.isWhole) return;
     const { unit, about } = known[missing]!;
     const example = unit === "1" ? "10" : `1 f${unit}`;
+    const { text, name } = owner;
     const message = `${text[0]!.toUpperCase()}${text.slice(1)} lacks ${quote(missing)} (${about}); give it as \`${missing} = ${example}\` or what it is.`;
     this.report.error("NAM6", name, message);
   }

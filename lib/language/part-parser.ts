@@ -6,6 +6,9 @@ import { quote } from "./token";
 
 export const ZERO = "A net is called by a name, and the one that voltages are counted from is `ground`.";
 
+/** What may follow the kind of a part that has no value. */
+const BEHIND_KIND: ReadonlySet<string> = new Set(["--", "±", "{", ","]);
+
 /** Reads what is wired: paths, devices, models, and the settings and tolerances inside them. */
 export class PartParser {
   constructor(
@@ -76,7 +79,8 @@ export class PartParser {
     const name = cursor.wantWord("An element such as `R1 : resistor 1 kΩ`");
     cursor.wantSymbol(":", "the name of the element");
     const kind = cursor.wantWord("A kind or model after `:`");
-    const bare = cursor.atEnd || ["--", "±", "{", ","].some((symbol) => cursor.isSymbol(symbol));
+    const { token } = cursor;
+    const bare = cursor.atEnd || (token.kind === "symbol" && BEHIND_KIND.has(token.text));
     const value = bare ? null : this.expressions.expression();
     const tolerance = this.tolerance();
     const settings = cursor.isSymbol("{") ? this.settings() : [];
