@@ -162,7 +162,7 @@ def newton(f, start):
         x += d
         if longest < mpf("1e-40"):
             return x
-    raise ArithmeticError("no convergence")
+    raise ArithmeticError("did not settle")
 
 
 print("[")
