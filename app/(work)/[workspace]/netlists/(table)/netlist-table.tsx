@@ -108,6 +108,16 @@ export function NetlistTable({ workspace, rows, sort, direction, stale, onSort, 
 
 function Row({ workspace, row, move }: { readonly row: NetlistRow } & Pick<Props, "workspace" | "move">) {
   const { lastRun } = row;
+  const moveButton = move !== null && (
+    <Button
+      size="small"
+      tone="quiet"
+      aria-label={`${move.words} ${row.title}`}
+      onClick={() => move.onMove(row)}
+    >
+      {move.words}
+    </Button>
+  );
   return (
     <tr>
       <Cell figure className={classNames(WIDE, "w-12 text-quiet")}>
@@ -123,6 +133,7 @@ function Row({ workspace, row, move }: { readonly row: NetlistRow } & Pick<Props
         <p className="text-quiet text-xs md:hidden">
           {row.owner}, revision {row.revision}, <When iso={row.updatedAt} />
         </p>
+        <div className="-ml-2 empty:hidden md:hidden">{moveButton}</div>
       </Cell>
       <Cell className={WIDE}>{row.owner}</Cell>
       <Cell figure className={WIDE}>
@@ -144,18 +155,7 @@ function Row({ workspace, row, move }: { readonly row: NetlistRow } & Pick<Props
           </Link>
         )}
       </Cell>
-      {move !== null && (
-        <Cell className={classNames(WIDE, "py-1! text-right")}>
-          <Button
-            size="small"
-            tone="quiet"
-            aria-label={`${move.words} ${row.title}`}
-            onClick={() => move.onMove(row)}
-          >
-            {move.words}
-          </Button>
-        </Cell>
-      )}
+      {move !== null && <Cell className={classNames(WIDE, "py-1! text-right")}>{moveButton}</Cell>}
     </tr>
   );
 }
