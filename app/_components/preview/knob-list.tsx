@@ -1,7 +1,7 @@
 "use client";
 
 import "./knob.css";
-import { useId, useMemo } from "react";
+import { memo, useId, useMemo } from "react";
 import { formatKnob } from "@/app/_components/curves/figures-in-words";
 import { Button } from "@/app/_components/ui/button";
 import { KnobControl } from "./knob-control";
@@ -20,7 +20,8 @@ interface Props {
 }
 
 /** Every knob of the file as a control that moves the preview, and nothing but the preview until it is written into the text. */
-export function KnobList({ outline, turned, place, onTurn, onReset, onWrite }: Props) {
+export const KnobList = memo(function KnobList(props: Props) {
+  const { outline, turned, place, onTurn, onReset, onWrite } = props;
   const heading = useId();
   const scales = useMemo(
     () => new Map(outline.knobs.map((knob) => [knob, knobScale(knob, outline)])),
@@ -74,7 +75,7 @@ export function KnobList({ outline, turned, place, onTurn, onReset, onWrite }: P
       )}
     </section>
   );
-}
+});
 
 function nearestTo(values: readonly number[], wanted: number): number {
   return values.reduce((best, one) => (Math.abs(one - wanted) < Math.abs(best - wanted) ? one : best));

@@ -1,3 +1,4 @@
+import { isAlike } from "./alike";
 import type {
   Figures,
   KnobOutline,
@@ -193,7 +194,10 @@ export class Previewing {
   }
 
   /** Knobs that a new text does not have, or has at the same value, are no longer turned; nor are those that would leave their range. */
-  private outlined(outline: Outline): void {
+  private outlined(told: Outline): void {
+    const before = this.preview.outline;
+    // Most key strokes change a value and not what the text is about; then nothing that shows it is drawn anew.
+    const outline = before !== null && isAlike(before, told) ? before : told;
     const turned = new Map(
       [...this.preview.turned].filter(([name, value]) => {
         const knob = outline.knobs.find((one) => one.name === name);
@@ -203,7 +207,8 @@ export class Previewing {
     const place = placeOf(outline, turned);
     const moved = place !== this.preview.place || turned.size !== this.preview.turned.size;
     // The figures are counted in the order of the outline that they came with.
-    this.tell({ outline, turned, place, figures: null });
+    const figures = outline === before ? this.preview.figures : null;
+    if (outline !== before || moved) this.tell({ outline, turned, place, figures });
     if (moved) this.sendSoon();
   }
 
