@@ -25,8 +25,9 @@ export function PlainLines({ text, label, onPress }: Props) {
       aria-label={label}
       // biome-ignore lint/a11y/noNoninteractiveTabindex: text that scrolls must be reachable from the keyboard
       tabIndex={0}
-      onClick={(event) => onPress?.(offsetUnder(event.clientX, event.clientY))}
-      onKeyDown={(event) => event.key === "Enter" && onPress?.(0)}
+      // A page rendered by the server alone hears of nothing, and may not hand a handler on.
+      onClick={onPress && ((event) => onPress(offsetUnder(event.clientX, event.clientY)))}
+      onKeyDown={onPress && ((event) => event.key === "Enter" && onPress(0))}
       className="absolute inset-0 overflow-auto bg-surface pt-2"
     >
       <ol className="font-(family-name:--font-figures)" style={metrics}>
