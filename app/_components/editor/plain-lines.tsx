@@ -59,7 +59,7 @@ export function PlainLines({ text, label, onPress }: Props) {
 }
 
 /** Offset in the text of the character under a point of the window: the end of its line where the point lies beside it. */
-function offsetUnder(x: number, y: number): number {
+export function offsetUnder(x: number, y: number): number {
   const line = document.elementFromPoint(x, y)?.closest<HTMLElement>("[data-at]");
   const code = line?.querySelector("code");
   if (line == null || code == null) return 0;

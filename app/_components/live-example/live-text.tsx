@@ -1,8 +1,8 @@
 "use client";
 
 import dynamic from "next/dynamic";
-import type { MouseEvent, ReactNode } from "react";
-import { PlainLines } from "@/app/_components/editor/plain-lines";
+import type { ReactNode } from "react";
+import { offsetUnder, PlainLines } from "@/app/_components/editor/plain-lines";
 import { Button } from "@/app/_components/ui/button";
 import type { Live } from "./use-live";
 
@@ -49,23 +49,20 @@ export function LiveText({ live, onRun, children }: Props) {
         {isEditing ? (
           <LiveEditor live={live} onRun={onRun} />
         ) : (
-          // The button over the text does the same from the keyboard.
-          // biome-ignore lint/a11y/noStaticElementInteractions: a press into the text is a shorter way to the same
-          // biome-ignore lint/a11y/useKeyWithClickEvents: as above
-          <div className="absolute inset-0 cursor-text" onClick={(event) => beginAt(event, live)}>
+          // biome-ignore lint/a11y/noStaticElementInteractions: a press into the text is a shorter way to what the button over it does
+          <div
+            className="absolute inset-0 cursor-text"
+            onClick={(event) => {
+              // What is marked is to be copied.
+              if (document.getSelection()?.isCollapsed === false) return;
+              live.begin(offsetUnder(event.clientX, event.clientY));
+            }}
+            onKeyDown={(event) => event.key === "Enter" && live.begin()}
+          >
             {text === original ? children : <PlainLines text={text} label="Netlist text" />}
           </div>
         )}
       </div>
     </>
   );
-}
-
-/** Begins at the line that was pressed, unless something was marked to be copied. */
-function beginAt({ target }: MouseEvent, live: Live): void {
-  if (!(target instanceof Element) || document.getSelection()?.isCollapsed === false) return;
-  const line = target.closest("li");
-  const index = line === null ? 0 : Array.from(line.parentElement?.children ?? []).indexOf(line);
-  const before = live.text.split("\n").slice(0, index);
-  live.begin(before.reduce((sum, one) => sum + one.length + 1, 0));
 }
