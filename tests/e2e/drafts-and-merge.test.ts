@@ -3,35 +3,28 @@ import { mkdtempSync, rmSync } from "node:fs";
 import { tmpdir } from "node:os";
 import { join } from "node:path";
 import { type Browser, chromium, type Page } from "playwright-core";
-import { afterAll, beforeAll, expect, test } from "vitest";
+import { afterAll, afterEach, beforeAll, expect, test } from "vitest";
 import {
   baseUrl,
+  closePages,
   expectAccessible,
   expectNoSidewaysScroll,
   launchBrowser,
-  openPage,
+  openPageAs,
   picture,
   signIn,
   type Who,
 } from "./harness";
-import { converterText, makeNetlist, openSheet, PATIENT, post, save, typeAtEnd } from "./sheet-steps";
+import { addRevision, converterText, makeNetlist, openSheet, PATIENT, save, typeAtEnd } from "./sheet-steps";
 
 let browser: Browser;
 beforeAll(async () => {
   browser = await launchBrowser();
 });
+afterEach(() => closePages(browser));
 afterAll(() => browser?.close());
 
-async function signedIn(who: Who): Promise<Page> {
-  const { page } = await openPage(browser);
-  await signIn(page, who);
-  return page;
-}
-
-async function addRevision(page: Page, id: string, upon: number, text: string, message?: string) {
-  const body = { base: upon, text, ...(message === undefined ? {} : { message }) };
-  expect((await post(page, `/api/v1/netlists/${id}/revisions`, body)).status()).toBe(201);
-}
+const signedIn = async (who: Who): Promise<Page> => (await openPageAs(browser, who)).page;
 
 /** What stands in the editor; only for texts that fit its window. */
 async function shownText(page: Page): Promise<string> {

@@ -3,7 +3,17 @@ import type { Browser, Page } from "playwright-core";
 import { afterAll, beforeAll, describe, expect, it } from "vitest";
 import { decodeColumns } from "@/lib/analyses/columns-document";
 import type { RunDocument } from "@/lib/analyses/result";
-import { expectAccessible, launchBrowser, openPage, picture, signIn } from "./harness";
+import {
+  expectAccessible,
+  expectNoSidewaysScroll,
+  LOOKS,
+  launchBrowser,
+  look,
+  openPage,
+  picture,
+  signIn,
+  WORKSPACE,
+} from "./harness";
 import { DRAWN, settled, startRun } from "./run-steps";
 
 /** Invented. */
@@ -104,8 +114,14 @@ describe("the printed report", () => {
     expect(words).toContain('require v <= 0.5 V as "ceiling"');
     expect(words).toMatch(/saved by .+ on \d{4}-\d\d-\d\d/);
     expect(words).toMatch(/[0-9a-f]{64}/);
-    await expectAccessible(page);
-    await picture(page, "report");
+    expect(words).toMatch(/in 12 random draws of the tolerances/);
+    for (const one of LOOKS) {
+      await look(page, one);
+      expect(await page.locator("[data-figure]:visible").getAttribute("data-figure")).toBe(one.colorScheme);
+      await expectAccessible(page);
+      await expectNoSidewaysScroll(page);
+      await picture(page, `report-${one.colorScheme}-${one.width}`);
+    }
     for (const format of ["A4", "Letter"]) {
       const pdf = (await page.pdf({ tagged: true, format, preferCSSPageSize: false })).toString("latin1");
       expect(pdf.startsWith("%PDF-")).toBe(true);
@@ -114,6 +130,36 @@ describe("the printed report", () => {
         expect(pdf, `${format}: ${tag}`).toMatch(new RegExp(`/S /${tag}\\b`));
       }
     }
+  });
+
+  it("is printed on white paper from a dark screen too, its lines told apart without colour", async () => {
+    await look(page, { colorScheme: "dark", width: 1024 });
+    await page.emulateMedia({ media: "print" });
+    const figure = page.locator("[data-figure]:visible");
+    expect(await figure.getAttribute("data-figure")).toBe("light");
+    const dashes = await figure
+      .locator("path[stroke-width='1.75']")
+      .evaluateAll((lines) => lines.map((line) => line.getAttribute("stroke-dasharray") ?? "whole"));
+    expect(new Set(dashes.slice(0, 2)).size).toBe(2);
+    await picture(page, "report-printed");
+    await page.emulateMedia({ media: "screen", colorScheme: "light" });
+  });
+
+  it.each([
+    { query: "Reversed input", has: "Failed points", says: /10 points failed/ },
+    { query: "Trigger of two transistors", has: "Operating points", says: /3 branches/ },
+  ])("tells of $query what a plain run does not have, accessibly", async ({ query, has, says }) => {
+    const search = new URLSearchParams({ workspace: WORKSPACE, query, status: "done", page: "1", size: "1" });
+    const { rows } = await (await page.request.get(`/api/v1/runs?${search}`)).json();
+    await page.goto(`/${WORKSPACE}/runs/${rows[0].id}/report`);
+    await page.getByRole("heading", { level: 2, name: has }).waitFor();
+    expect(await page.locator("article").textContent()).toMatch(says);
+    await expectAccessible(page);
+    const pdf = (await page.pdf({ tagged: true, format: "A4" })).toString("latin1");
+    expect(pdf).toContain("/StructTreeRoot");
+  });
+
+  it("raised no fault in the page over all these steps", () => {
     expect(faults).toEqual([]);
   });
 });

@@ -77,6 +77,33 @@ export async function openPage(browser: Browser, options: BrowserContextOptions 
     viewport: { width: 1280, height: 800 },
     ...options,
   });
+  return openIn(context);
+}
+
+const signedIn = new WeakMap<Browser, Map<Who, BrowserContext>>();
+
+/**
+ * An empty page of somebody who has signed in. All pages of one person share cookies and what was fetched: the editor comes once a file,
+ * not once a test. Those left open by the tests before are closed by `closePages`.
+ */
+export async function openPageAs(browser: Browser, who: Who): Promise<Opened> {
+  const contexts = signedIn.get(browser) ?? new Map<Who, BrowserContext>();
+  signedIn.set(browser, contexts);
+  const known = contexts.get(who);
+  if (known !== undefined) return openIn(known);
+  const opened = await openPage(browser);
+  await signIn(opened.page, who);
+  contexts.set(who, opened.page.context());
+  return opened;
+}
+
+/** Closes every page of `openPageAs`, and keeps who has signed in. For after each test. */
+export async function closePages(browser: Browser): Promise<void> {
+  const pages = [...(signedIn.get(browser)?.values() ?? [])].flatMap((context) => context.pages());
+  await Promise.all(pages.map((page) => page.close()));
+}
+
+async function openIn(context: BrowserContext): Promise<Opened> {
   const page = await context.newPage();
   page.setDefaultTimeout(20_000);
   awaitStreamed(page);
@@ -164,4 +191,20 @@ export async function expectAccessible(page: Page, leaveOut: readonly string[] =
 export async function expectNoSidewaysScroll(page: Page): Promise<void> {
   const overflow = await page.evaluate(() => document.documentElement.scrollWidth - window.innerWidth);
   expect(overflow).toBeLessThanOrEqual(0);
+}
+
+/** The looks in which every page is judged: a wide window, a tablet at night, a telephone. */
+export const LOOKS = [
+  { colorScheme: "light", width: 1920 },
+  { colorScheme: "dark", width: 1024 },
+  { colorScheme: "light", width: 360 },
+] as const;
+
+/** Gives a page a theme and a width, as when the reader changes them. */
+export async function look(
+  page: Page,
+  { colorScheme, width }: { readonly colorScheme: "light" | "dark"; readonly width: number },
+): Promise<void> {
+  await page.emulateMedia({ colorScheme });
+  await page.setViewportSize({ width, height: 900 });
 }

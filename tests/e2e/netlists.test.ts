@@ -4,7 +4,9 @@ import {
   expectAccessible,
   expectNoSidewaysScroll,
   launchBrowser,
+  look,
   openPage,
+  openPageAs,
   signIn,
   WORKSPACE,
 } from "./harness";
@@ -173,8 +175,8 @@ describe("the table of netlists", () => {
 
   for (const colorScheme of ["light", "dark"] as const) {
     it(`passes axe and fits a phone, ${colorScheme}`, async () => {
-      const phone = await openPage(browser, { colorScheme, viewport: { width: 360, height: 740 } });
-      await signIn(phone.page, "erik");
+      const phone = await openPageAs(browser, "erik");
+      await look(phone.page, { colorScheme, width: 360 });
       await phone.page.goto(LIST);
       await phone.page.getByRole("table").waitFor();
       await expectAccessible(phone.page);
@@ -182,7 +184,7 @@ describe("the table of netlists", () => {
       await phone.page.getByRole("button", { name: "New netlist" }).click();
       await phone.page.getByRole("dialog").waitFor();
       await expectAccessible(phone.page);
-      await phone.page.context().close();
+      await phone.page.close();
     });
   }
 

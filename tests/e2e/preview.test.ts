@@ -1,28 +1,23 @@
 import { readFileSync } from "node:fs";
-import type { Browser, BrowserContextOptions, Page } from "playwright-core";
-import { afterAll, beforeAll, expect, test } from "vitest";
+import type { Browser, Page } from "playwright-core";
+import { afterAll, afterEach, beforeAll, expect, test } from "vitest";
 import type { RunDocument } from "@/lib/analyses/result";
 import {
+  closePages,
   expectAccessible,
   expectNoSidewaysScroll,
   launchBrowser,
-  openPage,
+  openPageAs,
   picture,
-  signIn,
   WORKSPACE,
 } from "./harness";
 import { editorOf, makeNetlist, openSheet, PATIENT, typeAtEnd, writeText } from "./sheet-steps";
 
 let browser: Browser;
-/** Erik is signed in once for all tests. */
-let signedIn: BrowserContextOptions;
 beforeAll(async () => {
   browser = await launchBrowser();
-  const { page } = await openPage(browser);
-  await signIn(page, "erik");
-  signedIn = { storageState: await page.context().storageState() };
-  await page.context().close();
 });
+afterEach(() => closePages(browser));
 afterAll(() => browser?.close());
 
 /** A current into a junction; the voltage of the resistor beside it is plain arithmetic. */
@@ -45,7 +40,7 @@ require top <= 12 V as "limit"
 
 /** An engineer on the sheet of a netlist of their own, with its preview solved. */
 async function onSheet(text: string) {
-  const opened = await openPage(browser, signedIn);
+  const opened = await openPageAs(browser, "erik");
   const id = await makeNetlist(opened.page, text);
   await openSheet(opened.page, id);
   await solved(opened.page);
@@ -184,9 +179,8 @@ show a.v
 
 test("a viewer turns the knobs too, and writes nothing", async () => {
   const { page, id } = await onSheet(ohmText("Viewer"));
-  const { page: theirs } = await openPage(browser);
-  await signIn(theirs, "vera");
-  await page.context().close();
+  const { page: theirs } = await openPageAs(browser, "vera");
+  await page.close();
   await openSheet(theirs, id);
   await solved(theirs);
   await knob(theirs, "R_load").focus();
@@ -216,7 +210,7 @@ test("the preview equals the queued run bit for bit", async () => {
     const row = (values: readonly unknown[]) => values.slice(from, from + preview.length);
     expect(document.traces.map(({ name, values }) => [name, row(values)])).toEqual(preview.traces);
     expect(row(document.points.bound)).toEqual(preview.bound);
-    await page.context().close();
+    await page.close();
   }
 });
 

@@ -1,21 +1,24 @@
 import type { Browser, Page } from "playwright-core";
-import { afterAll, beforeAll, expect, test } from "vitest";
+import { afterAll, afterEach, beforeAll, expect, test } from "vitest";
 import {
+  closePages,
   expectAccessible,
   expectNoSidewaysScroll,
+  LOOKS,
   launchBrowser,
-  openPage,
+  look,
+  openPageAs,
   picture,
-  signIn,
   type Who,
   WORKSPACE,
 } from "./harness";
-import { converterText, makeNetlist, openSheet, PATIENT, post } from "./sheet-steps";
+import { addRevision, converterText, makeNetlist, openSheet, PATIENT, post } from "./sheet-steps";
 
 let browser: Browser;
 beforeAll(async () => {
   browser = await launchBrowser();
 });
+afterEach(() => closePages(browser));
 afterAll(() => browser?.close());
 
 /** A text with a requirement that holds with 10 kΩ and is broken with 20 kΩ: the load takes 24 µA to 69 µA of its voltage. */
@@ -33,16 +36,7 @@ async function visit(page: Page, path: string): Promise<void> {
   await page.waitForFunction(() => document.querySelector("div[hidden][id^='S:']") === null);
 }
 
-async function signedIn(who: Who): Promise<Page> {
-  const { page } = await openPage(browser);
-  await signIn(page, who);
-  return page;
-}
-
-async function addRevision(page: Page, id: string, upon: number, text: string, message?: string) {
-  const body = { base: upon, text, ...(message === undefined ? {} : { message }) };
-  expect((await post(page, `/api/v1/netlists/${id}/revisions`, body)).status()).toBe(201);
-}
+const signedIn = async (who: Who): Promise<Page> => (await openPageAs(browser, who)).page;
 
 async function runRevision(page: Page, id: string, number: number): Promise<void> {
   const answer = await post(page, "/api/v1/runs", { netlistId: id, base: number });
@@ -181,26 +175,21 @@ test("history, revision and comparison are accessible and fit their window, ligh
   const id = await makeNetlist(page, loadedText("Look at revisions"));
   await addRevision(page, id, 1, loadedText("Look at revisions", "20 kΩ"), "A lighter load");
   for (const number of [1, 2]) await runRevision(page, id, number);
-  const storageState = await page.context().storageState();
-  for (const [width, height, colorScheme] of [
-    [360, 740, "light"],
-    [1024, 768, "dark"],
-    [1920, 1080, "light"],
-  ] as const) {
-    const view = await openPage(browser, { viewport: { width, height }, colorScheme, storageState });
+  for (const one of LOOKS) {
+    const { page: view, faults } = await openPageAs(browser, "erik");
+    await look(view, one);
     for (const [name, path] of [
       ["history", "revisions"],
       ["revision", "revisions/2"],
       ["compare", "compare/1..2"],
     ] as const) {
-      await visit(view.page, `${base(id)}/${path}`);
-      if (name === "compare") await view.page.getByRole("figure").waitFor();
-      await expectAccessible(view.page);
-      await expectNoSidewaysScroll(view.page);
-      await picture(view.page, `${name}-${width}-${colorScheme}`);
+      await visit(view, `${base(id)}/${path}`);
+      if (name === "compare") await view.getByRole("figure").waitFor();
+      await expectAccessible(view);
+      await expectNoSidewaysScroll(view);
+      await picture(view, `${name}-${one.width}-${one.colorScheme}`);
     }
-    expect(view.faults).toEqual([]);
-    await view.page.context().close();
+    expect(faults).toEqual([]);
   }
 }, 240_000);
 

@@ -3,7 +3,9 @@ import { afterAll, beforeAll, describe, expect, it } from "vitest";
 import {
   expectAccessible,
   expectNoSidewaysScroll,
+  LOOKS,
   launchBrowser,
+  look,
   openPage,
   picture,
   signIn,
@@ -199,25 +201,26 @@ describe("a run that is behind its netlist", () => {
 });
 
 describe("for everyone", () => {
-  it.each([
-    { colorScheme: "light", width: 1920 },
-    { colorScheme: "dark", width: 1024 },
-    { colorScheme: "light", width: 360 },
-  ] as const)(
-    "keeps to WCAG 2.2 AA and its window, $colorScheme at $width px",
-    async ({ colorScheme, width }) => {
-      const other = await openPage(browser, { colorScheme, viewport: { width, height: 900 } });
-      await signIn(other.page, "erik");
-      await other.page.goto(`${address}?point=100&spread=read:scale`);
-      await other.page.locator('[data-point="100"]').waitFor();
-      await other.page.locator(DRAWN).first().waitFor();
-      await expectAccessible(other.page);
-      await expectNoSidewaysScroll(other.page);
-      await picture(other.page, `run-page-${colorScheme}-${width}`);
-      expect(other.faults).toEqual([]);
-      await other.page.context().close();
-    },
-  );
+  it.each(LOOKS)("keeps to WCAG 2.2 AA and its window, $colorScheme at $width px", async (one) => {
+    await look(page, one);
+    await page.goto(`${address}?point=100&spread=read:scale`);
+    await page.locator('[data-point="100"]').waitFor();
+    await page.locator(DRAWN).first().waitFor();
+    await expectAccessible(page);
+    await expectNoSidewaysScroll(page);
+    await picture(page, `run-page-${one.colorScheme}-${one.width}`);
+    expect(faults).toEqual([]);
+  });
+
+  it("has the verdicts before the curves on a telephone", async () => {
+    await look(page, LOOKS[2]);
+    await page.goto(address);
+    await page.locator(DRAWN).first().waitFor();
+    const top = async (selector: string) => (await page.locator(selector).first().boundingBox())!.y;
+    expect(await top("[data-requirement]")).toBeLessThan(await top(DRAWN));
+    await look(page, LOOKS[0]);
+    expect(Math.abs((await top("[data-requirement]")) - (await top(DRAWN)))).toBeLessThan(400);
+  });
 
   it("is read by a viewer, who is offered nothing to queue", async () => {
     const viewer = await openPage(browser);

@@ -4,6 +4,7 @@ import {
   expectAccessible,
   expectNoSidewaysScroll,
   launchBrowser,
+  look,
   openPage,
   signIn,
   WORKSPACE,
@@ -257,19 +258,17 @@ describe("for everyone", () => {
   ] as const)(
     "keeps to WCAG 2.1 AA and its window, $colorScheme at $width px",
     async ({ colorScheme, width }) => {
-      const other = await openPage(browser, { colorScheme, viewport: { width, height: 800 } });
-      await signIn(other.page, "erik");
+      await look(page, { colorScheme, width });
       for (const search of ["?point=3", "?tab=numbers&point=20"]) {
-        await other.page.goto(`${await runOf("Reversed input")}${search}`);
-        await other.page.locator("[data-point]").waitFor();
-        await expectAccessible(other.page);
-        await expectNoSidewaysScroll(other.page);
+        await page.goto(`${await runOf("Reversed input")}${search}`);
+        await page.locator("[data-point]").waitFor();
+        await expectAccessible(page);
+        await expectNoSidewaysScroll(page);
       }
-      await other.page.goto(`/${WORKSPACE}/runs`);
-      await expectAccessible(other.page);
-      await expectNoSidewaysScroll(other.page);
-      expect(other.faults).toEqual([]);
-      await other.page.context().close();
+      await page.goto(`/${WORKSPACE}/runs`);
+      await expectAccessible(page);
+      await expectNoSidewaysScroll(page);
+      expect(faults).toEqual([]);
     },
   );
 

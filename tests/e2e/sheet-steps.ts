@@ -38,6 +38,12 @@ export async function makeNetlist(page: Page, text: string): Promise<string> {
   return (await answer.json()).id;
 }
 
+/** Saves a text as the next revision of a netlist. */
+export async function addRevision(page: Page, id: string, upon: number, text: string, message?: string) {
+  const body = { base: upon, text, ...(message === undefined ? {} : { message }) };
+  expect((await post(page, `/api/v1/netlists/${id}/revisions`, body)).status()).toBe(201);
+}
+
 /** The editor of the sheet, when it has arrived: with the first sign of a hand, once the page listens for one. */
 export async function editorOf(page: Page): Promise<Locator> {
   const box = page.getByRole("textbox", { name: "Netlist text" });

@@ -1,12 +1,15 @@
 import type { Browser, Page } from "playwright-core";
-import { afterAll, beforeAll, expect, test } from "vitest";
+import { afterAll, afterEach, beforeAll, expect, test } from "vitest";
 import {
   baseUrl,
+  closePages,
   expectAccessible,
   expectNoSidewaysScroll,
   fillSignIn,
   launchBrowser,
+  look,
   openPage,
+  openPageAs,
   picture,
   signIn,
   WORKSPACE,
@@ -28,12 +31,13 @@ let browser: Browser;
 beforeAll(async () => {
   browser = await launchBrowser();
 });
+afterEach(() => closePages(browser));
 afterAll(() => browser?.close());
 
-/** An engineer on the sheet of a netlist of their own. */
-async function onSheet(title: string, text = converterText(title)) {
-  const opened = await openPage(browser);
-  await signIn(opened.page, "erik");
+/** An engineer on the sheet of a netlist of their own; `apart` with cookies of their own too. */
+async function onSheet(title: string, text = converterText(title), { apart = false } = {}) {
+  const opened = apart ? await openPage(browser) : await openPageAs(browser, "erik");
+  if (apart) await signIn(opened.page, "erik");
   const id = await makeNetlist(opened.page, text);
   await openSheet(opened.page, id);
   return { ...opened, id };
@@ -179,7 +183,7 @@ test("a tab that dies loses nothing: the next visit offers the text", async () =
 });
 
 test("a writer who was signed out elsewhere is told so, signs in, and finds the text again", async () => {
-  const { page, id } = await onSheet("Signed out");
+  const { page, id } = await onSheet("Signed out", undefined, { apart: true });
   await typeAtEnd(page, "let precious = 1 V\n");
   await page.getByText("draft on revision 1").waitFor();
   await page.context().clearCookies();
@@ -246,27 +250,21 @@ test("where the editor cannot be had, a plain box takes its place and does the s
 
 test("the sheet is accessible and fits its window, light and dark, on a phone and on a wide screen", async () => {
   const { page, id } = await onSheet("Look", `${converterText("Look")}show x = out.v / R_laod\n`);
-  const storageState = await page.context().storageState();
-  for (const [width, height] of [
-    [360, 740],
-    [1024, 768],
-    [1920, 1080],
-  ] as const) {
+  for (const width of [360, 1024, 1920]) {
     for (const colorScheme of ["light", "dark"] as const) {
-      const view = await openPage(browser, { viewport: { width, height }, colorScheme, storageState });
-      await openSheet(view.page, id);
-      await expectChecked(view.page, "1 error to mend before a run");
-      await expectAccessible(view.page);
-      await expectNoSidewaysScroll(view.page);
-      await picture(view.page, `sheet-${width}-${colorScheme}`);
-      await view.page.context().close();
+      await look(page, { colorScheme, width });
+      // What is laid out for a width is laid out when the sheet is opened; the theme follows at once.
+      if (colorScheme === "light") await openSheet(page, id);
+      await expectChecked(page, "1 error to mend before a run");
+      await expectAccessible(page);
+      await expectNoSidewaysScroll(page);
+      await picture(page, `sheet-${width}-${colorScheme}`);
     }
   }
 });
 
 test("there is no sheet of a netlist that does not exist, or is no netlist's id", async () => {
-  const { page } = await openPage(browser);
-  await signIn(page, "erik");
+  const { page } = await openPageAs(browser, "erik");
   for (const id of ["00000000-0000-4000-8000-000000000000", "nothing"]) {
     const answer = await page.goto(`/${WORKSPACE}/netlists/${id}`);
     await page.getByText("There is no such netlist in this workspace").waitFor();
