@@ -33,7 +33,7 @@ export class Judge {
     );
     switch (ended.kind) {
       case "judged":
-        return store({ judgement: ended.judgement });
+        return store({ judgement: ended.judgement, overview: ended.overview });
       case "aborted":
         return { againIn: AGAIN_MS };
       case "out of time":

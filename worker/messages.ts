@@ -45,6 +45,11 @@ export type Reply =
   | { readonly kind: "progress"; readonly pointsDone: number }
   | { readonly kind: "solved"; readonly result: StoredShard }
   | { readonly kind: "sought"; readonly result: StoredRow }
-  | { readonly kind: "judged"; readonly judgement: KeptJudgement }
+  /** With what the run looks like from afar; null where it needs no overview. */
+  | {
+      readonly kind: "judged";
+      readonly judgement: KeptJudgement;
+      readonly overview: Uint8Array<ArrayBuffer> | null;
+    }
   /** The solver threw, which it never should; `reason` is for the log. */
   | { readonly kind: "broken"; readonly reason: string };

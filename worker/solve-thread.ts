@@ -1,6 +1,7 @@
 import { parentPort } from "node:worker_threads";
 import { branchesRow } from "@/lib/analyses/branches-document";
 import { compile, type Job } from "@/lib/analyses/compile";
+import { overviewOf } from "@/lib/analyses/overview";
 import { solveRange } from "@/lib/analyses/sweep";
 import { finalJudgement } from "@/lib/analyses/verdict";
 import { storedRow } from "@/lib/services/chunks/branch-columns";
@@ -34,7 +35,9 @@ function answer(task: Task, tell: (reply: Reply) => void): Reply {
     if (job.plan.points !== task.points) {
       throw new Error(`Planned ${task.points} points, found ${job.plan.points}.`);
     }
-    if (task.kind === "judge") return { kind: "judged", judgement: finalJudgement(job, task) };
+    if (task.kind === "judge") {
+      return { kind: "judged", judgement: finalJudgement(job, task), overview: overviewOf(job, task) };
+    }
     if (task.kind === "seek") return { kind: "sought", result: storedRow(branchesRow(job, task.row)) };
     return solve(job, task, tell);
   } catch (error) {
@@ -58,6 +61,7 @@ function solve(job: Job, { from, to }: SolveTask, tell: (reply: Reply) => void):
 
 /** The memory behind the chunks, which is handed over and not copied. */
 function buffersOf(reply: Reply): ArrayBuffer[] {
+  if (reply.kind === "judged") return reply.overview === null ? [] : [reply.overview.buffer];
   if (reply.kind !== "solved" && reply.kind !== "sought") return [];
   return reply.result.columns.flatMap(({ chunks }) => chunks.map(({ data }) => data.buffer));
 }

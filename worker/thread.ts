@@ -8,7 +8,11 @@ import type { Reply, Task } from "./messages";
 export type Ended =
   | { readonly kind: "solved"; readonly result: StoredShard }
   | { readonly kind: "sought"; readonly result: StoredRow }
-  | { readonly kind: "judged"; readonly judgement: KeptJudgement }
+  | {
+      readonly kind: "judged";
+      readonly judgement: KeptJudgement;
+      readonly overview: Uint8Array<ArrayBuffer> | null;
+    }
   | { readonly kind: "aborted" }
   | { readonly kind: "out of time" }
   | { readonly kind: "out of memory" }

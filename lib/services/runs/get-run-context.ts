@@ -3,11 +3,11 @@ import { database } from "@/db/client";
 import { netlist } from "@/db/schema/netlist";
 import { revision } from "@/db/schema/revision";
 import { run } from "@/db/schema/run";
-import { compile } from "@/lib/analyses/compile";
 import { tolerancePlace } from "@/lib/analyses/tolerance-place";
 import { lineStarts, placeOf, type Span } from "@/lib/language/span";
 import type { Actor } from "@/lib/permissions/actor";
 import { authorize } from "@/lib/permissions/authorize";
+import { compiled } from "./compiled";
 import { findRun } from "./find-run";
 
 /** What a run is to be read with: where its text says what, and what has come since. Lines are counted from 1. */
@@ -34,7 +34,7 @@ export async function getRunContext(actor: Actor, id: string): Promise<RunContex
     .innerJoin(revision, and(eq(revision.netlistId, run.netlistId), eq(revision.number, run.revisionNumber)))
     .where(eq(run.id, asked.id));
   const { text, latestRevision, judgement } = of!;
-  const design = compile(text).job?.design;
+  const design = compiled(text).job?.design;
   if (design === undefined) {
     return { latestRevision, toleranceLines: {}, readingLines: {}, requirementLines: [] };
   }

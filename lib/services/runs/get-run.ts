@@ -1,4 +1,4 @@
-import { and, eq } from "drizzle-orm";
+import { and, eq, sql } from "drizzle-orm";
 import { database } from "@/db/client";
 import { netlist } from "@/db/schema/netlist";
 import { revision } from "@/db/schema/revision";
@@ -18,13 +18,33 @@ export interface RunSummary extends RunRow {
   readonly judgement: KeptJudgement | null;
 }
 
-/** Throws "not found" for a run that is not in the actor's workspace. */
-export async function getRun(actor: Actor, id: string): Promise<RunSummary> {
+/** A swept knob with more values than this is long. */
+const LONG = 10_000;
+
+/** The plan without the values of long axes between the first and the last (lib/analyses/plan.ts, `outlineOf`), shortened where they lie. */
+const OUTLINED = sql<Plan>`jsonb_set(${run.plan}, '{axes}', coalesce((
+  SELECT jsonb_agg(
+    CASE WHEN jsonb_array_length(axis->'values') <= ${LONG} THEN axis ELSE axis || jsonb_build_object(
+      'values', jsonb_build_array(axis->'values'->0, axis->'values'->-1),
+      'count', jsonb_array_length(axis->'values')
+    ) END ORDER BY place)
+  FROM jsonb_array_elements(${run.plan}->'axes') WITH ORDINALITY AS one(axis, place)
+), '[]'::jsonb))`;
+
+/**
+ * Throws "not found" for a run that is not in the actor's workspace. `plan` says how much of it is wanted: all, or all but what lies
+ * between the ends of axes of more than 10,000 values.
+ */
+export async function getRun(
+  actor: Actor,
+  id: string,
+  plan: "whole" | "outline" = "whole",
+): Promise<RunSummary> {
   const db = database();
   const asked = await findRun(db, actor, id);
   authorize(actor, "run.read", asked);
   const [row] = await db
-    .select({ ...RUN_COLUMNS, plan: run.plan, judgement: run.judgement })
+    .select({ ...RUN_COLUMNS, plan: plan === "whole" ? run.plan : OUTLINED, judgement: run.judgement })
     .from(run)
     .innerJoin(netlist, eq(netlist.id, run.netlistId))
     .innerJoin(revision, and(eq(revision.netlistId, run.netlistId), eq(revision.number, run.revisionNumber)))

@@ -36,6 +36,17 @@ export async function fetchColumns(
   return { document: decodeColumns(await response.arrayBuffer()), etag: response.headers.get("etag") };
 }
 
+/** Where what a large run looks like from afar is. */
+export function overviewPath(workspace: string, id: string): string {
+  return `/${workspace}/runs/${id}/overview`;
+}
+
+export async function fetchOverview(workspace: string, id: string): Promise<ColumnsDocument> {
+  const response = await fetch(overviewPath(workspace, id));
+  if (!response.ok) throw await refusal(response);
+  return decodeColumns(await response.arrayBuffer());
+}
+
 export async function fetchSummary(id: string): Promise<RunState> {
   const response = await fetch(`/api/v1/runs/${id}/summary`, { cache: "no-store" });
   if (!response.ok) throw await refusal(response);

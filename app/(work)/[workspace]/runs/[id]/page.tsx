@@ -8,9 +8,10 @@ import { getPoint } from "@/lib/services/runs/get-point";
 import { getRun } from "@/lib/services/runs/get-run";
 import { getRunContext } from "@/lib/services/runs/get-run-context";
 import { getRunDocument } from "@/lib/services/runs/get-run-document";
+import { hasRunOverview } from "@/lib/services/runs/get-run-overview";
 import { waitForPoints } from "@/lib/services/runs/wait-for-points";
 import { answered } from "../../../answered";
-import { columnsPath } from "./fetch-run";
+import { columnsPath, overviewPath } from "./fetch-run";
 import { readPageState } from "./page-state";
 import { isLive, type RunState } from "./run-shapes";
 import { RunView } from "./run-view";
@@ -29,12 +30,12 @@ interface Props {
 const runFor = cache(async (workspace: string, id: string) => {
   const path = `/${workspace}/runs/${id}`;
   const actor = await answered(actorFor(workspace), path);
-  const run = await answered(getRun(actor, id), path);
+  const run = await answered(getRun(actor, id, "outline"), path);
   const fresh =
     run.pointsDone === 0 && isLive(run.status) && Date.now() - Date.parse(run.queuedAt) < JUST_QUEUED;
   if (!fresh || !isSmall(run)) return { actor, run };
   await waitForPoints(actor, id, MOMENT);
-  return { actor, run: await answered(getRun(actor, id), path) };
+  return { actor, run: await answered(getRun(actor, id, "outline"), path) };
 });
 
 function isSmall({ points, plan }: RunState): boolean {
@@ -55,21 +56,24 @@ export default async function RunPage({ params, searchParams }: Props) {
     for (const one of [value ?? []].flat()) search.append(name, one);
   }
   const state = readPageState(search);
-  const [found, point, span, context] = await Promise.all([
+  const [found, point, span, context, hasOverview] = await Promise.all([
     isSmall(run) ? getRunDocument(actor, id) : null,
     state.point === null || state.point >= run.points ? null : getPoint(actor, id, state.point),
     findVoltageSpan(actor, id),
     getRunContext(actor, id),
+    !isSmall(run) && hasRunOverview(actor, id),
   ]);
-  // A large document sets out together with the page, not after it.
+  // What is drawn first of a large document sets out together with the page, not after it.
   const ahead = !isSmall(run) && run.pointsDone > 0;
+  const path = hasOverview ? overviewPath(workspace, id) : columnsPath(id);
   return (
     <>
-      {ahead && <link rel="preload" as="fetch" href={columnsPath(id)} crossOrigin="anonymous" />}
+      {ahead && <link rel="preload" as="fetch" href={path} crossOrigin="anonymous" />}
       <RunView
         key={run.id}
         workspace={workspace}
         first={isSmall(run) ? run : { ...run, plan: outlineOf(run.plan) }}
+        hasOverview={hasOverview}
         found={found && { document: found.document, etag: found.columnsEtag }}
         context={context}
         point={point}

@@ -19,6 +19,7 @@ import { RunStatusLine } from "./run-status-line";
 import { SpreadView } from "./spread/spread-view";
 import { textLinks } from "./text-links";
 import { type Found, useLiveRun } from "./use-live-run";
+import { useOverview } from "./use-overview";
 import { useViewDeeds } from "./use-view-deeds";
 
 /** A finished run is judged within this time, ms, unless it is large. */
@@ -28,6 +29,8 @@ interface Props {
   readonly workspace: string;
   readonly first: RunState;
   readonly found: Found | null;
+  /** Whether there is a form of the curves from afar, which comes before the whole. */
+  readonly hasOverview: boolean;
   /** Where its text says what, and what has come since. */
   readonly context: RunContext;
   /** The account of the point that the address names. */
@@ -43,7 +46,8 @@ interface Props {
 export function RunView(props: Props) {
   const { workspace, first, found, context, point, span, mayStart, mayCancel } = props;
   const router = useRouter();
-  const { run, document, problem, finished, behind, setRun } = useLiveRun(first, found);
+  const overview = useOverview(workspace, first.id, first.plan.traces.length, props.hasOverview);
+  const { run, document, problem, finished, behind, setRun } = useLiveRun(first, found, overview.over);
   const [state, setState] = useState(() => readPageState(new URLSearchParams(props.search)));
   // The cursor moves with the pointer: what follows it listens for itself, and the page is not drawn anew.
   const onCursor = useRef<(point: number | null) => void>(() => {});
@@ -74,7 +78,9 @@ export function RunView(props: Props) {
       },
     [document, run.plan],
   );
-  const set = useMemo(() => curveSet(source), [source]);
+  const isWhole = document !== null || overview.source === null;
+  const seen = isWhole ? source : overview.source;
+  const set = useMemo(() => curveSet(seen), [seen]);
   useViewDeeds(set, state, show);
   const numbers = useMemo(() => withDraws(source, run.plan.draws), [source, run.plan.draws]);
   const allowed = useMemo(() => (document === null ? [] : allowedBands(document)), [document]);
@@ -136,10 +142,10 @@ export function RunView(props: Props) {
                       view={state}
                       onView={show}
                       point={chosen === null ? null : onPlot(run, chosen)}
-                      onPoint={(next) => show({ point: next })}
-                      waiting={waitingFor(run, document !== null)}
+                      onPoint={(next) => isWhole && show({ point: next })}
+                      waiting={waitingFor(run, document !== null, !isWhole)}
                       allowed={allowed}
-                      onCursor={moved}
+                      onCursor={isWhole ? moved : nothing}
                     />
                   ),
                 },
@@ -190,6 +196,9 @@ export function RunView(props: Props) {
   );
 }
 
+/** The points of curves from afar have other numbers than those of the run. */
+function nothing(): void {}
+
 /** What was kept of a finished run's judgement, to be shown while its document is on the way; null where it lacks anything shown. */
 function judgedAlready({ judgement }: RunState): RunFound | null {
   if (judgement === null || judgement.requirements.some(({ drawn }) => drawn === undefined)) return null;
@@ -212,7 +221,10 @@ function provedIn({ points }: CurveSource): number {
 }
 
 /** Why no curve can be there yet; null when what is there is all there is. */
-function waitingFor({ status, pointsDone }: RunState, fetched: boolean): string | null {
+function waitingFor({ status, pointsDone }: RunState, fetched: boolean, isAfar: boolean): string | null {
   if (pointsDone === 0) return isLive(status) ? "Waiting for the first points" : null;
-  return fetched ? null : "Fetching the curves…";
+  if (fetched) return null;
+  return isAfar
+    ? "Fetching every point of these curves, to be read and looked at closely…"
+    : "Fetching the curves…";
 }

@@ -30,9 +30,9 @@ interface LiveRun {
 
 /**
  * A run and its results, kept current: events come by one stream, which the browser takes up again where it broke; while it
- * cannot be had, the summary is asked for every second. Each event asks for the document, which arrives as fast as it can be read.
+ * cannot be had, the summary is asked for every second. The first document is asked for `after` what comes before it. Each event asks for the document, which arrives as fast as it can be read.
  */
-export function useLiveRun(first: RunState, found: Found | null): LiveRun {
+export function useLiveRun(first: RunState, found: Found | null, after: Promise<void>): LiveRun {
   const [run, setRun] = useState(first);
   const [document, setDocument] = useState<RunDocument | ColumnsDocument | null>(found?.document ?? null);
   const [problem, setProblem] = useState<string | null>(null);
@@ -44,13 +44,15 @@ export function useLiveRun(first: RunState, found: Found | null): LiveRun {
     pointsDone: first.pointsDone,
     lastEvent: first.lastEvent,
     etag: found?.etag ?? null,
+    after,
   });
 
   useEffect(() => {
-    const { id, status, pointsDone, lastEvent, etag } = start.current;
+    const { id, status, pointsDone, lastEvent, etag, after } = start.current;
     const feed = new DocumentFeed(id, etag, { onDocument: setDocument, onProblem: setProblem });
     // A document without a point is worth asking for only when the page came with one to compare it to.
-    if (etag === null ? pointsDone > 0 || !isLive(status) : isLive(status)) feed.want();
+    if (etag === null ? pointsDone > 0 || !isLive(status) : isLive(status))
+      void after.then(() => feed.want());
     if (!isLive(status)) return () => feed.close();
 
     let timer: ReturnType<typeof setInterval> | undefined;
