@@ -13,11 +13,13 @@ const LEAP = 8;
 
 interface Props {
   readonly workspace: string;
+  /** What was typed before the field had the focus. */
+  readonly begun: () => string;
   readonly onTake: (entry: Entry) => void;
 }
 
 /** The field and the list of "Find or do…": what is typed narrows it, arrow keys choose, Enter takes. */
-export function FindOrDo({ workspace, onTake }: Props) {
+export function FindOrDo({ workspace, begun, onTake }: Props) {
   const id = useId();
   const registry = useContext(DeedContext);
   const list = useRef<HTMLDivElement>(null);
@@ -70,6 +72,10 @@ export function FindOrDo({ workspace, onTake }: Props) {
             setQuery(event.target.value);
             setChosen(null);
             list.current?.scrollTo({ top: 0 });
+          }}
+          onFocus={() => {
+            const typed = begun();
+            if (typed !== "") setQuery((before) => before + typed);
           }}
           onKeyDown={press}
           className="min-h-13 w-full bg-transparent px-2 outline-none!"

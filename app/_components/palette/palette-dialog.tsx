@@ -7,6 +7,8 @@ import { FindOrDo } from "./find-or-do";
 
 interface Props {
   readonly workspace: string;
+  /** What was typed before this stood; asked for once, when the field has the focus. */
+  readonly begun: () => string;
   readonly onTake: (entry: Entry) => void;
   readonly onClose: () => void;
   /** When it has gone and the focus is back. */
@@ -14,7 +16,7 @@ interface Props {
 }
 
 /** "Find or do…" over the page: focus stays inside, Escape closes it and gives focus back. */
-export function PaletteDialog({ workspace, onTake, onClose, onClosed }: Props) {
+export function PaletteDialog({ workspace, begun, onTake, onClose, onClosed }: Props) {
   const before = useRef<Element | null>(null);
   const gone = useRef(onClosed);
   useEffect(() => {
@@ -40,7 +42,7 @@ export function PaletteDialog({ workspace, onTake, onClose, onClosed }: Props) {
           <Radix.Description className="sr-only">
             Type to find a netlist, a run, a page or something to do; arrow keys choose, Enter takes it.
           </Radix.Description>
-          <FindOrDo workspace={workspace} onTake={onTake} />
+          <FindOrDo workspace={workspace} begun={begun} onTake={onTake} />
         </Radix.Content>
       </Radix.Portal>
     </Radix.Root>
