@@ -3,16 +3,13 @@ import { cache } from "react";
 import { ButtonLink } from "@/app/_components/ui/button";
 import { FailedState } from "@/app/_components/ui/states";
 import { actorFor } from "@/lib/auth/actor";
-import { AppError } from "@/lib/errors";
-import type { Actor } from "@/lib/permissions/actor";
 import { getRevision } from "@/lib/services/netlists/get-revision";
 import { findVoltageSpan } from "@/lib/services/runs/find-voltage-span";
-import { getRun, type RunSummary } from "@/lib/services/runs/get-run";
-import { getRunDocument } from "@/lib/services/runs/get-run-document";
+import { getRun } from "@/lib/services/runs/get-run";
 import { answered } from "../../../../answered";
+import { drawnReport } from "./drawn-report";
 import { PrintButton } from "./print-button";
 import "./report.css";
-import { drawFigure } from "./report-figure";
 import { ReportView } from "./report-view";
 
 interface Props {
@@ -36,7 +33,7 @@ export default async function ReportPage({ params }: Props) {
   const { workspace, id } = await params;
   const { actor, run } = await runFor(workspace, id);
   const [drawn, revision, span] = await Promise.all([
-    drawnOf(actor, run),
+    drawnReport(actor, run),
     getRevision(actor, run.netlistId, run.revision),
     findVoltageSpan(actor, id),
   ]);
@@ -72,28 +69,4 @@ export default async function ReportPage({ params }: Props) {
       )}
     </>
   );
-}
-
-/** What of a run's document is printed, and its curves drawn: the points themselves are let go before the page is written. */
-async function drawnOf(actor: Actor, run: RunSummary) {
-  try {
-    const { document, release } = await getRunDocument(actor, run.id);
-    try {
-      const { requirements, readings, branches, unstable, failures } = document;
-      const found = {
-        requirements,
-        readings,
-        failures,
-        ...(branches && { branches }),
-        ...(unstable && { unstable }),
-      };
-      return { document: found, figure: drawFigure(run, document) };
-    } finally {
-      release();
-    }
-  } catch (error) {
-    if (error instanceof AppError && (error.code === "too large" || error.code === "too many"))
-      return { refusal: error.message };
-    throw error;
-  }
 }

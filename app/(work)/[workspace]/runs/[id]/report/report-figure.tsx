@@ -1,11 +1,11 @@
-import { curveSet } from "@/app/_components/curves/curve-set";
+import { type CurveSource, curveSet } from "@/app/_components/curves/curve-set";
 import { USUAL_VIEW } from "@/app/_components/curves/curve-view";
 import { figureBands } from "@/app/_components/curves/figure-bands";
 import { figureScene } from "@/app/_components/curves/figure-scene";
 import { sceneSvg } from "@/app/_components/curves/scene-svg";
 import { THEMES } from "@/app/_components/curves/theme-values";
 import { allowedBands } from "@/lib/analyses/allowed-bands";
-import type { RunDocument } from "@/lib/analyses/result";
+import type { RequirementDocument } from "@/lib/analyses/result";
 import type { RunState } from "../run-shapes";
 import { sourceLine } from "../source-line";
 
@@ -22,15 +22,19 @@ export interface DrawnFigure {
 }
 
 /** Draws the curves of a run; null for a run without a sweep. Reads every point, and keeps none. */
-export function drawFigure(run: RunState, document: RunDocument): DrawnFigure | null {
-  const set = curveSet(document);
+export function drawFigure(
+  run: RunState,
+  source: CurveSource,
+  requirements: readonly RequirementDocument[],
+): DrawnFigure | null {
+  const set = curveSet(source);
   if (set === null) return null;
   const request = {
     set,
     view: USUAL_VIEW,
     title: run.title,
     source: sourceLine(run),
-    allowed: allowedBands(document),
+    allowed: allowedBands({ axes: run.plan.axes, requirements }),
     bands: figureBands(
       set,
       set.traces.map(({ name }) => name),

@@ -1,21 +1,18 @@
 import { formatCount } from "@/app/_components/ui/count";
-import type { RunDocument } from "@/lib/analyses/result";
 import { BranchList } from "../branch-list";
 import { Cautions, type VoltageSpan } from "../cautions";
 import type { RunState } from "../run-shapes";
 import { UnstablePoints } from "../unstable-points";
+import type { DrawnReport } from "./drawn-report";
 import { ReportBudgets } from "./report-budgets";
 import { ReportFacts } from "./report-facts";
 import { ReportFailures } from "./report-failures";
-import { type DrawnFigure, ReportFigure } from "./report-figure";
+import { ReportFigure } from "./report-figure";
 import { ReportReadings } from "./report-readings";
 import { ReportRequirements } from "./report-requirements";
 
-interface Props {
+interface Props extends DrawnReport {
   readonly run: RunState;
-  readonly document: Pick<RunDocument, "requirements" | "readings" | "branches" | "unstable" | "failures">;
-  /** Null for a run without a sweep. */
-  readonly figure: DrawnFigure | null;
   /** Of the revision that was run. */
   readonly text: string;
   readonly savedBy: string;
@@ -24,7 +21,7 @@ interface Props {
 }
 
 /** Everything that a run came to, on sheets. */
-export function ReportView({ run, document, figure, text, savedBy, savedAt, span }: Props) {
+export function ReportView({ run, printed, figure, remark, text, savedBy, savedAt, span }: Props) {
   const { plan } = run;
   const missing = incompleteness(run);
   return (
@@ -44,18 +41,19 @@ export function ReportView({ run, document, figure, text, savedBy, savedAt, span
       <ReportFacts run={run} savedBy={savedBy} savedAt={savedAt} />
       <section aria-labelledby="report-requirements" className="grid gap-3">
         <h2 id="report-requirements">Requirements</h2>
-        <ReportRequirements requirements={document.requirements} />
+        <ReportRequirements requirements={printed.requirements} />
       </section>
+      {remark !== null && <p className="border-y py-2">{remark}</p>}
       {figure !== null && <ReportFigure figure={figure} />}
-      <ReportReadings readings={document.readings} axes={plan.axes} draws={plan.draws} />
+      <ReportReadings readings={printed.readings} axes={plan.axes} draws={plan.draws} />
       <ReportBudgets judgement={run.judgement} />
-      <BranchList branches={document.branches ?? []} axes={plan.axes} search={run.search ?? null} />
+      <BranchList branches={printed.branches ?? []} axes={plan.axes} search={run.search ?? null} />
       <UnstablePoints
-        ranges={document.unstable ?? []}
+        ranges={printed.unstable ?? []}
         axes={plan.axes}
         ofOneDraw={plan.points / (plan.draws + 1)}
       />
-      <ReportFailures failures={document.failures} axes={plan.axes} />
+      <ReportFailures failures={printed.failures} axes={plan.axes} />
       <Cautions span={span} power={run.judgement?.power ?? null} draws={plan.draws} />
       <section aria-labelledby="report-circuit" className="grid gap-3">
         <h2 id="report-circuit">Circuit, sweeps and requirements as written</h2>
