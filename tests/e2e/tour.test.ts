@@ -124,7 +124,10 @@ test("the whole tour is walked by keyboard, through signing in, and kept in the 
 
 test("it can be read by everyone, at every width, light and dark", async () => {
   const { page } = await openPage(browser, { viewport: { width: 360, height: 800 } });
-  await openTour(page);
+  await page.goto("/");
+  await page.getByRole("link", { name: "Take the five-minute tour" }).click();
+  await page.waitForURL("**/docs/tour");
+  await page.locator('[data-preview="whole"]').waitFor();
   await expectNoSidewaysScroll(page);
   await button(page, "Do it for me").click();
   await expectDone(page, /^Done: at 1.mA/u);

@@ -62,7 +62,7 @@ export function WholeView({ whole, text, onStart, onStop }: Props) {
         </Notice>
       )}
       {whole.kind === "result" && whole.result.frame.requirements.length > 0 && (
-        <div className={isOld ? "mt-4 opacity-60" : "mt-4"}>
+        <div className={isOld ? "mt-4 [&_svg]:opacity-50" : "mt-4"}>
           <RequirementBars
             requirements={whole.result.frame.requirements}
             remark="judged on the whole plan, in this page"

@@ -33,6 +33,9 @@ const STAYS =
 const BRIEF_ROOM = "min-h-[432px]";
 const ROOM = "min-h-[432px] lg:min-h-[calc(100dvh-200px)]";
 
+/** Old curves and bars are faded; words and figures keep the contrast that reading takes. */
+const FADED = "[&_canvas]:opacity-50 [&_svg]:opacity-50";
+
 /** What a run of the text would show, solved in the browser as one types: one sweep, nominal, kept nowhere. */
 export const PreviewPane = memo(function PreviewPane({ previewing, onWrite, isBrief = false }: Props) {
   const heading = useId();
@@ -53,7 +56,7 @@ export const PreviewPane = memo(function PreviewPane({ previewing, onWrite, isBr
   const isOld = useLate(isStale && state !== "solving");
   const isSlow = useLate(state === "solving");
   const isFirst = row === null && state === "solving";
-  const faded = isOld ? "opacity-60" : undefined;
+  const faded = isOld ? FADED : undefined;
   return (
     <section
       aria-labelledby={heading}
