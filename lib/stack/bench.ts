@@ -13,8 +13,8 @@ import { type Throwaway, throwaway } from "./throwaway";
 
 const FOLDER = "tests/bench";
 
-/** What takes an hour is measured only when it is named. */
-const LONG: ReadonlySet<string> = new Set(["fuzz"]);
+/** What takes an hour, or fetches a program of others, is measured only when it is named. */
+const LONG: ReadonlySet<string> = new Set(["fuzz", "lighthouse"]);
 
 let held: Hold | null = null;
 let cluster: Throwaway | null = null;
