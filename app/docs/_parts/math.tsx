@@ -37,12 +37,17 @@ function setTerm(term: Term, key?: number, goesOn = false): ReactNode {
     case "scripts": {
       const { base, under, over } = term;
       const tag = under === null ? "msup" : over === null ? "msub" : "msubsup";
-      const scripts = [under, over].filter((one) => one !== null).map((one) => setTerm(one));
+      const scripts = [under, over].filter((one) => one !== null).map((one) => setScript(one));
       const room = roomAbout(base);
       const plain = base.kind === "name" ? createElement("mi", null, base.text) : setTerm(base);
       return createElement(tag, { key, className: room }, plain, ...scripts);
     }
   }
+}
+
+/** Words in a script cling to it, unlike those on the line. */
+function setScript(term: Term): ReactNode {
+  return term.kind === "words" ? createElement("mtext", null, term.text) : setTerm(term);
 }
 
 /** A bar about a size clings to it; a sign that carries a formula on from the line before stands free. */

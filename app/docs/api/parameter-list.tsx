@@ -39,6 +39,9 @@ function kindOf({ type, enum: choices, format, minimum, maximum, maxLength }: Fi
   return maxLength === undefined ? "text" : `text, ${maxLength} characters at most`;
 }
 
+const MUST = "must be given";
+
+/** What a route takes, with the limits of the schema that reads it. */
 export function ParameterList({ route, id }: { readonly route: RouteText; readonly id: string }) {
   const fields = fieldsOf(route);
   if (fields.length === 0) return null;
@@ -52,13 +55,13 @@ export function ParameterList({ route, id }: { readonly route: RouteText; readon
           <code key="name">{name}</code>,
           PARAMETERS[name] ?? "",
           kindOf(field),
-          isRequired ? "must be given" : leftOut(field),
+          isRequired ? MUST : leftOut(field),
         ],
       }))}
       spare={[2, 3]}
       small={({ cells }) => (
         <>
-          {cells[2]}; left out: {cells[3]}
+          {cells[2]}; {cells[3] === MUST ? MUST : <>left out: {cells[3]}</>}
         </>
       )}
     />
@@ -66,5 +69,5 @@ export function ParameterList({ route, id }: { readonly route: RouteText; readon
 }
 
 function leftOut({ default: otherwise }: Field): string {
-  return otherwise === undefined ? "nothing" : otherwise === "" ? "empty" : String(otherwise);
+  return otherwise === undefined ? "none" : otherwise === "" ? "empty" : String(otherwise);
 }

@@ -28,7 +28,7 @@ export function StatementEntry({
       <Points items={rules.map((rule) => <Prose key={rule}>{rule}</Prose>)} />
       {sample !== null &&
         (LIVE.has(id) ? (
-          <LiveExample text={format(sample)} title={titleOf(sample)} />
+          <LiveExample text={format(sample).trimEnd()} title={titleOf(sample)} />
         ) : (
           <Sample text={sample} />
         ))}

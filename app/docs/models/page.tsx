@@ -92,7 +92,7 @@ function Model({ kind }: { readonly kind: ElementKind }) {
       <ParameterTable kind={kind} />
       {remarks.length > 0 && <Points items={remarks.map((text) => <Prose key={text}>{text}</Prose>)} />}
       {LIVE.has(kind) ? (
-        <LiveExample text={format(sample)} title={titleOf(sample)} hasKnobs />
+        <LiveExample text={format(sample).trimEnd()} title={titleOf(sample)} hasKnobs />
       ) : (
         <Sample text={sample} />
       )}

@@ -15,8 +15,10 @@ export function rangeOf({ low, high, open, unit }: ParameterKind): string {
   return ends.length === 0 ? "any" : ends.join(", ");
 }
 
+const MUST = "must be given";
+
 function absentOf({ absent }: ParameterKind): string {
-  return absent === null ? "must be given" : absent;
+  return absent ?? MUST;
 }
 
 /** Every parameter of a kind with its symbol, meaning, unit, range and what leaving it out means, from kinds.ts. */
@@ -50,7 +52,7 @@ export function ParameterTable({ kind }: { readonly kind: ElementKind }) {
       spare={[2, 3, 4]}
       small={({ cells }) => (
         <>
-          {cells[2]}; {cells[3]}; left out: {cells[4]}
+          {cells[2]}; {cells[3]}; {cells[4] === MUST ? MUST : <>left out: {cells[4]}</>}
         </>
       )}
     />

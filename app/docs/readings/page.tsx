@@ -51,7 +51,7 @@ export default function ReadingsPage() {
             }
           </Prose>
         </Text>
-        <LiveExample text={format(readingNetlist(""))} title="The sweep of the examples" />
+        <LiveExample text={format(readingNetlist("")).trimEnd()} title="The sweep of the examples" />
         {NAMES.map((name) => (
           <Reduction key={name} name={name} />
         ))}
@@ -88,7 +88,7 @@ export default function ReadingsPage() {
             </Text>
           </Entry>
         ))}
-        <LiveExample text={format(CONTRACT_SAMPLE)} title={titleOf(CONTRACT_SAMPLE)} />
+        <LiveExample text={format(CONTRACT_SAMPLE).trimEnd()} title={titleOf(CONTRACT_SAMPLE)} />
       </Section>
       <Judging />
       <Statistics />
