@@ -166,11 +166,11 @@ function emailOf(who: Who): string {
   return person.email;
 }
 
-/** Keeps a picture of the whole page in .test/pictures/NAME.png; its path. */
-export async function picture(page: Page, name: string): Promise<string> {
+/** Keeps a picture of the whole page, or of what the window shows, in .test/pictures/NAME.png; its path. */
+export async function picture(page: Page, name: string, fullPage = true): Promise<string> {
   mkdirSync(PICTURES, { recursive: true });
   const path = `${PICTURES}/${name}.png`;
-  await page.screenshot({ path, fullPage: true });
+  await page.screenshot({ path, fullPage });
   return path;
 }
 
