@@ -66,7 +66,7 @@ describe("the themes of files", () => {
   it("are those of the pages", () => {
     const css = readFileSync("app/globals.css", "utf8");
     const blocks = {
-      light: css.slice(css.indexOf(":root {"), css.indexOf("@media (prefers-color-scheme: dark)")),
+      light: css.slice(css.indexOf(":root {"), css.indexOf("@media screen and (prefers-color-scheme: dark)")),
       dark: css.slice(css.indexOf(':root[data-theme="dark"] {')),
     };
     for (const theme of ["light", "dark"] as const) {

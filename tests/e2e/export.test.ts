@@ -137,6 +137,9 @@ describe("the printed report", () => {
     await page.emulateMedia({ media: "print" });
     const figure = page.locator("[data-figure]:visible");
     expect(await figure.getAttribute("data-figure")).toBe("light");
+    const paper = () =>
+      page.evaluate(() => getComputedStyle(window.document.documentElement).backgroundColor);
+    expect(await paper()).toBe("rgb(255, 255, 255)");
     const dashes = await figure
       .locator("path[stroke-width='1.75']")
       .evaluateAll((lines) => lines.map((line) => line.getAttribute("stroke-dasharray") ?? "whole"));

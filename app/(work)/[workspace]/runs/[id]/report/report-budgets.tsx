@@ -1,6 +1,6 @@
 import { formatKnob } from "@/app/_components/curves/figures-in-words";
 import { counted } from "@/app/_components/ui/count";
-import { Cell, HeadCell, Table } from "@/app/_components/ui/table";
+import { Cell, HeadCell, Table, TableFrame } from "@/app/_components/ui/table";
 import type { Budget } from "@/lib/analyses/budget";
 import type { KeptJudgement } from "@/lib/analyses/verdict";
 import { formatQuantity } from "@/lib/units/quantity";
@@ -18,7 +18,7 @@ export function ReportBudgets({ judgement }: { readonly judgement: KeptJudgement
   const isTooLarge = judgement !== null && budgets === null;
   if (all.length === 0 && !isTooLarge) return null;
   return (
-    <section aria-labelledby="report-budgets" className="grid gap-4">
+    <section aria-labelledby="report-budgets" className="grid grid-cols-[minmax(0,1fr)] gap-4">
       <h2 id="report-budgets">Error budgets</h2>
       <p className="text-sm">
         To first order about the nominal design: how far each toleranced value moves the result, and its share
@@ -47,32 +47,34 @@ function BudgetTable({ budget }: { readonly budget: Budget }) {
   const rest = budget.parts.length - parts.length;
   return (
     <section data-whole aria-label={`Error budget of ${reading}`}>
-      <Table>
-        <caption>
-          {reading}
-          {place !== "" && ` at ${place}`}: nominal {formatQuantity(nominal, unit, 4)}, standard deviation{" "}
-          {formatQuantity(sigma, unit, 3)}
-          {rest > 0 && `; ${counted(rest, "smaller part")} left out`}
-        </caption>
-        <thead>
-          <tr>
-            <HeadCell>Part</HeadCell>
-            <HeadCell figure>Change at its tolerance</HeadCell>
-            <HeadCell figure>Share</HeadCell>
-          </tr>
-        </thead>
-        <tbody>
-          {parts.map(({ part, parameter, effect, share }) => (
-            <tr key={`${part} ${parameter}`}>
-              <th scope="row" className="border-b py-1 pr-4 text-left font-normal">
-                {[part, parameter].filter(Boolean).join(" ")}
-              </th>
-              <Cell figure>{formatQuantity(effect, unit, 3)}</Cell>
-              <Cell figure>{`${(100 * share).toFixed(1)}\u202f%`}</Cell>
+      <TableFrame label={`Parts of ${reading}`}>
+        <Table>
+          <caption>
+            {reading}
+            {place !== "" && ` at ${place}`}: nominal {formatQuantity(nominal, unit, 4)}, standard deviation{" "}
+            {formatQuantity(sigma, unit, 3)}
+            {rest > 0 && `; ${counted(rest, "smaller part")} left out`}
+          </caption>
+          <thead>
+            <tr>
+              <HeadCell>Part</HeadCell>
+              <HeadCell figure>Change at its tolerance</HeadCell>
+              <HeadCell figure>Share</HeadCell>
             </tr>
-          ))}
-        </tbody>
-      </Table>
+          </thead>
+          <tbody>
+            {parts.map(({ part, parameter, effect, share }) => (
+              <tr key={`${part} ${parameter}`}>
+                <th scope="row" className="border-b py-1 pr-4 text-left font-normal">
+                  {[part, parameter].filter(Boolean).join(" ")}
+                </th>
+                <Cell figure>{formatQuantity(effect, unit, 3)}</Cell>
+                <Cell figure>{`${(100 * share).toFixed(1)}\u202f%`}</Cell>
+              </tr>
+            ))}
+          </tbody>
+        </Table>
+      </TableFrame>
     </section>
   );
 }

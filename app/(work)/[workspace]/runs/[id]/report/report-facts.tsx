@@ -36,7 +36,7 @@ export function ReportFacts({ run, savedBy, savedAt }: Props) {
     ],
   ];
   return (
-    <section aria-labelledby="report-facts" className="grid gap-3">
+    <section aria-labelledby="report-facts" className="grid grid-cols-[minmax(0,1fr)] gap-3">
       <h2 id="report-facts">Origin and plan</h2>
       <dl className="text-sm">
         {facts.map(([name, value]) => (

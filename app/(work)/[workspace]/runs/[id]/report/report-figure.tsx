@@ -53,7 +53,7 @@ export function drawFigure(
 /** The curves on white paper, on a dark screen in its colours, with their summary in words. */
 export function ReportFigure({ figure }: { readonly figure: DrawnFigure }) {
   return (
-    <section aria-labelledby="report-curves" data-whole className="grid gap-3">
+    <section aria-labelledby="report-curves" data-whole className="grid grid-cols-[minmax(0,1fr)] gap-3">
       <h2 id="report-curves">Curves</h2>
       <figure>
         {(["light", "dark"] as const).map((theme) => (

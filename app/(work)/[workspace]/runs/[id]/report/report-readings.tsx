@@ -1,4 +1,4 @@
-import { Cell, HeadCell, Table } from "@/app/_components/ui/table";
+import { Cell, HeadCell, Table, TableFrame } from "@/app/_components/ui/table";
 import type { AxisDocument, ReadingDocument } from "@/lib/analyses/result";
 import { formatQuantity } from "@/lib/units/quantity";
 import { settingsOf } from "../spread/subjects";
@@ -16,46 +16,48 @@ export function ReportReadings({ readings, axes, draws }: Props) {
   if (numbers.length === 0) return null;
   const isDrawn = draws > 0;
   return (
-    <section aria-labelledby="report-readings" className="grid gap-3">
+    <section aria-labelledby="report-readings" className="grid grid-cols-[minmax(0,1fr)] gap-3">
       <h2 id="report-readings">Readings</h2>
-      <Table>
-        <caption>Readings at each setting{isDrawn && ", with the least and the most of the draws"}</caption>
-        <thead>
-          <tr>
-            <HeadCell>Reading</HeadCell>
-            <HeadCell>Setting</HeadCell>
-            <HeadCell figure>Nominal</HeadCell>
-            {isDrawn && <HeadCell figure>Least</HeadCell>}
-            {isDrawn && <HeadCell figure>Most</HeadCell>}
-          </tr>
-        </thead>
-        <tbody>
-          {numbers.flatMap((reading) =>
-            settings.map((words, row) => {
-              const drawn = reading.values
-                .filter(
-                  (value, at) => at >= settings.length && at % settings.length === row && value !== null,
-                )
-                .map(Number);
-              const show = (value: number | null | undefined) =>
-                value === null || value === undefined ? "no value" : formatQuantity(value, reading.unit, 6);
-              return (
-                <tr key={`${reading.name} ${words}`}>
-                  <th scope="row" className="border-b py-1.5 pr-4 text-left font-normal">
-                    {reading.name}
-                  </th>
-                  <Cell>{words === "" ? "as it stands" : words}</Cell>
-                  <Cell figure>{show(reading.values[row])}</Cell>
-                  {isDrawn && <Cell figure>{show(drawn.length === 0 ? null : least(drawn))}</Cell>}
-                  {isDrawn && (
-                    <Cell figure>{show(drawn.length === 0 ? null : -least(drawn.map((v) => -v)))}</Cell>
-                  )}
-                </tr>
-              );
-            }),
-          )}
-        </tbody>
-      </Table>
+      <TableFrame label="Readings of the run">
+        <Table>
+          <caption>Readings at each setting{isDrawn && ", with the least and the most of the draws"}</caption>
+          <thead>
+            <tr>
+              <HeadCell>Reading</HeadCell>
+              <HeadCell>Setting</HeadCell>
+              <HeadCell figure>Nominal</HeadCell>
+              {isDrawn && <HeadCell figure>Least</HeadCell>}
+              {isDrawn && <HeadCell figure>Most</HeadCell>}
+            </tr>
+          </thead>
+          <tbody>
+            {numbers.flatMap((reading) =>
+              settings.map((words, row) => {
+                const drawn = reading.values
+                  .filter(
+                    (value, at) => at >= settings.length && at % settings.length === row && value !== null,
+                  )
+                  .map(Number);
+                const show = (value: number | null | undefined) =>
+                  value === null || value === undefined ? "no value" : formatQuantity(value, reading.unit, 6);
+                return (
+                  <tr key={`${reading.name} ${words}`}>
+                    <th scope="row" className="border-b py-1.5 pr-4 text-left font-normal">
+                      {reading.name}
+                    </th>
+                    <Cell>{words === "" ? "as it stands" : words}</Cell>
+                    <Cell figure>{show(reading.values[row])}</Cell>
+                    {isDrawn && <Cell figure>{show(drawn.length === 0 ? null : least(drawn))}</Cell>}
+                    {isDrawn && (
+                      <Cell figure>{show(drawn.length === 0 ? null : -least(drawn.map((v) => -v)))}</Cell>
+                    )}
+                  </tr>
+                );
+              }),
+            )}
+          </tbody>
+        </Table>
+      </TableFrame>
     </section>
   );
 }

@@ -39,7 +39,7 @@ export function ReportView({ run, printed, figure, remark, text, savedBy, savedA
         </p>
       )}
       <ReportFacts run={run} savedBy={savedBy} savedAt={savedAt} />
-      <section aria-labelledby="report-requirements" className="grid gap-3">
+      <section aria-labelledby="report-requirements" className="grid grid-cols-[minmax(0,1fr)] gap-3">
         <h2 id="report-requirements">Requirements</h2>
         <ReportRequirements requirements={printed.requirements} />
       </section>
@@ -55,7 +55,7 @@ export function ReportView({ run, printed, figure, remark, text, savedBy, savedA
       />
       <ReportFailures failures={printed.failures} axes={plan.axes} />
       <Cautions span={span} power={run.judgement?.power ?? null} draws={plan.draws} />
-      <section aria-labelledby="report-circuit" className="grid gap-3">
+      <section aria-labelledby="report-circuit" className="grid grid-cols-[minmax(0,1fr)] gap-3">
         <h2 id="report-circuit">Circuit, sweeps and requirements as written</h2>
         <ol className="figures list-decimal pl-10 text-xs marker:text-quiet">
           {text
