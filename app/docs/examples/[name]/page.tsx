@@ -60,7 +60,7 @@ export default async function ExamplePage({ params }: Props) {
       >
         {before ? (
           <Link href={`/docs/examples/${before.name}`} className="link inline-flex min-h-6 items-center">
-            Before: {before.title}
+            Previous: {before.title}
           </Link>
         ) : (
           <span />
