@@ -38,10 +38,13 @@ export function PlainLines({ text, label, onPress }: Props) {
             className="sheet-line grid grid-cols-[48px_minmax(0,1fr)]"
             style={{ minHeight: LINE_HEIGHT }}
           >
-            <span aria-hidden="true" className="select-none pr-3 text-right text-quiet">
+            <span aria-hidden="true" className="select-none pr-6 text-right text-quiet">
               {line.number}
             </span>
-            <code className="whitespace-pre-wrap break-words pl-3" style={{ fontSize: "inherit" }}>
+            <code
+              className="whitespace-pre-wrap break-words pr-5"
+              style={{ fontSize: "inherit", ...hanging(line.pieces[0]?.text ?? "") }}
+            >
               {line.pieces.map((piece) => (
                 <span
                   key={piece.at}
@@ -56,6 +59,12 @@ export function PlainLines({ text, label, onPress }: Props) {
       </ol>
     </section>
   );
+}
+
+/** What goes on in a further line stands two places further in than the line begins, as in the editor. */
+function hanging(start: string): { paddingLeft: string; textIndent: string } {
+  const places = 2 + (/^ */u.exec(start)?.[0].length ?? 0);
+  return { paddingLeft: `calc(8px + ${places}ch)`, textIndent: `-${places}ch` };
 }
 
 /** Offset in the text of the character under a point of the window: the end of its line where the point lies beside it. */
