@@ -8,6 +8,8 @@ const INKS: Record<string, string> = {
   comment: "var(--syntax-comment)",
 };
 
+const CLASS = "ruled mt-4 overflow-x-auto border-t text-[0.8125rem] print:whitespace-pre-wrap";
+
 /** A netlist to read, set on ruled lines with the colours of the sheet. */
 export function NetlistText({ text }: { readonly text: string }) {
   const pieces: { readonly at: number; readonly text: string; readonly ink: string | undefined }[] = [];
@@ -20,7 +22,7 @@ export function NetlistText({ text }: { readonly text: string }) {
   pieces.push({ at: end, text: text.slice(end), ink: undefined });
   return (
     // biome-ignore lint/a11y/noNoninteractiveTabindex: text that scrolls sideways must be reachable from the keyboard
-    <pre tabIndex={0} className="ruled mt-4 overflow-x-auto border-t text-[0.8125rem]">
+    <pre tabIndex={0} className={CLASS}>
       {pieces.map((piece) => (
         <span key={piece.at} style={piece.ink === undefined ? undefined : { color: piece.ink }}>
           {piece.text}
