@@ -56,7 +56,7 @@ async function post<T>(page: Page, url: string, body: unknown): Promise<T> {
   return answer.json();
 }
 
-/** Address of a finished run of the text; an earlier bench may have left one. */
+/** Address of a finished and judged run of the text; an earlier bench may have left one. */
 async function finishedRun(page: Page): Promise<string> {
   const search = new URLSearchParams({
     workspace: WORKSPACE,
@@ -66,12 +66,16 @@ async function finishedRun(page: Page): Promise<string> {
     size: "1",
   });
   const { rows } = await (await page.request.get(`/api/v1/runs?${search}`)).json();
-  if (rows[0]?.points === POINTS) return `/${WORKSPACE}/runs/${rows[0].id}`;
+  if (rows[0]?.points === POINTS) {
+    const path = `/${WORKSPACE}/runs/${rows[0].id}`;
+    if ((await page.request.get(`${path}/overview`)).ok()) return path;
+  }
   const { id } = await post<{ id: string }>(page, "/api/v1/netlists", { workspace: WORKSPACE, text: TEXT });
   const run = await post<{ id: string }>(page, "/api/v1/runs", { netlistId: id, base: 1 });
   for (;;) {
-    const { status } = await (await page.request.get(`/api/v1/runs/${run.id}/summary`)).json();
-    if (status === "done") return `/${WORKSPACE}/runs/${run.id}`;
+    const summary = await (await page.request.get(`/api/v1/runs/${run.id}/summary`)).json();
+    const { status, judgement } = summary;
+    if (status === "done" && judgement !== null) return `/${WORKSPACE}/runs/${run.id}`;
     if (status === "failed") throw new Error("The run failed.");
     await page.waitForTimeout(500);
   }
