@@ -116,6 +116,18 @@ test("an example of the language is solved where it stands", async () => {
   await example.locator("canvas, svg").first().waitFor();
 });
 
+test("an example to read becomes a live one in its place when asked", async () => {
+  const { page } = opened;
+  await page.goto("/docs/readings#reading.highest");
+  await page.getByRole("button", { name: "Try it here: Reading: highest" }).press("Enter");
+  const example = page.getByRole("region", { name: "Reading: highest" });
+  await example.locator("canvas, svg").first().waitFor();
+  await example.getByRole("button", { name: "Edit the text" }).waitFor();
+  expect(
+    await page.evaluate(() => document.activeElement?.querySelector("[data-live-example]") !== null),
+  ).toBe(true);
+});
+
 test("somebody at work finds the reference at the top of each page", async () => {
   const { page } = await openPageAs(browser, "erik");
   await page.getByRole("link", { name: "Reference" }).click();

@@ -1,3 +1,4 @@
+import { LiveWhenAsked } from "@/app/_components/live-example/live-when-asked";
 import { NetlistText } from "@/app/_components/ui/netlist-text";
 import { StateBadge } from "@/app/_components/ui/state-badge";
 import { format } from "@/lib/language/format";
@@ -5,13 +6,21 @@ import { solved } from "./solved";
 
 /**
  * A whole netlist of a page, or the part of it that is `shown`, and beneath it what it reads and whether it holds, solved as the page
- * is made.
+ * is made. It can be tried in its place.
  */
-export function Sample({ text, shown = text }: { readonly text: string; readonly shown?: string }) {
+export function Sample({
+  text,
+  shown = text,
+  title = titleOf(text),
+}: {
+  readonly text: string;
+  readonly shown?: string;
+  readonly title?: string;
+}) {
   const answer = solved(text);
   const hasAnswer = answer !== null && answer.readings.length + answer.requirements.length > 0;
   return (
-    <div className="mt-3">
+    <LiveWhenAsked text={format(text).trimEnd()} title={title}>
       <NetlistText text={format(shown).trimEnd()} />
       {hasAnswer && (
         <dl className="flex flex-wrap gap-x-6 gap-y-1 border-y py-1.5 text-sm">
@@ -33,7 +42,7 @@ export function Sample({ text, shown = text }: { readonly text: string; readonly
           ))}
         </dl>
       )}
-    </div>
+    </LiveWhenAsked>
   );
 }
 

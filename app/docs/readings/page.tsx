@@ -108,7 +108,7 @@ function Reduction({ name }: { readonly name: keyof typeof REDUCTIONS }) {
       </Text>
       <Formula>{formula}</Formula>
       <Points items={rules.map((rule) => <Prose key={rule}>{rule}</Prose>)} />
-      <Sample text={readingNetlist(sample)} shown={sample} />
+      <Sample text={readingNetlist(sample)} shown={sample} title={`Reading: ${name}`} />
     </Entry>
   );
 }
