@@ -82,6 +82,45 @@ describe("two texts line by line", () => {
   });
 });
 
+/** Work that would grow as the square of a hostile text: each of these took minutes, on the server as in the browser. */
+describe("texts made to be long to compare", () => {
+  const words = (count: number, step: number) => {
+    return Array.from({ length: count }, (_, k) => `w${(k * step) % 997}`).join(" ");
+  };
+
+  test("one long line with its words in another order is marked from end to end", () => {
+    const [before, after] = [`same ${words(40_000, 7)} end`, `same ${words(40_000, 11)} end`];
+    const [row, ...others] = diffTexts(before, after);
+    expect(others).toEqual([]);
+    expect(row!.before!.marks.length).toBe(1);
+    const [{ from, to }] = row!.before!.marks as [{ from: number; to: number }];
+    expect(before.slice(0, from)).toBe(after.slice(0, from));
+    expect(before.slice(to)).toBe(after.slice(after.length - (before.length - to)));
+  });
+
+  test("many long lines and many short ones are told apart at once", () => {
+    const lines = (step: number) => Array.from({ length: 50 }, (_, k) => words(1_000, step + k)).join("\n");
+    expect(diffTexts(lines(3), lines(501)).length).toBe(50);
+    const short = (of: (k: number) => number) => Array.from({ length: 20_000 }, (_, k) => of(k)).join("\n");
+    expect(
+      diffTexts(
+        short((k) => k % 97),
+        short((k) => (k * k) % 89),
+      ).length,
+    ).toBe(20_000);
+  });
+
+  test("a mark cuts no character of two units", () => {
+    const [before, after] = [`😀${words(3_000, 7)}😀`, `😁${words(3_000, 11)}😂`];
+    const [row] = diffTexts(before, after);
+    for (const { text, marks } of [row!.before!, row!.after!])
+      for (const { from, to } of marks)
+        expect(
+          [text.slice(0, from), text.slice(from, to), text.slice(to)].every((part) => part.isWellFormed()),
+        ).toBe(true);
+  });
+});
+
 describe("folds", () => {
   test("cover every row once, hide no change, and leave three rows around each", () => {
     fc.assert(

@@ -233,3 +233,11 @@ describe("a message for a revision", () => {
     expect(message()).toBe("");
   });
 });
+
+test("of nearly two thousand parts that became one none was renamed, and rivals are told at once", () => {
+  const parts = Array.from({ length: 1_900 }, (_, k) => `s -- R${k} : resistor 1 kΩ -- ground`);
+  const text = (lines: string) => `ground -- IS : current 1 mA -- s\n${lines}\nshow v = s.v\n`;
+  const { changes } = changesOfTexts(text(parts.join("\n")), text("s -- R_all : resistor 1 kΩ -- ground"));
+  const found = changes.flatMap(({ deed, subjects }) => subjects.map((one) => `${deed} ${one}`));
+  expect(found).toEqual(["added R_all", ...parts.map((_, k) => `removed R${k}`)]);
+});

@@ -20,17 +20,24 @@ export interface DiffRow {
   readonly after: DiffLine | null;
 }
 
-/** Milliseconds after which two texts count as wholly different. */
-const PATIENCE = 1_000;
+/**
+ * Lines removed and added beyond which two texts count as wholly different: work grows as its square. A limit in time would part what
+ * the server renders from what the browser makes of it.
+ */
+const MOST_EDITS = 2_000;
+/** Words removed and added beyond which two lines are marked from the first to the last that differs, for the same reason. */
+const MOST_WORD_EDITS = 200;
 /** Lines removed times lines added at one place, up to which each is paired with the one it is most like. */
 const MOST_PAIRS = 2_500;
+/** The same in UTF-16 units that are read for it. */
+const MOST_READ = 2_000_000;
 /** Least share of common words at which a line counts as changed and not as another one. */
 const ALIKE = 0.4;
 
 /** Two texts line by line, with the words that differ marked. */
 export function diffTexts(before: string, after: string): DiffRow[] {
   const [old, now] = [linesOf(before), linesOf(after)];
-  const parts = diffArrays(old, now, { timeout: PATIENCE }) ?? [
+  const parts = diffArrays(old, now, { maxEditLength: MOST_EDITS }) ?? [
     { value: old, removed: true, added: false },
     { value: now, removed: false, added: true },
   ];
@@ -78,7 +85,8 @@ export function linesOf(text: string): string[] {
 /** Indices of lines removed and added, in order: each with what it became, or alone. */
 function paired(gone: readonly string[], come: readonly string[]): [number | null, number | null][] {
   const pairs: [number | null, number | null][] = [];
-  if (gone.length * come.length > MOST_PAIRS) {
+  const read = unitsIn(gone) * come.length + unitsIn(come) * gone.length;
+  if (gone.length * come.length > MOST_PAIRS || read > MOST_READ) {
     for (let k = 0; k < Math.max(gone.length, come.length); k += 1)
       pairs.push([k < gone.length ? k : null, k < come.length ? k : null]);
     return pairs;
@@ -92,6 +100,10 @@ function paired(gone: readonly string[], come: readonly string[]): [number | nul
     else pairs.push([null, b++]);
   }
   return pairs;
+}
+
+function unitsIn(lines: readonly string[]): number {
+  return lines.reduce((sum, line) => sum + line.length, 0);
 }
 
 interface Cell {
@@ -143,7 +155,9 @@ function alike(a: readonly string[], b: readonly string[]): number {
 function wordMarks(before: string, after: string): { before: Mark[]; after: Mark[] } {
   const marks = { before: [] as Mark[], after: [] as Mark[] };
   let [left, right] = [0, 0];
-  for (const { value, added, removed } of diffArrays(wordsOf(before), wordsOf(after))) {
+  const parts = diffArrays(wordsOf(before), wordsOf(after), { maxEditLength: MOST_WORD_EDITS });
+  if (parts === undefined) return betweenEnds(before, after);
+  for (const { value, added, removed } of parts) {
     const length = value.join("").length;
     if (removed) marks.before.push({ from: left, to: left + length });
     if (added) marks.after.push({ from: right, to: right + length });
@@ -151,4 +165,18 @@ function wordMarks(before: string, after: string): { before: Mark[]; after: Mark
     if (!removed) right += length;
   }
   return marks;
+}
+
+/** One mark in each line: all but the characters that both begin with, and end with beyond those. */
+function betweenEnds(before: string, after: string): { before: Mark[]; after: Mark[] } {
+  const least = Math.min(before.length, after.length);
+  let head = 0;
+  while (head < least && before[head] === after[head]) head += 1;
+  let tail = 0;
+  while (tail < least - head && before.at(-1 - tail) === after.at(-1 - tail)) tail += 1;
+  // No mark begins or ends within a character of two units.
+  if (/[\uD800-\uDBFF]/.test(before.charAt(head - 1))) head -= 1;
+  if (/[\uDC00-\uDFFF]/.test(before.charAt(before.length - tail))) tail -= 1;
+  const mark = ({ length }: string) => (length > head + tail ? [{ from: head, to: length - tail }] : []);
+  return { before: mark(before), after: mark(after) };
 }

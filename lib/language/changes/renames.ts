@@ -20,11 +20,15 @@ export function findRenames(before: Design, after: Design): Renames {
   const come = only(after.elements, before.elements);
   const elements = new Map<string, string>();
   if (gone.length * come.length > MOST_PAIRS) return { nets, elements };
+  // Whatever is like the same one is alike, so rivals show at the one they would become: only pairs of gone and come are looked at.
+  const claims = new Map<string, string[]>();
   for (const old of gone) {
     const alike = come.filter((one) => sameMeaning({ ...one, name: "" }, { ...old, name: "" }));
-    const rivals = gone.filter((one) => sameMeaning({ ...one, name: "" }, { ...old, name: "" }));
-    if (alike.length === 1 && rivals.length === 1) elements.set(old.name, alike[0]!.name);
+    const [one] = alike;
+    if (one !== undefined && alike.length === 1)
+      claims.set(one.name, [...(claims.get(one.name) ?? []), old.name]);
   }
+  for (const [name, [old, ...rivals]] of claims) if (rivals.length === 0) elements.set(old!, name);
   return { nets, elements };
 }
 
