@@ -114,6 +114,7 @@ function Row({ workspace, row, move }: { readonly row: NetlistRow } & Pick<Props
       tone="quiet"
       aria-label={`${move.words} ${row.title}`}
       onClick={() => move.onMove(row)}
+      className="font-normal! text-quiet!"
     >
       {move.words}
     </Button>

@@ -48,7 +48,7 @@ export function NetlistsView({ workspace, mayWrite, first }: Props) {
         <>
           <PageHeader
             title="Netlists"
-            remark={<span aria-live="polite">{remark}</span>}
+            remark={<span aria-live="polite">{data !== undefined && remark}</span>}
             actions={
               mayWrite ? (
                 <>

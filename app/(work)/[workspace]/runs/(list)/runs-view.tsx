@@ -34,7 +34,7 @@ export function RunsView({
   const remark = `${formatCount(total)} ${narrowed ? "found" : "in this workspace"}`;
   return (
     <>
-      <PageHeader title="Runs" remark={<span aria-live="polite">{remark}</span>} />
+      <PageHeader title="Runs" remark={<span aria-live="polite">{data !== undefined && remark}</span>} />
       <div className="grid gap-4 px-4 py-4 md:px-6">
         <div className="grid gap-3 sm:grid-cols-[minmax(0,28rem)_12rem_auto]">
           <SearchBox label="Search runs" value={state.query} onChange={(query) => show({ query })} />
