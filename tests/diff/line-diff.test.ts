@@ -116,8 +116,10 @@ describe("texts made to be long to compare", () => {
     for (const { text, marks } of [row!.before!, row!.after!])
       for (const { from, to } of marks)
         expect(
-          [text.slice(0, from), text.slice(from, to), text.slice(to)].every((part) => part.isWellFormed()),
-        ).toBe(true);
+          [text.slice(0, from), text.slice(from, to), text.slice(to)].some((part) =>
+            /\p{Surrogate}/u.test(part),
+          ),
+        ).toBe(false);
   });
 });
 

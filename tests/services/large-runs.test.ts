@@ -65,6 +65,21 @@ describe("a run of a million numbers", () => {
 });
 
 describe("points as comma-separated values", () => {
+  it("are fetched four at a time by a person, who lets go by leaving or by asking for the head alone", async () => {
+    const actor = await makeActor();
+    const { id } = await makeRun(actor);
+    const params = { workspace: actor.workspaceSlug, id };
+    const fetched = (method = "GET") => call(getCsv, actor, { params, method });
+    for (let k = 0; k < 5; k++) expect((await fetched("HEAD")).status).toBe(200);
+    const open = await Promise.all([fetched(), fetched(), fetched(), fetched()]);
+    const fifth = await fetched();
+    expect([fifth.status, (await fifth.json()).code]).toEqual([429, "too many"]);
+    await open[0]!.body?.cancel();
+    expect((await (await fetched()).text()).split("\r\n")).toHaveLength(33);
+    await Promise.all(open.slice(1).map(({ body }) => body?.cancel()));
+    for (let k = 0; k < 5; k++) await (await fetched()).text();
+  });
+
   it("are all there, whatever the sizes of shards and blocks, and empty where nothing is stored", async () => {
     const actor = await makeActor();
     const { id } = await makeRun(actor, { text: text(9_000) });

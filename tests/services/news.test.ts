@@ -36,6 +36,12 @@ describe("listNews", () => {
     expect(Date.parse(later.now)).toBeGreaterThanOrEqual(Date.parse(after));
   });
 
+  it("takes any moment, were it before all that a database can name", async () => {
+    const { ilse, netlistId } = await bench();
+    for (const after of ["0000-01-01T00:00:00Z", "0001-01-01T00:00:00Z", "9999-12-31T23:59:59Z"])
+      expect((await listNews(ilse, { after, netlistId })).runs).toEqual([]);
+  });
+
   it("tells again what happened within the seconds before, so that nothing falls between two answers", async () => {
     const { ilse, netlistId } = await bench();
     const now = new Date();

@@ -3,7 +3,9 @@ import { GET as getColumns } from "@/app/api/v1/runs/[id]/columns/route";
 import { DIODE_TEXT, makeActor, makeRun, makeWorkspace } from "@/db/factories";
 import { decodeColumns } from "@/lib/analyses/columns-document";
 import { getRun } from "@/lib/services/runs/get-run";
+import { getRunColumns } from "@/lib/services/runs/get-run-columns";
 import { getRunDocument } from "@/lib/services/runs/get-run-document";
+import { LARGE, roomFor } from "@/lib/services/runs/large-documents";
 import { ADDRESS, call, SECRET } from "../integration/caller";
 import { ownDatabase } from "../integration/own-database";
 import { storeShard } from "./store-shard";
@@ -40,6 +42,20 @@ describe("GET runs/{id}/columns", () => {
     expect(read.failures).toEqual(document.failures);
     expect((await call(getColumns, await makeActor(), { params: { id } })).status).toBe(404);
     expect((await call(getColumns, null, { params: { id } })).status).toBe(401);
+  });
+
+  it("keep their room until they are read, though the reader has left: the reading goes on with its memory", async () => {
+    const actor = await makeActor();
+    const text = DIODE_TEXT.replace("5 per decade", "200000 points");
+    const { id } = await makeRun(actor, { text });
+    const other = roomFor(actor.userId, LARGE);
+    const { release, pieces } = await getRunColumns(actor, id);
+    release();
+    release();
+    expect(() => roomFor(actor.userId, LARGE)).toThrow("Other large runs");
+    for await (const piece of pieces) expect(piece.byteLength).toBeGreaterThan(0);
+    await vi.waitFor(() => roomFor(actor.userId, LARGE)());
+    other();
   });
 
   it("answers 304 to whoever has them", async () => {

@@ -40,14 +40,26 @@ class Pieces implements AsyncIterable<Uint8Array> {
 }
 
 /**
+ * Calls `then` once as many have ended as there are: each by the function it is given, which may be called more than once.
+ */
+function allEnded(count: number, then: () => void): (() => void)[] {
+  const going = new Set(Array.from({ length: count }, (_, one) => one));
+  return [...going].map((one) => () => {
+    if (going.delete(one) && going.size === 0) then();
+  });
+}
+
+/**
  * The run document in its binary form, of the same version and limits as `getRunDocument`: pieces of bytes, to be sent one after
- * another. They begin to come before everything is read; where reading fails in the middle, taking the next piece throws.
+ * another. They begin to come before everything is read; where reading fails in the middle, taking the next piece throws. A reader who
+ * leaves keeps the room until the reading has ended, which it does with all its memory.
  */
 export async function getRunColumns(
   actor: Actor,
   id: string,
 ): Promise<Found & { readonly pieces: AsyncIterable<Uint8Array> }> {
   const asked = await askedFor(actor, id, "columns");
+  const [read, release] = allEnded(2, asked.release) as [() => void, () => void];
   const pieces = new Pieces();
   const sent: string[] = [];
   pieces.add(encodeMark());
@@ -59,7 +71,8 @@ export async function getRunColumns(
       pieces.add(...encodeRest(matter, sent));
       pieces.end();
     })
-    .catch((failure) => pieces.fail(failure));
-  const { etag, large, release } = asked;
+    .catch((failure) => pieces.fail(failure))
+    .finally(read);
+  const { etag, large } = asked;
   return { etag, large, release, pieces };
 }

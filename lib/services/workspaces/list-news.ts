@@ -54,7 +54,8 @@ export async function listNews(actor: Actor, input: z.input<typeof newsInput>): 
   const db = database();
   const [clock] = (await db.execute<{ now: string }>(sql`select now()::text as now`)).rows;
   const now = new Date(clock!.now).toISOString();
-  const since = new Date(Date.parse(after ?? now) - OVERLAP * 1000);
+  // PostgreSQL does not read years as JavaScript writes the first ones; before all of them nothing happened here.
+  const since = new Date(Math.max(0, Date.parse(after ?? now) - OVERLAP * 1000));
   const isOwn = eq(run.requestedBy, actor.userId);
   const ended = or(
     and(inArray(run.status, ["failed", "cancelled"]), gt(run.finishedAt, since)),

@@ -19,7 +19,7 @@ export const GET = route<{ id: string }>(async (request, { id }) => {
   const form = acceptedType(request, FORMS);
   const answer =
     form === "text/csv"
-      ? await csvAnswer(actor, id)
+      ? await csvAnswer(request, actor, id)
       : form === "application/octet-stream"
         ? await columnsAnswer(request, actor, id)
         : await documentAnswer(request, actor, id);

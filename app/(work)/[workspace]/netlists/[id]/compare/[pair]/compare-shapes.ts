@@ -40,9 +40,9 @@ export interface Side {
 /** What an address compares: two revisions, or one with the unsaved draft that this browser keeps. */
 export type Pair = readonly [before: number, after: number | "draft"];
 
-/** The pair that `3..5` or `3..draft` names; null for anything else. */
+/** The pair that `3..5` or `3..draft` names, dots written as they are or as `%2E`; null for anything else. */
 export function readPair(text: string): Pair | null {
-  const [, a, b] = /^([1-9]\d{0,8})\.\.([1-9]\d{0,8}|draft)$/.exec(text) ?? [];
+  const [, a, b] = /^([1-9]\d{0,8})\.\.([1-9]\d{0,8}|draft)$/.exec(text.replaceAll(/%2e/gi, ".")) ?? [];
   return a === undefined || b === undefined ? null : [Number(a), b === "draft" ? b : Number(b)];
 }
 

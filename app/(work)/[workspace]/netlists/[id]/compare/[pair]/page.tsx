@@ -21,7 +21,7 @@ interface Props {
 }
 
 const load = cache(async (workspace: string, id: string, pair: string) => {
-  const numbers = readPair(decodeURIComponent(pair));
+  const numbers = readPair(pair);
   if (numbers === null) notFound();
   const path = `/${workspace}/netlists/${id}/compare/${pair}`;
   const actor = await answered(actorFor(workspace), path);
