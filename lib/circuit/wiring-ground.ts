@@ -5,7 +5,7 @@ import type { Token } from "@/lib/language/token";
 import { GROUND, list, type Wiring } from "./wiring-graph";
 
 /** How ground is called elsewhere. */
-const LIKE_GROUND = /^(?:ground|[ad]?gnd|earth|vss)$/iu;
+export const LIKE_GROUND = /^(?:ground|[ad]?gnd|earth|vss)$/iu;
 
 /**
  * Whether a pin of the circuit is on `ground`. Drivers count their output from ground, so that a circuit with one could be solved

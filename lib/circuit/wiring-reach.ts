@@ -3,6 +3,7 @@ import { nearest } from "@/lib/language/nearest";
 import type { Report } from "@/lib/language/report";
 import { UnionFind } from "./union-find";
 import { GROUND, list, type Wiring } from "./wiring-graph";
+import { LIKE_GROUND } from "./wiring-ground";
 import { drivesCurrent, elementsOf, holdsVoltage, isDriver, netsSensed } from "./wiring-laws";
 
 /** Parameters that give a transistor base current. */
@@ -107,6 +108,7 @@ function checkEnds(wiring: Wiring, isSettled: (net: number) => boolean, report: 
 /** The net of the same instance, or of the file, that was probably meant: its name as it is written there. */
 function nearAround(name: string, nets: readonly string[]): string | null {
   const own = name.lastIndexOf(".") + 1;
+  if (LIKE_GROUND.test(name.slice(own))) return nets.includes("ground") ? "ground" : null;
   const prefix = name.slice(0, own);
   const around = nets.filter((net) => net.startsWith(prefix) && !net.includes(".", own));
   return nearest(

@@ -18,8 +18,12 @@ export interface Owner {
   readonly pins: readonly string[];
 }
 
-/** Names that the terminal resistances of a transistor go by elsewhere. */
+/** Names that parameters go by on data sheets. */
 const KNOWN_ELSEWHERE: Readonly<Record<string, string>> = {
+  beta: "beta_f",
+  hFE: "beta_f",
+  Vos: "offset",
+  Ib: "bias",
   Rb: "R_base",
   Re: "R_emitter",
   Rc: "R_collector",

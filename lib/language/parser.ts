@@ -78,8 +78,22 @@ class StatementParser {
       if (STATEMENT_WORDS.has(first.text)) return this.known(cursor.take().text, span);
     }
     if (first.kind === "number" && cursor.isSymbol("--", 1)) return this.parts.path(span);
-    cursor.fail("FRM1", first, `No statement begins with ${quote(first.text)}; ${meant(cursor)}.`);
-    return { kind: "broken", declares: null, ...span };
+    return this.unknown(first, span);
+  }
+
+  /** A line that begins with nothing known. `NAME = VALUE` names a value all the same, so that the uses of it stay quiet. */
+  private unknown(first: Token, span: { from: number; to: number }): StatementForm {
+    const { cursor } = this;
+    const message = `No statement begins with ${quote(first.text)}; ${meant(cursor)}.`;
+    const isNamed = first.kind === "word" && cursor.isSymbol("=", 1);
+    if (!isNamed) {
+      cursor.fail("FRM1", first, message);
+      return { kind: "broken", declares: null, ...span };
+    }
+    const name = cursor.takeWord();
+    const fix = { title: "Write let before it", from: first.from, to: first.from, text: "let " };
+    cursor.fail("FRM1", first, message, fix);
+    return { kind: "broken", declares: name, ...span };
   }
 
   private known(word: string, span: { from: number; to: number }): StatementForm {

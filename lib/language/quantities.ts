@@ -147,17 +147,19 @@ export class Quantities {
     const wanted = sameDimension(want.dimension, PURE) ? "a pure number" : `in ${want.unit}`;
     if (this.hasDecimalComma(expression)) return;
     const message = `${want.what} is ${wanted}, but ${this.agreement.text(expression)} is ${describeDimension(typed.dimension)}`;
+    const isNegative = expression.kind === "unary" && expression.operator === "-";
+    const number = isNegative ? expression.operand : expression;
     const unit =
-      expression.kind !== "number" || sameDimension(want.dimension, PURE)
+      number.kind !== "number" || sameDimension(want.dimension, PURE)
         ? null
-        : expression.unit === null
+        : number.unit === null
           ? want.unit
-          : mistakenUnit(expression.unit.text, want.dimension);
-    if (unit === null || expression.kind !== "number") {
+          : mistakenUnit(number.unit.text, want.dimension);
+    if (unit === null || number.kind !== "number") {
       this.report.error("UNI3", expression, `${message}; ${mending(expression, want)}.`);
       return;
     }
-    const text = `${expression.value} ${unit}`;
+    const text = `${isNegative ? "-" : ""}${number.value} ${unit}`;
     const fix = { title: `Write ${text}`, from: expression.from, to: expression.to, text };
     this.report.error("UNI3", expression, `${message}; write ${quote(text)}.`, fix);
   }

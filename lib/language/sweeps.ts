@@ -5,6 +5,7 @@ import type { Agreement } from "./agreement";
 import type { Knob, Sweep } from "./ast";
 import type { Flat } from "./expand";
 import { count, MOST_POINTS } from "./limits";
+import { spellQuantity } from "./literal";
 import { Names } from "./names";
 import type { Quantities, Want } from "./quantities";
 import type { Report } from "./report";
@@ -198,7 +199,9 @@ export class SweepCheck {
     }
     const range = this.ranges.get(name);
     if (!range || (low >= range.low && high <= range.high)) return true;
-    const message = `The sweep leaves the range of the knob ${quote(name)}; narrow the sweep or widen the range.`;
+    const unit = unitOf(this.known.get(name)!.dimension);
+    const bounds = `${spellQuantity(range.low, unit)} .. ${spellQuantity(range.high, unit)}`;
+    const message = `The sweep leaves the range of the knob ${quote(name)}, ${bounds}; narrow the sweep or widen the range.`;
     this.report.error("PLN6", span, message);
     return false;
   }

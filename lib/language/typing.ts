@@ -273,6 +273,16 @@ export class Typing {
   }
 
   private unknownFunction(callee: Word): void {
+    if (callee.text === "log") {
+      const message = "`log` is no function, for it may mean either of two; write `log10` or `ln`.";
+      this.report.error("NAM10", callee, message, {
+        title: "Change to log10",
+        from: callee.from,
+        to: callee.to,
+        text: "log10",
+      });
+      return;
+    }
     const search = () => nearest(callee.text, [...Object.keys(FUNCTIONS), ...Object.keys(REDUCTIONS)]);
     const all = "the functions are exp, ln, log10, sqrt, abs, min, max, tanh, atan and if";
     this.report.propose("NAM10", callee, `${quote(callee.text)} is no function`, search, all);

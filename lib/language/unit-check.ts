@@ -68,6 +68,12 @@ export function unitOfLiteral(
     report.error("UNI1", literal, message, change(literal, proposal));
     return null;
   }
+  if (/^dB$/iu.test(word.text)) {
+    const proposal = `${Number((10 ** (literal.value / 20)).toPrecision(4))}`;
+    const message = `A ratio is given as a number, not in ${quote(word.text)}; for voltages and currents write ${quote(proposal)}.`;
+    report.error("UNI1", literal, message, change(literal, proposal));
+    return null;
+  }
   reportUnknownUnit(word, report);
   return null;
 }

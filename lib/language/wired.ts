@@ -122,6 +122,12 @@ export class Wirer {
       else if (setting.name.text === "value" && KINDS[kind].value !== null) value = setting;
       else settings.push(setting);
     }
+    const misnamed = this.misnamed(kind, settings, seen);
+    if (misnamed !== null) {
+      settings.splice(settings.indexOf(misnamed.setting), 1);
+      seen.add(misnamed.pin);
+      this.pin({ ...misnamed.setting, name: { ...misnamed.setting.name, text: misnamed.pin } }, pins);
+    }
     const open = KINDS[kind].pins.filter((pin) => !seen.has(pin));
     if (open.length > 0 && statement.whole) {
       const which = open.length === 1 ? `pin ${quote(open[0]!)}` : `pins ${open.map(quote).join(", ")}`;
@@ -155,6 +161,25 @@ export class Wirer {
       for (const port of net.through ?? []) this.names.feed(port, { element: name.text, pin });
     }
     this.wired.push({ name, kind, model, pins, ...rest });
+  }
+
+  /** The one setting that is surely meant for the one pin that is left: it gives a net and names nothing of its kind. */
+  private misnamed(
+    kind: ElementKind,
+    settings: readonly Setting[],
+    seen: ReadonlySet<string>,
+  ): { setting: Setting; pin: string } | null {
+    const open = KINDS[kind].pins.filter((pin) => !seen.has(pin));
+    const strange = settings.filter(
+      ({ name, value }) => plainName(value) !== null && !Object.hasOwn(KINDS[kind].parameters, name.text),
+    );
+    const [setting, pin] = [strange[0], open[0]];
+    if (setting === undefined || pin === undefined || strange.length > 1 || open.length > 1) return null;
+    const { text, from, to } = setting.name;
+    const pins = KINDS[kind].pins.join(", ");
+    const message = `${article(kind)} ${kind} has no pin ${quote(text)}, and its pin ${quote(pin)} is open; its pins are ${pins}.`;
+    this.report.error("WIR5", setting.name, message, { title: `Change to ${pin}`, from, to, text: pin });
+    return { setting, pin };
   }
 
   private pin(setting: Setting, pins: Record<string, Word>): void {

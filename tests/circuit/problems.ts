@@ -142,6 +142,12 @@ export const WIRING_PROBLEMS: readonly Problem[] = [
     code: "WIR8",
     text: lines("in -- R2 : resistor 1 kΩ -- m", "«A1 : amp { plus = in, minus = m, out = ground }»"),
   },
+  {
+    code: "WIR1",
+    text: lines("in -- R2 : resistor 1 kΩ -- «GND»"),
+    mended: lines("in -- R2 : resistor 1 kΩ -- ground"),
+    says: "did you mean `ground`?",
+  },
   { code: "WIR9", text: "«»" },
   {
     code: "WIR10",

@@ -26,7 +26,8 @@ export const LANGUAGE_PROBLEMS: readonly Problem[] = [
   { code: "TXT3", text: within("let a = «1e999» V") },
 
   { code: "FRM1", text: within("«wire» a b"), says: "`show`" },
-  { code: "FRM1", text: within("«a» = 1 V"), says: "write `let`" },
+  { code: "FRM1", text: within("«a» = 1 V"), mended: within("let a = 1 V"), says: "write `let`" },
+  { code: "FRM1", text: within("«a» = 1 kΩ\nin -- R2 : resistor a -- ground") },
   { code: "FRM1", text: within("«}»") },
   { code: "FRM2", text: within("let «1» = 1 V") },
   { code: "FRM2", text: within("let a «1» V") },
@@ -215,6 +216,12 @@ export const LANGUAGE_PROBLEMS: readonly Problem[] = [
   { code: "UNI10", text: within("R2 : resistor { left = in «± 1 %», right = ground, value = 1 kΩ }") },
 
   { code: "WIR5", text: within(`${amp}\n«A1» : amp { plus = ground, minus = in }`), says: "`out`" },
+  {
+    code: "WIR5",
+    text: within(`${npn}\nQ1 : array { «collector» = in, b = in, e = ground }`),
+    mended: within(`${npn}\nQ1 : array { c = in, b = in, e = ground }`),
+    says: "its pin `c` is open",
+  },
 
   {
     code: "PLN1",
@@ -230,7 +237,11 @@ export const LANGUAGE_PROBLEMS: readonly Problem[] = [
   { code: "PLN5", text: within("knob k = 1 V\nsweep k from 1 V to 2 V, step «-1 V»") },
   { code: "PLN5", text: within("knob k = 1 V\nsweep k from 1 V to 2 V, step «0 V»") },
   { code: "PLN6", text: within("knob k = «3 V» in 0 V .. 2 V") },
-  { code: "PLN6", text: within("knob k = 1 V in 0 V .. 2 V\nsweep k «from 1 V to 3 V, 5 points»") },
+  {
+    code: "PLN6",
+    text: within("knob k = 1 V in 0 V .. 2 V\nsweep k «from 1 V to 3 V, 5 points»"),
+    says: "0 V .. 2 V",
+  },
   { code: "PLN6", text: within("sweep temperature «over 0 K, 300 K»") },
   {
     code: "PLN7",

@@ -114,6 +114,23 @@ export const SPELLING_PROBLEMS: readonly Problem[] = [
     text: within("model m : npn { Is = 1 fA, «Rb» = 1 Ω }"),
     mended: within("model m : npn { Is = 1 fA, R_base = 1 Ω }"),
   },
+  {
+    code: "NAM6",
+    text: within("model m : npn { Is = 1 fA, «beta» = 100 }"),
+    mended: within("model m : npn { Is = 1 fA, beta_f = 100 }"),
+  },
+  {
+    code: "UNI1",
+    text: within("model m : opamp { gain = «120 dB» }"),
+    mended: within("model m : opamp { gain = 1000000 }"),
+    says: "A ratio is given as a number",
+  },
+  {
+    code: "UNI3",
+    text: within("sweep temperature over «-20 C», 25 °C"),
+    mended: within("sweep temperature over -20 °C, 25 °C"),
+  },
+  { code: "NAM10", text: within("let a = «log»(10)"), mended: within("let a = log10(10)"), says: "`ln`" },
 
   { code: "UNI3", text: within("ground -- R2 : resistor «1 V» -- in"), says: "give a value in Ω" },
   { code: "UNI3", text: within("model m : diode { Is = 1 fA, n = «1 V» }"), says: "leave its unit out" },
