@@ -40,6 +40,11 @@ function canListen(port: number, host: string): Promise<number | null> {
   });
 }
 
+/** The port that was chosen a while ago, where nobody else has taken it since; else another one, or a complaint, as at first. */
+export async function keepPort(port: number, given: string | undefined, host?: string): Promise<number> {
+  return (await isFree(port, host)) ? port : choosePort(given, host);
+}
+
 /**
  * The port for the web service. One that was asked for (`given`, as in PORT) must be free; otherwise the usual one, or the next
  * free one after it.

@@ -8,7 +8,7 @@ import type { Hold } from "./holder";
 import { onInterrupt } from "./interrupt";
 import { type Keeper, keep, type Told } from "./keeper";
 import { isRoot } from "./machine";
-import { choosePort, freePort } from "./ports";
+import { choosePort, freePort, keepPort } from "./ports";
 import { type Running, startWeb, startWorker } from "./programs";
 import { closeServices, holdForPrograms, stopServices } from "./service";
 import { requireSpace } from "./space";
@@ -56,8 +56,7 @@ async function start(): Promise<void> {
   mkdirSync(folders.data, { recursive: true });
   held = await holdForPrograms(folders.holder);
   const host = process.env.HOST || "127.0.0.1";
-  const port = await choosePort(process.env.PORT, host);
-  const address = process.env.NEXTAUTH_URL || `http://localhost:${port}`;
+  const chosen = await choosePort(process.env.PORT, host);
 
   console.log(`Starting the database in ${folders.data}.`);
   const database = await openDatabase(folders, told);
@@ -69,6 +68,9 @@ async function start(): Promise<void> {
   // After the build, so that the demo's runs do not wait a minute for their worker.
   const password = await prepare(database, folders);
 
+  // What listens there by now would answer in our place.
+  const port = await keepPort(chosen, process.env.PORT, host);
+  const address = process.env.NEXTAUTH_URL || `http://localhost:${port}`;
   const running: Running = {
     databaseUrl: database.url,
     secret: database.settings.secret,

@@ -1,6 +1,6 @@
 import { createServer, type Server } from "node:net";
 import { afterEach, describe, expect, it } from "vitest";
-import { choosePort, freePort, isFree, USUAL_PORT } from "@/lib/stack/ports";
+import { choosePort, freePort, isFree, keepPort, USUAL_PORT } from "@/lib/stack/ports";
 
 const open: Server[] = [];
 
@@ -39,6 +39,14 @@ describe("a port", () => {
 
   it.each(["http", "0", "65536", "43.5", "-1"])("cannot be %s", async (given) => {
     await expect(choosePort(given)).rejects.toThrow(`PORT is "${given}", which is no port.`);
+  });
+
+  it("is looked at again after the build: kept while free, given up for another or refused when not", async () => {
+    const port = await freePort();
+    expect(await keepPort(port, String(port))).toBe(port);
+    await listen(port, "127.0.0.1");
+    await expect(keepPort(port, String(port))).rejects.toThrow(`Port ${port} is taken by another program.`);
+    expect(await keepPort(port, undefined)).toBeGreaterThanOrEqual(USUAL_PORT);
   });
 
   it("is the usual one or a later one when none was asked for", async () => {
