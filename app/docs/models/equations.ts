@@ -132,7 +132,9 @@ read level = highest(out.v)`,
       },
       {
         says: "The series resistance is not an inner net: $u$ is eliminated by the Wright omega function, for which $w + ln w = z$ with $w = ω ( z )$. With $a = I_s R_s / η$:",
-        formulas: ["w = ω big{frac{V}{η} + a + ln a} , | I = frac{η w}{R_s} − I_s"],
+        formulas: [
+          'w = ω big{frac{V + R_s I_"photo"}{η} + a + ln a} , | I = frac{η w}{R_s} − I_s − I_"photo"',
+        ],
       },
       {
         says: "With `V_breakdown`, a second exponential carries the reverse current, with $η_b = n_b V_T$; its last term lets no current flow at 0 V:",
