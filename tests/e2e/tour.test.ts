@@ -82,7 +82,7 @@ test("the whole tour is walked by keyboard, through signing in, and kept in the 
   await goOn(page);
 
   await press(page, button(page, "Do it for me"));
-  await expectDone(page, /^Done: 181 of 200 draws hold: 86.% to 94.% of parts/u);
+  await expectDone(page, /^Done: 181 of 200 draws hold: 86.% to 94.% of boards/u);
   await page
     .getByText(
       /^24.321 points solved here in .*, all proved, worst .* a preview, kept nowhere\. A requirement is broken\.$/u,

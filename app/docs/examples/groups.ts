@@ -33,7 +33,7 @@ export const GROUPS: readonly {
   },
   {
     title: "Roots",
-    about: "A part of a logarithm is the logarithm of the root.",
+    about: "Half of a logarithm is the logarithm of the square root.",
     names: ["square-root-extractor", "true-rms"],
   },
   {

@@ -225,7 +225,7 @@ read error = highest(copy) - 1`,
     ],
     remarks: [
       "Behavioural: bandwidth, slew rate, common mode, supply current and noise are left out.",
-      "An ideal amplifier is the same law without its last term, not one with a gain of a thousand million.",
+      "An ideal amplifier is the same law without its last term, not one with a gain of 1e9.",
     ],
     sample: `title "Offset through a gain of ten"
 knob V_in = 10 mV

@@ -15,7 +15,7 @@ show out = anode.v
 read slope = per_decade(out)
 require slope within 59.16 mV ± 0.1 % as "slope"
 require out <= 0.72 V as "never above 0.72 V"
-require out within 0.532 V ± 2 mV at I_in = 1 µA in 50 % of draws as "zero, in half of the draws"
+require out within 0.532 V ± 2 mV at I_in = 1 µA in 50 % of draws as "level, in half of the draws"
 require out rising as "rises"`;
 
 /** What makes a requirement hold, break, or stay without data. */
@@ -44,7 +44,7 @@ export function Judging() {
       <Text>
         <Prose>
           {
-            "The verdict of a run is `broken` if one of its requirements is, else `no data` if one is, else `holds`. A run without requirements has none. With `seek`, a requirement has to hold at every stable operating point that was found."
+            "The verdict of a run is `broken` if one of its requirements is, else `no data` if one is, else `holds`. A run without requirements reads `holds` where every point is solved, else `no data`. With `seek`, a requirement has to hold at every stable operating point that was found."
           }
         </Prose>
       </Text>

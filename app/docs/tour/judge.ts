@@ -88,7 +88,7 @@ function ofDraws({ whole, text }: Scene): Judged {
   const percent = (share: number) => `${Math.round(100 * share)}\u202f%`;
   const { holds, of, low, high } = found;
   return done(
-    `${formatCount(holds)} of ${counted(of, "draw")} hold: ${percent(low)} to ${percent(high)} of parts, with 95\u202f% confidence.`,
+    `${formatCount(holds)} of ${counted(of, "draw")} hold: ${percent(low)} to ${percent(high)} of boards, with 95\u202f% confidence.`,
   );
 }
 

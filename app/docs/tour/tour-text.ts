@@ -1,7 +1,7 @@
 /** What the tour begins with, in canonical form. */
 export const TOUR_TEXT = `# A first netlist. The circuit, its parts and its figures are invented for this tour.
-# An ideal amplifier holds the summing net at zero, so that the whole input current runs through the
-# junction, whose voltage is the logarithm of that current. The junction has a bulk resistance.
+# The amplifier holds the summing net near zero, so that nearly the whole input current runs through
+# the junction, whose voltage goes with the logarithm of that current. It has a bulk resistance.
 
 title "First tour: log converter"
 
