@@ -103,6 +103,16 @@ describe("storeys of a run with draws and readings", () => {
     expect(cold[0]!.allowed).toEqual([]);
   });
 
+  it("number a low axis at three values at least, in the unit of those", () => {
+    const wide = [{ ...allowed[0]!, low: -0.59e-3, high: 0.59e-3 }];
+    const rest = { allowed: wide, bands: new Map(), worst: null };
+    for (const narrow of [false, true, "brief"] as const) {
+      const [, below] = storeyViews(set, USUAL_VIEW, horizontalAxis(set, USUAL_VIEW, 600), narrow, rest);
+      expect(below!.axis.labels.texts.size, String(narrow)).toBeGreaterThanOrEqual(3);
+      expect(below!.axis.labels.unit).toMatch(/^[mµ]V$/u);
+    }
+  });
+
   it("do not lie flat for the sake of limits far beyond them", () => {
     const far = [{ ...allowed[0]!, low: -10, high: 10 }];
     const [, below] = storeyViews(set, USUAL_VIEW, horizontalAxis(set, USUAL_VIEW, 600), false, {

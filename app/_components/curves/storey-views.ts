@@ -109,11 +109,16 @@ export function storeyViews(
     const range = verticalRange(found, mapping);
     const height = heightOf(storeys.length, index, narrow);
     // Without a value there is nothing to number an axis by.
-    const ticks = found === null ? [] : ticksOf(range.from, range.to, mapping, Math.floor(height / 40));
+    const ticks = found === null ? [] : ticksOf(range.from, range.to, mapping, labelsIn(height));
     const axis = { mapping, range, ticks, labels: labelsOf(ticks, mapping, storey.unit, false), fit };
     const allowed = own.map((band) => shadeOf(set, band, horizontal.mapping, mapping));
     return { ...storey, ...branched, axis, height, bands, worst, allowed };
   });
+}
+
+/** How many labels a vertical axis carries at most: a low one four, since a value is read between two. */
+function labelsIn(height: number): number {
+  return Math.max(Math.floor(height / 40), Math.min(4, Math.floor(height / 24)));
 }
 
 function bandsOf(lines: readonly Line[], { bands }: Beside): BandView[] {
