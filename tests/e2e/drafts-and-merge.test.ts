@@ -41,7 +41,14 @@ test("a message is proposed from what changed, and may be taken", async () => {
   await page.keyboard.press("Control+s");
   await page.getByRole("button", { name: "Take this message" }).click();
   expect(await page.getByLabel("What changed (optional)").inputValue()).toBe("late added");
-  await page.getByRole("button", { name: "Save", exact: true }).click();
+  // However much changed, the way on is in sight of a low window.
+  const saving = page.getByRole("button", { name: "Save", exact: true });
+  await page.setViewportSize({ width: 1280, height: 260 });
+  const { y = 0, height = 0 } = (await saving.boundingBox()) ?? {};
+  expect(y + height).toBeGreaterThan(0);
+  expect(y + height).toBeLessThanOrEqual(260);
+  await page.setViewportSize({ width: 1280, height: 800 });
+  await saving.click();
   await page.getByText(/^revision 2$/).waitFor();
   const { message } = await (await page.request.get(`/api/v1/netlists/${id}/revisions/2`)).json();
   expect(message).toBe("late added");

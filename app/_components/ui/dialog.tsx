@@ -48,13 +48,8 @@ export function Dialog({
           <Radix.Title className="font-semibold text-lg">{title}</Radix.Title>
           <Radix.Description className="mt-1 text-quiet text-sm">{description}</Radix.Description>
           {children !== undefined && <div className="mt-4">{children}</div>}
-          <div
-            className={classNames(
-              "mt-6 flex flex-wrap justify-end gap-2",
-              // Where one scrolls, the way on stays in view.
-              wide && "sticky -bottom-6 -mx-6 -mb-6 border-t bg-surface px-6 py-4",
-            )}
-          >
+          {/* Where one scrolls, the way on stays in view. */}
+          <div className="sticky -bottom-6 -mx-6 mt-6 -mb-6 flex flex-wrap justify-end gap-2 border-t bg-surface px-6 py-4">
             {actions}
           </div>
         </Radix.Content>
