@@ -26,6 +26,17 @@ const BEND: RequirementDocument = {
   drawn: [0.00031],
 };
 
+test("values that lie close together are told with the digits that tell them apart", () => {
+  const value = { nominal: -0.9933, worst: -0.991201, low: -0.999912, high: -0.991201 };
+  const sentence = marginSentence({
+    ...BEND,
+    verdict: "holds",
+    allowed: { low: -1.025, high: -0.975 },
+    value,
+  });
+  expect(sentence).toContain("all values \u2212999.91 to \u2212991.2\u202fmV");
+});
+
 describe("places on a margin bar", () => {
   test("what is allowed and what is found stand on one scale with room at both ends", () => {
     // From −0.5 to 0.64 mV, and a tenth of that at each end: 1.368 mV in all, beginning at −0.614 mV.

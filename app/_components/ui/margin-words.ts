@@ -23,6 +23,12 @@ export function worstInWords({ value: { worst }, margin, unit }: RequirementDocu
   return formatQuantity(worst, unit, Math.min(9, Math.max(DIGITS, beyond + 2)));
 }
 
+/** As many digits as tell the ends of a span apart, with two of what lies between them. */
+function digitsApart(low: number, high: number): number {
+  const parts = Math.max(Math.abs(low), Math.abs(high)) / (high - low);
+  return Math.min(9, Math.max(DIGITS, Math.ceil(Math.log10(parts)) + 2));
+}
+
 /** "temperature 40 °C, draw 211"; empty where it is the same everywhere. Branches are counted from 1, as their list counts them. */
 export function placeInWords({ worst }: RequirementDocument): string {
   if (worst === null) return "";
@@ -48,7 +54,7 @@ export function marginSentence(requirement: RequirementDocument): string {
     parts.push(margin < 0 ? `missed by ${size}` : `margin ${size}`);
   }
   if (value.low !== null && value.high !== null && value.low !== value.high) {
-    const all = spanInWords(value.low, value.high, unit, DIGITS);
+    const all = spanInWords(value.low, value.high, unit, digitsApart(value.low, value.high));
     const nominal = value.nominal === null ? "not known" : formatQuantity(value.nominal, unit, DIGITS);
     parts.push(`all values ${all}, nominal ${nominal}`);
   }
