@@ -2,8 +2,9 @@ import { onePrefix } from "@/app/_components/ui/one-prefix";
 import { Cell, HeadCell, Table, TableFrame } from "@/app/_components/ui/table";
 import type { AxisDocument, ReadingDocument } from "@/lib/analyses/result";
 import { LineLink } from "./requirement-list";
-import { settingsOf } from "./spread/subjects";
+import { listedBeside, settingCount, settingsOf } from "./spread/subjects";
 import type { TextLinks } from "./text-links";
+import { UnlistedSettings } from "./unlisted-settings";
 
 interface Props {
   readonly readings: readonly ReadingDocument[];
@@ -19,8 +20,9 @@ const COLUMNS = 6;
 export function ReadingList({ readings, axes, links }: Props) {
   const numbers = readings.filter(({ per }) => per === "sweep");
   if (numbers.length === 0) return null;
-  const settings = settingsOf(axes);
-  const across = settings.length <= COLUMNS;
+  const count = settingCount(axes);
+  const settings = settingsOf(axes, listedBeside(numbers.length));
+  const across = count <= COLUMNS;
   return (
     <section aria-labelledby="readings">
       <h2 id="readings" className="caption">
@@ -28,11 +30,12 @@ export function ReadingList({ readings, axes, links }: Props) {
       </h2>
       <TableFrame label="Readings" className="mt-1 max-h-112 overflow-y-auto">
         {across ? (
-          <Across numbers={numbers} settings={settings} links={links} />
+          <Across numbers={numbers} settings={settings} count={count} links={links} />
         ) : (
-          <Down numbers={numbers} settings={settings} />
+          <Down numbers={numbers} settings={settings} count={count} />
         )}
       </TableFrame>
+      <UnlistedSettings listed={settings.length} count={count} />
     </section>
   );
 }
@@ -40,10 +43,12 @@ export function ReadingList({ readings, axes, links }: Props) {
 interface TableProps {
   readonly numbers: readonly ReadingDocument[];
   readonly settings: readonly string[];
+  /** Settings of the run, of which the first are listed. */
+  readonly count: number;
 }
 
 /** A row a reading, a column a setting. */
-function Across({ numbers, settings, links }: TableProps & { readonly links: TextLinks }) {
+function Across({ numbers, settings, count, links }: TableProps & { readonly links: TextLinks }) {
   return (
     <Table aria-labelledby="readings">
       <thead>
@@ -66,7 +71,7 @@ function Across({ numbers, settings, links }: TableProps & { readonly links: Tex
             {settings.map((words, row) => (
               <Cell key={words} figure>
                 {written(reading, settings.length)(reading.values[row])}
-                <Spread reading={reading} settings={settings.length} row={row} />
+                <Spread reading={reading} settings={count} listed={settings.length} row={row} />
               </Cell>
             ))}
           </tr>
@@ -77,7 +82,7 @@ function Across({ numbers, settings, links }: TableProps & { readonly links: Tex
 }
 
 /** A row a setting, a column a reading. */
-function Down({ numbers, settings }: TableProps) {
+function Down({ numbers, settings, count }: TableProps) {
   return (
     <Table aria-labelledby="readings">
       <thead>
@@ -97,7 +102,7 @@ function Down({ numbers, settings }: TableProps) {
             {numbers.map((reading) => (
               <Cell key={reading.name} figure>
                 {written(reading, settings.length)(reading.values[row])}
-                <Spread reading={reading} settings={settings.length} row={row} />
+                <Spread reading={reading} settings={count} listed={settings.length} row={row} />
               </Cell>
             ))}
           </tr>
@@ -121,13 +126,14 @@ function written({ values, unit }: ReadingDocument, settings: number) {
 interface SpreadProps {
   readonly reading: ReadingDocument;
   readonly settings: number;
+  readonly listed: number;
   readonly row: number;
 }
 
 /** The least and the most of a setting over the random draws; the first rows are the nominal design. */
-function Spread({ reading, settings, row }: SpreadProps) {
+function Spread({ reading, settings, listed, row }: SpreadProps) {
   const { values } = reading;
-  const show = written(reading, settings);
+  const show = written(reading, listed);
   const drawn: number[] = [];
   let unknown = 0;
   for (let at = settings + row; at < values.length; at += settings) {

@@ -8,7 +8,10 @@ export const MOST = 6;
 export interface ComparedRun {
   /** "A", "B", … in the order of the address. */
   readonly letter: string;
+  /** Its plan is an outline: what lies between the ends of long axes is in `settings`, or not needed. */
   readonly run: RunState;
+  /** Its first settings in words, in the order in which readings are kept. */
+  readonly settings: readonly string[];
   /** What changed in its text against that of the first run; null for the first. */
   readonly changes: TextChanges | null;
 }

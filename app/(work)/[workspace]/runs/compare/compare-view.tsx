@@ -9,7 +9,7 @@ import { PageHeader } from "@/app/_components/ui/page-header";
 import { EmptyState } from "@/app/_components/ui/states";
 import { useAddress } from "@/app/_components/ui/use-address";
 import { isLive, type RunState } from "../[id]/run-shapes";
-import { settingsOf } from "../[id]/spread/subjects";
+import { settingCount } from "../[id]/spread/subjects";
 import { ChosenRuns } from "./chosen-runs";
 import { type ComparedRun, MOST, nameOf } from "./compare-shapes";
 import { readCompareState, writeCompareState } from "./compare-state";
@@ -111,7 +111,8 @@ export function CompareView({ workspace, runs, lost, search }: Props) {
               runs={runs.map((one) => ({
                 head: nameOf(one, runs),
                 readings: one.run.judgement?.readings ?? [],
-                settings: settingsOf(one.run.plan.axes),
+                settings: one.settings,
+                settingCount: settingCount(one.run.plan.axes),
               }))}
             />
             <TextDifferences runs={runs} workspace={workspace} />

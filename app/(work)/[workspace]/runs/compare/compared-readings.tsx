@@ -1,7 +1,10 @@
+import { counted } from "@/app/_components/ui/count";
 import { onePrefix } from "@/app/_components/ui/one-prefix";
 import { Cell, HeadCell, Table, TableFrame } from "@/app/_components/ui/table";
 import type { ReadingDocument } from "@/lib/analyses/result";
 import { formatQuantity } from "@/lib/units/quantity";
+import { listedBeside } from "../[id]/spread/subjects";
+import { UnlistedSettings } from "../[id]/unlisted-settings";
 import { type SideBySide, sideBySide } from "./side-by-side";
 
 /** A run as its readings are compared. */
@@ -9,14 +12,22 @@ export interface ReadRun {
   /** What stands over its column. */
   readonly head: string;
   readonly readings: readonly ReadingDocument[];
-  /** Its settings in words, in the order in which readings are kept; one empty text where it has none. */
+  /** Its first settings in words, in the order in which readings are kept; one empty text where it has none. */
   readonly settings: readonly string[];
+  /** How many it has. */
+  readonly settingCount: number;
 }
+
+/** Rows of the table, at most: readings of runs that have no name in common stand below each other. */
+const MOST_ROWS = 6_000;
 
 /** The nominal readings of all runs at each setting, and how far they lie from those of the first run, as they are and in relation. */
 export function ComparedReadings({ runs }: { readonly runs: readonly ReadRun[] }) {
-  const rows = sideBySide(runs.map(({ readings, settings }) => labelled(readings, settings)));
-  if (rows.length === 0) return null;
+  const all = sideBySide(runs.map(labelled));
+  if (all.length === 0) return null;
+  const rows = all.slice(0, MOST_ROWS);
+  const largest = largestOf(rows);
+  const shortened = runs.find((one) => listedOf(one).length < one.settingCount);
   return (
     <section aria-labelledby="readings">
       <h2 id="readings" className="caption">
@@ -37,14 +48,12 @@ export function ComparedReadings({ runs }: { readonly runs: readonly ReadRun[] }
           <tbody>
             {rows.map(({ label, each }) => {
               const [first] = each;
-              const { name, unit } = each.find((one) => one !== null)!;
-              const known = valuesOf(rows, name, unit);
               return (
                 <tr key={label}>
                   <Cell className="min-w-32">{label}</Cell>
                   {each.map((one, k) => (
                     <Cell key={runs[k]!.head} figure>
-                      {one === null ? <span className="text-quiet">not read</span> : written(one, known)}
+                      {one === null ? <span className="text-quiet">not read</span> : written(one, largest)}
                       {k > 0 && <Moved from={first ?? null} to={one} />}
                     </Cell>
                   ))}
@@ -54,15 +63,27 @@ export function ComparedReadings({ runs }: { readonly runs: readonly ReadRun[] }
           </tbody>
         </Table>
       </TableFrame>
+      {shortened !== undefined && (
+        <UnlistedSettings listed={listedOf(shortened).length} count={shortened.settingCount} />
+      )}
+      {rows.length < all.length && (
+        <p className="mt-1 text-quiet text-sm">
+          {counted(all.length - rows.length, "row")} more are left out.
+        </p>
+      )}
     </section>
   );
 }
 
-/** All values of one reading, at every setting and in every run. */
-function valuesOf(rows: readonly SideBySide<Read>[], name: string, unit: string): number[] {
-  return rows.flatMap(({ each }) =>
-    each.flatMap((one) => (one?.value == null || one.name !== name || one.unit !== unit ? [] : [one.value])),
-  );
+/** The values of each reading that are shown, at every setting and in every run, by its name and unit: the largest alone. */
+function largestOf(rows: readonly SideBySide<Read>[]): Map<string, number> {
+  const found = new Map<string, number>();
+  for (const one of rows.flatMap(({ each }) => each)) {
+    if (one?.value == null) continue;
+    const key = `${one.name} ${one.unit}`;
+    if (Math.abs(one.value) > Math.abs(found.get(key) ?? 0)) found.set(key, one.value);
+  }
+  return found;
 }
 
 interface Read {
@@ -72,24 +93,28 @@ interface Read {
   readonly value: number | null;
 }
 
-function labelled(readings: readonly ReadingDocument[], settings: readonly string[]): Read[] {
-  return readings
-    .filter(({ per }) => per === "sweep")
-    .flatMap(({ name, unit, values }) =>
-      settings.map((setting, row) => ({
-        name,
-        label: setting === "" ? name : `${name}, ${setting}`,
-        unit,
-        value: values[row] ?? null,
-      })),
-    );
+const numbersOf = ({ readings }: ReadRun) => readings.filter(({ per }) => per === "sweep");
+
+function listedOf(run: ReadRun): readonly string[] {
+  return run.settings.slice(0, listedBeside(numbersOf(run).length));
 }
 
-/** With the prefix of the largest of a row, so that values can be compared at sight. */
-function written({ value, unit }: Read, all: readonly number[]): string {
+function labelled(run: ReadRun): Read[] {
+  const settings = listedOf(run);
+  return numbersOf(run).flatMap(({ name, unit, values }) =>
+    settings.map((setting, row) => ({
+      name,
+      label: setting === "" ? name : `${name}, ${setting}`,
+      unit,
+      value: values[row] ?? null,
+    })),
+  );
+}
+
+/** With the prefix of the largest of its reading, so that values can be compared at sight. */
+function written({ name, value, unit }: Read, largest: ReadonlyMap<string, number>): string {
   if (value === null) return "no value";
-  const largest = all.reduce((most, one) => (Math.abs(one) > Math.abs(most) ? one : most), value);
-  const { texts, unit: shared } = onePrefix([value, largest], unit, 6, true);
+  const { texts, unit: shared } = onePrefix([value, largest.get(`${name} ${unit}`) ?? value], unit, 6, true);
   return shared === "" ? texts[0]! : `${texts[0]}\u202f${shared}`;
 }
 

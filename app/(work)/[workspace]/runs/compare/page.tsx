@@ -1,4 +1,5 @@
 import type { Metadata } from "next";
+import { outlineOf } from "@/lib/analyses/plan";
 import { actorFor } from "@/lib/auth/actor";
 import { AppError } from "@/lib/errors";
 import { changesOfTexts } from "@/lib/language/changes/of-texts";
@@ -6,6 +7,7 @@ import type { Actor } from "@/lib/permissions/actor";
 import { getRevision } from "@/lib/services/netlists/get-revision";
 import { getRun } from "@/lib/services/runs/get-run";
 import { answered } from "../../../answered";
+import { settingsOf } from "../[id]/spread/subjects";
 import { type ComparedRun, letterOf, readRuns } from "./compare-shapes";
 import { CompareView } from "./compare-view";
 
@@ -30,7 +32,8 @@ export default async function CompareRunsPage({ params, searchParams }: Props) {
   const first = known[0];
   const runs = known.map(({ run, text }, index): ComparedRun => {
     const changes = index === 0 ? null : changesOfTexts(first!.text, text);
-    return { letter: letterOf(index), run, changes };
+    const settings = settingsOf(run.plan.axes);
+    return { letter: letterOf(index), run: { ...run, plan: outlineOf(run.plan) }, settings, changes };
   });
   search.delete("runs");
   return (

@@ -1,7 +1,8 @@
 import { Cell, HeadCell, Table, TableFrame } from "@/app/_components/ui/table";
 import type { AxisDocument, ReadingDocument } from "@/lib/analyses/result";
 import { formatQuantity } from "@/lib/units/quantity";
-import { settingsOf } from "../spread/subjects";
+import { listedBeside, settingCount, settingsOf } from "../spread/subjects";
+import { UnlistedSettings } from "../unlisted-settings";
 
 interface Props {
   readonly readings: readonly ReadingDocument[];
@@ -12,7 +13,8 @@ interface Props {
 /** The readings that are one number a sweep: nominal at each setting, and the least and the most of the draws. */
 export function ReportReadings({ readings, axes, draws }: Props) {
   const numbers = readings.filter(({ per }) => per === "sweep");
-  const settings = settingsOf(axes);
+  const count = settingCount(axes);
+  const settings = settingsOf(axes, listedBeside(numbers.length));
   if (numbers.length === 0) return null;
   const isDrawn = draws > 0;
   return (
@@ -33,11 +35,7 @@ export function ReportReadings({ readings, axes, draws }: Props) {
           <tbody>
             {numbers.flatMap((reading) =>
               settings.map((words, row) => {
-                const drawn = reading.values
-                  .filter(
-                    (value, at) => at >= settings.length && at % settings.length === row && value !== null,
-                  )
-                  .map(Number);
+                const drawn = drawnOf(reading, count, row);
                 const show = (value: number | null | undefined) =>
                   value === null || value === undefined ? "no value" : formatQuantity(value, reading.unit, 6);
                 return (
@@ -58,8 +56,19 @@ export function ReportReadings({ readings, axes, draws }: Props) {
           </tbody>
         </Table>
       </TableFrame>
+      <UnlistedSettings listed={settings.length} count={count} />
     </section>
   );
+}
+
+/** What the draws make of a reading at one of `count` settings. */
+function drawnOf({ values }: ReadingDocument, count: number, setting: number): number[] {
+  const drawn: number[] = [];
+  for (let at = count + setting; at < values.length; at += count) {
+    const value = values[at];
+    if (value !== null && value !== undefined) drawn.push(value);
+  }
+  return drawn;
 }
 
 function least(values: readonly number[]): number {

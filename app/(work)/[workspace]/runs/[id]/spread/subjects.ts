@@ -1,5 +1,6 @@
 import { formatKnob } from "@/app/_components/curves/figures-in-words";
 import type { Budget } from "@/lib/analyses/budget";
+import { countOf } from "@/lib/analyses/plan";
 import type { AxisDocument, ReadingDocument, RequirementDocument } from "@/lib/analyses/result";
 import type { Limits } from "./histogram";
 
@@ -51,12 +52,17 @@ export function subjectsOf(matter: SpreadMatter): Subject[] {
   const read = matter.readings
     .filter(({ per }) => per === "sweep")
     .map(({ name, unit }): Subject => ({ key: `read:${name}`, name, unit, settings, kind: "reading" }));
-  return [...required, ...read].filter((subject) =>
-    subject.settings.some((_, setting) => {
-      const { drawn, budget } = spreadOf(matter, subject, setting);
-      return drawn.length > 0 || budget !== null;
-    }),
-  );
+  return [...required, ...read].filter((subject) => isSpread(matter, subject));
+}
+
+/** Whether there are draws of a subject or an error budget, at any setting. */
+function isSpread(matter: SpreadMatter, { key, kind, name }: Subject): boolean {
+  if (kind === "requirement") {
+    const one = matter.requirements[Number(key.slice("require:".length))]!;
+    return one.drawn.length > 1 || matter.causes.some(({ reading }) => reading === one.label);
+  }
+  const { values } = matter.readings.find((one) => one.name === name && one.per === "sweep")!;
+  return values.length > settingCount(matter.axes) || matter.budgets.some(({ reading }) => reading === name);
 }
 
 export function spreadOf(matter: SpreadMatter, { key, kind, name }: Subject, setting: number): SpreadOf {
@@ -67,7 +73,7 @@ export function spreadOf(matter: SpreadMatter, { key, kind, name }: Subject, set
     return { nominal, drawn, limits: one.allowed, budget };
   }
   const { values } = matter.readings.find((one) => one.name === name && one.per === "sweep")!;
-  const count = settingsOf(matter.axes).length;
+  const count = settingCount(matter.axes);
   const own = values.filter((_, row) => row % count === setting);
   const limits = matter.requirements.flatMap(({ reading }) =>
     reading?.name === name ? [reading.limits[setting] ?? { low: null, high: null }] : [],
@@ -87,11 +93,28 @@ function narrowest(all: readonly Limits[]): Limits {
   return { low: most((one) => one.low, Math.max), high: most((one) => one.high, Math.min) };
 }
 
-/** The settings of the outer axes in words, the first outer axis turning fastest; one empty text where there is none. */
-export function settingsOf(axes: readonly AxisDocument[]): string[] {
+/** Settings that a page lists: a run may have half a million, which would hold up whoever renders them and whoever reads. */
+export const MOST_LISTED = 500;
+/** Values that a table of readings shows, about. */
+const MOST_VALUES = 5_000;
+
+/** How many settings the outer axes have. */
+export function settingCount(axes: readonly AxisDocument[]): number {
+  return axes.slice(1).reduce((product, axis) => product * countOf(axis), 1);
+}
+
+/** Settings that a table lists which has so many values for each. */
+export function listedBeside(values: number): number {
+  return Math.min(MOST_LISTED, Math.max(6, Math.floor(MOST_VALUES / Math.max(1, values))));
+}
+
+/**
+ * The first settings of the outer axes in words, the first outer axis turning fastest, at most as many as said; one empty text where
+ * there is none.
+ */
+export function settingsOf(axes: readonly AxisDocument[], most = MOST_LISTED): string[] {
   const outer = axes.slice(1);
-  const count = outer.reduce((product, { values }) => product * values.length, 1);
-  return Array.from({ length: count }, (_, setting) => {
+  return Array.from({ length: Math.min(most, settingCount(axes)) }, (_, setting) => {
     let rest = setting;
     return outer
       .map((axis) => {

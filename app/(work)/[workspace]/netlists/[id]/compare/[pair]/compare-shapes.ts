@@ -11,8 +11,10 @@ export interface ComparedRun {
   readonly requirements: readonly RequirementDocument[];
   /** Those with one value a sweep. */
   readonly readings: readonly ReadingDocument[];
-  /** The settings of the outer sweeps in words, in the order in which readings are kept. */
+  /** The first settings of the outer sweeps in words, in the order in which readings are kept. */
   readonly settings: readonly string[];
+  /** How many there are. */
+  readonly settingCount: number;
 }
 
 /** One of the two revisions. */

@@ -99,10 +99,11 @@ export function CompareView({ workspace, netlist, before, after, changes, search
             </section>
             {runs !== null && (
               <ComparedReadings
-                runs={[runs.old, runs.now].map(({ readings, settings }, side) => ({
+                runs={[runs.old, runs.now].map(({ readings, settings, settingCount }, side) => ({
                   head: labels[side]!,
                   readings,
                   settings,
+                  settingCount,
                 }))}
               />
             )}
