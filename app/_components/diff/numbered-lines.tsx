@@ -1,10 +1,10 @@
-import { linesOf } from "../editor/plain-lines";
+import { shownLinesOf } from "../editor/plain-lines";
 import { AskedLine } from "./asked-line";
 import { InkedLine } from "./inked-line";
 
-/** A text to read, in its colours, each line with its number: the address of a page that shows one may end in #L12 for a line. */
+/** A text to read, in its colours, each of its first lines with its number: the address of a page that shows one may end in #L12 for a line. */
 export function NumberedLines({ text, label }: { readonly text: string; readonly label: string }) {
-  const lines = linesOf(text.endsWith("\n") ? text.slice(0, -1) : text);
+  const lines = shownLinesOf(text.endsWith("\n") ? text.slice(0, -1) : text);
   return (
     <section aria-label={label} className="border bg-surface">
       <AskedLine />

@@ -4,6 +4,9 @@ import { FONT_SIZE, LINE_HEIGHT, TOKEN_INKS } from "./palette";
 /** Beyond it a text is shown without colours, since nobody waits for them. UTF-16 units. */
 const MOST_COLOURED = 40_000;
 
+/** Lines that are set one by one; what comes after them is one block, since each line costs the server a kilobyte. */
+export const MOST_LINES = 5_000;
+
 export interface Piece {
   readonly at: number;
   readonly text: string;
@@ -31,7 +34,7 @@ export function PlainLines({ text, label, onPress }: Props) {
       className="absolute inset-0 overflow-auto bg-surface pt-2"
     >
       <ol className="font-(family-name:--font-figures)" style={metrics}>
-        {linesOf(text).map((line) => (
+        {shownLinesOf(text).map((line) => (
           <li
             key={line.at}
             data-at={line.at}
@@ -79,6 +82,18 @@ export function offsetUnder(x: number, y: number): number {
   before.setStart(code, 0);
   before.setEnd(caret.startContainer, caret.startOffset);
   return at + before.toString().length;
+}
+
+/** As `linesOf`, but all that comes after `MOST_LINES` lines as one, whose pieces have the line ends in them. */
+export function shownLinesOf(text: string): ReturnType<typeof linesOf> {
+  let at = 0;
+  for (let line = 0; line < MOST_LINES; line += 1) {
+    const end = text.indexOf("\n", at);
+    if (end === -1) return linesOf(text);
+    at = end + 1;
+  }
+  const rest = { at, number: MOST_LINES + 1, pieces: [{ at, text: text.slice(at), ink: undefined }] };
+  return [...linesOf(text.slice(0, at - 1)), rest];
 }
 
 /** The lines of a text with their coloured pieces; `at` is the offset at which a line or piece begins. */
