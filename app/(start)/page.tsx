@@ -1,5 +1,6 @@
 import Link from "next/link";
 import { ButtonLink } from "@/app/_components/ui/button";
+import { EnterLink } from "@/app/_components/ui/enter-link";
 import { Wordmark } from "@/app/_components/ui/logo";
 import { NetlistText } from "@/app/_components/ui/netlist-text";
 import { currentUser } from "@/lib/auth/actor";
@@ -23,25 +24,15 @@ const POINTS = [
 
 export default async function StartPage() {
   const user = await currentUser();
-  const enter =
-    user === null ? (
-      <ButtonLink href="/sign-in" tone="primary">
-        Sign in
-      </ButtonLink>
-    ) : (
-      <ButtonLink href="/sign-in" tone="primary">
-        Open your workspace
-      </ButtonLink>
-    );
   return (
     <div className="mx-auto max-w-7xl px-4 md:px-6">
-      <header className="flex h-14 items-center justify-between">
+      <header className="flex min-h-14 flex-wrap items-center justify-between gap-x-3">
         <Wordmark />
-        <div className="flex items-center gap-4">
+        <div className="flex items-center gap-3 sm:gap-4">
           <Link href="/docs" className="inline-flex min-h-8 items-center text-quiet text-sm hover:text-ink">
             Reference
           </Link>
-          {enter}
+          <EnterLink isSignedIn={user !== null} tone="primary" />
         </div>
       </header>
       <main>

@@ -1,7 +1,7 @@
 import type { Metadata } from "next";
 import Link from "next/link";
 import type { ReactNode } from "react";
-import { ButtonLink } from "@/app/_components/ui/button";
+import { EnterLink } from "@/app/_components/ui/enter-link";
 import { Wordmark } from "@/app/_components/ui/logo";
 import { currentUser } from "@/lib/auth/actor";
 import "./docs.css";
@@ -22,7 +22,7 @@ export default async function DocsLayout({ children }: { readonly children: Reac
       >
         Skip to the content
       </a>
-      <header className="flex min-h-13 items-center gap-4 border-b" data-print="never">
+      <header className="flex min-h-13 flex-wrap items-center gap-x-3 border-b sm:gap-x-4" data-print="never">
         <Link href="/" aria-label="Sweepwright, start" className="inline-flex min-h-8 items-center">
           <Wordmark />
         </Link>
@@ -30,7 +30,7 @@ export default async function DocsLayout({ children }: { readonly children: Reac
           Reference
         </Link>
         <div className="ml-auto">
-          <ButtonLink href="/sign-in">{user === null ? "Sign in" : "Open your workspace"}</ButtonLink>
+          <EnterLink isSignedIn={user !== null} />
         </div>
       </header>
       <div className="grow gap-x-10 lg:grid lg:grid-cols-[11rem_minmax(0,1fr)]">

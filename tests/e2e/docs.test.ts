@@ -133,4 +133,11 @@ test("somebody at work finds the reference at the top of each page", async () =>
   await page.getByRole("link", { name: "Reference" }).click();
   await page.waitForURL("**/docs");
   await page.getByRole("link", { name: "Open your workspace" }).waitFor();
+  // The way to the work has fewer words where there is little room for it.
+  await look(page, { colorScheme: "light", width: 360 });
+  for (const path of ["/", "/docs"]) {
+    await page.goto(path);
+    await page.getByRole("link", { name: "Workspace", exact: true }).waitFor();
+    await expectNoSidewaysScroll(page);
+  }
 });
