@@ -88,6 +88,18 @@ test("what stands under the pointer or the cursor is told, with its value where 
   };
   await over("R_load");
   await card.getByText("let R_load = 10 kΩ", { exact: true }).waitFor();
+  // Wherever it reaches, also over the curves beside the text.
+  const isOnTop = await card.evaluate((node) => {
+    const { right, top, height } = node.getBoundingClientRect();
+    const curves = document.querySelector('[data-preview="whole"]')!.getBoundingClientRect();
+    (node as HTMLElement).style.minWidth =
+      `${Math.round(curves.left + 120 - node.getBoundingClientRect().left)}px`;
+    const x = node.getBoundingClientRect().right - 8;
+    const found = document.elementFromPoint(x, top + height / 2);
+    (node as HTMLElement).style.minWidth = "";
+    return right > 0 && node.contains(found);
+  });
+  expect(isOnTop).toBe(true);
   await over("left.v");
   await card.getByText(/^net left, wired to/).waitFor();
   await card.getByText(/V at I_in/).waitFor();

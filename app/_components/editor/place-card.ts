@@ -43,7 +43,7 @@ export class PlaceCard implements editor.IContentWidget {
     // The list of problems, the line over the text and the spoken words say the same to those who use no pointer.
     this.node.setAttribute("aria-hidden", "true");
     this.node.className =
-      "place-card max-w-[min(440px,84vw)] rounded-[2px] border bg-surface px-3 py-2 font-(family-name:--font-text) text-sm text-ink whitespace-normal";
+      "place-card z-40 max-w-[min(440px,84vw)] rounded-[2px] border bg-surface px-3 py-2 font-(family-name:--font-text) text-sm text-ink whitespace-normal";
     this.node.addEventListener("mouseenter", () => clearTimeout(this.timer));
     this.node.addEventListener("mouseleave", () => this.later(() => this.hide(), GO));
     this.spoken.setAttribute("role", "status");
