@@ -14,6 +14,7 @@ import {
   picture,
   signIn,
   type Who,
+  WORKSPACE,
 } from "./harness";
 import { addRevision, converterText, makeNetlist, openSheet, PATIENT, save, typeAtEnd } from "./sheet-steps";
 
@@ -52,6 +53,8 @@ test("a message is proposed from what changed, and may be taken", async () => {
   await page.getByText(/^revision 2$/).waitFor();
   const { message } = await (await page.request.get(`/api/v1/netlists/${id}/revisions/2`)).json();
   expect(message).toBe("late added");
+  await page.goto(`/${WORKSPACE}/netlists/${id}/revisions`);
+  expect(await page.getByText("late added").count()).toBe(1);
 });
 
 test("a stale save becomes a merge: what fits is taken, places that both changed are chosen by keyboard, the checker has the last word", async () => {

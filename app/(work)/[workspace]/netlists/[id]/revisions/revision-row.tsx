@@ -42,7 +42,8 @@ export function RevisionRow({ base, runs, row, isNewest, isChosen, mayChoose, on
         {isNewest && <span className="ml-2 text-quiet text-xs">newest</span>}
       </p>
       <div className="min-w-0">
-        {message !== null && <p className="break-words text-sm">{message}</p>}
+        {/* A message that was proposed from the changes says the same as they do. */}
+        {message !== null && message !== changes && <p className="break-words text-sm">{message}</p>}
         <p className="break-words text-quiet text-sm">
           {changes ?? (number === 1 ? "The first text" : "Too long to be compared in this list")}
           {number > 1 && (
