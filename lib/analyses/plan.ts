@@ -53,12 +53,13 @@ export function countOf({ values, count = values.length }: AxisDocument): number
   return count;
 }
 
-/** The place of a flat point on every axis, the first axis first. */
+/** The place of a flat point on every axis, the first axis first; those of an outline too. */
 export function placeOnAxes(plan: Plan, point: number): number[] {
   let rest = point;
-  return plan.axes.map(({ values }) => {
-    const place = rest % values.length;
-    rest = (rest - place) / values.length;
+  return plan.axes.map((axis) => {
+    const count = countOf(axis);
+    const place = rest % count;
+    rest = (rest - place) / count;
     return place;
   });
 }

@@ -28,9 +28,25 @@ export function baseOf(
   // Strong comparison: a weak tag never matches.
   const named = condition.split(",").some((tag) => tag.trim() === revisionTag(id, latest));
   if (named) return latest;
-  throw new AppError(
+  throw failed(latest);
+}
+
+function failed(latest: number): AppError {
+  return new AppError(
     "precondition failed",
     `Revision ${latest} is the newest one, and If-Match does not name it. Load it and bring your change into it.`,
     { latest },
   );
+}
+
+/** `work`, in which a revision that somebody saved a moment before counts as it would have before that moment: If-Match fails then. */
+export async function upon<T>(request: Request, work: () => Promise<T>): Promise<T> {
+  try {
+    return await work();
+  } catch (error) {
+    const isTagged = (request.headers.get("if-match") ?? "*").trim() !== "*";
+    const { code, details } = error instanceof AppError ? error : { code: null, details: {} };
+    if (isTagged && code === "conflict" && typeof details.latest === "number") throw failed(details.latest);
+    throw error;
+  }
 }

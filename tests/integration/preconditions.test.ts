@@ -55,6 +55,17 @@ describe("saving upon a revision by its entity tag (RFC 9110, 13.1.1)", () => {
     expect((await readNetlist(actor, id)).revision).toBe(2);
   });
 
+  it("lets one of several that save at once upon the same tag through, and answers 412 to the others", async () => {
+    const actor = await makeActor();
+    const { id } = await makeNetlist(actor);
+    const tag = await tagOf(actor, id);
+    const all = [3, 4, 5, 6].map((amount) => saving(actor, id, { text: text(amount) }, { "if-match": tag }));
+    const answers = await Promise.all(all);
+    expect(answers.map(({ status }) => status).sort()).toEqual([201, 412, 412, 412]);
+    for (const answer of answers.filter(({ status }) => status === 412))
+      expect(await answer.json()).toMatchObject({ code: "precondition failed", latest: 2 });
+  });
+
   it("answers 428 to who says neither the tag nor the number, in restoring too; * takes whatever is newest", async () => {
     const actor = await makeActor();
     const { id } = await makeNetlist(actor);

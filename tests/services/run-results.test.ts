@@ -123,6 +123,20 @@ describe("getPoint", () => {
     });
   });
 
+  it("reads of a sweep of very many values the one that is asked for", async () => {
+    const actor = await makeActor();
+    const text = `${DIODE_TEXT.replace("5 per decade", "20000 points")}sweep temperature over 0 °C, 50 °C\n`;
+    const { id } = await makeRun(actor, { text });
+    const [axis] = (await getRun(actor, id)).plan.axes;
+    for (const point of [0, 12_345, 20_001, 39_999]) {
+      const { at } = await getPoint(actor, id, point);
+      expect(at.map(({ value }) => value)).toEqual([
+        axis!.values[point % 20_000],
+        point < 20_000 ? 273.15 : 323.15,
+      ]);
+    }
+  });
+
   it.each([-1, 3000, 0.5, Number.NaN])("does not know point %d of 3000", async (point) => {
     const { actor, id } = await makeGrid();
     await expect(getPoint(actor, id, point)).rejects.toMatchObject({ code: "not found" });

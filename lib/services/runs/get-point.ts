@@ -1,4 +1,4 @@
-import { and, eq, gt, lte } from "drizzle-orm";
+import { and, eq, gt, lte, sql } from "drizzle-orm";
 import { database } from "@/db/client";
 import { run } from "@/db/schema/run";
 import { shard } from "@/db/schema/shard";
@@ -11,6 +11,7 @@ import { OUTCOMES, type OutcomeKind, RUNGS, type Rung } from "@/lib/solver/outco
 import { traceColumn, unknownColumn } from "../chunks/columns";
 import { readPoint } from "../chunks/read-columns";
 import { findRun } from "./find-run";
+import { OUTLINED } from "./get-run";
 
 interface Figure {
   readonly name: string;
@@ -52,7 +53,8 @@ export async function getPoint(actor: Actor, id: string, point: number): Promise
       `Run ${asked.number} has no such point; they go from 0 to ${asked.points - 1}.`,
     );
   }
-  const [planned] = await db.select({ plan: run.plan }).from(run).where(eq(run.id, asked.id));
+  // Without the values of long axes: a million of them would be read for one.
+  const [planned] = await db.select({ plan: OUTLINED }).from(run).where(eq(run.id, asked.id));
   const { plan } = planned!;
   const values = await readPoint(asked.id, point);
   const [holder] = await db
@@ -65,19 +67,18 @@ export async function getPoint(actor: Actor, id: string, point: number): Promise
     const value = values?.get(column);
     return value === undefined || Number.isNaN(value) ? null : value;
   };
-  const place = placeOnAxes(plan, point);
+  const settings = await Promise.all(
+    placeOnAxes(plan, point).map(async (place, axis) => {
+      const { knob, unit, values, count } = plan.axes[axis]!;
+      const value = count === undefined ? values[place]! : await valueOn(asked.id, axis, place);
+      return { knob, unit, value };
+    }),
+  );
   const outcome = OUTCOMES[figure("outcome") ?? -1] ?? null;
   const unsettled = holder?.failures.find((one) => one.point === point)?.unsettled ?? [];
   return {
     point,
-    at: [
-      ...plan.axes.map(({ knob, unit, values: along }, axis) => ({
-        knob,
-        unit,
-        value: along[place[axis]!]!,
-      })),
-      ...(plan.draws > 0 ? [{ knob: "draw", unit: "1", value: drawOf(plan, point) }] : []),
-    ],
+    at: [...settings, ...(plan.draws > 0 ? [{ knob: "draw", unit: "1", value: drawOf(plan, point) }] : [])],
     outcome,
     iterations: figure("iterations"),
     residual: figure("residual"),
@@ -89,4 +90,13 @@ export async function getPoint(actor: Actor, id: string, point: number): Promise
     unsolved: unsettled,
     failure: outcome === null ? "This point is not solved yet." : reasonOf(outcome, unsettled),
   };
+}
+
+/** One value of an axis of a stored plan, both counted from 0. */
+async function valueOn(runId: string, axis: number, place: number): Promise<number> {
+  const [found] = await database()
+    .select({ value: sql<number>`(${run.plan}->'axes'->${axis}::int->'values'->${place}::int)::float8` })
+    .from(run)
+    .where(eq(run.id, runId));
+  return found!.value;
 }

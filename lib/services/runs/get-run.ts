@@ -22,7 +22,7 @@ export interface RunSummary extends RunRow {
 const LONG = 10_000;
 
 /** The plan without the values of long axes between the first and the last (lib/analyses/plan.ts, `outlineOf`), shortened where they lie. */
-const OUTLINED = sql<Plan>`jsonb_set(${run.plan}, '{axes}', coalesce((
+export const OUTLINED = sql<Plan>`jsonb_set(${run.plan}, '{axes}', coalesce((
   SELECT jsonb_agg(
     CASE WHEN jsonb_array_length(axis->'values') <= ${LONG} THEN axis ELSE axis || jsonb_build_object(
       'values', jsonb_build_array(axis->'values'->0, axis->'values'->-1),

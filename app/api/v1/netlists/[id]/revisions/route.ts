@@ -1,6 +1,6 @@
 import { readJson } from "@/lib/api/body";
 import { once } from "@/lib/api/once";
-import { baseOf, revisionTag } from "@/lib/api/precondition";
+import { baseOf, revisionTag, upon } from "@/lib/api/precondition";
 import { route } from "@/lib/api/route";
 import { actorForNetlist } from "@/lib/auth/actor";
 import { getNetlist } from "@/lib/services/netlists/get-netlist";
@@ -30,5 +30,11 @@ export const POST = route<{ id: string }>(async (request, { id }) => {
     const saved = await saveRevision(actor, readInput(saveInput, { ...wish, base, netlistId: id }));
     return { status: saved.changed ? 201 : 200, body: saved };
   };
-  return once(request, actor, wish, work, (saved) => ({ etag: revisionTag(id, saved.revision) }));
+  return once(
+    request,
+    actor,
+    wish,
+    () => upon(request, work),
+    (saved) => ({ etag: revisionTag(id, saved.revision) }),
+  );
 });
