@@ -31,6 +31,14 @@ describe("the page of the models", () => {
     expect(Object.keys(SYMBOLS).sort()).toEqual([...names].sort());
   });
 
+  test("sets units upright, as words", () => {
+    const formulas = Object.values(MODELS).flatMap(({ equations }) =>
+      equations.flatMap((one) => one.formulas),
+    );
+    expect(formulas.filter((formula) => /\d "K"/.test(formula))).toHaveLength(1);
+    expect(formulas.filter((formula) => /\d\s*(?:K|V|A|Ω)(?!\w)/u.test(formula))).toEqual([]);
+  });
+
   test("has every parameter in an equation, under the symbol of the table", () => {
     const written = [
       ...Object.values(TEMPERATURE),

@@ -81,7 +81,7 @@ export const MODELS: Readonly<Record<ElementKind, ModelText>> = {
     equations: [
       {
         says: "Ohm's law; the value holds at 25 °C and changes in proportion to the temperature from there:",
-        formulas: ["v = R ( T ) i , | R ( T ) = R ( 1 + α ( T − 298.15 K ) )"],
+        formulas: ['v = R ( T ) i , | R ( T ) = R ( 1 + α ( T − 298.15 "K" ) )'],
       },
     ],
     sources: [{ cites: "Ohm's law", file: "lib/devices/resistor.ts" }],
