@@ -33,7 +33,7 @@ export function RequirementList({ requirements, links, partly, onPlace }: Props)
             <p className="sr-only">{marginSentence(one)}</p>
             <div
               aria-hidden="true"
-              className="grid grid-cols-[minmax(0,1fr)_auto] items-center gap-x-3 gap-y-1 @md:grid-cols-[4.5rem_minmax(0,1fr)_minmax(4rem,7rem)_7rem]"
+              className="grid grid-cols-[minmax(0,1fr)_auto] items-center gap-x-3 gap-y-1 @md:grid-cols-[4.5rem_minmax(0,1fr)_minmax(4rem,7rem)_8.5rem]"
             >
               <span className="justify-self-end @md:justify-self-start">
                 <StateBadge state={one.verdict} />

@@ -74,7 +74,9 @@ function Judged({ one, run }: { readonly one: RequirementDocument | null; readon
     <div>
       <span className="sr-only">{known ? marginSentence(one) : null}</span>
       <div aria-hidden={known} className="flex flex-wrap items-center gap-x-3">
-        <StateBadge state={one.verdict} />
+        <span className="min-w-18">
+          <StateBadge state={one.verdict} />
+        </span>
         {known && <MarginBar requirement={one} decorative className="max-w-28 grow" />}
         <span className="figures text-xs">
           {known && one.value.worst !== null && `${worstInWords(one)}, `}
