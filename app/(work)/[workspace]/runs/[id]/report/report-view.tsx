@@ -1,3 +1,4 @@
+import { shownLinesOf } from "@/app/_components/editor/plain-lines";
 import { formatCount } from "@/app/_components/ui/count";
 import { BranchList } from "../branch-list";
 import { Cautions, type VoltageSpan } from "../cautions";
@@ -58,15 +59,13 @@ export function ReportView({ run, printed, figure, remark, text, savedBy, savedA
       <section aria-labelledby="report-circuit" className="grid grid-cols-[minmax(0,1fr)] gap-3">
         <h2 id="report-circuit">Circuit, sweeps and requirements as written</h2>
         <ol className="figures list-decimal pl-10 text-xs marker:text-quiet">
-          {text
-            .trimEnd()
-            .split(/\r?\n/)
-            .map((line, index) => (
-              // biome-ignore lint/suspicious/noArrayIndexKey: lines have no name but their place
-              <li key={index} className="pl-2">
-                <code className="whitespace-pre-wrap break-words">{line === "" ? "\u00a0" : line}</code>
-              </li>
-            ))}
+          {shownLinesOf(text.trimEnd().replaceAll("\r\n", "\n")).map(({ at, pieces }) => (
+            <li key={at} className="pl-2">
+              <code className="whitespace-pre-wrap break-words">
+                {pieces.map((piece) => piece.text).join("") || "\u00a0"}
+              </code>
+            </li>
+          ))}
         </ol>
       </section>
     </article>
