@@ -1,4 +1,4 @@
-import { describe, expect, it } from "vitest";
+import { describe, expect, it, vi } from "vitest";
 import { DIODE_TEXT, makeActor, makeNetlist, makeRun, makeWorkspace } from "@/db/factories";
 import type { Actor } from "@/lib/permissions/actor";
 import { duplicateRevision } from "@/lib/services/netlists/duplicate-revision";
@@ -7,6 +7,7 @@ import { getRevision } from "@/lib/services/netlists/get-revision";
 import { listRevisions } from "@/lib/services/netlists/list-revisions";
 import { restoreRevision } from "@/lib/services/netlists/restore-revision";
 import { saveRevision } from "@/lib/services/netlists/save-revision";
+import { Summaries } from "@/lib/services/netlists/summaries";
 import { listRuns } from "@/lib/services/runs/list-runs";
 import { ownDatabase } from "../integration/own-database";
 
@@ -25,6 +26,31 @@ async function threeRevisions(actor: Actor): Promise<string> {
 }
 
 describe("listRevisions", () => {
+  it("lets whoever else waits come between two texts that it compares", async () => {
+    const actor = await makeActor();
+    const netlistId = await threeRevisions(actor);
+    let turn = 0;
+    let isOver = false;
+    const next = () => {
+      turn += 1;
+      if (!isOver) setImmediate(next);
+    };
+    next();
+    const turns: number[] = [];
+    const compared = vi.spyOn(Summaries.prototype, "of").mockImplementation(() => {
+      turns.push(turn);
+      return null;
+    });
+    try {
+      await listRevisions(actor, { netlistId });
+    } finally {
+      compared.mockRestore();
+      isOver = true;
+    }
+    expect(turns).toHaveLength(2);
+    expect(turns[1]).toBeGreaterThan(turns[0]!);
+  });
+
   it("lists the newest first, with who, message, and what changed in short", async () => {
     const actor = await makeActor("engineer", undefined, "Ilse Invented");
     const netlistId = await threeRevisions(actor);
