@@ -81,6 +81,11 @@ export class ContractParser {
           );
         }
         const low = expressions.sum();
+        if (low.kind === "binary" && low.operator === "-" && !cursor.isSymbol("..", 0)) {
+          const span = { from: low.left.to, to: low.right.from };
+          const fix = { title: "Write ..", ...span, text: " .. " };
+          cursor.fail("FRM2", span, "A window goes from one end to the other by `..`, not by `-`.", fix);
+        }
         cursor.wantSymbol("..", "the lower end of the window");
         const high = expressions.sum();
         windows.push({ knob, low, high, from, to: cursor.behind });

@@ -3,16 +3,25 @@ const LONGEST = 40;
 /** Candidates of a fitting length that are compared; a file with more names than this is not searched further. */
 const MOST_COMPARED = 2000;
 
+/** Letters after which a name counts as one that is left unfinished: `temp`. */
+const LEAST_BEGUN = 4;
+
 /**
  * The candidate nearest to `name` by the edits that typing makes (a letter changed, left out, put in, or two exchanged: Damerau
- * 1964), or null where none is near enough to be meant. Letters that differ only in case count half.
+ * 1964), else the only one that begins with it, or null where none is meant. Letters that differ only in case count half.
  */
 export function nearest(name: string, candidates: Iterable<string>): string | null {
   if (name.length > LONGEST) return null;
   let best: string | null = null;
   let bound = [0, 0.5, 1][name.length] ?? Math.min(2.5, 0.5 + name.length / 3);
   let compared = 0;
+  let begun: string | null = null;
+  let isOne = true;
   for (const candidate of candidates) {
+    if (name.length >= LEAST_BEGUN && candidate.startsWith(name) && candidate.length > name.length) {
+      isOne &&= begun === null || begun === candidate;
+      begun = candidate;
+    }
     if (candidate.length > LONGEST || Math.abs(candidate.length - name.length) > bound) continue;
     if (compared++ >= MOST_COMPARED) break;
     const distance = editDistance(name, candidate, bound);
@@ -21,7 +30,7 @@ export function nearest(name: string, candidates: Iterable<string>): string | nu
       bound = distance;
     }
   }
-  return best;
+  return best ?? (isOne ? begun : null);
 }
 
 /** The distance, or infinity once it must be above `bound`. What both begin and end with is left out. */

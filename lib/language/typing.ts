@@ -2,12 +2,12 @@ import { type Dimension, divide, multiply, PURE, power, sameDimension } from "@/
 import { toCoherent } from "@/lib/units/unit";
 import type { Agreement } from "./agreement";
 import type { ReductionName, Typed } from "./ast";
+import { reportCount, reportUnknownFunction } from "./call-problems";
 import type { Code } from "./catalogue";
 import { constantNamed } from "./constant-names";
 import { FUNCTIONS, isFunctionName } from "./functions";
 import { type Meaning, Names, ownName } from "./names";
-import { nearest } from "./nearest";
-import { isReductionName, REDUCTIONS } from "./reductions";
+import { isReductionName } from "./reductions";
 import type { Report } from "./report";
 import { currentInto, type PinsOf, resolveSignal } from "./signals";
 import type { Span } from "./span";
@@ -204,18 +204,12 @@ export class Typing {
       return null;
     }
     if (!isFunctionName(callee.text)) {
-      this.unknownFunction(callee);
+      reportUnknownFunction(expression, this.report);
       return null;
     }
     const shape = FUNCTIONS[callee.text];
     if (args.length < shape.least || args.length > shape.most) {
-      const wants = shape.least === shape.most ? String(shape.least) : `${shape.least} to ${shape.most}`;
-      const values = wants === "1" ? "1 value" : `${wants} values`;
-      this.report.error(
-        "FRM12",
-        expression,
-        `${quote(callee.text)} wants ${values} in its brackets, not ${args.length}.`,
-      );
+      reportCount(expression, shape, place.contract !== undefined, this.report);
       return null;
     }
     const inner = { ...place, wanted: shape.rule === "keep" ? place.wanted : null };
@@ -270,22 +264,6 @@ export class Typing {
       right: b,
       dimension: PURE,
     });
-  }
-
-  private unknownFunction(callee: Word): void {
-    if (callee.text === "log") {
-      const message = "`log` is no function, for it may mean either of two; write `log10` or `ln`.";
-      this.report.error("NAM10", callee, message, {
-        title: "Change to log10",
-        from: callee.from,
-        to: callee.to,
-        text: "log10",
-      });
-      return;
-    }
-    const search = () => nearest(callee.text, [...Object.keys(FUNCTIONS), ...Object.keys(REDUCTIONS)]);
-    const all = "the functions are exp, ln, log10, sqrt, abs, min, max, tanh, atan and if";
-    this.report.propose("NAM10", callee, `${quote(callee.text)} is no function`, search, all);
   }
 }
 

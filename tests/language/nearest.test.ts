@@ -20,6 +20,13 @@ test("what is far from everything, or the name itself, is taken for nothing", ()
   expect(nearest("x", ["y"])).toBeNull();
 });
 
+test("a beginning is taken for the one name that goes on from it, and for none where there are two", () => {
+  expect(nearest("temp", ["tempo", "temperature"])).toBe("tempo");
+  expect(nearest("temp", ["V_in", "temperature", "tail", "temperature"])).toBe("temperature");
+  expect(nearest("gain", ["gain_first", "gain_second", "gain_second"])).toBeNull();
+  expect(nearest("tem", ["temperature"])).toBeNull();
+});
+
 test("of two the nearer is taken, whatever their order", () => {
   expect(nearest("V_ref1", ["V_ref22", "V_ref2", "V_rel2"])).toBe("V_ref2");
   expect(nearest("V_ref1", ["V_rel2", "V_ref22", "V_ref2"])).toBe("V_ref2");

@@ -130,6 +130,27 @@ export const SPELLING_PROBLEMS: readonly Problem[] = [
     text: within("sweep temperature over «-20 C», 25 °C"),
     mended: within("sweep temperature over -20 °C, 25 °C"),
   },
+  { code: "NAM10", text: within("read x = highest(«V»(in))"), mended: within("read x = highest(in.v)") },
+  {
+    code: "FRM12",
+    text: within("read x = «max(in.v)»"),
+    mended: within("read x = highest(in.v)"),
+    says: "along the sweep",
+  },
+  {
+    code: "NAM3",
+    text: within("sweep «temp» from 0 °C to 50 °C, 3 points"),
+    mended: within("sweep temperature from 0 °C to 50 °C, 3 points"),
+  },
+  {
+    code: "FRM2",
+    text: within(
+      "knob k = 1 V\nsweep k from 1 V to 9 V, 5 points\nread x = highest(in.v) for k in 1 V« - »5 V",
+    ),
+    mended: within(
+      "knob k = 1 V\nsweep k from 1 V to 9 V, 5 points\nread x = highest(in.v) for k in 1 V .. 5 V",
+    ),
+  },
   { code: "NAM10", text: within("let a = «log»(10)"), mended: within("let a = log10(10)"), says: "`ln`" },
 
   { code: "UNI3", text: within("ground -- R2 : resistor «1 V» -- in"), says: "give a value in Ω" },
