@@ -1,6 +1,7 @@
 import Link from "next/link";
 import { Fragment } from "react";
 import { Symbols } from "./math";
+import { wholeQuantities } from "./whole-quantities";
 
 const MARKED = /(`[^`]*`|\$[^$]*\$|\b(?:TXT|FRM|NAM|UNI|WIR|PLN|CON|CAP)\d+\b)/u;
 
@@ -18,7 +19,7 @@ export function Prose({ children }: { readonly children: string }) {
 }
 
 function Piece({ text, isMarked }: { readonly text: string; readonly isMarked: boolean }) {
-  if (!isMarked) return <Fragment>{text}</Fragment>;
+  if (!isMarked) return <Fragment>{wholeQuantities(text)}</Fragment>;
   const inner = text.slice(1, -1);
   if (text.startsWith("`")) return <code>{inner}</code>;
   if (text.startsWith("$")) return <Symbols>{inner}</Symbols>;

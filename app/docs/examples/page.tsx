@@ -2,6 +2,7 @@ import type { Metadata } from "next";
 import Link from "next/link";
 import { MessageText } from "@/app/_components/editor/message-text";
 import { Sparkline } from "@/app/_components/ui/sparkline";
+import { wholeQuantities } from "../_parts/whole-quantities";
 import { type Example, exampleNamed, planInWords } from "./examples";
 import { GROUPS } from "./groups";
 import { sketchOf } from "./sketch";
@@ -54,7 +55,7 @@ function ExampleRow({ example }: { readonly example: Example }) {
           {example.title}
         </Link>
         <p className="mt-0.5 text-sm">
-          <MessageText message={example.lesson} />
+          <MessageText message={wholeQuantities(example.lesson)} />
         </p>
         <p className="mt-1 text-quiet text-xs">{planInWords(example)}</p>
       </div>

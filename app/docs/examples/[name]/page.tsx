@@ -3,6 +3,7 @@ import Link from "next/link";
 import { notFound } from "next/navigation";
 import { MessageText } from "@/app/_components/editor/message-text";
 import { PlainLines } from "@/app/_components/editor/plain-lines";
+import { wholeQuantities } from "../../_parts/whole-quantities";
 import { exampleNamed, planInWords } from "../examples";
 import { GROUPS } from "../groups";
 import { ExampleSheet } from "./example-sheet";
@@ -43,7 +44,7 @@ export default async function ExamplePage({ params }: Props) {
             </p>
             <h1 className="mt-1 text-2xl tracking-tight">{example.title}</h1>
             <p className="mt-2">
-              <MessageText message={example.lesson} />
+              <MessageText message={wholeQuantities(example.lesson)} />
             </p>
             <p className="mt-2 text-quiet text-sm">
               {planInWords(example)}. Runs in this page: change the text and it is solved anew. Northbench
