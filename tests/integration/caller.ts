@@ -13,13 +13,22 @@ interface Call<P> {
   readonly body?: unknown;
   readonly headers?: Record<string, string>;
   readonly method?: string;
+  /** Of a caller who leaves. */
+  readonly signal?: AbortSignal;
 }
 
 /** Calls a route handler as the browser of `actor` would from a page of ours; as nobody when it is null. */
 export async function call<P>(
   handler: Handler<P>,
   actor: Actor | null,
-  { params, search = {}, body, headers = {}, method = body === undefined ? "GET" : "POST" }: Call<P> = {},
+  {
+    params,
+    search = {},
+    body,
+    headers = {},
+    method = body === undefined ? "GET" : "POST",
+    signal,
+  }: Call<P> = {},
 ): Promise<Response> {
   const cookie =
     actor === null
@@ -30,6 +39,7 @@ export async function call<P>(
         };
   const request = new Request(`${ADDRESS}/api/v1/x?${new URLSearchParams(search)}`, {
     method,
+    ...(signal === undefined ? {} : { signal }),
     headers: { ...cookie, ...(body === undefined ? {} : { "content-type": "application/json" }), ...headers },
     ...(body === undefined ? {} : { body: typeof body === "string" ? body : JSON.stringify(body) }),
   });

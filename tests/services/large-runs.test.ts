@@ -1,5 +1,6 @@
 import { afterAll, beforeAll, describe, expect, it, vi } from "vitest";
 import { GET as getCsv } from "@/app/(work)/[workspace]/runs/[id]/points.csv/route";
+import { GET as getColumns } from "@/app/api/v1/runs/[id]/columns/route";
 import { GET as getDocument } from "@/app/api/v1/runs/[id]/route";
 import { DIODE_TEXT, makeActor, makeRun, makeWorkspace } from "@/db/factories";
 import type { Actor } from "@/lib/permissions/actor";
@@ -61,6 +62,35 @@ describe("a run of a million numbers", () => {
       413,
       expect.stringContaining("17\u202f000\u202f000 numbers"),
     ]);
+  });
+});
+
+describe("whoever has left before they were answered", () => {
+  it("keeps no room, in whatever form they asked", async () => {
+    const actor = await makeActor();
+    const { id } = await makeRun(actor, { text: text(250_000) });
+    const signal = AbortSignal.abort();
+    const workspace = actor.workspaceSlug;
+    for (let k = 0; k < 3; k++) {
+      await call(getDocument, actor, { params: { id }, signal });
+      const columns = await call(getColumns, actor, { params: { id }, signal });
+      await columns.arrayBuffer();
+      await call(getCsv, actor, { params: { workspace, id }, signal });
+      await call(getCsv, actor, { params: { workspace, id }, signal });
+    }
+    const document = await ask(actor, id);
+    expect(document.status).toBe(200);
+    await document.body?.cancel();
+    const points = await call(getCsv, actor, { params: { workspace, id } });
+    expect(points.status).toBe(200);
+    await points.body?.cancel();
+  });
+
+  it("takes no room where a run is refused as too large once its plan is known", async () => {
+    const actor = await makeActor();
+    const shows = Array.from({ length: 12 }, (_, i) => `show v${i} = s.v\n`).join("");
+    const { id } = await makeRun(actor, { text: text(1_000_000, shows) });
+    for (let k = 0; k < 3; k++) expect((await ask(actor, id)).status).toBe(413);
   });
 });
 

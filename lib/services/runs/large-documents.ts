@@ -16,12 +16,7 @@ const ofAll = new Gate(4, SENTENCE);
  * "too large" beyond what a document may hold, and "too many" while too many large ones are under way.
  */
 export function roomFor(userId: string, numbers: number): () => void {
-  if (numbers > MOST_NUMBERS) {
-    throw new AppError(
-      "too large",
-      `This run has ${count(numbers)} numbers, and ${count(MOST_NUMBERS)} can be read at once. Sweep fewer points or show fewer traces.`,
-    );
-  }
+  refuseTooLarge(numbers);
   if (numbers < LARGE) return () => undefined;
   const leave = ofOnePerson.enter(userId);
   try {
@@ -34,4 +29,13 @@ export function roomFor(userId: string, numbers: number): () => void {
     leave();
     throw error;
   }
+}
+
+/** Throws "too large" for more numbers than a document may hold. */
+export function refuseTooLarge(numbers: number): void {
+  if (numbers <= MOST_NUMBERS) return;
+  throw new AppError(
+    "too large",
+    `This run has ${count(numbers)} numbers, and ${count(MOST_NUMBERS)} can be read at once. Sweep fewer points or show fewer traces.`,
+  );
 }

@@ -1,3 +1,4 @@
+import { whenGone } from "@/lib/api/when-gone";
 import type { Actor } from "@/lib/permissions/actor";
 import { getPointBlocks } from "@/lib/services/runs/point-blocks";
 import { csvHead, csvLines } from "./csv-lines";
@@ -15,7 +16,7 @@ export async function csvAnswer(request: Request, actor: Actor, id: string): Pro
     release();
     return new Response(null, { headers });
   }
-  request.signal.addEventListener("abort", release, { once: true });
+  whenGone(request, release);
   const encoder = new TextEncoder();
   const body = new ReadableStream<Uint8Array>({
     start(controller) {

@@ -1,5 +1,6 @@
 import { byteStream } from "@/lib/api/byte-stream";
 import { alreadyHas, notModified } from "@/lib/api/etag";
+import { whenGone } from "@/lib/api/when-gone";
 import type { Actor } from "@/lib/permissions/actor";
 import { getRunColumns } from "@/lib/services/runs/get-run-columns";
 import { getRunVersion } from "@/lib/services/runs/get-run-document";
@@ -18,6 +19,6 @@ export async function columnsAnswer(request: Request, actor: Actor, id: string):
     release();
     return new Response(null, { headers });
   }
-  request.signal.addEventListener("abort", release, { once: true });
+  whenGone(request, release);
   return new Response(byteStream(pieces, release), { headers });
 }

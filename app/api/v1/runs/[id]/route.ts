@@ -3,6 +3,7 @@ import { acceptedType } from "@/lib/api/accept";
 import { alreadyHas, notModified } from "@/lib/api/etag";
 import { jsonStream } from "@/lib/api/json-stream";
 import { json, route } from "@/lib/api/route";
+import { whenGone } from "@/lib/api/when-gone";
 import { actorForRun } from "@/lib/auth/actor";
 import type { Actor } from "@/lib/permissions/actor";
 import { getRunDocument, getRunVersion } from "@/lib/services/runs/get-run-document";
@@ -38,7 +39,7 @@ async function documentAnswer(request: Request, actor: Actor, id: string): Promi
     release();
     return new Response(null, { headers: { ...headers, "content-type": "application/json" } });
   }
-  request.signal.addEventListener("abort", release, { once: true });
+  whenGone(request, release);
   return new Response(jsonStream(document, release), {
     headers: { ...headers, "content-type": "application/json" },
   });
