@@ -3,7 +3,13 @@ import { renderToStaticMarkup } from "react-dom/server";
 import { describe, expect, test } from "vitest";
 import { ReadingList } from "@/app/(work)/[workspace]/runs/[id]/reading-list";
 import { ReportReadings } from "@/app/(work)/[workspace]/runs/[id]/report/report-readings";
-import { MOST_LISTED, settingsOf, subjectsOf } from "@/app/(work)/[workspace]/runs/[id]/spread/subjects";
+import {
+  listedOnly,
+  MOST_LISTED,
+  numbersIn,
+  settingsOf,
+  subjectsOf,
+} from "@/app/(work)/[workspace]/runs/[id]/spread/subjects";
 import { ComparedReadings } from "@/app/(work)/[workspace]/runs/compare/compared-readings";
 import type { ReadingDocument } from "@/lib/analyses/result";
 import { formatQuantity } from "@/lib/units/quantity";
@@ -49,6 +55,15 @@ describe("of a run with very many settings", () => {
     const matter = { axes: wide, requirements: [], budgets: [], causes: [] };
     expect(subjectsOf({ ...matter, readings: read })).toEqual([]);
     expect(subjectsOf({ ...matter, readings: readings(1, 200_000, 1) })).toHaveLength(1);
+  });
+
+  test("what is sent of the readings before their document is what lists show of them", () => {
+    const many = readings(1_000, 2_400);
+    expect(numbersIn(many)).toBe(2_400_000);
+    expect(numbersIn(listedOnly(many))).toBe(6_000);
+    const list = (shown: ReadingDocument[]) =>
+      renderToStaticMarkup(createElement(ReadingList, { readings: shown, axes: axes(2_400), links }));
+    expect(list(listedOnly(many.slice(0, 3)))).toBe(list(many.slice(0, 3)));
   });
 
   test("fewer are listed the more readings there are; the draws of those that are listed are their own", () => {

@@ -15,6 +15,7 @@ import { columnsPath, overviewPath } from "./fetch-run";
 import { readPageState } from "./page-state";
 import { isLive, type RunState } from "./run-shapes";
 import { RunView } from "./run-view";
+import { listedOnly, numbersIn } from "./spread/subjects";
 
 /** Numbers in a document that is sent with the page; a larger one is fetched by the page once it stands. */
 const SENT_ALONG = 20_000;
@@ -42,6 +43,17 @@ function isSmall({ points, plan }: RunState): boolean {
   return points * (plan.traces.length + 3) <= SENT_ALONG;
 }
 
+/** A run as it is sent with its page: a large one without long axes, and of very many readings what is listed. */
+function lightOf(run: RunState): RunState {
+  const { judgement, plan } = run;
+  const isLong = judgement !== null && numbersIn(judgement.readings) > SENT_ALONG;
+  return {
+    ...run,
+    plan: isSmall(run) ? plan : outlineOf(plan),
+    judgement: isLong ? { ...judgement, readings: listedOnly(judgement.readings) } : judgement,
+  };
+}
+
 export async function generateMetadata({ params }: Props): Promise<Metadata> {
   const { workspace, id } = await params;
   const { run } = await runFor(workspace, id);
@@ -63,6 +75,8 @@ export default async function RunPage({ params, searchParams }: Props) {
     getRunContext(actor, id),
     !isSmall(run) && hasRunOverview(actor, id),
   ]);
+  // Readings may hold far more than the points that they are of.
+  const sent = found !== null && numbersIn(found.document.readings) <= SENT_ALONG ? found : null;
   // What is drawn first of a large document sets out together with the page, not after it.
   const ahead = !isSmall(run) && run.pointsDone > 0;
   const path = hasOverview ? overviewPath(workspace, id) : columnsPath(id);
@@ -72,9 +86,9 @@ export default async function RunPage({ params, searchParams }: Props) {
       <RunView
         key={run.id}
         workspace={workspace}
-        first={isSmall(run) ? run : { ...run, plan: outlineOf(run.plan) }}
+        first={lightOf(run)}
         hasOverview={hasOverview}
-        found={found && { document: found.document, etag: found.columnsEtag }}
+        found={sent && { document: sent.document, etag: sent.columnsEtag }}
         context={context}
         point={point}
         span={span}

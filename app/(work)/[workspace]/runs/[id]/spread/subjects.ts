@@ -108,6 +108,17 @@ export function listedBeside(values: number): number {
   return Math.min(MOST_LISTED, Math.max(6, Math.floor(MOST_VALUES / Math.max(1, values))));
 }
 
+/** As much of readings as lists show before their document is there, or of compared runs: the nominal design at the first settings. */
+export function listedOnly(readings: readonly ReadingDocument[]): ReadingDocument[] {
+  const most = listedBeside(readings.length);
+  return readings.map((one) => ({ ...one, values: one.values.slice(0, most) }));
+}
+
+/** Numbers that readings hold. */
+export function numbersIn(readings: readonly ReadingDocument[]): number {
+  return readings.reduce((sum, { values }) => sum + values.length, 0);
+}
+
 /**
  * The first settings of the outer axes in words, the first outer axis turning fastest, at most as many as said; one empty text where
  * there is none.

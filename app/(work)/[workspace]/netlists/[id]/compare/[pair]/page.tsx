@@ -10,7 +10,7 @@ import { getRevision } from "@/lib/services/netlists/get-revision";
 import { getRun } from "@/lib/services/runs/get-run";
 import { listRuns } from "@/lib/services/runs/list-runs";
 import { answered } from "../../../../../answered";
-import { settingCount, settingsOf } from "../../../../runs/[id]/spread/subjects";
+import { listedOnly, settingCount, settingsOf } from "../../../../runs/[id]/spread/subjects";
 import { readPair, type Side } from "./compare-shapes";
 import { CompareView } from "./compare-view";
 import { DraftView } from "./draft-view";
@@ -52,7 +52,7 @@ async function sideOf(actor: Actor, netlistId: string, number: number): Promise<
       verdict: run.verdict,
       isJudged: run.judgement !== null,
       requirements: run.judgement?.requirements ?? [],
-      readings: run.judgement?.readings ?? [],
+      readings: listedOnly(run.judgement?.readings ?? []),
       settings: settingsOf(run.plan.axes),
       settingCount: settingCount(run.plan.axes),
     },
