@@ -43,10 +43,8 @@ describe("while something is on its way", () => {
       if (!("next-router-prefetch" in route.request().headers())) await held;
       await route.continue();
     });
-    // What stands while the page is on its way comes ahead of it.
-    const ahead = page.waitForResponse((response) => isPage(new URL(response.url())));
-    await page.goto(`/${WORKSPACE}`);
-    await (await ahead).finished();
+    // What stands while the page is on its way comes ahead of it, in several answers.
+    await page.goto(`/${WORKSPACE}`, { waitUntil: "networkidle" });
     await page.getByRole("navigation", { name: "Workspace" }).getByRole("link", { name: "Netlists" }).click();
     await page.getByRole("status").filter({ hasText: "Loading…" }).waitFor();
     const heading = page.getByRole("heading", { name: "Netlists", exact: true });
