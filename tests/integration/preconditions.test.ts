@@ -165,4 +165,14 @@ describe("a request with an Idempotency-Key", () => {
     await aged("25 hours");
     expect((await answerOnce(actor, asked, other)).body).toEqual({ made: "another" });
   });
+
+  it("makes nothing twice where the answer could not be kept", async () => {
+    const actor = await makeActor();
+    const asked = { key: "kept", request: "0".repeat(64) };
+    // PostgreSQL keeps no NUL.
+    const work = vi.fn(async () => ({ status: 201, body: { made: "\0" } }));
+    await expect(answerOnce(actor, asked, work)).rejects.toThrow();
+    await expect(answerOnce(actor, asked, work)).rejects.toMatchObject({ code: "conflict" });
+    expect(work).toHaveBeenCalledTimes(1);
+  });
 });

@@ -40,14 +40,20 @@ export async function answerOnce(
     .onConflictDoNothing()
     .returning({ key: keptAnswer.key });
   if (claimed === undefined) return answerOf(await first(userId, key), request);
+  let answer: Answer;
   try {
-    const { status, body } = await work();
-    await db.update(keptAnswer).set({ status, body }).where(mine);
-    return { status, body };
+    answer = await work();
   } catch (error) {
-    await db.delete(keptAnswer).where(mine);
+    // Should the database be away, the claim is given up by its age, and the reader is told what went wrong first.
+    await db
+      .delete(keptAnswer)
+      .where(mine)
+      .catch(() => undefined);
     throw error;
   }
+  // Where the answer cannot be kept, the key stays taken: what was made would be made a second time.
+  await db.update(keptAnswer).set({ status: answer.status, body: answer.body }).where(mine);
+  return answer;
 }
 
 async function first(userId: string, key: string) {
