@@ -66,6 +66,10 @@ describe("choosing runs", () => {
     await page.getByRole("link", { name: "Compare", exact: true }).click();
     await page.waitForURL(/compare\?runs=/);
     await expect.poll(() => page.locator("[data-compared]").count()).toBe(2);
+    // A run stands beside the one before of its netlist at once; the first of all stands alone.
+    await page.goto(`/${WORKSPACE}/runs/${second}`);
+    await page.getByRole("link", { name: "Compare", exact: true }).click();
+    await page.waitForURL((url) => url.searchParams.get("runs") === `${first},${second}`);
     await page.goto(`/${WORKSPACE}/runs/${first}`);
     await page.getByRole("link", { name: "Compare", exact: true }).click();
     await page.locator('[data-compared="A"]').waitFor();

@@ -71,7 +71,7 @@ export function RunHeader(props: Props) {
   const mayStop = isLive(run.status) && mayCancel;
   const halt = () => stop(attempt(async () => onRun(await cancel(run.id))));
   const paths = {
-    compare: `/${workspace}/runs/compare?runs=${run.id}`,
+    compare: `/${workspace}/runs/compare?runs=${run.id}&with=before`,
     report: `/${workspace}/runs/${run.id}/report`,
     netlist: `/${workspace}/netlists/${run.netlistId}`,
   };

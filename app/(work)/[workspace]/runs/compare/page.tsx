@@ -1,4 +1,5 @@
 import type { Metadata } from "next";
+import { redirect } from "next/navigation";
 import { outlineOf } from "@/lib/analyses/plan";
 import { actorFor } from "@/lib/auth/actor";
 import { AppError } from "@/lib/errors";
@@ -33,9 +34,10 @@ export default async function CompareRunsPage({ params, searchParams }: Props) {
   const actor = await answered(actorFor(workspace), path);
   const asked = readRuns(search.get("runs"));
   const found = await Promise.all(asked.map((id) => runWithText(actor, id)));
-  const named = found.filter((one) => one !== null);
-  const before = search.get("with") === "before" ? await runBefore(actor, named) : null;
-  const known = before === null ? named : [before, ...named];
+  const known = found.filter((one) => one !== null);
+  const before = search.get("with") === "before" ? await runBefore(actor, known) : null;
+  // Under an address that names both, so that it shows the same to whoever gets it.
+  if (before !== null) redirect(`/${workspace}/runs/compare?runs=${before},${asked.join(",")}`);
   const first = known[0];
   const runs = known.map(({ run, text }, index): ComparedRun => {
     const changes = index === 0 ? null : changesOfTexts(first!.text, text);
@@ -49,20 +51,19 @@ export default async function CompareRunsPage({ params, searchParams }: Props) {
       key={runs.map(({ run }) => run.id).join(" ")}
       workspace={workspace}
       runs={runs}
-      lost={asked.length - named.length}
+      lost={asked.length - known.length}
       search={search.toString()}
     />
   );
 }
 
-/** The finished run of the same netlist before the one that is named, which a reader most often measures it from. */
+/** Id of the finished run of the same netlist before the one that is named, which a reader most often measures it from. */
 async function runBefore(actor: Actor, named: readonly { readonly run: RunSummary }[]) {
   const [only] = named;
   if (only === undefined || named.length > 1) return null;
   const { netlistId, number } = only.run;
   const { rows } = await listRuns(actor, { netlistId, status: "done", size: FEW });
-  const before = rows.find((row) => row.number < number);
-  return before === undefined ? null : runWithText(actor, before.id);
+  return rows.find((row) => row.number < number)?.id ?? null;
 }
 
 /** A run without what its comparison does not show: long axes and most of what its readings hold. */
