@@ -116,7 +116,7 @@ export function Sheet({ workspace, netlist, latest, runs, writer, role, mayQueue
             side={side}
             onSide={onSide}
             preview={
-              <div className="grid min-w-0 content-start gap-8">
+              <div className="grid min-w-0 grid-cols-[minmax(0,1fr)] content-start gap-8">
                 <KeptView value={kept}>
                   <PreviewPane previewing={previewing} onWrite={mayQueue ? write : undefined} />
                 </KeptView>

@@ -67,7 +67,7 @@ export function CompareView({ workspace, netlist, before, after, changes, search
               <ChangeList found={changes} names={labels} />
             </div>
           </section>
-          <div className="grid min-w-0 content-start gap-8">
+          <div className="grid min-w-0 grid-cols-[minmax(0,1fr)] content-start gap-8">
             <section aria-labelledby="verdicts">
               <h2 id="verdicts" className="caption">
                 Verdicts{" "}

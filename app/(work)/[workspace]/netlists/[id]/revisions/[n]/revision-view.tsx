@@ -31,7 +31,7 @@ export function RevisionView({ workspace, netlist, revision, changes, runs, ...m
     <>
       <RevisionHeader workspace={workspace} netlist={netlist} revision={revision} {...may} />
       <div className="grid grow grid-cols-[minmax(0,1fr)] lg:grid-cols-[minmax(0,8fr)_minmax(320px,5fr)]">
-        <div className="grid min-w-0 content-start gap-3 px-4 py-4 md:px-6">
+        <div className="grid min-w-0 grid-cols-[minmax(0,1fr)] content-start gap-3 px-4 py-4 md:px-6">
           <div className="flex flex-wrap items-baseline justify-between gap-x-4 gap-y-1">
             <h2 className="caption">Text, {counted(lines, "line")}</h2>
             <nav aria-label="Other revisions" className="flex flex-wrap gap-x-4 text-sm">
@@ -49,7 +49,7 @@ export function RevisionView({ workspace, netlist, revision, changes, runs, ...m
           </div>
           <NumberedLines text={text} label={`Text of revision ${number}, to read only`} />
         </div>
-        <div className="grid min-w-0 content-start gap-8 border-t px-4 py-4 md:px-6 lg:border-t-0 lg:border-l">
+        <div className="grid min-w-0 grid-cols-[minmax(0,1fr)] content-start gap-8 border-t px-4 py-4 md:px-6 lg:border-t-0 lg:border-l">
           <section aria-labelledby="about">
             <h2 id="about" className="caption">
               About this revision
