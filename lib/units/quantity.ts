@@ -70,7 +70,8 @@ function takesPrefix(unit: string): boolean {
     unit !== "°C" &&
     !PLAIN_UNITS.has(unit) &&
     !/[⁰¹²³⁴⁵⁶⁷⁸⁹^]/u.test(unit) &&
-    !unit.startsWith("1/")
+    !unit.startsWith("1/") &&
+    !unit.startsWith("ppm")
   );
 }
 

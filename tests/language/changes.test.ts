@@ -73,6 +73,11 @@ describe("what changed is said in words", () => {
     ["a knob made of a value", [["let  R_out", "knob R_out"]], ["R_out: is a knob now"]],
     ["a new value", [["let  V_max", "let  spare = 3 V\nlet  V_max"]], ["spare: added, a value of 3 V"]],
     ["a parameter", [["n = 1.05", "n = 1.1"]], ["junction: n 1.05 became 1.1"]],
+    [
+      "a change with temperature",
+      [["resistor R_out --", "resistor R_out { drift = 3570 ppm/K } --"]],
+      ["R1: drift was left out (0 ppm/K), is 3570 ppm/K now"],
+    ],
     ["a parameter left out", [[", n = 1.05", ""]], ["junction: n was 1.05, is left out now (1)"]],
     [
       "a parameter given",

@@ -13,6 +13,8 @@ export function writeNumber(value: number, unit: string, name = ""): string {
   if (unit === "K" && AMBIENT.has(name.slice(name.lastIndexOf(".") + 1))) {
     return formatAxis(Number((value - 273.15).toPrecision(12)), "°C");
   }
+  // A change with temperature is read and written in millionths.
+  if (unit === "1/K") return writeNumber(Number((1e6 * value).toPrecision(15)), "ppm/K");
   const short = Number(value.toPrecision(6));
   // Beyond six digits the short form would call two values one.
   return short === value ? formatAxis(value, unit) : trimmed(formatQuantity(value, unit, 15));
