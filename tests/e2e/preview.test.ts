@@ -111,6 +111,19 @@ test("a knob moves the preview by keys, is typed as a value with its unit, and i
   await expectReading(page, "10.0000 V");
   expect(await slider.evaluate((one) => one === document.activeElement)).toBe(true);
   expect(await shownText(page)).toContain("knob R_load = 10 kΩ");
+  // The curves that stay in view never hide what has the focus (WCAG 2.2, 2.4.11).
+  await page.setViewportSize({ width: 1280, height: 850 });
+  const last = knob(page, "temperature");
+  await page.getByRole("tab", { name: "Preview" }).focus();
+  await page.locator('[data-preview="whole"]').hover();
+  await page.mouse.wheel(0, -5000);
+  await last.evaluate((one) => (one as HTMLElement).focus());
+  const isSeen = () =>
+    last.evaluate((one) => {
+      const { left, width, top, height } = one.getBoundingClientRect();
+      return one.contains(document.elementFromPoint(left + width / 2, top + height / 2));
+    });
+  await expect.poll(isSeen, PATIENT).toBe(true);
 });
 
 test("a knob is written into the text as one step that undo takes back, the temperature too", async () => {

@@ -29,6 +29,10 @@ interface Props {
 const STAYS =
   "z-30 pb-1 has-[details[open]]:static [@media(min-width:64rem)_and_(min-height:52rem)]:sticky top-0";
 
+/** What is focused below is scrolled to where the curves that stay, two storeys at most as a rule, do not hide it. */
+const CLEARS =
+  "[@media(min-width:64rem)_and_(min-height:52rem)]:[&_:is(input,select,button,a)]:scroll-mt-[31rem]";
+
 /** Before the first curves the room that they will take is kept, so that what stands below is not pushed about. */
 const BRIEF_ROOM = "min-h-[432px]";
 const ROOM = "min-h-[432px] lg:min-h-[calc(100dvh-200px)]";
@@ -98,26 +102,28 @@ export const PreviewPane = memo(function PreviewPane({ previewing, onWrite, isBr
           </div>
         )}
       </div>
-      {row !== null && (row.requirements.length > 0 || row.elsewhere.length > 0) && (
-        <div className={faded}>
-          <RequirementBars requirements={row.requirements} elsewhere={row.elsewhere} />
-        </div>
-      )}
-      {row !== null && (
-        <div className={classNames("empty:hidden", faded)}>
-          <ReadingRows readings={row.readings} />
-        </div>
-      )}
-      {outline !== null && !isFirst && !isBrief && (
-        <KnobList
-          outline={outline}
-          turned={turned}
-          place={place}
-          onTurn={turn}
-          onReset={reset}
-          onWrite={isOld ? undefined : onWrite}
-        />
-      )}
+      <div className={classNames("grid min-w-0 content-start gap-6 empty:hidden", CLEARS)}>
+        {row !== null && (row.requirements.length > 0 || row.elsewhere.length > 0) && (
+          <div className={faded}>
+            <RequirementBars requirements={row.requirements} elsewhere={row.elsewhere} />
+          </div>
+        )}
+        {row !== null && (
+          <div className={classNames("empty:hidden", faded)}>
+            <ReadingRows readings={row.readings} />
+          </div>
+        )}
+        {outline !== null && !isFirst && !isBrief && (
+          <KnobList
+            outline={outline}
+            turned={turned}
+            place={place}
+            onTurn={turn}
+            onReset={reset}
+            onWrite={isOld ? undefined : onWrite}
+          />
+        )}
+      </div>
       <SpokenPreview preview={preview} />
     </section>
   );
