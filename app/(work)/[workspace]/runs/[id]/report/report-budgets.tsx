@@ -14,7 +14,10 @@ const NOTHING = 0.0005;
 /** What the tolerances cost, the costliest part first: of what each requirement is about, then of the readings. */
 export function ReportBudgets({ judgement }: { readonly judgement: KeptJudgement | null }) {
   const { causes, budgets } = judgement ?? { causes: null, budgets: null };
-  const all = [...named("require", causes), ...named("read", budgets)];
+  // What a requirement asks of a reading itself is not printed again as the budget of that reading.
+  const told = new Set(causes?.map(figures));
+  const rest = budgets?.filter((budget) => !told.has(figures(budget))) ?? null;
+  const all = [...named("require", causes), ...named("read", rest)];
   const isTooLarge = judgement !== null && budgets === null;
   if (all.length === 0 && !isTooLarge) return null;
   return (
@@ -31,6 +34,11 @@ export function ReportBudgets({ judgement }: { readonly judgement: KeptJudgement
       {all.length > BUDGETS && <p>{all.length - BUDGETS} more budgets stand on the page of the run.</p>}
     </section>
   );
+}
+
+/** What two budgets of one thing at one place share. */
+function figures({ at, unit, nominal, sigma }: Budget): string {
+  return JSON.stringify([at, unit, nominal, sigma]);
 }
 
 /** Those that have parts, each with a key of its own. */
