@@ -127,6 +127,30 @@ test("saving makes a revision with a message; a text that only looks different m
   expect(kept.text).toContain("let late = 3 kΩ");
 });
 
+test("what is typed while the page is brought up to date after a save counts", async () => {
+  const { page } = await onSheet("Typed meanwhile");
+  await typeAtEnd(page, "let late = 3 kΩ\n");
+  let release: () => void = () => {};
+  const held = new Promise<void>((resolve) => {
+    release = resolve;
+  });
+  const brought = new Promise<void>((resolve) => {
+    const isUpdate = (url: URL) => url.pathname.includes("/netlists/") && url.searchParams.has("_rsc");
+    void page.route(isUpdate, async (route) => {
+      resolve();
+      const answer = await route.fetch();
+      await held;
+      await route.fulfill({ response: answer });
+    });
+  });
+  await save(page);
+  await brought;
+  await page.getByText(/^revision 2$/).waitFor();
+  await typeAtEnd(page, "let later = 4 kΩ\n");
+  release();
+  await page.getByText("draft on revision 2").waitFor();
+});
+
 test("two people on one netlist: the later save is refused, and neither text is lost", async () => {
   const { page: mine, id } = await onSheet("Two people");
   const { page: theirs } = await openPage(browser);

@@ -11,15 +11,17 @@ const REST = 120;
  * text at once.
  */
 export function useSettledText(editor: RefObject<EditorHandle | null>, initial: string) {
-  const [text, setText] = useState(initial);
+  // A page that is brought up to date after a save hands on another text: what was typed meanwhile must not lose its rest by it.
+  const [begun] = useState(initial);
+  const [text, setText] = useState(begun);
   const timer = useRef<ReturnType<typeof setTimeout>>(undefined);
 
   const settle = useCallback((): string => {
     clearTimeout(timer.current);
-    const now = editor.current?.text() ?? initial;
+    const now = editor.current?.text() ?? begun;
     setText(now);
     return now;
-  }, [editor, initial]);
+  }, [editor, begun]);
 
   const edited = useCallback(() => {
     clearTimeout(timer.current);
