@@ -56,6 +56,12 @@ afterAll(async () => {
 const requirement = (name: string) => page.locator("[data-requirement]").filter({ hasText: name });
 
 describe("what the netlist requires", () => {
+  it("is told when the run has been judged, to one who has watched it from the beginning", async () => {
+    await page.goto(await startRun(page, HEAD.replace("draws 60", "draws 200")));
+    await page.locator("[data-run-status=done]").filter({ hasText: "broken" }).waitFor();
+    await page.getByText("Improve", { exact: false }).first().waitFor();
+  });
+
   it("stands with the broken first, each with its bar, its worst value and its limits", async () => {
     await page.goto(address);
     await page.getByRole("heading", { name: /One requirement is broken · 2 hold/ }).waitFor();

@@ -22,7 +22,7 @@ import { type Found, useLiveRun } from "./use-live-run";
 import { useOverview } from "./use-overview";
 import { useViewDeeds } from "./use-view-deeds";
 
-/** A finished run is judged within this time, ms, unless it is large. */
+/** A finished run is judged within this time, ms, unless it is large; then it is asked for again, each time after twice the wait. */
 const JUDGED = 1500;
 
 interface Props {
@@ -47,7 +47,13 @@ export function RunView(props: Props) {
   const { workspace, first, found, context, point, span, mayStart, mayCancel } = props;
   const router = useRouter();
   const overview = useOverview(workspace, first.id, first.plan.traces.length, props.hasOverview);
-  const { run, document, problem, finished, behind, setRun } = useLiveRun(first, found, overview.over);
+  const live = useLiveRun(first, found, overview.over);
+  const { document, problem, finished, behind, setRun } = live;
+  // The stream ends before the run is judged: its verdict comes with the page that is asked for again.
+  const run = useMemo(
+    () => ({ ...live.run, verdict: live.run.verdict ?? first.verdict }),
+    [live.run, first.verdict],
+  );
   const [state, setState] = useState(() => readPageState(new URLSearchParams(props.search)));
   // The cursor moves with the pointer: what follows it listens for itself, and the page is not drawn anew.
   const onCursor = useRef<(point: number | null) => void>(() => {});
@@ -65,7 +71,14 @@ export function RunView(props: Props) {
     if (!finished) return;
     router.refresh();
     if (judged) return;
-    const timer = setTimeout(() => router.refresh(), JUDGED);
+    let timer: ReturnType<typeof setTimeout>;
+    const again = (wait: number) => {
+      timer = setTimeout(() => {
+        router.refresh();
+        again(2 * wait);
+      }, wait);
+    };
+    again(JUDGED);
     return () => clearTimeout(timer);
   }, [finished, judged, router]);
 
