@@ -59,7 +59,9 @@ describe("what the netlist requires", () => {
   it("is told when the run has been judged, to one who has watched it from the beginning", async () => {
     await page.goto(await startRun(page, HEAD.replace("draws 60", "draws 200")));
     await page.locator("[data-run-status=done]").filter({ hasText: "broken" }).waitFor();
-    await page.getByText("Improve", { exact: false }).first().waitFor();
+    await page.getByLabel("Value whose spread is shown").selectOption({ label: "scale" });
+    const budget = page.getByRole("list", { name: "Parts by their share of the variance" });
+    await budget.getByRole("listitem").first().waitFor();
   });
 
   it("stands with the broken first, each with its bar, its worst value and its limits", async () => {
