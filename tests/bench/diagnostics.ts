@@ -1,28 +1,10 @@
 import { examine } from "@/app/_components/editor/examine";
+import { longText } from "./long-text";
 
 /** Times that each text is checked, after some that warm the machine up. */
 const TIMES = 80;
 const WARM_UP = 20;
 const AIM = 30;
-
-/** 2,000 lines without an error: a ladder of resistors, whose first line changes with every key stroke. */
-function longText(turn: number): string {
-  const rungs = Array.from(
-    { length: 995 },
-    (_, k) => `n${k} -- R${k} : resistor 1 kΩ -- n${k + 1}\nn${k + 1} -- P${k} : resistor 10 kΩ -- ground`,
-  );
-  return `title "Bench, 2000 lines"
-let R_gain = ${100 + turn} Ω
-knob V_in = 1 V
-ground -- V : voltage V_in -- n0
-
-${rungs.join("\n")}
-
-# the end
-sweep V_in from 0 V to 1 V, 2 points
-show n1.v
-`;
-}
 
 /** The same with mistakes in every tenth line. */
 function wrongText(turn: number): string {

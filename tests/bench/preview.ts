@@ -1,6 +1,7 @@
 import type { Page } from "playwright-core";
 import { launchBrowser, openPage, signIn, WORKSPACE } from "../e2e/harness";
 import { editorOf, makeNetlist } from "../e2e/sheet-steps";
+import { longText } from "./long-text";
 
 /** Key strokes that are measured for each netlist, after a few that warm the browser up. */
 const STROKES = 60;
@@ -64,25 +65,6 @@ line -- RL : resistor R_gain -- ground
 ${cells.join("\n")}
 sweep V_base from 0.1 V to 2 V, 101 points
 show line.v
-`;
-}
-
-/** 2,000 lines without an error: a ladder of resistors. */
-function longText(): string {
-  const rungs = Array.from(
-    { length: 995 },
-    (_, k) => `n${k} -- R${k} : resistor 1 kΩ -- n${k + 1}\nn${k + 1} -- P${k} : resistor 10 kΩ -- ground`,
-  );
-  return `title "Bench, 2000 lines"
-let R_gain = 100 Ω
-knob V_in = 1 V
-ground -- V : voltage V_in -- n0
-
-${rungs.join("\n")}
-
-# the end
-sweep V_in from 0 V to 1 V, 2 points
-show n1.v
 `;
 }
 

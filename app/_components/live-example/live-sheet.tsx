@@ -1,22 +1,13 @@
 "use client";
 
-import dynamic from "next/dynamic";
 import { type ReactNode, useState } from "react";
+import { LateConnections } from "@/app/_components/drawing/late-connections";
 import { Tabs } from "@/app/_components/ui/tabs";
 import { LivePreview } from "./live-preview";
 import { LiveText } from "./live-text";
 import type { Live } from "./use-live";
 import { useWhole } from "./use-whole";
 import { WholeView } from "./whole-view";
-
-// Fetched when it is first looked at.
-const TextConnections = dynamic(
-  () => import("@/app/_components/drawing/text-connections").then((all) => all.TextConnections),
-  {
-    ssr: false,
-    loading: () => <p className="border-y py-3 text-quiet text-sm">The drawing is coming…</p>,
-  },
-);
 
 interface Props {
   readonly live: Live;
@@ -62,7 +53,7 @@ export function LiveSheet({ live, solving, children }: Props) {
               {
                 value: "connections",
                 label: "Connections",
-                content: <TextConnections text={live.text} cursor={live.cursor} editor={live.editor} />,
+                content: <LateConnections text={live.text} cursor={live.cursor} editor={live.editor} />,
               },
             ]}
           />

@@ -58,24 +58,10 @@ export default function PipelinePage() {
         />
       </Section>
       <Section id="reports" title="Reports">
-        {REPORTS.map(({ id, title, says, lines }) => (
-          <Entry key={id} id={id} title={title}>
-            <Text>
-              <Prose>{says}</Prose>
-            </Text>
-            <Lines text={lines} />
-          </Entry>
-        ))}
+        <Written all={REPORTS} />
       </Section>
       <Section id="pipelines" title="In a pipeline">
-        {RECIPES.map(({ id, title, says, lines }) => (
-          <Entry key={id} id={id} title={title}>
-            <Text>
-              <Prose>{says}</Prose>
-            </Text>
-            <Lines text={lines} />
-          </Entry>
-        ))}
+        <Written all={RECIPES} />
       </Section>
     </DocsPage>
   );
@@ -101,4 +87,23 @@ function CommandSection({ command: { name, about, options, notes } }: { readonly
       <Points items={notes.map((note) => <Prose key={note}>{note}</Prose>)} />
     </Section>
   );
+}
+
+interface Written {
+  readonly id: string;
+  readonly title: string;
+  readonly says: string;
+  readonly lines: string;
+}
+
+/** What one writes, or reads, each after a sentence about it. */
+function Written({ all }: { readonly all: readonly Written[] }) {
+  return all.map(({ id, title, says, lines }) => (
+    <Entry key={id} id={id} title={title}>
+      <Text>
+        <Prose>{says}</Prose>
+      </Text>
+      <Lines text={lines} />
+    </Entry>
+  ));
 }

@@ -1,20 +1,11 @@
 "use client";
 
-import dynamic from "next/dynamic";
 import type { ReactNode, RefObject } from "react";
+import { LateConnections } from "@/app/_components/drawing/late-connections";
 import type { CursorAt } from "@/app/_components/drawing/text-connections";
 import type { EditorHandle } from "@/app/_components/editor/editor-handle";
 import { useDeeds } from "@/app/_components/palette/deed-registry";
 import { Tabs } from "@/app/_components/ui/tabs";
-
-// Fetched when it is first looked at.
-const TextConnections = dynamic(
-  () => import("@/app/_components/drawing/text-connections").then((all) => all.TextConnections),
-  {
-    ssr: false,
-    loading: () => <p className="border-y py-3 text-quiet text-sm">The drawing is coming…</p>,
-  },
-);
 
 interface Props {
   /** What stands under the first tab. */
@@ -53,7 +44,7 @@ export function SheetSide({ preview, side, onSide, text, cursor, editor }: Props
         {
           value: "connections",
           label: "Connections",
-          content: <TextConnections text={text} cursor={cursor} editor={editor} />,
+          content: <LateConnections text={text} cursor={cursor} editor={editor} />,
         },
       ]}
     />

@@ -1,9 +1,7 @@
 import { readJson } from "@/lib/api/body";
-import { once } from "@/lib/api/once";
-import { baseOf, revisionTag, upon } from "@/lib/api/precondition";
 import { route } from "@/lib/api/route";
+import { saveUpon } from "@/lib/api/save-upon";
 import { actorForNetlist } from "@/lib/auth/actor";
-import { getNetlist } from "@/lib/services/netlists/get-netlist";
 import { listRevisions } from "@/lib/services/netlists/list-revisions";
 import { saveRevision } from "@/lib/services/netlists/save-revision";
 import { revisionsInput, saveInput } from "@/lib/services/netlists/schemas";
@@ -24,17 +22,7 @@ export const GET = route<{ id: string }>(async (request, { id }) => {
 export const POST = route<{ id: string }>(async (request, { id }) => {
   const actor = await actorForNetlist(id, request);
   const wish = await readJson(request);
-  const work = async () => {
-    const { revision } = await getNetlist(actor, id);
-    const base = baseOf(request, { id, latest: revision }, wish.base);
-    const saved = await saveRevision(actor, readInput(saveInput, { ...wish, base, netlistId: id }));
-    return { status: saved.changed ? 201 : 200, body: saved };
-  };
-  return once(
-    request,
-    actor,
-    wish,
-    () => upon(request, work),
-    (saved) => ({ etag: revisionTag(id, saved.revision) }),
+  return saveUpon(request, actor, id, wish, (base) =>
+    saveRevision(actor, readInput(saveInput, { ...wish, base, netlistId: id })),
   );
 });

@@ -10,7 +10,6 @@ import {
   writeCompareState,
 } from "../../../../runs/compare/compare-state";
 import { ComparedReadings } from "../../../../runs/compare/compared-readings";
-import { ChangeList } from "../../change-list";
 import { CompareActions } from "./compare-actions";
 import { formIn, type Side } from "./compare-shapes";
 import { CurveSection } from "./curve-section";
@@ -18,6 +17,7 @@ import { RunLack } from "./run-lack";
 import { SideFacts } from "./side-facts";
 import { TextSection } from "./text-section";
 import { VerdictTable } from "./verdict-table";
+import { WhatChanged } from "./what-changed";
 
 interface Props {
   readonly workspace: string;
@@ -60,12 +60,7 @@ export function CompareView({ workspace, netlist, before, after, changes, search
       <div className="grid grid-cols-[minmax(0,1fr)] gap-10 px-4 py-6 md:px-6">
         <div className="grid grid-cols-[minmax(0,1fr)] content-start gap-x-12 gap-y-8 lg:grid-cols-2">
           <section aria-labelledby="changed" className="min-w-0">
-            <h2 id="changed" className="caption">
-              What changed
-            </h2>
-            <div className="mt-2">
-              <ChangeList found={changes} names={labels} />
-            </div>
+            <WhatChanged found={changes} names={labels} />
           </section>
           <div className="grid min-w-0 grid-cols-[minmax(0,1fr)] content-start gap-8">
             <section aria-labelledby="verdicts">

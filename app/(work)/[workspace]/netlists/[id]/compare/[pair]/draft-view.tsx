@@ -9,12 +9,12 @@ import { PageHeader } from "@/app/_components/ui/page-header";
 import { EmptyState, FailedState, LoadingState } from "@/app/_components/ui/states";
 import { When } from "@/app/_components/ui/when";
 import { changesOfTexts } from "@/lib/language/changes/of-texts";
-import { ChangeList } from "../../change-list";
 import type { Draft } from "../../drafts";
 import { formIn, type Side } from "./compare-shapes";
 import { SideFacts } from "./side-facts";
 import { TextSection } from "./text-section";
 import { useNewestDraft } from "./use-newest-draft";
+import { WhatChanged } from "./what-changed";
 
 interface Props {
   readonly workspace: string;
@@ -140,12 +140,7 @@ function Compared({
       </div>
       <div className="grid grid-cols-[minmax(0,1fr)] gap-10 px-4 py-6 md:px-6">
         <section aria-labelledby="changed" className="min-w-0">
-          <h2 id="changed" className="caption">
-            What changed
-          </h2>
-          <div className="mt-2">
-            <ChangeList found={changes} names={labels} />
-          </div>
+          <WhatChanged found={changes} names={labels} />
           <p className="mt-3 text-quiet text-sm">
             A draft has no run. Queue it from the sheet, and its verdicts and curves can be compared too.
           </p>
